@@ -1,0 +1,350 @@
+/** The engine's public data, in one place. Lengths in millimetres, angles in degrees, areas in square millimetres. */
+
+export type Unit = 'in' | 'mm' | 'cm';
+export type GridId = '1/8in' | '1/16in' | '1/32in' | '1mm' | '0.5mm';
+export type Rounding = 'nearest' | 'up' | 'down' | 'exact';
+/** What a value is. A choice is the index of its option; a yes/no is 1 or 0. */
+export type KindName = 'length' | 'area' | 'volume' | 'angle' | 'number' | 'whole number' | 'choice' | 'yes/no';
+
+/** Something that does not read or does not work, with its place and its cure. Never thrown. */
+export interface Fault {
+  readonly code: string;
+  /** Where it stands: `measure "arc"`, `piece "Floor", row 2`, `fit "lid goes on"`. */
+  readonly where: string;
+  /** Character range in the formula at `where`, when there is one. */
+  readonly span?: { readonly from: number; readonly to: number };
+  readonly found: string;
+  readonly expected: string;
+  /** What to try next, as a sentence; empty when there is nothing sensible to say. */
+  readonly hint: string;
+  /** The text that cures it, put in place of `span`. */
+  readonly cure?: string;
+}
+export type Result<T> = { readonly ok: true; readonly value: T } | { readonly ok: false; readonly faults: readonly Fault[] };
+
+// ── Pattern: the parametric description of a box. Data, never code. ──────────────────────────────────────────────────
+
+export interface Pattern {
+  readonly format: 1;
+  readonly slug: string;
+  readonly name: string;
+  /** One sentence: what the box is. */
+  readonly summary: string;
+  /** Kind of box, for browsing: "Trays and lidded boxes". */
+  readonly group: string;
+  readonly measures: readonly MeasureDef[];
+  readonly choices: readonly ChoiceDef[];
+  readonly pieces: readonly PieceDef[];
+  readonly fits: readonly FitDef[];
+  /** Inside and outside sizes of the finished box, in the order a person says them. */
+  readonly finished: { readonly inside: readonly NamedFormula[]; readonly outside: readonly NamedFormula[] };
+  /** The order of making, in plain words; `[[formula]]` inside becomes a live measure. */
+  readonly order: readonly string[];
+  /** Where each piece stands in space in the folded picture. */
+  readonly assembly: readonly Placement[];
+}
+export interface NamedFormula {
+  readonly name: string;
+  readonly formula: string;
+}
+
+export interface MeasureDef {
+  readonly name: string;
+  /** Usual: length. */
+  readonly kind?: 'length' | 'area' | 'angle' | 'number' | 'whole number';
+  /** Present on an asked measure. */
+  readonly ask?: Ask;
+  /** Present on a worked measure. Exactly one of `ask` and `formula`. */
+  readonly formula?: string;
+  /** How the measure is rounded to the cut grid. Usual: nearest for a length, exact for everything else. */
+  readonly rounds?: Rounding;
+  /** Always shown in this unit, whatever the reader chose (card thickness in mm). */
+  readonly unit?: Unit;
+  readonly note?: string;
+}
+export interface Ask {
+  readonly question: string;
+  /** Literal or formula of other measures. */
+  readonly usual: string;
+  readonly from: string;
+  readonly to: string;
+  /** Among the finer points. */
+  readonly finer?: boolean;
+  /** Asked only when this holds. */
+  readonly when?: string;
+}
+export interface ChoiceDef {
+  readonly name: string;
+  readonly question: string;
+  readonly options: readonly string[];
+  readonly usual: string;
+  readonly finer?: boolean;
+  readonly when?: string;
+}
+export interface FitDef {
+  readonly name: string;
+  /** Left and right side; it holds when left − right ≥ −tolerance, in the direction given by `is`. */
+  readonly left: string;
+  readonly is: 'at least' | 'at most' | 'more than' | 'less than' | 'same as';
+  readonly right: string;
+  /** Length formula or literal; usual 0. */
+  readonly tolerance?: string;
+  readonly when?: string;
+  /** What fails when it does not hold, and what to do. */
+  readonly otherwise: string;
+  /** The measures to change first when it fails, in order. */
+  readonly change?: readonly string[];
+  /** Advice is shown but never stops a sizing. */
+  readonly advice?: boolean;
+}
+
+export interface PieceDef {
+  readonly name: string;
+  readonly count?: string;
+  readonly stock: 'card' | 'patterned paper' | 'greyboard';
+  readonly when?: string;
+  readonly builder: 'grid';
+  readonly columns: readonly Track[];
+  readonly rows: readonly Track[];
+  /** One list per row, one cell per column. */
+  readonly cells: readonly (readonly CellDef[])[];
+  /** Lines between two named cells that are not the usual ones. */
+  readonly lines?: readonly LineDef[];
+  readonly tapers?: readonly TaperDef[];
+  readonly corners?: readonly CornerDef[];
+  readonly notches?: readonly NotchDef[];
+  readonly slots?: readonly SlotDef[];
+  /** Panels that are rolled instead of lying flat, by cell name. */
+  readonly rolls?: readonly { readonly cell: string; readonly radius: string; readonly when?: string }[];
+  /** Sides that fits may measure: `Floor.curve length`. */
+  readonly edges?: readonly { readonly name: string; readonly cell: string; readonly side: Side }[];
+  /** Decorative layer or drawn card: colour role in the folded picture. Usual: card. */
+  readonly look?: 'card' | 'pages';
+  /** Words for the maker that geometry cannot know, said after the sentences from geometry. */
+  readonly remarks?: readonly string[];
+}
+export interface Track {
+  readonly name: string;
+  readonly size: string;
+  readonly when?: string;
+}
+/** `panel`, `tab`, `away`, or the same with a name: `panel floor`, `tab left`, `cap curve` (a circular segment standing on its neighbour). */
+export type CellDef = string;
+export type Side = 'top' | 'right' | 'bottom' | 'left';
+export interface LineDef {
+  readonly between: readonly [string, string];
+  readonly is: 'valley' | 'mountain' | 'slit' | 'nothing';
+  /** Turn from flat; usual 90°. */
+  readonly angle?: string;
+  readonly when?: string;
+}
+export interface TaperDef {
+  readonly cell: string;
+  /** The free end that narrows. */
+  readonly end: Side;
+  /** A length (how far in at the tip) or an angle off square. */
+  readonly by: string;
+  /** Usual 0: how far in from the end the root starts. */
+  readonly start?: string;
+  readonly when?: string;
+}
+export interface CornerDef {
+  readonly cell: string;
+  readonly corner: 'top left' | 'top right' | 'bottom right' | 'bottom left';
+  readonly radius: string;
+  readonly when?: string;
+}
+/** A half-round bite out of a free edge. */
+export interface NotchDef {
+  readonly cell: string;
+  readonly side: Side;
+  /** From the left (or top) end of that side to the middle of the notch. */
+  readonly at: string;
+  readonly radius: string;
+  readonly when?: string;
+}
+/** A rectangular hole; position of its middle from the cell's left and top. */
+export interface SlotDef {
+  readonly cell: string;
+  readonly across: string;
+  readonly along: string;
+  readonly width: string;
+  readonly height: string;
+  readonly when?: string;
+}
+/** Puts the root panel of one copy of a piece in space; the rest follows by folding. */
+export interface Placement {
+  readonly piece: string;
+  /** The cell that is placed; the others fold from it. */
+  readonly root: string;
+  /** Where the top left corner of the root cell goes. */
+  readonly at: readonly [string, string, string];
+  /** Directions in space of the flat piece's across and along. */
+  readonly across: Axis;
+  readonly along: Axis;
+  readonly when?: string;
+  readonly look?: 'card' | 'pages';
+}
+export type Axis = '+x' | '-x' | '+y' | '-y' | '+z' | '-z';
+
+// ── Sizing: one reader's answers. ────────────────────────────────────────────────────────────────────────────────────
+
+export interface Sizing {
+  /** Asked values that the reader set, by measure name; the rest are usual. */
+  readonly values: Readonly<Record<string, number>>;
+  readonly choices: Readonly<Record<string, string>>;
+  readonly units: Unit;
+  readonly grid: GridId;
+}
+
+// ── Net: a flat piece. ───────────────────────────────────────────────────────────────────────────────────────────────
+
+export interface Point {
+  readonly x: number;
+  readonly y: number;
+}
+export interface Line {
+  readonly type: 'line';
+  readonly from: Point;
+  readonly to: Point;
+}
+/** `clockwise` as seen on screen (y down). */
+export interface Arc {
+  readonly type: 'arc';
+  readonly from: Point;
+  readonly to: Point;
+  readonly centre: Point;
+  readonly radius: number;
+  readonly clockwise: boolean;
+}
+export type Curve = Line | Arc;
+/** Closed chain of curves, each beginning where the last ended; clockwise on screen for outlines, the other way for holes. */
+export type Loop = readonly Curve[];
+
+export interface Panel {
+  readonly name: string;
+  readonly role: 'panel' | 'tab';
+  readonly loop: Loop;
+  /** Rolled to this radius about an axis along the given direction. */
+  readonly roll?: { readonly radius: number; readonly axis: 'across' | 'along' };
+}
+export interface Fold {
+  readonly curve: Curve;
+  readonly kind: 'valley' | 'mountain';
+  /** Degrees turned from flat; 0 lies flat. */
+  readonly angle: number;
+  /** Names of the two panels that meet there. */
+  readonly panels: readonly [string, string];
+}
+export interface Net {
+  readonly outline: Loop;
+  readonly holes: readonly Loop[];
+  readonly panels: readonly Panel[];
+  readonly folds: readonly Fold[];
+  /** Cuts that end inside the card. */
+  readonly slits: readonly Line[];
+  /** Rectangles of the blank that are cut away, for the crossed-out drawing. */
+  readonly away: readonly { readonly x: number; readonly y: number; readonly across: number; readonly along: number }[];
+  readonly across: number;
+  readonly along: number;
+  /** Length of each named edge as drawn. */
+  readonly edges: Readonly<Record<string, number>>;
+  /** Boundaries of columns and rows, from 0 to across and along. */
+  readonly columns: readonly number[];
+  readonly rows: readonly number[];
+}
+
+// ── Figures: everything that follows from a sizing. ──────────────────────────────────────────────────────────────────
+
+export interface Figures {
+  readonly sizing: Sizing;
+  readonly measures: readonly MeasureFigure[];
+  readonly pieces: readonly PieceFigure[];
+  readonly fits: readonly FitFigure[];
+  readonly finished: { readonly inside: readonly SizeFigure[]; readonly outside: readonly SizeFigure[] };
+  /** The largest difference that cutting to the grid makes, and where. */
+  readonly departure: { readonly mm: number; readonly where: string };
+  /** What keeps this sizing from being made; empty when it can be. */
+  readonly problems: readonly SizingProblem[];
+}
+export interface MeasureFigure {
+  readonly name: string;
+  readonly kind: KindName;
+  readonly asked: boolean;
+  /** Value before and after rounding to the cut grid. */
+  readonly exact: number;
+  readonly cut: number;
+  readonly unit?: Unit;
+  /** Asked measures: the range, in the same unit as the value. */
+  readonly from?: number;
+  readonly to?: number;
+  /** Asked measures: the usual value at this sizing; `set` when the reader changed it. */
+  readonly usual?: number;
+  readonly set?: boolean;
+  /** Asked measures with a condition that does not hold are not in use. */
+  readonly inUse: boolean;
+}
+export interface SizeFigure {
+  readonly name: string;
+  readonly mm: number;
+}
+export interface PieceFigure {
+  readonly name: string;
+  readonly count: number;
+  readonly stock: PieceDef['stock'];
+  /** As cut. */
+  readonly net: Net;
+  readonly across: number;
+  readonly along: number;
+  readonly scores: { readonly across: readonly number[]; readonly along: readonly number[] };
+  readonly area: number;
+  readonly perimeter: number;
+  readonly instructions: readonly Sentence[];
+}
+/** Words with figures in them; `say` in `drawing` turns it into text in the reader's units. */
+export type Sentence = readonly (string | { readonly mm: number; readonly bare?: boolean })[];
+export interface FitFigure {
+  readonly name: string;
+  readonly holds: boolean;
+  /** Room to spare (negative: missing), in mm as cut; null when it could not be worked out. */
+  readonly gap: number | null;
+  readonly is: FitDef['is'];
+  readonly advice: boolean;
+  readonly otherwise: string;
+  readonly change: readonly string[];
+}
+export interface SizingProblem {
+  readonly code: 'below range' | 'above range' | 'fit fails' | 'cannot be worked out' | 'piece fails';
+  /** The measure to change. */
+  readonly measure: string;
+  readonly sentence: string;
+  /** The nearest value of `measure` that works, in mm (or plain number); null when none in its range does. */
+  readonly nearest: number | null;
+}
+
+// ── Drawing: plain shapes with roles, in drawing units (CSS pixels on a page, millimetres where asked). ──────────────
+
+export type Role =
+  | 'cut' | 'valley' | 'mountain' | 'slit' | 'glue' | 'panel' | 'away' | 'hidden'
+  | 'dimension' | 'extension' | 'origin' | 'ruler' | 'figure' | 'label'
+  | 'face' | 'face edge';
+export type Shape =
+  | { readonly type: 'path'; readonly role: Role; readonly d: string; readonly tone?: string; readonly of?: string }
+  | {
+      readonly type: 'text';
+      readonly role: 'figure' | 'label';
+      readonly x: number;
+      readonly y: number;
+      readonly text: string;
+      readonly anchor: 'start' | 'middle' | 'end';
+      readonly turned?: boolean;
+      readonly of?: string;
+    };
+export interface Drawing {
+  readonly width: number;
+  readonly height: number;
+  readonly title: string;
+  /** Text alternative: size and scores in words. */
+  readonly alt: string;
+  readonly shapes: readonly Shape[];
+}

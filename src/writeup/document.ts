@@ -1,0 +1,70 @@
+/**
+ * The write-up as stored: the editor's own JSON (ProseMirror), narrowed to our nodes.
+ * Never rename or remove a node or attribute: raise WRITE_UP_VERSION and migrate on read.
+ */
+export const WRITE_UP_VERSION = 1;
+
+export interface WriteUp {
+  readonly version: typeof WRITE_UP_VERSION;
+  readonly doc: DocNode;
+}
+export interface DocNode {
+  readonly type: 'doc';
+  readonly content: readonly BlockNode[];
+}
+export type BlockNode =
+  | StepNode | ParagraphNode | HeadingNode | ListNode | PieceCardNode | CutListNode | PhotoNode | NoteNode | MaterialsNode;
+export type InlineNode = TextNode | MeasureNode | { readonly type: 'hardBreak' };
+
+/** A numbered step. `mark` is a few words beside the title, such as "optional". */
+export interface StepNode {
+  readonly type: 'step';
+  readonly attrs: { readonly title: string; readonly mark: string };
+  readonly content: readonly BlockNode[];
+}
+export interface ParagraphNode {
+  readonly type: 'paragraph';
+  readonly content?: readonly InlineNode[];
+}
+export interface HeadingNode {
+  readonly type: 'heading';
+  readonly attrs: { readonly level: 2 | 3 };
+  readonly content?: readonly InlineNode[];
+}
+export interface ListNode {
+  readonly type: 'bulletList' | 'orderedList';
+  readonly content: readonly { readonly type: 'listItem'; readonly content: readonly BlockNode[] }[];
+}
+/** A live measure: the name of a measure or a formula, worked out at the reader's size. `bare` leaves the unit away. */
+export interface MeasureNode {
+  readonly type: 'measure';
+  readonly attrs: { readonly formula: string; readonly bare: boolean };
+}
+/** A piece's drawing with its cut and score sentences. */
+export interface PieceCardNode {
+  readonly type: 'pieceCard';
+  readonly attrs: { readonly piece: string };
+}
+export interface CutListNode {
+  readonly type: 'cutList';
+}
+/** The content is the caption, which may hold live measures. */
+export interface PhotoNode {
+  readonly type: 'photo';
+  readonly attrs: { readonly upload: string; readonly alt: string; readonly width: number; readonly height: number };
+  readonly content?: readonly InlineNode[];
+}
+export interface NoteNode {
+  readonly type: 'tip' | 'caution';
+  readonly content: readonly BlockNode[];
+}
+export interface MaterialsNode {
+  readonly type: 'materials';
+  readonly content: readonly BlockNode[];
+}
+export interface TextNode {
+  readonly type: 'text';
+  readonly text: string;
+  readonly marks?: readonly MarkNode[];
+}
+export type MarkNode = { readonly type: 'bold' } | { readonly type: 'italic' } | { readonly type: 'link'; readonly attrs: { readonly href: string } };
