@@ -175,7 +175,13 @@ export const mailings = sqliteTable(
     messageDate: integer('message_date', { mode: 'timestamp_ms' }),
     preparedAt: integer('prepared_at', { mode: 'timestamp_ms' }),
     total: integer('total').notNull().default(0),
+    /** Fixed when sending begins, so that a resend is the same mail to the byte. */
+    fromName: text('from_name'),
+    replyTo: text('reply_to'),
+    /** What stands in the slots that depend on a subscriber's units, worked out once for each. */
+    unitParts: text('unit_parts', { mode: 'json' }).$type<Record<'in' | 'mm' | 'cm', Record<string, string>>>(),
     pauseReason: text('pause_reason'),
+    finishedAt: integer('finished_at', { mode: 'timestamp_ms' }),
     testedAt: integer('tested_at', { mode: 'timestamp_ms' }),
     createdAt: createdAt(),
     updatedAt: integer('updated_at', { mode: 'timestamp_ms' }).notNull().default(now),
@@ -214,9 +220,28 @@ export const deliveries = sqliteTable(
   },
   (t) => [
     uniqueIndex('delivery_once').on(t.mailingId, t.emailKey),
-    index('delivery_due').on(t.state, t.nextAt, t.id),
-    index('delivery_mailing').on(t.mailingId, t.state),
+    index('delivery_due').on(t.mailingId, t.state, t.nextAt, t.id),
+    index('delivery_lease').on(t.state, t.leaseUntil),
   ],
+);
+
+/** Every time a delivery was handed to a server: only added to, never changed but for its end. */
+export const attempts = sqliteTable(
+  'attempt',
+  {
+    deliveryId: integer('delivery_id')
+      .notNull()
+      .references(() => deliveries.id, { onDelete: 'cascade' }),
+    n: integer('n').notNull(),
+    startedAt: integer('started_at', { mode: 'timestamp_ms' }).notNull(),
+    /** Null when the process ended before the answer came. */
+    endedAt: integer('ended_at', { mode: 'timestamp_ms' }),
+    outcome: text('outcome'),
+    phase: text('phase'),
+    code: integer('code'),
+    reply: text('reply'),
+  },
+  (t) => [primaryKey({ columns: [t.deliveryId, t.n] })],
 );
 
 /** Single letters: sign-in links, confirmations, invitations, tests of a mailing. */
