@@ -1,0 +1,3 @@
+import { people } from '../features/accounts/people.server';
+
+export const Badge = () => people[0];

@@ -1,0 +1,3 @@
+import { roster } from './roster';
+
+export const Roster = () => roster();

@@ -1,0 +1,3 @@
+import { people } from './people.server';
+
+export const roster = () => people.join(', ');

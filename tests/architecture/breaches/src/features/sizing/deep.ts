@@ -1,0 +1,3 @@
+import { order } from '../../engine/formula/order';
+
+export const deep = order;

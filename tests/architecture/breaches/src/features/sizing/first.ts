@@ -1,0 +1,3 @@
+import { second } from './second';
+
+export const first = (): number => second();

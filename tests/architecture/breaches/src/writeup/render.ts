@@ -1,0 +1,3 @@
+import { title } from '../features/sizing/title';
+
+export const render = () => title;
