@@ -33,6 +33,8 @@ export interface HeadingNode {
 }
 export interface ListNode {
   readonly type: 'bulletList' | 'orderedList';
+  /** Ordered lists: the first number, when it is not 1. */
+  readonly attrs?: { readonly start: number };
   readonly content: readonly { readonly type: 'listItem'; readonly content: readonly BlockNode[] }[];
 }
 /** A live measure: the name of a measure or a formula, worked out at the reader's size. `bare` leaves the unit away. */

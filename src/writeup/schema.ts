@@ -1,0 +1,40 @@
+import { getSchema, Node, type Extensions } from '@tiptap/core';
+import type { Schema } from '@tiptap/pm/model';
+import { StarterKit } from '@tiptap/starter-kit';
+import { Link } from './marks/link/schema';
+import { Caution } from './nodes/caution/schema';
+import { CutList } from './nodes/cut-list/schema';
+import { Materials } from './nodes/materials/schema';
+import { Measure } from './nodes/measure/schema';
+import { Photo } from './nodes/photo/schema';
+import { PieceCard } from './nodes/piece-card/schema';
+import { Step } from './nodes/step/schema';
+import { Tip } from './nodes/tip/schema';
+
+/** The whole write-up: text and steps in any order; a step never stands inside anything else. */
+const WholeWriteUp = Node.create({ name: 'doc', topNode: true, content: '(block | part)+' });
+
+/** Paragraphs, headings, lists, bold and italic as Tiptap has them; everything else of the kit is left out. */
+export const plainText = StarterKit.configure({
+  document: false,
+  blockquote: false,
+  code: false,
+  codeBlock: false,
+  horizontalRule: false,
+  strike: false,
+  underline: false,
+  link: false,
+  trailingNode: false,
+  heading: { levels: [2, 3] },
+});
+
+/** Our own nodes and marks, without views: the editor swaps in those with a view, under the same names. */
+export const ownNodes: Extensions = [WholeWriteUp, Step, Measure, PieceCard, CutList, Photo, Tip, Caution, Materials, Link];
+
+let schema: Schema | undefined;
+
+/** The one schema that the editor, the server and the renderer's tests agree on. Needs no DOM. */
+export function writeUpSchema(): Schema {
+  schema ??= getSchema([plainText, ...ownNodes]);
+  return schema;
+}
