@@ -1,0 +1,44 @@
+import type { Pattern } from '@/engine';
+import { WRITE_UP_VERSION, type BlockNode, type InlineNode, type WriteUp } from '@/writeup/document';
+
+/** The write-up that a new project begins with: materials and cut list, then the pattern's order of making, a step a sentence. */
+export function firstWriteUp(pattern: Pick<Pattern, 'pieces' | 'order'>): WriteUp {
+  const shown = new Set<string>();
+  const steps = pattern.order.map((sentence): BlockNode => {
+    const cards = pattern.pieces.filter((piece) => !shown.has(piece.name) && names(sentence, piece.name));
+    cards.forEach((piece) => shown.add(piece.name));
+    return {
+      type: 'step',
+      attrs: { title: '', mark: '' },
+      content: [
+        { type: 'paragraph', content: inline(sentence) },
+        ...cards.map((piece): BlockNode => ({ type: 'pieceCard', attrs: { piece: piece.name } })),
+      ],
+    };
+  });
+  const stocks = [...new Set(pattern.pieces.map((piece) => piece.stock))];
+  return {
+    version: WRITE_UP_VERSION,
+    doc: {
+      type: 'doc',
+      content: [
+        { type: 'materials', content: [{ type: 'bulletList', content: stocks.map((stock) => ({ type: 'listItem', content: [line(capital(stock))] })) }] },
+        { type: 'cutList' },
+        ...(steps.length > 0 ? steps : [{ type: 'step', attrs: { title: '', mark: '' }, content: [{ type: 'paragraph' }] } as BlockNode]),
+      ],
+    },
+  };
+}
+
+const line = (text: string): BlockNode => ({ type: 'paragraph', content: [{ type: 'text', text }] });
+const capital = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);
+const names = (sentence: string, piece: string): boolean =>
+  new RegExp(`(?<![\\p{L}\\p{N}])${piece.replace(/[.*+?^${}()|[\]\\]/gu, '\\$&')}(?![\\p{L}\\p{N}])`, 'iu').test(sentence);
+
+/** `Score at [[tab]]` is text and a live measure. */
+function inline(sentence: string): InlineNode[] {
+  return sentence.split(/\[\[(.+?)\]\]/gu).flatMap((part, i): InlineNode[] => {
+    if (part === '') return [];
+    return [i % 2 === 1 ? { type: 'measure', attrs: { formula: part.trim(), bare: false } } : { type: 'text', text: part }];
+  });
+}

@@ -1,0 +1,58 @@
+import type { Pattern, PieceDef } from '@/engine';
+
+export interface NameSpan {
+  readonly name: string;
+  readonly from: number;
+  readonly to: number;
+}
+
+/**
+ * Where the given names stand in a formula, as text: it also works on a formula that does not read yet, so that the desk can
+ * light what follows a measure while one of the formulas is being typed. The longest name wins ("inside depth" over "depth");
+ * a name after a dot belongs to a piece and does not count.
+ */
+export function namesIn(formula: string, names: readonly string[]): readonly NameSpan[] {
+  if (names.length === 0) return [];
+  const spans: NameSpan[] = [];
+  for (const match of formula.matchAll(finder(names))) {
+    spans.push({ name: match[0].replace(/\s+/gu, ' '), from: match.index, to: match.index + match[0].length });
+  }
+  return spans;
+}
+
+const finders = new Map<string, RegExp>();
+function finder(names: readonly string[]): RegExp {
+  const key = names.join('\n');
+  const known = finders.get(key);
+  if (known) return known;
+  const words = [...names]
+    .sort((a, b) => b.length - a.length)
+    .map((name) => name.replace(/[.*+?^${}()|[\]\\]/gu, '\\$&').replace(/\s+/gu, '\\s+'));
+  const made = new RegExp(`(?<![\\p{L}\\p{N}_.])(?:${words.join('|')})(?![\\p{L}\\p{N}_])`, 'gu');
+  if (finders.size > 50) finders.clear();
+  finders.set(key, made);
+  return made;
+}
+
+/** Every formula of a piece: sizes, counts, conditions, angles, radii. */
+export function formulasOfPiece(piece: PieceDef): readonly string[] {
+  const found: (string | undefined)[] = [piece.count, piece.when];
+  for (const track of [...piece.columns, ...piece.rows]) found.push(track.size, track.when);
+  for (const line of piece.lines ?? []) found.push(line.angle, line.when);
+  for (const taper of piece.tapers ?? []) found.push(taper.by, taper.start, taper.when);
+  for (const corner of piece.corners ?? []) found.push(corner.radius, corner.when);
+  for (const notch of piece.notches ?? []) found.push(notch.at, notch.radius, notch.when);
+  for (const slot of piece.slots ?? []) found.push(slot.across, slot.along, slot.width, slot.height, slot.when);
+  for (const roll of piece.rolls ?? []) found.push(roll.radius, roll.when);
+  return found.filter((formula): formula is string => formula !== undefined && formula !== '');
+}
+
+/** Names that a formula may use: measures and choices. */
+export const namesOf = (pattern: Pattern): readonly string[] => [
+  ...pattern.measures.map((measure) => measure.name),
+  ...pattern.choices.map((choice) => choice.name),
+];
+
+/** The formulas that say what a measure is: its own, or the usual value and condition of an asked one. */
+export const formulasOfMeasure = (measure: Pattern['measures'][number]): readonly string[] =>
+  [measure.formula, measure.ask?.usual, measure.ask?.when].filter((f): f is string => f !== undefined && f !== '');

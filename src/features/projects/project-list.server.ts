@@ -1,0 +1,97 @@
+import { and, desc, eq, isNull, sql } from 'drizzle-orm';
+import { db } from '@/db/client.server';
+import { editions, projects, users } from '@/db/schema';
+import { compilePattern, drawFolded, drawPiece, evaluate, show, type Figures, type Model, type PieceFigure } from '@/engine';
+import { drawingSvg } from '@/exports/svg/drawing';
+import type { ProjectList, ProjectSummary } from './project';
+import { differenceWords, stageOf } from './project-stage';
+import type { Asker } from './projects.server';
+import { blocking, proofList } from './proof';
+
+const MM_AN_INCH = 25.4;
+/** The list's flat pictures: never larger than this, nor than ten pixels an inch. */
+const FLAT = { width: 148, height: 84, pixelsAnInch: 10, most: 2 } as const;
+const FOLDED = { width: 96, height: 100 } as const;
+
+type Row = ReturnType<typeof rowsFor>[number];
+interface Pictured {
+  readonly row: Row;
+  readonly worked: { readonly model: Model; readonly figures: Figures } | null;
+  readonly pieces: readonly PieceFigure[];
+}
+
+/** The asker's projects, last touched first; an admin's list holds everybody's. All flat pictures share one scale. */
+export function listProjects(asker: Asker): ProjectList {
+  const pictured = rowsFor(asker).map(picture);
+  const pixelsAnInch = commonScale(pictured.flatMap(({ pieces }) => pieces));
+  return { pixelsAnInch, projects: pictured.map((item) => summary(item, pixelsAnInch)) };
+}
+
+function rowsFor(asker: Asker) {
+  if (asker.role === 'reader') return [];
+  return db
+    .select({
+      project: projects,
+      authorName: users.name,
+      editionCount: sql<number>`(select count(*) from ${editions} where ${editions.projectId} = ${projects.id})`,
+    })
+    .from(projects)
+    .innerJoin(users, eq(projects.authorId, users.id))
+    .where(and(isNull(projects.deletedAt), asker.role === 'admin' ? undefined : eq(projects.authorId, asker.id)))
+    .orderBy(desc(projects.updatedAt), projects.id)
+    .all();
+}
+
+function picture(row: Row): Pictured {
+  const compiled = compilePattern(row.project.pattern);
+  if (!compiled.ok) return { row, worked: null, pieces: [] };
+  const figures = evaluate(compiled.value, row.project.sizing);
+  // The pieces that say most about a box are the large ones with scores.
+  const scored = figures.pieces.filter((piece) => piece.net.folds.length > 0);
+  const pieces = [...(scored.length > 0 ? scored : figures.pieces)].sort((a, b) => b.area - a.area).slice(0, FLAT.most);
+  return { row, worked: { model: compiled.value, figures }, pieces };
+}
+
+function commonScale(pieces: readonly PieceFigure[]): number {
+  const across = Math.max(0, ...pieces.map((piece) => piece.across)) / MM_AN_INCH;
+  const along = Math.max(0, ...pieces.map((piece) => piece.along)) / MM_AN_INCH;
+  return Math.min(FLAT.pixelsAnInch, across > 0 ? FLAT.width / across : FLAT.pixelsAnInch, along > 0 ? FLAT.height / along : FLAT.pixelsAnInch);
+}
+
+function summary({ row, worked, pieces }: Pictured, pixelsAnInch: number): ProjectSummary {
+  const { project, authorName, editionCount } = row;
+  const { units, grid } = project.sizing;
+  const stage = stageOf({ ...project, editions: editionCount });
+  const items = proofList({ ...project }, worked ? { figures: worked.figures, compiled: { ok: true, value: worked.model } } : {});
+  const stops = blocking(items).length;
+  return {
+    id: project.id,
+    slug: project.slug,
+    title: project.title,
+    patternName: project.pattern.name,
+    size: worked ? sizeWords(worked.figures, { units, grid }) : '',
+    stage,
+    difference: stage.stage === 'changed' ? differenceOf(row) : '',
+    blocking: stops,
+    advisory: items.length - stops,
+    revision: project.revision,
+    updatedAt: project.updatedAt.getTime(),
+    author: { id: project.authorId, name: authorName ?? 'Unnamed' },
+    flat: pieces.map((piece) =>
+      drawingSvg(drawPiece(piece, { width: (piece.across / MM_AN_INCH) * pixelsAnInch, units, grid, labels: false, dims: false })),
+    ),
+    folded: worked ? drawingSvg(drawFolded(worked.model, worked.figures, FOLDED)) : null,
+    words: [...project.pattern.pieces, ...project.pattern.measures, ...project.pattern.choices].map((item) => item.name).join(' '),
+  };
+}
+
+/** "9 × 6 × 2 1/4 in" */
+export function sizeWords(figures: Pick<Figures, 'finished'>, options: { readonly units: 'in' | 'mm' | 'cm'; readonly grid: Parameters<typeof show>[1]['grid'] }): string {
+  const sizes = figures.finished.inside.length > 0 ? figures.finished.inside : figures.finished.outside;
+  return sizes.map((size, i) => show(size.mm, { ...options, bare: i < sizes.length - 1 }).text).join(' × ');
+}
+
+function differenceOf({ project }: Row): string {
+  const newest = db.select().from(editions).where(eq(editions.projectId, project.id)).orderBy(desc(editions.n)).limit(1).get();
+  return newest ? differenceWords(newest, project) : '';
+}

@@ -1,0 +1,36 @@
+import type { Fault } from '@/engine';
+
+export type ProofColumn = 'facts' | 'measures' | 'pieces' | 'write-up';
+/** Where an item stands, so that the desk can go there. */
+export interface ProofPlace {
+  readonly column: ProofColumn;
+  /** "Measures · strip width", "Write-up, step 3, The lower spine". */
+  readonly label: string;
+  /** The measure, choice, fit, piece or fact that is meant. */
+  readonly name?: string;
+  /** Which of the write-up's live measures, photos or piece cards, counted from 0. */
+  readonly nth?: number;
+  readonly step?: number;
+}
+
+const COLUMNS: Readonly<Record<string, { readonly column: ProofPlace['column']; readonly heading: string }>> = {
+  measure: { column: 'measures', heading: 'Measures' },
+  choice: { column: 'measures', heading: 'Choices' },
+  fit: { column: 'measures', heading: 'Fits' },
+  piece: { column: 'pieces', heading: 'Pieces' },
+};
+
+/** The desk's place for a fault: `piece "Floor", row 2` is "Pieces · Floor, row 2". */
+export function placeOfFault(fault: Pick<Fault, 'where'>): ProofPlace {
+  const match = /^(measure|choice|fit|piece) "([^"]*)"(.*)$/su.exec(fault.where);
+  const column = COLUMNS[match?.[1] ?? ''];
+  if (match === null || column === undefined) return { column: 'measures', label: fault.where === '' ? 'Measures' : `Measures · ${fault.where}` };
+  return { column: column.column, name: match[2] ?? '', label: `${column.heading} · ${match[2]}${match[3]}` };
+}
+
+/** Whether a fault stands in the measure called `name`, and in which of its fields ("usual", "from", "to", "formula"). */
+export function fieldOfFault(fault: Pick<Fault, 'where'>, name: string): string | null {
+  const head = `measure "${name}"`;
+  if (!fault.where.startsWith(head)) return null;
+  return fault.where.slice(head.length).replace(/^[\s,]+/u, '') || 'formula';
+}
