@@ -19,9 +19,9 @@ export interface Config {
   readonly siteUrl: string;
   /** The site's own address is on this machine: nobody else is meant to reach it. */
   readonly isLocal: boolean;
-  /** Host names, with their port when it is not the usual one, that requests may name. */
+  /** Hosts that requests may name; one without a port stands for every port. */
   readonly allowedHosts: readonly string[];
-  /** Addresses of proxies whose X-Forwarded-For and X-Forwarded-Proto count. */
+  /** Addresses of proxies whose X-Forwarded-For and X-Forwarded-Proto count; `loopback` stands for this machine. */
   readonly trustedProxies: readonly string[];
   /** Null: the local mail server takes everything. */
   readonly smtpUrl: string | null;
@@ -38,20 +38,20 @@ export interface Config {
   secret(): string;
 }
 
-const LOOPBACK = new Set(['localhost', '127.0.0.1', '[::1]', '::1']);
+const LOOPBACK: readonly string[] = ['localhost', '127.0.0.1', '::1', '[::1]'];
 
 /**
  * Reads the settings from the environment. Every setting has a value that works on one's own machine.
  * Throws ConfigError for a setting that cannot be meant.
  */
 export function readConfig(env: NodeJS.ProcessEnv, root = process.cwd()): Config {
-  const port = readPort(env.PORT, 4321, 'PORT');
-  const host = env.HOST || 'localhost';
+  const port = readPort(env.PORT, 4321, 'PORT', 1);
+  const host = env.HOST || '127.0.0.1';
   const siteUrl = readSiteUrl(env.SITE_URL || `http://localhost:${port}`);
-  const isLocal = LOOPBACK.has(new URL(siteUrl).hostname);
+  const isLocal = LOOPBACK.includes(new URL(siteUrl).hostname);
   const dataDir = resolve(root, env.DATA_DIR || '.data');
   const smtpUrl = readSmtpUrl(env.SMTP_URL);
-  const demo = readYesNo(env.DEMO, 'DEMO') ?? (isLocal && LOOPBACK.has(host));
+  const demo = readYesNo(env.DEMO, 'DEMO') ?? (isLocal && LOOPBACK.includes(host));
   let secret: string | undefined;
 
   return {
@@ -63,7 +63,9 @@ export function readConfig(env: NodeJS.ProcessEnv, root = process.cwd()): Config
     isLocal,
     allowedHosts: [
       new URL(siteUrl).host,
-      ...[...LOOPBACK].flatMap((name) => (name === '::1' ? [] : [`${name}:${port}`])),
+      `localhost:${port}`,
+      `127.0.0.1:${port}`,
+      `[::1]:${port}`,
       ...readList(env.ALLOWED_HOSTS),
     ],
     trustedProxies: readList(env.TRUST_PROXY),
@@ -77,11 +79,11 @@ export function readConfig(env: NodeJS.ProcessEnv, root = process.cwd()): Config
   };
 }
 
-function readPort(text: string | undefined, usual: number, name: string): number {
+function readPort(text: string | undefined, usual: number, name: string, least = 0): number {
   if (!text) return usual;
   const port = Number(text);
-  if (!Number.isInteger(port) || port < 0 || port > 65535) {
-    throw new ConfigError(`${name} is "${text}", which is no port: give a whole number from 1 to 65535.`);
+  if (!Number.isInteger(port) || port < least || port > 65535) {
+    throw new ConfigError(`${name} is "${text}", which is no port: give a whole number from ${least} to 65535.`);
   }
   return port;
 }

@@ -1,0 +1,85 @@
+/** The running site: database, mail and pages in one process. Started by start.mjs; needs dist/ and TypeScript. */
+import type { RequestListener } from 'node:http';
+import { pathToFileURL } from 'node:url';
+import { join } from 'node:path';
+import { config } from '@/config.server';
+import { closeDatabase } from '@/db/client.server';
+import { migrateDatabase } from '@/db/migrate.server';
+import { DEMO_PEOPLE, isDemo, seedDemo } from '@/features/demo/seed.server';
+import { frontDoor } from '@/features/http/front-door.server';
+import { serve } from '@/features/http/serve.server';
+import { startLocalMailServer } from '@/features/mailing/local-mail-server.server';
+import { startMailWorker } from '@/features/mailing/worker.server';
+import { portTrouble } from './steps.mjs';
+
+interface Stoppable {
+  stop(): Promise<void>;
+}
+
+/** The database brought up to date and filled, and the mail going out: all but the pages. */
+export async function startServices(): Promise<Stoppable> {
+  const { applied, backup } = migrateDatabase();
+  if (backup) console.log(`Brought the data up to date in ${applied} steps; the copy made before: ${backup}`);
+  if (config.demo) await seedDemo();
+
+  const localMail = config.smtpUrl
+    ? null
+    : await startLocalMailServer({ port: config.localMailPort, dir: join(config.dataDir, 'mail') });
+  const ending = new AbortController();
+  const worker = startMailWorker({ signal: ending.signal, smtpUrl: config.smtpUrl ?? localMail?.url });
+
+  return {
+    async stop() {
+      ending.abort();
+      await worker.stop();
+      await localMail?.stop();
+      closeDatabase();
+    },
+  };
+}
+
+export async function startSite(): Promise<void> {
+  // The built entry would listen by itself; it reads this while it is imported.
+  process.env.ASTRO_NODE_AUTOSTART = 'disabled';
+  const entry = pathToFileURL(join(config.root, 'dist/server/entry.mjs')).href;
+  const services = await startServices();
+  const { handler } = (await import(entry)) as { handler: RequestListener };
+  const site = await serve(frontDoor(handler, config), config).catch((error: unknown) => {
+    throw portTrouble(error, config.port);
+  });
+  stopOnSignal(async () => {
+    await site.stop();
+    await services.stop();
+  });
+  greet();
+}
+
+/** Stops once, at Ctrl-C or when asked by the system; a second Ctrl-C does not wait. */
+export function stopOnSignal(stop: () => Promise<void>): () => void {
+  let stopping = false;
+  const onSignal = () => {
+    if (stopping) process.exit(1);
+    stopping = true;
+    stop().then(
+      () => process.exit(0),
+      (error: unknown) => {
+        console.error(error);
+        process.exit(1);
+      },
+    );
+  };
+  process.on('SIGINT', onSignal);
+  process.on('SIGTERM', onSignal);
+  return onSignal;
+}
+
+function greet(): void {
+  const lines = [`Foldwright is at ${config.siteUrl}`];
+  if (!config.smtpUrl) lines.push(`Mail goes nowhere but to ${config.siteUrl}/dev/mailbox`);
+  if (isDemo()) {
+    lines.push('', 'Demo sign-ins:');
+    for (const { role, email, password } of DEMO_PEOPLE) lines.push(`  ${role.padEnd(7)} ${email.padEnd(28)} ${password}`);
+  }
+  lines.push('', 'Ctrl-C stops it.');
+  console.log(lines.join('\n'));
+}
