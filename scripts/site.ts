@@ -3,9 +3,10 @@ import type { RequestListener } from 'node:http';
 import { pathToFileURL } from 'node:url';
 import { join } from 'node:path';
 import { config } from '@/config.server';
-import { closeDatabase } from '@/db/client.server';
+import { closeDatabase, sqlite } from '@/db/client.server';
 import { migrateDatabase } from '@/db/migrate.server';
-import { DEMO_PEOPLE, isDemo, seedDemo } from '@/features/demo/seed.server';
+import { DEMO_PEOPLE } from '@/features/demo/people';
+import { seedDemo } from '@/features/demo/seed.server';
 import { frontDoor } from '@/features/http/front-door.server';
 import { serve } from '@/features/http/serve.server';
 import { startLocalMailServer } from '@/features/mailing/local-mail-server.server';
@@ -20,17 +21,18 @@ interface Stoppable {
 export async function startServices(): Promise<Stoppable> {
   const { applied, backup } = migrateDatabase();
   if (backup) console.log(`Brought the data up to date in ${applied} steps; the copy made before: ${backup}`);
-  if (config.demo) await seedDemo();
+  if (config.demo && isEmpty()) {
+    console.log('Filling the empty database with the demo.');
+    await seedDemo();
+  }
 
   const localMail = config.smtpUrl
     ? null
     : await startLocalMailServer({ port: config.localMailPort, dir: join(config.dataDir, 'mail') });
-  const ending = new AbortController();
-  const worker = startMailWorker({ signal: ending.signal, smtpUrl: config.smtpUrl ?? localMail?.url });
+  const worker = startMailWorker({ smtpUrl: config.smtpUrl ?? localMail?.url ?? null });
 
   return {
     async stop() {
-      ending.abort();
       await worker.stop();
       await localMail?.stop();
       closeDatabase();
@@ -72,6 +74,9 @@ export function stopOnSignal(stop: () => Promise<void>): () => void {
   process.on('SIGTERM', onSignal);
   return onSignal;
 }
+
+const isEmpty = () => !sqlite().prepare('SELECT 1 FROM user UNION SELECT 1 FROM project').get();
+const isDemo = () => Boolean(sqlite().prepare("SELECT 1 FROM setting WHERE key = 'demo'").get());
 
 function greet(): void {
   const lines = [`Foldwright is at ${config.siteUrl}`];

@@ -26,22 +26,27 @@ export async function run(steps) {
   }
 }
 
-export function checkNode() {
+export function checkNode(version = process.versions.node) {
   const needed = JSON.parse(readFileSync(join(root, 'package.json'), 'utf8')).engines.node.match(/\d+\.\d+/)[0];
   const [major, minor] = needed.split('.').map(Number);
-  const [hasMajor, hasMinor] = process.versions.node.split('.').map(Number);
+  const [hasMajor, hasMinor] = version.split('.').map(Number);
   if (hasMajor < major || (hasMajor === major && hasMinor < minor)) {
-    throw new Halt(`Foldwright needs Node ${needed} or newer and this is ${process.versions.node}: install a newer one from nodejs.org.`);
+    throw new Halt(`Foldwright needs Node ${needed} or newer and this is ${version}: install a newer one from nodejs.org.`);
   }
 }
 
 export async function install() {
-  const lock = statSync(join(root, 'package-lock.json'));
-  const installed = statSync(join(root, 'node_modules/.package-lock.json'), { throwIfNoEntry: false });
-  if (installed && installed.mtimeMs >= lock.mtimeMs) return;
+  if (isInstalled()) return;
   console.log('Installing packages; the first time takes about two minutes.');
   const done = await spawned(...npm('ci', '--include=dev', '--no-audit', '--no-fund', '--loglevel=error'));
   if (done !== 0) throw new Halt('The packages could not be installed: see what npm says above, then try again.');
+}
+
+/** npm writes its own copy of the lock file last, so an installation that was broken off has none. */
+export function isInstalled(folder = root) {
+  const lock = statSync(join(folder, 'package-lock.json'));
+  const installed = statSync(join(folder, 'node_modules/.package-lock.json'), { throwIfNoEntry: false });
+  return Boolean(installed && installed.mtimeMs >= lock.mtimeMs);
 }
 
 /** Builds when the sources are not those that dist/ was built from. */
