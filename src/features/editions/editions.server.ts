@@ -4,7 +4,6 @@ import { db } from '@/db/client.server';
 import { editions, projects, uploads, users } from '@/db/schema';
 import type { Pattern, Sizing } from '@/engine';
 import type { WriteUp } from '@/writeup/document';
-import { uploadsIn } from './uploads-in';
 
 export interface Picture {
   readonly id: string;
@@ -106,18 +105,6 @@ export function countByGroup(query = ''): readonly { readonly group: string; rea
     .orderBy(group)
     .all();
   return every.map((row) => ({ group: row.group, count: counted.find((c) => c.group === row.group)?.count ?? 0 }));
-}
-
-/** Sizes of the pictures that an edition shows, by id. */
-export function picturesOf(edition: Pick<Edition, 'writeUp' | 'hero'>): ReadonlyMap<string, Picture> {
-  const ids = uploadsIn(edition.writeUp, edition.hero?.id ?? null);
-  if (ids.length === 0) return new Map();
-  const rows = db
-    .select({ id: uploads.id, width: uploads.width, height: uploads.height })
-    .from(uploads)
-    .where(inArray(uploads.id, [...ids]))
-    .all();
-  return new Map(rows.map((row) => [row.id, row]));
 }
 
 const group = sql`json_extract(${editions.pattern}, '$.group')`;

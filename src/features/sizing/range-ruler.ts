@@ -1,6 +1,6 @@
 import type { KindName, Unit } from '@/engine';
 
-export interface RulerTick {
+export interface RangeTick {
   /** Where it stands, from 0 (start of the range) to 100 (its end). */
   readonly at: number;
   readonly height: 'short' | 'middle' | 'tall';
@@ -20,7 +20,7 @@ const MOST_LABELS = 8;
  * The ruler under a slider: ticks and figures of the range's own units, from its start to its end. Ticks stand on whole
  * steps of the unit, not of the range, so that 3 3/8 to 10 in still reads 4, 5, 6 … as a ruler does.
  */
-export function rangeRuler(range: { readonly from: number; readonly to: number; readonly kind: KindName; readonly units: Unit }): readonly RulerTick[] {
+export function rangeRuler(range: { readonly from: number; readonly to: number; readonly kind: KindName; readonly units: Unit }): readonly RangeTick[] {
   const { from, to, kind, units } = range;
   if (!(to > from)) return [];
   const { mm, steps } = kind === 'length' ? MM_PER_STEP[units] : { mm: 1, steps: PLAIN_STEPS };
@@ -28,7 +28,7 @@ export function rangeRuler(range: { readonly from: number; readonly to: number; 
   const fine = steps.find((step) => span / step <= MOST_TICKS) ?? span;
   const named = steps.find((step) => step >= fine && span / step <= MOST_LABELS) ?? span;
   const half = named / 2;
-  const ticks: RulerTick[] = [];
+  const ticks: RangeTick[] = [];
   const first = Math.ceil(from / mm / fine - 1e-9);
   const last = Math.floor(to / mm / fine + 1e-9);
   for (let k = first; k <= last; k += 1) {
@@ -45,7 +45,7 @@ export function rangeRuler(range: { readonly from: number; readonly to: number; 
 }
 
 /** The ruler as SVG whose places are percentages, so that it fits whatever width its slider has. */
-export function rangeRulerSvg(ticks: readonly RulerTick[]): string {
+export function rangeRulerSvg(ticks: readonly RangeTick[]): string {
   const length = { short: 5, middle: 8, tall: 11 };
   const lines = ticks.map(({ at, height }) => `<line x1="${at.toFixed(2)}%" x2="${at.toFixed(2)}%" y1="0" y2="${length[height]}"/>`);
   const figures = ticks.flatMap(({ at, label }) =>

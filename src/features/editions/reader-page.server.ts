@@ -1,0 +1,62 @@
+import { explain, type Model, type Sizing, type StockId } from '@/engine';
+import type { Links } from '@/features/sizing/live-html';
+import { sizingHref } from '@/features/sizing/live-html';
+import { inUnits, type Typed } from '@/features/sizing/reader-store';
+import { readerView, readStock, USUAL_STOCK, type ReaderView } from '@/features/sizing/reader-view';
+import { isSizingForm, readSizingForm } from '@/features/sizing/sizing-form';
+import { readSizing } from '@/features/sizing/sizing-link';
+import { judge } from '@/features/sizing/verdict';
+import { getEdition, type Edition } from './editions.server';
+import { modelOf } from './models.server';
+
+export interface ReaderPage {
+  readonly edition: Edition;
+  readonly model: Model;
+  readonly view: ReaderView;
+  readonly links: Links;
+  /** Form fields that do not read. */
+  readonly typed: Typed;
+  /** What a link asks for that does not read, as sentences. */
+  readonly linkFaults: readonly string[];
+  /** The form read well: the address that says the same as a link. */
+  readonly linkTo: string | null;
+}
+
+/** A published project at the sizing in the address; null when there is no such project or edition. */
+export function loadReaderPage(slug: string, url: URL): ReaderPage | null {
+  const params = url.searchParams;
+  const asked = params.get('edition');
+  if (asked !== null && !/^[1-9]\d{0,5}$/.test(asked)) return null;
+  const edition = getEdition(slug, asked === null ? undefined : Number(asked));
+  if (!edition) return null;
+
+  const model = modelOf(edition);
+  const stock = readStock(params.get('card'));
+  const links: Links = { model, authors: edition.sizing, path: `/projects/${slug}`, keep: keepParams(stock, asked) };
+  const reading = isSizingForm(params)
+    ? { ...readSizingForm(model, params, edition.sizing), linkFaults: [] }
+    : readLink(model, params, edition.sizing);
+  const wellRead = isSizingForm(params) && Object.keys(reading.typed).length === 0;
+  return {
+    edition,
+    model,
+    view: readerView(model, judge(model, reading.sizing, edition.sizing, { nearest: true }), stock),
+    links,
+    typed: reading.typed,
+    linkFaults: reading.linkFaults,
+    linkTo: wellRead ? sizingHref(links, reading.sizing) : null,
+  };
+}
+
+function readLink(model: Model, params: URLSearchParams, authors: Sizing): { sizing: Sizing; typed: Typed; linkFaults: readonly string[] } {
+  const { sizing, faults } = readSizing(model, params, authors);
+  // A link that names units alone takes those units' usual cut grid.
+  return { sizing: inUnits(sizing, sizing.units), typed: {}, linkFaults: faults.map(explain) };
+}
+
+function keepParams(stock: StockId, edition: string | null): string {
+  const params = new URLSearchParams();
+  if (stock !== USUAL_STOCK) params.set('card', stock);
+  if (edition !== null) params.set('edition', edition);
+  return params.toString();
+}

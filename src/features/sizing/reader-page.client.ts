@@ -1,0 +1,107 @@
+import { compilePattern, drawFolded, STOCKS, type Model, type Pattern, type Sizing, type StockId } from '@/engine';
+import { drawingSvg } from '@/exports/svg/drawing';
+import { articleFigures, markChanged } from './article-figures';
+import { factsHtml, fitsHtml, lastGoodHtml, closesWords, sizingHref, type Links } from './live-html';
+import { morphInto } from './morph';
+import { panelFor } from './panel';
+import { bindPanel, showPanel } from './panel-dom';
+import { createReaderStore, type ReaderState } from './reader-store';
+import { readerView, USUAL_STOCK } from './reader-view';
+
+/** What the server puts into the page for the island. */
+export interface ProjectData {
+  readonly pattern: Pattern;
+  readonly authors: Sizing;
+  readonly asked: Sizing;
+  readonly stock: StockId;
+  readonly path: string;
+  /** Set when the page shows an edition that is not the newest. */
+  readonly edition: number | null;
+  readonly minutes: number | null;
+}
+
+/** Takes the page over from the form: from here on every change shows at once, and the address says what is shown. */
+export function startReader(panel: HTMLElement): void {
+  const page = document.querySelector<HTMLElement>('[data-reader]');
+  const source = document.getElementById('project-data')?.textContent;
+  if (!page || !source) return;
+  const data = JSON.parse(source) as ProjectData;
+  const compiled = compilePattern(data.pattern);
+  if (!compiled.ok) return;
+
+  const model = compiled.value;
+  const store = createReaderStore(model, { sizing: data.asked, authors: data.authors, stock: data.stock });
+  const paint = painter(page, panel, model, data);
+  let waiting = false;
+  let painted = store.$state.get();
+  // However many changes come in one frame, the page is brought up to date once.
+  store.$state.listen(() => {
+    if (waiting) return;
+    waiting = true;
+    requestAnimationFrame(() => {
+      waiting = false;
+      const next = store.$state.get();
+      if (next !== painted) paint(next);
+      painted = next;
+    });
+  });
+  bindPanel(panel, page, store, { model, authors: data.authors, path: data.path });
+  panel.dataset.ready = '';
+}
+
+function painter(page: HTMLElement, panel: HTMLElement, model: Model, data: ProjectData): (state: ReaderState) => void {
+  const article = articleFigures(page, model);
+  const parts = (name: string) => document.querySelectorAll<HTMLElement>(`[data-${name}]`);
+  const put = (name: string, html: string) => parts(name).forEach((element) => morphInto(element, html, markChanged));
+  const folded = page.querySelector<HTMLElement>('[data-folded]');
+
+  return (state) => {
+    const { verdict, typed, stock } = state;
+    const view = readerView(model, verdict, stock);
+    const links: Links = { model, authors: data.authors, path: data.path, keep: keep(stock, data.edition) };
+    const { shown } = verdict;
+
+    document.documentElement.dataset.units = shown.sizing.units;
+    article.show(shown);
+    put('facts', factsHtml(shown, view.plan, { stockName: view.stockName, minutes: data.minutes }));
+    put('fits', fitsHtml(shown, view.plan, view.stockName));
+    put('closes', closesWords(shown));
+    put('dock-size', view.insideWords);
+    put('dock-closes', `${closesWords(shown)} · ${view.sheetsWords}`);
+    if (folded) morphInto(folded, drawingSvg(drawFolded(model, shown, { width: 400, height: 440 }), { class: 'folded' }));
+
+    const stale = lastGoodHtml(verdict, typed, links);
+    page.toggleAttribute('data-stale', stale !== '');
+    parts('last-good').forEach((element) => {
+      morphInto(element, stale);
+      element.hidden = stale === '';
+    });
+    showPanel(panel, { view, panel: panelFor(model, verdict.figures), typed, links });
+    remember(sizingHref(links, verdict.asked));
+    say(panel, verdict.good ? `${view.insideWords} inside. ${closesWords(shown)}, ${view.sheetsWords}.` : '');
+  };
+}
+
+function keep(stock: StockId, edition: number | null): string {
+  const params = new URLSearchParams();
+  if (stock !== USUAL_STOCK && stock in STOCKS) params.set('card', stock);
+  if (edition !== null) params.set('edition', String(edition));
+  return params.toString();
+}
+
+/** Browsers refuse an address that changes with every movement of a slider. */
+let remembering: ReturnType<typeof setTimeout> | undefined;
+function remember(address: string): void {
+  clearTimeout(remembering);
+  remembering = setTimeout(() => history.replaceState(history.state, '', address + location.hash), 150);
+}
+
+/** One sentence for those who hear the page, once the change has come to rest. */
+let saying: ReturnType<typeof setTimeout> | undefined;
+export function say(panel: HTMLElement, sentence: string): void {
+  clearTimeout(saying);
+  saying = setTimeout(() => {
+    const place = panel.querySelector('[data-said]');
+    if (place && place.textContent !== sentence) place.textContent = sentence;
+  }, 700);
+}

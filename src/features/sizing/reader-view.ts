@@ -1,0 +1,39 @@
+import { evaluate, planSheets, STOCKS, type Figures, type Model, type SheetPlan, type StockId } from '@/engine';
+import { insideWords, sheetsWords } from './facts';
+import { onWholeSteps } from './reader-store';
+import type { Verdict } from './verdict';
+
+/** All that a reader's page works out from one verdict; the same on the server and in the browser. */
+export interface ReaderView {
+  readonly verdict: Verdict;
+  readonly stock: StockId;
+  readonly stockName: string;
+  readonly plan: SheetPlan;
+  /** The asked size moved onto the ruler's whole steps, where that is another size and can be made. */
+  readonly whole: Figures | null;
+  readonly insideWords: string;
+  readonly sheetsWords: string;
+}
+
+export const USUAL_STOCK: StockId = '12x12in';
+
+export function readerView(model: Model, verdict: Verdict, stock: StockId): ReaderView {
+  const plan = planSheets(verdict.shown, { stock });
+  const stockName = STOCKS[stock].name;
+  const moved = verdict.good ? onWholeSteps(model, verdict.asked, verdict.figures) : null;
+  const whole = moved ? evaluate(model, moved) : null;
+  return {
+    verdict,
+    stock,
+    stockName,
+    plan,
+    whole: whole && whole.problems.length === 0 ? whole : null,
+    insideWords: insideWords(verdict.shown),
+    sheetsWords: sheetsWords(plan, stockName),
+  };
+}
+
+/** The sheet named in a link; the usual one for a name that is not known. */
+export function readStock(text: string | null): StockId {
+  return (Object.keys(STOCKS) as StockId[]).find((id) => id === text) ?? USUAL_STOCK;
+}

@@ -1,0 +1,57 @@
+import { evaluate, explain, GRID_IDS, gridsFor, readValue, UNITS, type Model, type Sizing, type Unit } from '@/engine';
+import { fieldText } from './panel';
+import { inUnits, type Typed } from './reader-store';
+import { readSizing } from './sizing-link';
+
+/** The field that carries the sizing that the form was drawn at, as a link's query. */
+export const FROM = 'from';
+
+export interface FormReading {
+  readonly sizing: Sizing;
+  /** Fields that do not read keep what was typed, with a sentence. */
+  readonly typed: Typed;
+}
+
+/** A measure's or choice's name as it stands in links and forms: `inside-width`. */
+export const parameterName = (name: string): string => name.trim().toLowerCase().replace(/\s+/g, '-');
+
+/** Whether these parameters were sent by the sizing form and not by a link. */
+export const isSizingForm = (params: URLSearchParams): boolean => params.has(FROM);
+
+/**
+ * Reads the sizing form as a browser without JavaScript sends it: every field, changed or not. A field that still says
+ * what it was drawn with keeps its exact value (200 mm stays 200 mm, though the field said 7 7/8), and one that was
+ * never set stays unset, so that usual values worked out from others go on following them. A bare number is in the
+ * units that stood beside the field, also when another unit is chosen in the same go.
+ */
+export function readSizingForm(model: Model, params: URLSearchParams, usual: Sizing): FormReading {
+  const before = readSizing(model, new URLSearchParams(params.get(FROM) ?? ''), usual).sizing;
+  const drawn = evaluate(model, before);
+  const values: Record<string, number> = { ...before.values };
+  const typed: Record<string, Typed[string]> = {};
+
+  for (const measure of drawn.measures) {
+    const text = params.get(parameterName(measure.name));
+    if (!measure.asked || text === null || text.trim() === fieldText(measure, before)) continue;
+    if (text.trim() === '') {
+      delete values[measure.name];
+      continue;
+    }
+    const read = readValue(measure, text, { units: before.units });
+    if (read.ok) values[measure.name] = read.value;
+    else typed[measure.name] = { text, sentence: read.faults.map(explain).join(' ') };
+  }
+
+  const choices: Record<string, string> = { ...before.choices };
+  for (const { name, options } of model.pattern.choices) {
+    const option = params.get(parameterName(name));
+    if (option !== null && options.includes(option)) choices[name] = option;
+  }
+
+  const units = params.get('units');
+  const sizing = isUnit(units) ? inUnits({ ...before, values, choices }, units) : { ...before, values, choices };
+  const cut = GRID_IDS.find((id) => id === params.get('cut'));
+  return { sizing: cut && gridsFor(sizing.units).includes(cut) ? { ...sizing, grid: cut } : sizing, typed };
+}
+
+const isUnit = (text: string | null): text is Unit => UNITS.some((unit) => unit === text);
