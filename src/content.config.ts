@@ -1,0 +1,21 @@
+import { glob } from 'astro/loaders';
+import { defineCollection, z } from 'astro:content';
+
+/** Guides for the work itself: scoring, cutting, gluing, choosing card. One MDX file each. */
+const handbook = defineCollection({
+  loader: glob({ base: './content/handbook', pattern: '**/*.mdx' }),
+  schema: z.object({
+    /** As a reader would ask for it: "Reading a measurement sheet". */
+    title: z.string().min(3).max(60),
+    /** One sentence for the index, search engines and links. */
+    description: z.string().min(20).max(180),
+    /** Place in the index; the lowest comes first. */
+    order: z.number().int().positive(),
+    /** Slug of the pattern whose figures and drawings the guide shows, unless a figure names another. */
+    pattern: z.string().regex(/^[a-z0-9-]+$/),
+    /** The piece whose drawing stands for the guide in the index. */
+    piece: z.string(),
+  }),
+});
+
+export const collections = { handbook };

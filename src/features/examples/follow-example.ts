@@ -1,0 +1,120 @@
+import { GRIDS, type Pattern, type Sizing } from '@/engine';
+import { fieldText } from '@/features/sizing/panel';
+import { FROM, parameterName } from '@/features/sizing/sizing-form';
+import { writeSizing } from '@/features/sizing/sizing-link';
+import { drawnAt, exampleModel, workExample, type Example } from './example';
+import { liveText, pieceSvg, troublesHtml, wordsHtml } from './example-html';
+
+/**
+ * In the browser: gives the function that answers a change in the form. It works the box out again and puts new figures,
+ * drawings and words wherever the page shows this example; what changed is marked for a moment.
+ */
+export function followExample(form: HTMLFormElement): (changed: EventTarget | null) => void {
+  const slug = form.dataset.example ?? '';
+  const source = document.querySelector(`script[data-pattern="${slug}"]`)?.textContent ?? 'null';
+  const model = exampleModel(JSON.parse(source) as Pattern);
+  let example = workExample(model, parametersOf(form));
+
+  return (changed) => {
+    if (changed instanceof HTMLInputElement && changed.type === 'range') takeFromSlider(form, changed, example);
+    const next = workExample(model, parametersOf(form), example.figures.sizing);
+    const regrouped = next.asked.units !== example.asked.units || next.asked.grid !== example.asked.grid;
+    if (regrouped) redrawFields(form, next);
+    else moveSliders(form, next, changed);
+    putFigures(slug, form, next);
+    example = next;
+    history.replaceState(null, '', `${location.pathname}${addressOf(next)}${location.hash}`);
+  };
+}
+
+const parametersOf = (form: HTMLFormElement): URLSearchParams =>
+  new URLSearchParams([...new FormData(form)].map(([name, value]) => [name, String(value)]));
+
+const addressOf = ({ model, figures, usual }: Example): string => {
+  const query = writeSizing(model, figures.sizing, usual).replace(/^\?/, '');
+  return query === '' ? '' : `?${query}`;
+};
+
+/** A slider stands on the marks of the cut grid, and its figure goes into the field beside it. */
+function takeFromSlider(form: HTMLFormElement, slider: HTMLInputElement, example: Example): void {
+  const measure = example.figures.measures.find(({ name }) => name === slider.dataset.slider);
+  const input = measure && field(form, measure.name);
+  if (!measure || !input) return;
+  const step = GRIDS[example.asked.grid].step;
+  const snapped = Math.round(slider.valueAsNumber / step) * step;
+  const value = Math.min(Number(slider.max), Math.max(Number(slider.min), snapped));
+  input.value = fieldText({ ...measure, exact: value }, example.asked);
+}
+
+const field = (form: HTMLFormElement, measure: string) =>
+  form.querySelector<HTMLInputElement>(`input[name="${CSS.escape(parameterName(measure))}"]`);
+
+/** Another unit or grid: fields, ranges and the size that bare numbers start from are written anew. */
+function redrawFields(form: HTMLFormElement, example: Example): void {
+  const from = form.elements.namedItem(FROM);
+  if (from instanceof HTMLInputElement) from.value = drawnAt(example);
+  for (const one of example.panel.fields) {
+    const input = field(form, one.name);
+    if (!input) continue;
+    input.value = one.text;
+    const suffix = form.querySelector(`[data-suffix="${CSS.escape(one.name)}"]`);
+    if (suffix) suffix.textContent = one.suffix;
+    const range = form.querySelector(`[data-range="${CSS.escape(one.name)}"]`);
+    if (range) range.textContent = one.range;
+  }
+  moveSliders(form, example, null);
+}
+
+function moveSliders(form: HTMLFormElement, { panel }: Example, changed: EventTarget | null): void {
+  for (const slider of form.querySelectorAll<HTMLInputElement>('input[data-slider]')) {
+    const one = panel.fields.find(({ name }) => name === slider.dataset.slider);
+    if (!one) continue;
+    if (slider !== changed) slider.value = String(one.value);
+    slider.setAttribute('aria-valuetext', `${one.text} ${one.suffix}`.trim());
+  }
+}
+
+function putFigures(slug: string, form: HTMLFormElement, example: Example): void {
+  const all = document.querySelectorAll<HTMLElement>(`[data-of="${CSS.escape(slug)}"]`);
+  for (const element of all) {
+    const { live, piece, words } = element.dataset;
+    if (live !== undefined) put(element, liveText(example, live, 'bare' in element.dataset));
+    if (piece !== undefined) {
+      element.innerHTML = pieceSvg(example, piece, {
+        wide: Number(element.dataset.wide),
+        narrow: Number(element.dataset.narrow),
+      });
+    }
+    if (words !== undefined) putWords(element, wordsHtml(example, words));
+  }
+  const troubles = form.querySelector('[data-troubles]');
+  if (troubles) troubles.innerHTML = troublesHtml(example);
+  document.documentElement.dataset.units = example.asked.units satisfies Sizing['units'];
+  form.dispatchEvent(new CustomEvent('example-changed', { detail: example }));
+}
+
+function put(element: HTMLElement, text: string): void {
+  if (element.textContent === text) return;
+  element.textContent = text;
+  mark(element);
+}
+
+/** New words; the figures in them that differ from those in the same place before are marked. */
+function putWords(element: HTMLElement, html: string): void {
+  const before = [...element.querySelectorAll('.measure')].map((figure) => figure.textContent);
+  element.innerHTML = html;
+  element.querySelectorAll<HTMLElement>('.measure').forEach((figure, index) => {
+    if (figure.textContent !== before[index]) mark(figure);
+  });
+}
+
+function mark(element: HTMLElement): void {
+  element.classList.remove('changed');
+  // Reading a size makes the browser notice that the class was gone, so that the fading starts again.
+  void element.offsetWidth;
+  element.classList.add('changed');
+  window.clearTimeout(timers.get(element));
+  timers.set(element, window.setTimeout(() => element.classList.remove('changed'), 700));
+}
+const timers = new WeakMap<HTMLElement, number>();
+
