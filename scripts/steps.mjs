@@ -78,7 +78,8 @@ export function fingerprint(folder = root) {
 export function checkDataFolder() {
   const folder = resolve(root, process.env.DATA_DIR || '.data');
   try {
-    mkdirSync(folder, { recursive: true });
+    // Addresses and password hashes will lie there.
+    mkdirSync(folder, { recursive: true, mode: 0o700 });
     accessSync(folder, constants.W_OK | constants.X_OK);
     const probe = join(folder, `.probe-${process.pid}`);
     writeFileSync(probe, '');

@@ -1,0 +1,32 @@
+import { existsSync, readFileSync } from 'node:fs';
+import { describe, expect, it } from 'vitest';
+import { DEMO_PEOPLE } from '@/features/demo/people';
+
+const read = (file: string) => readFileSync(file, 'utf8');
+const { scripts } = JSON.parse(read('package.json')) as { scripts: Record<string, string> };
+
+describe('README.md', () => {
+  it.each(DEMO_PEOPLE)('gives the demo sign-in of the $role', ({ role, email, password }) => {
+    expect(read('README.md')).toContain(`| ${role} | ${email} | ${password} |`);
+  });
+
+  it('explains every setting that is read from the environment', () => {
+    const settings = new Set([...read('src/config.server.ts').matchAll(/\benv\.([A-Z_]+)/g)].map(([, name]) => name));
+    expect(settings.size).toBeGreaterThan(8);
+    for (const name of settings) expect(read('README.md')).toContain(`\`${name}\``);
+  });
+
+  it.each(['dev', 'build', 'start', 'test', 'lint', 'typecheck', 'format', 'bench', 'sheet', 'admin'])(
+    'names `npm run %s`, which exists',
+    (name) => {
+      expect(scripts).toHaveProperty(name);
+      expect(read('README.md')).toMatch(new RegExp(`npm (run )?${name}\\b`));
+    },
+  );
+});
+
+it('every decision is in the index', () => {
+  const links = [...read('docs/decisions/README.md').matchAll(/\]\((.+?\.md)\)/g)].map(([, file]) => file);
+  expect(links.length).toBeGreaterThan(0);
+  for (const file of links) expect(existsSync(`docs/decisions/${file}`), file).toBe(true);
+});
