@@ -10,16 +10,20 @@ export function sizesTogether(sizes: readonly SizeFigure[], shown: Shown): strin
 /** The sizes inside the box, as one says them: `9 × 6 × 2 1/4 in`. */
 export const insideWords = (figures: Figures): string => sizesTogether(figures.finished.inside, figures.sizing);
 
-/** How much room a fit leaves: `1/16 in spare`, `about 1/64 in missing`, `exactly`; empty when it could not be worked out. */
-export function gapWords({ gap, holds }: Pick<FitFigure, 'gap' | 'holds'>, { units, grid }: Shown): string {
+/**
+ * How much room a fit leaves: `1/16 in spare`, `about 1/64 in missing`; for two lengths that should be the same,
+ * `about 1/64 in over`. Empty when it could not be worked out.
+ */
+export function gapWords({ gap, is }: Pick<FitFigure, 'gap' | 'is'>, { units, grid }: Shown): string {
   if (gap === null) return '';
   const size = Math.abs(gap);
   const { typeset } = show(size, { units, grid });
-  if (/^0\D/.test(typeset)) return holds ? 'just' : 'barely';
-  const step = units === 'in' ? 25.4 / 64 : units === 'mm' ? 0.1 : 0.1;
+  const step = units === 'in' ? 25.4 / 64 : 0.1;
   const steps = size / step;
-  const about = Math.abs(steps - Math.round(steps)) > 1e-4 ? 'about ' : '';
-  return `${about}${typeset} ${gap >= 0 ? 'spare' : 'missing'}`;
+  const exact = Math.abs(steps - Math.round(steps)) < 1e-4;
+  if (/^0\D/.test(typeset)) return exact ? (is === 'same as' ? 'exactly' : 'just') : is === 'same as' ? 'nearly exactly' : 'just';
+  const [more, less] = is === 'same as' ? ['over', 'short'] : ['spare', 'missing'];
+  return `${exact ? '' : 'about '}${typeset} ${gap > 0 ? more : less}`;
 }
 
 /** `the nearest 1/16 in` and what that costs: `nothing is further off than about 1/64 in (the arc)`. */
@@ -27,8 +31,9 @@ export function cutWords({ sizing, departure }: Figures): { readonly to: string;
   const { units, grid } = sizing;
   const { unit, step } = GRIDS[grid];
   const to = `the nearest ${show(step, { units: unit, grid }).typeset}`;
-  if (departure.mm < 0.005) return { to, off: 'nothing is off' };
-  const size = departureSize(departure.mm, units);
+  const off = Math.abs(departure.mm);
+  if (off < 0.005) return { to, off: 'nothing is off' };
+  const size = departureSize(off, units);
   return { to, off: `nothing is off by more than ${size}${departure.where === '' ? '' : ` (${departure.where})`}` };
 }
 

@@ -1,4 +1,5 @@
 import { gridsFor, showValue, type Figures, type GridId, type MeasureFigure, type Model, type Sizing, type Unit } from '@/engine';
+import { chosenOption } from './sizing-values';
 
 /** One asked measure in the panel. */
 export interface PanelField {
@@ -43,12 +44,12 @@ export function panelFor(model: Model, figures: Figures): Panel {
       const ask = model.pattern.measures.find(({ name }) => name === measure.name)?.ask;
       return ask && measure.asked ? [fieldFor(measure, ask, sizing)] : [];
     }),
-    choices: model.pattern.choices.map(({ name, question, options, usual, finer }) => ({
-      name,
-      question,
-      options,
-      chosen: sizing.choices[name] ?? usual,
-      finer: finer ?? false,
+    choices: model.pattern.choices.map((choice) => ({
+      name: choice.name,
+      question: choice.question,
+      options: choice.options,
+      chosen: chosenOption(sizing, choice),
+      finer: choice.finer ?? false,
     })),
     units: sizing.units,
     grids: gridsFor(sizing.units),

@@ -3,6 +3,7 @@ import {
   defaultGrid, evaluate, explain, GRIDS, gridsFor, readValue,
   type Figures, type GridId, type Model, type Result, type Sizing, type StockId, type Unit,
 } from '@/engine';
+import { withChoice, withValue } from './sizing-values';
 import { judge, type Verdict } from './verdict';
 
 /** What a reader typed that does not read, by measure; it stays in the field until it does. */
@@ -48,12 +49,9 @@ export function createReaderStore(model: Model, start: { readonly sizing: Sizing
     const sizing = current();
     const figure = $state.get().verdict.figures.measures.find(({ name }) => name === measure);
     if (!figure) return { ok: false, faults: [] };
-    if (text.trim() === '') {
-      const { [measure]: _, ...values } = sizing.values;
-      return { ok: true, value: { ...sizing, values } };
-    }
+    if (text.trim() === '') return { ok: true, value: withValue(sizing, measure, null) };
     const value = readValue(figure, text, { units: sizing.units });
-    return value.ok ? { ok: true, value: { ...sizing, values: { ...sizing.values, [measure]: value.value } } } : value;
+    return value.ok ? { ok: true, value: withValue(sizing, measure, value.value) } : value;
   };
 
   return {
@@ -72,8 +70,8 @@ export function createReaderStore(model: Model, start: { readonly sizing: Sizing
       const sizing = read(measure, text);
       return sizing.ok && evaluate(model, sizing.value).problems.length === 0;
     },
-    set: (measure, value) => ask({ ...current(), values: { ...current().values, [measure]: value } }, without(measure)),
-    choose: (choice, option) => ask({ ...current(), choices: { ...current().choices, [choice]: option } }, $state.get().typed),
+    set: (measure, value) => ask(withValue(current(), measure, value), without(measure)),
+    choose: (choice, option) => ask(withChoice(current(), choice, option), $state.get().typed),
     units: (units) => ask(inUnits(current(), units), $state.get().typed),
     grid: (grid) => ask({ ...current(), grid }, $state.get().typed),
     stock: (stock) => $state.set({ ...$state.get(), stock }),
@@ -88,8 +86,7 @@ export function inUnits(sizing: Sizing, units: Unit): Sizing {
 /** The same box with its foremost lengths on whole steps of the reader's ruler (whole millimetres, sixteenths). */
 export function onWholeSteps(model: Model, sizing: Sizing, figures: Figures): Sizing | null {
   const step = sizing.units === 'in' ? GRIDS['1/16in'].step : GRIDS['1mm'].step;
-  const values: Record<string, number> = { ...sizing.values };
-  let moved = false;
+  let moved = sizing;
   for (const measure of figures.measures) {
     const ask = model.pattern.measures.find(({ name }) => name === measure.name)?.ask;
     if (!ask || ask.finer || measure.kind !== 'length' || measure.unit || !measure.inUse) continue;
@@ -98,8 +95,7 @@ export function onWholeSteps(model: Model, sizing: Sizing, figures: Figures): Si
     const nearest = Math.round(steps) * step;
     const low = measure.from === undefined ? nearest : Math.ceil(measure.from / step - 1e-9) * step;
     const high = measure.to === undefined ? nearest : Math.floor(measure.to / step + 1e-9) * step;
-    values[measure.name] = Math.min(high, Math.max(low, nearest));
-    moved = true;
+    moved = withValue(moved, measure.name, Math.min(high, Math.max(low, nearest)));
   }
-  return moved ? { ...sizing, values } : null;
+  return moved === sizing ? null : moved;
 }

@@ -2,6 +2,7 @@ import { evaluate, explain, GRID_IDS, gridsFor, readValue, UNITS, type Model, ty
 import { fieldText } from './panel';
 import { inUnits, type Typed } from './reader-store';
 import { readSizing } from './sizing-link';
+import { withChoice, withValue } from './sizing-values';
 
 /** The field that carries the sizing that the form was drawn at, as a link's query. */
 export const FROM = 'from';
@@ -27,29 +28,28 @@ export const isSizingForm = (params: URLSearchParams): boolean => params.has(FRO
 export function readSizingForm(model: Model, params: URLSearchParams, usual: Sizing): FormReading {
   const before = readSizing(model, new URLSearchParams(params.get(FROM) ?? ''), usual).sizing;
   const drawn = evaluate(model, before);
-  const values: Record<string, number> = { ...before.values };
+  let read = before;
   const typed: Record<string, Typed[string]> = {};
 
   for (const measure of drawn.measures) {
     const text = params.get(parameterName(measure.name));
     if (!measure.asked || text === null || text.trim() === fieldText(measure, before)) continue;
     if (text.trim() === '') {
-      delete values[measure.name];
+      read = withValue(read, measure.name, null);
       continue;
     }
-    const read = readValue(measure, text, { units: before.units });
-    if (read.ok) values[measure.name] = read.value;
-    else typed[measure.name] = { text, sentence: read.faults.map(explain).join(' ') };
+    const value = readValue(measure, text, { units: before.units });
+    if (value.ok) read = withValue(read, measure.name, value.value);
+    else typed[measure.name] = { text, sentence: value.faults.map(explain).join(' ') };
   }
 
-  const choices: Record<string, string> = { ...before.choices };
   for (const { name, options } of model.pattern.choices) {
     const option = params.get(parameterName(name));
-    if (option !== null && options.includes(option)) choices[name] = option;
+    if (option !== null && options.includes(option)) read = withChoice(read, name, option);
   }
 
   const units = params.get('units');
-  const sizing = isUnit(units) ? inUnits({ ...before, values, choices }, units) : { ...before, values, choices };
+  const sizing = isUnit(units) ? inUnits(read, units) : read;
   const cut = GRID_IDS.find((id) => id === params.get('cut'));
   return { sizing: cut && gridsFor(sizing.units).includes(cut) ? { ...sizing, grid: cut } : sizing, typed };
 }

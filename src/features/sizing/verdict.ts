@@ -1,4 +1,5 @@
 import { evaluate, showValue, type Figures, type Model, type Sizing, type SizingProblem } from '@/engine';
+import { withValue } from './sizing-values';
 
 /** A sizing that works, offered in place of one that does not. */
 export interface Cure {
@@ -45,11 +46,12 @@ export function judge(model: Model, asked: Sizing, fallback: Sizing, { nearest =
 function nearestGood(model: Model, from: Figures): Figures | null {
   let figures = from;
   for (let round = 0; round < ROUNDS && figures.problems.length > 0; round += 1) {
-    const values = { ...figures.sizing.values };
     const curable = figures.problems.filter((problem) => problem.nearest !== null);
     if (curable.length === 0) return null;
-    for (const problem of curable) if (problem.nearest !== null) values[problem.measure] = problem.nearest;
-    figures = evaluate(model, { ...figures.sizing, values });
+    figures = evaluate(
+      model,
+      curable.reduce((sizing, { measure, nearest }) => withValue(sizing, measure, nearest), figures.sizing),
+    );
   }
   return figures.problems.length === 0 ? figures : null;
 }
@@ -59,11 +61,10 @@ function curesFor(problem: SizingProblem, asked: Sizing, figures: Figures, shown
   if (!measure?.asked) return [];
   const good = shown.measures.find(({ name }) => name === problem.measure);
   const named = (value: number) => showValue(value, measure.kind, { units: asked.units, grid: asked.grid, unit: measure.unit }).typeset;
-  const withValue = (value: number): Sizing => ({ ...asked, values: { ...asked.values, [problem.measure]: value } });
   const cures: Cure[] = [];
-  if (problem.nearest !== null) cures.push({ label: `Use ${named(problem.nearest)}`, sizing: withValue(problem.nearest) });
+  if (problem.nearest !== null) cures.push({ label: `Use ${named(problem.nearest)}`, sizing: withValue(asked, problem.measure, problem.nearest) });
   if (good && good.exact !== measure.exact && named(good.exact) !== (problem.nearest === null ? '' : named(problem.nearest))) {
-    cures.push({ label: `Back to ${named(good.exact)}`, sizing: { ...withValue(good.exact) } });
+    cures.push({ label: `Back to ${named(good.exact)}`, sizing: withValue(asked, problem.measure, good.exact) });
   }
   return cures;
 }

@@ -1,0 +1,1 @@
+export { esc as escapeHtml } from '@/writeup/escape';

@@ -1,0 +1,20 @@
+import type { ChoiceDef, Sizing } from '@/engine';
+
+/** Answers in a sizing go by the measure's or choice's name in lower case with single spaces. */
+const keyOf = (name: string): string => name.trim().toLowerCase().replace(/\s+/g, ' ');
+
+/** The sizing with another answer for one measure; null takes the answer back, and the usual value follows again. */
+export function withValue(sizing: Sizing, measure: string, value: number | null): Sizing {
+  const { [keyOf(measure)]: _, ...others } = sizing.values;
+  return { ...sizing, values: value === null ? others : { ...others, [keyOf(measure)]: value } };
+}
+
+export function withChoice(sizing: Sizing, choice: string, option: string): Sizing {
+  return { ...sizing, choices: { ...sizing.choices, [keyOf(choice)]: option } };
+}
+
+/** The option in force; an answer that is no option counts as none. */
+export function chosenOption(sizing: Sizing, choice: ChoiceDef): string {
+  const said = sizing.choices[keyOf(choice.name)];
+  return said !== undefined && choice.options.includes(said) ? said : choice.usual;
+}
