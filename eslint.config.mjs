@@ -1,4 +1,5 @@
 import astro from 'eslint-plugin-astro';
+import reactHooks from 'eslint-plugin-react-hooks';
 import tseslint from 'typescript-eslint';
 
 /*
@@ -54,7 +55,7 @@ export default tseslint.config(
       'prefer-const': 'error',
       'no-eval': 'error',
       'no-new-func': 'error',
-      '@typescript-eslint/consistent-type-imports': ['error', { fixStyle: 'inline-type-imports' }],
+      '@typescript-eslint/consistent-type-imports': ['error', { fixStyle: 'inline-type-imports', disallowTypeAnnotations: false }],
       '@typescript-eslint/no-explicit-any': 'error',
       '@typescript-eslint/no-unused-vars': ['error', { argsIgnorePattern: '^_', varsIgnorePattern: '^_' }],
     },
@@ -69,6 +70,7 @@ export default tseslint.config(
       '@typescript-eslint/switch-exhaustiveness-check': ['error', { considerDefaultExhaustiveForUnions: true }],
     },
   },
+  { files: ['**/*.tsx', '**/use-*.ts'], plugins: { 'react-hooks': reactHooks }, rules: reactHooks.configs.recommended.rules },
   { files: ['**/src/engine/**'], rules: { 'no-restricted-globals': ['error', 'window', 'document', 'process', 'fetch', 'Date', 'console'] } },
   ...directions,
   { files: ['**/src/pages/**', 'scripts/**'], rules: restrict(ENGINE_INSIDES) },
