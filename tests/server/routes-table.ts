@@ -1,0 +1,67 @@
+/**
+ * Every method of every route under src/pages/api, with who may use it. routes.test.ts tries each row: too low a role, a
+ * foreign origin, a body that does not read or does not fit; and it fails when a method that exists has no row here.
+ *
+ * To add a row:
+ *
+ *     { path: '/api/things/[id]', method: 'PUT', who: 'author', prepare: async ({ author }) => ({ id: thingOf(author) }), body: { title: 'Tray' } },
+ *
+ * - `path` is the file's path, `who` the lowest role ('all' when no account is needed), the same as in
+ *   src/features/accounts/access.ts.
+ * - `body` is one that fits: it shows that the route takes JSON through `readJson`. Leave it away when the route reads none;
+ *   `form: true` is for routes that take multipart forms instead.
+ * - `prepare` makes what the path's parameters stand for, owned by the author, and gives the parameters. It runs anew for
+ *   every try. A route without parameters needs none.
+ * - `headers` are those without which the route refuses before it reads the body, such as If-Match.
+ */
+import { db } from '@/db/client.server';
+import { projects } from '@/db/schema';
+import type { Access } from '@/features/accounts/access';
+import { emptyWriteUp } from '@/writeup/empty-write-up';
+import type { Cast, Method } from './harness';
+
+export interface RouteRow {
+  readonly path: string;
+  readonly method: Method;
+  readonly who: Access;
+  readonly prepare?: (people: Cast) => Record<string, string> | Promise<Record<string, string>>;
+  readonly body?: unknown;
+  readonly form?: true;
+  readonly headers?: Readonly<Record<string, string>>;
+}
+
+/** A draft of the author's, just enough of one for a route to find it. */
+function draft({ author }: Cast): { id: string } {
+  const nothing = {} as never;
+  db.insert(projects)
+    .values({ id: 'draft', authorId: author.id, slug: 'draft', title: 'Draft', pattern: nothing, sizing: nothing, writeUp: emptyWriteUp() })
+    .run();
+  return { id: 'draft' };
+}
+
+export const ROUTES: readonly RouteRow[] = [
+  { path: '/api/health', method: 'GET', who: 'all' },
+
+  { path: '/api/account', method: 'GET', who: 'reader' },
+  { path: '/api/account', method: 'PATCH', who: 'reader', body: { name: 'Wenna Tolliver' } },
+  { path: '/api/account', method: 'DELETE', who: 'reader', body: { email: 'reader@quilletlane.example', keepName: true } },
+  { path: '/api/account/password', method: 'PUT', who: 'reader', body: { next: 'seven damp snails' } },
+  { path: '/api/account/export', method: 'GET', who: 'reader' },
+
+  { path: '/api/admin/people', method: 'GET', who: 'admin' },
+  { path: '/api/admin/people/[id]', method: 'PATCH', who: 'admin', prepare: ({ reader }) => ({ id: reader.id }), body: { role: 'author' } },
+  { path: '/api/admin/invitations', method: 'GET', who: 'admin' },
+  { path: '/api/admin/invitations', method: 'POST', who: 'admin', body: { email: 'odo@quilletlane.example' } },
+  { path: '/api/admin/invitations', method: 'DELETE', who: 'admin', body: { email: 'odo@quilletlane.example' } },
+
+  { path: '/api/projects', method: 'GET', who: 'author' },
+  { path: '/api/projects', method: 'POST', who: 'author', body: { pattern: 'no-such-pattern', title: 'Seed box' } },
+  { path: '/api/projects/[id]', method: 'GET', who: 'author', prepare: draft },
+  { path: '/api/projects/[id]', method: 'PUT', who: 'author', prepare: draft, headers: { 'if-match': '"1"' }, body: {} },
+  { path: '/api/projects/[id]', method: 'DELETE', who: 'author', prepare: draft },
+  { path: '/api/projects/[id]/address', method: 'PUT', who: 'author', prepare: draft, body: { slug: 'seed-box' } },
+  { path: '/api/projects/[id]/duplicate', method: 'POST', who: 'author', prepare: draft, body: {} },
+  { path: '/api/projects/[id]/publish', method: 'POST', who: 'author', prepare: draft, body: { revision: 99 } },
+  { path: '/api/projects/[id]/restore', method: 'POST', who: 'author', prepare: draft },
+  { path: '/api/uploads', method: 'POST', who: 'author', form: true },
+];
