@@ -7,8 +7,9 @@ await run(async () => {
   await checkPort();
   await install();
   await readTypeScript();
-  const { startServices, stopOnSignal } = await import('./site.ts');
+  const { greet, startServices, stopOnSignal } = await import('./site.ts');
   const services = await startServices();
+  greet();
   const { child, ended } = begin(process.execPath, ['node_modules/astro/astro.js', 'dev']);
   const stop = stopOnSignal(async () => {
     child.kill('SIGTERM');

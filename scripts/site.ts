@@ -78,7 +78,8 @@ export function stopOnSignal(stop: () => Promise<void>): () => void {
 const isEmpty = () => !sqlite().prepare('SELECT 1 FROM user UNION SELECT 1 FROM project').get();
 const isDemo = () => Boolean(sqlite().prepare("SELECT 1 FROM setting WHERE key = 'demo'").get());
 
-function greet(): void {
+/** Where everything is, and how to sign in to the demo. */
+export function greet(): void {
   const lines = [`Foldwright is at ${config.siteUrl}`];
   if (!config.smtpUrl) lines.push(`Mail goes nowhere but to ${config.siteUrl}/dev/mailbox`);
   if (isDemo()) {
