@@ -35,7 +35,7 @@ export interface EditionNote {
   readonly publishedAt: Date;
 }
 export interface PublishedFilter {
-  /** Words that must all be found in title, summary, author or kind of box. */
+  /** Words that must all be found in title, summary, author, kind of box or the pattern's name. */
   readonly query?: string;
   /** Kinds of box (`Pattern.group`); none means every kind. */
   readonly groups?: readonly string[];
