@@ -1,4 +1,4 @@
-import type { Ask, ChoiceDef, MeasureDef, Pattern } from '@/engine';
+import type { Ask, ChoiceDef, MeasureDef, Pattern, Track } from '@/engine';
 import { formulasOfMeasure, formulasOfPiece, namesIn } from './formula-names';
 
 /** Each of these gives a new pattern and leaves the old one as it was. */
@@ -18,6 +18,20 @@ export const changeAsk = (pattern: Pattern, name: string, change: Partial<Ask>):
 export const changeChoice = (pattern: Pattern, name: string, change: Partial<ChoiceDef>): Pattern => ({
   ...pattern,
   choices: pattern.choices.map((choice) => (choice.name === name ? { ...choice, ...change } : choice)),
+});
+
+/** Changes a column or row of a piece. */
+export const changeTrack = (
+  pattern: Pattern,
+  at: { readonly piece: string; readonly axis: 'columns' | 'rows'; readonly index: number },
+  change: Partial<Track>,
+): Pattern => ({
+  ...pattern,
+  pieces: pattern.pieces.map((piece) =>
+    piece.name === at.piece
+      ? { ...piece, [at.axis]: piece[at.axis].map((track, i) => (i === at.index ? { ...track, ...change } : track)) }
+      : piece,
+  ),
 });
 
 /** A new measure goes last: the order of writing does not matter to what is worked out. */

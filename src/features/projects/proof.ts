@@ -1,5 +1,6 @@
-import { compileLive, compilePattern, evaluate, explain, type Fault, type Figures, type Model, type Pattern, type Result, type Sizing } from '@/engine';
+import { compilePattern, evaluate, explain, type Fault, type Figures, type Model, type Pattern, type Result, type Sizing } from '@/engine';
 import type { WriteUp } from '@/writeup/document';
+import { readLive } from '@/writeup/live';
 import { collectUses, type Uses } from '@/writeup/uses';
 import { placeOfFault, type ProofColumn, type ProofPlace } from './proof-place';
 
@@ -92,7 +93,7 @@ function sizeItems(figures: Figures): ProofItem[] {
 
 function liveItems(model: Model, uses: Uses, at: InText): ProofItem[] {
   return uses.formulas.flatMap(({ formula, step }, nth): ProofItem[] => {
-    const live = compileLive(model, formula);
+    const live = readLive(model, formula);
     if (live.ok) return [];
     const fault = live.faults[0];
     return [{

@@ -38,8 +38,8 @@ export interface Autosave<T> {
   flush(options?: { readonly leaving?: boolean }): Promise<void>;
   /** After a conflict was settled: goes on from this version. */
   goOn(version: { readonly revision: number; readonly updatedAt: number }): void;
-  /** Says that another version is there, found before anything was sent. */
-  conflict(other: { readonly revision: number; readonly updatedAt: number }): void;
+  /** Says that another version is there, found before anything was sent; `base` is the revision that ours was made from. */
+  conflict(other: { readonly revision: number; readonly updatedAt: number }, base?: number): void;
   stop(): void;
   readonly state: () => SaveState;
 }
@@ -124,8 +124,9 @@ export function createAutosave<T>({ send, keepCopy, dropCopy, onState, now, star
       dropCopy();
       set({ kind: 'saved' }, { revision: version.revision, savedAt: version.updatedAt });
     },
-    conflict(other) {
-      set({ kind: 'conflict', other });
+    conflict(other, base = state.revision) {
+      if (timer !== null) clearTimeout(timer);
+      set({ kind: 'conflict', other }, { revision: base });
     },
     stop() {
       stopped = true;

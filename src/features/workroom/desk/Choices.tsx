@@ -1,0 +1,42 @@
+import { Segmented } from '@/components/Segmented';
+import { changeChoice } from '@/features/projects/pattern-edits';
+import type { Lit } from '@/features/projects/followers';
+import type { DeskStore, Draft } from './desk-store';
+
+/** The pattern's choices: which option readers see first, and which is usual. */
+export function Choices({ store, draft, lit }: { readonly store: DeskStore; readonly draft: Draft; readonly lit: Lit | null }) {
+  const { pattern, sizing } = draft;
+  if (pattern.choices.length === 0) return null;
+  return (
+    <div className="desk-block">
+      <h3>Choices</h3>
+      <div className="choices">
+        {pattern.choices.map((choice) => {
+          const shown = sizing.choices[choice.name] ?? choice.usual;
+          const selected = lit?.selected === choice.name;
+          return (
+            <div key={choice.name} className={selected ? 'choice selected' : 'choice'}>
+              <button type="button" className="measure-name" aria-pressed={selected} data-place={`name:${choice.name}`} onClick={() => store.select(selected ? null : choice.name)}>
+                {choice.name}
+              </button>
+              <Segmented
+                legend={choice.question}
+                quietLegend
+                options={choice.options.map((option) => ({ value: option, label: option }))}
+                value={shown}
+                onChange={(option) => store.editSizing(null, (now) => ({ ...now, choices: { ...now.choices, [choice.name]: option } }))}
+              />
+              {shown === choice.usual ? (
+                <span className="small soft">usual</span>
+              ) : (
+                <button type="button" className="text-button small" onClick={() => store.editPattern(null, (now) => changeChoice(now, choice.name, { usual: shown }))}>
+                  Make it usual
+                </button>
+              )}
+            </div>
+          );
+        })}
+      </div>
+    </div>
+  );
+}

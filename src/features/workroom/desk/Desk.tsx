@@ -1,0 +1,132 @@
+import { useStore } from '@nanostores/react';
+import { useEffect, useMemo, useState } from 'react';
+import type { OpenProject } from '@/features/projects/project';
+import { stageOf, type Stage } from '@/features/projects/project-stage';
+import { blocking, type ProofItem } from '@/features/projects/proof';
+import { ConflictBanner } from './ConflictBanner';
+import { DeskHeader } from './DeskHeader';
+import { DeskMark } from './DeskMark';
+import { cureFor } from './cures';
+import { createDeskStore } from './desk-store';
+import { FactsDialog } from './FactsDialog';
+import { FoldGrip } from './FoldGrip';
+import { goToPlace } from './go-to-place';
+import { MeasuresColumn } from './MeasuresColumn';
+import { PiecesColumn } from './PiecesColumn';
+import { ProofStrip } from './ProofStrip';
+import { PublishDialog } from './PublishDialog';
+import { useDeskKeys } from './use-desk-keys';
+import { useSaving } from './use-saving';
+import { WriteUpColumn } from './WriteUpColumn';
+
+export type Column = 'measures' | 'pieces' | 'write-up';
+const COLUMNS: readonly { readonly id: Column; readonly label: string }[] = [
+  { id: 'measures', label: 'Measures' },
+  { id: 'pieces', label: 'Pieces' },
+  { id: 'write-up', label: 'Write-up' },
+];
+
+/** One project on one sheet folded in three: measures, pieces, write-up. What is selected in one lights up in the others. */
+export default function Desk({ project }: { readonly project: OpenProject }) {
+  const store = useMemo(() => createDeskStore(project), [project]);
+  const saving = useSaving(store, project);
+  const proof = useStore(store.$proof);
+  const [open, setOpen] = useState<Column>('write-up');
+  /** Which of measures and pieces lies beside the write-up where there is room for two. */
+  const [side, setSide] = useState<'measures' | 'pieces'>('measures');
+  const [piece, setPiece] = useState<string | null>(null);
+  const [listOpen, setListOpen] = useState(false);
+  const [dialog, setDialog] = useState<'facts' | 'publish' | null>(null);
+  const [slug, setSlug] = useState(project.slug);
+  const [published, setPublished] = useState<{ readonly edition: number; readonly revision: number | null }>(() => publishedOf(project));
+
+  const show = (column: Column) => {
+    setOpen(column);
+    if (column !== 'write-up') setSide(column);
+  };
+  const focusColumn = (column: Column) => {
+    show(column);
+    requestAnimationFrame(() => document.querySelector<HTMLElement>(`[data-column="${column}"]`)?.focus());
+  };
+  useDeskKeys({ store, focusColumn, toggleProof: () => setListOpen((was) => !was) });
+  useEffect(() => {
+    const settle = () => store.settle();
+    document.addEventListener('focusout', settle);
+    return () => document.removeEventListener('focusout', settle);
+  }, [store]);
+
+  const stops = blocking(proof);
+  const { revision, status } = saving.state;
+  const stage: Stage = stageOf({ editions: published.edition, publishedRevision: published.revision, revision: status.kind === 'saved' ? revision : -1 });
+  const next = published.edition + 1;
+  const hindrance =
+    stops.length > 0
+      ? `${stops.length === 1 ? 'One thing keeps' : `${stops.length} things keep`} this from being published: ${stops.map((item) => item.title).join('; ')}.`
+      : stage.stage === 'published'
+        ? `Nothing has changed since edition ${published.edition}.`
+        : null;
+
+  const go = (item: ProofItem) => {
+    setListOpen(false);
+    if (item.place.column === 'facts') {
+      if (item.place.name !== 'title') setDialog('facts');
+    } else show(item.place.column);
+    if (item.place.column === 'pieces' && item.place.name !== undefined) setPiece(item.place.name);
+    goToPlace(item, store);
+  };
+
+  return (
+    <div className="desk" data-open={open} data-side={side}>
+      <DeskHeader
+        store={store}
+        saving={saving}
+        stage={stage}
+        mark={<DeskMark />}
+        preview={`/workroom/${project.id}/preview`}
+        publishLabel={stage.stage === 'published' ? `Edition ${published.edition} is out` : `Publish edition ${next}`}
+        hindrance={hindrance}
+        mailing={published.edition > 0 ? `/workroom/${project.id}/mailing` : null}
+        onFacts={() => setDialog('facts')}
+        onPublish={() => {
+          if (hindrance === null) setDialog('publish');
+          else if (stops.length > 0) setListOpen(true);
+        }}
+      />
+      <div className="ruled" aria-hidden="true" />
+      <ConflictBanner saving={saving} />
+      <div className="desk-switch" role="tablist" aria-label="Parts of the desk">
+        {COLUMNS.map(({ id, label }) => (
+          <button key={id} type="button" role="tab" data-tab={id} aria-selected={open === id || (id === side && open === 'write-up')} data-alone={open === id ? '' : undefined} onClick={() => show(id)}>
+            {label}
+          </button>
+        ))}
+      </div>
+      <div className="desk-sheet">
+        <MeasuresColumn store={store} />
+        <FoldGrip between="measures" />
+        <PiecesColumn store={store} piece={piece} onPiece={setPiece} />
+        <FoldGrip between="pieces" />
+        <WriteUpColumn store={store} projectId={project.id} />
+      </div>
+      <ProofStrip items={proof} open={listOpen} onOpen={setListOpen} onGo={go} cureOf={(item) => cureFor(item, store)} />
+      <FactsDialog open={dialog === 'facts'} store={store} projectId={project.id} slug={slug} published={published.edition > 0} onSlug={setSlug} onClose={() => setDialog(null)} />
+      <PublishDialog
+        open={dialog === 'publish'}
+        projectId={project.id}
+        edition={next}
+        advice={proof.filter((item) => !item.blocking)}
+        flush={saving.flush}
+        onClose={() => setDialog(null)}
+        onPublished={(done) => {
+          setPublished({ edition: done.n, revision: done.revision });
+          setSlug(done.slug);
+          setDialog(null);
+          saving.say({ words: `Edition ${done.n} is out.`, link: { href: `/projects/${done.slug}`, words: 'See it as readers do' } });
+        }}
+      />
+    </div>
+  );
+}
+
+const publishedOf = ({ stage, revision }: OpenProject) =>
+  stage.stage === 'draft' ? { edition: 0, revision: null } : { edition: stage.edition, revision: stage.stage === 'published' ? revision : null };

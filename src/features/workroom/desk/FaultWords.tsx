@@ -1,0 +1,38 @@
+import { explain, type Fault } from '@/engine';
+
+export interface FaultWordsProps {
+  readonly id?: string;
+  readonly faults: readonly Fault[];
+  readonly value: string;
+  /** Said beside the cure: what is shown until it reads. */
+  readonly meanwhile?: string;
+  readonly onCure: (value: string) => void;
+}
+
+/** What does not read, in a sentence, with the cure as a button. */
+export function FaultWords({ id, faults, value, meanwhile, onCure }: FaultWordsProps) {
+  const fault = faults[0];
+  if (fault === undefined) return null;
+  const cured = curedText(fault, value);
+  return (
+    <div className="fault" id={id}>
+      <p className="fault-words">{explain(fault)}</p>
+      {cured === null && !meanwhile ? null : (
+        <p className="fault-cure">
+          {cured === null ? null : (
+            <button type="button" className="btn small-btn" onClick={() => onCure(cured)}>
+              Use {fault.cure}
+            </button>
+          )}
+          {meanwhile ? <span className="soft">{meanwhile}</span> : null}
+        </p>
+      )}
+    </div>
+  );
+}
+
+/** The text with the fault's cure put in its place; null when it has none. */
+export function curedText(fault: Pick<Fault, 'span' | 'cure'>, value: string): string | null {
+  if (fault.cure === undefined || fault.span === undefined) return null;
+  return value.slice(0, fault.span.from) + fault.cure + value.slice(fault.span.to);
+}

@@ -1,0 +1,71 @@
+import { useStore } from '@nanostores/react';
+import type { MeasureDef } from '@/engine';
+import { namesOf } from '@/features/projects/formula-names';
+import { AddMeasure } from './AddMeasure';
+import { Choices } from './Choices';
+import { ColumnHead } from './ColumnHead';
+import type { DeskStore } from './desk-store';
+import { FitList } from './FitList';
+import { MeasureRow } from './MeasureRow';
+import { UnitsAndGrid } from './UnitsAndGrid';
+
+/** Measures asked and worked, choices, and fits at the size shown. */
+export function MeasuresColumn({ store }: { readonly store: DeskStore }) {
+  const draft = useStore(store.$draft);
+  const work = useStore(store.$work);
+  const lit = useStore(store.$lit);
+  const names = namesOf(draft.pattern);
+  const faults = work.compiled.ok ? [] : work.compiled.faults;
+  const figures = new Map(work.live?.figures.measures.map((figure) => [figure.name, figure]));
+  const follow = lit === null ? '' : lit.followers.length === 1 ? '1 follows it' : `${lit.followers.length} follow it`;
+  const rows = (measures: readonly MeasureDef[]) =>
+    measures.map((measure) => (
+      <MeasureRow key={measure.name} store={store} measure={measure} names={names} faults={faults} figure={figures.get(measure.name)} lit={lit} stale={work.stale} sizing={draft.sizing} />
+    ));
+  const finer = draft.pattern.measures.filter((measure) => measure.ask?.finer);
+
+  return (
+    <section className="desk-column" data-column="measures" aria-label="Measures" tabIndex={-1}>
+      <ColumnHead title="Measures" shortcut="Alt 1" lit={lit === null ? null : `${lit.selected}: ${follow}`} />
+      <div className="desk-scroll">
+        <UnitsAndGrid store={store} />
+        <table className="measures">
+          <thead>
+            <tr>
+              <th scope="col">Name</th>
+              <th scope="col">Question or formula</th>
+              <th scope="col" className="figures">Exact</th>
+              <th scope="col" className="figures">As cut</th>
+              <th scope="col">Rounds</th>
+            </tr>
+          </thead>
+          <tbody>
+            <GroupRow words="Asked" rest="of the reader" />
+            {rows(draft.pattern.measures.filter((measure) => measure.ask && !measure.ask.finer))}
+          </tbody>
+          {finer.length === 0 ? null : (
+            <tbody>
+              <GroupRow words="Finer points" rest="asked, but set apart" />
+              {rows(finer)}
+            </tbody>
+          )}
+          <tbody>
+            <GroupRow words="Worked" rest="out by formulas" />
+            {rows(draft.pattern.measures.filter((measure) => !measure.ask))}
+          </tbody>
+        </table>
+        <AddMeasure store={store} pattern={draft.pattern} />
+        <Choices store={store} draft={draft} lit={lit} />
+        <FitList work={work} draft={draft} lit={lit} names={names} />
+      </div>
+    </section>
+  );
+}
+
+const GroupRow = ({ words, rest }: { readonly words: string; readonly rest: string }) => (
+  <tr className="measure-group">
+    <th scope="rowgroup" colSpan={5}>
+      {words} <span>{rest}</span>
+    </th>
+  </tr>
+);

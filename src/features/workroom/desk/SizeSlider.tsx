@@ -1,0 +1,87 @@
+import { useEffect, useState } from 'react';
+import { RangeRuler } from '@/components/RangeRuler';
+import { explain, GRIDS, readValue, type MeasureFigure, type Sizing } from '@/engine';
+import type { DeskStore } from './desk-store';
+import { typedText } from './figure-text';
+
+export interface SizeSliderProps {
+  readonly store: DeskStore;
+  readonly figure: MeasureFigure;
+  readonly sizing: Sizing;
+}
+
+/** The author's own size of an asked measure: what readers see first. */
+export function SizeSlider({ store, figure, sizing }: SizeSliderProps) {
+  const { name, kind, from, to } = figure;
+  const shown = typedText(figure.exact, kind, sizing, figure.unit);
+  const [typed, setTyped] = useState(shown);
+  const [fault, setFault] = useState<string | null>(null);
+  useEffect(() => {
+    setTyped(shown);
+    setFault(null);
+  }, [shown]);
+
+  const set = (value: number, field: string | null) => store.editSizing(field, (now) => ({ ...now, values: { ...now.values, [name]: value } }));
+  const commit = () => {
+    if (typed.trim() === shown) return;
+    const read = readValue(figure, typed, { units: figure.unit ?? sizing.units });
+    if (read.ok) set(read.value, null);
+    else setFault(read.faults[0] === undefined ? 'That does not read as a size.' : explain(read.faults[0]));
+  };
+  const step = kind === 'length' ? GRIDS[sizing.grid].step : kind === 'whole number' ? 1 : 0.5;
+  const slidable = from !== undefined && to !== undefined && Number.isFinite(from) && Number.isFinite(to) && to > from;
+
+  return (
+    <div className="size-slider">
+      <label className="size-box">
+        <span className="small soft">Shown first</span>
+        <input
+          className="input"
+          value={typed}
+          aria-label={`${name}, the size shown first`}
+          aria-invalid={fault === null ? undefined : true}
+          onChange={(event) => setTyped(event.currentTarget.value)}
+          onBlur={commit}
+          onKeyDown={(event) => {
+            if (event.key === 'Enter') commit();
+            if (event.key === 'Escape') setTyped(shown);
+          }}
+        />
+      </label>
+      {slidable ? (
+        <div className="size-track">
+          <input
+            type="range"
+            className="slider"
+            aria-label={`${name}, slider`}
+            aria-valuetext={shown}
+            min={from}
+            max={to}
+            step="any"
+            value={figure.exact}
+            onChange={(event) => set(onStep(Number(event.currentTarget.value), { step, from, to }), `${name}.slider`)}
+            onKeyDown={(event) => {
+              const steps = { ArrowLeft: -1, ArrowDown: -1, ArrowRight: 1, ArrowUp: 1, PageDown: -8, PageUp: 8 }[event.key];
+              if (steps === undefined) return;
+              event.preventDefault();
+              set(onStep(figure.exact + steps * step, { step, from, to }), `${name}.slider`);
+            }}
+          />
+          {kind === 'length' ? <RangeRuler from={from} to={to} units={figure.unit ?? sizing.units} /> : null}
+        </div>
+      ) : null}
+      {figure.set ? (
+        <button type="button" className="text-button small" onClick={() => store.editSizing(null, (now) => ({ ...now, values: without(now.values, name) }))}>
+          Back to usual
+        </button>
+      ) : null}
+      {fault === null ? null : <p className="fault-words" role="alert">{fault}</p>}
+    </div>
+  );
+}
+
+const onStep = (value: number, { step, from, to }: { readonly step: number; readonly from: number; readonly to: number }): number =>
+  Math.min(to, Math.max(from, Number((Math.round(value / step) * step).toFixed(6))));
+
+const without = (values: Readonly<Record<string, number>>, name: string): Record<string, number> =>
+  Object.fromEntries(Object.entries(values).filter(([key]) => key !== name));

@@ -1,0 +1,103 @@
+import { atom, computed, type ReadableAtom } from 'nanostores';
+import { compilePattern, evaluate, type Model, type Pattern, type Result, type Sizing } from '@/engine';
+import { litBy, type Lit } from '@/features/projects/followers';
+import { begin, edit, redo, settle, undo, type History } from '@/features/projects/history';
+import type { OpenProject, ProjectState } from '@/features/projects/project';
+import { proofList, type ProofItem } from '@/features/projects/proof';
+import type { WriteUp } from '@/writeup/document';
+import type { LiveFigures } from '@/writeup/live';
+
+/** Everything but the write-up, which has an undo of its own. */
+export type Draft = Omit<ProjectState, 'writeUp'>;
+
+export interface Work {
+  readonly compiled: Result<Model>;
+  /** At the author's size; the last good figures while the pattern does not read, null when there never were any. */
+  readonly live: LiveFigures | null;
+  /** `live` is older than what is typed. */
+  readonly stale: boolean;
+}
+
+export interface DeskStore {
+  readonly $history: ReadableAtom<History<Draft>>;
+  readonly $draft: ReadableAtom<Draft>;
+  readonly $writeUp: ReadableAtom<WriteUp>;
+  readonly $state: ReadableAtom<ProjectState>;
+  readonly $work: ReadableAtom<Work>;
+  /** What the editor shows its figures from. */
+  readonly $live: ReadableAtom<LiveFigures | null>;
+  readonly $proof: ReadableAtom<readonly ProofItem[]>;
+  readonly $selected: ReadableAtom<string | null>;
+  readonly $lit: ReadableAtom<Lit | null>;
+  /** The same as names: the selected one, then its followers. */
+  readonly $litNames: ReadableAtom<readonly string[]>;
+  /** Raised when the whole state was replaced and the editor must begin anew. */
+  readonly $generation: ReadableAtom<number>;
+  /** Edits of one `field` in a row are one step back. */
+  edit(field: string | null, change: (draft: Draft) => Draft): void;
+  editPattern(field: string | null, change: (pattern: Pattern) => Pattern): void;
+  editSizing(field: string | null, change: (sizing: Sizing) => Sizing): void;
+  settle(): void;
+  undo(): void;
+  redo(): void;
+  setWriteUp(writeUp: WriteUp): void;
+  replace(state: ProjectState): void;
+  select(name: string | null): void;
+}
+
+const draftOf = ({ title, summary, minutes, hero, pattern, sizing }: ProjectState): Draft => ({ title, summary, minutes, hero, pattern, sizing });
+
+/** The one place where the desk's columns meet: what is typed, what follows from it, and what is selected. */
+export function createDeskStore(project: OpenProject): DeskStore {
+  const $history = atom(begin(draftOf(project.state)));
+  const $writeUp = atom(project.state.writeUp);
+  const $selected = atom<string | null>(null);
+  const $generation = atom(0);
+  const $draft = computed($history, (history) => history.present);
+  const $state = computed([$draft, $writeUp], (draft, writeUp): ProjectState => ({ ...draft, writeUp }));
+
+  const work = createWork();
+  const $work = computed($draft, (draft) => work(draft.pattern, draft.sizing));
+  const $live = computed($work, (now) => now.live);
+  const $proof = computed([$state, $work], (state, now) =>
+    proofList(state, { compiled: now.compiled, figures: now.stale ? undefined : now.live?.figures }),
+  );
+  const $lit = computed([$selected, $draft], (selected, draft) => (selected === null ? null : litBy(draft.pattern, selected)));
+
+  const $litNames = computed($lit, (lit): readonly string[] => (lit === null ? [] : [lit.selected, ...lit.followers]));
+
+  const store: DeskStore = {
+    $history, $draft, $writeUp, $state, $work, $live, $proof, $selected, $lit, $litNames, $generation,
+    edit: (field, change) => $history.set(edit($history.get(), change($history.get().present), field)),
+    editPattern: (field, change) => store.edit(field, (draft) => ({ ...draft, pattern: change(draft.pattern) })),
+    editSizing: (field, change) => store.edit(field, (draft) => ({ ...draft, sizing: change(draft.sizing) })),
+    settle: () => $history.set(settle($history.get())),
+    undo: () => $history.set(undo($history.get())),
+    redo: () => $history.set(redo($history.get())),
+    setWriteUp: (writeUp) => $writeUp.set(writeUp),
+    replace(state) {
+      $history.set(edit($history.get(), draftOf(state)));
+      $writeUp.set(state.writeUp);
+      $generation.set($generation.get() + 1);
+    },
+    select: (name) => $selected.set(name),
+  };
+  return store;
+}
+
+/** Works a pattern out, no more often than it changes, and keeps the last figures that were good. */
+function createWork(): (pattern: Pattern, sizing: Sizing) => Work {
+  let pattern: Pattern | null = null;
+  let sizing: Sizing | null = null;
+  let last: Work | null = null;
+  let good: LiveFigures | null = null;
+  return (nextPattern, nextSizing) => {
+    if (last !== null && pattern === nextPattern && sizing === nextSizing) return last;
+    const compiled = last !== null && pattern === nextPattern ? last.compiled : compilePattern(nextPattern);
+    pattern = nextPattern;
+    sizing = nextSizing;
+    if (compiled.ok) good = { model: compiled.value, figures: evaluate(compiled.value, nextSizing) };
+    last = { compiled, live: good, stale: !compiled.ok };
+    return last;
+  };
+}
