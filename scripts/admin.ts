@@ -18,7 +18,7 @@ async function main(): Promise<number> {
 
   migrateDatabase();
   const typed = process.stdin.isTTY ? await askHidden('Password (leave it empty and one is made): ') : '';
-  const fault = typed ? passwordFault(typed) : null;
+  const fault = typed ? passwordFault(typed, { email, name: values.name }) : null;
   if (fault) return refuse(fault);
   const password = typed || randomBytes(15).toString('base64url');
   const made = await createPerson({ email, name: values.name ?? null, role: 'admin', password });

@@ -15,6 +15,7 @@ export class Halt extends Error {}
 export async function run(steps) {
   process.chdir(root);
   process.env.ASTRO_TELEMETRY_DISABLED ??= '1';
+  process.env.ASTRO_DISABLE_UPDATE_CHECK ??= 'true';
   // A .env file beside package.json may hold settings; what is set already wins.
   if (existsSync('.env') && process.loadEnvFile) process.loadEnvFile('.env');
   try {
