@@ -1,19 +1,19 @@
-import { compileLive, drawPiece, explain, sayParts, showValue, type PieceFigure } from '@/engine';
+import { drawPiece, explain, planSheets, sayParts, showValue, STOCKS, type PieceFigure } from '@/engine';
 import { drawingSvg } from '@/exports/svg/drawing';
-import { escapeHtml } from '@/features/sizing/escape';
+import { pieceCount } from '@/features/sizing/facts';
+import { USUAL_STOCK } from '@/features/sizing/reader-view';
+import { esc } from '@/writeup/escape';
+import { readLive } from '@/writeup/live';
+import { measureInside } from '@/writeup/render-figures';
 import type { Example } from './example';
 
 /** The parts of an example that follow its size, as HTML for the server and the browser alike. */
 
-/** A formula's value as cut, typeset; a question mark while it has none. Throws when the formula does not read. */
-export function liveText({ model, figures }: Example, formula: string, bare = false): string {
-  const live = compileLive(model, formula);
-  if (!live.ok) throw new Error(`"${formula}" in ${model.pattern.slug}: ${live.faults.map(explain).join(' ')}`);
-  const { value, kind, unit } = live.value;
-  const worked = value(figures);
-  if (!worked) return '?';
-  const { units, grid } = figures.sizing;
-  return showValue(worked.cut, kind, { units, grid, unit, bare }).typeset;
+/** What stands in a live measure's span. Throws when the formula does not read: pages name formulas in their source. */
+export function liveInside(example: Example, formula: string, bare = false): string {
+  const live = readLive(example.model, formula);
+  if (live.ok) return measureInside(example, { formula, bare });
+  throw new Error(`"${formula}" in ${example.model.pattern.slug}: ${live.faults.map(explain).join(' ')}`);
 }
 
 /** Throws when the pattern has no such piece. */
@@ -40,7 +40,7 @@ export function wordsHtml(example: Example, name: string): string {
   return pieceOf(example, name)
     .instructions.map((sentence) =>
       sayParts(sentence, { units, grid })
-        .map(({ text, figure }) => (figure ? `<span class="measure">${escapeHtml(text)}</span>` : escapeHtml(text)))
+        .map(({ text, figure }) => (figure ? `<span class="measure">${esc(text)}</span>` : esc(text)))
         .join(''),
     )
     .join(' ');
@@ -49,9 +49,30 @@ export function wordsHtml(example: Example, name: string): string {
 /** What keeps the asked size from being made; empty when nothing does. */
 export function troublesHtml({ troubles, figures }: Example): string {
   if (troubles.length === 0) return '';
-  const items = troubles.map((sentence) => `<p>${escapeHtml(sentence)}</p>`).join('');
+  const items = troubles.map((sentence) => `<p>${esc(sentence)}</p>`).join('');
   const inside = figures.finished.inside
     .map(({ mm }, index, all) => showValue(mm, 'length', { ...figures.sizing, bare: index < all.length - 1 }).typeset)
     .join(' × ');
-  return `${items}<p>The figures stay at a size that works: ${escapeHtml(inside)} inside.</p>`;
+  return `${items}<p>The figures stay at a size that works: ${esc(inside)} inside.</p>`;
+}
+
+/** Whether the pieces go together, and what card they take. */
+export function closesHtml({ figures }: Example): string {
+  const fails = figures.fits.filter(({ holds, advice }) => !holds && !advice);
+  const stock = STOCKS[USUAL_STOCK].name;
+  const plan = planSheets(figures, { stock: USUAL_STOCK });
+  const closes = fails.length === 0 ? 'It closes' : `Does not hold: ${fails.map(({ name }) => name).join(', ')}`;
+  const pieces = pieceCount(figures) === 1 ? 'its piece comes' : `its ${pieceCount(figures)} pieces come`;
+  const card =
+    plan.tooLarge.length > 0
+      ? `but ${plan.tooLarge.map(({ name }) => name).join(' and ')} will not fit a ${stock} sheet`
+      : `and ${pieces} out of ${plan.used} ${plan.used === 1 ? 'sheet' : 'sheets'} of ${stock}`;
+  return esc(`${closes}, ${card}.`);
+}
+
+/** What the last change did, for the line that says so. */
+export function changesWords(figures: number, drawings: number): string {
+  if (figures + drawings === 0) return 'Nothing changed: cut to your marks, it is the same box.';
+  const words = figures === 1 ? 'one figure' : `${figures} figures`;
+  return `Just changed: ${words}${drawings > 0 ? ' and the drawing' : ''}.`;
 }

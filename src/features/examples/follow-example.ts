@@ -1,9 +1,9 @@
-import { GRIDS, type Pattern, type Sizing } from '@/engine';
+import { GRIDS, type Pattern } from '@/engine';
 import { fieldText } from '@/features/sizing/panel';
 import { FROM, parameterName } from '@/features/sizing/sizing-form';
 import { writeSizing } from '@/features/sizing/sizing-link';
 import { drawnAt, exampleModel, workExample, type Example } from './example';
-import { liveText, pieceSvg, troublesHtml, wordsHtml } from './example-html';
+import { changesWords, closesHtml, liveInside, pieceSvg, troublesHtml, wordsHtml } from './example-html';
 
 /**
  * In the browser: gives the function that answers a change in the form. It works the box out again and puts new figures,
@@ -75,37 +75,48 @@ function moveSliders(form: HTMLFormElement, { panel }: Example, changed: EventTa
 }
 
 function putFigures(slug: string, form: HTMLFormElement, example: Example): void {
-  const all = document.querySelectorAll<HTMLElement>(`[data-of="${CSS.escape(slug)}"]`);
-  for (const element of all) {
-    const { live, piece, words } = element.dataset;
-    if (live !== undefined) put(element, liveText(example, live, 'bare' in element.dataset));
+  let figures = 0;
+  let drawings = 0;
+  for (const element of document.querySelectorAll<HTMLElement>(`[data-of="${CSS.escape(slug)}"]`)) {
+    const { live, piece, words, wide, narrow } = element.dataset;
+    if (live !== undefined) figures += putFigure(element, liveInside(example, live, 'bare' in element.dataset));
+    if (words !== undefined) figures += putWords(element, wordsHtml(example, words));
     if (piece !== undefined) {
-      element.innerHTML = pieceSvg(example, piece, {
-        wide: Number(element.dataset.wide),
-        narrow: Number(element.dataset.narrow),
-      });
+      drawings += putHtml(element, pieceSvg(example, piece, { wide: Number(wide), narrow: Number(narrow) }));
     }
-    if (words !== undefined) putWords(element, wordsHtml(example, words));
   }
-  const troubles = form.querySelector('[data-troubles]');
-  if (troubles) troubles.innerHTML = troublesHtml(example);
-  document.documentElement.dataset.units = example.asked.units satisfies Sizing['units'];
-  form.dispatchEvent(new CustomEvent('example-changed', { detail: example }));
+  say(form, '[data-troubles]', troublesHtml(example));
+  say(form, '[data-closes]', closesHtml(example));
+  say(form, '[data-changes]', changesWords(figures, drawings));
+  document.documentElement.dataset.units = example.asked.units;
 }
 
-function put(element: HTMLElement, text: string): void {
-  if (element.textContent === text) return;
-  element.textContent = text;
-  mark(element);
+function say(form: HTMLFormElement, place: string, html: string): void {
+  const element = form.querySelector(place);
+  if (element) element.innerHTML = html;
 }
 
-/** New words; the figures in them that differ from those in the same place before are marked. */
-function putWords(element: HTMLElement, html: string): void {
+/** 1 when the words changed: compared as text, for the browser may write the same HTML in another way. */
+function putHtml(element: HTMLElement, html: string): 0 | 1 {
+  const before = element.textContent;
+  element.innerHTML = html;
+  return element.textContent === before ? 0 : 1;
+}
+
+function putFigure(element: HTMLElement, html: string): 0 | 1 {
+  const changed = putHtml(element, html);
+  if (changed) mark(element);
+  return changed;
+}
+
+/** New words; the figures in them that differ from those in the same place before are marked and counted. */
+function putWords(element: HTMLElement, html: string): number {
   const before = [...element.querySelectorAll('.measure')].map((figure) => figure.textContent);
   element.innerHTML = html;
-  element.querySelectorAll<HTMLElement>('.measure').forEach((figure, index) => {
-    if (figure.textContent !== before[index]) mark(figure);
-  });
+  const after = [...element.querySelectorAll<HTMLElement>('.measure')];
+  const changed = after.filter((figure, index) => figure.textContent !== before[index]);
+  changed.forEach(mark);
+  return changed.length;
 }
 
 function mark(element: HTMLElement): void {
