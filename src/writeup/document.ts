@@ -41,6 +41,7 @@ export interface ListNode {
 export interface MeasureNode {
   readonly type: 'measure';
   readonly attrs: { readonly formula: string; readonly bare: boolean };
+  readonly marks?: readonly MarkNode[];
 }
 /** A piece's drawing with its cut and score sentences. */
 export interface PieceCardNode {

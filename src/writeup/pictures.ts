@@ -15,3 +15,6 @@ export function pictureSources(id: string, width: number): string {
     .map(({ url, wide }) => `${url} ${wide}w`)
     .join(', ');
 }
+
+/** The largest picture that is taken, in bytes: 12 MB as file managers count them. */
+export const PICTURE_BYTES = 12 * 1024 * 1024;

@@ -1,7 +1,8 @@
+import { PICTURE_BYTES } from '@/writeup/pictures';
+
 /** What may be handed in as a picture. The browser says so before it sends; the server checks it again. */
 export const PICTURE_LIMITS = {
-  /** 12 MB, as file managers count them. */
-  bytes: 12 * 1024 * 1024,
+  bytes: PICTURE_BYTES,
   pixels: 40_000_000,
   /** Pictures kept for one project. */
   perProject: 400,

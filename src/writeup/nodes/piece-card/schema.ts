@@ -20,11 +20,11 @@ export const PieceCard = Node.create({
   },
 
   parseHTML() {
-    return [{ tag: 'figure[data-piece]' }];
+    return [{ tag: 'div[data-piece]' }];
   },
 
   renderHTML({ node, HTMLAttributes }) {
-    return ['figure', HTMLAttributes, ['figcaption', {}, String(node.attrs.piece)]];
+    return ['div', HTMLAttributes, ['p', {}, String(node.attrs.piece)]];
   },
 
   renderText({ node }) {

@@ -1,0 +1,91 @@
+import { drawPiece, sayParts, show, type Figures, type PieceFigure, type Sentence, type Shown } from '@/engine';
+import { drawingSvg } from '@/exports/svg/drawing';
+import { esc } from './escape';
+import { showLive, type LiveFigures, type LiveText } from './live';
+
+/**
+ * The parts of a write-up that follow the size, as HTML. Each comes as `render…`, the whole element, and `…Inside`, what
+ * changes in it: the reader's page and the editor put in the same words as the server.
+ */
+
+/** Usual width in pixels that a piece is drawn at; a card's SVG scales down, never up. */
+export const CARD_WIDTH = 560;
+
+type Looked = Figures['sizing'];
+
+// ── Live measures ────────────────────────────────────────────────────────────────────────────────────────────────────
+
+/** `<span class="measure" data-live="inside width">`, with words to hear beside the typeset figure. */
+export function renderMeasure(live: LiveFigures, text: LiveText): string {
+  const shown = showLive(live, text);
+  const bare = text.bare ? ' data-bare' : '';
+  return `<span class="measure${shown ? '' : ' unknown'}" data-live="${esc(text.formula)}"${bare}>${insideOf(shown, text)}</span>`;
+}
+
+/** What stands in the span; the class `unknown` goes with a measure that is not worked out. */
+export const measureInside = (live: LiveFigures, text: LiveText): string => insideOf(showLive(live, text), text);
+
+function insideOf(shown: Shown | null, { formula }: LiveText): string {
+  return shown ? figure(shown) : `${esc(formula.trim() || 'empty measure')} <small class="unknown-mark">(not worked out)</small>`;
+}
+
+/** A figure to see and the same to hear: a fraction slash is read aloud in a different way by every screen reader. */
+function figure({ typeset, spoken }: Shown): string {
+  if (typeset === spoken) return esc(typeset);
+  return `<span class="figure" aria-hidden="true">${esc(typeset)}</span><span class="visually-hidden spoken">${esc(spoken)}</span>`;
+}
+
+// ── Piece cards ──────────────────────────────────────────────────────────────────────────────────────────────────────
+
+/** The card of a piece: name, how many of what, the drawing with its dimensions, and how to cut and score it in words. */
+export function renderPieceCard(figures: Figures, name: string, width = CARD_WIDTH): string {
+  return `<div class="piece-card" role="group" aria-label="${esc(name)}" data-piece="${esc(name)}">${pieceCardInside(figures, name, width)}</div>`;
+}
+
+export function pieceCardInside(figures: Figures, name: string, width = CARD_WIDTH): string {
+  const piece = figures.pieces.find((p) => p.name === name);
+  if (!piece) return `<p class="piece-card-none"><b>${esc(name)}</b> is not part of the box as it is set up now.</p>`;
+  const { units, grid } = figures.sizing;
+  const drawing = drawingSvg(drawPiece(piece, { width, units, grid }), { class: 'piece-card-svg' });
+  const words = piece.instructions.map((sentence) => `<p>${sentenceHtml(sentence, figures.sizing)}</p>`).join('');
+  return (
+    '<div class="ruled" aria-hidden="true"></div>' +
+    `<p class="piece-card-head"><b>${esc(name)}</b> <span>cut ${piece.count} · ${esc(piece.stock)}</span></p>` +
+    `<div class="piece-card-drawing">${drawing}</div>` +
+    (words === '' ? '' : `<div class="piece-card-words">${words}</div>`)
+  );
+}
+
+/** A sentence from the geometry; its figures look like live measures, for they follow the size in the same way. */
+function sentenceHtml(sentence: Sentence, { units, grid }: Looked): string {
+  return sayParts(sentence, { units, grid })
+    .map(({ text, figure }) => (figure ? `<span class="measure">${esc(text)}</span>` : esc(text)))
+    .join('');
+}
+
+// ── The cut list ─────────────────────────────────────────────────────────────────────────────────────────────────────
+
+const COLUMNS = ['Piece', 'Cut', 'Size', 'Score from the left', 'Score from the top'] as const;
+
+/** Every piece with its count, size and score positions. */
+export function renderCutList(figures: Figures): string {
+  return `<div class="cut-list" data-cut-list>${cutListInside(figures)}</div>`;
+}
+
+export function cutListInside(figures: Figures): string {
+  const { units, grid } = figures.sizing;
+  const bare = (mm: number) => figure(show(mm, { units, grid, bare: true }));
+  const scores = (at: readonly number[]) => (at.length === 0 ? '<span class="soft">none</span>' : at.map(bare).join(', '));
+  const cells = (piece: PieceFigure) => [
+    `${piece.count} <span class="soft">${esc(piece.stock)}</span>`,
+    `${bare(piece.across)} × ${figure(show(piece.along, { units, grid }))}`,
+    scores(piece.scores.across),
+    scores(piece.scores.along),
+  ];
+  const rows = figures.pieces.map((piece) => {
+    const rest = cells(piece).map((cell, n) => `<td data-label="${COLUMNS[n + 1]}">${cell}</td>`);
+    return `<tr><th scope="row">${esc(piece.name)}</th>${rest.join('')}</tr>`;
+  });
+  const head = COLUMNS.map((name) => `<th scope="col">${name}</th>`).join('');
+  return `<table class="table"><caption>Cut list</caption><thead><tr>${head}</tr></thead><tbody>${rows.join('')}</tbody></table>`;
+}

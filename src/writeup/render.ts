@@ -1,0 +1,157 @@
+import type { BlockNode, DocNode, InlineNode, MarkNode, PhotoNode, StepNode } from './document';
+import { esc } from './escape';
+import { safeHref } from './links';
+import type { LiveFigures } from './live';
+import { pictureSources, pictureUrl } from './pictures';
+import { CARD_WIDTH, renderCutList, renderMeasure, renderPieceCard } from './render-figures';
+
+export interface RenderContext extends LiveFigures {
+  /** Pixels that pieces are drawn in. */
+  readonly cardWidth?: number;
+}
+
+/** The page's scale of headings: the title is 1, a heading of the write-up 2. */
+type Level = 2 | 3 | 4;
+
+interface Surroundings extends RenderContext {
+  readonly ids: Set<string>;
+  /** Headings of this level and above are spoken for by what stands round the node. */
+  readonly above: 1 | 2 | 3;
+  readonly counted: { steps: number };
+}
+
+const CAUTION_ICON =
+  '<svg class="icon" viewBox="0 0 24 24" width="20" height="20" aria-hidden="true"><path d="M12 4 2.5 20h19zM12 10v5M12 17.5v.3"/></svg>';
+
+/**
+ * The write-up as HTML for the article, complete and escaped; nothing of it needs a program to be read. Works without a
+ * DOM and without the editor, so the browser may call it too. Empty paragraphs and headings are left away.
+ */
+export function renderWriteUp(doc: DocNode, context: RenderContext): string {
+  const around = { ...context, ids: new Set<string>(), counted: { steps: 0 } };
+  let above: 1 | 2 = 1;
+  return doc.content
+    .map((node) => {
+      if (node.type === 'heading' && node.attrs.level === 2) above = 2;
+      return block(node, { ...around, above: node.type === 'step' ? above : 1 });
+    })
+    .join('\n');
+}
+
+const blocks = (content: readonly BlockNode[], around: Surroundings): string => content.map((node) => block(node, around)).join('');
+
+function block(node: BlockNode, around: Surroundings): string {
+  switch (node.type) {
+    case 'step':
+      return step(node, around);
+    case 'paragraph': {
+      const text = inlines(node.content, around);
+      return text === '' ? '' : `<p>${text}</p>`;
+    }
+    case 'heading': {
+      const text = inlines(node.content, around);
+      if (text === '') return '';
+      const level = Math.min(Math.max(node.attrs.level, around.above + 1), 4) as Level;
+      return `<h${level} id="${headingId(node.content ?? [], around.ids)}">${text}</h${level}>`;
+    }
+    case 'bulletList':
+    case 'orderedList': {
+      const items = node.content.map((item) => `<li>${blocks(item.content, around)}</li>`).join('');
+      const start = node.attrs && node.attrs.start !== 1 ? ` start="${Math.trunc(node.attrs.start)}"` : '';
+      return node.type === 'bulletList' ? `<ul>${items}</ul>` : `<ol${start}>${items}</ol>`;
+    }
+    case 'pieceCard':
+      return renderPieceCard(around.figures, node.attrs.piece, around.cardWidth ?? CARD_WIDTH);
+    case 'cutList':
+      return renderCutList(around.figures);
+    case 'photo':
+      return photo(node, around);
+    case 'tip':
+      return `<div class="tip" role="note"><b class="note-word">Tip</b>${blocks(node.content, around)}</div>`;
+    case 'caution':
+      return `<div class="caution" role="note"><b class="note-word">${CAUTION_ICON} Caution</b>${blocks(node.content, around)}</div>`;
+    case 'materials':
+      return `<div class="materials" role="group" aria-label="Materials"><p class="materials-word">Materials</p>${blocks(node.content, around)}</div>`;
+    default:
+      return node satisfies never;
+  }
+}
+
+function step({ attrs, content }: StepNode, around: Surroundings): string {
+  const n = (around.counted.steps += 1);
+  const level = (around.above + 1) as 2 | 3;
+  const id = `step-${n}`;
+  const title = attrs.title.trim();
+  const mark = attrs.mark.trim() === '' ? '' : ` <span class="step-mark">${esc(attrs.mark.trim())}</span>`;
+  const heading =
+    title === '' && mark === ''
+      ? `<h${level} class="step-title visually-hidden" id="${id}-title">Step ${n}</h${level}>`
+      : `<h${level} class="step-title" id="${id}-title"><span class="visually-hidden">Step ${n}${title === '' ? '' : ': '}</span>${esc(title)}${mark}</h${level}>`;
+  return (
+    `<section class="step" id="${id}" aria-labelledby="${id}-title"><div class="step-number" aria-hidden="true">${n}</div>` +
+    `<div class="step-body">${heading}${blocks(content, { ...around, above: level })}</div></section>`
+  );
+}
+
+function photo({ attrs, content }: PhotoNode, around: Surroundings): string {
+  const { upload, alt, width, height } = attrs;
+  const caption = inlines(content, around);
+  return (
+    `<figure class="photo"><img src="${esc(pictureUrl(upload, 960))}" srcset="${esc(pictureSources(upload, width))}" ` +
+    `sizes="(min-width: 1000px) 700px, 100vw" width="${Math.trunc(width)}" height="${Math.trunc(height)}" alt="${esc(alt)}" loading="lazy" decoding="async">` +
+    `${caption === '' ? '' : `<figcaption>${caption}</figcaption>`}</figure>`
+  );
+}
+
+const inlines = (content: readonly InlineNode[] | undefined, around: Surroundings): string => (content ?? []).map((node) => inline(node, around)).join('');
+
+function inline(node: InlineNode, around: Surroundings): string {
+  switch (node.type) {
+    case 'text':
+      return marked(esc(node.text), node.marks);
+    case 'measure':
+      return marked(renderMeasure(around, node.attrs), node.marks);
+    case 'hardBreak':
+      return '<br>';
+    default:
+      return node satisfies never;
+  }
+}
+
+/** Italic inside bold inside a link, whatever order they are stored in. */
+const OUTSIDE_IN: readonly MarkNode['type'][] = ['italic', 'bold', 'link'];
+
+const marked = (html: string, marks: readonly MarkNode[] = []): string =>
+  [...marks].sort((a, b) => OUTSIDE_IN.indexOf(a.type) - OUTSIDE_IN.indexOf(b.type)).reduce((inner, mark) => wrap(inner, mark), html);
+
+function wrap(html: string, mark: MarkNode): string {
+  switch (mark.type) {
+    case 'bold':
+      return `<strong>${html}</strong>`;
+    case 'italic':
+      return `<em>${html}</em>`;
+    case 'link': {
+      const href = safeHref(mark.attrs.href);
+      return href === null ? html : `<a href="${esc(href)}" rel="noopener">${html}</a>`;
+    }
+    default:
+      return mark satisfies never;
+  }
+}
+
+/** `part-cut-and-score`: from the words alone, so that it stays when a measure in the heading changes; never twice. */
+function headingId(content: readonly InlineNode[], taken: Set<string>): string {
+  const words = content
+    .map((node) => (node.type === 'text' ? node.text : ' '))
+    .join('')
+    .normalize('NFKD')
+    .toLowerCase()
+    .replace(/[^\p{L}\p{N}]+/gu, '-')
+    .replace(/^-+|-+$/g, '')
+    .slice(0, 60);
+  const base = `part-${words || 'heading'}`;
+  let id = base;
+  for (let n = 2; taken.has(id); n += 1) id = `${base}-${n}`;
+  taken.add(id);
+  return id;
+}
