@@ -88,8 +88,10 @@ export function onWholeSteps(model: Model, sizing: Sizing, figures: Figures): Si
   const step = sizing.units === 'in' ? GRIDS['1/16in'].step : GRIDS['1mm'].step;
   let moved = sizing;
   for (const measure of figures.measures) {
-    const ask = model.pattern.measures.find(({ name }) => name === measure.name)?.ask;
-    if (!ask || ask.finer || measure.kind !== 'length' || measure.unit || !measure.inUse) continue;
+    const compiled = model.measures.find(({ def }) => def.name === measure.name);
+    const ask = compiled?.def.ask;
+    // A size that follows from the others goes on following them.
+    if (!ask || (!measure.set && compiled.formula.uses.length > 0) || ask.finer || measure.kind !== 'length' || measure.unit || !measure.inUse) continue;
     const steps = measure.exact / step;
     if (Math.abs(steps - Math.round(steps)) < 1e-6) continue;
     const nearest = Math.round(steps) * step;

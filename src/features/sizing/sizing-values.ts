@@ -1,7 +1,4 @@
-import type { ChoiceDef, Sizing } from '@/engine';
-
-/** Answers in a sizing go by the measure's or choice's name in lower case with single spaces. */
-const keyOf = (name: string): string => name.trim().toLowerCase().replace(/\s+/g, ' ');
+import { keyOf, type ChoiceDef, type Sizing } from '@/engine';
 
 /** The sizing with another answer for one measure; null takes the answer back, and the usual value follows again. */
 export function withValue(sizing: Sizing, measure: string, value: number | null): Sizing {
