@@ -95,13 +95,13 @@ const cureHtml = ({ label, sizing }: Cure, links: Links): string =>
   `<a class="btn" data-sizing href="${esc(sizingHref(links, sizing))}">${esc(label)}</a>`;
 
 /** Over the article while it shows figures of another size than the one asked for; empty otherwise. */
-export function lastGoodHtml({ good, shown, refusals }: Verdict, typed: Typed, links: Links): string {
+export function lastGoodHtml({ good, shown, instead, refusals }: Verdict, typed: Typed, links: Links): string {
   const unread = Object.entries(typed).map(([measure, { sentence }]) => `<li>${esc(measure)}: ${esc(sentence)}</li>`);
   if (good && unread.length === 0) return '';
   const reasons = refusals.map(({ problem }) => `<li>${esc(problem.sentence)}</li>`);
   const cures = refusals.flatMap((refusal) => refusal.cures.slice(0, 1)).map((cure) => cureHtml(cure, links));
   return (
-    `<p><b>These figures are not for the size you asked for.</b> They are for ${esc(insideWords(shown))} inside, the last size that works.</p>` +
+    `<p><b>These figures are not for the size you asked for.</b> They are for ${esc(insideWords(shown))} inside, ${instead === 'nearest' ? 'the nearest size' : 'a size'} that works.</p>` +
     `<ul>${[...unread, ...reasons].join('')}</ul>` +
     (cures.length === 0 ? '' : `<p class="cures">${cures.join('')}</p>`)
   );

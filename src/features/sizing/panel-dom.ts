@@ -25,6 +25,17 @@ export function bindPanel(panel: HTMLElement, page: HTMLElement, store: ReaderSt
   const names = namesOf(where.model);
   const measureOf = (element: Element) => element.closest<HTMLElement>('[data-field]')?.dataset.field ?? '';
   let typing: ReturnType<typeof setTimeout> | undefined;
+  let sliding: (() => void) | null = null;
+  /** A thumb moves more often than the screen is drawn; only where it got to counts. */
+  const slide = (change: () => void) => {
+    if (!sliding) {
+      requestAnimationFrame(() => {
+        sliding?.();
+        sliding = null;
+      });
+    }
+    sliding = change;
+  };
   const settle = (input: HTMLInputElement) => {
     clearTimeout(typing);
     if (input.value.trim() !== shownText(input)) store.type(measureOf(input), input.value);
@@ -33,7 +44,7 @@ export function bindPanel(panel: HTMLElement, page: HTMLElement, store: ReaderSt
   form.addEventListener('input', ({ target }) => {
     if (!(target instanceof HTMLInputElement) || measureOf(target) === '') return;
     clearTimeout(typing);
-    if (target.type === 'range') store.set(measureOf(target), onStep(target, Number(target.value), store));
+    if (target.type === 'range') slide(() => store.set(measureOf(target), onStep(target, Number(target.value), store)));
     else if (store.wouldWork(measureOf(target), target.value)) store.type(measureOf(target), target.value);
     else typing = setTimeout(() => settle(target), TYPING);
   });

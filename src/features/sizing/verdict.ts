@@ -20,6 +20,8 @@ export interface Verdict {
   readonly figures: Figures;
   /** Figures that can be made: those of the asked sizing or, when it cannot be made, the last good ones. */
   readonly shown: Figures;
+  /** Whose figures are shown: the nearest size that works, or the fallback's. */
+  readonly instead: 'nothing' | 'nearest' | 'fallback';
   readonly refusals: readonly Refusal[];
 }
 
@@ -32,13 +34,15 @@ const ROUNDS = 4;
  */
 export function judge(model: Model, asked: Sizing, fallback: Sizing, { nearest = false } = {}): Verdict {
   const figures = evaluate(model, asked);
-  if (figures.problems.length === 0) return { asked, good: true, figures, shown: figures, refusals: [] };
-  const shown = (nearest ? nearestGood(model, figures) : null) ?? evaluate(model, inUnitsOf(fallback, asked));
+  if (figures.problems.length === 0) return { asked, good: true, figures, shown: figures, instead: 'nothing', refusals: [] };
+  const near = nearest ? nearestGood(model, figures) : null;
+  const shown = near ?? evaluate(model, inUnitsOf(fallback, asked));
   return {
     asked,
     good: false,
     figures,
     shown,
+    instead: near ? 'nearest' : 'fallback',
     refusals: figures.problems.map((problem) => ({ problem, cures: curesFor(problem, asked, figures, shown) })),
   };
 }
