@@ -4,6 +4,7 @@ import { safeHref } from '../../links';
 /** A link to http, https, mailto or a place on this site; nothing else is ever stored. */
 export const Link = Mark.create({
   name: 'link',
+  priority: 1000,
   inclusive: false,
   exitable: true,
 
