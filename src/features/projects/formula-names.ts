@@ -1,4 +1,4 @@
-import type { Pattern, PieceDef } from '@/engine';
+import { keyOf, type Pattern, type PieceDef } from '@/engine';
 
 export interface NameSpan {
   readonly name: string;
@@ -13,22 +13,31 @@ export interface NameSpan {
  */
 export function namesIn(formula: string, names: readonly string[]): readonly NameSpan[] {
   if (names.length === 0) return [];
-  const spans: NameSpan[] = [];
-  for (const match of formula.matchAll(finder(names))) {
-    spans.push({ name: match[0].replace(/\s+/gu, ' '), from: match.index, to: match.index + match[0].length });
-  }
-  return spans;
+  const known = finder(names);
+  return [...formula.matchAll(known.pattern)].map((match) => ({
+    name: known.names.get(keyOf(match[0])) ?? match[0],
+    from: match.index,
+    to: match.index + match[0].length,
+  }));
 }
 
-const finders = new Map<string, RegExp>();
-function finder(names: readonly string[]): RegExp {
+interface Finder {
+  readonly pattern: RegExp;
+  /** Names as they are called, by how they are compared. */
+  readonly names: ReadonlyMap<string, string>;
+}
+const finders = new Map<string, Finder>();
+function finder(names: readonly string[]): Finder {
   const key = names.join('\n');
   const known = finders.get(key);
   if (known) return known;
   const words = [...names]
     .sort((a, b) => b.length - a.length)
     .map((name) => name.replace(/[.*+?^${}()|[\]\\]/gu, '\\$&').replace(/\s+/gu, '\\s+'));
-  const made = new RegExp(`(?<![\\p{L}\\p{N}_.])(?:${words.join('|')})(?![\\p{L}\\p{N}_])`, 'gu');
+  const made = {
+    pattern: new RegExp(`(?<![\\p{L}\\p{N}_.])(?:${words.join('|')})(?![\\p{L}\\p{N}_])`, 'giu'),
+    names: new Map(names.map((name) => [keyOf(name), name])),
+  };
   if (finders.size > 50) finders.clear();
   finders.set(key, made);
   return made;
@@ -39,7 +48,11 @@ export function formulasOfPiece(piece: PieceDef): readonly string[] {
   const found: (string | undefined)[] = [piece.count, piece.when];
   for (const track of [...piece.columns, ...piece.rows]) found.push(track.size, track.when);
   for (const line of piece.lines ?? []) found.push(line.angle, line.when);
-  for (const taper of piece.tapers ?? []) found.push(taper.by, taper.start, taper.when);
+  for (const tab of piece.tabs ?? []) {
+    found.push(tab.depth, tab.teeth, tab['tooth angle'], tab.when);
+    for (const end of [tab.left, tab.right, tab.top, tab.bottom]) found.push(end?.from, end?.by);
+  }
+  for (const cap of piece.caps ?? []) found.push(cap.radius);
   for (const corner of piece.corners ?? []) found.push(corner.radius, corner.when);
   for (const notch of piece.notches ?? []) found.push(notch.at, notch.radius, notch.when);
   for (const slot of piece.slots ?? []) found.push(slot.across, slot.along, slot.width, slot.height, slot.when);

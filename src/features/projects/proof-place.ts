@@ -20,17 +20,24 @@ const COLUMNS: Readonly<Record<string, { readonly column: ProofPlace['column']; 
   piece: { column: 'pieces', heading: 'Pieces' },
 };
 
-/** The desk's place for a fault: `piece "Floor", row 2` is "Pieces · Floor, row 2". */
+/** The desk's place for a fault: `piece “Floor”, row, “side”` is "Pieces · Floor, row, “side”". */
 export function placeOfFault(fault: Pick<Fault, 'where'>): ProofPlace {
-  const match = /^(measure|choice|fit|piece) "([^"]*)"(.*)$/su.exec(fault.where);
+  const match = /^(measure|choice|fit|piece) “([^”]*)”(.*)$/su.exec(fault.where);
   const column = COLUMNS[match?.[1] ?? ''];
   if (match === null || column === undefined) return { column: 'measures', label: fault.where === '' ? 'Measures' : `Measures · ${fault.where}` };
   return { column: column.column, name: match[2] ?? '', label: `${column.heading} · ${match[2]}${match[3]}` };
 }
 
-/** Whether a fault stands in the measure called `name`, and in which of its fields ("usual", "from", "to", "formula"). */
-export function fieldOfFault(fault: Pick<Fault, 'where'>, name: string): string | null {
-  const head = `measure "${name}"`;
+export type MeasureField = 'formula' | 'usual' | 'from' | 'to';
+const FIELDS: Readonly<Record<string, MeasureField>> = { 'usual value': 'usual', smallest: 'from', largest: 'to' };
+
+/** In which field of the measure called `name` a fault stands; null when it stands elsewhere. */
+export function fieldOfFault(fault: Pick<Fault, 'where'>, name: string): MeasureField | null {
+  const head = `measure “${name}”`;
   if (!fault.where.startsWith(head)) return null;
-  return fault.where.slice(head.length).replace(/^[\s,]+/u, '') || 'formula';
+  return FIELDS[fault.where.slice(head.length).replace(/^[\s,]+/u, '')] ?? 'formula';
 }
+
+/** Whether a fault stands in a column or row of a piece. */
+export const isInTrack = (fault: Pick<Fault, 'where'>, track: { readonly piece: string; readonly axis: 'column' | 'row'; readonly name: string }): boolean =>
+  fault.where.startsWith(`piece “${track.piece}”, ${track.axis}, “${track.name}”`);

@@ -25,7 +25,7 @@ export function FitList({ work, draft, lit, names }: FitListProps) {
       </h3>
       <ul className="fits">
         {fits.map((fit) => {
-          const fault = faults.find((found) => found.where.startsWith(`fit "${fit.name}"`));
+          const fault = faults.find((found) => found.where.startsWith(`fit “${fit.name}”`));
           const figure = figures.get(fit.name);
           const follows = lit !== null && [fit.left, fit.right].some((formula) => usesAny(formula, names, lit.names));
           const state = fault ? 'bad' : figure === undefined ? 'quiet' : figure.holds ? 'good' : figure.advice ? 'warn' : 'bad';

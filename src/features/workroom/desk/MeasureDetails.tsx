@@ -1,8 +1,7 @@
 import { useState } from 'react';
-import type { Ask } from '@/engine';
+import type { Ask, Fault } from '@/engine';
 import { changeAsk, removeMeasure, turnOver, usersOf } from '@/features/projects/pattern-edits';
 import { fieldOfFault } from '@/features/projects/proof-place';
-import type { Fault } from '@/engine';
 import { FaultWords } from './FaultWords';
 import { FormulaField } from './FormulaField';
 import type { MeasureRowProps } from './MeasureRow';
@@ -65,12 +64,11 @@ function AskFields({ store, name, ask, names, own, lit }: { readonly store: Meas
   );
 }
 
-/** The faults of an asked measure that stand in one of its fields; those without a field count for the usual value. */
+/** The faults that stand in one field of an asked measure; those of no field are told at the usual value. */
 const inField = (faults: readonly Fault[], name: string, key: 'usual' | 'from' | 'to'): readonly Fault[] =>
   faults.filter((fault) => {
-    const field = fieldOfFault(fault, name) ?? '';
-    const named = RANGE_FIELDS.find((known) => new RegExp(`\\b${known.key}\\b`, 'u').test(field));
-    return (named?.key ?? 'usual') === key;
+    const field = fieldOfFault(fault, name);
+    return field === key || (field === 'formula' && key === 'usual');
   });
 
 function TakeOut({ store, name }: { readonly store: MeasureRowProps['store']; readonly name: string }) {

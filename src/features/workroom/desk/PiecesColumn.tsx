@@ -25,7 +25,7 @@ export function PiecesColumn({ store, piece, onPiece }: PiecesColumnProps) {
   const { pieces } = draft.pattern;
   const chosen = pieces.find((known) => known.name === piece) ?? pieces[0];
   const figures = new Map(live?.figures.pieces.map((figure) => [figure.name, figure]));
-  const faults = compiled.ok ? [] : compiled.faults.filter((fault) => fault.where.startsWith(`piece "${chosen?.name ?? ''}"`));
+  const faults = compiled.ok ? [] : compiled.faults.filter((fault) => fault.where.startsWith(`piece “${chosen?.name ?? ''}”`));
   const litPieces = pieces.filter((known) => lit?.pieces.includes(known.name));
 
   const step = (by: 1 | -1) => {

@@ -1,5 +1,5 @@
 import { useEffect, useState } from 'react';
-import { RangeRuler } from '@/components/RangeRuler';
+import { rulerTicks } from '@/components/ruler-ticks';
 import { explain, GRIDS, readValue, type MeasureFigure, type Sizing } from '@/engine';
 import type { DeskStore } from './desk-store';
 import { typedText } from './figure-text';
@@ -67,7 +67,7 @@ export function SizeSlider({ store, figure, sizing }: SizeSliderProps) {
               set(onStep(figure.exact + steps * step, { step, from, to }), `${name}.slider`);
             }}
           />
-          {kind === 'length' ? <RangeRuler from={from} to={to} units={figure.unit ?? sizing.units} /> : null}
+          {kind === 'length' ? <Ruler from={from} to={to} units={figure.unit ?? sizing.units} /> : null}
         </div>
       ) : null}
       {figure.set ? (
@@ -85,3 +85,27 @@ const onStep = (value: number, { step, from, to }: { readonly step: number; read
 
 const without = (values: Readonly<Record<string, number>>, name: string): Record<string, number> =>
   Object.fromEntries(Object.entries(values).filter(([key]) => key !== name));
+
+const RULER = { width: 280, inset: 12 } as const;
+
+/** The range's own ruler under its slider. Decoration: the slider says its range itself. */
+function Ruler({ from, to, units }: { readonly from: number; readonly to: number; readonly units: Sizing['units'] }) {
+  const length = RULER.width - 2 * RULER.inset;
+  return (
+    <svg className="ruler" viewBox={`0 0 ${RULER.width} 30`} aria-hidden="true" focusable="false">
+      {rulerTicks({ from, to, units, width: length }).map(({ at, size, label }) => {
+        const x = RULER.inset + at * length;
+        return (
+          <g key={at}>
+            <line x1={x} x2={x} y1={0} y2={size} />
+            {label ? (
+              <text x={x} y={28} textAnchor="middle">
+                {label}
+              </text>
+            ) : null}
+          </g>
+        );
+      })}
+    </svg>
+  );
+}

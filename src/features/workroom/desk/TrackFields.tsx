@@ -2,6 +2,7 @@ import type { Fault, Pattern, PieceDef } from '@/engine';
 import { namesOf } from '@/features/projects/formula-names';
 import { changeTrack } from '@/features/projects/pattern-edits';
 import { usesAny, type Lit } from '@/features/projects/followers';
+import { isInTrack } from '@/features/projects/proof-place';
 import type { DeskStore } from './desk-store';
 import { FaultWords } from './FaultWords';
 import { FormulaField } from './FormulaField';
@@ -28,7 +29,7 @@ export function TrackFields({ store, piece, pattern, lit, faults }: TrackFieldsP
           <h3>{heading}</h3>
           <ul>
             {piece[axis].map((track, i) => {
-              const own = faults.filter((fault) => new RegExp(`\\b${one} (?:"${escaped(track.name)}"|${i + 1}\\b)`, 'u').test(fault.where));
+              const own = faults.filter((fault) => isInTrack(fault, { piece: piece.name, axis: one, name: track.name }));
               const follows = lit !== null && usesAny(track.size, names, lit.names);
               const set = (size: string) => store.editPattern(`${piece.name}.${axis}.${i}`, (now) => changeTrack(now, { piece: piece.name, axis, index: i }, { size }));
               return (
@@ -45,5 +46,3 @@ export function TrackFields({ store, piece, pattern, lit, faults }: TrackFieldsP
     </div>
   );
 }
-
-const escaped = (text: string): string => text.replace(/[.*+?^${}()|[\]\\]/gu, '\\$&');

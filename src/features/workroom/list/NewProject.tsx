@@ -1,0 +1,83 @@
+import { useEffect, useState } from 'react';
+import { Dialog } from '@/components/Dialog';
+import { Field } from '@/components/Field';
+import { TITLE_LIMIT } from '@/features/projects/project';
+import { call } from '../desk/project-api';
+
+/** What the shelf shows of a pattern; drawn on the server. */
+export interface ShelfPattern {
+  readonly slug: string;
+  readonly name: string;
+  readonly summary: string;
+  readonly asks: string;
+  readonly folded: string;
+}
+export interface NewProjectProps {
+  readonly patterns: readonly ShelfPattern[];
+  readonly open: boolean;
+  /** The pattern that was chosen on the shelf. */
+  readonly chosen: string | null;
+  readonly onClose: () => void;
+}
+
+/** A pattern and a title make a project; its desk opens at once. */
+export function NewProject({ patterns, open, chosen, onClose }: NewProjectProps) {
+  const [slug, setSlug] = useState<string | null>(null);
+  const [title, setTitle] = useState('');
+  const [error, setError] = useState<string | undefined>();
+  const [busy, setBusy] = useState(false);
+  useEffect(() => {
+    if (!open) return;
+    setSlug(chosen ?? patterns[0]?.slug ?? null);
+    setTitle('');
+    setError(undefined);
+  }, [open, chosen, patterns]);
+
+  const make = async () => {
+    if (title.trim() === '') return setError('Give the project a title. It can be changed later.');
+    setBusy(true);
+    const answer = await call<{ id: string }>('/api/projects', { method: 'POST', body: { pattern: slug, title } });
+    if (answer.ok) return location.assign(`/workroom/${answer.value.id}`);
+    setBusy(false);
+    setError(answer.refusal.errors[0]?.sentence ?? answer.refusal.sentence);
+  };
+
+  return (
+    <Dialog open={open} title="New project" onClose={onClose}>
+      <form
+        className="new-project"
+        onSubmit={(event) => {
+          event.preventDefault();
+          void make();
+        }}
+      >
+        <Field label="Title" hint="What the box is for, such as “Seed packet box”." error={error}>
+          {(control) => <input {...control} className="input" autoFocus value={title} maxLength={TITLE_LIMIT} onChange={(event) => setTitle(event.currentTarget.value)} />}
+        </Field>
+        <fieldset className="field">
+          <legend>Pattern</legend>
+          <div className="pattern-choices">
+            {patterns.map((pattern) => (
+              <label key={pattern.slug} className="pattern-choice">
+                <input type="radio" name="pattern" value={pattern.slug} checked={slug === pattern.slug} onChange={() => setSlug(pattern.slug)} />
+                <span className="pattern-picture" aria-hidden="true" dangerouslySetInnerHTML={{ __html: pattern.folded }} />
+                <span>
+                  <b>{pattern.name}</b>
+                  <span className="small soft">{pattern.summary}</span>
+                </span>
+              </label>
+            ))}
+          </div>
+        </fieldset>
+        <p className="new-deeds">
+          <button type="submit" className="tab-button" disabled={busy || slug === null}>
+            {busy ? 'Making it…' : 'Make the project'}
+          </button>
+          <button type="button" className="btn" onClick={onClose}>
+            Cancel
+          </button>
+        </p>
+      </form>
+    </Dialog>
+  );
+}
