@@ -74,7 +74,9 @@ function tally(name, code, file, count) {
   return result;
 }
 
-const broken = (note) => ({ passed: 0, failed: 1, skipped: 0, note });
+function broken(note) {
+  return { passed: 0, failed: 1, skipped: 0, note };
+}
 
 async function haveChromium() {
   const installed = () => CHROMIUMS.some((path) => path && existsSync(path));
