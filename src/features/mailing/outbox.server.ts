@@ -1,8 +1,10 @@
 import { sqlite } from '@/db/client.server';
 import { GIVE_UP_AFTER, MOST_UNKNOWNS, REST_AFTER_UNKNOWN, waitAfter } from './backoff';
 import { countUp, type Counts } from './counts';
+import { openGate } from './gate.server';
 import { enhancedStatus, type Answer, type Outcome } from './outcome';
 import { MUST_NOT_BE_SENT } from './suppression-sql';
+import type { Trouble } from './trouble';
 
 /*
  * The outbox: one row a recipient, and the row is the only truth. A delivery goes
@@ -284,12 +286,14 @@ export function pauseMailing(id: string, now: number, reason: string | null = nu
   );
 }
 
+/** Carries on, and knocks at the mail server at once if it was away. */
 export function resumeMailing(id: string, now: number): boolean {
-  return (
+  const resumed =
     sqlite()
       .prepare("UPDATE mailing SET state = 'sending', pause_reason = NULL, updated_at = @now WHERE id = @id AND state = 'paused'")
-      .run({ id, now }).changes > 0
-  );
+      .run({ id, now }).changes > 0;
+  if (resumed) openGate();
+  return resumed;
 }
 
 /** Stops for good: what has not gone never goes. Accepted stays accepted, uncertain stays uncertain. */
@@ -325,17 +329,6 @@ export function countDeliveries(mailingId: string): Counts {
     .prepare('SELECT state, attempts > 0 AS tried, count(*) AS count FROM delivery WHERE mailing_id = ? GROUP BY state, attempts > 0')
     .all(mailingId) as { state: string; tried: number; count: number }[];
   return countUp(rows.map((row) => ({ ...row, tried: row.tried === 1 })));
-}
-
-export interface Trouble {
-  readonly what: 'later' | 'refused' | 'expired' | 'uncertain';
-  readonly count: number;
-  /** What the server said, one example. */
-  readonly reply: string;
-  readonly enhanced: string | null;
-  readonly suppressed: boolean;
-  /** When the next of them is tried again; null when none is. */
-  readonly nextAt: number | null;
 }
 
 /** Those that did not simply go, gathered by what the server said. No address is in it. */

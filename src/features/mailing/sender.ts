@@ -23,7 +23,7 @@ export const preferencesUrl = (siteUrl: string, token: string): string =>
  */
 export function listHeaders({ listName, domain, siteUrl, token }: ListFacts): Record<string, string> {
   return {
-    'List-Id': `"${listName.replace(/["\\\r\n]/g, '')}" <projects.${domain}>`,
+    'List-Id': `${phrase(listName)} <projects.${domain}>`,
     'List-Unsubscribe': `<${unsubscribeUrl(siteUrl, token)}>`,
     'List-Unsubscribe-Post': 'List-Unsubscribe=One-Click',
   };
@@ -33,4 +33,21 @@ export interface ListFacts {
   readonly domain: string;
   readonly siteUrl: string;
   readonly token: string;
+}
+
+/** A display name as a header may hold it: quoted, or as encoded words of at most 75 characters (RFC 2047). */
+function phrase(name: string): string {
+  const clean = name.replace(/["\\\p{C}]/gu, '');
+  if (/^[\x20-\x7e]*$/.test(clean)) return `"${clean}"`;
+  const words: string[] = [];
+  let part = '';
+  const bytes = (text: string) => new TextEncoder().encode(text);
+  for (const letter of clean) {
+    if (bytes(part + letter).length > 45) {
+      words.push(part);
+      part = '';
+    }
+    part += letter;
+  }
+  return [...words, part].map((word) => `=?utf-8?B?${btoa(String.fromCharCode(...bytes(word)))}?=`).join(' ');
 }

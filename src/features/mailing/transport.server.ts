@@ -62,6 +62,8 @@ export function openTransport(smtpUrl: string, { lanes = LANES, timeouts }: Tran
 
   return {
     async send({ envelope, from, to, headers, ...message }, { signal } = {}) {
+      // Such an address may only be named to a server that offers SMTPUTF8 (RFC 6531), which the pool does not tell.
+      if (/[^\0-\x7f]/.test(envelope.to.slice(0, envelope.to.lastIndexOf('@')))) return NOT_ASCII;
       const witness: Witness = {};
       try {
         const info = await mailer.sendMail({
@@ -69,7 +71,7 @@ export function openTransport(smtpUrl: string, { lanes = LANES, timeouts }: Tran
           envelope: { from: envelope.from, to: [envelope.to] },
           from: { ...from },
           to: { ...to },
-          headers: { ...headers },
+          headers: Object.fromEntries(Object.entries(headers).map(asWritten)),
           // The same on a resend, so that both copies are the same to the byte.
           baseBoundary: /[0-9a-f]{8,}/.exec(message.messageId)?.[0] ?? 'letter',
           textEncoding: 'quoted-printable',
@@ -84,6 +86,11 @@ export function openTransport(smtpUrl: string, { lanes = LANES, timeouts }: Tran
     close: () => mailer.close(),
   };
 }
+
+/** Our headers are ASCII as they are; nodemailer would wrap a quoted name and the id after it in an encoded word. */
+const asWritten = ([name, value]: [string, string]) => [name, { prepared: true, foldLines: true, value: value.replace(/[^\x20-\x7e]/g, '') }] as const;
+
+const NOT_ASCII: Answer = { phase: 'connect', code: null, enhanced: '5.6.7', reply: 'Letters other than a to z before the @ cannot be written to.', refusedHere: true };
 
 interface Witness {
   stream?: Readable;

@@ -6,7 +6,11 @@ export const NAME_LIMIT = 60;
 
 /** What the sign-up form sends. `website` is a field that people do not see: whoever fills it in is a program. */
 export const signUpSchema = z.object({
-  email: z.string().max(320).refine((text) => emailKey(text) !== null, EMAIL_SENTENCE),
+  email: z
+    .string()
+    .max(320, EMAIL_SENTENCE)
+    .refine((text) => emailKey(text) !== null, EMAIL_SENTENCE)
+    .refine((text) => !/[^\0-\x7f].*@/u.test(text), 'Before the @, only letters from a to z can be written to from here. Use another address.'),
   units: z.enum(UNITS, { message: 'Sizes come in inches, millimetres or centimetres.' }).default('in'),
   website: z.string().max(500).default(''),
 });
