@@ -1,2 +1,15 @@
 /** The geometry engine's public door. Everything outside `src/engine` imports from here and from nowhere deeper. */
+import { defaultGrid } from './measure';
+import { sizingOf, type Model } from './model';
+import type { GridId, Sizing, Unit } from './types';
+
 export type * from './types';
+export { explain, explainAt, nearestName } from './formula';
+export * from './measure';
+export { areaOf, boundsOf, lengthOf, perimeterOf, pointsOf } from './net';
+export { isName, keyOf } from './pattern/names';
+export { compileLive, compilePattern, evaluate, type LiveMeasure, type Model } from './model';
+export { drawFolded, drawPiece, foldedExtent, say, sayParts, type FoldedDrawingOptions, type PieceDrawingOptions, type SaidPart } from './drawing';
+
+/** A sizing with nothing answered: the usual size of the pattern, in these units, on their usual cut grid. */
+export const usualSizing = (model: Model, units: Unit = 'in', grid: GridId = defaultGrid(units)): Sizing => sizingOf(model, units, grid);

@@ -40,6 +40,8 @@ export interface Pattern {
   readonly finished: { readonly inside: readonly NamedFormula[]; readonly outside: readonly NamedFormula[] };
   /** The order of making, in plain words; `[[formula]]` inside becomes a live measure. */
   readonly order: readonly string[];
+  /** Degrees that the folded picture is turned about the upright axis; usual −35, which shows the front and the right. */
+  readonly turn?: number;
   /** Where each piece stands in space in the folded picture. */
   readonly assembly: readonly Placement[];
 }
@@ -110,7 +112,9 @@ export interface PieceDef {
   readonly cells: readonly (readonly CellDef[])[];
   /** Lines between two named cells that are not the usual ones. */
   readonly lines?: readonly LineDef[];
-  readonly tapers?: readonly TaperDef[];
+  readonly tabs?: readonly TabDef[];
+  /** Radius of the arc of each cap cell. */
+  readonly caps?: readonly { readonly cell: string; readonly radius: string }[];
   readonly corners?: readonly CornerDef[];
   readonly notches?: readonly NotchDef[];
   readonly slots?: readonly SlotDef[];
@@ -128,7 +132,11 @@ export interface Track {
   readonly size: string;
   readonly when?: string;
 }
-/** `panel`, `tab`, `away`, or the same with a name: `panel floor`, `tab left`, `cap curve` (a circular segment standing on its neighbour). */
+/**
+ * What a cell of the grid is: `away`, `panel floor`, `tab left`, `tab corner 1 on left end`, `cap curve on floor`.
+ * A tab is hinged on one neighbour only (`on …`; needed when it touches several) and cut free from the others. A cap is a
+ * circular segment that continues its neighbour without a fold.
+ */
 export type CellDef = string;
 export type Side = 'top' | 'right' | 'bottom' | 'left';
 export interface LineDef {
@@ -138,15 +146,26 @@ export interface LineDef {
   readonly angle?: string;
   readonly when?: string;
 }
-export interface TaperDef {
-  readonly cell: string;
-  /** The free end that narrows. */
-  readonly end: Side;
-  /** A length (how far in at the tip) or an angle off square. */
-  readonly by: string;
-  /** Usual 0: how far in from the end the root starts. */
-  readonly start?: string;
+/** How tabs are shaped. Ends are named by the side they lie on; the tip is the side away from the hinge. */
+export interface TabDef {
+  readonly cells: readonly string[];
+  /** How far it stands out from its hinge; usual: the whole cell. */
+  readonly depth?: string;
+  readonly left?: TabEnd;
+  readonly right?: TabEnd;
+  readonly top?: TabEnd;
+  readonly bottom?: TabEnd;
+  /** Number of teeth that the tab is cut into; usual 1, a plain tab. */
+  readonly teeth?: string;
+  /** Half the angle that each tooth must give way to its neighbour when the tab is bent. */
+  readonly 'tooth angle'?: string;
   readonly when?: string;
+}
+export interface TabEnd {
+  /** How far in from the end of the hinge the tab starts; usual 0. */
+  readonly from?: string;
+  /** How much narrower the tip is at this end: a length, or an angle off square. */
+  readonly by?: string;
 }
 export interface CornerDef {
   readonly cell: string;
@@ -241,6 +260,8 @@ export interface Net {
   readonly holes: readonly Loop[];
   readonly panels: readonly Panel[];
   readonly folds: readonly Fold[];
+  /** Lines where two panels go on without a fold. */
+  readonly joins: readonly { readonly curve: Curve; readonly panels: readonly [string, string] }[];
   /** Cuts that end inside the card. */
   readonly slits: readonly Line[];
   /** Rectangles of the blank that are cut away, for the crossed-out drawing. */
@@ -297,12 +318,21 @@ export interface PieceFigure {
   readonly across: number;
   readonly along: number;
   readonly scores: { readonly across: readonly number[]; readonly along: readonly number[] };
+  /** Card thickness at this sizing; 0 when the pattern has none. */
+  readonly thickness: number;
   readonly area: number;
   readonly perimeter: number;
   readonly instructions: readonly Sentence[];
 }
 /** Words with figures in them; `say` in `drawing` turns it into text in the reader's units. */
-export type Sentence = readonly (string | { readonly mm: number; readonly bare?: boolean })[];
+export type Sentence = readonly (string | SentenceFigure)[];
+export interface SentenceFigure {
+  readonly mm: number;
+  /** Without its unit. */
+  readonly bare?: boolean;
+  /** Card thicknesses to add to `mm`: said in words, since no ruler shows them. */
+  readonly cards?: number;
+}
 export interface FitFigure {
   readonly name: string;
   readonly holds: boolean;

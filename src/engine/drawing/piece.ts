@@ -1,0 +1,93 @@
+import { show, type ShowOptions } from '../measure';
+import { areaOf, boundsOf } from '../net';
+import type { Drawing, PieceFigure, Point, Shape } from '../types';
+import { acrossTop, downLeft, textWidth, topRows, type Stop } from './dimensions';
+import { closedPath, n, pathOf, segment, type Place } from './path';
+import { ruler } from './ruler';
+import { say } from './say';
+
+export interface PieceDrawingOptions extends Pick<ShowOptions, 'units' | 'grid'> {
+  /** Drawing units across, all in (CSS pixels on a page). */
+  readonly width: number;
+  /** The piece itself is drawn at most this tall. */
+  readonly tallest?: number;
+  /** Drawing units for a millimetre; usual: as large as it fits. */
+  readonly scale?: number;
+  readonly dims?: boolean;
+  readonly labels?: boolean;
+  readonly ruler?: boolean;
+}
+
+/**
+ * A flat piece: outline, folds by kind, glue areas, what is cut away, slits; running dimensions from the top left corner, the
+ * way a scoring board is read; a ruler to the drawing's own scale. The text alternative states size and scores.
+ */
+export function drawPiece(piece: PieceFigure, options: PieceDrawingOptions): Drawing {
+  const { net } = piece;
+  const { units, grid, width, dims = true, labels = true, tallest = 420 } = options;
+  const says = (mm: number) => show(mm, { units, ...(grid ? { grid } : {}), bare: true }).typeset;
+  const acrossMm = [...piece.scores.across, net.across];
+  const alongMm = [...piece.scores.along, net.along];
+  const left = dims ? Math.max(...alongMm.map((mm) => textWidth(says(mm)))) + 34 : 6;
+  const right = dims ? textWidth(says(net.across)) / 2 + 6 : 6;
+  const scale = options.scale ?? Math.min((width - left - right) / net.across, tallest / net.along);
+  const inset = left + Math.max(0, (width - left - right - net.across * scale) / 2);
+  const stopsAcross: Stop[] = acrossMm.map((mm) => ({ at: inset + mm * scale, text: says(mm) }));
+  const rulerHeight = options.ruler ? 16 : 0;
+  const top = rulerHeight + (dims ? 34 + Math.max(...topRows(stopsAcross)) * 15 : 6);
+  const place: Place = (point) => ({ x: inset + point.x * scale, y: top + point.y * scale });
+  const bottom = top + net.along * scale;
+  const height = bottom + (dims ? 12 : 6);
+  const stopsAlong: Stop[] = alongMm.map((mm) => ({ at: top + mm * scale, text: says(mm) }));
+
+  const shapes: Shape[] = [
+    ...net.away.map((box): Shape => {
+      const [a, b] = [place({ x: box.x, y: box.y }), place({ x: box.x + box.across, y: box.y + box.along })];
+      return { type: 'path', role: 'away', d: `M${n(a.x)} ${n(a.y)}H${n(b.x)}V${n(b.y)}H${n(a.x)}ZM${n(a.x)} ${n(a.y)}L${n(b.x)} ${n(b.y)}M${n(b.x)} ${n(a.y)}L${n(a.x)} ${n(b.y)}` };
+    }),
+    ...net.panels.map((panel): Shape => ({ type: 'path', role: panel.role === 'tab' ? 'glue' : 'panel', d: closedPath(panel.loop, place, scale), of: panel.name })),
+    ...net.folds.filter((fold) => fold.angle !== 0).map((fold): Shape => ({ type: 'path', role: fold.kind, d: pathOf([fold.curve], place, scale) })),
+    ...net.slits.map((slit): Shape => ({ type: 'path', role: 'slit', d: slitPath(place(slit.from), place(slit.to)) })),
+    { type: 'path', role: 'cut', d: [net.outline, ...net.holes].map((loop) => closedPath(loop, place, scale)).join('') },
+    ...(labels ? labelsOf(piece, place, scale) : []),
+    ...(dims
+      ? [
+          ...acrossTop(stopsAcross, { from: inset, line: top - 14, edge: top }),
+          ...downLeft(stopsAlong, { from: top, line: inset - 12, edge: inset, bottom }),
+          { type: 'path', role: 'origin', d: `M${n(inset - 2)} ${n(top - 2)}v-8h-8z` } satisfies Shape,
+        ]
+      : []),
+    ...(options.ruler ? ruler({ width, start: inset, scale, units }) : []),
+  ];
+  return { width, height, title: piece.name, alt: altOf(piece, options), shapes };
+}
+
+/** A slit with a short tick at either end. */
+function slitPath(a: Point, b: Point): string {
+  const length = Math.hypot(b.x - a.x, b.y - a.y) || 1;
+  const [x, y] = [(-(b.y - a.y) / length) * 3, ((b.x - a.x) / length) * 3];
+  return segment(a.x, a.y, b.x, b.y) + segment(a.x - x, a.y - y, a.x + x, a.y + y) + segment(b.x - x, b.y - y, b.x + x, b.y + y);
+}
+
+/** Names of panels in their middle, where there is room for them. */
+function labelsOf(piece: PieceFigure, place: Place, scale: number): Shape[] {
+  const joined = new Set(piece.net.joins.map((join) => join.panels[1]));
+  return piece.net.panels.flatMap((panel): Shape[] => {
+    if (panel.role === 'tab' || joined.has(panel.name) || areaOf(panel.loop) <= 0) return [];
+    const box = boundsOf(panel.loop);
+    const [wide, tall] = [(box.right - box.left) * scale, (box.bottom - box.top) * scale];
+    const room = textWidth(panel.name) + 10;
+    const turned = wide < room && tall >= room;
+    if ((turned ? wide : tall) < 18 || (turned ? tall : wide) < room) return [];
+    const middle = place({ x: (box.left + box.right) / 2, y: (box.top + box.bottom) / 2 });
+    return [{ type: 'text', role: 'label', x: middle.x + (turned ? 4.5 : 0), y: middle.y + (turned ? 0 : 4.5), text: panel.name, anchor: 'middle', of: panel.name, ...(turned ? { turned } : {}) }];
+  });
+}
+
+/** Size and scores in words, for those who hear the drawing. */
+export function altOf(piece: PieceFigure, options: Pick<ShowOptions, 'units' | 'grid'>): string {
+  const [first, ...rest] = piece.instructions;
+  const blank = first ? say(first, options).replace(/^Cut /, '') : '';
+  const scores = rest.filter((sentence) => typeof sentence[0] === 'string' && /^(Score|Along|Turn|Give)/.test(sentence[0])).map((sentence) => say(sentence, options));
+  return [`${piece.name}, ${blank}`, ...scores].join(' ');
+}

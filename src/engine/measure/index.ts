@@ -1,0 +1,5 @@
+export * from './read';
+export * from './round';
+export * from './show';
+export * from './tolerance';
+export * from './value';

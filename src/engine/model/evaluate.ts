@@ -1,0 +1,240 @@
+import { diagnose, kindName, type Formula, type Values } from '../formula';
+import { GRIDS, atLeast, isZero, moreThan, roundTo, same, showValue, snap } from '../measure';
+import { perimeterOf } from '../net';
+import { keyOf } from '../pattern/names';
+import { areaOfNet, makingOf } from '../piece';
+import type { Figures, FitFigure, KindName, MeasureFigure, Net, PieceFigure, SentenceFigure, Sizing, SizingProblem, Unit } from '../types';
+import { buildPiece } from './build';
+import type { CompiledFit, CompiledMeasure, Model } from './model';
+import { answerTo, isInUse, workOut, type BothValues } from './values';
+
+/** Values behind figures that were worked out, for live measures; figures made elsewhere have none. */
+const behind = new WeakMap<Figures, BothValues>();
+export const valuesBehind = (figures: Figures): BothValues | undefined => behind.get(figures);
+
+/**
+ * Everything that follows from a size: measures exact and as cut, pieces, fits judged as cut, departure. Never throws: what
+ * keeps the box from being made stands in `problems`, each with the measure to change and the nearest value that works.
+ */
+export function evaluate(model: Model, sizing: Sizing): Figures {
+  const { figures, values } = judge(model, sizing);
+  const problems = figures.problems.map((problem) => ({ ...problem, nearest: nearestThatWorks(model, sizing, figures, problem) }));
+  const whole = problems.length === 0 ? figures : { ...figures, problems };
+  behind.set(whole, values);
+  return whole;
+}
+
+/** A sizing with nothing answered: the usual size. */
+export function usualSizing(model: Model, units: Unit, grid: Sizing['grid']): Sizing {
+  return { values: {}, choices: Object.fromEntries(model.choices.map(({ def }) => [keyOf(def.name), def.usual])), units, grid };
+}
+
+function judge(model: Model, sizing: Sizing): { figures: Figures; values: BothValues } {
+  const values = workOut(model, sizing);
+  const problems: SizingProblem[] = [];
+  const measures = model.measures.map((measure) => measureFigure(measure, sizing, values));
+  for (const measure of model.measures) {
+    const problem = valueProblem(model, measure, sizing, values);
+    if (problem) problems.push(problem);
+  }
+  const pieces = problems.some((problem) => problem.code === 'cannot be worked out') ? [] : piecesOf(model, values, sizing, problems);
+  const fits = pieces.length === 0 ? [] : model.fits.flatMap((fit) => (isInUse(fit, values.cut) ? [fitFigure(fit, values)] : []));
+  for (const fit of fits) {
+    if (!fit.holds && !fit.advice) problems.push({ code: 'fit fails', measure: fit.change[0] ?? '', sentence: `${capital(fit.name)} fails: ${fit.otherwise}`, nearest: null });
+  }
+  const sizes = (list: Model['finished']['inside']) => list.map(({ def, formula }) => ({ name: def.name, mm: snap(formula.work(values.cut)) }));
+  return {
+    figures: {
+      sizing,
+      measures,
+      pieces,
+      fits,
+      finished: { inside: sizes(model.finished.inside), outside: sizes(model.finished.outside) },
+      departure: departureOf(model, values),
+      problems,
+    },
+    values,
+  };
+}
+
+// ── Measures ─────────────────────────────────────────────────────────────────────────────────────────────────────────
+
+function measureFigure(measure: CompiledMeasure, sizing: Sizing, { exact, cut }: BothValues): MeasureFigure {
+  const answer = answerTo(measure, sizing);
+  const asked = measure.from && measure.to ? { from: measure.from.work(exact), to: measure.to.work(exact), usual: measure.formula.work(exact), set: answer !== undefined } : {};
+  return {
+    name: measure.def.name,
+    kind: measure.def.kind ?? (kindName(measure.kind) as KindName),
+    asked: measure.def.ask !== undefined,
+    exact: snap(exact[measure.slot] as number),
+    cut: snap(cut[measure.slot] as number),
+    inUse: isInUse(measure, cut),
+    ...(measure.def.unit ? { unit: measure.def.unit } : {}),
+    ...asked,
+  };
+}
+
+/** Out of its range, or without a value at this size. */
+function valueProblem(model: Model, measure: CompiledMeasure, sizing: Sizing, { exact, cut }: BothValues): SizingProblem | null {
+  const { name } = measure.def;
+  const value = exact[measure.slot] as number;
+  if (!isInUse(measure, cut)) return null;
+  if (!Number.isFinite(value) || !Number.isFinite(cut[measure.slot] as number)) {
+    const at = Number.isFinite(value) ? cut : exact;
+    // What it needs fails first and says so itself.
+    if (measure.formula.uses.some((need) => !Number.isFinite(at[model.scope.slot(need)] as number))) return null;
+    const why = diagnose(measure.formula, model.scope, at, { units: sizing.units, grid: sizing.grid });
+    return { code: 'cannot be worked out', measure: askedBehind(model, measure) ?? name, sentence: `“${name}” cannot be worked out at this size: ${why}.`, nearest: null };
+  }
+  if (!measure.from || !measure.to) return null;
+  const [from, to] = [measure.from.work(exact), measure.to.work(exact)];
+  const says = (mm: number) => showValue(mm, measure.def.kind ?? 'length', { ...sizing, ...(measure.def.unit ? { unit: measure.def.unit } : {}) }).text;
+  if (Number.isFinite(from) && !atLeast(value, from)) {
+    return { code: 'below range', measure: name, sentence: `${capital(name)} is ${says(value)}; here it must be at least ${says(from)}.`, nearest: null };
+  }
+  if (Number.isFinite(to) && !atLeast(to, value)) {
+    return { code: 'above range', measure: name, sentence: `${capital(name)} is ${says(value)}; here it can be at most ${says(to)}.`, nearest: null };
+  }
+  return null;
+}
+
+/** The first asked measure that a worked one depends on, directly or through others. */
+function askedBehind(model: Model, measure: CompiledMeasure): string | null {
+  const seen = new Set<string>();
+  const queue = [...measure.formula.uses];
+  for (let name = queue.shift(); name !== undefined; name = queue.shift()) {
+    if (seen.has(name)) continue;
+    seen.add(name);
+    const found = model.measures.find((one) => keyOf(one.def.name) === name);
+    if (found?.def.ask) return found.def.name;
+    queue.push(...(found?.formula.uses ?? []));
+  }
+  return null;
+}
+
+// ── Pieces ───────────────────────────────────────────────────────────────────────────────────────────────────────────
+
+function piecesOf(model: Model, { exact, cut }: BothValues, sizing: Sizing, problems: SizingProblem[]): PieceFigure[] {
+  const thickness = thicknessOf(model, cut);
+  const figure = figureMaker(GRIDS[sizing.grid].step, thickness);
+  return model.pieces.flatMap((piece) => {
+    const count = Math.round(piece.count.work(cut));
+    if (!isInUse(piece, cut) || count < 1) return [];
+    const { grid, built } = buildPiece(piece, cut);
+    if (!built.ok) {
+      problems.push({ code: 'piece fails', measure: firstAskedOf(model, piece.columns.concat(piece.rows).map((track) => track.size)), sentence: `The ${piece.def.name.toLowerCase()} cannot be cut at this size: ${built.reason}.`, nearest: null });
+      return [];
+    }
+    const { net } = built;
+    const [area, perimeter] = [areaOfNet(net), perimeterOf(net.outline) + net.holes.reduce((sum, hole) => sum + perimeterOf(hole), 0)];
+    for (const { slot, of } of piece.drawn) {
+      const value = of === 'area' ? area : of === 'perimeter' ? perimeter : (net.edges[of.edge] ?? NaN);
+      cut[slot] = value;
+      exact[slot] = value;
+    }
+    const scores = scoresOf(net);
+    return [{
+      name: piece.def.name, count, stock: piece.def.stock, net, across: net.across, along: net.along, scores, thickness, area, perimeter,
+      instructions: makingOf({ net, grid, def: piece.def, scores, figure }),
+    }];
+  });
+}
+
+const firstAskedOf = (model: Model, formulas: readonly Formula[]): string =>
+  model.measures.find((measure) => measure.def.ask && formulas.some((formula) => formula.uses.includes(keyOf(measure.def.name))))?.def.name ?? model.measures[0]?.def.name ?? '';
+
+function thicknessOf(model: Model, values: Values): number {
+  const value = model.scope.has('card thickness') ? (values[model.scope.slot('card thickness')] as number) : 0;
+  return Number.isFinite(value) ? value : 0;
+}
+
+/** Positions of straight score lines from the left and from the top edge, each once. */
+export function scoresOf(net: Net): PieceFigure['scores'] {
+  const upright: number[] = [];
+  const level: number[] = [];
+  for (const { curve, angle } of net.folds) {
+    if (curve.type !== 'line' || isZero(angle)) continue;
+    if (same(curve.from.x, curve.to.x)) upright.push(snap(curve.from.x));
+    else if (same(curve.from.y, curve.to.y)) level.push(snap(curve.from.y));
+  }
+  const sorted = (list: number[]) => list.sort((a, b) => a - b).filter((value, index, all) => index === 0 || !same(value, all[index - 1] as number));
+  return { across: sorted(upright), along: sorted(level) };
+}
+
+/** A position that is off the grid only by whole card thicknesses is said as the grid value and those: no ruler shows 0.3 mm. */
+export function figureMaker(step: number, thickness: number): (mm: number, bare?: boolean) => SentenceFigure {
+  return (mm, bare) => {
+    const plain = { mm: snap(mm), ...(bare ? { bare } : {}) };
+    if (isZero(thickness) || same(roundTo(mm, step, 'nearest'), mm)) return plain;
+    for (const cards of [1, -1, 2, -2, 3, -3, 4, -4]) {
+      const rest = snap(mm - cards * thickness);
+      if (same(roundTo(rest, step, 'nearest'), rest)) return { ...plain, mm: rest, cards };
+    }
+    return plain;
+  };
+}
+
+/** The largest difference that cutting to the grid makes to any column or row. */
+function departureOf(model: Model, { exact, cut }: BothValues): Figures['departure'] {
+  let worst = { mm: 0, where: '' };
+  for (const piece of model.pieces) {
+    if (!isInUse(piece, cut)) continue;
+    for (const track of [...piece.columns, ...piece.rows]) {
+      if (!isInUse(track, cut) || !isInUse(track, exact)) continue;
+      const mm = snap(track.size.work(cut) - track.size.work(exact));
+      if (Math.abs(mm) > Math.abs(worst.mm)) worst = { mm, where: `${piece.def.name}, ${track.name}` };
+    }
+  }
+  return worst;
+}
+
+// ── Fits ─────────────────────────────────────────────────────────────────────────────────────────────────────────────
+
+function fitFigure({ def, left, right, tolerance }: CompiledFit, { cut }: BothValues): FitFigure {
+  const [a, b] = [left.work(cut), right.work(cut)];
+  const allowed = tolerance?.work(cut) ?? 0;
+  const gap = { 'at least': a - b, 'more than': a - b, 'at most': b - a, 'less than': b - a, 'same as': allowed - Math.abs(a - b) }[def.is];
+  const slack = def.is === 'same as' ? gap : gap + allowed;
+  const holds = Number.isFinite(slack) && (def.is === 'more than' || def.is === 'less than' ? moreThan(slack, 0) : atLeast(slack, 0));
+  return {
+    name: def.name,
+    holds,
+    gap: Number.isFinite(gap) ? snap(def.is === 'same as' ? a - b : gap) : null,
+    is: def.is,
+    advice: def.advice ?? false,
+    otherwise: def.otherwise,
+    change: def.change ?? [],
+  };
+}
+
+// ── The nearest size that works ──────────────────────────────────────────────────────────────────────────────────────
+
+/** Steps of the grid to try outwards from the asked value; the first few one by one, then in growing strides. */
+const STRIDES = [...Array.from({ length: 16 }, (_, index) => index + 1), 20, 24, 32, 40, 48, 64, 80, 96, 128, 160, 192, 256, 384, 512, 768, 1024];
+
+/** The value of the problem's measure nearest to the asked one at which nothing fails; null when none in its range does. */
+function nearestThatWorks(model: Model, sizing: Sizing, figures: Figures, problem: SizingProblem): number | null {
+  const figure = figures.measures.find((one) => keyOf(one.name) === keyOf(problem.measure));
+  if (!figure?.asked || figure.from === undefined || figure.to === undefined) return null;
+  const step = figure.kind === 'length' ? GRIDS[sizing.grid].step : 1;
+  const [low, high] = [roundTo(figure.from, step, 'up'), roundTo(figure.to, step, 'down')];
+  const alone = (value: number): Sizing => ({ ...sizing, values: { ...sizing.values, [keyOf(figure.name)]: value } });
+  const works = (value: number): boolean => {
+    const { problems } = judge(model, alone(value)).figures;
+    // Problems of other measures that were there before are not this one's to mend.
+    return problems.every((other) => keyOf(other.measure) !== keyOf(problem.measure) && figures.problems.some((before) => before.sentence === other.sentence));
+  };
+  if (problem.code === 'below range' && works(low)) return low;
+  if (problem.code === 'above range' && works(high)) return high;
+  const start = roundTo(Math.min(Math.max(figure.exact, low), high), step, 'nearest');
+  const inRange = (value: number) => atLeast(value, low) && atLeast(high, value);
+  const tried = [start, ...STRIDES.flatMap((stride) => [snap(start - stride * step), snap(start + stride * step)])].filter(inRange);
+  const found = tried.find(works);
+  if (found === undefined) return null;
+  // Strides skip values: walk back towards the asked one while it still works.
+  let nearest = found;
+  for (let closer = snap(nearest + (nearest < start ? step : -step)); nearest !== start && inRange(closer) && works(closer) && Math.abs(closer - start) < Math.abs(nearest - start); closer = snap(closer + (closer < start ? step : -step))) nearest = closer;
+  return nearest;
+}
+
+const capital = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);

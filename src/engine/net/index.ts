@@ -1,0 +1,3 @@
+export * from './assemble';
+export * from './crossing';
+export * from './curve';

@@ -1,0 +1,352 @@
+import { atLeast, isZero, moreThan, snap } from '../measure';
+import { arcThrough, areaOf, assemble, lengthOf, line, pointAt, selfCrossing, type Joint, type LoosePanel } from '../net';
+import type { Arc, Curve, Loop, Net, Panel, Point, Side } from '../types';
+import { OPPOSITE, SIDES, type Cell } from './cells';
+
+/** A grid piece with every formula worked out: lengths in mm, angles in degrees. Tracks of nothing are already left out. */
+export interface GridPiece {
+  readonly columns: readonly number[];
+  readonly rows: readonly number[];
+  readonly cells: readonly (readonly Cell[])[];
+  readonly lines: readonly { readonly between: readonly [string, string]; readonly is: 'valley' | 'mountain' | 'slit' | 'nothing'; readonly angle: number }[];
+  readonly tabs: ReadonlyMap<string, TabShape>;
+  readonly caps: ReadonlyMap<string, number>;
+  readonly corners: readonly { readonly cell: string; readonly corner: string; readonly radius: number }[];
+  readonly notches: readonly { readonly cell: string; readonly side: Side; readonly at: number; readonly radius: number }[];
+  readonly slots: readonly { readonly cell: string; readonly across: number; readonly along: number; readonly width: number; readonly height: number }[];
+  readonly rolls: ReadonlyMap<string, { readonly radius: number }>;
+  readonly edges: readonly { readonly name: string; readonly cell: string; readonly side: Side }[];
+}
+export interface TabShape {
+  readonly depth: number | null;
+  readonly ends: Readonly<Partial<Record<Side, EndShape>>>;
+  readonly teeth: number;
+  readonly toothAngle: number;
+}
+export interface EndShape {
+  readonly from: number;
+  /** How much narrower at the tip: millimetres, or degrees off square. */
+  readonly by: { readonly mm: number } | { readonly degrees: number };
+}
+/** A net, or the reason why these sizes make nonsense: the end of "Floor: …". */
+export type Built = { readonly ok: true; readonly net: Net } | { readonly ok: false; readonly reason: string };
+
+interface Sided {
+  readonly side: Side | 'inner';
+  readonly curve: Curve;
+}
+type Outlined = readonly Sided[];
+
+/**
+ * Columns and rows of card to a flat net. Panels are rectangles; a tab is hinged on one neighbour and cut free elsewhere;
+ * a cap is the circular segment over its neighbour's edge. Two panels side by side fold (valley, 90°) unless a line says otherwise.
+ */
+export function buildGrid(piece: GridPiece): Built {
+  const negative = [...piece.columns, ...piece.rows].find((size) => !atLeast(size, 0) || !Number.isFinite(size));
+  if (negative !== undefined) return { ok: false, reason: 'a column or row comes out smaller than nothing' };
+  const xs = running(piece.columns);
+  const ys = running(piece.rows);
+  const builder = new GridBuilder(piece, xs, ys);
+  const failure = builder.build();
+  if (failure !== null) return { ok: false, reason: failure };
+  return builder.net();
+}
+
+const running = (sizes: readonly number[]): readonly number[] => sizes.reduce((stops, size) => [...stops, snap((stops.at(-1) as number) + size)], [0]);
+
+class GridBuilder {
+  private readonly panels: LoosePanel[] = [];
+  private readonly hinges = new Map<string, string>();
+  private readonly sides = new Map<string, Outlined>();
+  private readonly cellOfPanel = new Map<string, Cell>();
+  private readonly holes: Loop[] = [];
+
+  constructor(
+    private readonly piece: GridPiece,
+    private readonly xs: readonly number[],
+    private readonly ys: readonly number[],
+  ) {}
+
+  build(): string | null {
+    const kept = this.piece.cells.flat().filter((cell) => cell.kind !== 'away');
+    // Caps before the tabs that hang on them.
+    for (const cell of [...kept].sort((a, b) => Number(a.kind === 'tab') - Number(b.kind === 'tab'))) {
+      const failure = this.add(cell);
+      if (failure !== null) return failure;
+    }
+    for (const slot of this.piece.slots) {
+      const cell = kept.find((one) => one.name === slot.cell);
+      if (cell) {
+        const failure = this.cutSlot(cell, slot);
+        if (failure !== null) return failure;
+      }
+    }
+    return null;
+  }
+
+  net(): Built {
+    const assembled = assemble(this.panels, (a, b) => this.joint(a, b));
+    if (assembled.outline.length === 0) return { ok: false, reason: 'nothing is left of it' };
+    if (assembled.parts > 1) return { ok: false, reason: `it falls apart into ${assembled.parts} parts` };
+    const crossing = selfCrossing(assembled.outline);
+    if (crossing) return { ok: false, reason: 'its outline crosses itself' };
+    const away = this.piece.cells.flat().filter((cell) => cell.kind === 'away').map((cell) => {
+      const { left, top, right, bottom } = this.box(cell);
+      return { x: left, y: top, across: right - left, along: bottom - top };
+    });
+    const edges = Object.fromEntries(
+      this.piece.edges.map(({ name, cell, side }) => [name, (this.sides.get(cell) ?? []).filter((edge) => edge.side === side).reduce((sum, edge) => sum + lengthOf(edge.curve), 0)]),
+    );
+    return {
+      ok: true,
+      net: {
+        outline: assembled.outline,
+        holes: [...assembled.holes, ...this.holes],
+        panels: this.panels.map(({ name, role, loop, roll }) => ({ name, role, loop, ...(roll ? { roll } : {}) })),
+        folds: assembled.folds,
+        joins: assembled.joins,
+        slits: assembled.slits,
+        away,
+        across: this.xs.at(-1) as number,
+        along: this.ys.at(-1) as number,
+        edges,
+        columns: this.xs,
+        rows: this.ys,
+      },
+    };
+  }
+
+  private box(cell: Cell) {
+    return {
+      left: this.xs[cell.column] as number,
+      right: this.xs[cell.column + 1] as number,
+      top: this.ys[cell.row] as number,
+      bottom: this.ys[cell.row + 1] as number,
+    };
+  }
+  private neighbour(cell: Cell, side: Side): Cell | undefined {
+    const [dr, dc] = { top: [-1, 0], right: [0, 1], bottom: [1, 0], left: [0, -1] }[side] as [number, number];
+    return this.piece.cells[cell.row + dr]?.[cell.column + dc];
+  }
+  /** The side on which a tab or cap hangs. */
+  private hingeSide(cell: Cell): Side | null {
+    const touching = SIDES.filter((side) => {
+      const other = this.neighbour(cell, side);
+      return other !== undefined && other.kind !== 'away' && (cell.on === null ? other.kind !== 'tab' : other.name === cell.on);
+    });
+    return touching.length === 1 ? (touching[0] as Side) : cell.on === null ? null : (touching[0] ?? null);
+  }
+
+  private add(cell: Cell): string | null {
+    if (cell.kind === 'panel') return this.addPanel(cell);
+    const side = this.hingeSide(cell);
+    if (side === null) return `“${cell.name}” hangs on nothing`;
+    const host = this.neighbour(cell, side) as Cell;
+    return cell.kind === 'cap' ? this.addCap(cell, side, host) : this.addTab(cell, side, host);
+  }
+  private push(cell: Cell, name: string, host: Cell | null, outlined: Outlined): void {
+    const roll = this.piece.rolls.get(cell.name);
+    const role: Panel['role'] = cell.kind === 'tab' ? 'tab' : 'panel';
+    this.panels.push({ name, role, loop: outlined.map((edge) => edge.curve), ...(roll ? { roll: { ...roll, axis: 'along' as const } } : {}) });
+    this.cellOfPanel.set(name, cell);
+    this.sides.set(name, outlined);
+    if (host) this.hinges.set(name, host.name);
+  }
+
+  private addPanel(cell: Cell): string | null {
+    const corners = cornersOf(this.box(cell));
+    let edges: Sided[] = SIDES.map((side) => ({ side, curve: line(...endsOf(corners, side)) }));
+    for (const { corner, radius } of this.piece.corners.filter((one) => one.cell === cell.name && moreThan(one.radius, 0))) {
+      const rounded = roundCorner(edges, corner, radius);
+      if (rounded === null) return `a corner radius is larger than “${cell.name}” allows`;
+      edges = rounded;
+    }
+    for (const notch of this.piece.notches.filter((one) => one.cell === cell.name && moreThan(one.radius, 0))) {
+      const notched = cutNotch(edges, notch);
+      if (notched === null) return `a notch does not fit on the ${notch.side} of “${cell.name}”`;
+      edges = notched;
+    }
+    this.push(cell, cell.name, null, edges);
+    return null;
+  }
+
+  /** The circular segment over the host's edge: chord on the hinge, arc away from it. */
+  private addCap(cell: Cell, side: Side, host: Cell): string | null {
+    const radius = this.piece.caps.get(cell.name) ?? NaN;
+    const [from, to] = endsOf(cornersOf(this.box(cell)), side);
+    const arc = arcThrough(to, from, radius, true);
+    if (!arc) return `the arc of “${cell.name}” does not reach across its chord`;
+    this.push(cell, cell.name, host, [{ side, curve: line(from, to) }, { side: OPPOSITE[side], curve: arc }]);
+    return null;
+  }
+
+  private addTab(cell: Cell, side: Side, host: Cell): string | null {
+    const shape = this.piece.tabs.get(cell.name) ?? { depth: null, ends: {}, teeth: 1, toothAngle: 0 };
+    const box = this.box(cell);
+    const full = side === 'top' || side === 'bottom' ? box.bottom - box.top : box.right - box.left;
+    const depth = shape.depth === null ? full : shape.depth;
+    if (!moreThan(depth, 0)) return null;
+    if (!atLeast(full, depth)) return `“${cell.name}” is deeper than its place`;
+    const hostArc = host.kind === 'cap' ? (this.sides.get(host.name)?.find((edge) => edge.curve.type === 'arc')?.curve as Arc | undefined) : undefined;
+    if (hostArc) return this.addArcTeeth(cell, host, hostArc, depth, shape);
+    return this.addStraightTab(cell, side, host, depth, shape);
+  }
+
+  /** A tab along a straight hinge, cut into teeth when asked. Works in its own frame: u along the hinge, v out from it. */
+  private addStraightTab(cell: Cell, side: Side, host: Cell, depth: number, shape: TabShape): string | null {
+    const [start, end] = endsOf(cornersOf(this.box(cell)), side);
+    const length = Math.hypot(end.x - start.x, end.y - start.y);
+    const along = { x: (end.x - start.x) / length, y: (end.y - start.y) / length };
+    // Loops run clockwise on screen, so the inside of the tab lies to the right of its hinge side, and out is away from the host.
+    const out = { x: -along.y, y: along.x };
+    const place = (u: number, v: number): Point => ({ x: snap(start.x + along.x * u + out.x * v), y: snap(start.y + along.y * u + out.y * v) });
+    const [firstSide, lastSide] = endSides(side);
+    const [first, last] = [shape.ends[firstSide], shape.ends[lastSide]];
+    const [from, to] = [first?.from ?? 0, length - (last?.from ?? 0)];
+    if (!moreThan(to, from)) return `“${cell.name}” has no length along its fold`;
+    const inset = (end: EndShape | undefined) => (end === undefined ? 0 : 'mm' in end.by ? end.by.mm : depth * Math.tan((end.by.degrees * Math.PI) / 180));
+    const teeth = Math.max(1, Math.round(shape.teeth));
+    const pitch = (to - from) / teeth;
+    const give = teeth > 1 ? depth * Math.tan((shape.toothAngle * Math.PI) / 180) : 0;
+    for (let tooth = 0; tooth < teeth; tooth += 1) {
+      const [a, b] = [from + pitch * tooth, tooth === teeth - 1 ? to : from + pitch * (tooth + 1)];
+      let left = a + (tooth === 0 ? Math.max(inset(first), give) : give);
+      let right = b - (tooth === teeth - 1 ? Math.max(inset(last), give) : give);
+      if (teeth === 1 && moreThan(left, right)) [left, right] = meet(a, b, inset(first), inset(last));
+      if (moreThan(left, right)) return `the teeth of “${cell.name}” come to nothing`;
+      const tip = teeth === 1 && isZero(right - left) ? depth * ((b - a) / (inset(first) + inset(last))) : depth;
+      const corners = [place(a, 0), place(b, 0), place(right, tip), place(left, tip)].filter((point, index, all) => index === 0 || Math.hypot(point.x - (all[index - 1] as Point).x, point.y - (all[index - 1] as Point).y) > 1e-5);
+      const tags: readonly (Side | 'inner')[] = [side, lastSide, OPPOSITE[side], firstSide];
+      const outlined = corners.map((point, index) => ({ side: tags[index] ?? 'inner', curve: line(point, corners[(index + 1) % corners.length] as Point) }));
+      this.push(cell, teeth === 1 ? cell.name : `${cell.name} ${tooth + 1}`, host, outlined);
+    }
+    return null;
+  }
+
+  /** Teeth along the arc of a cap: root on the arc, sides that give way by the tooth angle, a straight tip. */
+  private addArcTeeth(cell: Cell, host: Cell, arc: Arc, depth: number, shape: TabShape): string | null {
+    const teeth = Math.max(1, Math.round(shape.teeth));
+    const give = depth * Math.tan((shape.toothAngle * Math.PI) / 180);
+    for (let tooth = 0; tooth < teeth; tooth += 1) {
+      // The host's arc runs clockwise; a tooth outside it runs back along its root.
+      const [from, to] = [pointAt(arc, (tooth + 1) / teeth), pointAt(arc, tooth / teeth)];
+      const middle = pointAt(arc, (tooth + 0.5) / teeth);
+      const out = { x: (middle.x - arc.centre.x) / arc.radius, y: (middle.y - arc.centre.y) / arc.radius };
+      const pitch = Math.hypot(to.x - from.x, to.y - from.y);
+      const along = { x: (to.x - from.x) / pitch, y: (to.y - from.y) / pitch };
+      const half = pitch / 2 - give;
+      if (!moreThan(half, 0)) return `the teeth of “${cell.name}” come to nothing`;
+      const tip = (u: number): Point => ({ x: middle.x + out.x * depth + along.x * u, y: middle.y + out.y * depth + along.y * u });
+      const root: Arc = { ...arc, from, to, clockwise: !arc.clockwise };
+      const [a, b] = [tip(half), tip(-half)];
+      this.push(cell, teeth === 1 ? cell.name : `${cell.name} ${tooth + 1}`, host, [
+        { side: 'inner', curve: root },
+        { side: 'inner', curve: line(to, a) },
+        { side: 'inner', curve: line(a, b) },
+        { side: 'inner', curve: line(b, from) },
+      ]);
+    }
+    this.splitHostArc(host, arc, teeth);
+    return null;
+  }
+  /** The cap's arc gets a corner at every tooth, so that roots and arc match. */
+  private splitHostArc(host: Cell, arc: Arc, teeth: number): void {
+    const index = this.panels.findIndex((panel) => panel.name === host.name);
+    const panel = this.panels[index] as LoosePanel;
+    const parts: readonly Curve[] = Array.from({ length: teeth }, (_, tooth): Arc => ({
+      ...arc,
+      from: tooth === 0 ? arc.from : pointAt(arc, tooth / teeth),
+      to: tooth === teeth - 1 ? arc.to : pointAt(arc, (tooth + 1) / teeth),
+    }));
+    this.panels[index] = { ...panel, loop: panel.loop.flatMap((curve) => (curve.type === 'arc' ? parts : [curve])) };
+  }
+
+  private cutSlot(cell: Cell, slot: GridPiece['slots'][number]): string | null {
+    const { left, top, right, bottom } = this.box(cell);
+    const [x, y] = [left + slot.across, top + slot.along];
+    const [a, b] = [{ x: x - slot.width / 2, y: y - slot.height / 2 }, { x: x + slot.width / 2, y: y + slot.height / 2 }];
+    if (!(moreThan(a.x, left) && moreThan(right, b.x) && moreThan(a.y, top) && moreThan(bottom, b.y))) return `a slot does not fit inside “${cell.name}”`;
+    const corners = [a, { x: a.x, y: b.y }, b, { x: b.x, y: a.y }];
+    this.holes.push(corners.map((point, index) => line(point, corners[(index + 1) % 4] as Point)));
+    return null;
+  }
+
+  private joint(a: string, b: string): Joint {
+    const [cellA, cellB] = [this.cellOfPanel.get(a) as Cell, this.cellOfPanel.get(b) as Cell];
+    const hinged = this.hinges.get(a) === cellB.name || this.hinges.get(b) === cellA.name;
+    const said = this.piece.lines.find(({ between: [p, q] }) => (p === cellA.name && q === cellB.name) || (p === cellB.name && q === cellA.name));
+    if (said) {
+      if (said.is === 'slit') return { is: 'slit' };
+      if (said.is === 'nothing') return { is: 'nothing' };
+      return { is: 'fold', kind: said.is, angle: said.angle };
+    }
+    const [kindA, kindB] = [cellA.kind, cellB.kind];
+    if (kindA === 'panel' && kindB === 'panel') return { is: 'fold', kind: 'valley', angle: 90 };
+    if (!hinged) return { is: 'slit' };
+    return kindA === 'tab' || kindB === 'tab' ? { is: 'fold', kind: 'valley', angle: 90 } : { is: 'nothing' };
+  }
+}
+
+interface Corners {
+  readonly tl: Point;
+  readonly tr: Point;
+  readonly br: Point;
+  readonly bl: Point;
+}
+const cornersOf = (box: { left: number; top: number; right: number; bottom: number }): Corners => ({
+  tl: { x: box.left, y: box.top },
+  tr: { x: box.right, y: box.top },
+  br: { x: box.right, y: box.bottom },
+  bl: { x: box.left, y: box.bottom },
+});
+/** From where to where a side runs when the rectangle is walked clockwise. */
+function endsOf({ tl, tr, br, bl }: Corners, side: Side): [Point, Point] {
+  return { top: [tl, tr], right: [tr, br], bottom: [br, bl], left: [bl, tl] }[side] as [Point, Point];
+}
+/** The sides on which a hinge begins and ends, walked clockwise. */
+const endSides = (hinge: Side): readonly [Side, Side] => ({ top: ['left', 'right'], right: ['top', 'bottom'], bottom: ['right', 'left'], left: ['bottom', 'top'] } as const)[hinge];
+
+/** Two tapers that meet before the tip make a point there. */
+function meet(a: number, b: number, first: number, last: number): [number, number] {
+  const point = a + ((b - a) * first) / (first + last);
+  return [point, point];
+}
+
+const CORNER_SIDES: Readonly<Record<string, readonly [Side, Side]>> = {
+  'top left': ['left', 'top'],
+  'top right': ['top', 'right'],
+  'bottom right': ['right', 'bottom'],
+  'bottom left': ['bottom', 'left'],
+};
+function roundCorner(edges: readonly Sided[], corner: string, radius: number): Sided[] | null {
+  const [before, after] = CORNER_SIDES[corner] as readonly [Side, Side];
+  const into = edges.find((edge) => edge.side === before && edge.curve.type === 'line');
+  const outOf = edges.find((edge) => edge.side === after && edge.curve.type === 'line');
+  if (!into || !outOf || !atLeast(lengthOf(into.curve), radius) || !atLeast(lengthOf(outOf.curve), radius)) return null;
+  const from = pointAt(into.curve, 1 - radius / lengthOf(into.curve));
+  const to = pointAt(outOf.curve, radius / lengthOf(outOf.curve));
+  // The tangent arc of a square corner: chord r √2 over radius r.
+  const arc = arcThrough(from, to, radius, true);
+  if (!arc) return null;
+  return edges.flatMap((edge) => {
+    if (edge === into) return [{ ...edge, curve: line(edge.curve.from, from) }, { side: 'inner' as const, curve: arc }];
+    return edge === outOf ? [{ ...edge, curve: line(to, edge.curve.to) }] : [edge];
+  });
+}
+
+function cutNotch(edges: readonly Sided[], notch: GridPiece['notches'][number]): Sided[] | null {
+  const index = edges.findIndex((edge) => edge.side === notch.side && edge.curve.type === 'line');
+  const edge = edges[index];
+  if (!edge) return null;
+  const length = lengthOf(edge.curve);
+  // Positions run left to right and top to bottom; the bottom and left sides are walked the other way.
+  const at = notch.side === 'top' || notch.side === 'right' ? notch.at : length - notch.at;
+  if (!moreThan(at, notch.radius) || !moreThan(length, at + notch.radius)) return null;
+  const [from, to] = [pointAt(edge.curve, (at - notch.radius) / length), pointAt(edge.curve, (at + notch.radius) / length)];
+  const bite = arcThrough(from, to, notch.radius, false);
+  if (!bite) return null;
+  return edges.flatMap((one, i) => (i === index ? [{ ...one, curve: line(one.curve.from, from) }, { side: 'inner' as const, curve: bite }, { ...one, curve: line(to, one.curve.to) }] : [one]));
+}
+
+/** Card left of the blank after cutting, in square millimetres. */
+export const areaOfNet = (net: Net): number => areaOf(net.outline) - net.holes.reduce((sum, hole) => sum + Math.abs(areaOf(hole)), 0);

@@ -1,0 +1,3 @@
+export * from './cells';
+export * from './grid';
+export * from './words';

@@ -1,0 +1,169 @@
+import { pointAt, sweepOf } from '../net';
+import type { Axis, Curve, Net, Panel, Point } from '../types';
+import { cross, dot, minus, plus, times, turned, unit, vector, type Vector } from './vector';
+
+/** Where a flat panel lies: flat (x, y) is at `origin + x·across + y·along`; the inside of the box is on the side of `inside`. */
+export interface Frame {
+  readonly origin: Vector;
+  readonly across: Vector;
+  readonly along: Vector;
+}
+export interface FoldedPanel {
+  readonly name: string;
+  readonly role: Panel['role'];
+  readonly points: readonly Vector[];
+  readonly inside: Vector;
+  /** For each edge from point i to i + 1: a real edge of the card, not a seam inside a rolled or continued panel. */
+  readonly edges: readonly boolean[];
+}
+export interface FoldOptions {
+  readonly root: string;
+  readonly at: Vector;
+  readonly across: Axis;
+  readonly along: Axis;
+  /** Share of every fold's turn, 0 flat to 1 closed. */
+  readonly share?: number;
+}
+
+const AXES: Readonly<Record<Axis, Vector>> = {
+  '+x': vector(1, 0, 0), '-x': vector(-1, 0, 0), '+y': vector(0, 1, 0), '-y': vector(0, -1, 0), '+z': vector(0, 0, 1), '-z': vector(0, 0, -1),
+};
+export const axis = (name: Axis): Vector => AXES[name];
+export const insideOf = (frame: Frame): Vector => unit(cross(frame.along, frame.across));
+const place = (frame: Frame, point: Point): Vector => plus(frame.origin, plus(times(frame.across, point.x), times(frame.along, point.y)));
+
+/** A facet: a flat panel, or one strip of a rolled one. */
+interface Facet {
+  readonly name: string;
+  readonly of: Panel;
+  readonly points: readonly Point[];
+  readonly edges: readonly boolean[];
+}
+interface Link {
+  readonly a: number;
+  readonly b: number;
+  readonly from: Point;
+  readonly to: Point;
+  /** Degrees, valley positive. */
+  readonly turn: number;
+}
+
+/**
+ * Folds a net in space. The root panel is placed; every other panel turns about the fold it hangs on, as a tree from the
+ * root (folds that close a ring are met again by geometry, and tests check that). Rolled panels become narrow flat strips.
+ */
+export function foldNet(net: Net, options: FoldOptions): readonly FoldedPanel[] {
+  const share = options.share ?? 1;
+  const { facets, links } = facetsOf(net);
+  const root = facets.findIndex((facet) => facet.of.name === options.root);
+  const start = facets[root];
+  if (!start) return [];
+  const frames = new Map<number, Frame>([[root, rootFrame(start, options, share)]]);
+  const queue = [root];
+  for (let current = queue.shift(); current !== undefined; current = queue.shift()) {
+    for (const link of links) {
+      const other = link.a === current ? link.b : link.b === current ? link.a : -1;
+      if (other < 0 || frames.has(other)) continue;
+      frames.set(other, across(frames.get(current) as Frame, link, facets[other] as Facet, share));
+      queue.push(other);
+    }
+  }
+  return facets.flatMap((facet, index) => {
+    const frame = frames.get(index);
+    return frame ? [{ name: facet.of.name, role: facet.of.role, points: facet.points.map((point) => place(frame, point)), inside: insideOf(frame), edges: facet.edges }] : [];
+  });
+}
+
+/** A rolled root is placed by its chord: its first strip leans back by half the whole turn. */
+function rootFrame(start: Facet, { at, across: u, along: v }: FoldOptions, share: number): Frame {
+  const [acrossAxis, alongAxis] = [axis(u), axis(v)];
+  const roll = start.of.roll;
+  const box = boxOf(start.of.loop.map((curve) => curve.from));
+  let heading = acrossAxis;
+  if (roll) {
+    const turn = (((box.right - box.left) / roll.radius) * (1 - 1 / stripsOf(start.of))) * share;
+    const lean = dot(turned(acrossAxis, alongAxis, 0.1), cross(alongAxis, acrossAxis)) > 0 ? -1 : 1;
+    heading = turned(acrossAxis, alongAxis, (lean * turn) / 2);
+  }
+  return { origin: minus(at, plus(times(heading, box.left), times(alongAxis, box.top))), across: heading, along: alongAxis };
+}
+
+/** The frame beyond a fold: the same flat sheet turned about the fold's line, towards the inside for a valley. */
+function across(frame: Frame, link: Link, beyond: Facet, share: number): Frame {
+  if (link.turn === 0) return frame;
+  const [p, q] = [place(frame, link.from), place(frame, link.to)];
+  const direction = unit(minus(q, p));
+  const centre = middleOf(beyond.points);
+  const towards = minus(place(frame, centre), p);
+  const sign = dot(cross(direction, towards), insideOf(frame)) >= 0 ? 1 : -1;
+  const angle = ((sign * link.turn * Math.PI) / 180) * share;
+  const turn = (a: Vector) => turned(a, direction, angle);
+  return { origin: plus(p, turn(minus(frame.origin, p))), across: turn(frame.across), along: turn(frame.along) };
+}
+
+function facetsOf(net: Net): { readonly facets: readonly Facet[]; readonly links: readonly Link[] } {
+  const facets: Facet[] = [];
+  const links: Link[] = [];
+  const strips = new Map<string, readonly number[]>();
+  const joined = net.joins.map((join) => join.curve);
+  for (const panel of net.panels) {
+    const first = facets.length;
+    if (!panel.roll) {
+      facets.push(flatFacet(panel, joined));
+      strips.set(panel.name, [first]);
+      continue;
+    }
+    const box = boxOf(panel.loop.map((curve) => curve.from));
+    const count = stripsOf(panel);
+    const wide = (box.right - box.left) / count;
+    const turn = ((wide / panel.roll.radius) * 180) / Math.PI;
+    for (let index = 0; index < count; index += 1) {
+      const [l, r] = [box.left + wide * index, box.left + wide * (index + 1)];
+      const points = [{ x: l, y: box.top }, { x: r, y: box.top }, { x: r, y: box.bottom }, { x: l, y: box.bottom }];
+      facets.push({ name: `${panel.name}#${index}`, of: panel, points, edges: [true, index === count - 1, true, index === 0] });
+      if (index > 0) links.push({ a: first + index - 1, b: first + index, from: { x: l, y: box.top }, to: { x: l, y: box.bottom }, turn });
+    }
+    strips.set(panel.name, Array.from({ length: count }, (_, index) => first + index));
+  }
+  const facetAt = (name: string, curve: Curve): number => {
+    const all = strips.get(name) ?? [];
+    if (all.length <= 1) return all[0] ?? -1;
+    const x = (curve.from.x + curve.to.x) / 2;
+    return all.find((index) => x <= Math.max(...(facets[index] as Facet).points.map((point) => point.x))) ?? (all.at(-1) as number);
+  };
+  const link = (curve: Curve, [a, b]: readonly [string, string], turn: number) => links.push({ a: facetAt(a, curve), b: facetAt(b, curve), from: curve.from, to: curve.to, turn });
+  for (const fold of net.folds) link(fold.curve, fold.panels, fold.kind === 'valley' ? fold.angle : -fold.angle);
+  for (const join of net.joins) link(join.curve, join.panels, 0);
+  return { facets, links };
+}
+
+/** Arcs stay as fine as the panel's own corners plus a few points; seams to a continued panel are no edges. */
+function flatFacet(panel: Panel, joined: readonly Curve[]): Facet {
+  const points: Point[] = [];
+  const edges: boolean[] = [];
+  for (const curve of panel.loop) {
+    const seam = joined.some((other) => isSame(other, curve));
+    const count = curve.type === 'arc' ? Math.max(1, Math.ceil(((sweepOf(curve) * 180) / Math.PI) / 8)) : 1;
+    for (let index = 0; index < count; index += 1) {
+      points.push(index === 0 ? curve.from : pointAt(curve, index / count));
+      edges.push(!seam);
+    }
+  }
+  return { name: panel.name, of: panel, points, edges };
+}
+const near = (a: Point, b: Point): boolean => Math.hypot(a.x - b.x, a.y - b.y) < 1e-3;
+const isSame = (a: Curve, b: Curve): boolean => (near(a.from, b.from) && near(a.to, b.to)) || (near(a.from, b.to) && near(a.to, b.from));
+
+const stripsOf = (panel: Panel): number => {
+  const box = boxOf(panel.loop.map((curve) => curve.from));
+  const degrees = (((box.right - box.left) / (panel.roll?.radius ?? 1)) * 180) / Math.PI;
+  return Math.min(24, Math.max(6, Math.ceil(degrees / 6)));
+};
+const boxOf = (points: readonly Point[]) => {
+  const [xs, ys] = [points.map((point) => point.x), points.map((point) => point.y)];
+  return { left: Math.min(...xs), right: Math.max(...xs), top: Math.min(...ys), bottom: Math.max(...ys) };
+};
+const middleOf = (points: readonly Point[]): Point => {
+  const box = boxOf(points);
+  return { x: (box.left + box.right) / 2, y: (box.top + box.bottom) / 2 };
+};
