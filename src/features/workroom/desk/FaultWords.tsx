@@ -1,4 +1,5 @@
 import { explain, type Fault } from '@/engine';
+import { curedText } from './cured-text';
 
 export interface FaultWordsProps {
   readonly id?: string;
@@ -29,10 +30,4 @@ export function FaultWords({ id, faults, value, meanwhile, onCure }: FaultWordsP
       )}
     </div>
   );
-}
-
-/** The text with the fault's cure put in its place; null when it has none. */
-export function curedText(fault: Pick<Fault, 'span' | 'cure'>, value: string): string | null {
-  if (fault.cure === undefined || fault.span === undefined) return null;
-  return value.slice(0, fault.span.from) + fault.cure + value.slice(fault.span.to);
 }

@@ -1,7 +1,7 @@
 import { changeMeasure } from '@/features/projects/pattern-edits';
 import type { ProofItem } from '@/features/projects/proof';
 import type { DeskStore } from './desk-store';
-import { curedText } from './FaultWords';
+import { curedText } from './cured-text';
 
 /** The one-click cure of a proof item, where there is one: the nearest name put into a worked measure's formula. */
 export function cureFor(item: ProofItem, store: DeskStore): { readonly label: string; readonly apply: () => void } | null {
