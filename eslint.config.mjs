@@ -43,7 +43,16 @@ const directions = Object.entries(LOWER_THAN).map(([folder, folders]) => ({
 
 export default tseslint.config(
   {
-    ignores: ['dist/', '.astro/', '.data/', 'node_modules/', 'test-results/', 'playwright-report/', 'drizzle/', 'tests/architecture/breaches/'],
+    ignores: [
+      'dist/',
+      '.astro/',
+      '.data/',
+      'node_modules/',
+      'test-results/',
+      'playwright-report/',
+      'drizzle/',
+      'tests/architecture/breaches/',
+    ],
   },
   ...tseslint.configs.recommended,
   ...astro.configs['flat/recommended'],
@@ -55,7 +64,10 @@ export default tseslint.config(
       'prefer-const': 'error',
       'no-eval': 'error',
       'no-new-func': 'error',
-      '@typescript-eslint/consistent-type-imports': ['error', { fixStyle: 'inline-type-imports', disallowTypeAnnotations: false }],
+      '@typescript-eslint/consistent-type-imports': [
+        'error',
+        { fixStyle: 'inline-type-imports', disallowTypeAnnotations: false },
+      ],
       '@typescript-eslint/no-explicit-any': 'error',
       '@typescript-eslint/no-unused-vars': ['error', { argsIgnorePattern: '^_', varsIgnorePattern: '^_' }],
     },
@@ -70,8 +82,15 @@ export default tseslint.config(
       '@typescript-eslint/switch-exhaustiveness-check': ['error', { considerDefaultExhaustiveForUnions: true }],
     },
   },
-  { files: ['**/*.tsx', '**/use-*.ts'], plugins: { 'react-hooks': reactHooks }, rules: reactHooks.configs.recommended.rules },
-  { files: ['**/src/engine/**'], rules: { 'no-restricted-globals': ['error', 'window', 'document', 'process', 'fetch', 'Date', 'console'] } },
+  {
+    files: ['**/*.tsx', '**/use-*.ts'],
+    plugins: { 'react-hooks': reactHooks },
+    rules: reactHooks.configs.recommended.rules,
+  },
+  {
+    files: ['**/src/engine/**'],
+    rules: { 'no-restricted-globals': ['error', 'window', 'document', 'process', 'fetch', 'Date', 'console'] },
+  },
   ...directions,
   { files: ['**/src/pages/**', 'scripts/**'], rules: restrict(ENGINE_INSIDES) },
   // The script blocks of .astro files, which eslint-plugin-astro gives out as files of their own.

@@ -88,7 +88,8 @@ export function greet(): void {
   if (!config.smtpUrl) lines.push(`Mail goes nowhere but to ${config.siteUrl}/dev/mailbox`);
   if (isDemo()) {
     lines.push('', 'Demo sign-ins:');
-    for (const { role, email, password } of DEMO_PEOPLE) lines.push(`  ${role.padEnd(7)} ${email.padEnd(28)} ${password}`);
+    for (const { role, email, password } of DEMO_PEOPLE)
+      lines.push(`  ${role.padEnd(7)} ${email.padEnd(28)} ${password}`);
   }
   lines.push('', 'Ctrl-C stops it.');
   console.log(lines.join('\n'));

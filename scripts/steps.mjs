@@ -1,7 +1,17 @@
 /** What start, dev, build and test have in common. Node's own modules only: nothing may be installed yet. */
 import { spawn } from 'node:child_process';
 import { createHash } from 'node:crypto';
-import { accessSync, constants, existsSync, mkdirSync, readFileSync, readdirSync, rmSync, statSync, writeFileSync } from 'node:fs';
+import {
+  accessSync,
+  constants,
+  existsSync,
+  mkdirSync,
+  readFileSync,
+  readdirSync,
+  rmSync,
+  statSync,
+  writeFileSync,
+} from 'node:fs';
 import { createServer } from 'node:net';
 import { dirname, join, relative, resolve } from 'node:path';
 import { fileURLToPath } from 'node:url';
@@ -32,7 +42,9 @@ export function checkNode(version = process.versions.node) {
   const [major, minor] = needed.split('.').map(Number);
   const [hasMajor, hasMinor] = version.split('.').map(Number);
   if (hasMajor < major || (hasMajor === major && hasMinor < minor)) {
-    throw new Halt(`Foldwright needs Node ${needed} or newer and this is ${version}: install a newer one from nodejs.org.`);
+    throw new Halt(
+      `Foldwright needs Node ${needed} or newer and this is ${version}: install a newer one from nodejs.org.`,
+    );
   }
 }
 
@@ -86,7 +98,9 @@ export function checkDataFolder() {
     writeFileSync(probe, '');
     rmSync(probe);
   } catch (error) {
-    throw new Halt(`The data folder ${folder} cannot be written to (${error.code}): make it writable, or set DATA_DIR to another.`);
+    throw new Halt(
+      `The data folder ${folder} cannot be written to (${error.code}): make it writable, or set DATA_DIR to another.`,
+    );
   }
 }
 
@@ -106,7 +120,9 @@ export function portTrouble(error, port) {
   if (error.code === 'EADDRINUSE') return new Halt(`Port ${port} is taken: stop what runs there, or ${other}`);
   if (error.code === 'EACCES') return new Halt(`Port ${port} may not be used by this account: ${other}`);
   if (error.code === 'EADDRNOTAVAIL' || error.code === 'ENOTFOUND') {
-    return new Halt(`HOST is "${process.env.HOST}", which is no address of this machine: leave it out, or give 0.0.0.0 for all.`);
+    return new Halt(
+      `HOST is "${process.env.HOST}", which is no address of this machine: leave it out, or give 0.0.0.0 for all.`,
+    );
   }
   return error;
 }

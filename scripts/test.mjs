@@ -32,7 +32,11 @@ await run(async () => {
 async function unitTests(folder) {
   const file = join(folder, 'unit.json');
   const code = await spawned(process.execPath, [
-    'node_modules/vitest/vitest.mjs', 'run', '--reporter=default', '--reporter=json', `--outputFile.json=${file}`,
+    'node_modules/vitest/vitest.mjs',
+    'run',
+    '--reporter=default',
+    '--reporter=json',
+    `--outputFile.json=${file}`,
   ]);
   return tally('The unit, reference and server tests', code, file, (report) => ({
     passed: report.numPassedTests,
@@ -69,7 +73,8 @@ function tally(name, code, file, count) {
   if (!existsSync(file)) return broken(`${name} did not run: see above.`);
   const result = count(JSON.parse(readFileSync(file, 'utf8')));
   // A file that cannot be loaded has no tests to count.
-  if (code !== 0 && result.failed === 0) return { ...result, failed: 1, note: `${name} ended with an error: see above.` };
+  if (code !== 0 && result.failed === 0)
+    return { ...result, failed: 1, note: `${name} ended with an error: see above.` };
   if (result.passed === 0 && result.failed === 0) return { ...result, failed: 1, note: `${name}: there were none.` };
   return result;
 }

@@ -18,7 +18,8 @@ export const databaseFile = () => join(config.dataDir, 'foldwright.sqlite');
 /** Opens a database file, or `:memory:`, or a serialized database. Does not migrate. */
 export function openDatabase(file: string | Buffer): Database {
   if (typeof file === 'string' && file !== ':memory:') {
-    if (process.env.FOLDWRIGHT_BUILDING) throw new Error('The build opened the database: a page must not be prerendered from it.');
+    if (process.env.FOLDWRIGHT_BUILDING)
+      throw new Error('The build opened the database: a page must not be prerendered from it.');
     mkdirSync(dirname(file), { recursive: true });
   }
   const client = new Sqlite(file);

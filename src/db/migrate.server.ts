@@ -29,7 +29,9 @@ export function migrateDatabase(
   const done = appliedMigrations(database);
   const newest = known.at(-1)?.folderMillis ?? 0;
   if (done.some((at) => at > newest)) {
-    throw new Error('The data was written by a newer version of Foldwright: start that version, or restore an older copy.');
+    throw new Error(
+      'The data was written by a newer version of Foldwright: start that version, or restore an older copy.',
+    );
   }
   const pending = known.filter((migration) => migration.folderMillis > (done.at(-1) ?? 0)).length;
   if (pending === 0) return { applied: 0, backup: null };
@@ -45,7 +47,9 @@ export function migrateDatabase(
   const broken = client.pragma('foreign_key_check') as { table: string; parent: string }[];
   if (broken.length > 0) {
     const first = `${broken[0]?.table} → ${broken[0]?.parent}`;
-    throw new Error(`After migrating, ${broken.length} references lead nowhere (${first}). The copy made before: ${backup ?? 'none'}.`);
+    throw new Error(
+      `After migrating, ${broken.length} references lead nowhere (${first}). The copy made before: ${backup ?? 'none'}.`,
+    );
   }
   return { applied: pending, backup };
 }
@@ -62,7 +66,9 @@ function copyDatabase({ $client }: Database, folder: string): string {
   const file = join(folder, `before-migration-${new Date().toISOString().replace(/[:.]/g, '-')}.sqlite`);
   if (existsSync(file)) rmSync(file);
   $client.prepare('VACUUM INTO ?').run(file);
-  const copies = readdirSync(folder).filter((name) => name.startsWith('before-migration-')).sort();
+  const copies = readdirSync(folder)
+    .filter((name) => name.startsWith('before-migration-'))
+    .sort();
   for (const name of copies.slice(0, -KEPT_BACKUPS)) rmSync(join(folder, name));
   return file;
 }

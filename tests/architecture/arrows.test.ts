@@ -58,7 +58,9 @@ describe('the dependency check', () => {
       (done) => done.stdout,
       (failed: { stdout: string }) => failed.stdout,
     );
-    const report = JSON.parse(stdout) as { summary: { violations: { from: string; to: string; rule: { name: string } }[] } };
+    const report = JSON.parse(stdout) as {
+      summary: { violations: { from: string; to: string; rule: { name: string } }[] };
+    };
     violations = report.summary.violations.map(({ from, to, rule }) =>
       `${rule.name}: ${from} → ${to}`.replaceAll(`${BREACHES}/`, ''),
     );

@@ -20,7 +20,8 @@ function migrationsWith(sql: string): string {
   return folder;
 }
 
-const ADD_PERSON = "INSERT INTO user (id, email, email_key) VALUES ('u', 'ada@quilletlane.example', 'ada@quilletlane.example')";
+const ADD_PERSON =
+  "INSERT INTO user (id, email, email_key) VALUES ('u', 'ada@quilletlane.example', 'ada@quilletlane.example')";
 const ADD_ACCOUNT = "INSERT INTO account VALUES ('u', 'email', 'email', '1')";
 const REBUILD_USER = [
   'PRAGMA foreign_keys=OFF;',
@@ -103,8 +104,15 @@ describe('the database', () => {
   });
 
   it.each([
-    ['queued', true], ['leased', true], ['in_flight', true], ['unknown', true],
-    ['accepted', false], ['rejected', false], ['suppressed', false], ['cancelled', false], ['expired', false],
+    ['queued', true],
+    ['leased', true],
+    ['in_flight', true],
+    ['unknown', true],
+    ['accepted', false],
+    ['rejected', false],
+    ['suppressed', false],
+    ['cancelled', false],
+    ['expired', false],
   ])('a delivery that is %s may change: %s', (state, may) => {
     testDatabase();
     sqlite().exec(ADD_PERSON);

@@ -18,8 +18,12 @@ describe('npm run admin', () => {
   it('makes an admin in an empty data folder and shows the password once', async () => {
     const { code, stdout, stderr } = await admin('create-admin', 'Ada@Boxes.Example', '--name', 'Ada');
     expect([code, stderr]).toEqual([0, '']);
-    expect(stdout).toMatch(/^Ada@Boxes\.Example is an admin and can sign in at http:\/\/localhost:4321\/sign-in\.\nThe password, shown this once: \S{20}\n$/);
-    const people = openDatabase(join(folder, 'foldwright.sqlite')).$client.prepare('SELECT name, email_key, role FROM user').all();
+    expect(stdout).toMatch(
+      /^Ada@Boxes\.Example is an admin and can sign in at http:\/\/localhost:4321\/sign-in\.\nThe password, shown this once: \S{20}\n$/,
+    );
+    const people = openDatabase(join(folder, 'foldwright.sqlite'))
+      .$client.prepare('SELECT name, email_key, role FROM user')
+      .all();
     expect(people).toEqual([{ name: 'Ada', email_key: 'ada@boxes.example', role: 'admin' }]);
   });
 
@@ -27,7 +31,10 @@ describe('npm run admin', () => {
     [['create-admin', 'ada@boxes.example'], 'Somebody has an account with ada@boxes.example.\n'],
     [['create-admin', 'nobody'], '"nobody" is not an e-mail address.\n'],
     [['create-admin'], 'How it is called: npm run admin -- create-admin <email> [--name <name>]\n'],
-    [['remove-admin', 'ada@boxes.example'], 'How it is called: npm run admin -- create-admin <email> [--name <name>]\n'],
+    [
+      ['remove-admin', 'ada@boxes.example'],
+      'How it is called: npm run admin -- create-admin <email> [--name <name>]\n',
+    ],
   ])('refuses %j with one sentence and exit code 2', async (args, sentence) => {
     expect(await admin(...args)).toEqual({ code: 2, stdout: '', stderr: sentence });
   });

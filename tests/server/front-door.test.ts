@@ -104,7 +104,10 @@ describe('forwarding headers', () => {
   });
 
   it('skip further trusted proxies on the way to the client', async () => {
-    expect(await heard(['loopback', '10.0.0.7'])).toEqual({ 'x-forwarded-for': '6.6.6.6', 'x-forwarded-proto': 'https' });
+    expect(await heard(['loopback', '10.0.0.7'])).toEqual({
+      'x-forwarded-for': '6.6.6.6',
+      'x-forwarded-proto': 'https',
+    });
   });
 });
 
@@ -119,13 +122,17 @@ describe('a body', () => {
     const ask = await behindDoor(readAll);
     const answer = await ask({ path, method: 'POST', body: Buffer.alloc(bytes) }).catch((error: Error) => error);
     // A refusal may close the connection while the client still sends.
-    if (answer instanceof Error) expect([status, answer.message]).toEqual([413, expect.stringMatching(/EPIPE|ECONNRESET|hang up/)]);
+    if (answer instanceof Error)
+      expect([status, answer.message]).toEqual([413, expect.stringMatching(/EPIPE|ECONNRESET|hang up/)]);
     else expect(answer.status).toBe(status);
   });
 
   it('says how much may come when too much is announced', async () => {
     const ask = await behindDoor(readAll);
-    const { status, body } = await ask({ method: 'POST', headers: { 'content-length': String(MB + 1), expect: '100-continue' } });
+    const { status, body } = await ask({
+      method: 'POST',
+      headers: { 'content-length': String(MB + 1), expect: '100-continue' },
+    });
     expect([status, body.toString()]).toEqual([413, 'That is too much to take in: 1 MB at most.\n']);
   });
 
@@ -133,7 +140,9 @@ describe('a body', () => {
     const ask = await behindDoor(readAll);
     const small = await ask({ method: 'POST', body: Buffer.alloc(MB), chunked: true });
     expect(small.body.toString()).toBe(String(MB));
-    const answer = await ask({ method: 'POST', body: Buffer.alloc(3 * MB), chunked: true }).catch((error: Error) => error);
+    const answer = await ask({ method: 'POST', body: Buffer.alloc(3 * MB), chunked: true }).catch(
+      (error: Error) => error,
+    );
     expect(answer instanceof Error ? 413 : answer.status).toBe(413);
   });
 });
@@ -177,7 +186,8 @@ describe('headers', () => {
   });
 
   it('let nothing load into a drawing that is opened by itself', async () => {
-    const drawing: RequestListener = (_req, res) => res.writeHead(200, { 'content-type': 'image/svg+xml' }).end('<svg/>');
+    const drawing: RequestListener = (_req, res) =>
+      res.writeHead(200, { 'content-type': 'image/svg+xml' }).end('<svg/>');
     const { headers } = await (await behindDoor(drawing))();
     expect(headers['content-security-policy']).toContain("default-src 'none'");
   });
@@ -204,7 +214,8 @@ describe('compression', () => {
   });
 
   it('leaves an event stream alone, which must not wait', async () => {
-    const events: RequestListener = (_req, res) => res.writeHead(200, { 'content-type': 'text/event-stream' }).end(text);
+    const events: RequestListener = (_req, res) =>
+      res.writeHead(200, { 'content-type': 'text/event-stream' }).end(text);
     const { headers } = await (await behindDoor(events))({ headers: { 'accept-encoding': 'br' } });
     expect(headers['content-encoding']).toBeUndefined();
   });

@@ -7,7 +7,8 @@ const { scripts } = JSON.parse(read('package.json')) as { scripts: Record<string
 
 describe('README.md', () => {
   it.each(DEMO_PEOPLE)('gives the demo sign-in of the $role', ({ role, email, password }) => {
-    expect(read('README.md')).toContain(`| ${role} | ${email} | ${password} |`);
+    const rows = read('README.md').split('\n');
+    expect(rows.map((row) => row.split(/ *\| */).slice(1, -1))).toContainEqual([role, email, password]);
   });
 
   it('explains every setting that is read from the environment', () => {

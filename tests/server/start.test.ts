@@ -38,7 +38,9 @@ describe('starting', () => {
     const { code, output } = await start({ PORT: String(port), HOST: '' });
     other.close();
     expect(code).toBe(1);
-    expect(output).toMatch(new RegExp(`^Port ${port} is taken: stop what runs there, or start with another: PORT=\\d+ npm start\n$`));
+    expect(output).toMatch(
+      new RegExp(`^Port ${port} is taken: stop what runs there, or start with another: PORT=\\d+ npm start\n$`),
+    );
   });
 
   it('says in one sentence that an address is not of this machine', () => {

@@ -25,14 +25,19 @@ export function frontDoor(handler: RequestListener, options: FrontDoorOptions): 
       const name = /^[\w.:[\]-]{1,255}$/.test(host) ? host : 'another name';
       return refuse(res, 421, `This site does not answer to ${name}: its owner can add that to ALLOWED_HOSTS.`);
     }
-    if (!limitBody(req, res, (max) => refuse(res, 413, `That is too much to take in: ${max / 2 ** 20} MB at most.`))) return;
+    if (!limitBody(req, res, (max) => refuse(res, 413, `That is too much to take in: ${max / 2 ** 20} MB at most.`)))
+      return;
     compress(req, res, () => handler(req, res));
   };
 }
 
 function refuse(res: ServerResponse, status: number, sentence: string): void {
   if (res.headersSent) return void res.destroy();
-  res.writeHead(status, { 'content-type': 'text/plain; charset=utf-8', 'cache-control': 'no-store', connection: 'close' });
+  res.writeHead(status, {
+    'content-type': 'text/plain; charset=utf-8',
+    'cache-control': 'no-store',
+    connection: 'close',
+  });
   res.end(`${sentence}\n`);
 }
 

@@ -21,7 +21,10 @@ export function addSecurityHeaders(res: ServerResponse, { https }: { https: bool
   const policy = String(res.getHeader('content-security-policy') ?? (/html|xml/.test(type) ? PLAIN_DOCUMENT : ''));
   // A policy in a page's <meta> cannot say this, and Astro does not.
   if (!policy.includes('frame-ancestors')) {
-    res.setHeader('content-security-policy', `${policy}${policy ? '; ' : ''}frame-ancestors 'none'`.replace(/;; /, '; '));
+    res.setHeader(
+      'content-security-policy',
+      `${policy}${policy ? '; ' : ''}frame-ancestors 'none'`.replace(/;; /, '; '),
+    );
     res.setHeader('x-frame-options', 'DENY');
   }
   if (type.startsWith('text/html') && !res.hasHeader('cache-control')) {

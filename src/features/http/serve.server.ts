@@ -11,7 +11,10 @@ export interface Serving {
 const SECOND = 1000;
 
 /** Listens, with the front door before the handler; rejects with the socket's own error (`EADDRINUSE`…) when it cannot. */
-export async function serve(listener: RequestListener, { port, host }: { port: number; host: string }): Promise<Serving> {
+export async function serve(
+  listener: RequestListener,
+  { port, host }: { port: number; host: string },
+): Promise<Serving> {
   const open = new Set<ServerResponse>();
   const server = createServer((req, res) => {
     res.on('close', () => open.delete(res));
