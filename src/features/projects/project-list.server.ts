@@ -1,7 +1,7 @@
 import { and, desc, eq, isNull, sql } from 'drizzle-orm';
 import { db } from '@/db/client.server';
 import { editions, projects, users } from '@/db/schema';
-import { compilePattern, drawFolded, drawPiece, evaluate, show, type Figures, type Model, type PieceFigure } from '@/engine';
+import { compilePattern, drawFolded, drawPiece, evaluate, show, type Figures, type GridId, type Model, type PieceFigure, type Unit } from '@/engine';
 import { drawingSvg } from '@/exports/svg/drawing';
 import type { ProjectList, ProjectSummary } from './project';
 import { differenceWords, stageOf } from './project-stage';
@@ -10,7 +10,7 @@ import { blocking, proofList } from './proof';
 
 const MM_AN_INCH = 25.4;
 /** The list's flat pictures: never larger than this, nor than ten pixels an inch. */
-const FLAT = { width: 148, height: 84, pixelsAnInch: 10, most: 2 } as const;
+const FLAT = { width: 148, height: 84, pixelsAnInch: 10, most: 2, inset: 6 } as const;
 const FOLDED = { width: 96, height: 100 } as const;
 
 type Row = ReturnType<typeof rowsFor>[number];
@@ -78,15 +78,19 @@ function summary({ row, worked, pieces }: Pictured, pixelsAnInch: number): Proje
     updatedAt: project.updatedAt.getTime(),
     author: { id: project.authorId, name: authorName ?? 'Unnamed' },
     flat: pieces.map((piece) =>
-      drawingSvg(drawPiece(piece, { width: (piece.across / MM_AN_INCH) * pixelsAnInch, units, grid, labels: false, dims: false })),
+      flatSvg(piece, { units, grid, scale: pixelsAnInch / MM_AN_INCH }),
     ),
     folded: worked ? drawingSvg(drawFolded(worked.model, worked.figures, FOLDED)) : null,
     words: [...project.pattern.pieces, ...project.pattern.measures, ...project.pattern.choices].map((item) => item.name).join(' '),
   };
 }
 
+function flatSvg(piece: PieceFigure, options: { readonly units: Unit; readonly grid: GridId; readonly scale: number }): string {
+  return drawingSvg(drawPiece(piece, { ...options, width: piece.across * options.scale + 2 * FLAT.inset, labels: false, dims: false }));
+}
+
 /** "9 × 6 × 2 1/4 in" */
-export function sizeWords(figures: Pick<Figures, 'finished'>, options: { readonly units: 'in' | 'mm' | 'cm'; readonly grid: Parameters<typeof show>[1]['grid'] }): string {
+export function sizeWords(figures: Pick<Figures, 'finished'>, options: { readonly units: Unit; readonly grid: GridId }): string {
   const sizes = figures.finished.inside.length > 0 ? figures.finished.inside : figures.finished.outside;
   return sizes.map((size, i) => show(size.mm, { ...options, bare: i < sizes.length - 1 }).text).join(' × ');
 }

@@ -1,6 +1,7 @@
 import { useStore } from '@nanostores/react';
 import { useState } from 'react';
 import { drawFolded, drawPiece, explain, sayParts, show, type Pattern, type PieceFigure } from '@/engine';
+import { cellSizes } from '@/features/projects/cell-sizes';
 import { namesOf } from '@/features/projects/formula-names';
 import { usesAny } from '@/features/projects/followers';
 import { ColumnHead } from './ColumnHead';
@@ -9,7 +10,7 @@ import type { DeskStore } from './desk-store';
 import { DrawingView } from './DrawingView';
 import { TrackFields } from './TrackFields';
 
-const THUMB = { width: 56, height: 36 } as const;
+const THUMB = { width: 68, tallest: 30 } as const;
 
 export interface PiecesColumnProps {
   readonly store: DeskStore;
@@ -68,11 +69,10 @@ interface PieceTabProps {
   readonly sizing: LiveFigures['figures']['sizing'];
 }
 function PieceTab({ name, figure, count, lit, selected, onSelect, sizing }: PieceTabProps) {
-  const width = figure && figure.along > 0 ? Math.min(THUMB.width, (THUMB.height * figure.across) / figure.along) : 0;
   return (
     <button type="button" role="tab" aria-selected={selected} className={lit ? 'piece-tab lit' : 'piece-tab'} data-place={`piece:${name}`} onClick={onSelect}>
       <span className="thumb" aria-hidden="true">
-        {figure && width > 0 ? <DrawingView drawing={drawPiece(figure, { width, units: sizing.units, grid: sizing.grid, labels: false, dims: false })} /> : null}
+        {figure ? <DrawingView drawing={drawPiece(figure, { ...THUMB, units: sizing.units, grid: sizing.grid, labels: false, dims: false })} /> : null}
       </span>
       <span>
         {name}
@@ -96,8 +96,8 @@ function PieceView({ figure, name, live, isLit, pattern }: PieceViewProps) {
     const problem = live.figures.problems.find((found) => found.code === 'piece fails' || found.code === 'cannot be worked out');
     return <p className="desk-empty">{problem?.sentence ?? `${name} is not cut with these choices.`}</p>;
   }
-  const tracks = pattern.pieces.find((piece) => piece.name === name);
-  const bySize = new Map([...(tracks?.columns ?? []), ...(tracks?.rows ?? [])].map((track) => [track.name, track.size]));
+  const piece = pattern.pieces.find((known) => known.name === name);
+  const sizes = piece === undefined ? null : cellSizes(piece);
   return (
     <div className="piece-view">
       <p className="piece-facts">
@@ -106,7 +106,7 @@ function PieceView({ figure, name, live, isLit, pattern }: PieceViewProps) {
           cut {figure.count} · {figure.stock} · {show(figure.across, { units, grid, bare: true }).typeset} × {show(figure.along, { units, grid }).typeset}
         </span>
       </p>
-      <DrawingView drawing={drawPiece(figure, { width: 400, units, grid, labels: true, dims: true })} isLit={(of) => isLit(bySize.get(of) ?? of)} />
+      <DrawingView drawing={drawPiece(figure, { width: 400, units, grid, labels: true, dims: true })} isLit={(of) => sizes?.get(of)?.some(isLit) ?? false} />
     </div>
   );
 }
@@ -133,7 +133,7 @@ function WholeBox({ live, figure }: { readonly live: LiveFigures; readonly figur
         {figure === undefined ? <p className="soft">This piece is not cut with these choices.</p> : null}
         {figure?.instructions.map((sentence, i) => (
           <p key={i}>
-            {sayParts(sentence, { units, grid }).map((part, j) => (part.figure ? <span key={j} className="measure">{part.text}</span> : part.text))}
+            {sayParts(sentence, { units, grid }).map((part, j) => (part.figure ? <span key={j} className="measure">{part.typeset}</span> : part.text))}
           </p>
         ))}
       </div>
