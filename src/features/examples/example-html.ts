@@ -27,11 +27,8 @@ export function pieceOf({ model, figures }: Example, name: string): PieceFigure 
 export function pieceSvg(example: Example, name: string, { wide, narrow }: { wide: number; narrow: number }): string {
   const { units, grid } = example.figures.sizing;
   const piece = pieceOf(example, name);
-  const drawn = (width: number, className: string) =>
-    drawingSvg(drawPiece(piece, { width, units, grid, labels: true, dims: true }), { class: className });
-  return wide === narrow
-    ? drawn(wide, 'drawing')
-    : drawn(wide, 'drawing wide-only') + drawn(narrow, 'drawing narrow-only');
+  const drawn = (width: number, layout: { class?: string }) => drawingSvg(drawPiece(piece, { width, units, grid }), layout);
+  return wide === narrow ? drawn(wide, {}) : drawn(wide, { class: 'wide-only' }) + drawn(narrow, { class: 'narrow-only' });
 }
 
 /** A piece's making instructions, their figures on tabs. */

@@ -77,7 +77,7 @@ function moveSliders(form: HTMLFormElement, { panel }: Example, changed: EventTa
 function putFigures(slug: string, form: HTMLFormElement, example: Example): void {
   let figures = 0;
   let drawings = 0;
-  for (const element of document.querySelectorAll<HTMLElement>(`[data-of="${CSS.escape(slug)}"]`)) {
+  for (const element of document.querySelectorAll<HTMLElement>(`[data-example-part="${CSS.escape(slug)}"]`)) {
     const { live, piece, words, wide, narrow } = element.dataset;
     if (live !== undefined) figures += putFigure(element, liveInside(example, live, 'bare' in element.dataset));
     if (words !== undefined) figures += putWords(element, wordsHtml(example, words));
