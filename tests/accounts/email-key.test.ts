@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
-import { emailKey } from '@/features/accounts/email-key';
+import { addressFault, emailKey } from '@/features/accounts/email-key';
 
 describe('the compared form of an e-mail address', () => {
   it.each([
@@ -59,5 +59,13 @@ describe('the compared form of an e-mail address', () => {
       }),
       { seed: 20, numRuns: 2000 },
     );
+  });
+});
+
+describe('an address that letters are sent to', () => {
+  it('has letters from a to z before the @, since mail goes out without SMTPUTF8; the domain may have others', () => {
+    expect(addressFault('wenna@bücher.example')).toBeNull();
+    expect(addressFault('ren\u00e9@quilletlane.example')).toBe('Before the @, only letters from a to z can be written to from here. Use another address.');
+    expect(addressFault('wenna')).toBe('That is not an e-mail address: it looks like name@place.example.');
   });
 });

@@ -15,7 +15,7 @@
  * - `headers` are those without which the route refuses before it reads the body, such as If-Match.
  */
 import { db } from '@/db/client.server';
-import { projects } from '@/db/schema';
+import { editions, mailings, projects } from '@/db/schema';
 import type { Access } from '@/features/accounts/access';
 import { emptyWriteUp } from '@/writeup/empty-write-up';
 import type { Cast, Method } from './harness';
@@ -38,6 +38,21 @@ function draft({ author }: Cast): { id: string } {
     .run();
   return { id: 'draft' };
 }
+
+/** A mailing about the author's first edition. Its box has no pattern: what would draw it is tried elsewhere. */
+function mailing(people: Cast): { id: string } {
+  const { id: projectId } = draft(people);
+  const nothing = {} as never;
+  const { id: publishedBy } = people.author;
+  db.insert(editions)
+    .values({ id: 'edition', projectId, n: 1, title: 'Draft', summary: '', pattern: nothing, sizing: nothing, writeUp: emptyWriteUp(), publishedBy })
+    .run();
+  const words = { subject: 'A box', greeting: 'Hello', excerpt: 'It is new.' };
+  db.insert(mailings).values({ id: 'mailing', projectId, edition: 1, authorId: publishedBy, ...words }).run();
+  return { id: 'mailing' };
+}
+/** For routes that read no body: who may come so far is all there is to try. */
+const noMailing = () => ({ id: 'no-such-mailing' });
 
 export const ROUTES: readonly RouteRow[] = [
   { path: '/api/health', method: 'GET', who: 'all' },
@@ -63,5 +78,24 @@ export const ROUTES: readonly RouteRow[] = [
   { path: '/api/projects/[id]/duplicate', method: 'POST', who: 'author', prepare: draft, body: {} },
   { path: '/api/projects/[id]/publish', method: 'POST', who: 'author', prepare: draft, body: { revision: 99 } },
   { path: '/api/projects/[id]/restore', method: 'POST', who: 'author', prepare: draft },
+
+  { path: '/api/mailings/[id]', method: 'GET', who: 'author', prepare: noMailing },
+  {
+    path: '/api/mailings/[id]',
+    method: 'PUT',
+    who: 'author',
+    prepare: mailing,
+    headers: { 'if-match': '"1"' },
+    body: { subject: 'A box', greeting: 'Hello', excerpt: 'It is new.', withHero: false },
+  },
+  { path: '/api/mailings/[id]/preview', method: 'GET', who: 'author', prepare: noMailing },
+  { path: '/api/mailings/[id]/test', method: 'POST', who: 'author', prepare: noMailing },
+  { path: '/api/mailings/[id]/send', method: 'POST', who: 'author', prepare: mailing, body: { revision: 99 } },
+  { path: '/api/mailings/[id]/pause', method: 'POST', who: 'author', prepare: noMailing },
+  { path: '/api/mailings/[id]/resume', method: 'POST', who: 'author', prepare: noMailing },
+  { path: '/api/mailings/[id]/stop', method: 'POST', who: 'author', prepare: noMailing },
+
+  { path: '/api/subscribe', method: 'POST', who: 'all', body: { email: 'wenna@quilletlane.example', units: 'mm' } },
+
   { path: '/api/uploads', method: 'POST', who: 'author', form: true },
 ];

@@ -2,7 +2,7 @@ import { and, eq, inArray, or, sql } from 'drizzle-orm';
 import { db, type Transaction } from '@/db/client.server';
 import { editions, letters, mailings, projects, subscribers, uploads, users } from '@/db/schema';
 import { dropPictureFiles } from '@/features/uploads/storage.server';
-import { GONE_DOMAIN, lastAdmin, refused, type Person, type Refused } from './people.server';
+import { GONE_DOMAIN, lastAdmin, type Person, type Refused } from './people.server';
 
 /** Everything kept about a person, for themselves: no hashes, tokens or other people's data. */
 export function exportOwnData(person: Person) {

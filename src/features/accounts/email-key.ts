@@ -28,6 +28,13 @@ export function emailKey(text: string): string | null {
   return bytes(local) <= 64 && bytes(key) <= 254 ? key : null;
 }
 
+/** Why no letter can be sent to what was typed; null when one can. Our mail goes out without SMTPUTF8. */
+export function addressFault(text: string): string | null {
+  const key = emailKey(text);
+  if (!key) return EMAIL_SENTENCE;
+  return /[^\0-\x7f]/.test(key) ? 'Before the @, only letters from a to z can be written to from here. Use another address.' : null;
+}
+
 function asciiDomain(typed: string): string | null {
   if (!DOMAIN_AS_TYPED.test(typed) || !URL.canParse(`http://${typed}`)) return null;
   const domain = new URL(`http://${typed}`).hostname;

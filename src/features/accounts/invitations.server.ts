@@ -5,6 +5,7 @@ import { db } from '@/db/client.server';
 import { verificationTokens } from '@/db/schema';
 import { invitationLetter } from './account-letters';
 import { forgetExpiredTokens, takeToken, tokenHash } from './adapter.server';
+import { addressFault, EMAIL_SENTENCE } from './email-key';
 import { createPerson, emailKey, findByEmail, refused, setRole, type Person, type Refused } from './people.server';
 import { post } from './post.server';
 
@@ -23,7 +24,8 @@ export interface Invitation {
 /** Sends an invitation; an older one to the same address stops working. */
 export function invite(email: string, invitedBy: string): { readonly ok: true; readonly invitation: Invitation } | Refused {
   const key = emailKey(email);
-  if (!key) return refused('no-address', `"${email}" is not an e-mail address: it looks like name@place.example.`);
+  const fault = addressFault(email);
+  if (!key || fault) return refused('no-address', fault ?? EMAIL_SENTENCE);
   const person = findByEmail(key);
   if (person?.disabledAt) return refused('disabled', `${key} is disabled. Enable the account first.`);
   if (person && person.role !== 'reader') return refused('already', `${key} is ${person.role === 'admin' ? 'an admin' : 'an author'} already.`);

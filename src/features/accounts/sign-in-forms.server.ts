@@ -1,7 +1,7 @@
 import type { APIContext } from 'astro';
 import { readForm } from '@/features/http/form';
 import { takeTurn, type Turn } from '@/features/limits/limits.server';
-import { EMAIL_SENTENCE, emailKey } from './email-key';
+import { addressFault, EMAIL_SENTENCE, emailKey } from './email-key';
 import { formFaults, seeOther, type FormFaults } from './form-outcome';
 import { judgePassword } from './password-rule';
 import { acceptInvitation, readInvitation } from './invitations.server';
@@ -40,6 +40,8 @@ export async function postSignIn(context: Context): Outcome {
 }
 
 async function sendLink(context: Context, key: string, typed: { email: string; to: string }): Outcome {
+  const fault = addressFault(key);
+  if (fault) return formFaults(422, { email: fault }, typed);
   const turn = await takeTurn('sign-in-link', { ip: context.clientAddress, emailKey: key });
   if (!turn.ok) return tooOften(turn, typed);
   await sendSignInLink(context, { email: key, to: returnPath(typed.to) });
@@ -67,10 +69,11 @@ export async function postSignUp(context: Context): Outcome {
   if (!field) return NO_FORM;
   const typed = { name: field('name').trim(), email: field('email').trim() };
   const key = emailKey(typed.email);
+  const fault = addressFault(typed.email);
   const password = judgePassword(field('password'), typed);
   const faults = {
     ...nameFault(typed.name),
-    ...(key ? {} : { email: EMAIL_SENTENCE }),
+    ...(fault ? { email: fault } : {}),
     ...(password.ok ? {} : { password: password.sentence }),
   };
   if (!key || Object.keys(faults).length > 0) return formFaults(422, faults, typed);
