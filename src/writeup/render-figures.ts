@@ -8,10 +8,15 @@ import { showLive, type LiveFigures, type LiveText } from './live';
  * changes in it: the reader's page and the editor put in the same words as the server.
  */
 
-/** Usual width in pixels that a piece is drawn at; a card's SVG scales down, never up. */
+/** Usual width in pixels that a piece is drawn at. */
 export const CARD_WIDTH = 560;
+/** A second layout for phones, so that its figures keep their size; the style sheet shows one of the two. */
+const PHONE_WIDTH = 300;
 
 type Looked = Figures['sizing'];
+
+/** What stands behind a formula that gives no figure. */
+export const NOT_WORKED_OUT = 'not worked out';
 
 // ── Live measures ────────────────────────────────────────────────────────────────────────────────────────────────────
 
@@ -26,7 +31,7 @@ export function renderMeasure(live: LiveFigures, text: LiveText): string {
 export const measureInside = (live: LiveFigures, text: LiveText): string => insideOf(showLive(live, text), text);
 
 function insideOf(shown: Shown | null, { formula }: LiveText): string {
-  return shown ? figure(shown) : `${esc(formula.trim() || 'empty measure')} <small class="unknown-mark">(not worked out)</small>`;
+  return shown ? figure(shown) : `${esc(formula.trim() || 'empty measure')} <small class="unknown-mark">(${NOT_WORKED_OUT})</small>`;
 }
 
 /** A figure to see and the same to hear: a fraction slash is read aloud in a different way by every screen reader. */
@@ -46,7 +51,8 @@ export function pieceCardInside(figures: Figures, name: string, width = CARD_WID
   const piece = figures.pieces.find((p) => p.name === name);
   if (!piece) return `<p class="piece-card-none"><b>${esc(name)}</b> is not part of the box as it is set up now.</p>`;
   const { units, grid } = figures.sizing;
-  const drawing = drawingSvg(drawPiece(piece, { width, units, grid }), { class: 'piece-card-svg' });
+  const drawn = (w: number, name: string) => drawingSvg(drawPiece(piece, { width: w, units, grid }), { class: name });
+  const drawing = width <= PHONE_WIDTH ? drawn(width, '') : drawn(width, 'wide-only') + drawn(PHONE_WIDTH, 'narrow-only');
   const words = piece.instructions.map((sentence) => `<p>${sentenceHtml(sentence, figures.sizing)}</p>`).join('');
   return (
     '<div class="ruled" aria-hidden="true"></div>' +
@@ -59,7 +65,7 @@ export function pieceCardInside(figures: Figures, name: string, width = CARD_WID
 /** A sentence from the geometry; its figures look like live measures, for they follow the size in the same way. */
 function sentenceHtml(sentence: Sentence, { units, grid }: Looked): string {
   return sayParts(sentence, { units, grid })
-    .map(({ text, figure }) => (figure ? `<span class="measure">${esc(text)}</span>` : esc(text)))
+    .map((part) => (part.figure ? `<span class="measure">${figure(part)}</span>` : esc(part.text)))
     .join('');
 }
 

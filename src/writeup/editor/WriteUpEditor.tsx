@@ -104,7 +104,9 @@ export function WriteUpEditor({ initial, figures, lit, uploads, onChange, onSele
     },
   });
 
-  const state = useEditorState({ editor, selector: ({ editor: now }) => (now ? toolState(now) : null) });
+  const followed = useEditorState({ editor, selector: ({ editor: now }) => (now ? toolState(now) : null) });
+  // Nothing has happened in a new editor yet that would have told the hook.
+  const state = followed ?? (editor ? toolState(editor) : null);
   const live = useStore(figures);
   const openLink = () => editor && setOpened({ type: 'link', href: linkAt(editor) });
   const openPiece = () => setOpened({ type: 'piece' });

@@ -1,5 +1,6 @@
 import type { Editor } from '@tiptap/core';
 import type { Node as ProseMirrorNode, ResolvedPos } from '@tiptap/pm/model';
+import { closeHistory } from '@tiptap/pm/history';
 import { NodeSelection, TextSelection } from '@tiptap/pm/state';
 
 /** Where a block goes when the caret is at `$pos`: the range it takes the place of. An empty paragraph makes room, else it goes behind the block. */
@@ -25,7 +26,7 @@ export function insertBlock(editor: Editor, node: ProseMirrorNode): boolean {
   tr.replaceWith(place.from, place.to, node);
   if (node.isAtom || node.type.name === 'photo') afterBlock(tr, place.from + node.nodeSize);
   else tr.setSelection(TextSelection.near(tr.doc.resolve(place.from + 1), 1));
-  view.dispatch(tr.scrollIntoView());
+  view.dispatch(closeHistory(tr).scrollIntoView());
   view.focus();
   return true;
 }

@@ -1,4 +1,5 @@
 import { Extension, type Editor } from '@tiptap/core';
+import { closeHistory } from '@tiptap/pm/history';
 import { Plugin, PluginKey } from '@tiptap/pm/state';
 import { Decoration, DecorationSet, type EditorView } from '@tiptap/pm/view';
 import { placeForBlock } from './insert-block';
@@ -109,7 +110,7 @@ function begin(editor: Editor, file: File, pos: number, { send, say }: PhotoUplo
     const node = editor.schema.nodes.photo?.create({ upload, width, height, alt: '' });
     if (at === undefined || !node) return;
     const tr = editor.state.tr.setMeta(uploads, { remove: id } satisfies Change);
-    editor.view.dispatch(tr.insert(at, node));
+    editor.view.dispatch(closeHistory(tr).insert(at, node));
     say('Photo placed. Say in words what it shows.');
   };
 

@@ -1,5 +1,6 @@
 import type { Editor } from '@tiptap/core';
 import { Fragment, type Node as ProseMirrorNode } from '@tiptap/pm/model';
+import { closeHistory } from '@tiptap/pm/history';
 import { TextSelection } from '@tiptap/pm/state';
 
 /**
@@ -38,7 +39,7 @@ export function newStep(editor: Editor): boolean {
     tr.replaceWith(at, end, step.create({ title, mark: '' }, taken.length > 0 ? Fragment.from(taken) : paragraph.create()));
   }
   tr.setSelection(TextSelection.near(tr.doc.resolve(at + 1), 1)).scrollIntoView();
-  view.dispatch(tr);
+  view.dispatch(closeHistory(tr));
   focusTitle(editor, at);
   return true;
 }
@@ -68,7 +69,7 @@ export function moveStep(editor: Editor, pos: number, by: -1 | 1): boolean {
   const to = by === 1 ? pos + other.nodeSize : pos - other.nodeSize;
   tr.insert(to, node);
   if (kept) tr.setSelection(TextSelection.near(tr.doc.resolve(to + inside)));
-  view.dispatch(tr.scrollIntoView());
+  view.dispatch(closeHistory(tr).scrollIntoView());
   return true;
 }
 
@@ -82,6 +83,6 @@ export function removeStep(editor: Editor, pos: number): void {
   if (state.doc.childCount === 1) tr.replaceWith(pos, pos + node.nodeSize, paragraph.create());
   else tr.delete(pos, pos + node.nodeSize);
   tr.setSelection(TextSelection.near(tr.doc.resolve(Math.min(pos, tr.doc.content.size)), -1));
-  view.dispatch(tr.scrollIntoView());
+  view.dispatch(closeHistory(tr).scrollIntoView());
   view.focus();
 }

@@ -1,4 +1,5 @@
 import { getMarkRange, type Editor } from '@tiptap/core';
+import { closeHistory } from '@tiptap/pm/history';
 import { TextSelection } from '@tiptap/pm/state';
 import type { LiveText } from '../live';
 import { insertBlock } from './insert-block';
@@ -15,7 +16,7 @@ export function putMeasure(editor: Editor, { from, to }: { readonly from: number
   const node = measure.create({ formula: text.formula, bare: text.bare }, null, $from.parent.inlineContent ? marks : undefined);
   if (!$from.parent.inlineContent) return insertBlock(editor, paragraph.create(null, node));
   const tr = state.tr.replaceWith(from, to, node);
-  view.dispatch(tr.setSelection(TextSelection.create(tr.doc, from + 1)).scrollIntoView());
+  view.dispatch(closeHistory(tr).setSelection(TextSelection.create(tr.doc, from + 1)).scrollIntoView());
   return true;
 }
 

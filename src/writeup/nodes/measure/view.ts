@@ -1,6 +1,7 @@
 import type { NodeViewRenderer } from '@tiptap/core';
 import type { EditingDesk } from '../../editor/editing-desk';
 import { readLive, showLive, type LiveText } from '../../live';
+import { NOT_WORKED_OUT } from '../../render-figures';
 
 /** A live measure in the editor: plain DOM that follows the figures by itself, so that a new size writes nothing into the document. */
 export function measureView(desk: EditingDesk): NodeViewRenderer {
@@ -16,10 +17,13 @@ export function measureView(desk: EditingDesk): NodeViewRenderer {
       const live = desk.figures.get();
       const shown = live && showLive(live, text);
       const words = shown?.typeset ?? (text.formula.trim() || 'empty measure');
-      if (dom.textContent !== words) dom.textContent = words;
+      if (words !== shownBefore || dom.classList.contains('unknown') !== (live !== null && shown === null)) {
+        dom.textContent = words;
+        if (live && !shown) dom.append(' ', unknownMark());
+      }
       dom.classList.toggle('unknown', live !== null && shown === null);
-      dom.setAttribute('aria-label', shown ? `${text.formula}, live: ${shown.spoken}` : `${text.formula || 'empty measure'}, not worked out`);
-      dom.title = shown ? `${text.formula}. Enter changes it.` : `${text.formula}: not worked out. Enter mends it.`;
+      dom.setAttribute('aria-label', shown ? `${text.formula}, live: ${shown.spoken}` : `${text.formula || 'empty measure'}, ${NOT_WORKED_OUT}`);
+      dom.title = shown ? `${text.formula}. Enter changes it.` : `${text.formula}: ${NOT_WORKED_OUT}. Enter mends it.`;
       if (changes && shownBefore !== null && shownBefore !== words) flash(dom);
       shownBefore = words;
     };
@@ -68,6 +72,13 @@ export function usesOf(desk: Pick<EditingDesk, 'figures'>, formula: string): rea
   const live = desk.figures.get();
   const read = live && readLive(live.model, formula);
   return read?.ok ? read.value.uses : [];
+}
+
+function unknownMark(): HTMLElement {
+  const mark = document.createElement('small');
+  mark.className = 'unknown-mark';
+  mark.textContent = `(${NOT_WORKED_OUT})`;
+  return mark;
 }
 
 function flash(dom: HTMLElement) {

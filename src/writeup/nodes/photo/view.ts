@@ -1,5 +1,6 @@
 import type { NodeViewRenderer } from '@tiptap/core';
 import { textField } from '../../editor/dom';
+import { typeAttribute } from '../../editor/type-attribute';
 import { pictureSources, pictureUrl } from '../../pictures';
 
 /** A photo in the editor: the picture, the words for those who cannot see it, and the caption, which is ordinary text. */
@@ -42,7 +43,7 @@ export function photoView(): NodeViewRenderer {
     show();
     alt.addEventListener('input', () => {
       const pos = getPos();
-      if (pos !== undefined) editor.view.dispatch(editor.state.tr.setNodeAttribute(pos, 'alt', alt.value));
+      if (pos !== undefined) typeAttribute(editor, pos, 'alt', alt.value);
     });
     alt.addEventListener('keydown', (event) => {
       const held = event.ctrlKey || event.metaKey;

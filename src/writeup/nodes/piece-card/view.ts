@@ -4,7 +4,7 @@ import { drawingSvg } from '@/exports/svg/drawing';
 import type { EditingDesk } from '../../editor/editing-desk';
 
 /** Pixels that the piece is drawn in beside its name. */
-const SMALL = 150;
+const SMALL = { width: 140, tallest: 88 } as const;
 
 /** A piece card in the editor, small: which piece, how many of what; the reader gets it with dimensions and words. */
 export function pieceCardView(desk: EditingDesk): NodeViewRenderer {
@@ -35,7 +35,9 @@ export function pieceCardView(desk: EditingDesk): NodeViewRenderer {
         ? `cut ${piece.count} · ${piece.stock}`
         : 'Not part of the box as it is set up now. Choose another piece, or leave it for a choice that has it.';
       picture.innerHTML =
-        figures && piece ? drawingSvg(drawPiece(piece, { width: SMALL, units: figures.sizing.units, grid: figures.sizing.grid, labels: false, dims: false })) : '';
+        figures && piece
+          ? drawingSvg(drawPiece(piece, { ...SMALL, units: figures.sizing.units, grid: figures.sizing.grid, labels: false, dims: false }))
+          : '';
     };
     draw();
     const stop = desk.figures.listen(draw);

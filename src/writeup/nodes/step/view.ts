@@ -3,6 +3,7 @@ import { TextSelection } from '@tiptap/pm/state';
 import { moveStep, removeStep } from '../../editor/steps';
 import type { EditingDesk } from '../../editor/editing-desk';
 import { iconButton, textField } from '../../editor/dom';
+import { typeAttribute } from '../../editor/type-attribute';
 
 /** A step in the editor: its number from the style sheet's counter, fields for title and mark, then its text. */
 export function stepView(desk: EditingDesk): NodeViewRenderer {
@@ -52,7 +53,7 @@ export function stepView(desk: EditingDesk): NodeViewRenderer {
     show();
 
     const keep = (name: 'title' | 'mark', value: string) =>
-      act((pos) => editor.view.dispatch(editor.state.tr.setNodeAttribute(pos, name, value)))();
+      act((pos) => typeAttribute(editor, pos, name, value))();
     title.addEventListener('input', () => keep('title', title.value));
     mark.addEventListener('input', () => keep('mark', mark.value));
     for (const field of [title, mark]) {
