@@ -21,8 +21,10 @@ interface Look {
   readonly look: 'card' | 'pages';
   readonly inside: Vector;
 }
-const LIGHT = unit(vector(-0.45, -0.75, 0.95));
+const LIGHT = unit(vector(-0.5, -0.55, 1.1));
 const TONES = 7;
+/** How far a tab is drawn inside what it is glued to: more than cutting to a grid can push it out. */
+const TAB_INSET = 1;
 
 /** The folded box in parallel projection, hidden faces behind others. Faces carry a tone by how the light falls on them. */
 export function drawFolded(model: Model, figures: Figures, options: FoldedDrawingOptions): Drawing {
@@ -88,7 +90,7 @@ function facesOf(model: Model, figures: Figures, share: number): Face<Look>[] {
     const look = def.look ?? model.pattern.pieces.find((one) => one.name === piece.name)?.look ?? 'card';
     const [x, y, z] = at.map((formula) => formula.work(values)) as [number, number, number];
     return foldNet(piece.net, { root: keyOf(def.root), at: vector(x, y, z), across: def.across, along: def.along, share }).map((panel) => {
-      const shift = panel.role === 'tab' ? times(panel.inside, 0.15) : vector(0, 0, 0);
+      const shift = panel.role === 'tab' ? times(panel.inside, TAB_INSET) : vector(0, 0, 0);
       return { points: panel.points.map((point) => plus(point, shift)), edges: panel.edges, data: { look, inside: panel.inside } };
     });
   });

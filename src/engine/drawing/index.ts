@@ -1,3 +1,4 @@
 export { drawPiece, type PieceDrawingOptions } from './piece';
 export { drawFolded, foldedExtent, type FoldedDrawingOptions } from './folded';
+export { drawSheet } from './sheet';
 export { say, sayParts, type SaidPart } from './say';

@@ -1,5 +1,6 @@
-import { show, type ShowOptions } from '../measure';
+import { GRIDS, defaultGrid, show, type ShowOptions } from '../measure';
 import { areaOf, boundsOf } from '../net';
+import { figureMaker } from '../piece';
 import type { Drawing, PieceFigure, Point, Shape } from '../types';
 import { acrossTop, downLeft, textWidth, topRows, type Stop } from './dimensions';
 import { closedPath, n, pathOf, segment, type Place } from './path';
@@ -25,7 +26,12 @@ export interface PieceDrawingOptions extends Pick<ShowOptions, 'units' | 'grid'>
 export function drawPiece(piece: PieceFigure, options: PieceDrawingOptions): Drawing {
   const { net } = piece;
   const { units, grid, width, dims = true, labels = true, tallest = 420 } = options;
-  const says = (mm: number) => show(mm, { units, ...(grid ? { grid } : {}), bare: true }).typeset;
+  const figure = figureMaker(GRIDS[grid ?? defaultGrid(units)].step, piece.thickness);
+  // A position a card's thickness off the ruler carries a sign; the sentences say what it means.
+  const says = (mm: number) => {
+    const { mm: shown, cards } = figure(mm);
+    return show(shown, { units, ...(grid ? { grid } : {}), bare: true }).typeset + (cards === undefined ? '' : cards > 0 ? '+' : '−');
+  };
   const acrossMm = [...piece.scores.across, net.across];
   const alongMm = [...piece.scores.along, net.along];
   const left = dims ? Math.max(...alongMm.map((mm) => textWidth(says(mm)))) + 34 : 6;

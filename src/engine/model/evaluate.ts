@@ -2,8 +2,8 @@ import { diagnose, kindName, type Formula, type Values } from '../formula';
 import { GRIDS, atLeast, isZero, moreThan, roundTo, same, showValue, snap } from '../measure';
 import { perimeterOf } from '../net';
 import { keyOf } from '../pattern/names';
-import { areaOfNet, makingOf } from '../piece';
-import type { Figures, FitFigure, KindName, MeasureFigure, Net, PieceFigure, SentenceFigure, Sizing, SizingProblem, Unit } from '../types';
+import { areaOfNet, figureMaker, makingOf } from '../piece';
+import type { Figures, FitFigure, KindName, MeasureFigure, Net, PieceFigure, Sizing, SizingProblem, Unit } from '../types';
 import { buildPiece } from './build';
 import type { CompiledFit, CompiledMeasure, Model } from './model';
 import { answerTo, isInUse, workOut, type BothValues } from './values';
@@ -159,19 +159,6 @@ export function scoresOf(net: Net): PieceFigure['scores'] {
   }
   const sorted = (list: number[]) => list.sort((a, b) => a - b).filter((value, index, all) => index === 0 || !same(value, all[index - 1] as number));
   return { across: sorted(upright), along: sorted(level) };
-}
-
-/** A position that is off the grid only by whole card thicknesses is said as the grid value and those: no ruler shows 0.3 mm. */
-export function figureMaker(step: number, thickness: number): (mm: number, bare?: boolean) => SentenceFigure {
-  return (mm, bare) => {
-    const plain = { mm: snap(mm), ...(bare ? { bare } : {}) };
-    if (isZero(thickness) || same(roundTo(mm, step, 'nearest'), mm)) return plain;
-    for (const cards of [1, -1, 2, -2, 3, -3, 4, -4]) {
-      const rest = snap(mm - cards * thickness);
-      if (same(roundTo(rest, step, 'nearest'), rest)) return { ...plain, mm: rest, cards };
-    }
-    return plain;
-  };
 }
 
 /** The largest difference that cutting to the grid makes to any column or row. */

@@ -1,3 +1,4 @@
 export * from './cells';
+export * from './figure';
 export * from './grid';
 export * from './words';

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { patternDraftSchema } from './pattern-draft';
+import { patternSchema } from '@/features/patterns/pattern-schema';
 import { readWriteUp } from '@/writeup/read-write-up';
 import { explainWriteUpFault } from '@/writeup/messages';
 import { factsSchema, sizingSchema } from './project';
@@ -17,7 +17,7 @@ const writeUpSchema = z.unknown().transform((json, context) => {
 
 /** A whole project as typed: formulas that do not read are taken (nothing typed is lost), a shape that is none is not. */
 export const projectStateSchema = factsSchema.extend({
-  pattern: patternDraftSchema,
+  pattern: patternSchema,
   sizing: sizingSchema,
   writeUp: writeUpSchema,
 });

@@ -1,0 +1,127 @@
+/**
+ * The measurement sheet on the command line:
+ *   npm run --silent sheet -- book-box --set 'inside depth=2 in' --choose spine=curved --units in --grid 1/16in --format json
+ *   npm run --silent sheet -- --list [--format json]
+ * Exit code 0; 1 when the sizing is out of range or a fit fails (the sheet is printed all the same); 2 for a bad argument.
+ */
+import { writeFileSync } from 'node:fs';
+import { parseArgs } from 'node:util';
+import { GRIDS, STOCKS, UNITS, defaultGrid, evaluate, explain, keyOf, nearestName, readValue, stockOf, usualSizing, type GridId, type Model, type Sizing, type Unit } from '@/engine';
+import { figuresJson } from '@/exports/json/figures-json';
+import { measurementText } from '@/exports/text/measurement-text';
+import { PatternFileError } from '@/features/patterns/load-pattern';
+import { getPatternModel, listPatterns } from '@/features/patterns/patterns.server';
+
+class BadArgument extends Error {}
+const FORMATS = ['text', 'json'] as const;
+
+const oneOf = <T extends string>(what: string, typed: string, allowed: readonly T[]): T => {
+  const found = allowed.find((one) => one === typed.toLowerCase().replace(/\s+/g, ''));
+  if (found === undefined) throw new BadArgument(`${what} “${typed}” is not known. It can be ${allowed.join(', ')}.`);
+  return found;
+};
+
+function readArguments() {
+  try {
+    return parseArgs({
+      allowPositionals: true,
+      options: {
+        set: { type: 'string', multiple: true, default: [] },
+        choose: { type: 'string', multiple: true, default: [] },
+        units: { type: 'string', default: 'in' },
+        grid: { type: 'string' },
+        stock: { type: 'string', default: '12x12in' },
+        copies: { type: 'string', default: '1' },
+        format: { type: 'string', default: 'text' },
+        out: { type: 'string' },
+        list: { type: 'boolean', default: false },
+      },
+    });
+  } catch (error) {
+    throw new BadArgument(error instanceof Error ? (error.message.split('. To specify')[0] ?? error.message) : String(error));
+  }
+}
+
+function namedPair(option: string, typed: string): [string, string] {
+  const at = typed.indexOf('=');
+  if (at < 1) throw new BadArgument(`--${option} “${typed}” has no “=”. Write it like --${option} '${option === 'set' ? 'inside width=5 3/8 in' : 'spine=curved'}'.`);
+  return [typed.slice(0, at).trim(), typed.slice(at + 1).trim()];
+}
+
+function readSizing(model: Model, values: ReturnType<typeof readArguments>['values']): Sizing {
+  const units = oneOf<Unit>('The unit', values.units, UNITS);
+  const grid = values.grid === undefined ? defaultGrid(units) : oneOf('The cut grid', values.grid, Object.keys(GRIDS) as GridId[]);
+  const sizing = usualSizing(model, units, grid);
+  const set: Record<string, number> = {};
+  const chosen: Record<string, string> = { ...sizing.choices };
+  for (const typed of values.set) {
+    const [name, value] = namedPair('set', typed);
+    const asked = model.measures.filter(({ def }) => def.ask);
+    const measure = asked.find(({ def }) => keyOf(def.name) === keyOf(name));
+    if (!measure) {
+      const names = asked.map(({ def }) => def.name);
+      const nearest = nearestName(name, names);
+      throw new BadArgument(`${model.pattern.name} does not ask for “${name}”. ${nearest ? `The nearest is “${nearest}”.` : `It asks for ${names.join(', ')}.`}`);
+    }
+    const read = readValue({ kind: measure.def.kind ?? 'length', ...(measure.def.unit ? { unit: measure.def.unit } : {}) }, value, { units });
+    if (!read.ok) throw new BadArgument(`${measure.def.name}: ${read.faults.map(explain).join(' ')}`);
+    set[keyOf(name)] = read.value;
+  }
+  for (const typed of values.choose) {
+    const [name, option] = namedPair('choose', typed);
+    const choice = model.choices.find(({ def }) => keyOf(def.name) === keyOf(name));
+    if (!choice) throw new BadArgument(`${model.pattern.name} has no choice “${name}”. ${model.choices.length === 0 ? 'It has none.' : `It has ${model.choices.map(({ def }) => def.name).join(', ')}.`}`);
+    const found = choice.def.options.find((one) => keyOf(one) === keyOf(option));
+    if (found === undefined) throw new BadArgument(`${choice.def.name} cannot be “${option}”. It can be ${choice.def.options.join(' or ')}.`);
+    chosen[keyOf(name)] = found;
+  }
+  return { ...sizing, values: set, choices: chosen };
+}
+
+function put(text: string, out: string | undefined): void {
+  if (out === undefined) {
+    process.stdout.write(text);
+    return;
+  }
+  try {
+    writeFileSync(out, text);
+  } catch (error) {
+    throw new BadArgument(`“${out}” cannot be written: ${error instanceof Error ? error.message : String(error)}.`);
+  }
+}
+
+function run(): number {
+  const { values, positionals } = readArguments();
+  const format = oneOf('The format', values.format, FORMATS);
+  const patterns = listPatterns();
+  if (values.list) {
+    const rows = patterns.map(({ slug, name, summary }) => ({ slug, name, summary }));
+    const widest = Math.max(...rows.map((row) => row.slug.length));
+    put(format === 'json' ? `${JSON.stringify(rows, null, 2)}\n` : rows.map((row) => `${row.slug.padEnd(widest)}  ${row.name}: ${row.summary}\n`).join(''), values.out);
+    return 0;
+  }
+  const [slug, ...more] = positionals;
+  const slugs = patterns.map((pattern) => pattern.slug);
+  if (slug === undefined) throw new BadArgument(`Name a pattern: ${slugs.join(', ')}. Or ask for --list.`);
+  if (more.length > 0) throw new BadArgument(`“${more[0]}” stands after the pattern. Sizes are given with --set 'name=value'.`);
+  const model = getPatternModel(slug);
+  if (!model) {
+    const nearest = nearestName(slug, slugs);
+    throw new BadArgument(`No pattern is called “${slug}”. ${nearest ? `The nearest is “${nearest}”.` : `There are ${slugs.join(', ')}.`}`);
+  }
+  const stock = stockOf(values.stock);
+  if (!stock) throw new BadArgument(`The sheet “${values.stock}” is not known. It can be ${Object.keys(STOCKS).join(', ')}.`);
+  const copies = Number(values.copies);
+  if (!Number.isInteger(copies) || copies < 1 || copies > 500) throw new BadArgument(`--copies “${values.copies}” is not a whole number from 1 to 500.`);
+  const figures = evaluate(model, readSizing(model, values));
+  put(format === 'json' ? `${JSON.stringify(figuresJson(model, figures, { stock, copies }), null, 2)}\n` : measurementText(model, figures, { stock, copies }), values.out);
+  return figures.problems.length > 0 ? 1 : 0;
+}
+
+try {
+  process.exitCode = run();
+} catch (error) {
+  if (!(error instanceof BadArgument) && !(error instanceof PatternFileError)) throw error;
+  process.stderr.write(`${error.message}\n`);
+  process.exitCode = 2;
+}

@@ -1,0 +1,79 @@
+import { z } from 'zod';
+import type { Pattern } from '@/engine';
+
+/*
+ * The shape of a pattern, in a file or as an author's desk sends it. Formulas may be empty or not read yet: nothing typed is
+ * lost, and the engine says what is wrong. What could not even be looked at is refused, and so is a field we do not know, so
+ * that a slip in its name is found.
+ */
+const formula = z.string().max(1000, 'A formula has at most 1000 characters.');
+const name = z.string().max(80, 'A name has at most 80 characters.');
+const words = z.string().max(1000, 'A sentence has at most 1000 characters.');
+const when = formula.optional();
+const side = z.enum(['top', 'right', 'bottom', 'left']);
+const axis = z.enum(['+x', '-x', '+y', '-y', '+z', '-z']);
+const look = z.enum(['card', 'pages']).optional();
+const list = <T extends z.ZodTypeAny>(item: T) => z.array(item).max(200, 'At most 200 of these.');
+
+const measure = z.strictObject({
+  name,
+  kind: z.enum(['length', 'area', 'angle', 'number', 'whole number']).optional(),
+  ask: z.strictObject({ question: words, usual: formula, from: formula, to: formula, finer: z.boolean().optional(), when }).optional(),
+  formula: formula.optional(),
+  rounds: z.enum(['nearest', 'up', 'down', 'exact']).optional(),
+  unit: z.enum(['in', 'mm', 'cm']).optional(),
+  note: words.optional(),
+});
+const choice = z.strictObject({ name, question: words, options: list(name), usual: name, finer: z.boolean().optional(), when });
+const fit = z.strictObject({
+  name,
+  left: formula,
+  is: z.enum(['at least', 'at most', 'more than', 'less than', 'same as']),
+  right: formula,
+  tolerance: formula.optional(),
+  when,
+  otherwise: words,
+  change: list(name).optional(),
+  advice: z.boolean().optional(),
+});
+const track = z.strictObject({ name, size: formula, when });
+const tabEnd = z.strictObject({ from: formula.optional(), by: formula.optional() }).optional();
+const piece = z.strictObject({
+  name,
+  count: formula.optional(),
+  stock: z.enum(['card', 'patterned paper', 'greyboard']),
+  when,
+  builder: z.literal('grid'),
+  columns: list(track),
+  rows: list(track),
+  cells: list(list(name)),
+  lines: list(z.strictObject({ between: z.tuple([name, name]), is: z.enum(['valley', 'mountain', 'slit', 'nothing']), angle: formula.optional(), when })).optional(),
+  tabs: list(
+    z.strictObject({ cells: list(name), depth: formula.optional(), left: tabEnd, right: tabEnd, top: tabEnd, bottom: tabEnd, teeth: formula.optional(), 'tooth angle': formula.optional(), when }),
+  ).optional(),
+  caps: list(z.strictObject({ cell: name, radius: formula })).optional(),
+  corners: list(z.strictObject({ cell: name, corner: z.enum(['top left', 'top right', 'bottom right', 'bottom left']), radius: formula, when })).optional(),
+  notches: list(z.strictObject({ cell: name, side, at: formula, radius: formula, when })).optional(),
+  slots: list(z.strictObject({ cell: name, across: formula, along: formula, width: formula, height: formula, when })).optional(),
+  rolls: list(z.strictObject({ cell: name, radius: formula, when })).optional(),
+  edges: list(z.strictObject({ name, cell: name, side })).optional(),
+  look,
+  remarks: list(words).optional(),
+});
+const size = list(z.strictObject({ name, formula }));
+
+export const patternSchema: z.ZodType<Pattern> = z.strictObject({
+  format: z.literal(1),
+  slug: z.string().max(80),
+  name,
+  summary: words,
+  group: name,
+  measures: list(measure),
+  choices: list(choice),
+  pieces: list(piece),
+  fits: list(fit),
+  finished: z.strictObject({ inside: size, outside: size }),
+  order: list(words),
+  turn: z.number().finite().optional(),
+  assembly: list(z.strictObject({ piece: name, root: name, at: z.tuple([formula, formula, formula]), across: axis, along: axis, when, look })),
+});
