@@ -21,6 +21,10 @@ describe('names in a formula', () => {
   it('leaves alone what a piece measures', () => {
     expect(found('floor.tab + tab')).toEqual([['tab', 12, 15]]);
   });
+  it('leaves alone a name that begins the name of a function', () => {
+    expect(namesIn('arc length(tab, arc) + arc', ['arc', 'tab']).map(({ name, from }) => [name, from])).toEqual([['tab', 11], ['arc', 16], ['arc', 23]]);
+    expect(namesIn('if arc > tab and (tab) then arc else (arc)', ['arc', 'tab'])).toHaveLength(5);
+  });
   it('works in a formula that does not read', () => {
     expect(found('if spine is ( tab +')).toEqual([['spine', 3, 8], ['tab', 14, 17]]);
   });

@@ -9,7 +9,7 @@ export interface NameSpan {
 /**
  * Where the given names stand in a formula, as text: it also works on a formula that does not read yet, so that the desk can
  * light what follows a measure while one of the formulas is being typed. The longest name wins ("inside depth" over "depth");
- * a name after a dot belongs to a piece and does not count.
+ * a name after a dot belongs to a piece and one that begins a function's name to that: neither counts.
  */
 export function namesIn(formula: string, names: readonly string[]): readonly NameSpan[] {
   if (names.length === 0) return [];
@@ -26,6 +26,9 @@ interface Finder {
   /** Names as they are called, by how they are compared. */
   readonly names: ReadonlyMap<string, string>;
 }
+/** A name that begins the name of a function, as in `arc length(…)`, does not stand for itself. */
+const NO_CALL = '(?!\\s*\\()(?!\\s+(?!(?:and|or|not|is|if|then|else)\\b)\\p{L}+\\s*\\()';
+
 const finders = new Map<string, Finder>();
 function finder(names: readonly string[]): Finder {
   const key = names.join('\n');
@@ -35,7 +38,7 @@ function finder(names: readonly string[]): Finder {
     .sort((a, b) => b.length - a.length)
     .map((name) => name.replace(/[.*+?^${}()|[\]\\]/gu, '\\$&').replace(/\s+/gu, '\\s+'));
   const made = {
-    pattern: new RegExp(`(?<![\\p{L}\\p{N}_.])(?:${words.join('|')})(?![\\p{L}\\p{N}_])`, 'giu'),
+    pattern: new RegExp(`(?<![\\p{L}\\p{N}_.])(?:${words.join('|')})(?![\\p{L}\\p{N}_])${NO_CALL}`, 'giu'),
     names: new Map(names.map((name) => [keyOf(name), name])),
   };
   if (finders.size > 50) finders.clear();

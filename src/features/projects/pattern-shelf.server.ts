@@ -1,6 +1,6 @@
-import { compilePattern, drawFolded, evaluate, usualSizing } from '@/engine';
+import { drawFolded, evaluate, usualSizing } from '@/engine';
 import { drawingSvg } from '@/exports/svg/drawing';
-import { listPatterns } from '@/features/patterns/patterns.server';
+import { getPatternModel, listPatterns } from '@/features/patterns/patterns.server';
 
 /** A pattern as the workroom offers it. */
 export interface ShelfPattern {
@@ -17,16 +17,17 @@ let shelf: readonly ShelfPattern[] | null = null;
 
 /** Every pattern with its folded picture. Patterns are part of the application, so they are drawn once. */
 export function patternShelf(): readonly ShelfPattern[] {
-  shelf ??= listPatterns().flatMap((pattern): ShelfPattern[] => {
-    const compiled = compilePattern(pattern);
-    if (!compiled.ok) return [];
-    const figures = evaluate(compiled.value, usualSizing(compiled.value));
+  if (shelf !== null) return shelf;
+  shelf = listPatterns().flatMap((pattern): ShelfPattern[] => {
+    const model = getPatternModel(pattern.slug);
+    if (model === undefined) return [];
+    const figures = evaluate(model, usualSizing(model));
     return [{
       slug: pattern.slug,
       name: pattern.name,
       summary: pattern.summary,
       asks: pattern.measures.filter((measure) => measure.ask && !measure.ask.finer).map((measure) => measure.name).join(', '),
-      folded: drawingSvg(drawFolded(compiled.value, figures, { width: 120, height: 104 }), { class: 'card-cream' }),
+      folded: drawingSvg(drawFolded(model, figures, { width: 120, height: 104 }), { class: 'card-cream' }),
     }];
   });
   return shelf;

@@ -35,7 +35,7 @@ export default function Desk({ project }: { readonly project: OpenProject }) {
   /** Which of measures and pieces lies beside the write-up where there is room for two. */
   const [side, setSide] = useState<'measures' | 'pieces'>('measures');
   const [piece, setPiece] = useState<string | null>(null);
-  const [listOpen, setListOpen] = useState(false);
+  const [listOpen, setListOpen] = useState(() => location.hash === '#proof');
   const [dialog, setDialog] = useState<'facts' | 'publish' | null>(null);
   const [slug, setSlug] = useState(project.slug);
   const [published, setPublished] = useState<{ readonly edition: number; readonly revision: number | null }>(() => publishedOf(project));

@@ -1,10 +1,14 @@
 import { useStore } from '@nanostores/react';
+import { useState } from 'react';
+import { Icon } from '@/components/Icon';
 import type { MeasureDef } from '@/engine';
 import { namesOf } from '@/features/projects/formula-names';
+import { fieldOfFault } from '@/features/projects/proof-place';
 import { AddMeasure } from './AddMeasure';
 import { Choices } from './Choices';
 import { ColumnHead } from './ColumnHead';
 import type { DeskStore } from './desk-store';
+import { cutText } from './figure-text';
 import { FitList } from './FitList';
 import { MeasureRow } from './MeasureRow';
 import { UnitsAndGrid } from './UnitsAndGrid';
@@ -23,6 +27,15 @@ export function MeasuresColumn({ store }: { readonly store: DeskStore }) {
       <MeasureRow key={measure.name} store={store} measure={measure} names={names} faults={faults} figure={figures.get(measure.name)} lit={lit} stale={work.stale} sizing={draft.sizing} />
     ));
   const finer = draft.pattern.measures.filter((measure) => measure.ask?.finer);
+  const [finerOpen, setFinerOpen] = useState(false);
+  // What is selected or does not read is never folded away.
+  const needsFiner = finer.some((measure) => lit?.selected === measure.name || faults.some((fault) => fieldOfFault(fault, measure.name) !== null));
+  const finerShown = finerOpen || needsFiner;
+
+  const inShort = (measure: MeasureDef) => {
+    const figure = figures.get(measure.name);
+    return figure ? `${measure.name} ${cutText(figure, draft.sizing)}` : measure.name;
+  };
 
   return (
     <section className="desk-column" data-column="measures" aria-label="Measures" tabIndex={-1}>
@@ -45,8 +58,20 @@ export function MeasuresColumn({ store }: { readonly store: DeskStore }) {
           </tbody>
           {finer.length === 0 ? null : (
             <tbody>
-              <GroupRow words="Finer points" rest="asked, but set apart" />
-              {rows(finer)}
+              <tr className="measure-finer">
+                <td colSpan={5}>
+                  <button type="button" aria-expanded={finerShown} onClick={() => setFinerOpen(!finerShown)}>
+                    <Icon name={finerShown ? 'chevron-down' : 'chevron-right'} />
+                    <b>Finer points</b>
+                    <span>
+                      {finerShown
+                        ? 'asked, but set apart'
+                        : finer.map(inShort).join(' · ')}
+                    </span>
+                  </button>
+                </td>
+              </tr>
+              {finerShown ? rows(finer) : null}
             </tbody>
           )}
           <tbody>

@@ -106,7 +106,7 @@ function PieceView({ figure, name, live, isLit, pattern }: PieceViewProps) {
           cut {figure.count} · {figure.stock} · {show(figure.across, { units, grid, bare: true }).typeset} × {show(figure.along, { units, grid }).typeset}
         </span>
       </p>
-      <DrawingView drawing={drawPiece(figure, { width: 400, units, grid, labels: true, dims: true })} isLit={(of) => sizes?.get(of)?.some(isLit) ?? false} />
+      <DrawingView drawing={drawPiece(figure, { width: 400, tallest: 250, units, grid })} isLit={(of) => sizes?.get(of)?.some(isLit) ?? false} />
     </div>
   );
 }

@@ -24,7 +24,10 @@ export function WriteUpColumn({ store, projectId }: { readonly store: DeskStore;
         lit={store.$litNames}
         uploads={{ projectId }}
         onChange={store.setWriteUp}
-        onSelectMeasure={store.select}
+        onSelectMeasure={(name) => {
+          // Putting the caret elsewhere keeps the light: Escape puts it out.
+          if (name !== null) store.select(name);
+        }}
       />
     </section>
   );

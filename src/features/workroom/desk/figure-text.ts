@@ -1,15 +1,17 @@
-import { decimal, MM_PER, show, showValue, type GridId, type KindName, type MeasureFigure, type Unit } from '@/engine';
+import { MM_PER, show, showValue, type GridId, type KindName, type MeasureFigure, type Unit } from '@/engine';
 
 export interface Showing {
   readonly units: Unit;
   readonly grid: GridId;
 }
 
-/** The value before it is rounded, in the author's units to four decimals (two in millimetres), as a column of figures. */
+const DIGITS: Readonly<Record<Unit, number>> = { in: 4, cm: 3, mm: 2 };
+
+/** The value before it is rounded, in the author's units, always to as many decimals, so that a column of them can be compared. */
 export function exactText(figure: MeasureFigure, { units, grid }: Showing): string {
   if (figure.kind !== 'length') return showValue(figure.exact, figure.kind, { units, grid, bare: true }).typeset;
   const unit = figure.unit ?? units;
-  return decimal(figure.exact / MM_PER[unit], unit === 'in' ? 4 : unit === 'cm' ? 3 : 2);
+  return (figure.exact / MM_PER[unit]).toFixed(DIGITS[unit]);
 }
 
 /** The value as it is cut. The unit is said only where it is not the author's own. */
