@@ -1,8 +1,6 @@
 import { drawFolded, show } from '@/engine';
 import { drawingSvg } from '@/exports/svg/drawing';
 import { pieceCount, piecesWords, shortTimeWords } from '@/features/sizing/facts';
-import { USUAL_STOCK } from '@/features/sizing/reader-view';
-import { STOCKS } from '@/engine';
 import type { Edition } from './editions.server';
 import { authorsFigures } from './models.server';
 
@@ -39,12 +37,11 @@ function workOut(edition: Edition): CardFacts {
     first?.from === undefined || first.to === undefined
       ? ''
       : `${first.name} ${show(first.from, { units, grid, bare: true }).typeset} to ${show(first.to, { units, grid }).typeset}`;
-  const { name } = STOCKS[USUAL_STOCK];
   const tooLarge = plan.tooLarge.length > 0;
   return {
     range,
     pieces: piecesWords(pieceCount(figures)),
-    sheets: tooLarge ? `Needs more than ${name}` : `Takes ${plan.used} of ${name}`,
+    sheets: tooLarge ? `Needs more than ${plan.stock.name}` : `Takes ${plan.used} of ${plan.stock.name}`,
     tooLarge,
     time: shortTimeWords(edition.minutes),
     picture: edition.hero ? null : drawingSvg(drawFolded(model, figures, { width: 240, height: 180 }), { class: 'folded' }),

@@ -3,8 +3,6 @@ import { config } from '@/config.server';
 import { db } from '@/db/client.server';
 import { editions } from '@/db/schema';
 import { pieceCount, piecesWords, sheetsWords, sizesTogether, timeWords } from '@/features/sizing/facts';
-import { USUAL_STOCK } from '@/features/sizing/reader-view';
-import { STOCKS } from '@/engine';
 import { esc } from '@/writeup/escape';
 import { jpegUrl } from '@/writeup/pictures';
 import { atomFeed, type FeedEntry } from './atom';
@@ -47,7 +45,7 @@ function contentHtml(edition: Edition): string {
   const { units, grid } = edition.sizing;
   const facts = [
     `${sizesTogether(figures.finished.inside, { units, grid })} inside, or any size you choose`,
-    `${piecesWords(pieceCount(figures))}, ${sheetsWords(plan, STOCKS[USUAL_STOCK].name)}`,
+    `${piecesWords(pieceCount(figures))}, ${sheetsWords(plan)}`,
     timeWords(edition.minutes),
   ].filter((fact) => fact !== '');
   const picture = edition.hero

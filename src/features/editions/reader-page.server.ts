@@ -1,4 +1,4 @@
-import { explain, type Model, type Sizing, type StockId } from '@/engine';
+import { explain, type Model, type Sizing, type Stock } from '@/engine';
 import type { Links } from '@/features/sizing/live-html';
 import { sizingHref } from '@/features/sizing/live-html';
 import { inUnits, type Typed } from '@/features/sizing/reader-store';
@@ -54,9 +54,9 @@ function readLink(model: Model, params: URLSearchParams, authors: Sizing): { siz
   return { sizing: inUnits(sizing, sizing.units), typed: {}, linkFaults: faults.map(explain) };
 }
 
-function keepParams(stock: StockId, edition: string | null): string {
+function keepParams(stock: Stock, edition: string | null): string {
   const params = new URLSearchParams();
-  if (stock !== USUAL_STOCK) params.set('card', stock);
+  if (stock !== USUAL_STOCK) params.set('card', stock.id);
   if (edition !== null) params.set('edition', edition);
   return params.toString();
 }
