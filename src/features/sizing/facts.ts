@@ -49,9 +49,9 @@ export const pieceCount = (figures: Figures): number => figures.pieces.reduce((a
 export const piecesWords = (n: number): string => `${n} ${n === 1 ? 'piece' : 'pieces'}`;
 
 /** `3 sheets of 12 × 12 in`; what is too large for the sheet is said first. */
-export function sheetsWords(plan: SheetPlan, stockName: string): string {
-  if (plan.tooLarge.length > 0) return `too large for ${stockName}: ${plan.tooLarge.map(({ name }) => name).join(', ')}`;
-  return `${plan.used} ${plan.used === 1 ? 'sheet' : 'sheets'} of ${stockName}`;
+export function sheetsWords({ stock, used, tooLarge }: SheetPlan): string {
+  if (tooLarge.length > 0) return `too large for ${stock.name}: ${tooLarge.map(({ name }) => name).join(', ')}`;
+  return `${used} ${used === 1 ? 'sheet' : 'sheets'} of ${stock.name}`;
 }
 
 /** Minutes as a person says them: `about 40 minutes`, `about two hours`, `about 1 h 15`. */

@@ -29,7 +29,7 @@ const WARNING =
   '<svg class="icon" viewBox="0 0 24 24" width="20" height="20" aria-hidden="true"><path d="M12 3.5 22 20.5H2ZM12 10v5M12 17.6v.4"/></svg>';
 
 /** Finished size, card, pieces, cut grid and time. */
-export function factsHtml(figures: Figures, plan: SheetPlan, { stockName, minutes }: { readonly stockName: string; readonly minutes: number | null }): string {
+export function factsHtml(figures: Figures, plan: SheetPlan, minutes: number | null): string {
   const { units, grid } = figures.sizing;
   const outside = figures.finished.outside
     .map(({ mm, name }) => `<span class="measure" title="${esc(name)}">${esc(show(mm, { units, grid, bare: true }).typeset)}</span>`)
@@ -37,7 +37,7 @@ export function factsHtml(figures: Figures, plan: SheetPlan, { stockName, minute
   const cut = cutWords(figures);
   const rows: [string, string][] = [
     ['Finished, outside', `${outside} ${units}`],
-    ['Card', esc(sheetsWords(plan, stockName))],
+    ['Card', esc(sheetsWords(plan))],
     ['Pieces', esc(piecesWords(pieceCount(figures)))],
     ['Cut to', `${esc(cut.to)}; ${esc(cut.off)}`],
   ];
@@ -47,7 +47,7 @@ export function factsHtml(figures: Figures, plan: SheetPlan, { stockName, minute
 }
 
 /** Every fit with the room it leaves, then whether the pieces fit the sheet. */
-export function fitsHtml(figures: Figures, plan: SheetPlan, stockName: string): string {
+export function fitsHtml(figures: Figures, plan: SheetPlan): string {
   const fits = figures.fits.map((fit) => {
     const state = fit.holds ? 'holds' : fit.advice ? 'advice' : 'fails';
     const words = fit.holds ? '' : `<span class="fit-why">${esc(fit.otherwise)}</span>`;
@@ -55,8 +55,8 @@ export function fitsHtml(figures: Figures, plan: SheetPlan, stockName: string): 
   });
   const large = plan.tooLarge.length > 0;
   const sheets = large
-    ? item('fails', `Too large for ${stockName}`, plan.tooLarge.map(({ name }) => name).join(', '), '<span class="fit-why">Take a larger sheet or a smaller size.</span>')
-    : item('holds', `All pieces fit ${stockName}`, `${plan.used} ${plan.used === 1 ? 'sheet' : 'sheets'}`, '');
+    ? item('fails', `Too large for ${plan.stock.name}`, plan.tooLarge.map(({ name }) => name).join(', '), `<span class="fit-why">${esc(plan.tooLarge[0]?.hint ?? '')}</span>`)
+    : item('holds', `All pieces fit ${plan.stock.name}`, `${plan.used} ${plan.used === 1 ? 'sheet' : 'sheets'}`, '');
   return [...fits, sheets].join('');
 }
 

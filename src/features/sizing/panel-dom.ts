@@ -1,10 +1,10 @@
-import { GRIDS, type GridId, type Model, type Sizing, type StockId, type Unit } from '@/engine';
+import { GRIDS, type GridId, type Model, type Sizing, type Unit } from '@/engine';
 import { fieldTroubleHtml, gridsHtml, otherTroubleHtml, sizingHref, wholeStepsHtml, type Links } from './live-html';
 import { morphInto } from './morph';
 import type { Panel, PanelField } from './panel';
 import { rangeRuler, rangeRulerSvg } from './range-ruler';
 import type { ReaderStore, Typed } from './reader-store';
-import type { ReaderView } from './reader-view';
+import { readStock, type ReaderView } from './reader-view';
 import { parameterName } from './sizing-form';
 import { readSizing } from './sizing-link';
 
@@ -72,7 +72,7 @@ export function bindPanel(panel: HTMLElement, page: HTMLElement, store: ReaderSt
     else if (choice !== undefined) store.choose(choice, button.value);
   });
   form.addEventListener('change', ({ target }) => {
-    if (target instanceof HTMLSelectElement && target.name === 'card') store.stock(target.value as StockId);
+    if (target instanceof HTMLSelectElement && target.name === 'card') store.stock(readStock(target.value));
   });
   form.addEventListener('submit', (event) => {
     event.preventDefault();

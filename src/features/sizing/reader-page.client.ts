@@ -1,4 +1,4 @@
-import { compilePattern, drawFolded, STOCKS, type Model, type Pattern, type Sizing, type StockId } from '@/engine';
+import { compilePattern, drawFolded, type Model, type Pattern, type Sizing, type Stock } from '@/engine';
 import { drawingSvg } from '@/exports/svg/drawing';
 import { articleFigures, markChanged } from './article-figures';
 import { factsHtml, fitsHtml, lastGoodHtml, closesWords, sizingHref, type Links } from './live-html';
@@ -6,14 +6,14 @@ import { morphInto } from './morph';
 import { panelFor } from './panel';
 import { bindPanel, showPanel } from './panel-dom';
 import { createReaderStore, type ReaderState } from './reader-store';
-import { readerView, USUAL_STOCK } from './reader-view';
+import { readerView, readStock, USUAL_STOCK } from './reader-view';
 
 /** What the server puts into the page for the island. */
 export interface ProjectData {
   readonly pattern: Pattern;
   readonly authors: Sizing;
   readonly asked: Sizing;
-  readonly stock: StockId;
+  readonly stock: string;
   readonly path: string;
   /** Set when the page shows an edition that is not the newest. */
   readonly edition: number | null;
@@ -30,7 +30,7 @@ export function startReader(panel: HTMLElement): void {
   if (!compiled.ok) return;
 
   const model = compiled.value;
-  const store = createReaderStore(model, { sizing: data.asked, authors: data.authors, stock: data.stock });
+  const store = createReaderStore(model, { sizing: data.asked, authors: data.authors, stock: readStock(data.stock) });
   const paint = painter(page, panel, model, data);
   let waiting = false;
   let painted = store.$state.get();
@@ -63,8 +63,8 @@ function painter(page: HTMLElement, panel: HTMLElement, model: Model, data: Proj
 
     document.documentElement.dataset.units = shown.sizing.units;
     article.show(shown);
-    put('facts', factsHtml(shown, view.plan, { stockName: view.stockName, minutes: data.minutes }));
-    put('fits', fitsHtml(shown, view.plan, view.stockName));
+    put('facts', factsHtml(shown, view.plan, data.minutes));
+    put('fits', fitsHtml(shown, view.plan));
     put('closes', closesWords(shown));
     put('dock-size', view.insideWords);
     put('dock-closes', `${closesWords(shown)} · ${view.sheetsWords}`);
@@ -82,9 +82,9 @@ function painter(page: HTMLElement, panel: HTMLElement, model: Model, data: Proj
   };
 }
 
-function keep(stock: StockId, edition: number | null): string {
+function keep(stock: Stock, edition: number | null): string {
   const params = new URLSearchParams();
-  if (stock !== USUAL_STOCK && stock in STOCKS) params.set('card', stock);
+  if (stock !== USUAL_STOCK) params.set('card', stock.id);
   if (edition !== null) params.set('edition', String(edition));
   return params.toString();
 }

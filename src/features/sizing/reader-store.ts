@@ -1,9 +1,9 @@
 import { atom, type ReadableAtom } from 'nanostores';
 import {
   defaultGrid, evaluate, explain, GRIDS, gridsFor, readValue,
-  type Figures, type GridId, type Model, type Result, type Sizing, type StockId, type Unit,
+  type Figures, type GridId, type Model, type Result, type Sizing, type Stock, type Unit,
 } from '@/engine';
-import { withChoice, withValue } from './sizing-values';
+import { valueIn, withChoice, withValue } from './sizing-values';
 import { judge, type Verdict } from './verdict';
 
 /** What a reader typed that does not read, by measure; it stays in the field until it does. */
@@ -13,12 +13,12 @@ export interface ReaderState {
   /** The newest sizing that can be made: what the page shows while a later one cannot. */
   readonly lastGood: Sizing;
   readonly typed: Typed;
-  readonly stock: StockId;
+  readonly stock: Stock;
 }
 /** One reader's sizing on one page. Units and cut grid never change the size of the box. */
 export interface ReaderStore {
   readonly $state: ReadableAtom<ReaderState>;
-  /** Reads what was typed for a measure; an empty field takes the usual value back. */
+  /** Reads what was typed for a measure; an empty field takes the author's value back. */
   type(measure: string, text: string): void;
   /** Whether what was typed so far reads and can be made: then it need not wait until typing ends. */
   wouldWork(measure: string, text: string): boolean;
@@ -26,11 +26,11 @@ export interface ReaderStore {
   choose(choice: string, option: string): void;
   units(units: Unit): void;
   grid(grid: GridId): void;
-  stock(stock: StockId): void;
+  stock(stock: Stock): void;
   ask(sizing: Sizing): void;
 }
 
-export function createReaderStore(model: Model, start: { readonly sizing: Sizing; readonly authors: Sizing; readonly stock: StockId }): ReaderStore {
+export function createReaderStore(model: Model, start: { readonly sizing: Sizing; readonly authors: Sizing; readonly stock: Stock }): ReaderStore {
   const first = judge(model, start.sizing, start.authors, { nearest: true });
   const $state = atom<ReaderState>({ verdict: first, lastGood: first.shown.sizing, typed: {}, stock: start.stock });
 
@@ -49,7 +49,7 @@ export function createReaderStore(model: Model, start: { readonly sizing: Sizing
     const sizing = current();
     const figure = $state.get().verdict.figures.measures.find(({ name }) => name === measure);
     if (!figure) return { ok: false, faults: [] };
-    if (text.trim() === '') return { ok: true, value: withValue(sizing, measure, null) };
+    if (text.trim() === '') return { ok: true, value: withValue(sizing, measure, valueIn(start.authors, measure)) };
     const value = readValue(figure, text, { units: sizing.units });
     return value.ok ? { ok: true, value: withValue(sizing, measure, value.value) } : value;
   };

@@ -1,4 +1,4 @@
-import { evaluate, planSheets, STOCKS, type Figures, type Model, type SheetPlan, type StockId } from '@/engine';
+import { evaluate, planSheets, STOCKS, type Figures, type Model, type SheetPlan, type Stock } from '@/engine';
 import { insideWords, sheetsWords } from './facts';
 import { onWholeSteps } from './reader-store';
 import type { Verdict } from './verdict';
@@ -6,8 +6,7 @@ import type { Verdict } from './verdict';
 /** All that a reader's page works out from one verdict; the same on the server and in the browser. */
 export interface ReaderView {
   readonly verdict: Verdict;
-  readonly stock: StockId;
-  readonly stockName: string;
+  readonly stock: Stock;
   readonly plan: SheetPlan;
   /** The asked size moved onto the ruler's whole steps, where that is another size and can be made. */
   readonly whole: Figures | null;
@@ -15,25 +14,24 @@ export interface ReaderView {
   readonly sheetsWords: string;
 }
 
-export const USUAL_STOCK: StockId = '12x12in';
+/** Cardstock is mostly sold in scrapbook squares. */
+export const USUAL_STOCK: Stock = STOCKS['12x12in'];
 
-export function readerView(model: Model, verdict: Verdict, stock: StockId): ReaderView {
+export function readerView(model: Model, verdict: Verdict, stock: Stock): ReaderView {
   const plan = planSheets(verdict.shown, { stock });
-  const stockName = STOCKS[stock].name;
   const moved = verdict.good ? onWholeSteps(model, verdict.asked, verdict.figures) : null;
   const whole = moved ? evaluate(model, moved) : null;
   return {
     verdict,
     stock,
-    stockName,
     plan,
     whole: whole && whole.problems.length === 0 ? whole : null,
     insideWords: insideWords(verdict.shown),
-    sheetsWords: sheetsWords(plan, stockName),
+    sheetsWords: sheetsWords(plan),
   };
 }
 
 /** The sheet named in a link; the usual one for a name that is not known. */
-export function readStock(text: string | null): StockId {
-  return (Object.keys(STOCKS) as StockId[]).find((id) => id === text) ?? USUAL_STOCK;
+export function readStock(text: string | null): Stock {
+  return Object.values(STOCKS).find(({ id }) => id === text) ?? USUAL_STOCK;
 }

@@ -1,8 +1,8 @@
 import { evaluate, explain, GRID_IDS, gridsFor, readValue, UNITS, type Model, type Sizing, type Unit } from '@/engine';
 import { fieldText } from './panel';
 import { inUnits, type Typed } from './reader-store';
-import { readSizing } from './sizing-link';
-import { withChoice, withValue } from './sizing-values';
+import { readSizing, slugOf } from './sizing-link';
+import { valueIn, withChoice, withValue } from './sizing-values';
 
 /** The field that carries the sizing that the form was drawn at, as a link's query. */
 export const FROM = 'from';
@@ -13,8 +13,8 @@ export interface FormReading {
   readonly typed: Typed;
 }
 
-/** A measure's or choice's name as it stands in links and forms: `inside-width`. */
-export const parameterName = (name: string): string => name.trim().toLowerCase().replace(/\s+/g, '-');
+/** A measure's or choice's name as it stands in links and forms alike: `inside-width`. */
+export const parameterName = slugOf;
 
 /** Whether these parameters were sent by the sizing form and not by a link. */
 export const isSizingForm = (params: URLSearchParams): boolean => params.has(FROM);
@@ -35,7 +35,7 @@ export function readSizingForm(model: Model, params: URLSearchParams, usual: Siz
     const text = params.get(parameterName(measure.name));
     if (!measure.asked || text === null || text.trim() === fieldText(measure, before)) continue;
     if (text.trim() === '') {
-      read = withValue(read, measure.name, null);
+      read = withValue(read, measure.name, valueIn(usual, measure.name));
       continue;
     }
     const value = readValue(measure, text, { units: before.units });

@@ -6,6 +6,9 @@ export function withValue(sizing: Sizing, measure: string, value: number | null)
   return { ...sizing, values: value === null ? others : { ...others, [keyOf(measure)]: value } };
 }
 
+/** The answer for a measure; null when there is none and the usual value follows from the pattern. */
+export const valueIn = (sizing: Sizing, measure: string): number | null => sizing.values[keyOf(measure)] ?? null;
+
 export function withChoice(sizing: Sizing, choice: string, option: string): Sizing {
   return { ...sizing, choices: { ...sizing.choices, [keyOf(choice)]: option } };
 }
