@@ -51,7 +51,7 @@ function block(node: BlockNode, around: Surroundings): string {
     case 'heading': {
       const text = inlines(node.content, around);
       if (text === '') return '';
-      const level = Math.min(Math.max(node.attrs.level, around.above + 1), 4) as Level;
+      const level = Math.min(Math.max(node.attrs.level === 3 ? 3 : 2, around.above + 1), 4) as Level;
       return `<h${level} id="${headingId(node.content ?? [], around.ids)}">${text}</h${level}>`;
     }
     case 'bulletList':

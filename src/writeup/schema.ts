@@ -26,6 +26,7 @@ export const plainText = StarterKit.configure({
   link: false,
   trailingNode: false,
   heading: { levels: [2, 3] },
+  dropcursor: { color: 'var(--plum)', width: 3 },
 });
 
 /** Our own nodes and marks, without views: the editor swaps in those with a view, under the same names. */

@@ -31,11 +31,11 @@ export function insertBlock(editor: Editor, node: ProseMirrorNode): boolean {
   return true;
 }
 
-/** Puts the caret into the text behind `pos`; makes a paragraph there when nothing can be typed. */
+/** Puts the caret into the paragraph behind `pos`, made when there is none. */
 export function afterBlock(tr: Editor['state']['tr'], pos: number): void {
   const $after = tr.doc.resolve(pos);
   const paragraph = tr.doc.type.schema.nodes.paragraph;
-  if (!$after.nodeAfter?.isTextblock && paragraph && $after.parent.canReplaceWith($after.index(), $after.index(), paragraph)) {
+  if (paragraph && $after.nodeAfter?.type !== paragraph && $after.parent.canReplaceWith($after.index(), $after.index(), paragraph)) {
     tr.insert(pos, paragraph.create());
   }
   tr.setSelection(TextSelection.near(tr.doc.resolve(pos + 1), 1));

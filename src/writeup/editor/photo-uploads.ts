@@ -37,7 +37,8 @@ export const photoUploads = ({ send, say }: PhotoUploadsOptions) =>
               if (!change) return mapped;
               if ('remove' in change) return mapped.remove(mapped.find(undefined, undefined, (spec) => spec.id === change.remove));
               const { id, pos, dom } = change.add;
-              return mapped.add(tr.doc, [Decoration.widget(pos, dom, { id, key: id, side: -1, stopEvent: () => true, ignoreSelection: true })]);
+              // Side 1: a photo that arrives at the same place goes in front, so that several keep their order.
+              return mapped.add(tr.doc, [Decoration.widget(pos, dom, { id, key: id, side: 1, stopEvent: () => true, ignoreSelection: true })]);
             },
           },
           props: {
