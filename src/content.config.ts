@@ -15,6 +15,8 @@ const handbook = defineCollection({
     pattern: z.string().regex(/^[a-z0-9-]+$/),
     /** The piece whose drawing stands for the guide in the index. */
     piece: z.string(),
+    /** Asked measures that the form beside the guide puts to the reader. */
+    ask: z.array(z.string()).min(1).max(6),
   }),
 });
 

@@ -44,7 +44,7 @@ describe.each(guides)('$name', ({ text }) => {
 
   it('asks only for measures that its pattern asks for', () => {
     const asked = model.pattern.measures.filter(({ ask }) => ask).map(({ name }) => name);
-    const named = all(text, /<SizeForm ask=\{\[([^\]]+)\]\}/g).flatMap((list) => all(list, /'([^']+)'/g));
+    const named = one(text, /^ask: \[(.+)\]$/m).split(', ');
     expect(named.filter((name) => !asked.includes(name))).toEqual([]);
   });
 });

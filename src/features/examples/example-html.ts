@@ -1,7 +1,6 @@
-import { drawPiece, explain, planSheets, sayParts, showValue, STOCKS, type PieceFigure } from '@/engine';
+import { drawPiece, explain, planSheets, sayParts, showValue, type PieceFigure } from '@/engine';
 import { drawingSvg } from '@/exports/svg/drawing';
 import { pieceCount } from '@/features/sizing/facts';
-import { USUAL_STOCK } from '@/features/sizing/reader-view';
 import { esc } from '@/writeup/escape';
 import { readLive } from '@/writeup/live';
 import { measureInside } from '@/writeup/render-figures';
@@ -23,11 +22,19 @@ export function pieceOf({ model, figures }: Example, name: string): PieceFigure 
   return piece;
 }
 
-/** A piece's drawing with its dimensions, twice: laid out for a wide place and for a phone. */
-export function pieceSvg(example: Example, name: string, { wide, narrow }: { wide: number; narrow: number }): string {
+export interface Places {
+  /** Pixels across in a wide place and on a phone; the same for both gives one drawing. */
+  readonly wide: number;
+  readonly narrow: number;
+  /** The piece itself is at most this tall. */
+  readonly tallest?: number;
+}
+
+/** A piece's drawing with its dimensions, laid out for a wide place and once more for a phone. */
+export function pieceSvg(example: Example, name: string, { wide, narrow, tallest }: Places): string {
   const { units, grid } = example.figures.sizing;
   const piece = pieceOf(example, name);
-  const drawn = (width: number, layout: { class?: string }) => drawingSvg(drawPiece(piece, { width, units, grid }), layout);
+  const drawn = (width: number, layout: { class?: string }) => drawingSvg(drawPiece(piece, { width, units, grid, tallest }), layout);
   return wide === narrow ? drawn(wide, {}) : drawn(wide, { class: 'wide-only' }) + drawn(narrow, { class: 'narrow-only' });
 }
 
@@ -37,11 +44,15 @@ export function wordsHtml(example: Example, name: string): string {
   return pieceOf(example, name)
     .instructions.map((sentence) =>
       sayParts(sentence, { units, grid })
-        .map(({ text, figure }) => (figure ? `<span class="measure">${esc(text)}</span>` : esc(text)))
+        .map((part) => (part.figure ? `<span class="measure">${heard(part)}</span>` : esc(part.text)))
         .join(''),
     )
     .join(' ');
 }
+
+/** A figure to see and the same to hear, as in a write-up. */
+const heard = ({ typeset, spoken }: { typeset: string; spoken: string }): string =>
+  `<span class="figure" aria-hidden="true">${esc(typeset)}</span><span class="visually-hidden spoken">${esc(spoken)}</span>`;
 
 /** What keeps the asked size from being made; empty when nothing does. */
 export function troublesHtml({ troubles, figures }: Example): string {
@@ -56,8 +67,8 @@ export function troublesHtml({ troubles, figures }: Example): string {
 /** Whether the pieces go together, and what card they take. */
 export function closesHtml({ figures }: Example): string {
   const fails = figures.fits.filter(({ holds, advice }) => !holds && !advice);
-  const stock = STOCKS[USUAL_STOCK].name;
-  const plan = planSheets(figures, { stock: USUAL_STOCK });
+  const plan = planSheets(figures, { stock: '12x12in' });
+  const stock = plan.stock.name;
   const closes = fails.length === 0 ? 'It closes' : `Does not hold: ${fails.map(({ name }) => name).join(', ')}`;
   const pieces = pieceCount(figures) === 1 ? 'its piece comes' : `its ${pieceCount(figures)} pieces come`;
   const card =

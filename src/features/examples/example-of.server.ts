@@ -1,8 +1,6 @@
-import type { Model } from '@/engine';
-import { getPattern } from '@/features/patterns/patterns.server';
-import { exampleModel, workExample, type Example } from './example';
+import { getPatternModel } from '@/features/patterns/patterns.server';
+import { workExample, type Example } from './example';
 
-const models = new Map<string, Model>();
 const worked = new WeakMap<Request, Map<string, Example>>();
 
 /**
@@ -14,17 +12,9 @@ export function exampleOf(request: Request, slug: string): Example {
   worked.set(request, examples);
   const known = examples.get(slug);
   if (known) return known;
-  const example = workExample(modelOf(slug), new URL(request.url).searchParams);
+  const model = getPatternModel(slug);
+  if (!model) throw new Error(`No pattern is called "${slug}": see content/patterns.`);
+  const example = workExample(model, new URL(request.url).searchParams);
   examples.set(slug, example);
   return example;
-}
-
-function modelOf(slug: string): Model {
-  const known = models.get(slug);
-  if (known) return known;
-  const pattern = getPattern(slug);
-  if (!pattern) throw new Error(`No pattern is called "${slug}": see content/patterns.`);
-  const model = exampleModel(pattern);
-  models.set(slug, model);
-  return model;
 }

@@ -1,6 +1,6 @@
-import { compilePattern, explain, usualSizing, type Figures, type Model, type Pattern, type Sizing } from '@/engine';
+import { explain, usualSizing, type Fault, type Figures, type Model, type Sizing } from '@/engine';
 import { panelFor, type Panel } from '@/features/sizing/panel';
-import { isSizingForm, FROM, parameterName, readSizingForm } from '@/features/sizing/sizing-form';
+import { isSizingForm, readSizingForm, type FormReading } from '@/features/sizing/sizing-form';
 import { readSizing, writeSizing } from '@/features/sizing/sizing-link';
 import { judge } from '@/features/sizing/verdict';
 
@@ -18,42 +18,34 @@ export interface Example {
   readonly troubles: readonly string[];
 }
 
-/** The pattern as a model. Patterns in content/ were checked when they were loaded, so a fault here is a bug. */
-export function exampleModel(pattern: Pattern): Model {
-  const compiled = compilePattern(pattern);
-  if (!compiled.ok) throw new Error(`${pattern.slug}: ${compiled.faults.map(explain).join(' ')}`);
-  return compiled.value;
-}
-
-/** Works the box out from the parameters that belong to it; others are left alone. */
+/**
+ * Works the box out from an address or from its form. Parameters that name nothing of the pattern are left alone.
+ * Without `lastGood`, a size that cannot be made gives the nearest that can.
+ */
 export function workExample(model: Model, parameters: URLSearchParams, lastGood?: Sizing): Example {
   const usual = usualSizing(model);
-  const own = ownParameters(model, parameters);
-  const read = isSizingForm(own)
-    ? readSizingForm(model, own, usual)
-    : { ...readSizing(model, own, usual), typed: {} };
-  const verdict = judge(model, read.sizing, lastGood ?? usual, { nearest: lastGood === undefined });
-  const unread = Object.entries(read.typed);
+  const { sizing, typed, faults } = read(model, parameters, usual);
+  const verdict = judge(model, sizing, lastGood ?? usual, { nearest: lastGood === undefined });
+  const unread = Object.entries(typed);
   return {
     model,
     usual,
-    asked: read.sizing,
+    asked: sizing,
     figures: verdict.shown,
     panel: panelFor(model, verdict.figures),
     typed: Object.fromEntries(unread.map(([name, { text }]) => [name, text])),
     troubles: [
-      ...('faults' in read ? read.faults.map(explain) : []),
+      ...faults.map(explain),
       ...unread.map(([, { sentence }]) => sentence),
       ...verdict.refusals.map(({ problem }) => problem.sentence),
     ],
   };
 }
 
+function read(model: Model, parameters: URLSearchParams, usual: Sizing): FormReading & { readonly faults: readonly Fault[] } {
+  if (isSizingForm(parameters)) return { ...readSizingForm(model, parameters, usual), faults: [] };
+  return { ...readSizing(model, parameters, usual), typed: {} };
+}
+
 /** The size that a form was drawn at, for its hidden field. */
 export const drawnAt = ({ model, asked, usual }: Example): string => writeSizing(model, asked, usual).replace(/^\?/, '');
-
-function ownParameters(model: Model, parameters: URLSearchParams): URLSearchParams {
-  const names = new Set([FROM, 'units', 'cut']);
-  for (const { name } of [...model.pattern.measures, ...model.pattern.choices]) names.add(parameterName(name));
-  return new URLSearchParams([...parameters].filter(([name]) => names.has(name)));
-}

@@ -1,8 +1,8 @@
-import { GRIDS, type Pattern } from '@/engine';
+import { compilePattern, GRIDS, type Model, type Pattern } from '@/engine';
 import { fieldText } from '@/features/sizing/panel';
 import { FROM, parameterName } from '@/features/sizing/sizing-form';
 import { writeSizing } from '@/features/sizing/sizing-link';
-import { drawnAt, exampleModel, workExample, type Example } from './example';
+import { drawnAt, workExample, type Example } from './example';
 import { changesWords, closesHtml, liveInside, pieceSvg, troublesHtml, wordsHtml } from './example-html';
 
 /**
@@ -11,8 +11,7 @@ import { changesWords, closesHtml, liveInside, pieceSvg, troublesHtml, wordsHtml
  */
 export function followExample(form: HTMLFormElement): (changed: EventTarget | null) => void {
   const slug = form.dataset.example ?? '';
-  const source = document.querySelector(`script[data-pattern="${slug}"]`)?.textContent ?? 'null';
-  const model = exampleModel(JSON.parse(source) as Pattern);
+  const model = modelIn(document, slug);
   let example = workExample(model, parametersOf(form));
 
   return (changed) => {
@@ -25,6 +24,14 @@ export function followExample(form: HTMLFormElement): (changed: EventTarget | nu
     example = next;
     history.replaceState(null, '', `${location.pathname}${addressOf(next)}${location.hash}`);
   };
+}
+
+/** The pattern comes with the page, already checked by the server, so that it does not compile is our own fault. */
+function modelIn(page: Document, slug: string): Model {
+  const source = page.querySelector(`script[data-pattern="${CSS.escape(slug)}"]`)?.textContent ?? 'null';
+  const compiled = compilePattern(JSON.parse(source) as Pattern);
+  if (!compiled.ok) throw new Error(`${slug} does not compile.`);
+  return compiled.value;
 }
 
 const parametersOf = (form: HTMLFormElement): URLSearchParams =>
