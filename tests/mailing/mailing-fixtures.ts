@@ -19,7 +19,10 @@ export function addProject(id = 'seed-box', author = 'ines'): void {
     .run({ id, author });
 }
 
-export function addSubscriber(id: string, { email = `${id}@mail.example`, state = 'confirmed', units = 'in', name = null as string | null } = {}): void {
+export function addSubscriber(
+  id: string,
+  { email = `${id}@mail.example`, state = 'confirmed', units = 'in', name = null as string | null } = {},
+): void {
   sqlite()
     .prepare(
       `INSERT INTO subscriber (id, name, email, email_key, state, units, leave_token, confirmed_at)
@@ -45,7 +48,10 @@ export function addMailing(id = 'm1', { edition = 1, at = NOON, project = 'seed-
        VALUES (@id, @project, @edition, 'ines', 'preparing', 'New: Seed box', 'Hello [name],', 'Words.', @html, @text, @parts, @at, 'Ines Thornbury, Seed Circle', 'ines@quilletlane.example')`,
     )
     .run({
-      id, edition, at, project,
+      id,
+      edition,
+      at,
+      project,
       html: `<p>${slots}</p>`,
       text: slots,
       parts: JSON.stringify({ in: part('in'), mm: part('mm'), cm: part('cm') }),
@@ -54,6 +60,14 @@ export function addMailing(id = 'm1', { edition = 1, at = NOON, project = 'seed-
 
 export const deliveryOf = (subscriber: string) =>
   sqlite().prepare('SELECT * FROM delivery WHERE subscriber_id = ?').get(subscriber) as {
-    state: string; attempts: number; unknowns: number; next_at: number; message_id: string; phase: string; code: number | null; reply: string;
+    state: string;
+    attempts: number;
+    unknowns: number;
+    next_at: number;
+    message_id: string;
+    phase: string;
+    code: number | null;
+    reply: string;
   };
-export const mailingState = (id = 'm1') => sqlite().prepare('SELECT state FROM mailing WHERE id = ?').pluck().get(id) as string;
+export const mailingState = (id = 'm1') =>
+  sqlite().prepare('SELECT state FROM mailing WHERE id = ?').pluck().get(id) as string;

@@ -3,11 +3,30 @@ import { afterEach, beforeEach, describe, expect, it } from 'vitest';
 import { sqlite } from '@/db/client.server';
 import { fanOut } from '@/features/mailing/fan-out.server';
 import { readGate } from '@/features/mailing/gate.server';
-import { claim, countDeliveries, handOver, pauseMailing, record, recover, resumeMailing, stopMailing, troublesOf } from '@/features/mailing/outbox.server';
+import {
+  claim,
+  countDeliveries,
+  handOver,
+  pauseMailing,
+  record,
+  recover,
+  resumeMailing,
+  stopMailing,
+  troublesOf,
+} from '@/features/mailing/outbox.server';
 import { openTransport, type MailTransport } from '@/features/mailing/transport.server';
 import { createMailWorker, type MailWorker } from '@/features/mailing/worker.server';
 import { testDatabase } from '../setup/test-database';
-import { addAuthor, addMailing, addProject, addSubscriber, deliveryOf, mailingState, MINUTE, NOON } from './mailing-fixtures';
+import {
+  addAuthor,
+  addMailing,
+  addProject,
+  addSubscriber,
+  deliveryOf,
+  mailingState,
+  MINUTE,
+  NOON,
+} from './mailing-fixtures';
 import { startScriptedServer, type ScriptedServer } from './scripted-server';
 
 let server: ScriptedServer;
@@ -57,7 +76,11 @@ describe('the rows of a mailing', () => {
     addMailing();
     fanOut('m1', { now, domain: 'quilletlane.example' });
     expect(sqlite().prepare('SELECT subscriber_id FROM delivery').pluck().all()).toEqual(['wenna']);
-    expect(sqlite().prepare('SELECT state, total, prepared_at FROM mailing').get()).toEqual({ state: 'sending', total: 1, prepared_at: NOON });
+    expect(sqlite().prepare('SELECT state, total, prepared_at FROM mailing').get()).toEqual({
+      state: 'sending',
+      total: 1,
+      prepared_at: NOON,
+    });
   });
 
   it('are the same when they are made twice, over more than one page', () => {
@@ -82,7 +105,9 @@ describe('the rows of a mailing', () => {
   it('are not claimed before all of them are there', () => {
     addSubscriber('wenna');
     addMailing();
-    sqlite().exec("INSERT INTO delivery (mailing_id, subscriber_id, email_key, message_id) VALUES ('m1', 'wenna', 'wenna@mail.example', '<d.1@x>')");
+    sqlite().exec(
+      "INSERT INTO delivery (mailing_id, subscriber_id, email_key, message_id) VALUES ('m1', 'wenna', 'wenna@mail.example', '<d.1@x>')",
+    );
     expect(claim('w', { now: Date.now() + MINUTE, limit: 10 })).toEqual([]);
   });
 });
@@ -96,8 +121,15 @@ describe('sending', () => {
     expect(deliveryOf('t-450')).toMatchObject({ state: 'queued', attempts: 1, next_at: NOON + MINUTE, code: 450 });
     expect(deliveryOf('t-550')).toMatchObject({ state: 'rejected', code: 550 });
     expect(deliveryOf('drop-before-data')).toMatchObject({ state: 'queued', phase: 'envelope', code: null });
-    expect(deliveryOf('drop-after-dot')).toMatchObject({ state: 'unknown', phase: 'complete', unknowns: 1, next_at: NOON + 15 * MINUTE });
-    expect(sqlite().prepare('SELECT email_key, reason FROM suppression').all()).toEqual([{ email_key: 't-550@mail.example', reason: 'hard' }]);
+    expect(deliveryOf('drop-after-dot')).toMatchObject({
+      state: 'unknown',
+      phase: 'complete',
+      unknowns: 1,
+      next_at: NOON + 15 * MINUTE,
+    });
+    expect(sqlite().prepare('SELECT email_key, reason FROM suppression').all()).toEqual([
+      { email_key: 't-550@mail.example', reason: 'hard' },
+    ]);
     expect(mailingState()).toBe('sending');
   });
 
@@ -106,9 +138,30 @@ describe('sending', () => {
     addMailing();
     await work(worker());
     expect(troublesOf('m1')).toEqual([
-      { what: 'refused', count: 2, reply: '550 5.1.1 no such person', enhanced: '5.1.1', suppressed: true, nextAt: null },
-      { what: 'refused', count: 1, reply: '554 5.7.1 refused by policy', enhanced: '5.7.1', suppressed: false, nextAt: null },
-      { what: 'uncertain', count: 1, reply: 'Connection closed unexpectedly', enhanced: null, suppressed: false, nextAt: NOON + 15 * MINUTE },
+      {
+        what: 'refused',
+        count: 2,
+        reply: '550 5.1.1 no such person',
+        enhanced: '5.1.1',
+        suppressed: true,
+        nextAt: null,
+      },
+      {
+        what: 'refused',
+        count: 1,
+        reply: '554 5.7.1 refused by policy',
+        enhanced: '5.7.1',
+        suppressed: false,
+        nextAt: null,
+      },
+      {
+        what: 'uncertain',
+        count: 1,
+        reply: 'Connection closed unexpectedly',
+        enhanced: null,
+        suppressed: false,
+        nextAt: NOON + 15 * MINUTE,
+      },
     ]);
   });
 
@@ -200,7 +253,18 @@ describe('sending', () => {
   });
 
   it('pauses when three servers in a row refuse who we are', async () => {
-    for (const local of ['d-554', 'd-554+b', 'd-554+c', 'd-554+d', 'd-554+e', 'd-554+f', 'd-554+g', 'd-554+h', 'd-554+i']) addSubscriber(local);
+    for (const local of [
+      'd-554',
+      'd-554+b',
+      'd-554+c',
+      'd-554+d',
+      'd-554+e',
+      'd-554+f',
+      'd-554+g',
+      'd-554+h',
+      'd-554+i',
+    ])
+      addSubscriber(local);
     addMailing();
     await work(worker());
     expect(mailingState()).toBe('paused');
@@ -252,7 +316,9 @@ describe('a mail server that is away', () => {
       now += MINUTE;
     }
     expect(mailingState()).toBe('paused');
-    expect(sqlite().prepare('SELECT pause_reason FROM mailing').pluck().get()).toMatch(/^The mail server has been away for half an hour: /);
+    expect(sqlite().prepare('SELECT pause_reason FROM mailing').pluck().get()).toMatch(
+      /^The mail server has been away for half an hour: /,
+    );
     server.refuseWith(null);
     resumeMailing('m1', now);
     await work(it);
@@ -268,7 +334,9 @@ describe('a process that ends', () => {
     const [first, second] = claim('dead', { now, limit: 2 });
     handOver(second!, 'dead', now);
     expect(recover('worker one', now)).toEqual({ released: 1, unknown: 1 });
-    expect(sqlite().prepare('SELECT state FROM delivery WHERE id IN (?, ?) ORDER BY id').pluck().all(first, second)).toEqual(['queued', 'unknown']);
+    expect(
+      sqlite().prepare('SELECT state FROM delivery WHERE id IN (?, ?) ORDER BY id').pluck().all(first, second),
+    ).toEqual(['queued', 'unknown']);
     const it = worker();
     await work(it);
     expect(counts()).toEqual({ ...NONE, accepted: 2, uncertain: 1 });
@@ -282,7 +350,9 @@ describe('a process that ends', () => {
   it('in the middle of making rows leaves them to be completed', async () => {
     for (let i = 0; i < 3; i += 1) addSubscriber(`s${i}`);
     addMailing();
-    sqlite().exec("INSERT INTO delivery (mailing_id, subscriber_id, email_key, next_at, message_id) VALUES ('m1', 's1', 's1@mail.example', 0, '<d.abc@x>')");
+    sqlite().exec(
+      "INSERT INTO delivery (mailing_id, subscriber_id, email_key, next_at, message_id) VALUES ('m1', 's1', 's1@mail.example', 0, '<d.abc@x>')",
+    );
     await work(worker());
     expect(counts()).toEqual({ ...NONE, accepted: 3 });
     expect(new Set(server.received.map(({ to }) => to)).size).toBe(3);
@@ -386,7 +456,7 @@ describe('a copy as it arrives', () => {
     addSubscriber('wenna', { email: 'Wenna.Tolliver@mail.example', name: 'Wénna <b>&"Tolliver"', units: 'mm' });
     addMailing();
     await work(worker());
-    const [{ raw, from, to }] = server.received as [{ raw: string; from: string; to: string }];
+    const { raw, from, to } = server.received[0]!;
     const messageId = deliveryOf('wenna').message_id;
     const mail = await simpleParser(raw);
 
@@ -397,16 +467,20 @@ describe('a copy as it arrives', () => {
     expect(mail.replyTo?.text).toBe('ines@quilletlane.example');
     expect(mail.messageId).toBe(messageId);
     expect(messageId).toMatch(/^<d\.[0-9a-f]{24}@quilletlane\.example>$/);
-    expect(mail.to).toMatchObject({ value: [{ name: 'Wénna <b>&"Tolliver"', address: 'Wenna.Tolliver@mail.example' }] });
+    expect(mail.to).toMatchObject({
+      value: [{ name: 'Wénna <b>&"Tolliver"', address: 'Wenna.Tolliver@mail.example' }],
+    });
     expect(mail.subject).toBe('New: Seed box');
 
-    const header = (name: string) => mail.headerLines.filter(({ key }) => key === name).map(({ line }) => line.replace(/\r?\n\s*/g, ' '));
+    const header = (name: string) =>
+      mail.headerLines.filter(({ key }) => key === name).map(({ line }) => line.replace(/\r?\n\s*/g, ' '));
     expect(header('list-id')).toEqual(['List-ID: "Quillet Lane Seed Circle" <projects.quilletlane.example>']);
     expect(header('list-unsubscribe')).toEqual(['List-Unsubscribe: <http://localhost:4321/unsubscribe?t=token-wenna>']);
     expect(header('list-unsubscribe-post')).toEqual(['List-Unsubscribe-Post: List-Unsubscribe=One-Click']);
     expect(header('mime-version')).toEqual(['MIME-Version: 1.0']);
     for (const one of ['date', 'from', 'to', 'message-id', 'subject']) expect(header(one), one).toHaveLength(1);
-    for (const none of ['precedence', 'auto-submitted', 'bcc', 'cc', 'x-mailer']) expect(header(none), none).toEqual([]);
+    for (const none of ['precedence', 'auto-submitted', 'bcc', 'cc', 'x-mailer'])
+      expect(header(none), none).toEqual([]);
 
     expect(header('content-type')[0]).toMatch(/^Content-Type: multipart\/alternative;/);
     expect(raw.indexOf('text/plain; charset=utf-8')).toBeGreaterThan(0);
@@ -427,7 +501,9 @@ describe('a copy as it arrives', () => {
     addSubscriber('perrin');
     addMailing();
     await work(worker());
-    const texts = await Promise.all(server.received.map(async ({ to, raw }) => [to, (await simpleParser(raw)).text] as const));
+    const texts = await Promise.all(
+      server.received.map(async ({ to, raw }) => [to, (await simpleParser(raw)).text] as const),
+    );
     const byTo = new Map(texts);
     expect(byTo.get('wenna@mail.example')).toContain('unsubscribe?t=token-wenna');
     expect(byTo.get('wenna@mail.example')).toContain('units=cm');
@@ -438,8 +514,14 @@ describe('a copy as it arrives', () => {
 
 describe('the transport', () => {
   const message = (to: string, text: string) => ({
-    envelope: { from: 'b@quilletlane.example', to }, from: { name: '', address: 'a@quilletlane.example' }, to: { name: '', address: to },
-    subject: 's', text, messageId: '<d.00000000000000000000000a@quilletlane.example>', date: new Date(NOON), headers: {},
+    envelope: { from: 'b@quilletlane.example', to },
+    from: { name: '', address: 'a@quilletlane.example' },
+    to: { name: '', address: to },
+    subject: 's',
+    text,
+    messageId: '<d.00000000000000000000000a@quilletlane.example>',
+    date: new Date(NOON),
+    headers: {},
   });
   const sendOne = async (transport: MailTransport, to: string, text = 'x') => {
     const answer = await transport.send(message(to, text));
@@ -449,8 +531,14 @@ describe('the transport', () => {
 
   it('tells a line that broke in the middle of the message from one that broke after it', async () => {
     const long = 'A line that is long enough to fill the sockets between.\n'.repeat(150_000);
-    expect(await sendOne(openTransport(server.url), 'drop-mid-data@mail.example', long)).toMatchObject({ phase: 'body', code: null });
-    expect(await sendOne(openTransport(server.url), 'drop-after-dot@mail.example')).toMatchObject({ phase: 'complete', code: null });
+    expect(await sendOne(openTransport(server.url), 'drop-mid-data@mail.example', long)).toMatchObject({
+      phase: 'body',
+      code: null,
+    });
+    expect(await sendOne(openTransport(server.url), 'drop-after-dot@mail.example')).toMatchObject({
+      phase: 'complete',
+      code: null,
+    });
   });
 
   it('says that there was no connection', async () => {

@@ -5,9 +5,17 @@ const facts = { domain: 'place.example', siteUrl: 'https://boxes.example', token
 
 describe('who a mail is from', () => {
   it('is read from a name with an address, and from an address alone', () => {
-    expect(senderParts('Seed Circle <letters@place.example>')).toEqual({ name: 'Seed Circle', address: 'letters@place.example', domain: 'place.example' });
+    expect(senderParts('Seed Circle <letters@place.example>')).toEqual({
+      name: 'Seed Circle',
+      address: 'letters@place.example',
+      domain: 'place.example',
+    });
     expect(senderParts('"Seed, Circle" <letters@place.example>').name).toBe('Seed, Circle');
-    expect(senderParts('letters@place.example')).toEqual({ name: '', address: 'letters@place.example', domain: 'place.example' });
+    expect(senderParts('letters@place.example')).toEqual({
+      name: '',
+      address: 'letters@place.example',
+      domain: 'place.example',
+    });
   });
   it('tells each delivery by the address that refusals come back to', () => {
     expect(bounceAddress('<d.0a1b@place.example>', 'place.example')).toBe('b+0a1b@place.example');
@@ -27,6 +35,8 @@ describe('list headers', () => {
     expect(id).toBe('=?utf-8?B?R3LDtsOfZQ==?= <projects.place.example>');
   });
   it('cannot be broken out of', () => {
-    expect(listHeaders({ ...facts, listName: 'A"\r\nBcc: x@y.example' })['List-Id']).toBe('"ABcc: x@y.example" <projects.place.example>');
+    expect(listHeaders({ ...facts, listName: 'A"\r\nBcc: x@y.example' })['List-Id']).toBe(
+      '"ABcc: x@y.example" <projects.place.example>',
+    );
   });
 });

@@ -17,7 +17,8 @@ export interface Template extends CopyParts {
 
 export function templateOf(mailingId: string): Template {
   const row = db.select().from(mailings).where(eq(mailings.id, mailingId)).get();
-  if (!row?.html || !row.text || !row.unitParts || !row.messageDate) throw new Error(`mailing ${mailingId} has not been compiled`);
+  if (!row?.html || !row.text || !row.unitParts || !row.messageDate)
+    throw new Error(`mailing ${mailingId} has not been compiled`);
   return {
     subject: row.subject,
     greeting: row.greeting,

@@ -29,14 +29,16 @@ export function countAudience(now: number): Audience {
  */
 export function fanOut(mailingId: string, { now, domain }: { now: number; domain: string }): void {
   const database = sqlite();
-  const mailing = database.prepare("SELECT message_date AS frozenAt FROM mailing WHERE id = ? AND state = 'preparing'").get(mailingId) as
-    | { frozenAt: number }
-    | undefined;
+  const mailing = database
+    .prepare("SELECT message_date AS frozenAt FROM mailing WHERE id = ? AND state = 'preparing'")
+    .get(mailingId) as { frozenAt: number } | undefined;
   if (!mailing) return;
   const { frozenAt } = mailing;
 
   const pageEnd = database
-    .prepare(`SELECT max(id) FROM (SELECT s.id FROM subscriber s WHERE s.id > @after AND ${AUDIENCE} ORDER BY s.id LIMIT ${PAGE})`)
+    .prepare(
+      `SELECT max(id) FROM (SELECT s.id FROM subscriber s WHERE s.id > @after AND ${AUDIENCE} ORDER BY s.id LIMIT ${PAGE})`,
+    )
     .pluck();
   const addPage = database.prepare(
     `INSERT INTO delivery (mailing_id, subscriber_id, email_key, next_at, message_id)

@@ -29,7 +29,8 @@ export interface Letter {
  */
 export function queueLetter(letter: Letter): void {
   const { toName = null, toAddress, subject, text, html = letterHtml(text), headers, expiresInMinutes } = letter;
-  if ([toAddress, subject].some((line) => /[\r\n\0]/.test(line))) throw new Error('a line break in a header of a letter');
+  if ([toAddress, subject].some((line) => /[\r\n\0]/.test(line)))
+    throw new Error('a line break in a header of a letter');
   const now = Date.now();
   db.insert(letters)
     .values({
@@ -66,12 +67,16 @@ const HOLD = 25 * 60_000;
 export function takeLetter(now: number): DueLetter | null {
   const database = sqlite();
   // Looked at several times a second: no write unless there is something to write.
-  const any = database.prepare("SELECT 1 FROM letter WHERE state = 'queued' AND (next_at <= @now OR expires_at <= @now) LIMIT 1");
+  const any = database.prepare(
+    "SELECT 1 FROM letter WHERE state = 'queued' AND (next_at <= @now OR expires_at <= @now) LIMIT 1",
+  );
   if (!any.get({ now })) return null;
   return database
     .transaction((): DueLetter | null => {
       const blank = "text = '', html = ''";
-      database.prepare(`UPDATE letter SET state = 'expired', ${blank} WHERE state = 'queued' AND expires_at <= ?`).run(now);
+      database
+        .prepare(`UPDATE letter SET state = 'expired', ${blank} WHERE state = 'queued' AND expires_at <= ?`)
+        .run(now);
       const letter = database
         .prepare(
           `UPDATE letter SET attempts = attempts + 1, next_at = @until WHERE id = (
@@ -105,11 +110,17 @@ export function letterMessage(letter: DueLetter): Message {
  * Writes down what came of a letter. What it said is forgotten once it has gone: it may hold a sign-in link. A lost
  * answer is tried again, since a letter twice is better than none.
  */
-export function recordLetter({ id, attempts }: DueLetter, answer: Answer, { now, random }: { now: number; random: number }): void {
+export function recordLetter(
+  { id, attempts }: DueLetter,
+  answer: Answer,
+  { now, random }: { now: number; random: number },
+): void {
   const outcome = judge(answer);
   const reply = answer.reply.slice(0, 300);
   const end = sqlite().prepare("UPDATE letter SET state = @state, reply = @reply, text = '', html = '' WHERE id = @id");
-  const again = sqlite().prepare('UPDATE letter SET attempts = @attempts, next_at = @nextAt, reply = @reply WHERE id = @id');
+  const again = sqlite().prepare(
+    'UPDATE letter SET attempts = @attempts, next_at = @nextAt, reply = @reply WHERE id = @id',
+  );
   switch (outcome.kind) {
     case 'accepted':
       end.run({ id, reply, state: 'accepted' });

@@ -37,7 +37,9 @@ export async function listMails(): Promise<{ readonly mails: readonly MailSummar
 
 async function mailIds(): Promise<string[]> {
   const names = await readdir(folder()).catch(() => []);
-  const ids = names.flatMap((name) => (name.endsWith('.eml') && NAME.test(name.slice(0, -4)) ? [name.slice(0, -4)] : []));
+  const ids = names.flatMap((name) =>
+    name.endsWith('.eml') && NAME.test(name.slice(0, -4)) ? [name.slice(0, -4)] : [],
+  );
   return ids.sort((a, b) => (a < b ? 1 : -1));
 }
 
@@ -55,7 +57,13 @@ export async function readMail(id: string): Promise<ReceivedMail | null> {
     subject: mail.subject ?? '(no subject)',
     headers: mail.headerLines.map(({ key, line }) => {
       const colon = line.indexOf(':');
-      return { name: line.slice(0, colon) || key, value: line.slice(colon + 1).replace(/\r?\n\s*/g, ' ').trim() };
+      return {
+        name: line.slice(0, colon) || key,
+        value: line
+          .slice(colon + 1)
+          .replace(/\r?\n\s*/g, ' ')
+          .trim(),
+      };
     }),
     text: mail.text ?? '',
     html: mail.html || null,
@@ -64,7 +72,11 @@ export async function readMail(id: string): Promise<ReceivedMail | null> {
   };
 }
 
-const addresses = (field: ParsedMail['to']): string => [field ?? []].flat().map(({ text }) => text).join(', ');
+const addresses = (field: ParsedMail['to']): string =>
+  [field ?? []]
+    .flat()
+    .map(({ text }) => text)
+    .join(', ');
 
 export async function deleteMails(): Promise<void> {
   const ids = await mailIds();

@@ -13,8 +13,13 @@ export function askedMailing(context: APIContext): { readonly mailing: OpenMaili
 
 /** Also for a mailing of someone else's: whether it exists is nobody's business. */
 export const noSuchMailing = (): Response =>
-  problem(404, 'No such mailing', { detail: 'There is no such mailing among yours. Open it from its project in the workroom.', code: 'no-such-mailing' });
+  problem(404, 'No such mailing', {
+    detail: 'There is no such mailing among yours. Open it from its project in the workroom.',
+    code: 'no-such-mailing',
+  });
 
-export const notInThisState = (sentence: string): Response => problem(409, 'Not now', { detail: sentence, code: 'not-in-this-state' });
+export const notInThisState = (sentence: string): Response =>
+  problem(409, 'Not now', { detail: sentence, code: 'not-in-this-state' });
 
-export const beingSent = (): Response => notInThisState('It is being sent or has been sent, so it cannot be changed any more.');
+export const beingSent = (): Response =>
+  notInThisState('It is being sent or has been sent, so it cannot be changed any more.');

@@ -25,7 +25,11 @@ export const mailingInputSchema = z.object({
 export type MailingInput = z.infer<typeof mailingInputSchema>;
 
 /** What is missing before it can be sent, as sentences; empty when nothing is. */
-export function missingIn({ subject, greeting, excerpt }: Pick<MailingInput, 'subject' | 'greeting' | 'excerpt'>): readonly string[] {
+export function missingIn({
+  subject,
+  greeting,
+  excerpt,
+}: Pick<MailingInput, 'subject' | 'greeting' | 'excerpt'>): readonly string[] {
   return [
     subject.trim() ? '' : 'The subject is empty.',
     greeting.trim() ? '' : 'The greeting is empty: “Hello [name],” would do.',

@@ -38,7 +38,13 @@ export function mailingOfNewest(projectId: string, asker: Asker): OpenMailing | 
   const edition = getEdition(project.slug);
   if (!edition) return 'unpublished';
   db.insert(mailings)
-    .values({ id: randomBytes(9).toString('hex'), projectId, edition: edition.n, authorId: edition.author.id, ...firstWords(edition) })
+    .values({
+      id: randomBytes(9).toString('hex'),
+      projectId,
+      edition: edition.n,
+      authorId: edition.author.id,
+      ...firstWords(edition),
+    })
     .onConflictDoNothing({ target: [mailings.projectId, mailings.edition] })
     .run();
   const row = db
@@ -91,7 +97,12 @@ export type SaveOutcome =
   | { readonly ok: false; readonly code: 'changed meanwhile'; readonly revision: number; readonly updatedAt: number }
   | { readonly ok: false; readonly code: 'being sent' };
 
-export function saveMailing({ row }: OpenMailing, input: MailingInput, revision: number, now = Date.now()): SaveOutcome {
+export function saveMailing(
+  { row }: OpenMailing,
+  input: MailingInput,
+  revision: number,
+  now = Date.now(),
+): SaveOutcome {
   const saved = db
     .update(mailings)
     .set({ ...input, revision: revision + 1, updatedAt: new Date(now) })
@@ -105,10 +116,19 @@ export function saveMailing({ row }: OpenMailing, input: MailingInput, revision:
 
 const compileRow = ({ row, edition }: OpenMailing): Promise<CompiledMailing> => compileMailing(edition, row);
 
-const SAMPLE: Recipient = { address: 'sample.reader@mail.example', name: 'Sample Reader', units: 'in', leaveToken: 'sample', confirmedAt: Date.UTC(2026, 1, 2) };
+const SAMPLE: Recipient = {
+  address: 'sample.reader@mail.example',
+  name: 'Sample Reader',
+  units: 'in',
+  leaveToken: 'sample',
+  confirmedAt: Date.UTC(2026, 1, 2),
+};
 
 /** Both parts as a made-up person would get them. */
-export async function previewMailing(mailing: OpenMailing, { units, name = SAMPLE.name }: { units: Recipient['units']; name?: string | null }) {
+export async function previewMailing(
+  mailing: OpenMailing,
+  { units, name = SAMPLE.name }: { units: Recipient['units']; name?: string | null },
+) {
   const compiled = await compileRow(mailing);
   return fillCopy({ ...compiled, greeting: mailing.row.greeting, siteUrl: config.siteUrl }, { ...SAMPLE, units, name });
 }
@@ -139,7 +159,9 @@ export async function sendTest(mailing: OpenMailing, to: Sender, now = Date.now(
   const compiled = await compileRow(mailing);
   const { html, text } = fillCopy({ ...compiled, greeting: row.greeting, siteUrl: config.siteUrl }, recipient);
   const { name, address, domain, replyTo } = senderOf(mailing);
-  const list = subscriber ? listHeaders({ listName: config.listName, domain, siteUrl: config.siteUrl, token: subscriber.leaveToken }) : {};
+  const list = subscriber
+    ? listHeaders({ listName: config.listName, domain, siteUrl: config.siteUrl, token: subscriber.leaveToken })
+    : {};
   queueLetter({
     toName: to.name,
     toAddress: to.email,
@@ -149,10 +171,15 @@ export async function sendTest(mailing: OpenMailing, to: Sender, now = Date.now(
     headers: { From: `"${name.replace(/["\\<>]/g, '')}" <${address}>`, 'Reply-To': replyTo, ...list },
     expiresInMinutes: 60,
   });
-  db.update(mailings).set({ testedAt: new Date(now) }).where(eq(mailings.id, row.id)).run();
+  db.update(mailings)
+    .set({ testedAt: new Date(now) })
+    .where(eq(mailings.id, row.id))
+    .run();
 }
 
-export type BeginOutcome = { readonly ok: true } | { readonly ok: false; readonly status: 409 | 412 | 422; readonly code: string; readonly sentence: string };
+export type BeginOutcome =
+  | { readonly ok: true }
+  | { readonly ok: false; readonly status: 409 | 412 | 422; readonly code: string; readonly sentence: string };
 
 /**
  * Fixes the mailing as it stands in `revision` and gives it to the worker, which makes a row for each recipient and sends.
@@ -160,16 +187,33 @@ export type BeginOutcome = { readonly ok: true } | { readonly ok: false; readonl
  */
 export async function beginSending(mailing: OpenMailing, revision: number, now = Date.now()): Promise<BeginOutcome> {
   const { row, edition } = mailing;
-  const refuse = (status: 409 | 412 | 422, code: string, sentence: string): BeginOutcome => ({ ok: false, status, code, sentence });
-  if (row.state !== 'draft') return refuse(409, 'being-sent', 'This mailing has been sent already, or is being sent now.');
-  if (row.revision !== revision) return refuse(412, 'changed-meanwhile', 'It was changed from another place meanwhile. Look at it once more, then send.');
-  if (edition.n !== edition.newest) return refuse(409, 'newer-edition', `Edition ${edition.newest} is out: tell of that one.`);
+  const refuse = (status: 409 | 412 | 422, code: string, sentence: string): BeginOutcome => ({
+    ok: false,
+    status,
+    code,
+    sentence,
+  });
+  if (row.state !== 'draft')
+    return refuse(409, 'being-sent', 'This mailing has been sent already, or is being sent now.');
+  if (row.revision !== revision)
+    return refuse(
+      412,
+      'changed-meanwhile',
+      'It was changed from another place meanwhile. Look at it once more, then send.',
+    );
+  if (edition.n !== edition.newest)
+    return refuse(409, 'newer-edition', `Edition ${edition.newest} is out: tell of that one.`);
   const [missing] = missingIn(row);
   if (missing) return refuse(422, 'unfinished', missing);
-  if (countAudience(now).people === 0) return refuse(409, 'nobody', 'Nobody has confirmed yet, so there is nobody to send it to.');
+  if (countAudience(now).people === 0)
+    return refuse(409, 'nobody', 'Nobody has confirmed yet, so there is nobody to send it to.');
   const { html, text, unitParts, bytes } = await compileRow(mailing);
   if (bytes > MOST_BYTES) {
-    return refuse(422, 'too-heavy', `The mail weighs ${Math.ceil(bytes / 1000)} kB, and past ${MOST_BYTES / 1000} kB some mail programs cut off its end. Shorten the first words or the correction note.`);
+    return refuse(
+      422,
+      'too-heavy',
+      `The mail weighs ${Math.ceil(bytes / 1000)} kB, and past ${MOST_BYTES / 1000} kB some mail programs cut off its end. Shorten the first words or the correction note.`,
+    );
   }
   const { name, replyTo } = senderOf(mailing);
   const began = db
@@ -186,12 +230,18 @@ export async function beginSending(mailing: OpenMailing, revision: number, now =
     })
     .where(and(eq(mailings.id, row.id), eq(mailings.state, 'draft'), eq(mailings.revision, revision)))
     .run();
-  return began.changes > 0 ? { ok: true } : refuse(409, 'being-sent', 'It was begun or changed from another place at this moment. Look at it once more.');
+  return began.changes > 0
+    ? { ok: true }
+    : refuse(409, 'being-sent', 'It was begun or changed from another place at this moment. Look at it once more.');
 }
 
 // ── As its page shows it ─────────────────────────────────────────────────────────────────────────────────────────────
 
-export async function viewMailing(mailing: OpenMailing, { email }: Pick<Sender, 'email'>, now = Date.now()): Promise<MailingView> {
+export async function viewMailing(
+  mailing: OpenMailing,
+  { email }: Pick<Sender, 'email'>,
+  now = Date.now(),
+): Promise<MailingView> {
   const { row, edition } = mailing;
   const { name, address, replyTo } = senderOf(mailing);
   const isDraft = row.state === 'draft';
@@ -224,7 +274,9 @@ function sendingView(row: Row, now: number): SendingView {
   const counts = countDeliveries(row.id);
   const troubles = troublesOf(row.id);
   const gate = readGate();
-  const due = troubles.filter(({ what }) => what === 'later').flatMap(({ nextAt }) => (nextAt === null ? [] : [nextAt]));
+  const due = troubles
+    .filter(({ what }) => what === 'later')
+    .flatMap(({ nextAt }) => (nextAt === null ? [] : [nextAt]));
   const isBusy = row.state === 'preparing' || (row.state === 'sending' && counts.waiting > 0);
   return {
     startedAt: row.messageDate?.getTime() ?? row.updatedAt.getTime(),
@@ -234,14 +286,19 @@ function sendingView(row: Row, now: number): SendingView {
     pauseReason: row.pauseReason,
     perMinute: acceptedSince(row.id, now - MINUTE),
     nextRetryAt: due.length > 0 ? Math.min(...due) : null,
-    away: gate && gate.opensAt > now - MINUTE && row.state === 'sending' ? { until: gate.opensAt, reply: gate.reply } : null,
+    away:
+      gate && gate.opensAt > now - MINUTE && row.state === 'sending'
+        ? { until: gate.opensAt, reply: gate.reply }
+        : null,
     isStuck: isBusy && !gate && now - lastMove(row) > 2 * MINUTE,
   };
 }
 
 function lastMove(row: Row): number {
   const last = sqlite()
-    .prepare('SELECT max(a.started_at) FROM attempt a JOIN delivery d ON d.id = a.delivery_id WHERE d.mailing_id = ? AND d.id > (SELECT max(id) - 5000 FROM delivery WHERE mailing_id = ?)')
+    .prepare(
+      'SELECT max(a.started_at) FROM attempt a JOIN delivery d ON d.id = a.delivery_id WHERE d.mailing_id = ? AND d.id > (SELECT max(id) - 5000 FROM delivery WHERE mailing_id = ?)',
+    )
     .pluck()
     .get(row.id, row.id) as number | null;
   return Math.max(last ?? 0, row.updatedAt.getTime());

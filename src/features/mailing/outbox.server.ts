@@ -12,7 +12,7 @@ import type { Trouble } from './trouble';
  *   queued → leased → in_flight → accepted | rejected | expired | unknown | queued again, later
  *
  * in three short transactions: claimed, handed over (committed before the server hears of it), and the result. None of
- * them spans an await. docs/decisions/010-outbox.md says why.
+ * them spans an await. docs/decisions/012-outbox.md says why.
  */
 const LEASE = 5 * 60_000;
 /** Longer than any answer may take (10 minutes after the last dot). */
@@ -39,11 +39,15 @@ export function claim(owner: string, { now, limit }: { now: number; limit: numbe
   const database = sqlite();
   return database
     .transaction(() => {
-      const sending = database.prepare("SELECT id FROM mailing WHERE state = 'sending' AND prepared_at IS NOT NULL ORDER BY prepared_at").pluck();
+      const sending = database
+        .prepare("SELECT id FROM mailing WHERE state = 'sending' AND prepared_at IS NOT NULL ORDER BY prepared_at")
+        .pluck();
       const due = (where: string) =>
-        database.prepare(
-          `SELECT id FROM delivery WHERE mailing_id = @mailing AND ${where} AND next_at <= @now ORDER BY next_at, id LIMIT @limit`,
-        ).pluck();
+        database
+          .prepare(
+            `SELECT id FROM delivery WHERE mailing_id = @mailing AND ${where} AND next_at <= @now ORDER BY next_at, id LIMIT @limit`,
+          )
+          .pluck();
       const fresh = due("state = 'queued' AND attempts = 0");
       const again = due("state = 'queued' AND attempts > 0");
       const lost = due(`state = 'unknown' AND unknowns < ${MOST_UNKNOWNS}`);
@@ -98,7 +102,9 @@ export function handOver(id: number, owner: string, now: number): Copy | null {
         return null;
       }
       const attempt = database
-        .prepare('INSERT INTO attempt (delivery_id, n, started_at) SELECT @id, 1 + count(*), @now FROM attempt WHERE delivery_id = @id RETURNING n')
+        .prepare(
+          'INSERT INTO attempt (delivery_id, n, started_at) SELECT @id, 1 + count(*), @now FROM attempt WHERE delivery_id = @id RETURNING n',
+        )
         .pluck()
         .get({ id, now }) as number;
       const row = database
@@ -136,14 +142,20 @@ export interface Result {
 }
 
 /** Writes down what came of one copy. A late "accepted" also settles a delivery that was given up as unknown meanwhile. */
-export function record({ deliveryId, attempt, mailingId }: Copy, owner: string, { answer, outcome, now, random }: Result): void {
+export function record(
+  { deliveryId, attempt, mailingId }: Copy,
+  owner: string,
+  { answer, outcome, now, random }: Result,
+): void {
   const database = sqlite();
   database
     .transaction(() => {
       const enhanced = answer.enhanced ?? enhancedStatus(answer.reply);
       const reply = answer.reply.slice(0, 300);
       database
-        .prepare('UPDATE attempt SET ended_at = @now, outcome = @kind, phase = @phase, code = @code, reply = @reply WHERE delivery_id = @deliveryId AND n = @attempt AND ended_at IS NULL')
+        .prepare(
+          'UPDATE attempt SET ended_at = @now, outcome = @kind, phase = @phase, code = @code, reply = @reply WHERE delivery_id = @deliveryId AND n = @attempt AND ended_at IS NULL',
+        )
         .run({ deliveryId, attempt, now, kind: outcome.kind, phase: answer.phase, code: answer.code, reply });
       const row = database
         .prepare(
@@ -170,7 +182,9 @@ export function record({ deliveryId, attempt, mailingId }: Copy, owner: string, 
         });
       if (outcome.kind === 'refused' && outcome.suppress) {
         database
-          .prepare("INSERT INTO suppression (email_key, reason, created_at) VALUES (?, 'hard', ?) ON CONFLICT DO NOTHING")
+          .prepare(
+            "INSERT INTO suppression (email_key, reason, created_at) VALUES (?, 'hard', ?) ON CONFLICT DO NOTHING",
+          )
           .run(row.emailKey, now);
       }
       if (outcome.kind === 'stop') pauseMailing(mailingId, now, outcome.why);
@@ -204,12 +218,20 @@ function nextState(row: Row, outcome: Outcome, now: number, random: number) {
     case 'refused':
       return { ...ended('rejected'), attempts: row.attempts + 1 };
     case 'unknown':
-      return { ...same, state: 'unknown', attempts: row.attempts + 1, unknowns: row.unknowns + 1, nextAt: now + REST_AFTER_UNKNOWN };
+      return {
+        ...same,
+        state: 'unknown',
+        attempts: row.attempts + 1,
+        unknowns: row.unknowns + 1,
+        nextAt: now + REST_AFTER_UNKNOWN,
+      };
     case 'later': {
       if (cancelled) return ended('cancelled');
       const attempts = row.attempts + 1;
       const nextAt = now + waitAfter(attempts, random);
-      return nextAt > row.preparedAt + GIVE_UP_AFTER ? { ...ended('expired'), attempts } : { ...same, state: waiting, attempts, nextAt };
+      return nextAt > row.preparedAt + GIVE_UP_AFTER
+        ? { ...ended('expired'), attempts }
+        : { ...same, state: waiting, attempts, nextAt };
     }
     case 'server away':
     case 'stop':
@@ -236,12 +258,18 @@ function refusesUs(mailingId: string): boolean {
  * knows whether they arrived. Called by whoever holds the worker's lease, for the rows of all others, and for leases of
  * its own that ran out. `busy` are the deliveries that it is handing over itself.
  */
-export function recover(owner: string, now: number, busy: readonly number[] = []): { readonly released: number; readonly unknown: number } {
+export function recover(
+  owner: string,
+  now: number,
+  busy: readonly number[] = [],
+): { readonly released: number; readonly unknown: number } {
   const database = sqlite();
   const mine = `lease_owner = @owner AND (lease_until > @now OR id IN (SELECT value FROM json_each(@busy)))`;
   const facts = { owner, now, busy: JSON.stringify(busy) };
   // Looked at several times a second: no write unless there is something to write.
-  const left = database.prepare(`SELECT 1 FROM delivery WHERE state IN ('leased', 'in_flight') AND NOT (${mine}) LIMIT 1`);
+  const left = database.prepare(
+    `SELECT 1 FROM delivery WHERE state IN ('leased', 'in_flight') AND NOT (${mine}) LIMIT 1`,
+  );
   if (!left.get(facts)) return { released: 0, unknown: 0 };
   return database
     .transaction(() => {
@@ -281,7 +309,9 @@ export function finishMailings(now: number): void {
 export function pauseMailing(id: string, now: number, reason: string | null = null): boolean {
   return (
     sqlite()
-      .prepare("UPDATE mailing SET state = 'paused', pause_reason = @reason, updated_at = @now WHERE id = @id AND state = 'sending'")
+      .prepare(
+        "UPDATE mailing SET state = 'paused', pause_reason = @reason, updated_at = @now WHERE id = @id AND state = 'sending'",
+      )
       .run({ id, now, reason }).changes > 0
   );
 }
@@ -290,7 +320,9 @@ export function pauseMailing(id: string, now: number, reason: string | null = nu
 export function resumeMailing(id: string, now: number): boolean {
   const resumed =
     sqlite()
-      .prepare("UPDATE mailing SET state = 'sending', pause_reason = NULL, updated_at = @now WHERE id = @id AND state = 'paused'")
+      .prepare(
+        "UPDATE mailing SET state = 'sending', pause_reason = NULL, updated_at = @now WHERE id = @id AND state = 'paused'",
+      )
       .run({ id, now }).changes > 0;
   if (resumed) openGate();
   return resumed;
@@ -326,7 +358,9 @@ export function stopMailing(id: string, now: number): boolean {
 /** Always counted from the rows, never kept beside them. */
 export function countDeliveries(mailingId: string): Counts {
   const rows = sqlite()
-    .prepare('SELECT state, attempts > 0 AS tried, count(*) AS count FROM delivery WHERE mailing_id = ? GROUP BY state, attempts > 0')
+    .prepare(
+      'SELECT state, attempts > 0 AS tried, count(*) AS count FROM delivery WHERE mailing_id = ? GROUP BY state, attempts > 0',
+    )
     .all(mailingId) as { state: string; tried: number; count: number }[];
   return countUp(rows.map((row) => ({ ...row, tried: row.tried === 1 })));
 }
@@ -350,6 +384,10 @@ export function troublesOf(mailingId: string): readonly Trouble[] {
 
 /** How many were accepted since then: the pace, for "about 3 minutes to go". */
 export const acceptedSince = (mailingId: string, since: number): number =>
-  sqlite().prepare("SELECT count(*) FROM delivery WHERE mailing_id = ? AND state = 'accepted' AND accepted_at > ?").pluck().get(mailingId, since) as number;
+  sqlite()
+    .prepare("SELECT count(*) FROM delivery WHERE mailing_id = ? AND state = 'accepted' AND accepted_at > ?")
+    .pluck()
+    .get(mailingId, since) as number;
 
-export const sendingMailings = (): readonly string[] => sqlite().prepare("SELECT id FROM mailing WHERE state = 'sending'").pluck().all() as string[];
+export const sendingMailings = (): readonly string[] =>
+  sqlite().prepare("SELECT id FROM mailing WHERE state = 'sending'").pluck().all() as string[];

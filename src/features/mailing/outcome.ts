@@ -34,7 +34,8 @@ export type Outcome =
 const NO_SUCH_ADDRESS = /^5\.1\.(?:1|2|3|6|10)$/;
 
 /** The enhanced status code at the head of a reply: `550 5.1.1 no such person` → `5.1.1`. */
-export const enhancedStatus = (reply: string): string | null => /^[245]\d\d[ -]([245]\.\d{1,3}\.\d{1,3})(?:\s|$)/.exec(reply)?.[1] ?? null;
+export const enhancedStatus = (reply: string): string | null =>
+  /^[245]\d\d[ -]([245]\.\d{1,3}\.\d{1,3})(?:\s|$)/.exec(reply)?.[1] ?? null;
 
 /** Judges an answer by phase, reply code and enhanced status, in that order; never by the reply's words. */
 export function judge({ phase, command, code, reply, enhanced = enhancedStatus(reply), refusedHere }: Answer): Outcome {
@@ -50,7 +51,8 @@ export function judge({ phase, command, code, reply, enhanced = enhancedStatus(r
 
   if (command === 'MAIL FROM') return { kind: 'stop', why: `The mail server refuses our own address: ${reply}` };
   if (enhanced === '5.2.2') return { kind: 'later' };
-  if (enhanced === '5.3.4' || (code === 552 && !enhanced)) return { kind: 'stop', why: `The mail server says that the mail is too large: ${reply}` };
+  if (enhanced === '5.3.4' || (code === 552 && !enhanced))
+    return { kind: 'stop', why: `The mail server says that the mail is too large: ${reply}` };
   if (enhanced && NO_SUCH_ADDRESS.test(enhanced)) return { kind: 'refused', suppress: true, aboutUs: false };
   const aboutUs = enhanced ? enhanced.startsWith('5.7.') : code === 554;
   return { kind: 'refused', suppress: false, aboutUs };

@@ -1,5 +1,9 @@
 /** Parts of `Name <letters@place.example>`, or of a bare address. */
-export function senderParts(mailFrom: string): { readonly name: string; readonly address: string; readonly domain: string } {
+export function senderParts(mailFrom: string): {
+  readonly name: string;
+  readonly address: string;
+  readonly domain: string;
+} {
   const named = /^\s*"?([^"<]*?)"?\s*<([^<>\s]+)>\s*$/.exec(mailFrom);
   const name = named?.[1] ?? '';
   const address = named?.[2] ?? mailFrom.trim();
@@ -13,7 +17,8 @@ export function bounceAddress(messageId: string, domain: string): string {
   return `b+${token}@${domain}`;
 }
 
-export const unsubscribeUrl = (siteUrl: string, token: string): string => `${siteUrl}/unsubscribe?t=${encodeURIComponent(token)}`;
+export const unsubscribeUrl = (siteUrl: string, token: string): string =>
+  `${siteUrl}/unsubscribe?t=${encodeURIComponent(token)}`;
 export const preferencesUrl = (siteUrl: string, token: string): string =>
   `${siteUrl}/subscribe/preferences?t=${encodeURIComponent(token)}`;
 

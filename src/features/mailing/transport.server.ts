@@ -88,9 +88,16 @@ export function openTransport(smtpUrl: string, { lanes = LANES, timeouts }: Tran
 }
 
 /** Our headers are ASCII as they are; nodemailer would wrap a quoted name and the id after it in an encoded word. */
-const asWritten = ([name, value]: [string, string]) => [name, { prepared: true, foldLines: true, value: value.replace(/[^\x20-\x7e]/g, '') }] as const;
+const asWritten = ([name, value]: [string, string]) =>
+  [name, { prepared: true, foldLines: true, value: value.replace(/[^\x20-\x7e]/g, '') }] as const;
 
-const NOT_ASCII: Answer = { phase: 'connect', code: null, enhanced: '5.6.7', reply: 'Letters other than a to z before the @ cannot be written to.', refusedHere: true };
+const NOT_ASCII: Answer = {
+  phase: 'connect',
+  code: null,
+  enhanced: '5.6.7',
+  reply: 'Letters other than a to z before the @ cannot be written to.',
+  refusedHere: true,
+};
 
 interface Witness {
   stream?: Readable;

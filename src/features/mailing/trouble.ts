@@ -8,4 +8,3 @@ export interface Trouble {
   /** When the next of them is tried again; null when none is. */
   readonly nextAt: number | null;
 }
-

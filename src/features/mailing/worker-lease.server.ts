@@ -21,5 +21,8 @@ export function leaveLease(owner: string): void {
 
 /** When a worker was last at work; null when none holds the lease. For the health page and the sending view. */
 export function workerSeenAt(): number | null {
-  return (sqlite().prepare(`SELECT updated_at FROM setting WHERE key = '${KEY}'`).pluck().get() as number | undefined) ?? null;
+  return (
+    (sqlite().prepare(`SELECT updated_at FROM setting WHERE key = '${KEY}'`).pluck().get() as number | undefined) ??
+    null
+  );
 }

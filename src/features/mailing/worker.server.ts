@@ -7,7 +7,17 @@ import { openGate, readGate, shutGate } from './gate.server';
 import { letterMessage, recordLetter, takeLetter, type DueLetter } from './letters.server';
 import { localMailUrl } from './local-mail-server.server';
 import { judge, type Answer } from './outcome';
-import { claim, finishMailings, handOver, pauseMailing, record, recover, release, sendingMailings, type Copy } from './outbox.server';
+import {
+  claim,
+  finishMailings,
+  handOver,
+  pauseMailing,
+  record,
+  recover,
+  release,
+  sendingMailings,
+  type Copy,
+} from './outbox.server';
 import { senderParts } from './sender';
 import { LANES, openTransport, type MailTransport, type Message } from './transport.server';
 import { holdLease, leaveLease } from './worker-lease.server';
@@ -34,7 +44,13 @@ const CLAIMED_AT_ONCE = 16;
 const KEEP_LEASE_EVERY = 5_000;
 
 /** The mail worker without a timer round it: everything it needs is given, so that a test can drive it. */
-export function createMailWorker({ transport, clock = Date.now, random = Math.random, lanes = LANES, owner = randomUUID() }: WorkerParts): MailWorker {
+export function createMailWorker({
+  transport,
+  clock = Date.now,
+  random = Math.random,
+  lanes = LANES,
+  owner = randomUUID(),
+}: WorkerParts): MailWorker {
   const claimed: number[] = [];
   const lanesInUse = new Set<Promise<void>>();
   const inFlight = new Set<number>();
@@ -54,7 +70,9 @@ export function createMailWorker({ transport, clock = Date.now, random = Math.ra
     const now = clock();
     const gate = shutGate(answer.reply, now);
     if (!outcome.pause && now - gate.since < PAUSE_AFTER_AWAY) return;
-    const why = outcome.pause ? 'The mail server refuses our sign-in' : 'The mail server has been away for half an hour';
+    const why = outcome.pause
+      ? 'The mail server refuses our sign-in'
+      : 'The mail server has been away for half an hour';
     for (const mailing of sendingMailings()) pauseMailing(mailing, now, `${why}: ${answer.reply}`);
   }
 
@@ -159,7 +177,10 @@ const BETWEEN_ROUNDS = 400;
  * Sends what the outbox and the letters hold until it is stopped. Several processes may start one: only the one that
  * holds the lease works, another takes over when it is gone.
  */
-export function startMailWorker({ signal, smtpUrl = config.smtpUrl ?? localMailUrl() }: { signal?: AbortSignal; smtpUrl?: string | null } = {}): {
+export function startMailWorker({
+  signal,
+  smtpUrl = config.smtpUrl ?? localMailUrl(),
+}: { signal?: AbortSignal; smtpUrl?: string | null } = {}): {
   stop(): Promise<void>;
 } {
   if (!smtpUrl) throw new Error('No mail server: set SMTP_URL, or start the local mail server first.');

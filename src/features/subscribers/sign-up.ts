@@ -1,16 +1,15 @@
 import { z } from 'zod';
-import { EMAIL_SENTENCE, emailKey } from '@/features/accounts/email-key';
+import { addressFault } from '@/features/accounts/email-key';
 
 export const UNITS = ['in', 'mm', 'cm'] as const;
 export const NAME_LIMIT = 60;
 
 /** What the sign-up form sends. `website` is a field that people do not see: whoever fills it in is a program. */
 export const signUpSchema = z.object({
-  email: z
-    .string()
-    .max(320, EMAIL_SENTENCE)
-    .refine((text) => emailKey(text) !== null, EMAIL_SENTENCE)
-    .refine((text) => !/[^\0-\x7f].*@/u.test(text), 'Before the @, only letters from a to z can be written to from here. Use another address.'),
+  email: z.string().superRefine((text, context) => {
+    const fault = addressFault(text);
+    if (fault) context.addIssue({ code: 'custom', message: fault });
+  }),
   units: z.enum(UNITS, { message: 'Sizes come in inches, millimetres or centimetres.' }).default('in'),
   website: z.string().max(500).default(''),
 });
@@ -29,4 +28,8 @@ export type Preferences = z.infer<typeof preferencesSchema>;
 export const GENERIC_ANSWER =
   'Look into your mail: if that address can be written to, a letter with a button to confirm is on its way. Nothing more comes until you have pressed it.';
 
-export const UNIT_NAMES: Readonly<Record<(typeof UNITS)[number], string>> = { in: 'inches', mm: 'millimetres', cm: 'centimetres' };
+export const UNIT_NAMES: Readonly<Record<(typeof UNITS)[number], string>> = {
+  in: 'inches',
+  mm: 'millimetres',
+  cm: 'centimetres',
+};

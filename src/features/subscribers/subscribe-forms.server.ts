@@ -43,7 +43,10 @@ export async function postConfirm({ request, clientAddress }: Posted): Promise<R
   return seeOther(`/subscribe/preferences?${new URLSearchParams({ t: token, welcome: '1' })}`);
 }
 
-export async function postPreferences({ request, url }: Pick<APIContext, 'request' | 'url'>): Promise<Response | FormFaults> {
+export async function postPreferences({
+  request,
+  url,
+}: Pick<APIContext, 'request' | 'url'>): Promise<Response | FormFaults> {
   const field = await readForm(request);
   if (!field) return NO_FORM;
   const typed = { name: field('name'), units: field('units') };
@@ -77,4 +80,7 @@ export async function postUnsubscribe({ request, url }: Pick<APIContext, 'reques
 }
 
 const plain = (status: number, sentence: string): Response =>
-  new Response(`${sentence}\n`, { status, headers: { 'content-type': 'text/plain; charset=utf-8', 'cache-control': 'no-store' } });
+  new Response(`${sentence}\n`, {
+    status,
+    headers: { 'content-type': 'text/plain; charset=utf-8', 'cache-control': 'no-store' },
+  });

@@ -4,7 +4,15 @@ export interface LetterWords {
   readonly text: string;
 }
 
-export const confirmLetter = ({ listName, url, days }: { listName: string; url: string; days: number }): LetterWords => ({
+export const confirmLetter = ({
+  listName,
+  url,
+  days,
+}: {
+  listName: string;
+  url: string;
+  days: number;
+}): LetterWords => ({
   subject: `Confirm that you want mail from ${listName}`,
   text: `Someone, most likely you, asked for mail about new boxes from ${listName} at this address.
 
@@ -16,7 +24,15 @@ The link works for ${days} days. If it was not you, do nothing: without the butt
 `,
 });
 
-export const alreadyLetter = ({ listName, preferences, leave }: { listName: string; preferences: string; leave: string }): LetterWords => ({
+export const alreadyLetter = ({
+  listName,
+  preferences,
+  leave,
+}: {
+  listName: string;
+  preferences: string;
+  leave: string;
+}): LetterWords => ({
   subject: `You already get mail from ${listName}`,
   text: `Someone, most likely you, asked for mail about new boxes from ${listName} at this address. You are on the list already, so nothing has changed.
 

@@ -42,17 +42,36 @@ export function askToSubscribe({ email, units, website }: SignUp, now = Date.now
       if (tx.select().from(suppressions).where(eq(suppressions.emailKey, key)).get()) return null;
       const known = tx.select().from(subscribers).where(eq(subscribers.emailKey, key)).get();
       if (known?.state === 'confirmed') {
-        const links = { preferences: preferencesUrl(config.siteUrl, known.leaveToken), leave: unsubscribeUrl(config.siteUrl, known.leaveToken) };
+        const links = {
+          preferences: preferencesUrl(config.siteUrl, known.leaveToken),
+          leave: unsubscribeUrl(config.siteUrl, known.leaveToken),
+        };
         return alreadyLetter({ listName: config.listName, ...links });
       }
-      const asked = { email: email.trim(), units, confirmHash: hash(token), confirmExpires: new Date(now + CONFIRM_DAYS * DAY) };
+      const asked = {
+        email: email.trim(),
+        units,
+        confirmHash: hash(token),
+        confirmExpires: new Date(now + CONFIRM_DAYS * DAY),
+      };
       if (known) tx.update(subscribers).set(asked).where(eq(subscribers.id, known.id)).run();
       else {
         tx.insert(subscribers)
-          .values({ id: randomBytes(9).toString('hex'), emailKey: key, state: 'pending', leaveToken: newToken(), createdAt: new Date(now), ...asked })
+          .values({
+            id: randomBytes(9).toString('hex'),
+            emailKey: key,
+            state: 'pending',
+            leaveToken: newToken(),
+            createdAt: new Date(now),
+            ...asked,
+          })
           .run();
       }
-      return confirmLetter({ listName: config.listName, url: `${config.siteUrl}/subscribe/confirm?t=${token}`, days: CONFIRM_DAYS });
+      return confirmLetter({
+        listName: config.listName,
+        url: `${config.siteUrl}/subscribe/confirm?t=${token}`,
+        days: CONFIRM_DAYS,
+      });
     },
     { behavior: 'immediate' },
   );
@@ -89,10 +108,14 @@ export function findSubscriber(token: string, now = Date.now()): Subscriber | nu
   return { email: row.email, name: row.name ?? '', units: row.units, state: row.state, mayUndo: mayUndo(row, now) };
 }
 
-const byToken = (token: string) => (token ? db.select().from(subscribers).where(eq(subscribers.leaveToken, token)).get() : undefined);
+const byToken = (token: string) =>
+  token ? db.select().from(subscribers).where(eq(subscribers.leaveToken, token)).get() : undefined;
 
 const mayUndo = (row: typeof subscribers.$inferSelect, now: number): boolean =>
-  row.state === 'left' && row.confirmedAt !== null && row.leftAt !== null && now - row.leftAt.getTime() < UNDO_DAYS * DAY;
+  row.state === 'left' &&
+  row.confirmedAt !== null &&
+  row.leftAt !== null &&
+  now - row.leftAt.getTime() < UNDO_DAYS * DAY;
 
 /** Takes someone off the list, at once and for all mailings; leaving twice is leaving once. False for nobody's token. */
 export function leave(token: string, now = Date.now()): boolean {
@@ -129,6 +152,12 @@ export function savePreferences(token: string, { name, units }: Preferences): bo
 export function forgetUnconfirmed(now = Date.now()): number {
   return db
     .delete(subscribers)
-    .where(and(eq(subscribers.state, 'pending'), isNull(subscribers.confirmedAt), lt(subscribers.confirmExpires, new Date(now))))
+    .where(
+      and(
+        eq(subscribers.state, 'pending'),
+        isNull(subscribers.confirmedAt),
+        lt(subscribers.confirmExpires, new Date(now)),
+      ),
+    )
     .run().changes;
 }

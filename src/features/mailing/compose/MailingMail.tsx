@@ -1,4 +1,4 @@
-import { Body, Container, Head, Heading, Html, Img, Link, Preview, Text } from '@react-email/components';
+import { Head, Heading, Html, Img, Link, Preview, Text } from '@react-email/components';
 import type { CSSProperties, ReactNode } from 'react';
 import type { Block } from './mailing-blocks';
 
@@ -34,14 +34,50 @@ export function MailingMail({ blocks, title, firstWords }: MailingMailProps) {
         <title>{title}</title>
         <style>{MEDIA}</style>
       </Head>
-      <Preview>{firstWords}</Preview>
-      <Body className="g" style={{ margin: 0, padding: '24px 0', backgroundColor: '#eaf3ef' }}>
-        <Container className="p" style={{ width: '100%', maxWidth: 600, backgroundColor: '#ffffff', border: `1px solid ${LINE}` }}>
-          {blocks.map((block, i) => (
-            <BlockView key={i} block={block} />
-          ))}
-        </Container>
-      </Body>
+      <body className="g" style={{ margin: 0, padding: 0, backgroundColor: '#eaf3ef' }}>
+        <Preview>{firstWords}</Preview>
+        <table
+          role="presentation"
+          width="100%"
+          cellPadding={0}
+          cellSpacing={0}
+          border={0}
+          className="g"
+          style={{ backgroundColor: '#eaf3ef' }}
+        >
+          <tbody>
+            <tr>
+              <td align="center" style={{ padding: '24px 0' }}>
+                <table
+                  role="presentation"
+                  width="100%"
+                  cellPadding={0}
+                  cellSpacing={0}
+                  border={0}
+                  className="p"
+                  style={{
+                    width: '100%',
+                    maxWidth: 600,
+                    backgroundColor: '#ffffff',
+                    border: `1px solid ${LINE}`,
+                    textAlign: 'left',
+                  }}
+                >
+                  <tbody>
+                    <tr>
+                      <td>
+                        {blocks.map((block, i) => (
+                          <BlockView key={i} block={block} />
+                        ))}
+                      </td>
+                    </tr>
+                  </tbody>
+                </table>
+              </td>
+            </tr>
+          </tbody>
+        </table>
+      </body>
     </Html>
   );
 }
@@ -97,7 +133,13 @@ function BlockView({ block }: { readonly block: Block }) {
                 <td className="a" style={{ backgroundColor: PLUM }}>
                   <Link
                     href={block.url}
-                    style={{ display: 'block', padding: '13px 28px 14px', font: `600 16px/22px ${FONT}`, color: '#ffffff', textDecoration: 'none' }}
+                    style={{
+                      display: 'block',
+                      padding: '13px 28px 14px',
+                      font: `600 16px/22px ${FONT}`,
+                      color: '#ffffff',
+                      textDecoration: 'none',
+                    }}
                   >
                     {block.label}
                   </Link>
@@ -110,7 +152,10 @@ function BlockView({ block }: { readonly block: Block }) {
     case 'correction':
       return (
         <Part top={24}>
-          <div className="n" style={{ padding: '16px 20px', backgroundColor: '#fdf0dc', borderLeft: '4px solid #a65a00' }}>
+          <div
+            className="n"
+            style={{ padding: '16px 20px', backgroundColor: '#fdf0dc', borderLeft: '4px solid #a65a00' }}
+          >
             <Text style={text(16, 26, { whiteSpace: 'pre-line' })}>
               <b style={{ fontWeight: 600 }}>{block.title}.</b> {block.text}
             </Text>
@@ -144,7 +189,15 @@ function BlockView({ block }: { readonly block: Block }) {
   }
 }
 
-function Part({ top, bottom = 0, children }: { readonly top: number; readonly bottom?: number; readonly children: ReactNode }) {
+function Part({
+  top,
+  bottom = 0,
+  children,
+}: {
+  readonly top: number;
+  readonly bottom?: number;
+  readonly children: ReactNode;
+}) {
   return (
     <table role="presentation" width="100%" cellPadding={0} cellSpacing={0} border={0}>
       <tbody>
@@ -180,7 +233,14 @@ function Masthead({ name, url, link }: Extract<Block, { type: 'masthead' }>) {
           </tbody>
         </table>
       </Part>
-      <table role="presentation" width="100%" cellPadding={0} cellSpacing={0} border={0} style={{ tableLayout: 'fixed', lineHeight: 0, fontSize: 0 }}>
+      <table
+        role="presentation"
+        width="100%"
+        cellPadding={0}
+        cellSpacing={0}
+        border={0}
+        style={{ tableLayout: 'fixed', lineHeight: 0, fontSize: 0 }}
+      >
         <tbody>
           <tr style={{ verticalAlign: 'top' }}>
             {Array.from({ length: 41 }, (_, i) => (
@@ -203,10 +263,23 @@ function Rows({ rows }: Pick<Extract<Block, { type: 'rows' }>, 'rows'>) {
         <tbody>
           {rows.map(({ label, value }) => (
             <tr key={label}>
-              <th scope="row" align="left" className="s r" style={{ padding: '7px 16px 7px 0', borderBottom: line, verticalAlign: 'top', ...text(14, 22, { color: SOFT }) }}>
+              <th
+                scope="row"
+                align="left"
+                className="s r"
+                style={{
+                  padding: '7px 16px 7px 0',
+                  borderBottom: line,
+                  verticalAlign: 'top',
+                  ...text(14, 22, { color: SOFT }),
+                }}
+              >
                 {label}
               </th>
-              <td className="i r u" style={{ padding: '7px 0', borderBottom: line, ...text(16, 26, { fontWeight: 600 }) }}>
+              <td
+                className="i r u"
+                style={{ padding: '7px 0', borderBottom: line, ...text(16, 26, { fontWeight: 600 }) }}
+              >
                 {value}
               </td>
             </tr>

@@ -37,10 +37,9 @@ export async function compileMailing(edition: Edition, { excerpt, withHero }: Ma
   if (!compiled.ok) throw new Error(`the pattern of edition ${edition.n} of "${edition.title}" does not compile`);
   const figures = (units: 'in' | 'mm' | 'cm') => evaluate(compiled.value, sizingIn(edition.sizing, units));
   const projectUrl = `${config.siteUrl}/projects/${edition.slug}`;
-  const unitParts = Object.fromEntries(MAIL_UNITS.map((units) => [units, unitPart(figures(units), projectUrl)])) as Record<
-    'in' | 'mm' | 'cm',
-    UnitPart
-  >;
+  const unitParts = Object.fromEntries(
+    MAIL_UNITS.map((units) => [units, unitPart(figures(units), projectUrl)]),
+  ) as Record<'in' | 'mm' | 'cm', UnitPart>;
   const facts: MailingFacts = {
     siteUrl: config.siteUrl,
     title: edition.title,
@@ -67,7 +66,10 @@ export async function compileMailing(edition: Edition, { excerpt, withHero }: Ma
 const ROOM_FOR_SLOTS = 800;
 
 /** Mail programs want the size in the element; the JPEG is at most 1200 wide, shown in the column's width. */
-function heroPicture(edition: Edition, { id, width, height }: NonNullable<Edition['hero']>): NonNullable<MailingFacts['picture']> {
+function heroPicture(
+  edition: Edition,
+  { id, width, height }: NonNullable<Edition['hero']>,
+): NonNullable<MailingFacts['picture']> {
   const shown = Math.min(COLUMN, width);
   return {
     url: `${config.siteUrl}/media/${id}.jpg`,

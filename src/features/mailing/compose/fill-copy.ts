@@ -21,7 +21,10 @@ export interface CopyParts {
 }
 
 /** One recipient's copy: the slots filled, escaped where they stand in HTML. */
-export function fillCopy({ html, text, greeting, unitParts, siteUrl }: CopyParts, recipient: Recipient): { html: string; text: string } {
+export function fillCopy(
+  { html, text, greeting, unitParts, siteUrl }: CopyParts,
+  recipient: Recipient,
+): { html: string; text: string } {
   const { address, name, units, leaveToken, confirmedAt } = recipient;
   const part = unitParts[units];
   const plain: Readonly<Record<Exclude<SlotName, 'inside' | 'outside'>, string>> = {

@@ -5,11 +5,22 @@ export type Block =
   | { readonly type: 'masthead'; readonly name: string; readonly url: string; readonly link: string }
   | { readonly type: 'title'; readonly text: string }
   | { readonly type: 'paragraph'; readonly text: string }
-  | { readonly type: 'picture'; readonly url: string; readonly width: number; readonly height: number; readonly alt: string }
+  | {
+      readonly type: 'picture';
+      readonly url: string;
+      readonly width: number;
+      readonly height: number;
+      readonly alt: string;
+    }
   | { readonly type: 'rows'; readonly rows: readonly { readonly label: string; readonly value: string }[] }
   | { readonly type: 'button'; readonly label: string; readonly url: string }
   | { readonly type: 'correction'; readonly title: string; readonly text: string }
-  | { readonly type: 'footer'; readonly why: string; readonly links: readonly { readonly label: string; readonly url: string }[]; readonly sender: string };
+  | {
+      readonly type: 'footer';
+      readonly why: string;
+      readonly links: readonly { readonly label: string; readonly url: string }[];
+      readonly sender: string;
+    };
 
 export interface MailingFacts {
   readonly siteUrl: string;
@@ -17,7 +28,12 @@ export interface MailingFacts {
   readonly excerpt: string;
   readonly edition: number;
   readonly correctionNote: string;
-  readonly picture: { readonly url: string; readonly width: number; readonly height: number; readonly alt: string } | null;
+  readonly picture: {
+    readonly url: string;
+    readonly width: number;
+    readonly height: number;
+    readonly alt: string;
+  } | null;
   /** Rows that are the same in every unit, after the sizes. */
   readonly rows: readonly { readonly label: string; readonly value: string }[];
   readonly authorName: string;
@@ -38,7 +54,13 @@ export function mailingBlocks(facts: MailingFacts): readonly Block[] {
     ...paragraphs(typed(facts.excerpt)).map((text) => ({ type: 'paragraph', text }) as const),
     ...(picture ? [{ type: 'picture', ...picture, alt: typed(picture.alt) } as const] : []),
     ...(correctionNote && facts.edition > 1
-      ? [{ type: 'correction', title: `If you have cut edition ${facts.edition - 1}`, text: typed(correctionNote) } as const]
+      ? [
+          {
+            type: 'correction',
+            title: `If you have cut edition ${facts.edition - 1}`,
+            text: typed(correctionNote),
+          } as const,
+        ]
       : []),
     {
       type: 'rows',

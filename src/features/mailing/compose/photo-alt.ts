@@ -9,7 +9,9 @@ export function photoAlt(doc: DocNode, upload: string): string {
 function* photosIn(blocks: readonly BlockNode[]): Generator<{ readonly upload: string; readonly alt: string }> {
   for (const block of blocks) {
     if (block.type === 'photo') yield block.attrs;
-    else if (block.type === 'step' || block.type === 'tip' || block.type === 'caution' || block.type === 'materials') yield* photosIn(block.content);
-    else if (block.type === 'bulletList' || block.type === 'orderedList') for (const item of block.content) yield* photosIn(item.content);
+    else if (block.type === 'step' || block.type === 'tip' || block.type === 'caution' || block.type === 'materials')
+      yield* photosIn(block.content);
+    else if (block.type === 'bulletList' || block.type === 'orderedList')
+      for (const item of block.content) yield* photosIn(item.content);
   }
 }

@@ -32,14 +32,17 @@ export function unitPart(figures: Figures, projectUrl: string): UnitPart {
 type Shown = Pick<Sizing, 'units' | 'grid'>;
 
 /** A measure in a mail stands on a thick line: the tapered tab of our pages is not to be had there. */
-const MEASURE = 'font-weight:600;border-bottom:4px solid #6d2e5b;white-space:nowrap;font-variant-numeric:diagonal-fractions;color:#231c2b';
+const MEASURE =
+  'font-weight:600;border-bottom:4px solid #6d2e5b;white-space:nowrap;font-variant-numeric:diagonal-fractions;color:#231c2b';
 const MEASURE_PLAIN = 'font-weight:600;white-space:nowrap;font-variant-numeric:diagonal-fractions;color:#231c2b';
 
-const each = (sizes: readonly SizeFigure[], shown: Shown) => sizes.map(({ mm }, i) => show(mm, { ...shown, bare: i < sizes.length - 1 }));
+const each = (sizes: readonly SizeFigure[], shown: Shown) =>
+  sizes.map(({ mm }, i) => show(mm, { ...shown, bare: i < sizes.length - 1 }));
 
+/** Set with a plain slash and a space: where a mail's font has no fractions of its own, "9 1/4" must not become "91/4". */
 const sizesHtml = (sizes: readonly SizeFigure[], shown: Shown, style: string): string =>
   each(sizes, shown)
-    .map(({ typeset }) => `<b style="${style}">${escapeHtml(typeset)}</b>`)
+    .map(({ text }) => `<b style="${style}">${escapeHtml(text.replaceAll(' ', '\u00a0'))}</b>`)
     .join(' × ');
 
 /** `9 × 6 × 2 1/4 in`, with a plain slash. */

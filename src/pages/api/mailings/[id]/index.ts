@@ -22,6 +22,7 @@ export const PUT: APIRoute = async (context) => {
   const read = await readJson(context.request, mailingInputSchema, { maxBytes: 16 * 1024 });
   if (!read.ok) return read.response;
   const saved = saveMailing(asked.mailing, read.value, revision);
-  if (saved.ok) return json({ revision: saved.revision, updatedAt: saved.updatedAt }, { headers: versionHeaders(saved) });
+  if (saved.ok)
+    return json({ revision: saved.revision, updatedAt: saved.updatedAt }, { headers: versionHeaders(saved) });
   return saved.code === 'being sent' ? beingSent() : changedMeanwhile(saved);
 };

@@ -8,7 +8,8 @@ import { pauseMailing } from '@/features/mailing/outbox.server';
 export const POST: APIRoute = async (context) => {
   const asked = askedMailing(context);
   if (asked instanceof Response) return asked;
-  if (!pauseMailing(asked.mailing.row.id, Date.now())) return notInThisState('It is not being sent just now, so there is nothing to pause.');
+  if (!pauseMailing(asked.mailing.row.id, Date.now()))
+    return notInThisState('It is not being sent just now, so there is nothing to pause.');
   const now = openMailing(asked.mailing.row.id, asked.user);
   return now ? json(await viewMailing(now, asked.user)) : noSuchMailing();
 };

@@ -13,7 +13,9 @@ export const GET: APIRoute = async (context) => {
   const units = UNITS.find((unit) => unit === searchParams.get('units')) ?? asked.mailing.edition.sizing.units;
   const { html, text } = await previewMailing(asked.mailing, { units });
   if (searchParams.get('part') === 'text') {
-    return new Response(text, { headers: { 'content-type': 'text/plain; charset=utf-8', 'cache-control': 'no-store' } });
+    return new Response(text, {
+      headers: { 'content-type': 'text/plain; charset=utf-8', 'cache-control': 'no-store' },
+    });
   }
   return new Response(html, {
     headers: {

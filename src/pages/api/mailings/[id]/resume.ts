@@ -8,7 +8,8 @@ import { resumeMailing } from '@/features/mailing/outbox.server';
 export const POST: APIRoute = async (context) => {
   const asked = askedMailing(context);
   if (asked instanceof Response) return asked;
-  if (!resumeMailing(asked.mailing.row.id, Date.now())) return notInThisState('It is not paused, so there is nothing to carry on with.');
+  if (!resumeMailing(asked.mailing.row.id, Date.now()))
+    return notInThisState('It is not paused, so there is nothing to carry on with.');
   const now = openMailing(asked.mailing.row.id, asked.user);
   return now ? json(await viewMailing(now, asked.user)) : noSuchMailing();
 };

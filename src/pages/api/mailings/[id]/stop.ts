@@ -8,7 +8,8 @@ import { stopMailing } from '@/features/mailing/outbox.server';
 export const POST: APIRoute = async (context) => {
   const asked = askedMailing(context);
   if (asked instanceof Response) return asked;
-  if (!stopMailing(asked.mailing.row.id, Date.now())) return notInThisState('It has come to its end already, so there is nothing to stop.');
+  if (!stopMailing(asked.mailing.row.id, Date.now()))
+    return notInThisState('It has come to its end already, so there is nothing to stop.');
   const now = openMailing(asked.mailing.row.id, asked.user);
   return now ? json(await viewMailing(now, asked.user)) : noSuchMailing();
 };
