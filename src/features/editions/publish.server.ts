@@ -31,7 +31,7 @@ export const NOTE_LIMIT = 2000;
  * Freezes the project as it stands into its next edition: pattern, the author's sizing, write-up and pictures. One
  * immediate transaction, so that nothing can be saved between the check and the copy. Later edits never reach it.
  */
-export function publishEdition(projectId: string, request: PublishRequest): PublishOutcome {
+export function publishEdition(projectId: string, request: PublishRequest, now = Date.now()): PublishOutcome {
   return db.transaction(
     (tx): PublishOutcome => {
       const project = tx.select().from(projects).where(eq(projects.id, projectId)).get();
@@ -77,7 +77,7 @@ export function publishEdition(projectId: string, request: PublishRequest): Publ
           heroUploadId: project.heroUploadId,
           correctionNote: note,
           publishedBy: by.id,
-          publishedAt: new Date(),
+          publishedAt: new Date(now),
         })
         .run();
       tx.update(projects).set({ publishedRevision: project.revision }).where(eq(projects.id, projectId)).run();
