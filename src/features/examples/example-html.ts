@@ -1,4 +1,5 @@
 import { drawPiece, explain, planSheets, sayParts, showValue, type PieceFigure } from '@/engine';
+import { ICONS } from '@/components/icons';
 import { drawingSvg } from '@/exports/svg/drawing';
 import { pieceCount } from '@/features/sizing/facts';
 import { esc } from '@/writeup/escape';
@@ -64,7 +65,7 @@ export function troublesHtml({ troubles, figures }: Example): string {
   return `${items}<p>The figures stay at a size that works: ${esc(inside)} inside.</p>`;
 }
 
-/** Whether the pieces go together, and what card they take. */
+/** Whether the pieces go together, and what card they take; an icon says the same at a glance. */
 export function closesHtml({ figures }: Example): string {
   const fails = figures.fits.filter(({ holds, advice }) => !holds && !advice);
   const plan = planSheets(figures, { stock: '12x12in' });
@@ -75,7 +76,9 @@ export function closesHtml({ figures }: Example): string {
     plan.tooLarge.length > 0
       ? `but ${plan.tooLarge.map(({ name }) => name).join(' and ')} will not fit a ${stock} sheet`
       : `and ${pieces} out of ${plan.used} ${plan.used === 1 ? 'sheet' : 'sheets'} of ${stock}`;
-  return esc(`${closes}, ${card}.`);
+  const icon = fails.length === 0 && plan.tooLarge.length === 0 ? 'check' : 'warning';
+  const svg = `<svg class="icon said-${icon}" viewBox="0 0 24 24" width="20" height="20" aria-hidden="true"><path d="${ICONS[icon]}"/></svg>`;
+  return `${svg}<span>${esc(`${closes}, ${card}.`)}</span>`;
 }
 
 /** What the last change did, for the line that says so. */

@@ -25,8 +25,10 @@ export interface Example {
 export function workExample(model: Model, parameters: URLSearchParams, lastGood?: Sizing): Example {
   const usual = usualSizing(model);
   const { sizing, typed, faults } = read(model, parameters, usual);
-  const verdict = judge(model, sizing, lastGood ?? usual, { nearest: lastGood === undefined });
   const unread = Object.entries(typed);
+  // A field that does not read says nothing about the size, so the last good one stays.
+  const asked = unread.length > 0 && lastGood ? lastGood : sizing;
+  const verdict = judge(model, asked, lastGood ?? usual, { nearest: lastGood === undefined });
   return {
     model,
     usual,

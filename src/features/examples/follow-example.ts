@@ -69,6 +69,9 @@ function redrawFields(form: HTMLFormElement, example: Example): void {
     const range = form.querySelector(`[data-range="${CSS.escape(one.name)}"]`);
     if (range) range.textContent = one.range;
   }
+  const { grids, grid } = example.panel;
+  const options = grids.map((id) => new Option(GRIDS[id].says, id, false, id === grid));
+  form.querySelector('select[data-grids]')?.replaceChildren(...options);
   moveSliders(form, example, null);
 }
 
