@@ -62,6 +62,11 @@ describe('the search', () => {
     expect(matchesSearch(project, 'ARC keeper')).toBe(true);
     expect(matchesSearch(project, ' ')).toBe(true);
   });
+  it('wants the beginning of a word, not its middle', () => {
+    expect(matchesSearch(project, 'keep')).toBe(true);
+    expect(matchesSearch({ ...project, words: 'card thickness' }, 'thick')).toBe(true);
+    expect(matchesSearch({ ...project, words: 'card' }, 'ar')).toBe(false);
+  });
   it('wants every word', () => expect(matchesSearch(project, 'arc tray')).toBe(false));
 });
 

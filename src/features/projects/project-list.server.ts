@@ -9,8 +9,8 @@ import type { Asker } from './projects.server';
 import { blocking, proofList } from './proof';
 
 const MM_AN_INCH = 25.4;
-/** The list's flat pictures: never larger than this, nor than ten pixels an inch. */
-const FLAT = { width: 148, height: 84, pixelsAnInch: 10, most: 2, inset: 6 } as const;
+/** The place for flat pieces in a row, in pixels; nothing is drawn larger than ten pixels an inch. */
+const FLAT = { width: 150, height: 108, pixelsAnInch: 10, inset: 6, gap: 4 } as const;
 const FOLDED = { width: 96, height: 100 } as const;
 
 type Row = ReturnType<typeof rowsFor>[number];
@@ -48,7 +48,7 @@ function picture(row: Row): Pictured {
   const figures = evaluate(compiled.value, row.project.sizing);
   // The pieces that say most about a box are the large ones with scores.
   const scored = figures.pieces.filter((piece) => piece.net.folds.length > 0);
-  const pieces = [...(scored.length > 0 ? scored : figures.pieces)].sort((a, b) => b.area - a.area).slice(0, FLAT.most);
+  const pieces = [...(scored.length > 0 ? scored : figures.pieces)].sort((a, b) => b.area - a.area).slice(0, 2);
   return { row, worked: { model: compiled.value, figures }, pieces };
 }
 
@@ -77,12 +77,20 @@ function summary({ row, worked, pieces }: Pictured, pixelsAnInch: number): Proje
     revision: project.revision,
     updatedAt: project.updatedAt.getTime(),
     author: { id: project.authorId, name: authorName ?? 'Unnamed' },
-    flat: pieces.map((piece) =>
-      flatSvg(piece, { units, grid, scale: pixelsAnInch / MM_AN_INCH }),
-    ),
+    flat: thatFit(pieces, pixelsAnInch / MM_AN_INCH).map((piece) => flatSvg(piece, { units, grid, scale: pixelsAnInch / MM_AN_INCH })),
     folded: worked ? drawingSvg(drawFolded(worked.model, worked.figures, FOLDED)) : null,
     words: [...project.pattern.pieces, ...project.pattern.measures, ...project.pattern.choices].map((item) => item.name).join(' '),
   };
+}
+
+/** Both pieces where they fit beside or above one another, the larger one alone where they do not. */
+function thatFit(pieces: readonly PieceFigure[], scale: number): readonly PieceFigure[] {
+  const [first, second] = pieces;
+  if (first === undefined || second === undefined) return pieces;
+  const room = 2 * FLAT.inset;
+  const beside = (first.across + second.across) * scale + 2 * room + FLAT.gap <= FLAT.width + room;
+  const above = (first.along + second.along) * scale + 2 * room <= FLAT.height + room;
+  return beside || above ? pieces : [first];
 }
 
 function flatSvg(piece: PieceFigure, options: { readonly units: Unit; readonly grid: GridId; readonly scale: number }): string {
@@ -92,7 +100,7 @@ function flatSvg(piece: PieceFigure, options: { readonly units: Unit; readonly g
 /** "9 × 6 × 2 1/4 in" */
 export function sizeWords(figures: Pick<Figures, 'finished'>, options: { readonly units: Unit; readonly grid: GridId }): string {
   const sizes = figures.finished.inside.length > 0 ? figures.finished.inside : figures.finished.outside;
-  return sizes.map((size, i) => show(size.mm, { ...options, bare: i < sizes.length - 1 }).text).join(' × ');
+  return sizes.map((size, i) => show(size.mm, { ...options, bare: i < sizes.length - 1 }).typeset).join(' × ');
 }
 
 function differenceOf({ project }: Row): string {

@@ -76,11 +76,11 @@ export const sizingSchema = z.object({
   grid: z.enum(['1/8in', '1/16in', '1/32in', '1mm', '0.5mm']),
 });
 
-/** Whether a project answers to what was typed: every word must be found in its title, pattern, pieces or measures. */
+/** Whether a project answers to what was typed: every word must begin a word of its title, pattern, pieces, measures or author. */
 export function matchesSearch(project: Pick<ProjectSummary, 'title' | 'patternName' | 'words' | 'author'>, query: string): boolean {
-  const text = plain(`${project.title} ${project.patternName} ${project.words} ${project.author.name}`);
+  const text = ` ${plain(`${project.title} ${project.patternName} ${project.words} ${project.author.name}`)}`;
   return plain(query)
-    .split(/\s+/u)
-    .every((word) => text.includes(word));
+    .split(' ')
+    .every((word) => text.includes(` ${word}`));
 }
-const plain = (text: string): string => text.normalize('NFKD').replace(/\p{M}/gu, '').toLowerCase().trim();
+const plain = (text: string): string => text.normalize('NFKD').replace(/\p{M}/gu, '').toLowerCase().replace(/[^\p{L}\p{N}]+/gu, ' ').trim();

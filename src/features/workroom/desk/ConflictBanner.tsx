@@ -35,7 +35,7 @@ export function ConflictBanner({ saving }: { readonly saving: Saving }) {
             {saving.notice.words} {saving.notice.link ? <a href={saving.notice.link.href}>{saving.notice.link.words}</a> : null}
           </p>
           <button type="button" className="btn small-btn" onClick={saving.dismiss}>
-            Good
+            Close
           </button>
         </div>
       )}

@@ -93,7 +93,7 @@ export function MeasureRow(props: MeasureRowProps) {
         </td>
       </tr>
       {inFormula.length > 0 ? (
-        <tr className="measure-fault">
+        <tr className="row-fault">
           <td />
           <td colSpan={4}>
             <FaultWords id={errorId} faults={inFormula} value={measure.formula ?? ''} meanwhile={meanwhile} onCure={setFormula} />

@@ -1,5 +1,4 @@
 import { useStore } from '@nanostores/react';
-import { useState } from 'react';
 import { drawFolded, drawPiece, explain, sayParts, show, type Pattern, type PieceFigure } from '@/engine';
 import { cellSizes } from '@/features/projects/cell-sizes';
 import { namesOf } from '@/features/projects/formula-names';

@@ -1,4 +1,4 @@
-import { useEffect, useState } from 'react';
+import { useEffect, useRef, useState } from 'react';
 import { Dialog } from '@/components/Dialog';
 import { Field } from '@/components/Field';
 import { TITLE_LIMIT } from '@/features/projects/project';
@@ -26,11 +26,13 @@ export function NewProject({ patterns, open, chosen, onClose }: NewProjectProps)
   const [title, setTitle] = useState('');
   const [error, setError] = useState<string | undefined>();
   const [busy, setBusy] = useState(false);
+  const titleField = useRef<HTMLInputElement>(null);
   useEffect(() => {
     if (!open) return;
     setSlug(chosen ?? patterns[0]?.slug ?? null);
     setTitle('');
     setError(undefined);
+    titleField.current?.focus();
   }, [open, chosen, patterns]);
 
   const make = async () => {
@@ -52,7 +54,7 @@ export function NewProject({ patterns, open, chosen, onClose }: NewProjectProps)
         }}
       >
         <Field label="Title" hint="What the box is for, such as “Seed packet box”." error={error}>
-          {(control) => <input {...control} className="input" autoFocus value={title} maxLength={TITLE_LIMIT} onChange={(event) => setTitle(event.currentTarget.value)} />}
+          {(control) => <input {...control} ref={titleField} className="input" value={title} maxLength={TITLE_LIMIT} onChange={(event) => setTitle(event.currentTarget.value)} />}
         </Field>
         <fieldset className="field">
           <legend>Pattern</legend>

@@ -3,7 +3,7 @@ import type { ShelfPattern } from './NewProject';
 /** Every pattern, folded, standing on a ruled shelf. */
 export function PatternShelf({ patterns, onChoose }: { readonly patterns: readonly ShelfPattern[]; readonly onChoose: (slug: string) => void }) {
   return (
-    <section className="shelf" aria-labelledby="shelf-title">
+    <section className="pattern-shelf" aria-labelledby="shelf-title">
       <div className="shelf-head">
         <h2 id="shelf-title">Start from a pattern</h2>
         <p className="soft">It comes with its measures, pieces, fits and making instructions. All of it is yours to change.</p>
@@ -12,8 +12,8 @@ export function PatternShelf({ patterns, onChoose }: { readonly patterns: readon
         {patterns.map((pattern) => (
           <li key={pattern.slug}>
             <button type="button" onClick={() => onChoose(pattern.slug)}>
-              <span className="shelf-box" dangerouslySetInnerHTML={{ __html: pattern.folded }} />
-              <span className="shelf-lip" aria-hidden="true">
+              <span className="pattern-box" dangerouslySetInnerHTML={{ __html: pattern.folded }} />
+              <span className="pattern-lip" aria-hidden="true">
                 <span className="ruled" />
               </span>
               <b>{pattern.name}</b>
