@@ -1,9 +1,11 @@
-import { explain, type Model, type Sizing, type Stock } from '@/engine';
+import { stockOf, STOCKS, type Model, type Sizing, type Stock } from '@/engine';
+import type { FieldFault } from '@/features/http/problem';
 import type { Links } from '@/features/sizing/live-html';
 import { sizingHref } from '@/features/sizing/live-html';
 import { inUnits, type Typed } from '@/features/sizing/reader-store';
 import { readerView, readStock, USUAL_STOCK, type ReaderView } from '@/features/sizing/reader-view';
 import { isSizingForm, readSizingForm } from '@/features/sizing/sizing-form';
+import { readingWords } from '@/features/sizing/reading-words';
 import { readSizing } from '@/features/sizing/sizing-link';
 import { judge } from '@/features/sizing/verdict';
 import { getEdition, type Edition } from './editions.server';
@@ -16,8 +18,8 @@ export interface ReaderPage {
   readonly links: Links;
   /** Form fields that do not read. */
   readonly typed: Typed;
-  /** What a link asks for that does not read, as sentences. */
-  readonly linkFaults: readonly string[];
+  /** What does not read in the address, by what it is for. */
+  readonly faults: readonly FieldFault[];
   /** The form read well: the address that says the same as a link. */
   readonly linkTo: string | null;
 }
@@ -34,7 +36,7 @@ export function loadReaderPage(slug: string, url: URL): ReaderPage | null {
   const stock = readStock(params.get('card'));
   const links: Links = { model, authors: edition.sizing, path: `/projects/${slug}`, keep: keepParams(stock, asked) };
   const reading = isSizingForm(params)
-    ? { ...readSizingForm(model, params, edition.sizing), linkFaults: [] }
+    ? readForm(model, params, edition.sizing)
     : readLink(model, params, edition.sizing);
   const wellRead = isSizingForm(params) && Object.keys(reading.typed).length === 0;
   return {
@@ -43,15 +45,32 @@ export function loadReaderPage(slug: string, url: URL): ReaderPage | null {
     view: readerView(model, judge(model, reading.sizing, edition.sizing, { nearest: true }), stock),
     links,
     typed: reading.typed,
-    linkFaults: reading.linkFaults,
+    faults: [...reading.faults, ...cardFaults(params.get('card'))],
     linkTo: wellRead ? sizingHref(links, reading.sizing) : null,
   };
 }
 
-function readLink(model: Model, params: URLSearchParams, authors: Sizing): { sizing: Sizing; typed: Typed; linkFaults: readonly string[] } {
+interface Reading {
+  readonly sizing: Sizing;
+  readonly typed: Typed;
+  readonly faults: readonly FieldFault[];
+}
+
+function readForm(model: Model, params: URLSearchParams, authors: Sizing): Reading {
+  const { sizing, typed } = readSizingForm(model, params, authors);
+  return { sizing, typed, faults: Object.entries(typed).map(([where, { sentence }]) => ({ where, sentence })) };
+}
+
+function readLink(model: Model, params: URLSearchParams, authors: Sizing): Reading {
   const { sizing, faults } = readSizing(model, params, authors);
   // A link that names units alone takes those units' usual cut grid.
-  return { sizing: inUnits(sizing, sizing.units), typed: {}, linkFaults: faults.map(explain) };
+  return { sizing: inUnits(sizing, sizing.units), typed: {}, faults: faults.map((fault) => ({ where: fault.where, sentence: readingWords([fault]) })) };
+}
+
+function cardFaults(card: string | null): readonly FieldFault[] {
+  if (card === null || card === '' || stockOf(card)) return [];
+  const sentence = `“${card}” is no sheet that is known here. It can be ${Object.keys(STOCKS).join(', ')}.`;
+  return [{ where: 'card', sentence }];
 }
 
 function keepParams(stock: Stock, edition: string | null): string {

@@ -62,8 +62,10 @@ export function fitsHtml(figures: Figures, plan: SheetPlan): string {
 
 function item(state: 'holds' | 'advice' | 'fails', name: string, amount: string, why: string): string {
   const said = { holds: 'Holds: ', advice: 'Advice: ', fails: 'Fails: ' }[state];
-  return `<li class="fit-${state}">${state === 'holds' ? CHECK : WARNING}<span><span class="visually-hidden">${said}</span>${esc(name)}${why}</span><em>${esc(amount)}</em></li>`;
+  return `<li class="fit-${state}">${state === 'holds' ? CHECK : WARNING}<span><span class="visually-hidden">${said}</span>${esc(capital(name))}${why}</span><em>${esc(amount)}</em></li>`;
 }
+
+const capital = (words: string): string => words.charAt(0).toUpperCase() + words.slice(1);
 
 /** `It closes` or what it does instead, over the list of fits. */
 export const closesWords = (figures: Figures): string =>

@@ -1,7 +1,7 @@
 import { GRIDS, type GridId, type Model, type Sizing, type Unit } from '@/engine';
 import { fieldTroubleHtml, gridsHtml, otherTroubleHtml, sizingHref, wholeStepsHtml, type Links } from './live-html';
 import { morphInto } from './morph';
-import type { Panel, PanelField } from './panel';
+import { fieldText, type Panel, type PanelField } from './panel';
 import { rangeRuler, rangeRulerSvg } from './range-ruler';
 import type { ReaderStore, Typed } from './reader-store';
 import { readStock, type ReaderView } from './reader-view';
@@ -85,8 +85,12 @@ export function bindPanel(panel: HTMLElement, page: HTMLElement, store: ReaderSt
       store.ask(readSizing(where.model, new URL(link.href).searchParams, where.authors).sizing);
       // The link may be gone after it was followed; whoever used the keyboard goes on at the field it was about.
       const field = link.closest('[data-field]')?.querySelector<HTMLInputElement>('input[type=text]');
-      if (field) field.focus();
-      else if (!link.matches('[data-reset]')) panel.querySelector<HTMLElement>('h2')?.focus();
+      if (field) {
+        const { figures, asked } = store.$state.get().verdict;
+        const measure = figures.measures.find(({ name }) => name === measureOf(field));
+        if (measure) field.value = field.defaultValue = fieldText(measure, asked);
+        field.focus();
+      } else if (!link.matches('[data-reset]')) panel.querySelector<HTMLElement>('h2')?.focus();
       return;
     }
     const copy = (event.target as Element).closest<HTMLAnchorElement>('a[data-copy-link]');

@@ -68,7 +68,7 @@ function painter(page: HTMLElement, panel: HTMLElement, model: Model, data: Proj
     put('closes', closesWords(shown));
     put('dock-size', view.insideWords);
     put('dock-closes', `${closesWords(shown)} · ${view.sheetsWords}`);
-    if (folded) morphInto(folded, drawingSvg(drawFolded(model, shown, { width: 400, height: 440 }), { class: 'folded' }));
+    if (folded) after(() => morphInto(folded, drawingSvg(drawFolded(model, shown, { width: 400, height: 440 }), { class: 'folded' })));
 
     const stale = lastGoodHtml(verdict, typed, links);
     page.toggleAttribute('data-stale', stale !== '');
@@ -87,6 +87,19 @@ function keep(stock: Stock, edition: number | null): string {
   if (stock !== USUAL_STOCK) params.set('card', stock.id);
   if (edition !== null) params.set('edition', String(edition));
   return params.toString();
+}
+
+/** Figures come first; the picture of the box follows in the next frame, and only the newest of them. */
+let following: (() => void) | null = null;
+function after(draw: () => void): void {
+  if (!following) {
+    requestAnimationFrame(() => {
+      const newest = following;
+      following = null;
+      newest?.();
+    });
+  }
+  following = draw;
 }
 
 /** Browsers refuse an address that changes with every movement of a slider. */

@@ -1,8 +1,9 @@
 import { atom, type ReadableAtom } from 'nanostores';
 import {
-  defaultGrid, evaluate, explain, GRIDS, gridsFor, readValue,
+  defaultGrid, evaluate, GRIDS, gridsFor, readValue,
   type Figures, type GridId, type Model, type Result, type Sizing, type Stock, type Unit,
 } from '@/engine';
+import { readingWords } from './reading-words';
 import { valueIn, withChoice, withValue } from './sizing-values';
 import { judge, type Verdict } from './verdict';
 
@@ -63,7 +64,7 @@ export function createReaderStore(model: Model, start: { readonly sizing: Sizing
         ask(sizing.value, without(measure));
         return;
       }
-      const sentence = sizing.faults.map(explain).join(' ');
+      const sentence = readingWords(sizing.faults);
       $state.set({ ...$state.get(), typed: { ...without(measure), [measure]: { text, sentence } } });
     },
     wouldWork(measure, text) {

@@ -1,6 +1,7 @@
-import { evaluate, explain, GRID_IDS, gridsFor, readValue, UNITS, type Model, type Sizing, type Unit } from '@/engine';
+import { evaluate, GRID_IDS, gridsFor, readValue, UNITS, type Model, type Sizing, type Unit } from '@/engine';
 import { fieldText } from './panel';
 import { inUnits, type Typed } from './reader-store';
+import { readingWords } from './reading-words';
 import { readSizing, slugOf } from './sizing-link';
 import { valueIn, withChoice, withValue } from './sizing-values';
 
@@ -40,7 +41,7 @@ export function readSizingForm(model: Model, params: URLSearchParams, usual: Siz
     }
     const value = readValue(measure, text, { units: before.units });
     if (value.ok) read = withValue(read, measure.name, value.value);
-    else typed[measure.name] = { text, sentence: value.faults.map(explain).join(' ') };
+    else typed[measure.name] = { text, sentence: readingWords(value.faults) };
   }
 
   for (const { name, options } of model.pattern.choices) {
