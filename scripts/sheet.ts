@@ -6,7 +6,23 @@
  */
 import { writeFileSync } from 'node:fs';
 import { parseArgs } from 'node:util';
-import { GRIDS, STOCKS, UNITS, defaultGrid, evaluate, explain, keyOf, nearestName, readValue, stockOf, usualSizing, type GridId, type Model, type Sizing, type Unit } from '@/engine';
+import {
+  GRIDS,
+  STOCKS,
+  UNITS,
+  defaultGrid,
+  evaluate,
+  explain,
+  keyOf,
+  nearestName,
+  readValue,
+  stockOf,
+  usualSizing,
+  type GridId,
+  type Model,
+  type Sizing,
+  type Unit,
+} from '@/engine';
 import { figuresJson } from '@/exports/json/figures-json';
 import { measurementText } from '@/exports/text/measurement-text';
 import { PatternFileError } from '@/features/patterns/load-pattern';
@@ -38,19 +54,25 @@ function readArguments() {
       },
     });
   } catch (error) {
-    throw new BadArgument(error instanceof Error ? (error.message.split('. To specify')[0] ?? error.message) : String(error));
+    throw new BadArgument(
+      error instanceof Error ? (error.message.split('. To specify')[0] ?? error.message) : String(error),
+    );
   }
 }
 
 function namedPair(option: string, typed: string): [string, string] {
   const at = typed.indexOf('=');
-  if (at < 1) throw new BadArgument(`--${option} “${typed}” has no “=”. Write it like --${option} '${option === 'set' ? 'inside width=5 3/8 in' : 'spine=curved'}'.`);
+  if (at < 1)
+    throw new BadArgument(
+      `--${option} “${typed}” has no “=”. Write it like --${option} '${option === 'set' ? 'inside width=5 3/8 in' : 'spine=curved'}'.`,
+    );
   return [typed.slice(0, at).trim(), typed.slice(at + 1).trim()];
 }
 
 function readSizing(model: Model, values: ReturnType<typeof readArguments>['values']): Sizing {
   const units = oneOf<Unit>('The unit', values.units, UNITS);
-  const grid = values.grid === undefined ? defaultGrid(units) : oneOf('The cut grid', values.grid, Object.keys(GRIDS) as GridId[]);
+  const grid =
+    values.grid === undefined ? defaultGrid(units) : oneOf('The cut grid', values.grid, Object.keys(GRIDS) as GridId[]);
   const sizing = usualSizing(model, units, grid);
   const set: Record<string, number> = {};
   const chosen: Record<string, string> = { ...sizing.choices };
@@ -61,18 +83,28 @@ function readSizing(model: Model, values: ReturnType<typeof readArguments>['valu
     if (!measure) {
       const names = asked.map(({ def }) => def.name);
       const nearest = nearestName(name, names);
-      throw new BadArgument(`${model.pattern.name} does not ask for “${name}”. ${nearest ? `The nearest is “${nearest}”.` : `It asks for ${names.join(', ')}.`}`);
+      throw new BadArgument(
+        `${model.pattern.name} does not ask for “${name}”. ${nearest ? `The nearest is “${nearest}”.` : `It asks for ${names.join(', ')}.`}`,
+      );
     }
-    const read = readValue({ kind: measure.def.kind ?? 'length', ...(measure.def.unit ? { unit: measure.def.unit } : {}) }, value, { units });
+    const read = readValue(
+      { kind: measure.def.kind ?? 'length', ...(measure.def.unit ? { unit: measure.def.unit } : {}) },
+      value,
+      { units },
+    );
     if (!read.ok) throw new BadArgument(`${measure.def.name}: ${read.faults.map(explain).join(' ')}`);
     set[keyOf(name)] = read.value;
   }
   for (const typed of values.choose) {
     const [name, option] = namedPair('choose', typed);
     const choice = model.choices.find(({ def }) => keyOf(def.name) === keyOf(name));
-    if (!choice) throw new BadArgument(`${model.pattern.name} has no choice “${name}”. ${model.choices.length === 0 ? 'It has none.' : `It has ${model.choices.map(({ def }) => def.name).join(', ')}.`}`);
+    if (!choice)
+      throw new BadArgument(
+        `${model.pattern.name} has no choice “${name}”. ${model.choices.length === 0 ? 'It has none.' : `It has ${model.choices.map(({ def }) => def.name).join(', ')}.`}`,
+      );
     const found = choice.def.options.find((one) => keyOf(one) === keyOf(option));
-    if (found === undefined) throw new BadArgument(`${choice.def.name} cannot be “${option}”. It can be ${choice.def.options.join(' or ')}.`);
+    if (found === undefined)
+      throw new BadArgument(`${choice.def.name} cannot be “${option}”. It can be ${choice.def.options.join(' or ')}.`);
     chosen[keyOf(name)] = found;
   }
   return { ...sizing, values: set, choices: chosen };
@@ -97,24 +129,39 @@ function run(): number {
   if (values.list) {
     const rows = patterns.map(({ slug, name, summary }) => ({ slug, name, summary }));
     const widest = Math.max(...rows.map((row) => row.slug.length));
-    put(format === 'json' ? `${JSON.stringify(rows, null, 2)}\n` : rows.map((row) => `${row.slug.padEnd(widest)}  ${row.name}: ${row.summary}\n`).join(''), values.out);
+    put(
+      format === 'json'
+        ? `${JSON.stringify(rows, null, 2)}\n`
+        : rows.map((row) => `${row.slug.padEnd(widest)}  ${row.name}: ${row.summary}\n`).join(''),
+      values.out,
+    );
     return 0;
   }
   const [slug, ...more] = positionals;
   const slugs = patterns.map((pattern) => pattern.slug);
   if (slug === undefined) throw new BadArgument(`Name a pattern: ${slugs.join(', ')}. Or ask for --list.`);
-  if (more.length > 0) throw new BadArgument(`“${more[0]}” stands after the pattern. Sizes are given with --set 'name=value'.`);
+  if (more.length > 0)
+    throw new BadArgument(`“${more[0]}” stands after the pattern. Sizes are given with --set 'name=value'.`);
   const model = getPatternModel(slug);
   if (!model) {
     const nearest = nearestName(slug, slugs);
-    throw new BadArgument(`No pattern is called “${slug}”. ${nearest ? `The nearest is “${nearest}”.` : `There are ${slugs.join(', ')}.`}`);
+    throw new BadArgument(
+      `No pattern is called “${slug}”. ${nearest ? `The nearest is “${nearest}”.` : `There are ${slugs.join(', ')}.`}`,
+    );
   }
   const stock = stockOf(values.stock);
-  if (!stock) throw new BadArgument(`The sheet “${values.stock}” is not known. It can be ${Object.keys(STOCKS).join(', ')}.`);
+  if (!stock)
+    throw new BadArgument(`The sheet “${values.stock}” is not known. It can be ${Object.keys(STOCKS).join(', ')}.`);
   const copies = Number(values.copies);
-  if (!Number.isInteger(copies) || copies < 1 || copies > 500) throw new BadArgument(`--copies “${values.copies}” is not a whole number from 1 to 500.`);
+  if (!Number.isInteger(copies) || copies < 1 || copies > 500)
+    throw new BadArgument(`--copies “${values.copies}” is not a whole number from 1 to 500.`);
   const figures = evaluate(model, readSizing(model, values));
-  put(format === 'json' ? `${JSON.stringify(figuresJson(model, figures, { stock, copies }), null, 2)}\n` : measurementText(model, figures, { stock, copies }), values.out);
+  put(
+    format === 'json'
+      ? `${JSON.stringify(figuresJson(model, figures, { stock, copies }), null, 2)}\n`
+      : measurementText(model, figures, { stock, copies }),
+    values.out,
+  );
   return figures.problems.length > 0 ? 1 : 0;
 }
 

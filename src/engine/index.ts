@@ -10,7 +10,18 @@ export { areaOf, boundsOf, lengthOf, perimeterOf, pointsOf } from './net';
 export { isName, keyOf } from './pattern/names';
 export { compileLive, compilePattern, evaluate, type LiveMeasure, type Model } from './model';
 export { cutsInWords, planSheets, stockOf, STOCKS, type SheetPlan, type Stock, type StockId } from './sheet';
-export { drawFolded, drawPiece, drawSheet, foldedExtent, say, sayParts, type FoldedDrawingOptions, type PieceDrawingOptions, type SaidPart } from './drawing';
+export {
+  drawFolded,
+  drawPiece,
+  drawSheet,
+  foldedExtent,
+  say,
+  sayParts,
+  type FoldedDrawingOptions,
+  type PieceDrawingOptions,
+  type SaidPart,
+} from './drawing';
 
 /** A sizing with nothing answered: the usual size of the pattern, in these units, on their usual cut grid. */
-export const usualSizing = (model: Model, units: Unit = 'in', grid: GridId = defaultGrid(units)): Sizing => sizingOf(model, units, grid);
+export const usualSizing = (model: Model, units: Unit = 'in', grid: GridId = defaultGrid(units)): Sizing =>
+  sizingOf(model, units, grid);

@@ -20,7 +20,9 @@ export interface Fault {
   /** The text that cures it, put in place of `span`. */
   readonly cure?: string;
 }
-export type Result<T> = { readonly ok: true; readonly value: T } | { readonly ok: false; readonly faults: readonly Fault[] };
+export type Result<T> =
+  | { readonly ok: true; readonly value: T }
+  | { readonly ok: false; readonly faults: readonly Fault[] };
 
 // ── Pattern: the parametric description of a box. Data, never code. ──────────────────────────────────────────────────
 
@@ -355,9 +357,22 @@ export interface SizingProblem {
 // ── Drawing: plain shapes with roles, in drawing units (CSS pixels on a page, millimetres where asked). ──────────────
 
 export type Role =
-  | 'cut' | 'valley' | 'mountain' | 'slit' | 'glue' | 'panel' | 'away' | 'hidden'
-  | 'dimension' | 'extension' | 'origin' | 'ruler' | 'figure' | 'label'
-  | 'face' | 'face edge';
+  | 'cut'
+  | 'valley'
+  | 'mountain'
+  | 'slit'
+  | 'glue'
+  | 'panel'
+  | 'away'
+  | 'hidden'
+  | 'dimension'
+  | 'extension'
+  | 'origin'
+  | 'ruler'
+  | 'figure'
+  | 'label'
+  | 'face'
+  | 'face edge';
 export type Shape =
   | { readonly type: 'path'; readonly role: Role; readonly d: string; readonly tone?: string; readonly of?: string }
   | {

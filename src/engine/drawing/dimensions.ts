@@ -7,7 +7,12 @@ export interface Stop {
   readonly text: string;
 }
 /** About the width of a figure in the drawing's type, 13 units high; erring wide keeps figures apart. */
-export const textWidth = (text: string): number => [...text].reduce((sum, mark) => sum + (mark === '\u202f' ? 2.5 : mark === ' ' ? 4 : /[0-9]/.test(mark) ? 7.6 : mark === '\u2044' ? 3.4 : 7.2), 0);
+export const textWidth = (text: string): number =>
+  [...text].reduce(
+    (sum, mark) =>
+      sum + (mark === '\u202f' ? 2.5 : mark === ' ' ? 4 : /[0-9]/.test(mark) ? 7.6 : mark === '\u2044' ? 3.4 : 7.2),
+    0,
+  );
 const LINE = 15;
 
 /** Rows needed above the top dimension so that no figure touches another. */
@@ -23,7 +28,10 @@ export function topRows(stops: readonly Stop[]): readonly number[] {
 }
 
 /** Running dimension along the top, read from the left edge, as on a scoring board. */
-export function acrossTop(stops: readonly Stop[], frame: { readonly from: number; readonly line: number; readonly edge: number }): Shape[] {
+export function acrossTop(
+  stops: readonly Stop[],
+  frame: { readonly from: number; readonly line: number; readonly edge: number },
+): Shape[] {
   const rows = topRows(stops);
   const last = stops.at(-1)?.at ?? frame.from;
   return [
@@ -51,7 +59,10 @@ export function spread(stops: readonly Stop[], least: number, bottom: number): r
 }
 
 /** Running dimension down the left, read from the top edge. */
-export function downLeft(stops: readonly Stop[], frame: { readonly from: number; readonly line: number; readonly edge: number; readonly bottom: number }): Shape[] {
+export function downLeft(
+  stops: readonly Stop[],
+  frame: { readonly from: number; readonly line: number; readonly edge: number; readonly bottom: number },
+): Shape[] {
   const places = spread(stops, LINE, frame.bottom);
   const last = stops.at(-1)?.at ?? frame.from;
   return [
@@ -60,7 +71,11 @@ export function downLeft(stops: readonly Stop[], frame: { readonly from: number;
     ...stops.flatMap(({ at, text }, index): Shape[] => {
       const y = places[index] as number;
       return [
-        { type: 'path', role: 'extension', d: `M${n(frame.edge - 2)} ${n(at)}L${n(frame.line)} ${n(at)}L${n(frame.line - 7)} ${n(y)}` },
+        {
+          type: 'path',
+          role: 'extension',
+          d: `M${n(frame.edge - 2)} ${n(at)}L${n(frame.line)} ${n(at)}L${n(frame.line - 7)} ${n(y)}`,
+        },
         { type: 'text', role: 'figure', x: frame.line - 10, y: y + 4.5, text, anchor: 'end' },
       ];
     }),

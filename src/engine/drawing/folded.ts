@@ -32,9 +32,15 @@ export function drawFolded(model: Model, figures: Figures, options: FoldedDrawin
   const faces = facesOf(model, figures, options.share ?? 1);
   const flat = faces.flatMap((face) => face.points.map(view.project));
   const [xs, ys] = [flat.map((point) => point.x), flat.map((point) => point.y)];
-  const [left, right, top, bottom] = flat.length === 0 ? [0, 1, 0, 1] : [Math.min(...xs), Math.max(...xs), Math.min(...ys), Math.max(...ys)];
+  const [left, right, top, bottom] =
+    flat.length === 0 ? [0, 1, 0, 1] : [Math.min(...xs), Math.max(...xs), Math.min(...ys), Math.max(...ys)];
   const pad = 4;
-  const scale = options.scale ?? Math.min((options.width - 2 * pad) / Math.max(right - left, 1e-6), (options.height - 2 * pad) / Math.max(bottom - top, 1e-6));
+  const scale =
+    options.scale ??
+    Math.min(
+      (options.width - 2 * pad) / Math.max(right - left, 1e-6),
+      (options.height - 2 * pad) / Math.max(bottom - top, 1e-6),
+    );
   // Stands on the lower edge, in the middle.
   const shiftX = (options.width - (right - left) * scale) / 2 - left * scale;
   const shiftY = options.height - pad - bottom * scale;
@@ -46,17 +52,29 @@ export function drawFolded(model: Model, figures: Figures, options: FoldedDrawin
     const outward = dot(face.data.inside, view.towards) > 0 ? face.data.inside : times(face.data.inside, -1);
     const light = Math.max(0, dot(view.lit(outward), LIGHT));
     const tone = `${face.data.look === 'pages' ? 'pages' : 'tone'}-${Math.round((1 - light) * TONES)}`;
-    const edges = face.points.flatMap((point, index) => (face.edges[index] ? [`M${at(point)}L${at(face.points[(index + 1) % face.points.length] as Vector)}`] : []));
+    const edges = face.points.flatMap((point, index) =>
+      face.edges[index] ? [`M${at(point)}L${at(face.points[(index + 1) % face.points.length] as Vector)}`] : [],
+    );
     return [
       { type: 'path', role: 'face', d: `M${face.points.map(at).join('L')}Z`, tone },
       ...(edges.length > 0 ? [{ type: 'path', role: 'face edge', d: edges.join('') } satisfies Shape] : []),
     ];
   });
-  return { width: options.width, height: options.height, title: model.pattern.name, alt: `${model.pattern.name}, folded.`, shapes };
+  return {
+    width: options.width,
+    height: options.height,
+    title: model.pattern.name,
+    alt: `${model.pattern.name}, folded.`,
+    shapes,
+  };
 }
 
 /** Height and width of the folded box in the drawing's projection, millimetres: for drawing several at one scale. */
-export function foldedExtent(model: Model, figures: Figures, options: { readonly turn?: number; readonly tilt?: number } = {}): { readonly across: number; readonly up: number } {
+export function foldedExtent(
+  model: Model,
+  figures: Figures,
+  options: { readonly turn?: number; readonly tilt?: number } = {},
+): { readonly across: number; readonly up: number } {
   const view = viewOf(options.turn ?? model.pattern.turn ?? -35, options.tilt ?? 26);
   const flat = facesOf(model, figures, 1).flatMap((face) => face.points.map(view.project));
   if (flat.length === 0) return { across: 1, up: 1 };
@@ -66,7 +84,8 @@ export function foldedExtent(model: Model, figures: Figures, options: { readonly
 
 function viewOf(turn: number, tilt: number) {
   const [t, d] = [(turn * Math.PI) / 180, (tilt * Math.PI) / 180];
-  const spin = (p: Vector): Vector => vector(p.x * Math.cos(t) - p.y * Math.sin(t), p.x * Math.sin(t) + p.y * Math.cos(t), p.z);
+  const spin = (p: Vector): Vector =>
+    vector(p.x * Math.cos(t) - p.y * Math.sin(t), p.x * Math.sin(t) + p.y * Math.cos(t), p.z);
   return {
     /** Drawing axes: x right, y down. */
     project: (p: Vector) => {
@@ -89,9 +108,19 @@ function facesOf(model: Model, figures: Figures, share: number): Face<Look>[] {
     if (!piece) return [];
     const look = def.look ?? model.pattern.pieces.find((one) => one.name === piece.name)?.look ?? 'card';
     const [x, y, z] = at.map((formula) => formula.work(values)) as [number, number, number];
-    return foldNet(piece.net, { root: keyOf(def.root), at: vector(x, y, z), across: def.across, along: def.along, share }).map((panel) => {
+    return foldNet(piece.net, {
+      root: keyOf(def.root),
+      at: vector(x, y, z),
+      across: def.across,
+      along: def.along,
+      share,
+    }).map((panel) => {
       const shift = panel.role === 'tab' ? times(panel.inside, TAB_INSET) : vector(0, 0, 0);
-      return { points: panel.points.map((point) => plus(point, shift)), edges: panel.edges, data: { look, inside: panel.inside } };
+      return {
+        points: panel.points.map((point) => plus(point, shift)),
+        edges: panel.edges,
+        data: { look, inside: panel.inside },
+      };
     });
   });
 }

@@ -17,10 +17,14 @@ export function pathOf(curves: readonly Curve[], place: Place, scale: number): s
     const [from, to] = [place(curve.from), place(curve.to)];
     if (!last || n(last.x) !== n(from.x) || n(last.y) !== n(from.y)) parts.push(`M${at(from)}`);
     if (curve.type === 'line') parts.push(`L${at(to)}`);
-    else parts.push(`A${n(curve.radius * scale)} ${n(curve.radius * scale)} 0 ${sweepOf(curve) > Math.PI ? 1 : 0} ${curve.clockwise ? 1 : 0} ${at(to)}`);
+    else
+      parts.push(
+        `A${n(curve.radius * scale)} ${n(curve.radius * scale)} 0 ${sweepOf(curve) > Math.PI ? 1 : 0} ${curve.clockwise ? 1 : 0} ${at(to)}`,
+      );
     last = to;
   }
   return parts.join('');
 }
 export const closedPath = (loop: Loop, place: Place, scale: number): string => `${pathOf(loop, place, scale)}Z`;
-export const segment = (x1: number, y1: number, x2: number, y2: number): string => `M${n(x1)} ${n(y1)}L${n(x2)} ${n(y2)}`;
+export const segment = (x1: number, y1: number, x2: number, y2: number): string =>
+  `M${n(x1)} ${n(y1)}L${n(x2)} ${n(y2)}`;

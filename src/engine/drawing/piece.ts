@@ -30,7 +30,10 @@ export function drawPiece(piece: PieceFigure, options: PieceDrawingOptions): Dra
   // A position a card's thickness off the ruler carries a sign; the sentences say what it means.
   const says = (mm: number) => {
     const { mm: shown, cards } = figure(mm);
-    return show(shown, { units, ...(grid ? { grid } : {}), bare: true }).typeset + (cards === undefined ? '' : cards > 0 ? '+' : '−');
+    return (
+      show(shown, { units, ...(grid ? { grid } : {}), bare: true }).typeset +
+      (cards === undefined ? '' : cards > 0 ? '+' : '−')
+    );
   };
   const acrossMm = [...piece.scores.across, net.across];
   const alongMm = [...piece.scores.along, net.along];
@@ -49,12 +52,29 @@ export function drawPiece(piece: PieceFigure, options: PieceDrawingOptions): Dra
   const shapes: Shape[] = [
     ...net.away.map((box): Shape => {
       const [a, b] = [place({ x: box.x, y: box.y }), place({ x: box.x + box.across, y: box.y + box.along })];
-      return { type: 'path', role: 'away', d: `M${n(a.x)} ${n(a.y)}H${n(b.x)}V${n(b.y)}H${n(a.x)}ZM${n(a.x)} ${n(a.y)}L${n(b.x)} ${n(b.y)}M${n(b.x)} ${n(a.y)}L${n(a.x)} ${n(b.y)}` };
+      return {
+        type: 'path',
+        role: 'away',
+        d: `M${n(a.x)} ${n(a.y)}H${n(b.x)}V${n(b.y)}H${n(a.x)}ZM${n(a.x)} ${n(a.y)}L${n(b.x)} ${n(b.y)}M${n(b.x)} ${n(a.y)}L${n(a.x)} ${n(b.y)}`,
+      };
     }),
-    ...net.panels.map((panel): Shape => ({ type: 'path', role: panel.role === 'tab' ? 'glue' : 'panel', d: closedPath(panel.loop, place, scale), of: panel.name })),
-    ...net.folds.filter((fold) => fold.angle !== 0).map((fold): Shape => ({ type: 'path', role: fold.kind, d: pathOf([fold.curve], place, scale) })),
+    ...net.panels.map(
+      (panel): Shape => ({
+        type: 'path',
+        role: panel.role === 'tab' ? 'glue' : 'panel',
+        d: closedPath(panel.loop, place, scale),
+        of: panel.name,
+      }),
+    ),
+    ...net.folds
+      .filter((fold) => fold.angle !== 0)
+      .map((fold): Shape => ({ type: 'path', role: fold.kind, d: pathOf([fold.curve], place, scale) })),
     ...net.slits.map((slit): Shape => ({ type: 'path', role: 'slit', d: slitPath(place(slit.from), place(slit.to)) })),
-    { type: 'path', role: 'cut', d: [net.outline, ...net.holes].map((loop) => closedPath(loop, place, scale)).join('') },
+    {
+      type: 'path',
+      role: 'cut',
+      d: [net.outline, ...net.holes].map((loop) => closedPath(loop, place, scale)).join(''),
+    },
     ...(labels ? labelsOf(piece, place, scale) : []),
     ...(dims
       ? [
@@ -72,7 +92,11 @@ export function drawPiece(piece: PieceFigure, options: PieceDrawingOptions): Dra
 function slitPath(a: Point, b: Point): string {
   const length = Math.hypot(b.x - a.x, b.y - a.y) || 1;
   const [x, y] = [(-(b.y - a.y) / length) * 3, ((b.x - a.x) / length) * 3];
-  return segment(a.x, a.y, b.x, b.y) + segment(a.x - x, a.y - y, a.x + x, a.y + y) + segment(b.x - x, b.y - y, b.x + x, b.y + y);
+  return (
+    segment(a.x, a.y, b.x, b.y) +
+    segment(a.x - x, a.y - y, a.x + x, a.y + y) +
+    segment(b.x - x, b.y - y, b.x + x, b.y + y)
+  );
 }
 
 /** Names of panels in their middle, where there is room for them. */
@@ -86,7 +110,18 @@ function labelsOf(piece: PieceFigure, place: Place, scale: number): Shape[] {
     const turned = wide < room && tall >= room;
     if ((turned ? wide : tall) < 18 || (turned ? tall : wide) < room) return [];
     const middle = place({ x: (box.left + box.right) / 2, y: (box.top + box.bottom) / 2 });
-    return [{ type: 'text', role: 'label', x: middle.x + (turned ? 4.5 : 0), y: middle.y + (turned ? 0 : 4.5), text: panel.name, anchor: 'middle', of: panel.name, ...(turned ? { turned } : {}) }];
+    return [
+      {
+        type: 'text',
+        role: 'label',
+        x: middle.x + (turned ? 4.5 : 0),
+        y: middle.y + (turned ? 0 : 4.5),
+        text: panel.name,
+        anchor: 'middle',
+        of: panel.name,
+        ...(turned ? { turned } : {}),
+      },
+    ];
   });
 }
 
@@ -94,6 +129,8 @@ function labelsOf(piece: PieceFigure, place: Place, scale: number): Shape[] {
 export function altOf(piece: PieceFigure, options: Pick<ShowOptions, 'units' | 'grid'>): string {
   const [first, ...rest] = piece.instructions;
   const blank = first ? say(first, options).replace(/^Cut /, '') : '';
-  const scores = rest.filter((sentence) => typeof sentence[0] === 'string' && /^(Score|Along|Turn|Give)/.test(sentence[0])).map((sentence) => say(sentence, options));
+  const scores = rest
+    .filter((sentence) => typeof sentence[0] === 'string' && /^(Score|Along|Turn|Give)/.test(sentence[0]))
+    .map((sentence) => say(sentence, options));
   return [`${piece.name}, ${blank}`, ...scores].join(' ');
 }

@@ -3,7 +3,12 @@ import type { Shape, Unit } from '../types';
 import { segment } from './path';
 
 /** Ticks of a working ruler along a straight edge: sixteenths of an inch or millimetres, as fine as the scale lets them stand apart. */
-export function ruler(options: { readonly width: number; readonly start: number; readonly scale: number; readonly units: Unit }): Shape[] {
+export function ruler(options: {
+  readonly width: number;
+  readonly start: number;
+  readonly scale: number;
+  readonly units: Unit;
+}): Shape[] {
   const inches = options.units === 'in';
   const whole = (inches ? MM_PER.in : 10) * options.scale;
   const parts = (inches ? [16, 8, 4, 2, 1] : [10, 2, 1]).find((count) => whole / count >= 3) ?? 1;

@@ -8,15 +8,24 @@ export interface SaidPart {
   readonly typeset: string;
   readonly spoken: string;
 }
-const CARDS: Readonly<Record<number, string>> = { 1: 'a card’s thickness', 2: 'two card thicknesses', 3: 'three card thicknesses', 4: 'four card thicknesses' };
+const CARDS: Readonly<Record<number, string>> = {
+  1: 'a card’s thickness',
+  2: 'two card thicknesses',
+  3: 'three card thicknesses',
+  4: 'four card thicknesses',
+};
 
 /** A sentence from geometry as parts, figures apart from words, in the reader's units. */
 export function sayParts(sentence: Sentence, options: Pick<ShowOptions, 'units' | 'grid'>): readonly SaidPart[] {
   return sentence.map((part) => {
     if (typeof part === 'string') return { text: part, typeset: part, spoken: part, figure: false };
     const shown = show(part.mm, { ...options, ...(part.bare ? { bare: true } : {}) });
-    const cards = part.cards === undefined ? '' : `${part.cards > 0 ? ' and ' : ' less '}${CARDS[Math.abs(part.cards)] ?? ''}`;
+    const cards =
+      part.cards === undefined ? '' : `${part.cards > 0 ? ' and ' : ' less '}${CARDS[Math.abs(part.cards)] ?? ''}`;
     return { text: shown.text + cards, typeset: shown.typeset + cards, spoken: shown.spoken + cards, figure: true };
   });
 }
-export const say = (sentence: Sentence, options: Pick<ShowOptions, 'units' | 'grid'>): string => sayParts(sentence, options).map((part) => part.text).join('');
+export const say = (sentence: Sentence, options: Pick<ShowOptions, 'units' | 'grid'>): string =>
+  sayParts(sentence, options)
+    .map((part) => part.text)
+    .join('');

@@ -36,7 +36,10 @@ export function compileFormula(text: string, scope: Scope, where: string, wanted
   const compiled = compileNode(parsed.value, scope, { where, faults, uses });
   if (faults.length > 0) return { ok: false, faults };
   if (wanted && !accepts(wanted, compiled.kind)) {
-    return { ok: false, faults: [faultAt(where, 'wrong result', SAYS.wrongResult(sayKind(wanted), sayKind(compiled.kind)), parsed.value)] };
+    return {
+      ok: false,
+      faults: [faultAt(where, 'wrong result', SAYS.wrongResult(sayKind(wanted), sayKind(compiled.kind)), parsed.value)],
+    };
   }
   return { ok: true, value: { text, node: parsed.value, kind: compiled.kind, work: compiled.work, uses: [...uses] } };
 }
@@ -57,13 +60,23 @@ interface Context {
   readonly uses: Set<string>;
 }
 
-function faultAt(where: string, code: string, says: readonly string[], node: { span: { from: number; to: number } }): Fault {
+function faultAt(
+  where: string,
+  code: string,
+  says: readonly string[],
+  node: { span: { from: number; to: number } },
+): Fault {
   const [found = '', expected = '', hint = ''] = says;
   return { code: `formula ${code}`, where, span: { from: node.span.from, to: node.span.to }, found, expected, hint };
 }
 
 function compileNode(node: Node, scope: Scope, context: Context): Compiled {
-  const complain = (code: string, says: readonly string[], at: { span: { from: number; to: number } } = node, kind: Kind = NUMBER): Compiled => {
+  const complain = (
+    code: string,
+    says: readonly string[],
+    at: { span: { from: number; to: number } } = node,
+    kind: Kind = NUMBER,
+  ): Compiled => {
     context.faults.push(faultAt(context.where, code, says, at));
     return { kind, work: () => NaN };
   };
@@ -98,13 +111,20 @@ function compileNode(node: Node, scope: Scope, context: Context): Compiled {
         if (kind.type !== 'truth') return complain('not yes or no', SAYS.notYesNo(sayKind(kind)), node.of, TRUTH);
         return { kind, work: (values) => (work(values) === 0 ? 1 : 0) };
       }
-      if (kind.type === 'truth' || kind.type === 'choice') return complain('wants', SAYS.wants('“−”', 'a measure or a number', sayKind(kind)), node.of);
+      if (kind.type === 'truth' || kind.type === 'choice')
+        return complain('wants', SAYS.wants('“−”', 'a measure or a number', sayKind(kind)), node.of);
       return { kind, work: (values) => -work(values) };
     }
     case 'logic': {
       const sides = [into(node.left), into(node.right)] as const;
       const wrong = sides.findIndex((side) => side.kind.type !== 'truth');
-      if (wrong >= 0) return complain('not yes or no', SAYS.notYesNo(sayKind((sides[wrong] as Compiled).kind)), wrong === 0 ? node.left : node.right, TRUTH);
+      if (wrong >= 0)
+        return complain(
+          'not yes or no',
+          SAYS.notYesNo(sayKind((sides[wrong] as Compiled).kind)),
+          wrong === 0 ? node.left : node.right,
+          TRUTH,
+        );
       const [left, right] = [sides[0].work, sides[1].work];
       return node.sign === 'and'
         ? { kind: TRUTH, work: (values) => (left(values) !== 0 ? right(values) : 0) }
@@ -114,9 +134,15 @@ function compileNode(node: Node, scope: Scope, context: Context): Compiled {
       const test = into(node.test);
       const then = into(node.then);
       const otherwise = into(node.otherwise);
-      if (test.kind.type !== 'truth') return complain('not yes or no', SAYS.notYesNo(sayKind(test.kind)), node.test, then.kind);
+      if (test.kind.type !== 'truth')
+        return complain('not yes or no', SAYS.notYesNo(sayKind(test.kind)), node.test, then.kind);
       if (!sameKind(then.kind, otherwise.kind)) {
-        return complain('mixed', SAYS.mixed('else', sayKind(then.kind), sayKind(otherwise.kind)), node.otherwise, then.kind);
+        return complain(
+          'mixed',
+          SAYS.mixed('else', sayKind(then.kind), sayKind(otherwise.kind)),
+          node.otherwise,
+          then.kind,
+        );
       }
       const kind = accepts(then.kind, otherwise.kind) ? then.kind : otherwise.kind;
       const [a, b, c] = [test.work, then.work, otherwise.work];
@@ -125,7 +151,8 @@ function compileNode(node: Node, scope: Scope, context: Context): Compiled {
     case 'comparison': {
       const left = into(node.left);
       const right = into(node.right);
-      if (!sameKind(left.kind, right.kind)) return complain('mixed', SAYS.mixed(node.sign, sayKind(left.kind), sayKind(right.kind)), node, TRUTH);
+      if (!sameKind(left.kind, right.kind))
+        return complain('mixed', SAYS.mixed(node.sign, sayKind(left.kind), sayKind(right.kind)), node, TRUTH);
       return { kind: TRUTH, work: comparisonWork(node.sign, left.work, right.work) };
     }
     case 'arithmetic': {
@@ -141,32 +168,54 @@ function compileNode(node: Node, scope: Scope, context: Context): Compiled {
       if (!definition) throw new Error(`the parser let the function ${node.name} through`);
       const args = node.args.map(into);
       if (args.length < definition.least || args.length > definition.most) {
-        return complain('wrong count', SAYS.wrongCount(node.name, definition.wants, args.length), { span: node.nameSpan });
+        return complain('wrong count', SAYS.wrongCount(node.name, definition.wants, args.length), {
+          span: node.nameSpan,
+        });
       }
       if (context.faults.length > 0) return { kind: NUMBER, work: () => NaN };
       const kind = definition.kind(args.map((arg) => arg.kind));
       if ('argument' in kind) {
         const at = node.args[kind.argument] ?? node;
-        return complain('wants', SAYS.wants(node.name, kind.wanted, sayKind((args[kind.argument] as Compiled).kind)), at);
+        return complain(
+          'wants',
+          SAYS.wants(node.name, kind.wanted, sayKind((args[kind.argument] as Compiled).kind)),
+          at,
+        );
       }
-      return { kind, work: callWork(definition.work, args.map((arg) => arg.work)) };
+      return {
+        kind,
+        work: callWork(
+          definition.work,
+          args.map((arg) => arg.work),
+        ),
+      };
     }
   }
 }
 
 function comparisonWork(sign: string, left: Work, right: Work): Work {
   switch (sign) {
-    case '<': return (values) => Number(moreThan(right(values), left(values)));
-    case '>': return (values) => Number(moreThan(left(values), right(values)));
-    case '<=': return (values) => Number(atLeast(right(values), left(values)));
-    case '>=': return (values) => Number(atLeast(left(values), right(values)));
-    case '=': return (values) => Number(same(left(values), right(values)));
-    default: return (values) => Number(!same(left(values), right(values)));
+    case '<':
+      return (values) => Number(moreThan(right(values), left(values)));
+    case '>':
+      return (values) => Number(moreThan(left(values), right(values)));
+    case '<=':
+      return (values) => Number(atLeast(right(values), left(values)));
+    case '>=':
+      return (values) => Number(atLeast(left(values), right(values)));
+    case '=':
+      return (values) => Number(same(left(values), right(values)));
+    default:
+      return (values) => Number(!same(left(values), right(values)));
   }
 }
 
 /** The kind of `left sign right`, or a code with its words. */
-function arithmeticKind(node: Node & { type: 'arithmetic' }, left: Kind, right: Kind): Kind | [string, readonly string[]] {
+function arithmeticKind(
+  node: Node & { type: 'arithmetic' },
+  left: Kind,
+  right: Kind,
+): Kind | [string, readonly string[]] {
   const { sign } = node;
   const mixed = (): [string, readonly string[]] => ['mixed', SAYS.mixed(sign, sayKind(left), sayKind(right))];
   const whole = left.type === 'quantity' && left.whole && right.type === 'quantity' && right.whole;
@@ -175,11 +224,14 @@ function arithmeticKind(node: Node & { type: 'arithmetic' }, left: Kind, right: 
     return left.type === 'quantity' ? { ...left, whole } : left;
   }
   if (sign === '^') {
-    if (right.type !== 'quantity' || right.power !== 0) return ['wants', SAYS.wants('“^”', 'a plain number after it', sayKind(right))];
+    if (right.type !== 'quantity' || right.power !== 0)
+      return ['wants', SAYS.wants('“^”', 'a plain number after it', sayKind(right))];
     if (left.type !== 'quantity') return ['wants', SAYS.wants('“^”', 'a measure or a number', sayKind(left))];
-    if (left.power === 0) return { ...left, whole: whole && constant(node.right) !== null && (constant(node.right) as number) >= 0 };
+    if (left.power === 0)
+      return { ...left, whole: whole && constant(node.right) !== null && (constant(node.right) as number) >= 0 };
     const power = constant(node.right);
-    if (power === null || !Number.isInteger(power) || Math.abs(power * left.power) > 6) return ['bad power', SAYS.badPower()];
+    if (power === null || !Number.isInteger(power) || Math.abs(power * left.power) > 6)
+      return ['bad power', SAYS.badPower()];
     return { type: 'quantity', power: left.power * power, whole: false };
   }
   if (left.type === 'angle' && right.type === 'angle') return sign === '/' ? NUMBER : mixed();
@@ -201,10 +253,14 @@ function constant(node: Node): number | null {
 
 function arithmeticWork(sign: string, left: Work, right: Work): Work {
   switch (sign) {
-    case '+': return (values) => left(values) + right(values);
-    case '-': return (values) => left(values) - right(values);
-    case '*': return (values) => left(values) * right(values);
-    case '^': return (values) => left(values) ** right(values);
+    case '+':
+      return (values) => left(values) + right(values);
+    case '-':
+      return (values) => left(values) - right(values);
+    case '*':
+      return (values) => left(values) * right(values);
+    case '^':
+      return (values) => left(values) ** right(values);
     default:
       return (values) => {
         const divisor = right(values);

@@ -9,7 +9,12 @@ import type { Node } from './syntax';
  * Why a formula has no answer at these values, as the end of a sentence: "a line of 5 in does not fit across a circle of
  * 4 1/2 in". Finds the innermost part that fails while all that it is given is sound.
  */
-export function diagnose(formula: Formula, scope: Scope, values: Values, options: { units: Unit; grid: GridId }): string {
+export function diagnose(
+  formula: Formula,
+  scope: Scope,
+  values: Values,
+  options: { units: Unit; grid: GridId },
+): string {
   return failing(formula.node, formula.text) ?? CANNOT.other();
 
   function failing(node: Node, text: string): string | null {
@@ -29,11 +34,18 @@ export function diagnose(formula: Formula, scope: Scope, values: Values, options
   /** The branch of an `if` that is not taken cannot be at fault. */
   function childrenAtWork(node: Node): readonly Node[] {
     switch (node.type) {
-      case 'unary': return [node.of];
-      case 'arithmetic': case 'comparison': case 'logic': return [node.left, node.right];
-      case 'if': return [node.test, valueOf(node.test) !== 0 ? node.then : node.otherwise];
-      case 'call': return node.args;
-      default: return [];
+      case 'unary':
+        return [node.of];
+      case 'arithmetic':
+      case 'comparison':
+      case 'logic':
+        return [node.left, node.right];
+      case 'if':
+        return [node.test, valueOf(node.test) !== 0 ? node.then : node.otherwise];
+      case 'call':
+        return node.args;
+      default:
+        return [];
     }
   }
   function say(node: Node | undefined, times = 1): string {
@@ -48,12 +60,22 @@ export function diagnose(formula: Formula, scope: Scope, values: Values, options
     if (node.type !== 'call') return CANNOT.other();
     const [a, b] = node.args;
     switch (node.name) {
-      case 'arc length': case 'arc height': case 'arc angle': return CANNOT.arc(say(a), say(b, 2));
-      case 'arc radius': return CANNOT.arcRadius(say(a), say(b));
-      case 'sqrt': return CANNOT.root(say(a));
-      case 'asin': case 'acos': return CANNOT.ratio(node.name, say(a));
-      case 'up to': case 'down to': return CANNOT.grid(say(b));
-      default: return CANNOT.other();
+      case 'arc length':
+      case 'arc height':
+      case 'arc angle':
+        return CANNOT.arc(say(a), say(b, 2));
+      case 'arc radius':
+        return CANNOT.arcRadius(say(a), say(b));
+      case 'sqrt':
+        return CANNOT.root(say(a));
+      case 'asin':
+      case 'acos':
+        return CANNOT.ratio(node.name, say(a));
+      case 'up to':
+      case 'down to':
+        return CANNOT.grid(say(b));
+      default:
+        return CANNOT.other();
     }
   }
 }

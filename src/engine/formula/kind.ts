@@ -17,14 +17,22 @@ export const TRUTH: Kind = { type: 'truth' };
 
 export function kindOf(name: KindName): Kind {
   switch (name) {
-    case 'length': return LENGTH;
-    case 'area': return AREA;
-    case 'volume': return VOLUME;
-    case 'angle': return ANGLE;
-    case 'number': return NUMBER;
-    case 'whole number': return WHOLE;
-    case 'yes/no': return TRUTH;
-    case 'choice': return { type: 'choice', name: '' };
+    case 'length':
+      return LENGTH;
+    case 'area':
+      return AREA;
+    case 'volume':
+      return VOLUME;
+    case 'angle':
+      return ANGLE;
+    case 'number':
+      return NUMBER;
+    case 'whole number':
+      return WHOLE;
+    case 'yes/no':
+      return TRUTH;
+    case 'choice':
+      return { type: 'choice', name: '' };
   }
 }
 

@@ -43,13 +43,24 @@ class Unreadable extends Error {
 export function parseFormula(text: string, names: Names, where: string): Result<Node> {
   try {
     if (text.length > LONGEST_FORMULA) {
-      throw new Unreadable('too long', SAYS.tooLong(text.length, LONGEST_FORMULA), { from: LONGEST_FORMULA, to: text.length });
+      throw new Unreadable('too long', SAYS.tooLong(text.length, LONGEST_FORMULA), {
+        from: LONGEST_FORMULA,
+        to: text.length,
+      });
     }
     return { ok: true, value: new Parser(tokenize(text), text, names).whole() };
   } catch (error) {
     if (!(error instanceof Unreadable)) throw error;
     const [found = '', expected = '', hint = ''] = error.says;
-    const fault: Fault = { code: `formula ${error.code}`, where, span: error.span, found, expected, hint, ...(error.cure === undefined ? {} : { cure: error.cure }) };
+    const fault: Fault = {
+      code: `formula ${error.code}`,
+      where,
+      span: error.span,
+      found,
+      expected,
+      hint,
+      ...(error.cure === undefined ? {} : { cure: error.cure }),
+    };
     return { ok: false, faults: [fault] };
   }
 }
@@ -60,7 +71,15 @@ const FRACTION = new RegExp(String.raw`(\d+)[/⁄](\d+)(?!\d)${UNIT}`, 'uy');
 const DECIMAL = new RegExp(String.raw`(\d+(?:\.\d+)?|\.\d+)${UNIT}?`, 'uy');
 const WORD = /[\p{L}][\p{L}\p{N}]*(?:\.[\p{L}][\p{L}\p{N}]*)*/uy;
 const SIGN = /<=|>=|<>|≤|≥|≠|[-+*/^()<>=,−×÷·]/uy;
-const SAME_SIGN: Readonly<Record<string, string>> = { '≤': '<=', '≥': '>=', '≠': '<>', '−': '-', '×': '*', '·': '*', '÷': '/' };
+const SAME_SIGN: Readonly<Record<string, string>> = {
+  '≤': '<=',
+  '≥': '>=',
+  '≠': '<>',
+  '−': '-',
+  '×': '*',
+  '·': '*',
+  '÷': '/',
+};
 
 function tokenize(text: string): Token[] {
   const tokens: Token[] = [];
@@ -86,7 +105,8 @@ function tokenize(text: string): Token[] {
       at = span.to;
       const before = tokens.at(-1);
       if (KEYWORDS.has(span.text)) tokens.push({ type: 'keyword', word: span.text, from: span.from, to: span.to });
-      else if (before?.type === 'words') tokens[tokens.length - 1] = { type: 'words', from: before.from, to: span.to, words: [...before.words, span] };
+      else if (before?.type === 'words')
+        tokens[tokens.length - 1] = { type: 'words', from: before.from, to: span.to, words: [...before.words, span] };
       else tokens.push({ type: 'words', from: span.from, to: span.to, words: [span] });
       continue;
     }
@@ -103,14 +123,23 @@ function tokenize(text: string): Token[] {
 }
 
 function readNumber(take: (pattern: RegExp) => RegExpExecArray | null) {
-  const unitOf = (name: string | undefined, degree: string | undefined) => (degree ?? name ?? null) as 'in' | 'mm' | 'cm' | '°' | null;
+  const unitOf = (name: string | undefined, degree: string | undefined) =>
+    (degree ?? name ?? null) as 'in' | 'mm' | 'cm' | '°' | null;
   const mixed = take(MIXED);
   if (mixed && Number(mixed[3]) > 0) {
-    return { value: Number(mixed[1]) + Number(mixed[2]) / Number(mixed[3]), unit: unitOf(mixed[4], mixed[5]), length: mixed[0].length };
+    return {
+      value: Number(mixed[1]) + Number(mixed[2]) / Number(mixed[3]),
+      unit: unitOf(mixed[4], mixed[5]),
+      length: mixed[0].length,
+    };
   }
   const fraction = take(FRACTION);
   if (fraction && Number(fraction[2]) > 0) {
-    return { value: Number(fraction[1]) / Number(fraction[2]), unit: unitOf(fraction[3], fraction[4]), length: fraction[0].length };
+    return {
+      value: Number(fraction[1]) / Number(fraction[2]),
+      unit: unitOf(fraction[3], fraction[4]),
+      length: fraction[0].length,
+    };
   }
   const decimal = take(DECIMAL);
   return decimal && { value: Number(decimal[1]), unit: unitOf(decimal[2], decimal[3]), length: decimal[0].length };
@@ -281,11 +310,18 @@ class Parser {
   private unknown(token: Token & { type: 'words' }, whole: string): never {
     // A known name with something after it: what is missing is the sign between them.
     for (let count = token.words.length - 1; count > 0; count -= 1) {
-      const known = token.words.slice(0, count).map((word) => word.text).join(' ');
+      const known = token.words
+        .slice(0, count)
+        .map((word) => word.text)
+        .join(' ');
       const rest = token.words[count];
       if (rest && this.names.has(known)) {
-        const tail = token.words.slice(count).map((word) => word.text).join(' ');
-        if (this.names.has(tail)) throw new Unreadable('left over', SAYS.leftOver(tail), { from: rest.from, to: token.to });
+        const tail = token.words
+          .slice(count)
+          .map((word) => word.text)
+          .join(' ');
+        if (this.names.has(tail))
+          throw new Unreadable('left over', SAYS.leftOver(tail), { from: rest.from, to: token.to });
         break;
       }
     }
@@ -296,7 +332,12 @@ class Parser {
     const nameSpan = { from: token.from, to: token.to };
     if (!FUNCTION_NAMES.has(name)) {
       const nearest = nearestName(name, FUNCTION_NAMES);
-      throw new Unreadable('unknown function', SAYS.unknownFunction(this.textOf(token), nearest), nameSpan, nearest ?? undefined);
+      throw new Unreadable(
+        'unknown function',
+        SAYS.unknownFunction(this.textOf(token), nearest),
+        nameSpan,
+        nearest ?? undefined,
+      );
     }
     this.at += 1;
     this.expect('sign', '(');
@@ -322,7 +363,12 @@ class Parser {
     const said = (here as Token & { type: 'words' }).words.map((word) => word.text).join(' ');
     const option = options.find((one) => one.toLowerCase() === said);
     if (option === undefined) {
-      throw new Unreadable('unknown option', SAYS.unknownOption(choice, said, options), here, nearestName(said, options) ?? options[0]);
+      throw new Unreadable(
+        'unknown option',
+        SAYS.unknownOption(choice, said, options),
+        here,
+        nearestName(said, options) ?? options[0],
+      );
     }
     this.at += 1;
     return this.make({ type: 'is', choice, option, not, optionSpan: here, span: { from: span.from, to: here.to } });

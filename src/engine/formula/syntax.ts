@@ -13,7 +13,13 @@ export type Node = { readonly span: Span } & (
   | { readonly type: 'arithmetic'; readonly sign: Arithmetic; readonly left: Node; readonly right: Node }
   | { readonly type: 'comparison'; readonly sign: Comparison; readonly left: Node; readonly right: Node }
   | { readonly type: 'logic'; readonly sign: 'and' | 'or'; readonly left: Node; readonly right: Node }
-  | { readonly type: 'is'; readonly choice: string; readonly option: string; readonly not: boolean; readonly optionSpan: Span }
+  | {
+      readonly type: 'is';
+      readonly choice: string;
+      readonly option: string;
+      readonly not: boolean;
+      readonly optionSpan: Span;
+    }
   | { readonly type: 'if'; readonly test: Node; readonly then: Node; readonly otherwise: Node }
   | { readonly type: 'call'; readonly name: string; readonly args: readonly Node[]; readonly nameSpan: Span }
 );

@@ -13,22 +13,84 @@ export interface ReadOptions {
 }
 
 const UNIT_NAMES: Readonly<Record<string, Unit>> = {
-  in: 'in', 'in.': 'in', inch: 'in', inches: 'in', '"': 'in', '″': 'in', '”': 'in', "''": 'in',
-  mm: 'mm', 'mm.': 'mm', millimetre: 'mm', millimetres: 'mm', millimeter: 'mm', millimeters: 'mm',
-  cm: 'cm', 'cm.': 'cm', centimetre: 'cm', centimetres: 'cm', centimeter: 'cm', centimeters: 'cm',
+  in: 'in',
+  'in.': 'in',
+  inch: 'in',
+  inches: 'in',
+  '"': 'in',
+  '″': 'in',
+  '”': 'in',
+  "''": 'in',
+  mm: 'mm',
+  'mm.': 'mm',
+  millimetre: 'mm',
+  millimetres: 'mm',
+  millimeter: 'mm',
+  millimeters: 'mm',
+  cm: 'cm',
+  'cm.': 'cm',
+  centimetre: 'cm',
+  centimetres: 'cm',
+  centimeter: 'cm',
+  centimeters: 'cm',
 };
 const VULGAR: Readonly<Record<string, string>> = {
-  '½': '1/2', '⅓': '1/3', '⅔': '2/3', '¼': '1/4', '¾': '3/4', '⅕': '1/5', '⅖': '2/5', '⅗': '3/5', '⅘': '4/5', '⅙': '1/6', '⅚': '5/6',
-  '⅛': '1/8', '⅜': '3/8', '⅝': '5/8', '⅞': '7/8',
+  '½': '1/2',
+  '⅓': '1/3',
+  '⅔': '2/3',
+  '¼': '1/4',
+  '¾': '3/4',
+  '⅕': '1/5',
+  '⅖': '2/5',
+  '⅗': '3/5',
+  '⅘': '4/5',
+  '⅙': '1/6',
+  '⅚': '5/6',
+  '⅛': '1/8',
+  '⅜': '3/8',
+  '⅝': '5/8',
+  '⅞': '7/8',
 };
 const SMALL = [
-  'zero', 'one', 'two', 'three', 'four', 'five', 'six', 'seven', 'eight', 'nine', 'ten', 'eleven', 'twelve', 'thirteen',
-  'fourteen', 'fifteen', 'sixteen', 'seventeen', 'eighteen', 'nineteen',
+  'zero',
+  'one',
+  'two',
+  'three',
+  'four',
+  'five',
+  'six',
+  'seven',
+  'eight',
+  'nine',
+  'ten',
+  'eleven',
+  'twelve',
+  'thirteen',
+  'fourteen',
+  'fifteen',
+  'sixteen',
+  'seventeen',
+  'eighteen',
+  'nineteen',
 ];
 const TENS = ['', '', 'twenty', 'thirty', 'forty', 'fifty', 'sixty', 'seventy', 'eighty', 'ninety'];
 const PARTS: Readonly<Record<string, number>> = {
-  half: 2, halves: 2, third: 3, thirds: 3, quarter: 4, quarters: 4, fourth: 4, fourths: 4, eighth: 8, eighths: 8,
-  sixteenth: 16, sixteenths: 16, 'thirty-second': 32, 'thirty-seconds': 32, 'sixty-fourth': 64, 'sixty-fourths': 64,
+  half: 2,
+  halves: 2,
+  third: 3,
+  thirds: 3,
+  quarter: 4,
+  quarters: 4,
+  fourth: 4,
+  fourths: 4,
+  eighth: 8,
+  eighths: 8,
+  sixteenth: 16,
+  sixteenths: 16,
+  thirtysecond: 32,
+  thirtyseconds: 32,
+  sixtyfourth: 64,
+  sixtyfourths: 64,
 };
 /** Longer text is not a length. */
 const LONGEST = 80;
@@ -41,7 +103,8 @@ const LONGEST = 80;
 export function readLength(text: string, { units }: ReadOptions): Result<ReadLength> {
   const typed = text.trim();
   if (typed === '') return refuse('empty', 'nothing', 'a length', 'Type a length, such as 5 3/8 in or 136 mm.');
-  if (typed.length > LONGEST) return refuse('too long', `${typed.length} characters`, 'a length', 'Type one length only.');
+  if (typed.length > LONGEST)
+    return refuse('too long', `${typed.length} characters`, 'a length', 'Type one length only.');
   const { body, unit, rest } = splitUnit(normalise(typed));
   if (rest !== '') {
     return refuse('unknown unit', `“${rest}” after the number`, 'in, mm or cm', 'Write the unit as in, mm or cm.');
@@ -63,19 +126,36 @@ function refuse(code: string, found: string, expected: string, hint: string): Re
 }
 
 function normalise(text: string): string {
-  let plain = text.toLowerCase().replace(/[\u00a0\u2009\u200a\u202f]/g, ' ').replace(/\u2044/g, '/').replace(/[−–—]/g, '-').replace(/[’‘]/g, "'");
+  let plain = text
+    .toLowerCase()
+    .replace(/[\u00a0\u2009\u200a\u202f]/g, ' ')
+    .replace(/\u2044/g, '/')
+    .replace(/[−–—]/g, '-')
+    .replace(/[’‘]/g, "'");
   for (const [mark, fraction] of Object.entries(VULGAR)) plain = plain.replaceAll(mark, ` ${fraction}`);
-  return plain.replace(/(\d),(\d{1,2})(?!\d)/g, '$1.$2').replace(/\s+/g, ' ').trim();
+  return plain
+    .replace(/(\d),(\d{1,2})(?!\d)/g, '$1.$2')
+    .replace(/\s+/g, ' ')
+    .trim();
 }
 
 function splitUnit(text: string): { body: string; unit: Unit | null; rest: string } {
-  const match = /^(.*?)\s*(?:of an? |an? )?("|″|”|''|inches|inch|in\.?|millimet(?:re|er)s?|mm\.?|centimet(?:re|er)s?|cm\.?)$/.exec(text);
+  const match =
+    /^(.*?)\s*(?:of an? |an? )?("|″|”|''|inches|inch|in\.?|millimet(?:re|er)s?|mm\.?|centimet(?:re|er)s?|cm\.?)$/.exec(
+      text,
+    );
   if (match && match[1] !== undefined && match[2] !== undefined && (match[1] !== '' || /^an? /.test(text))) {
     // "an inch" is one inch; "half an inch" keeps its half.
     return { body: match[1] === '' ? '1' : match[1].trim(), unit: UNIT_NAMES[match[2]] ?? null, rest: '' };
   }
   const stray = /^([-+]?[\d./ ]*\d)\s*([a-z"']+.*)$/.exec(text);
-  if (stray && stray[1] !== undefined && stray[2] !== undefined && readWords(stray[2]) === null && !/^and\b/.test(stray[2])) {
+  if (
+    stray &&
+    stray[1] !== undefined &&
+    stray[2] !== undefined &&
+    readWords(stray[2]) === null &&
+    !/^and\b/.test(stray[2])
+  ) {
     return { body: stray[1], unit: null, rest: stray[2] };
   }
   return { body: text, unit: null, rest: '' };
@@ -83,14 +163,17 @@ function splitUnit(text: string): { body: string; unit: Unit | null; rest: strin
 
 /** A number, a sentence that says why it makes no sense, or null when these are not figures. */
 function readFigures(body: string): number | string | null {
-  const match = /^(-)?\s*(?:(\d+(?:\.\d*)?|\.\d+)(?:\s*(?:-|and|&| )\s*(?=\d+\s*\/))?)?\s*(?:(\d+)\s*\/\s*(\d+))?$/.exec(body);
-  if (!match || (match[2] === undefined && match[3] === undefined)) return null;
-  const [, minus, whole, top, bottom] = match;
-  let value = whole === undefined ? 0 : Number(whole);
+  const match =
+    /^(-)?\s*(\d+(?:\.\d*)?|\.\d+)(?:\s*(?:-|&)\s*|\s+and\s+|\s+)(\d+)\s*\/\s*(\d+)$/.exec(body) ??
+    /^(-)?\s*()(\d+)\s*\/\s*(\d+)$/.exec(body) ??
+    /^(-)?\s*(\d+(?:\.\d*)?|\.\d+)$/.exec(body);
+  if (!match) return null;
+  const [, minus, whole = '', top, bottom] = match;
+  let value = Number(whole);
   if (top !== undefined && bottom !== undefined) {
     if (Number(bottom) === 0) return 'A fraction cannot have 0 below the line.';
-    if (whole?.includes('.')) return `Write either a decimal or a fraction, not “${whole} ${top}/${bottom}”.`;
-    if (whole !== undefined && Number(top) >= Number(bottom)) {
+    if (whole.includes('.')) return `Write either a decimal or a fraction, not “${whole} ${top}/${bottom}”.`;
+    if (whole !== '' && Number(top) >= Number(bottom)) {
       return `After a whole number the fraction must be less than 1, and ${top}/${bottom} is not.`;
     }
     value += Number(top) / Number(bottom);
@@ -100,7 +183,9 @@ function readFigures(body: string): number | string | null {
 
 /** `five and three eighths`, `four and a half`, `half`, `twenty-one`, `2 and a half`, `3 quarters`. */
 function readWords(body: string): number | null {
-  const joined = body.replace(/thirty seconds?/g, (m) => m.replace(' ', '-')).replace(/sixty fourths?/g, (m) => m.replace(' ', '-'));
+  const joined = body
+    .replaceAll('-', ' ')
+    .replace(/(thirty) (seconds?)|(sixty) (fourths?)/g, (pair) => pair.replace(' ', ''));
   const words = joined.split(' ').filter((word) => word !== 'of' && word !== '');
   if (words.length === 0 || words.length > 9) return null;
   const and = words.lastIndexOf('and');
@@ -131,15 +216,15 @@ function fractionWords(words: readonly string[]): number | null {
 
 function wholeNumber(words: readonly string[]): number | null {
   if (words.length === 1 && /^\d+$/.test(words[0] ?? '')) return Number(words[0]);
-  const spread = words.flatMap((word) => word.split('-'));
   let total = 0;
   let seen = 0;
-  for (const word of spread) {
+  for (const word of words) {
     const small = SMALL.indexOf(word);
     const ten = TENS.indexOf(word);
     if (word === 'hundred' && seen === 1 && total > 0 && total < 10) total *= 100;
-    else if (word === 'a' && seen === 0 && spread[1] === 'hundred') total = 1;
-    else if (small >= 0 && (total === 0 || (total % 10 === 0 && small < 10 && total >= 20) || total >= 100)) total += small;
+    else if (word === 'a' && seen === 0 && words[1] === 'hundred') total = 1;
+    else if (small >= 0 && (total === 0 || (total % 10 === 0 && small < 10 && total >= 20) || total >= 100))
+      total += small;
     else if (word !== '' && ten >= 2 && (total === 0 || total % 100 === 0)) total += ten * 10;
     else return null;
     seen += 1;

@@ -32,6 +32,7 @@ export const gridsFor = (unit: Unit): readonly GridId[] =>
 export function roundTo(mm: number, step: number, rounding: Rounding): number {
   if (rounding === 'exact' || !(step > 0) || !Number.isFinite(mm)) return snap(mm);
   const steps = snap(snap(mm) / step);
-  const whole = rounding === 'up' ? Math.ceil(steps) : rounding === 'down' ? Math.floor(steps) : Math.floor(steps + 0.5);
+  const whole =
+    rounding === 'up' ? Math.ceil(steps) : rounding === 'down' ? Math.floor(steps) : Math.floor(steps + 0.5);
   return snap(whole * step);
 }

@@ -52,8 +52,7 @@ function showInches(mm: number, { grid, bare }: ShowOptions): Shown {
   const unit = bare ? '' : ' in';
   const fraction = top === 0 ? '' : `${top}/${bottom}`;
   const number = fraction === '' ? `${whole}` : whole === 0 ? fraction : `${whole} ${fraction}`;
-  const typeset =
-    fraction === '' ? `${whole}` : `${whole === 0 ? '' : `${whole}${NARROW}`}${top}${SLASH}${bottom}`;
+  const typeset = fraction === '' ? `${whole}` : `${whole === 0 ? '' : `${whole}${NARROW}`}${top}${SLASH}${bottom}`;
   return {
     text: `${sign}${number}${unit}`,
     typeset: `${sign}${typeset}${bare ? '' : '\u00a0in'}`,
@@ -98,7 +97,7 @@ function showDecimal(mm: number, unit: 'mm' | 'cm', { bare }: ShowOptions): Show
 export function decimal(value: number, digits: number): string {
   const scale = 10 ** digits;
   const rounded = Math.floor(snap(Math.abs(value) * scale) + 0.5) / scale;
-  const text = rounded.toFixed(digits).replace(/\.?0+$/, (tail) => (tail.includes('.') ? '' : tail));
+  const text = `${rounded}`;
   return value < 0 && rounded !== 0 ? `−${text}` : text;
 }
 

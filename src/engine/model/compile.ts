@@ -1,9 +1,31 @@
-import { ANGLE, LENGTH, NUMBER, TRUTH, WHOLE, AREA, compileFormula, kindOf, nearestName, sayKind, type Formula, type Kind, type Scope } from '../formula';
+import {
+  ANGLE,
+  LENGTH,
+  NUMBER,
+  TRUTH,
+  WHOLE,
+  AREA,
+  compileFormula,
+  kindOf,
+  nearestName,
+  sayKind,
+  type Formula,
+  type Kind,
+  type Scope,
+} from '../formula';
 import { isFunctionName, isName, keyOf, reservedWordIn, sizeNames, drawnNames } from '../pattern/names';
 import { SAYS } from '../pattern/messages';
 import { SIDES, readCell, type Cell } from '../piece';
 import type { Fault, Pattern, PieceDef, Result, Track } from '../types';
-import type { CompiledEnd, CompiledFit, CompiledMeasure, CompiledPiece, CompiledTrack, CompiledValue, Model } from './model';
+import type {
+  CompiledEnd,
+  CompiledFit,
+  CompiledMeasure,
+  CompiledPiece,
+  CompiledTrack,
+  CompiledValue,
+  Model,
+} from './model';
 
 /** One step of the reader's cut grid; nothing in the exact evaluation. Always there, for tolerances. */
 export const CUT_GRID = 'cut grid';
@@ -53,7 +75,18 @@ class Compiler {
     if (this.faults.length > 0) return { ok: false, faults: this.faults };
     return {
       ok: true,
-      value: { pattern: this.pattern, scope: this.scope(true), slots: this.entries.size, worked, measures, choices, pieces, fits, finished, placements },
+      value: {
+        pattern: this.pattern,
+        scope: this.scope(true),
+        slots: this.entries.size,
+        worked,
+        measures,
+        choices,
+        pieces,
+        fits,
+        finished,
+        placements,
+      },
     };
   }
 
@@ -64,7 +97,13 @@ class Compiler {
   private limits(): void {
     const { measures, choices, pieces, fits } = this.pattern;
     const cells = pieces.reduce((sum, piece) => sum + piece.cells.flat().length, 0);
-    const counts = { measures: measures.length, choices: choices.length, pieces: pieces.length, cells, fits: fits.length };
+    const counts = {
+      measures: measures.length,
+      choices: choices.length,
+      pieces: pieces.length,
+      cells,
+      fits: fits.length,
+    };
     for (const [what, most] of Object.entries(MOST)) {
       const has = counts[what as keyof typeof counts];
       if (has > most) this.complain('too many', 'the pattern', SAYS.tooMany(what, has, most));
@@ -106,7 +145,8 @@ class Compiler {
       for (const name of new Set([...piece.columns, ...piece.rows].map((track) => names.track(track.name)))) {
         if (name !== names.across && name !== names.along) this.declare(name, where, { kind: LENGTH });
       }
-      for (const name of drawnNames(piece)) this.declare(name, where, { kind: name.endsWith('.area') ? AREA : LENGTH, late: true });
+      for (const name of drawnNames(piece))
+        this.declare(name, where, { kind: name.endsWith('.area') ? AREA : LENGTH, late: true });
     }
   }
   /** Late names are known only once pieces are drawn; measures may not wait for them. */
@@ -184,15 +224,29 @@ class Compiler {
     const lines = (def.lines ?? []).map((one, index) => {
       const place = `${where}, line ${index + 1}`;
       const angle = this.optional(one.angle, ANGLE, place);
-      return { between: [mustBeCell(one.between[0], place), mustBeCell(one.between[1], place)] as const, is: one.is, ...(angle ? { angle } : {}), ...when(one.when, place) };
+      return {
+        between: [mustBeCell(one.between[0], place), mustBeCell(one.between[1], place)] as const,
+        is: one.is,
+        ...(angle ? { angle } : {}),
+        ...when(one.when, place),
+      };
     });
     const tabs = (def.tabs ?? []).map((one, index) => {
       const place = `${where}, tabs ${index + 1}`;
       const depth = this.optional(one.depth, LENGTH, `${place}, depth`);
       const teeth = this.optional(one.teeth, WHOLE, `${place}, teeth`);
       const toothAngle = this.optional(one['tooth angle'], ANGLE, `${place}, tooth angle`);
-      const ends = Object.fromEntries(SIDES.flatMap((side) => (one[side] ? [[side, this.end(one[side], `${place}, ${side}`)]] : [])));
-      return { cells: one.cells.map((cell) => mustBeCell(cell, place)), ends, ...(depth ? { depth } : {}), ...(teeth ? { teeth } : {}), ...(toothAngle ? { toothAngle } : {}), ...when(one.when, place) };
+      const ends = Object.fromEntries(
+        SIDES.flatMap((side) => (one[side] ? [[side, this.end(one[side], `${place}, ${side}`)]] : [])),
+      );
+      return {
+        cells: one.cells.map((cell) => mustBeCell(cell, place)),
+        ends,
+        ...(depth ? { depth } : {}),
+        ...(teeth ? { teeth } : {}),
+        ...(toothAngle ? { toothAngle } : {}),
+        ...when(one.when, place),
+      };
     });
     const caps = (def.caps ?? []).flatMap((one) => {
       const place = `${where}, cap “${one.cell}”`;
@@ -200,22 +254,34 @@ class Compiler {
       return radius ? [{ cell: mustBeCell(one.cell, place), radius }] : [];
     });
     for (const cell of cells.flat()) {
-      if (cell.kind === 'cap' && !caps.some((cap) => cap.cell === cell.name)) this.complain('no cap', where, SAYS.noCap(cell.name));
+      if (cell.kind === 'cap' && !caps.some((cap) => cap.cell === cell.name))
+        this.complain('no cap', where, SAYS.noCap(cell.name));
     }
     const corners = (def.corners ?? []).flatMap((one) => {
       const place = `${where}, ${one.corner} corner of “${one.cell}”`;
       const radius = length(one.radius, place);
-      return radius ? [{ cell: mustBeCell(one.cell, place), corner: one.corner, radius, ...when(one.when, place) }] : [];
+      return radius
+        ? [{ cell: mustBeCell(one.cell, place), corner: one.corner, radius, ...when(one.when, place) }]
+        : [];
     });
     const notches = (def.notches ?? []).flatMap((one) => {
       const place = `${where}, notch of “${one.cell}”`;
       const [at, radius] = [length(one.at, place), length(one.radius, place)];
-      return at && radius ? [{ cell: mustBeCell(one.cell, place), side: one.side, at, radius, ...when(one.when, place) }] : [];
+      return at && radius
+        ? [{ cell: mustBeCell(one.cell, place), side: one.side, at, radius, ...when(one.when, place) }]
+        : [];
     });
     const slots = (def.slots ?? []).flatMap((one) => {
       const place = `${where}, slot of “${one.cell}”`;
-      const [across, along, width, height] = [length(one.across, place), length(one.along, place), length(one.width, place), length(one.height, place)];
-      return across && along && width && height ? [{ cell: mustBeCell(one.cell, place), across, along, width, height, ...when(one.when, place) }] : [];
+      const [across, along, width, height] = [
+        length(one.across, place),
+        length(one.along, place),
+        length(one.width, place),
+        length(one.height, place),
+      ];
+      return across && along && width && height
+        ? [{ cell: mustBeCell(one.cell, place), across, along, width, height, ...when(one.when, place) }]
+        : [];
     });
     const rolls = (def.rolls ?? []).flatMap((one) => {
       const place = `${where}, roll of “${one.cell}”`;
@@ -224,7 +290,22 @@ class Compiler {
     });
     for (const edge of def.edges ?? []) mustBeCell(edge.cell, `${where}, edge “${edge.name}”`);
     if (this.faults.length > before || !count) return undefined;
-    return { def, count, columns, rows, cells, lines, tabs, caps, corners, notches, slots, rolls, drawn: this.drawn(def), ...when(def.when, where) };
+    return {
+      def,
+      count,
+      columns,
+      rows,
+      cells,
+      lines,
+      tabs,
+      caps,
+      corners,
+      notches,
+      slots,
+      rolls,
+      drawn: this.drawn(def),
+      ...when(def.when, where),
+    };
   }
   private drawn(def: PieceDef): CompiledPiece['drawn'] {
     const [area, perimeter, ...edges] = drawnNames(def).map((name) => this.entries.get(name)?.slot ?? -1);
@@ -237,13 +318,16 @@ class Compiler {
   private end(end: { from?: string; by?: string }, where: string): CompiledEnd {
     const from = this.optional(end.from, LENGTH, where);
     const by = end.by === undefined ? undefined : this.formula(end.by, undefined, where, false);
-    if (by && by.kind.type !== 'angle' && !(by.kind.type === 'quantity' && by.kind.power === 1)) this.complain('bad taper', where, SAYS.badAngleOrLength(sayKind(by.kind)));
+    if (by && by.kind.type !== 'angle' && !(by.kind.type === 'quantity' && by.kind.power === 1))
+      this.complain('bad taper', where, SAYS.badAngleOrLength(sayKind(by.kind)));
     return { ...(from ? { from } : {}), ...(by ? { by } : {}) };
   }
   private cells(def: PieceDef, where: string): readonly (readonly Cell[])[] {
-    if (def.cells.length !== def.rows.length) this.complain('cell count', where, SAYS.cellCount(def.cells.length, def.rows.length, 'rows of cells'));
+    if (def.cells.length !== def.rows.length)
+      this.complain('cell count', where, SAYS.cellCount(def.cells.length, def.rows.length, 'rows of cells'));
     return def.cells.map((row, r) => {
-      if (row.length !== def.columns.length) this.complain('cell count', `${where}, row ${r + 1}`, SAYS.cellCount(row.length, def.columns.length, 'cells'));
+      if (row.length !== def.columns.length)
+        this.complain('cell count', `${where}, row ${r + 1}`, SAYS.cellCount(row.length, def.columns.length, 'cells'));
       return row.map((text, c) => {
         const cell = readCell(text, r, c);
         if (!cell) this.complain('bad cell', `${where}, row ${r + 1}, column ${c + 1}`, SAYS.badCell(text));
@@ -256,11 +340,13 @@ class Compiler {
     const where = `fit “${def.name}”`;
     const left = this.formula(def.left, undefined, `${where}, left side`);
     const right = this.formula(def.right, left?.kind, `${where}, right side`);
-    const tolerance = def.tolerance === undefined ? undefined : this.formula(def.tolerance, left?.kind, `${where}, tolerance`);
+    const tolerance =
+      def.tolerance === undefined ? undefined : this.formula(def.tolerance, left?.kind, `${where}, tolerance`);
     const when = this.optional(def.when, TRUTH, `${where}, when`);
     const measures = this.pattern.measures.map((measure) => measure.name);
     for (const name of def.change ?? []) {
-      if (!measures.some((one) => keyOf(one) === keyOf(name))) this.complain('no measure', where, SAYS.noMeasure(name, nearestName(name, measures)));
+      if (!measures.some((one) => keyOf(one) === keyOf(name)))
+        this.complain('no measure', where, SAYS.noMeasure(name, nearestName(name, measures)));
     }
     return left && right && { def, left, right, ...(tolerance ? { tolerance } : {}), ...(when ? { when } : {}) };
   }
@@ -283,13 +369,20 @@ class Compiler {
   private order(measures: readonly CompiledMeasure[], pieces: readonly CompiledPiece[]): CompiledValue[] {
     const values = new Map<string, { readonly value: CompiledValue; readonly needs: ReadonlySet<string> }>();
     for (const measure of measures) {
-      values.set(keyOf(measure.def.name), { value: { type: 'measure', slot: measure.slot, measure }, needs: new Set(measure.formula.uses) });
+      values.set(keyOf(measure.def.name), {
+        value: { type: 'measure', slot: measure.slot, measure },
+        needs: new Set(measure.formula.uses),
+      });
     }
-    for (const piece of pieces) for (const { name, parts } of sizesOf(piece)) {
-      const slot = this.entries.get(name)?.slot;
-      if (slot === undefined || values.has(name)) continue;
-      values.set(name, { value: { type: 'size', slot, name, parts }, needs: new Set(parts.flatMap((part) => [...part.size.uses, ...(part.when?.uses ?? [])])) });
-    }
+    for (const piece of pieces)
+      for (const { name, parts } of sizesOf(piece)) {
+        const slot = this.entries.get(name)?.slot;
+        if (slot === undefined || values.has(name)) continue;
+        values.set(name, {
+          value: { type: 'size', slot, name, parts },
+          needs: new Set(parts.flatMap((part) => [...part.size.uses, ...(part.when?.uses ?? [])])),
+        });
+      }
     const order: CompiledValue[] = [];
     const state = new Map<string, 'open' | 'done'>();
     const visit = (name: string, chain: readonly string[]): void => {
@@ -313,6 +406,9 @@ class Compiler {
 function sizesOf(piece: CompiledPiece): { readonly name: string; readonly parts: readonly CompiledTrack[] }[] {
   const names = sizeNames(piece.def);
   const tracks = [...piece.columns, ...piece.rows];
-  const single = [...new Set(tracks.map((track) => track.name))].map((name) => ({ name: names.track(name), parts: tracks.filter((track) => track.name === name) }));
+  const single = [...new Set(tracks.map((track) => track.name))].map((name) => ({
+    name: names.track(name),
+    parts: tracks.filter((track) => track.name === name),
+  }));
   return [{ name: names.across, parts: piece.columns }, { name: names.along, parts: piece.rows }, ...single];
 }

@@ -3,7 +3,17 @@ import { GRIDS, atLeast, isZero, moreThan, roundTo, same, showValue, snap } from
 import { perimeterOf } from '../net';
 import { keyOf } from '../pattern/names';
 import { areaOfNet, figureMaker, makingOf } from '../piece';
-import type { Figures, FitFigure, KindName, MeasureFigure, Net, PieceFigure, Sizing, SizingProblem, Unit } from '../types';
+import type {
+  Figures,
+  FitFigure,
+  KindName,
+  MeasureFigure,
+  Net,
+  PieceFigure,
+  Sizing,
+  SizingProblem,
+  Unit,
+} from '../types';
 import { buildPiece } from './build';
 import type { CompiledFit, CompiledMeasure, Model } from './model';
 import { answerTo, isInUse, workOut, type BothValues } from './values';
@@ -18,7 +28,10 @@ export const valuesBehind = (figures: Figures): BothValues | undefined => behind
  */
 export function evaluate(model: Model, sizing: Sizing): Figures {
   const { figures, values } = judge(model, sizing);
-  const problems = figures.problems.map((problem) => ({ ...problem, nearest: nearestThatWorks(model, sizing, figures, problem) }));
+  const problems = figures.problems.map((problem) => ({
+    ...problem,
+    nearest: nearestThatWorks(model, sizing, figures, problem),
+  }));
   const whole = problems.length === 0 ? figures : { ...figures, problems };
   behind.set(whole, values);
   return whole;
@@ -26,7 +39,12 @@ export function evaluate(model: Model, sizing: Sizing): Figures {
 
 /** A sizing with nothing answered: the usual size. */
 export function usualSizing(model: Model, units: Unit, grid: Sizing['grid']): Sizing {
-  return { values: {}, choices: Object.fromEntries(model.choices.map(({ def }) => [keyOf(def.name), def.usual])), units, grid };
+  return {
+    values: {},
+    choices: Object.fromEntries(model.choices.map(({ def }) => [keyOf(def.name), def.usual])),
+    units,
+    grid,
+  };
 }
 
 function judge(model: Model, sizing: Sizing): { figures: Figures; values: BothValues } {
@@ -37,12 +55,22 @@ function judge(model: Model, sizing: Sizing): { figures: Figures; values: BothVa
     const problem = valueProblem(model, measure, sizing, values);
     if (problem) problems.push(problem);
   }
-  const pieces = problems.some((problem) => problem.code === 'cannot be worked out') ? [] : piecesOf(model, values, sizing, problems);
-  const fits = pieces.length === 0 ? [] : model.fits.flatMap((fit) => (isInUse(fit, values.cut) ? [fitFigure(fit, values)] : []));
+  const pieces = problems.some((problem) => problem.code === 'cannot be worked out')
+    ? []
+    : piecesOf(model, values, sizing, problems);
+  const fits =
+    pieces.length === 0 ? [] : model.fits.flatMap((fit) => (isInUse(fit, values.cut) ? [fitFigure(fit, values)] : []));
   for (const fit of fits) {
-    if (!fit.holds && !fit.advice) problems.push({ code: 'fit fails', measure: fit.change[0] ?? '', sentence: `${capital(fit.name)} fails: ${fit.otherwise}`, nearest: null });
+    if (!fit.holds && !fit.advice)
+      problems.push({
+        code: 'fit fails',
+        measure: fit.change[0] ?? '',
+        sentence: `${capital(fit.name)} fails: ${fit.otherwise}`,
+        nearest: null,
+      });
   }
-  const sizes = (list: Model['finished']['inside']) => list.map(({ def, formula }) => ({ name: def.name, mm: snap(formula.work(values.cut)) }));
+  const sizes = (list: Model['finished']['inside']) =>
+    list.map(({ def, formula }) => ({ name: def.name, mm: snap(formula.work(values.cut)) }));
   return {
     figures: {
       sizing,
@@ -61,7 +89,15 @@ function judge(model: Model, sizing: Sizing): { figures: Figures; values: BothVa
 
 function measureFigure(measure: CompiledMeasure, sizing: Sizing, { exact, cut }: BothValues): MeasureFigure {
   const answer = answerTo(measure, sizing);
-  const asked = measure.from && measure.to ? { from: measure.from.work(exact), to: measure.to.work(exact), usual: measure.formula.work(exact), set: answer !== undefined } : {};
+  const asked =
+    measure.from && measure.to
+      ? {
+          from: measure.from.work(exact),
+          to: measure.to.work(exact),
+          usual: measure.formula.work(exact),
+          set: answer !== undefined,
+        }
+      : {};
   return {
     name: measure.def.name,
     kind: measure.def.kind ?? (kindName(measure.kind) as KindName),
@@ -75,7 +111,12 @@ function measureFigure(measure: CompiledMeasure, sizing: Sizing, { exact, cut }:
 }
 
 /** Out of its range, or without a value at this size. */
-function valueProblem(model: Model, measure: CompiledMeasure, sizing: Sizing, { exact, cut }: BothValues): SizingProblem | null {
+function valueProblem(
+  model: Model,
+  measure: CompiledMeasure,
+  sizing: Sizing,
+  { exact, cut }: BothValues,
+): SizingProblem | null {
   const { name } = measure.def;
   const value = exact[measure.slot] as number;
   if (!isInUse(measure, cut)) return null;
@@ -84,16 +125,33 @@ function valueProblem(model: Model, measure: CompiledMeasure, sizing: Sizing, { 
     // What it needs fails first and says so itself.
     if (measure.formula.uses.some((need) => !Number.isFinite(at[model.scope.slot(need)] as number))) return null;
     const why = diagnose(measure.formula, model.scope, at, { units: sizing.units, grid: sizing.grid });
-    return { code: 'cannot be worked out', measure: askedBehind(model, measure) ?? name, sentence: `“${name}” cannot be worked out at this size: ${why}.`, nearest: null };
+    return {
+      code: 'cannot be worked out',
+      measure: askedBehind(model, measure) ?? name,
+      sentence: `“${name}” cannot be worked out at this size: ${why}.`,
+      nearest: null,
+    };
   }
   if (!measure.from || !measure.to) return null;
   const [from, to] = [measure.from.work(exact), measure.to.work(exact)];
-  const says = (mm: number) => showValue(mm, measure.def.kind ?? 'length', { ...sizing, ...(measure.def.unit ? { unit: measure.def.unit } : {}) }).text;
+  const says = (mm: number) =>
+    showValue(mm, measure.def.kind ?? 'length', { ...sizing, ...(measure.def.unit ? { unit: measure.def.unit } : {}) })
+      .text;
   if (Number.isFinite(from) && !atLeast(value, from)) {
-    return { code: 'below range', measure: name, sentence: `${capital(name)} is ${says(value)}; here it must be at least ${says(from)}.`, nearest: null };
+    return {
+      code: 'below range',
+      measure: name,
+      sentence: `${capital(name)} is ${says(value)}; here it must be at least ${says(from)}.`,
+      nearest: null,
+    };
   }
   if (Number.isFinite(to) && !atLeast(to, value)) {
-    return { code: 'above range', measure: name, sentence: `${capital(name)} is ${says(value)}; here it can be at most ${says(to)}.`, nearest: null };
+    return {
+      code: 'above range',
+      measure: name,
+      sentence: `${capital(name)} is ${says(value)}; here it can be at most ${says(to)}.`,
+      nearest: null,
+    };
   }
   return null;
 }
@@ -122,26 +180,52 @@ function piecesOf(model: Model, { exact, cut }: BothValues, sizing: Sizing, prob
     if (!isInUse(piece, cut) || count < 1) return [];
     const { grid, built } = buildPiece(piece, cut);
     if (!built.ok) {
-      problems.push({ code: 'piece fails', measure: firstAskedOf(model, piece.columns.concat(piece.rows).map((track) => track.size)), sentence: `The ${piece.def.name.toLowerCase()} cannot be cut at this size: ${built.reason}.`, nearest: null });
+      problems.push({
+        code: 'piece fails',
+        measure: firstAskedOf(
+          model,
+          piece.columns.concat(piece.rows).map((track) => track.size),
+        ),
+        sentence: `The ${piece.def.name.toLowerCase()} cannot be cut at this size: ${built.reason}.`,
+        nearest: null,
+      });
       return [];
     }
     const { net } = built;
-    const [area, perimeter] = [areaOfNet(net), perimeterOf(net.outline) + net.holes.reduce((sum, hole) => sum + perimeterOf(hole), 0)];
+    const [area, perimeter] = [
+      areaOfNet(net),
+      perimeterOf(net.outline) + net.holes.reduce((sum, hole) => sum + perimeterOf(hole), 0),
+    ];
     for (const { slot, of } of piece.drawn) {
       const value = of === 'area' ? area : of === 'perimeter' ? perimeter : (net.edges[of.edge] ?? NaN);
       cut[slot] = value;
       exact[slot] = value;
     }
     const scores = scoresOf(net);
-    return [{
-      name: piece.def.name, count, stock: piece.def.stock, net, across: net.across, along: net.along, scores, thickness, area, perimeter,
-      instructions: makingOf({ net, grid, def: piece.def, scores, figure }),
-    }];
+    return [
+      {
+        name: piece.def.name,
+        count,
+        stock: piece.def.stock,
+        net,
+        across: net.across,
+        along: net.along,
+        scores,
+        thickness,
+        area,
+        perimeter,
+        instructions: makingOf({ net, grid, def: piece.def, scores, figure }),
+      },
+    ];
   });
 }
 
 const firstAskedOf = (model: Model, formulas: readonly Formula[]): string =>
-  model.measures.find((measure) => measure.def.ask && formulas.some((formula) => formula.uses.includes(keyOf(measure.def.name))))?.def.name ?? model.measures[0]?.def.name ?? '';
+  model.measures.find(
+    (measure) => measure.def.ask && formulas.some((formula) => formula.uses.includes(keyOf(measure.def.name))),
+  )?.def.name ??
+  model.measures[0]?.def.name ??
+  '';
 
 function thicknessOf(model: Model, values: Values): number {
   const value = model.scope.has('card thickness') ? (values[model.scope.slot('card thickness')] as number) : 0;
@@ -157,7 +241,8 @@ export function scoresOf(net: Net): PieceFigure['scores'] {
     if (same(curve.from.x, curve.to.x)) upright.push(snap(curve.from.x));
     else if (same(curve.from.y, curve.to.y)) level.push(snap(curve.from.y));
   }
-  const sorted = (list: number[]) => list.sort((a, b) => a - b).filter((value, index, all) => index === 0 || !same(value, all[index - 1] as number));
+  const sorted = (list: number[]) =>
+    list.sort((a, b) => a - b).filter((value, index, all) => index === 0 || !same(value, all[index - 1] as number));
   return { across: sorted(upright), along: sorted(level) };
 }
 
@@ -180,9 +265,17 @@ function departureOf(model: Model, { exact, cut }: BothValues): Figures['departu
 function fitFigure({ def, left, right, tolerance }: CompiledFit, { cut }: BothValues): FitFigure {
   const [a, b] = [left.work(cut), right.work(cut)];
   const allowed = tolerance?.work(cut) ?? 0;
-  const gap = { 'at least': a - b, 'more than': a - b, 'at most': b - a, 'less than': b - a, 'same as': allowed - Math.abs(a - b) }[def.is];
+  const gap = {
+    'at least': a - b,
+    'more than': a - b,
+    'at most': b - a,
+    'less than': b - a,
+    'same as': allowed - Math.abs(a - b),
+  }[def.is];
   const slack = def.is === 'same as' ? gap : gap + allowed;
-  const holds = Number.isFinite(slack) && (def.is === 'more than' || def.is === 'less than' ? moreThan(slack, 0) : atLeast(slack, 0));
+  const holds =
+    Number.isFinite(slack) &&
+    (def.is === 'more than' || def.is === 'less than' ? moreThan(slack, 0) : atLeast(slack, 0));
   return {
     name: def.name,
     holds,
@@ -197,7 +290,25 @@ function fitFigure({ def, left, right, tolerance }: CompiledFit, { cut }: BothVa
 // ── The nearest size that works ──────────────────────────────────────────────────────────────────────────────────────
 
 /** Steps of the grid to try outwards from the asked value; the first few one by one, then in growing strides. */
-const STRIDES = [...Array.from({ length: 16 }, (_, index) => index + 1), 20, 24, 32, 40, 48, 64, 80, 96, 128, 160, 192, 256, 384, 512, 768, 1024];
+const STRIDES = [
+  ...Array.from({ length: 16 }, (_, index) => index + 1),
+  20,
+  24,
+  32,
+  40,
+  48,
+  64,
+  80,
+  96,
+  128,
+  160,
+  192,
+  256,
+  384,
+  512,
+  768,
+  1024,
+];
 
 /** The value of the problem's measure nearest to the asked one at which nothing fails; null when none in its range does. */
 function nearestThatWorks(model: Model, sizing: Sizing, figures: Figures, problem: SizingProblem): number | null {
@@ -209,18 +320,30 @@ function nearestThatWorks(model: Model, sizing: Sizing, figures: Figures, proble
   const works = (value: number): boolean => {
     const { problems } = judge(model, alone(value)).figures;
     // Problems of other measures that were there before are not this one's to mend.
-    return problems.every((other) => keyOf(other.measure) !== keyOf(problem.measure) && figures.problems.some((before) => before.sentence === other.sentence));
+    return problems.every(
+      (other) =>
+        keyOf(other.measure) !== keyOf(problem.measure) &&
+        figures.problems.some((before) => before.sentence === other.sentence),
+    );
   };
   if (problem.code === 'below range' && works(low)) return low;
   if (problem.code === 'above range' && works(high)) return high;
   const start = roundTo(Math.min(Math.max(figure.exact, low), high), step, 'nearest');
   const inRange = (value: number) => atLeast(value, low) && atLeast(high, value);
-  const tried = [start, ...STRIDES.flatMap((stride) => [snap(start - stride * step), snap(start + stride * step)])].filter(inRange);
+  const tried = [
+    start,
+    ...STRIDES.flatMap((stride) => [snap(start - stride * step), snap(start + stride * step)]),
+  ].filter(inRange);
   const found = tried.find(works);
   if (found === undefined) return null;
   // Strides skip values: walk back towards the asked one while it still works.
   let nearest = found;
-  for (let closer = snap(nearest + (nearest < start ? step : -step)); nearest !== start && inRange(closer) && works(closer) && Math.abs(closer - start) < Math.abs(nearest - start); closer = snap(closer + (closer < start ? step : -step))) nearest = closer;
+  for (
+    let closer = snap(nearest + (nearest < start ? step : -step));
+    nearest !== start && inRange(closer) && works(closer) && Math.abs(closer - start) < Math.abs(nearest - start);
+    closer = snap(closer + (closer < start ? step : -step))
+  )
+    nearest = closer;
   return nearest;
 }
 

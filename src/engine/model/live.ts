@@ -24,17 +24,34 @@ export function compileLive(model: Model, text: string): Result<LiveMeasure> {
   const { value: formula } = compiled;
   const kind = kindName(formula.kind);
   if (kind === null || kind === 'choice') {
-    const fault: Fault = { code: 'live kind', where: 'live measure', found: 'this works out nothing that can be shown', expected: 'a length, an area, an angle or a number', hint: 'Divide it, or take its root.' };
+    const fault: Fault = {
+      code: 'live kind',
+      where: 'live measure',
+      found: 'this works out nothing that can be shown',
+      expected: 'a length, an area, an angle or a number',
+      hint: 'Divide it, or take its root.',
+    };
     return { ok: false, faults: [fault] };
   }
   const own = model.measures.find((measure) => keyOf(measure.def.name) === keyOf(text));
   return {
     ok: true,
-    value: { formula: text, kind, uses: formula.uses, ...(own?.def.unit ? { unit: own.def.unit } : {}), value: (figures) => valueOf(formula, kind, own !== undefined, figures) },
+    value: {
+      formula: text,
+      kind,
+      uses: formula.uses,
+      ...(own?.def.unit ? { unit: own.def.unit } : {}),
+      value: (figures) => valueOf(formula, kind, own !== undefined, figures),
+    },
   };
 }
 
-function valueOf(formula: Formula, kind: KindName, bare: boolean, figures: Figures): { exact: number; cut: number } | null {
+function valueOf(
+  formula: Formula,
+  kind: KindName,
+  bare: boolean,
+  figures: Figures,
+): { exact: number; cut: number } | null {
   const values = valuesBehind(figures);
   if (!values) return null;
   const [exact, cut] = [formula.work(values.exact), formula.work(values.cut)];

@@ -52,7 +52,12 @@ export interface CompiledPiece {
   readonly columns: readonly CompiledTrack[];
   readonly rows: readonly CompiledTrack[];
   readonly cells: readonly (readonly Cell[])[];
-  readonly lines: readonly { readonly between: readonly [string, string]; readonly is: 'valley' | 'mountain' | 'slit' | 'nothing'; readonly angle?: Formula; readonly when?: Formula }[];
+  readonly lines: readonly {
+    readonly between: readonly [string, string];
+    readonly is: 'valley' | 'mountain' | 'slit' | 'nothing';
+    readonly angle?: Formula;
+    readonly when?: Formula;
+  }[];
   readonly tabs: readonly {
     readonly cells: readonly string[];
     readonly depth?: Formula;
@@ -62,9 +67,27 @@ export interface CompiledPiece {
     readonly when?: Formula;
   }[];
   readonly caps: readonly { readonly cell: string; readonly radius: Formula }[];
-  readonly corners: readonly { readonly cell: string; readonly corner: string; readonly radius: Formula; readonly when?: Formula }[];
-  readonly notches: readonly { readonly cell: string; readonly side: Side; readonly at: Formula; readonly radius: Formula; readonly when?: Formula }[];
-  readonly slots: readonly { readonly cell: string; readonly across: Formula; readonly along: Formula; readonly width: Formula; readonly height: Formula; readonly when?: Formula }[];
+  readonly corners: readonly {
+    readonly cell: string;
+    readonly corner: string;
+    readonly radius: Formula;
+    readonly when?: Formula;
+  }[];
+  readonly notches: readonly {
+    readonly cell: string;
+    readonly side: Side;
+    readonly at: Formula;
+    readonly radius: Formula;
+    readonly when?: Formula;
+  }[];
+  readonly slots: readonly {
+    readonly cell: string;
+    readonly across: Formula;
+    readonly along: Formula;
+    readonly width: Formula;
+    readonly height: Formula;
+    readonly when?: Formula;
+  }[];
   readonly rolls: readonly { readonly cell: string; readonly radius: Formula; readonly when?: Formula }[];
   /** Slots of area, perimeter and named edges, by what they are. */
   readonly drawn: readonly { readonly slot: number; readonly of: 'area' | 'perimeter' | { readonly edge: string } }[];

@@ -14,7 +14,8 @@ export const roundingOf = (measure: CompiledMeasure): Rounding =>
   measure.def.rounds ?? (measure.kind.type === 'quantity' && measure.kind.power === 1 ? 'nearest' : 'exact');
 
 /** What the reader answered for an asked measure, if anything. */
-export const answerTo = (measure: CompiledMeasure, sizing: Sizing): number | undefined => (measure.def.ask ? sizing.values[keyOf(measure.def.name)] : undefined);
+export const answerTo = (measure: CompiledMeasure, sizing: Sizing): number | undefined =>
+  measure.def.ask ? sizing.values[keyOf(measure.def.name)] : undefined;
 export function optionOf(choice: Model['choices'][number], sizing: Sizing): string {
   const said = sizing.choices[keyOf(choice.def.name)];
   return said !== undefined && choice.def.options.includes(said) ? said : choice.def.usual;
@@ -46,5 +47,6 @@ function pass(model: Model, sizing: Sizing, step: number | null): Values {
 }
 
 /** A column or row that is not in use has no size. */
-export const isInUse = (track: { readonly when?: CompiledTrack['when'] }, values: Values): boolean => track.when === undefined || track.when.work(values) !== 0;
+export const isInUse = (track: { readonly when?: CompiledTrack['when'] }, values: Values): boolean =>
+  track.when === undefined || track.when.work(values) !== 0;
 const sizeOf = (track: CompiledTrack, values: Values): number => (isInUse(track, values) ? track.size.work(values) : 0);

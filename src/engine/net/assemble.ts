@@ -10,7 +10,10 @@ export interface LoosePanel {
   readonly roll?: Panel['roll'];
 }
 /** How two panels that share an edge are joined there. */
-export type Joint = { readonly is: 'fold'; readonly kind: Fold['kind']; readonly angle: number } | { readonly is: 'nothing' } | { readonly is: 'slit' };
+export type Joint =
+  | { readonly is: 'fold'; readonly kind: Fold['kind']; readonly angle: number }
+  | { readonly is: 'nothing' }
+  | { readonly is: 'slit' };
 export interface Assembled {
   readonly outline: Loop;
   readonly holes: readonly Loop[];
@@ -43,7 +46,9 @@ export function assemble(panels: readonly LoosePanel[], jointOf: (a: string, b: 
   const matched = new Set<Edge>();
   for (const edge of edges) {
     if (matched.has(edge)) continue;
-    const twin = (open.get(keyOf(edge.curve.to)) ?? []).find((other) => !matched.has(other) && other.panel !== edge.panel && isTwin(edge.curve, other.curve));
+    const twin = (open.get(keyOf(edge.curve.to)) ?? []).find(
+      (other) => !matched.has(other) && other.panel !== edge.panel && isTwin(edge.curve, other.curve),
+    );
     if (!twin) continue;
     matched.add(edge).add(twin);
     const names: [string, string] = [(panels[edge.panel] as LoosePanel).name, (panels[twin.panel] as LoosePanel).name];
@@ -84,11 +89,19 @@ function splitAtVertices(edges: readonly Edge[]): Edge[] {
       .flatMap((other) => [other.curve.from])
       .filter((point) => (upright ? coincident(point.x, from.x) : coincident(point.y, from.y)))
       .map((point) => (upright ? point.y : point.x))
-      .filter((value) => value > Math.min(start, end) && value < Math.max(start, end) && !coincident(value, start) && !coincident(value, end))
+      .filter(
+        (value) =>
+          value > Math.min(start, end) &&
+          value < Math.max(start, end) &&
+          !coincident(value, start) &&
+          !coincident(value, end),
+      )
       .sort((a, b) => (start < end ? a - b : b - a))
       .filter((value, index, all) => index === 0 || !coincident(value, all[index - 1] as number));
     const stops = [from, ...cuts.map((value) => (upright ? { x: from.x, y: value } : { x: value, y: from.y })), to];
-    return stops.slice(1).map((stop, index) => ({ panel: edge.panel, curve: partOf(edge.curve, stops[index] as Point, stop) }));
+    return stops
+      .slice(1)
+      .map((stop, index) => ({ panel: edge.panel, curve: partOf(edge.curve, stops[index] as Point, stop) }));
   });
 }
 
@@ -106,7 +119,9 @@ function chain(edges: readonly Edge[]): Loop[] {
       used.add(edge);
       loop.push(edge.curve);
       const last: Curve = edge.curve;
-      edge = (from.get(keyOf(last.to)) ?? []).filter((next) => !used.has(next)).sort((a, b) => turn(last, b.curve) - turn(last, a.curve))[0];
+      edge = (from.get(keyOf(last.to)) ?? [])
+        .filter((next) => !used.has(next))
+        .sort((a, b) => turn(last, b.curve) - turn(last, a.curve))[0];
     }
     loops.push(straighten(loop));
   }
@@ -114,7 +129,10 @@ function chain(edges: readonly Edge[]): Loop[] {
 }
 
 function turn(a: Curve, b: Curve): number {
-  const [u, v] = [{ x: a.to.x - a.from.x, y: a.to.y - a.from.y }, { x: b.to.x - b.from.x, y: b.to.y - b.from.y }];
+  const [u, v] = [
+    { x: a.to.x - a.from.x, y: a.to.y - a.from.y },
+    { x: b.to.x - b.from.x, y: b.to.y - b.from.y },
+  ];
   return Math.atan2(u.x * v.y - u.y * v.x, u.x * v.x + u.y * v.y);
 }
 
@@ -135,7 +153,8 @@ export function straighten(loop: Loop): Loop {
 }
 function continues(a: Curve, b: Curve): boolean {
   if (!samePoint(a.to, b.from)) return false;
-  if (a.type === 'arc') return b.type === 'arc' && samePoint(a.centre, b.centre) && a.clockwise === b.clockwise && !samePoint(a.from, b.to);
+  if (a.type === 'arc')
+    return b.type === 'arc' && samePoint(a.centre, b.centre) && a.clockwise === b.clockwise && !samePoint(a.from, b.to);
   if (b.type === 'arc') return false;
   const cross = (a.to.x - a.from.x) * (b.to.y - b.from.y) - (a.to.y - a.from.y) * (b.to.x - b.from.x);
   const dot = (a.to.x - a.from.x) * (b.to.x - b.from.x) + (a.to.y - a.from.y) * (b.to.y - b.from.y);
@@ -146,10 +165,21 @@ function continues(a: Curve, b: Curve): boolean {
 function mergeFolds(folds: readonly Fold[]): Fold[] {
   const result: Fold[] = [];
   for (const fold of folds) {
-    const index = result.findIndex((other) => other.panels[0] === fold.panels[0] && other.panels[1] === fold.panels[1] && (continues(other.curve, fold.curve) || continues(fold.curve, other.curve)));
+    const index = result.findIndex(
+      (other) =>
+        other.panels[0] === fold.panels[0] &&
+        other.panels[1] === fold.panels[1] &&
+        (continues(other.curve, fold.curve) || continues(fold.curve, other.curve)),
+    );
     const before = result[index];
     if (!before) result.push(fold);
-    else result[index] = { ...before, curve: continues(before.curve, fold.curve) ? partOf(before.curve, before.curve.from, fold.curve.to) : partOf(before.curve, fold.curve.from, before.curve.to) };
+    else
+      result[index] = {
+        ...before,
+        curve: continues(before.curve, fold.curve)
+          ? partOf(before.curve, before.curve.from, fold.curve.to)
+          : partOf(before.curve, fold.curve.from, before.curve.to),
+      };
   }
   return result;
 }

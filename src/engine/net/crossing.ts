@@ -26,7 +26,8 @@ export function selfCrossing(loop: Loop): Point | null {
  */
 export function crossingOf(a: Point, b: Point, c: Point, d: Point): Point | null {
   const side = (from: Point, to: Point, point: Point) =>
-    ((to.x - from.x) * (point.y - from.y) - (to.y - from.y) * (point.x - from.x)) / Math.max(Math.hypot(to.x - from.x, to.y - from.y), COINCIDENT);
+    ((to.x - from.x) * (point.y - from.y) - (to.y - from.y) * (point.x - from.x)) /
+    Math.max(Math.hypot(to.x - from.x, to.y - from.y), COINCIDENT);
   const [c1, d1, a1, b1] = [side(a, b, c), side(a, b, d), side(c, d, a), side(c, d, b)];
   const apart = (p: number, q: number) => (p > COINCIDENT && q < -COINCIDENT) || (p < -COINCIDENT && q > COINCIDENT);
   if (!apart(c1, d1) || !apart(a1, b1)) return null;

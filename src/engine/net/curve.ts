@@ -29,16 +29,20 @@ export function sweepOf(arc: Arc): number {
 
 /** Point of the curve at `t` from 0 to 1, by length. */
 export function pointAt(curve: Curve, t: number): Point {
-  if (curve.type === 'line') return { x: curve.from.x + (curve.to.x - curve.from.x) * t, y: curve.from.y + (curve.to.y - curve.from.y) * t };
+  if (curve.type === 'line')
+    return { x: curve.from.x + (curve.to.x - curve.from.x) * t, y: curve.from.y + (curve.to.y - curve.from.y) * t };
   const start = Math.atan2(curve.from.y - curve.centre.y, curve.from.x - curve.centre.x);
   const angle = start + (curve.clockwise ? 1 : -1) * sweepOf(curve) * t;
   return { x: curve.centre.x + curve.radius * Math.cos(angle), y: curve.centre.y + curve.radius * Math.sin(angle) };
 }
 
-export const lengthOf = (curve: Curve): number => (curve.type === 'line' ? distance(curve.from, curve.to) : curve.radius * sweepOf(curve));
+export const lengthOf = (curve: Curve): number =>
+  curve.type === 'line' ? distance(curve.from, curve.to) : curve.radius * sweepOf(curve);
 
 export function reversed(curve: Curve): Curve {
-  return curve.type === 'line' ? line(curve.to, curve.from) : { ...curve, from: curve.to, to: curve.from, clockwise: !curve.clockwise };
+  return curve.type === 'line'
+    ? line(curve.to, curve.from)
+    : { ...curve, from: curve.to, to: curve.from, clockwise: !curve.clockwise };
 }
 
 /** The curve from `from` to `to` out of a longer one; both points must lie on it. */
@@ -51,10 +55,13 @@ export function flatten(curve: Curve, tolerance = 0.05): readonly Point[] {
   // A chord over angle a leaves the circle by r (1 − cos(a / 2)).
   const step = 2 * Math.acos(Math.max(-1, 1 - tolerance / curve.radius));
   const count = Math.max(2, Math.ceil(sweep / Math.max(step, 1e-3)));
-  return Array.from({ length: count }, (_, index) => (index === count - 1 ? curve.to : pointAt(curve, (index + 1) / count)));
+  return Array.from({ length: count }, (_, index) =>
+    index === count - 1 ? curve.to : pointAt(curve, (index + 1) / count),
+  );
 }
 
-export const pointsOf = (loop: Loop, tolerance?: number): readonly Point[] => loop.flatMap((curve) => flatten(curve, tolerance));
+export const pointsOf = (loop: Loop, tolerance?: number): readonly Point[] =>
+  loop.flatMap((curve) => flatten(curve, tolerance));
 
 /**
  * Area enclosed, positive when the loop runs clockwise on screen. Exact: the polygon of the curves' ends plus the circular

@@ -1,21 +1,69 @@
 /** What the check of a pattern says: found, expected, hint. */
 export const SAYS = {
-  badName: (name: string) => [`the name “${name}”`, 'letters, digits and single spaces, beginning with a letter', 'Rename it.'],
-  reserved: (name: string, word: string) => [`the name “${name}” holds the word “${word}”`, 'a name without if, then, else, and, or, not, is', 'Choose another word.'],
+  badName: (name: string) => [
+    `the name “${name}”`,
+    'letters, digits and single spaces, beginning with a letter',
+    'Rename it.',
+  ],
+  reserved: (name: string, word: string) => [
+    `the name “${name}” holds the word “${word}”`,
+    'a name without if, then, else, and, or, not, is',
+    'Choose another word.',
+  ],
   twice: (name: string) => [`two things are called “${name}”`, 'each name once', 'Rename one of them.'],
   functionName: (name: string) => [`“${name}” is the name of a function`, 'a name of its own', 'Choose another word.'],
-  neither: () => ['it has neither a question nor a formula', 'one of the two', 'Ask the reader for it, or give it a formula.'],
+  neither: () => [
+    'it has neither a question nor a formula',
+    'one of the two',
+    'Ask the reader for it, or give it a formula.',
+  ],
   both: () => ['it has both a question and a formula', 'one of the two', 'Take one of them out.'],
-  circle: (chain: readonly string[]) => [`it depends on itself: ${chain.join(' → ')}`, 'measures that do not go round in a circle', 'Break the circle at one of them.'],
-  badOption: (option: string, options: readonly string[]) => [`the usual option “${option}”`, options.join(' or '), 'Choose one of its options.'],
+  circle: (chain: readonly string[]) => [
+    `it depends on itself: ${chain.join(' → ')}`,
+    'measures that do not go round in a circle',
+    'Break the circle at one of them.',
+  ],
+  badOption: (option: string, options: readonly string[]) => [
+    `the usual option “${option}”`,
+    options.join(' or '),
+    'Choose one of its options.',
+  ],
   fewOptions: () => ['it has fewer than two options', 'at least two', 'Add an option, or take the choice out.'],
-  cellCount: (has: number, wants: number, what: string) => [`${has} ${what}`, `${wants}, as many as there are sizes`, 'Give every row one cell for every column.'],
-  badCell: (text: string) => [`the cell “${text}”`, 'panel, tab, cap or away, then its name', 'Write it like “panel floor” or “tab left on floor”.'],
-  noCell: (name: string, nearest: string | null) => [`no cell is called “${name}”`, 'the name of a cell', nearest === null ? 'Check the names of the cells.' : `The nearest name is “${nearest}”.`],
-  noPiece: (name: string, nearest: string | null) => [`no piece is called “${name}”`, 'the name of a piece', nearest === null ? 'Check the names of the pieces.' : `The nearest name is “${nearest}”.`],
-  noMeasure: (name: string, nearest: string | null) => [`no measure is called “${name}”`, 'the name of a measure', nearest === null ? 'Check its name.' : `The nearest name is “${nearest}”.`],
+  cellCount: (has: number, wants: number, what: string) => [
+    `${has} ${what}`,
+    `${wants}, as many as there are sizes`,
+    'Give every row one cell for every column.',
+  ],
+  badCell: (text: string) => [
+    `the cell “${text}”`,
+    'panel, tab, cap or away, then its name',
+    'Write it like “panel floor” or “tab left on floor”.',
+  ],
+  noCell: (name: string, nearest: string | null) => [
+    `no cell is called “${name}”`,
+    'the name of a cell',
+    nearest === null ? 'Check the names of the cells.' : `The nearest name is “${nearest}”.`,
+  ],
+  noPiece: (name: string, nearest: string | null) => [
+    `no piece is called “${name}”`,
+    'the name of a piece',
+    nearest === null ? 'Check the names of the pieces.' : `The nearest name is “${nearest}”.`,
+  ],
+  noMeasure: (name: string, nearest: string | null) => [
+    `no measure is called “${name}”`,
+    'the name of a measure',
+    nearest === null ? 'Check its name.' : `The nearest name is “${nearest}”.`,
+  ],
   noCap: (name: string) => [`the cap “${name}” has no radius`, 'a radius among the caps', 'Add it to “caps”.'],
-  badAngleOrLength: (found: string) => [`this is ${found}`, 'a length or an angle', 'Say how far in, such as 1/8 in, or how far off square, such as 45°.'],
+  badAngleOrLength: (found: string) => [
+    `this is ${found}`,
+    'a length or an angle',
+    'Say how far in, such as 1/8 in, or how far off square, such as 45°.',
+  ],
   tooMany: (what: string, has: number, most: number) => [`${has} ${what}`, `at most ${most}`, 'Split the pattern.'],
-  late: (name: string) => [`“${name}” is only known once the pieces are drawn`, 'a measure, or the size of a column or row', 'Use it in a fit or in the text.'],
+  late: (name: string) => [
+    `“${name}” is only known once the pieces are drawn`,
+    'a measure, or the size of a column or row',
+    'Use it in a fit or in the text.',
+  ],
 } satisfies Record<string, (...args: never[]) => readonly string[]>;

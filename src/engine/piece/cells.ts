@@ -30,4 +30,9 @@ export function readCell(text: string, row: number, column: number): Cell | null
 
 /** Every cell of a piece, unreadable ones as cut away (the check reports them). */
 export const cellsOf = (piece: PieceDef): readonly (readonly Cell[])[] =>
-  piece.cells.map((row, r) => row.map((text, c) => readCell(text, r, c) ?? { kind: 'away', name: `away ${r + 1}.${c + 1}`, on: null, row: r, column: c }));
+  piece.cells.map((row, r) =>
+    row.map(
+      (text, c) =>
+        readCell(text, r, c) ?? { kind: 'away', name: `away ${r + 1}.${c + 1}`, on: null, row: r, column: c },
+    ),
+  );

@@ -1,5 +1,15 @@
 import { atLeast, isZero, moreThan, snap } from '../measure';
-import { arcThrough, areaOf, assemble, lengthOf, line, pointAt, selfCrossing, type Joint, type LoosePanel } from '../net';
+import {
+  arcThrough,
+  areaOf,
+  assemble,
+  lengthOf,
+  line,
+  pointAt,
+  selfCrossing,
+  type Joint,
+  type LoosePanel,
+} from '../net';
 import type { Arc, Curve, Loop, Net, Panel, Point, Side } from '../types';
 import { OPPOSITE, SIDES, type Cell } from './cells';
 
@@ -8,12 +18,27 @@ export interface GridPiece {
   readonly columns: readonly number[];
   readonly rows: readonly number[];
   readonly cells: readonly (readonly Cell[])[];
-  readonly lines: readonly { readonly between: readonly [string, string]; readonly is: 'valley' | 'mountain' | 'slit' | 'nothing'; readonly angle: number }[];
+  readonly lines: readonly {
+    readonly between: readonly [string, string];
+    readonly is: 'valley' | 'mountain' | 'slit' | 'nothing';
+    readonly angle: number;
+  }[];
   readonly tabs: ReadonlyMap<string, TabShape>;
   readonly caps: ReadonlyMap<string, number>;
   readonly corners: readonly { readonly cell: string; readonly corner: string; readonly radius: number }[];
-  readonly notches: readonly { readonly cell: string; readonly side: Side; readonly at: number; readonly radius: number }[];
-  readonly slots: readonly { readonly cell: string; readonly across: number; readonly along: number; readonly width: number; readonly height: number }[];
+  readonly notches: readonly {
+    readonly cell: string;
+    readonly side: Side;
+    readonly at: number;
+    readonly radius: number;
+  }[];
+  readonly slots: readonly {
+    readonly cell: string;
+    readonly across: number;
+    readonly along: number;
+    readonly width: number;
+    readonly height: number;
+  }[];
   readonly rolls: ReadonlyMap<string, { readonly radius: number }>;
   readonly edges: readonly { readonly name: string; readonly cell: string; readonly side: Side }[];
 }
@@ -52,7 +77,8 @@ export function buildGrid(piece: GridPiece): Built {
   return builder.net();
 }
 
-const running = (sizes: readonly number[]): readonly number[] => sizes.reduce((stops, size) => [...stops, snap((stops.at(-1) as number) + size)], [0]);
+const running = (sizes: readonly number[]): readonly number[] =>
+  sizes.reduce((stops, size) => [...stops, snap((stops.at(-1) as number) + size)], [0]);
 
 class GridBuilder {
   private readonly panels: LoosePanel[] = [];
@@ -90,12 +116,20 @@ class GridBuilder {
     if (assembled.parts > 1) return { ok: false, reason: `it falls apart into ${assembled.parts} parts` };
     const crossing = selfCrossing(assembled.outline);
     if (crossing) return { ok: false, reason: 'its outline crosses itself' };
-    const away = this.piece.cells.flat().filter((cell) => cell.kind === 'away').map((cell) => {
-      const { left, top, right, bottom } = this.box(cell);
-      return { x: left, y: top, across: right - left, along: bottom - top };
-    });
+    const away = this.piece.cells
+      .flat()
+      .filter((cell) => cell.kind === 'away')
+      .map((cell) => {
+        const { left, top, right, bottom } = this.box(cell);
+        return { x: left, y: top, across: right - left, along: bottom - top };
+      });
     const edges = Object.fromEntries(
-      this.piece.edges.map(({ name, cell, side }) => [name, (this.sides.get(cell) ?? []).filter((edge) => edge.side === side).reduce((sum, edge) => sum + lengthOf(edge.curve), 0)]),
+      this.piece.edges.map(({ name, cell, side }) => [
+        name,
+        (this.sides.get(cell) ?? [])
+          .filter((edge) => edge.side === side)
+          .reduce((sum, edge) => sum + lengthOf(edge.curve), 0),
+      ]),
     );
     return {
       ok: true,
@@ -132,7 +166,11 @@ class GridBuilder {
   private hingeSide(cell: Cell): Side | null {
     const touching = SIDES.filter((side) => {
       const other = this.neighbour(cell, side);
-      return other !== undefined && other.kind !== 'away' && (cell.on === null ? other.kind !== 'tab' : other.name === cell.on);
+      return (
+        other !== undefined &&
+        other.kind !== 'away' &&
+        (cell.on === null ? other.kind !== 'tab' : other.name === cell.on)
+      );
     });
     return touching.length === 1 ? (touching[0] as Side) : cell.on === null ? null : (touching[0] ?? null);
   }
@@ -147,7 +185,12 @@ class GridBuilder {
   private push(cell: Cell, name: string, host: Cell | null, outlined: Outlined): void {
     const roll = this.piece.rolls.get(cell.name);
     const role: Panel['role'] = cell.kind === 'tab' ? 'tab' : 'panel';
-    this.panels.push({ name, role, loop: outlined.map((edge) => edge.curve), ...(roll ? { roll: { ...roll, axis: 'along' as const } } : {}) });
+    this.panels.push({
+      name,
+      role,
+      loop: outlined.map((edge) => edge.curve),
+      ...(roll ? { roll: { ...roll, axis: 'along' as const } } : {}),
+    });
     this.cellOfPanel.set(name, cell);
     this.sides.set(name, outlined);
     if (host) this.hinges.set(name, host.name);
@@ -156,7 +199,9 @@ class GridBuilder {
   private addPanel(cell: Cell): string | null {
     const corners = cornersOf(this.box(cell));
     let edges: Sided[] = SIDES.map((side) => ({ side, curve: line(...endsOf(corners, side)) }));
-    for (const { corner, radius } of this.piece.corners.filter((one) => one.cell === cell.name && moreThan(one.radius, 0))) {
+    for (const { corner, radius } of this.piece.corners.filter(
+      (one) => one.cell === cell.name && moreThan(one.radius, 0),
+    )) {
       const rounded = roundCorner(edges, corner, radius);
       if (rounded === null) return `a corner radius is larger than “${cell.name}” allows`;
       edges = rounded;
@@ -176,7 +221,10 @@ class GridBuilder {
     const [from, to] = endsOf(cornersOf(this.box(cell)), side);
     const arc = arcThrough(to, from, radius, true);
     if (!arc) return `the arc of “${cell.name}” does not reach across its chord`;
-    this.push(cell, cell.name, host, [{ side, curve: line(from, to) }, { side: OPPOSITE[side], curve: arc }]);
+    this.push(cell, cell.name, host, [
+      { side, curve: line(from, to) },
+      { side: OPPOSITE[side], curve: arc },
+    ]);
     return null;
   }
 
@@ -187,7 +235,10 @@ class GridBuilder {
     const depth = shape.depth === null ? full : shape.depth;
     if (!moreThan(depth, 0)) return null;
     if (!atLeast(full, depth)) return `“${cell.name}” is deeper than its place`;
-    const hostArc = host.kind === 'cap' ? (this.sides.get(host.name)?.find((edge) => edge.curve.type === 'arc')?.curve as Arc | undefined) : undefined;
+    const hostArc =
+      host.kind === 'cap'
+        ? (this.sides.get(host.name)?.find((edge) => edge.curve.type === 'arc')?.curve as Arc | undefined)
+        : undefined;
     if (hostArc) return this.addArcTeeth(cell, host, hostArc, depth, shape);
     return this.addStraightTab(cell, side, host, depth, shape);
   }
@@ -199,12 +250,16 @@ class GridBuilder {
     const along = { x: (end.x - start.x) / length, y: (end.y - start.y) / length };
     // Loops run clockwise on screen, so the inside of the tab lies to the right of its hinge side, and out is away from the host.
     const out = { x: -along.y, y: along.x };
-    const place = (u: number, v: number): Point => ({ x: snap(start.x + along.x * u + out.x * v), y: snap(start.y + along.y * u + out.y * v) });
+    const place = (u: number, v: number): Point => ({
+      x: snap(start.x + along.x * u + out.x * v),
+      y: snap(start.y + along.y * u + out.y * v),
+    });
     const [firstSide, lastSide] = endSides(side);
     const [first, last] = [shape.ends[firstSide], shape.ends[lastSide]];
     const [from, to] = [first?.from ?? 0, length - (last?.from ?? 0)];
     if (!moreThan(to, from)) return `“${cell.name}” has no length along its fold`;
-    const inset = (end: EndShape | undefined) => (end === undefined ? 0 : 'mm' in end.by ? end.by.mm : depth * Math.tan((end.by.degrees * Math.PI) / 180));
+    const inset = (end: EndShape | undefined) =>
+      end === undefined ? 0 : 'mm' in end.by ? end.by.mm : depth * Math.tan((end.by.degrees * Math.PI) / 180);
     const teeth = Math.max(1, Math.round(shape.teeth));
     const pitch = (to - from) / teeth;
     const give = teeth > 1 ? depth * Math.tan((shape.toothAngle * Math.PI) / 180) : 0;
@@ -215,9 +270,16 @@ class GridBuilder {
       if (teeth === 1 && moreThan(left, right)) [left, right] = meet(a, b, inset(first), inset(last));
       if (moreThan(left, right)) return `the teeth of “${cell.name}” come to nothing`;
       const tip = teeth === 1 && isZero(right - left) ? depth * ((b - a) / (inset(first) + inset(last))) : depth;
-      const corners = [place(a, 0), place(b, 0), place(right, tip), place(left, tip)].filter((point, index, all) => index === 0 || Math.hypot(point.x - (all[index - 1] as Point).x, point.y - (all[index - 1] as Point).y) > 1e-5);
+      const corners = [place(a, 0), place(b, 0), place(right, tip), place(left, tip)].filter(
+        (point, index, all) =>
+          index === 0 ||
+          Math.hypot(point.x - (all[index - 1] as Point).x, point.y - (all[index - 1] as Point).y) > 1e-5,
+      );
       const tags: readonly (Side | 'inner')[] = [side, lastSide, OPPOSITE[side], firstSide];
-      const outlined = corners.map((point, index) => ({ side: tags[index] ?? 'inner', curve: line(point, corners[(index + 1) % corners.length] as Point) }));
+      const outlined = corners.map((point, index) => ({
+        side: tags[index] ?? 'inner',
+        curve: line(point, corners[(index + 1) % corners.length] as Point),
+      }));
       this.push(cell, teeth === 1 ? cell.name : `${cell.name} ${tooth + 1}`, host, outlined);
     }
     return null;
@@ -236,7 +298,10 @@ class GridBuilder {
       const along = { x: (to.x - from.x) / pitch, y: (to.y - from.y) / pitch };
       const half = pitch / 2 - give;
       if (!moreThan(half, 0)) return `the teeth of “${cell.name}” come to nothing`;
-      const tip = (u: number): Point => ({ x: middle.x + out.x * depth + along.x * u, y: middle.y + out.y * depth + along.y * u });
+      const tip = (u: number): Point => ({
+        x: middle.x + out.x * depth + along.x * u,
+        y: middle.y + out.y * depth + along.y * u,
+      });
       const root: Arc = { ...arc, from, to, clockwise: !arc.clockwise };
       const [a, b] = [tip(half), tip(-half)];
       this.push(cell, teeth === 1 ? cell.name : `${cell.name} ${tooth + 1}`, host, [
@@ -253,19 +318,26 @@ class GridBuilder {
   private splitHostArc(host: Cell, arc: Arc, teeth: number): void {
     const index = this.panels.findIndex((panel) => panel.name === host.name);
     const panel = this.panels[index] as LoosePanel;
-    const parts: readonly Curve[] = Array.from({ length: teeth }, (_, tooth): Arc => ({
-      ...arc,
-      from: tooth === 0 ? arc.from : pointAt(arc, tooth / teeth),
-      to: tooth === teeth - 1 ? arc.to : pointAt(arc, (tooth + 1) / teeth),
-    }));
+    const parts: readonly Curve[] = Array.from(
+      { length: teeth },
+      (_, tooth): Arc => ({
+        ...arc,
+        from: tooth === 0 ? arc.from : pointAt(arc, tooth / teeth),
+        to: tooth === teeth - 1 ? arc.to : pointAt(arc, (tooth + 1) / teeth),
+      }),
+    );
     this.panels[index] = { ...panel, loop: panel.loop.flatMap((curve) => (curve.type === 'arc' ? parts : [curve])) };
   }
 
   private cutSlot(cell: Cell, slot: GridPiece['slots'][number]): string | null {
     const { left, top, right, bottom } = this.box(cell);
     const [x, y] = [left + slot.across, top + slot.along];
-    const [a, b] = [{ x: x - slot.width / 2, y: y - slot.height / 2 }, { x: x + slot.width / 2, y: y + slot.height / 2 }];
-    if (!(moreThan(a.x, left) && moreThan(right, b.x) && moreThan(a.y, top) && moreThan(bottom, b.y))) return `a slot does not fit inside “${cell.name}”`;
+    const [a, b] = [
+      { x: x - slot.width / 2, y: y - slot.height / 2 },
+      { x: x + slot.width / 2, y: y + slot.height / 2 },
+    ];
+    if (!(moreThan(a.x, left) && moreThan(right, b.x) && moreThan(a.y, top) && moreThan(bottom, b.y)))
+      return `a slot does not fit inside “${cell.name}”`;
     const corners = [a, { x: a.x, y: b.y }, b, { x: b.x, y: a.y }];
     this.holes.push(corners.map((point, index) => line(point, corners[(index + 1) % 4] as Point)));
     return null;
@@ -274,7 +346,9 @@ class GridBuilder {
   private joint(a: string, b: string): Joint {
     const [cellA, cellB] = [this.cellOfPanel.get(a) as Cell, this.cellOfPanel.get(b) as Cell];
     const hinged = this.hinges.get(a) === cellB.name || this.hinges.get(b) === cellA.name;
-    const said = this.piece.lines.find(({ between: [p, q] }) => (p === cellA.name && q === cellB.name) || (p === cellB.name && q === cellA.name));
+    const said = this.piece.lines.find(
+      ({ between: [p, q] }) => (p === cellA.name && q === cellB.name) || (p === cellB.name && q === cellA.name),
+    );
     if (said) {
       if (said.is === 'slit') return { is: 'slit' };
       if (said.is === 'nothing') return { is: 'nothing' };
@@ -304,7 +378,10 @@ function endsOf({ tl, tr, br, bl }: Corners, side: Side): [Point, Point] {
   return { top: [tl, tr], right: [tr, br], bottom: [br, bl], left: [bl, tl] }[side] as [Point, Point];
 }
 /** The sides on which a hinge begins and ends, walked clockwise. */
-const endSides = (hinge: Side): readonly [Side, Side] => ({ top: ['left', 'right'], right: ['top', 'bottom'], bottom: ['right', 'left'], left: ['bottom', 'top'] } as const)[hinge];
+const endSides = (hinge: Side): readonly [Side, Side] =>
+  (({ top: ['left', 'right'], right: ['top', 'bottom'], bottom: ['right', 'left'], left: ['bottom', 'top'] }) as const)[
+    hinge
+  ];
 
 /** Two tapers that meet before the tip make a point there. */
 function meet(a: number, b: number, first: number, last: number): [number, number] {
@@ -329,7 +406,11 @@ function roundCorner(edges: readonly Sided[], corner: string, radius: number): S
   const arc = arcThrough(from, to, radius, true);
   if (!arc) return null;
   return edges.flatMap((edge) => {
-    if (edge === into) return [{ ...edge, curve: line(edge.curve.from, from) }, { side: 'inner' as const, curve: arc }];
+    if (edge === into)
+      return [
+        { ...edge, curve: line(edge.curve.from, from) },
+        { side: 'inner' as const, curve: arc },
+      ];
     return edge === outOf ? [{ ...edge, curve: line(to, edge.curve.to) }] : [edge];
   });
 }
@@ -342,11 +423,23 @@ function cutNotch(edges: readonly Sided[], notch: GridPiece['notches'][number]):
   // Positions run left to right and top to bottom; the bottom and left sides are walked the other way.
   const at = notch.side === 'top' || notch.side === 'right' ? notch.at : length - notch.at;
   if (!moreThan(at, notch.radius) || !moreThan(length, at + notch.radius)) return null;
-  const [from, to] = [pointAt(edge.curve, (at - notch.radius) / length), pointAt(edge.curve, (at + notch.radius) / length)];
+  const [from, to] = [
+    pointAt(edge.curve, (at - notch.radius) / length),
+    pointAt(edge.curve, (at + notch.radius) / length),
+  ];
   const bite = arcThrough(from, to, notch.radius, false);
   if (!bite) return null;
-  return edges.flatMap((one, i) => (i === index ? [{ ...one, curve: line(one.curve.from, from) }, { side: 'inner' as const, curve: bite }, { ...one, curve: line(to, one.curve.to) }] : [one]));
+  return edges.flatMap((one, i) =>
+    i === index
+      ? [
+          { ...one, curve: line(one.curve.from, from) },
+          { side: 'inner' as const, curve: bite },
+          { ...one, curve: line(to, one.curve.to) },
+        ]
+      : [one],
+  );
 }
 
 /** Card left of the blank after cutting, in square millimetres. */
-export const areaOfNet = (net: Net): number => areaOf(net.outline) - net.holes.reduce((sum, hole) => sum + Math.abs(areaOf(hole)), 0);
+export const areaOfNet = (net: Net): number =>
+  areaOf(net.outline) - net.holes.reduce((sum, hole) => sum + Math.abs(areaOf(hole)), 0);

@@ -36,12 +36,29 @@ export function makingOf(options: WordsOptions): readonly Sentence[] {
 }
 
 type Part = Sentence[number];
-const COUNTS = ['no', 'one', 'two', 'three', 'four', 'five', 'six', 'seven', 'eight', 'nine', 'ten', 'eleven', 'twelve'];
+const COUNTS = [
+  'no',
+  'one',
+  'two',
+  'three',
+  'four',
+  'five',
+  'six',
+  'seven',
+  'eight',
+  'nine',
+  'ten',
+  'eleven',
+  'twelve',
+];
 const counted = (n: number): string => COUNTS[n] ?? `${n}`;
 
 /** `a, b and c` out of parts. */
 function listed(items: readonly (readonly Part[])[]): Part[] {
-  return items.flatMap((item, index) => [...(index === 0 ? [] : [index === items.length - 1 ? ' and ' : ', ']), ...item]);
+  return items.flatMap((item, index) => [
+    ...(index === 0 ? [] : [index === items.length - 1 ? ' and ' : ', ']),
+    ...item,
+  ]);
 }
 
 function blank({ net, figure }: WordsOptions): Sentence {
@@ -53,20 +70,40 @@ function scoring({ net, scores, figure }: WordsOptions): Sentence[] {
   const square = same(across, along);
   const [wide, tall] = [scores.across, scores.along];
   if (wide.length === 0 && tall.length === 0) return [];
-  const evenly = (positions: readonly number[], size: number) => positions.length === 2 && same((positions[0] as number) + (positions[1] as number), size);
+  const evenly = (positions: readonly number[], size: number) =>
+    positions.length === 2 && same((positions[0] as number) + (positions[1] as number), size);
   if (evenly(wide, across) && evenly(tall, along) && same(wide[0] as number, tall[0] as number)) {
     return [['Score at ', figure(wide[0] as number), ' from each of the four sides.']];
   }
   const at = (positions: readonly number[], size: number): Part[] =>
-    evenly(positions, size) ? ['at ', figure(positions[0] as number), ' from each end'] : ['at ', ...listed(positions.map((position) => [figure(position, true)]))];
-  if (square && wide.length > 0 && wide.length === tall.length && wide.every((position, index) => same(position, tall[index] as number))) {
+    evenly(positions, size)
+      ? ['at ', figure(positions[0] as number), ' from each end']
+      : ['at ', ...listed(positions.map((position) => [figure(position, true)]))];
+  if (
+    square &&
+    wide.length > 0 &&
+    wide.length === tall.length &&
+    wide.every((position, index) => same(position, tall[index] as number))
+  ) {
     return [['Along one side score ', ...at(wide, across), '; give it a quarter turn and score the same again.']];
   }
-  const first: Part[] = wide.length === 0 ? [] : ['Along the ', figure(across), square ? ' side from left to right score ' : ' side score ', ...at(wide, across), '.'];
+  const first: Part[] =
+    wide.length === 0
+      ? []
+      : [
+          'Along the ',
+          figure(across),
+          square ? ' side from left to right score ' : ' side score ',
+          ...at(wide, across),
+          '.',
+        ];
   if (tall.length === 0) return [first];
   const turned: Part[] = [
     wide.length === 0 ? 'Along the ' : square ? 'Give it a quarter turn; along the other ' : 'Turn; along the ',
-    figure(along), ' side score ', ...at(tall, along), '.',
+    figure(along),
+    ' side score ',
+    ...at(tall, along),
+    '.',
   ];
   return first.length === 0 ? [turned] : [first, turned];
 }
@@ -76,15 +113,26 @@ function cuttingAway({ net, grid }: WordsOptions): Sentence[] {
   const away = grid.cells.flat().filter((cell) => cell.kind === 'away');
   if (away.length === 0) return [];
   const [lastRow, lastColumn] = [grid.cells.length - 1, (grid.cells[0]?.length ?? 1) - 1];
-  const isCorner = (cell: Cell) => (cell.row === 0 || cell.row === lastRow) && (cell.column === 0 || cell.column === lastColumn);
+  const isCorner = (cell: Cell) =>
+    (cell.row === 0 || cell.row === lastRow) && (cell.column === 0 || cell.column === lastColumn);
   const cornerCells = away.filter(isCorner);
   const shape = (cells: readonly Cell[]) =>
-    cells.every((cell) => same(grid.columns[cell.column] as number, grid.rows[cell.row] as number)) ? 'square' : 'piece';
+    cells.every((cell) => same(grid.columns[cell.column] as number, grid.rows[cell.row] as number))
+      ? 'square'
+      : 'piece';
   const sentences: Sentence[] = [];
   if (cornerCells.length > 0) {
-    const which = cornerCells.length === 4 ? 'the four corner ' : `the ${cornerCells.length === 1 ? '' : `${counted(cornerCells.length)} `}corner `;
-    const places = cornerCells.length === 4 ? '' : ` at the ${[...new Set(cornerCells.map((cell) => placeOf(cell, lastRow, lastColumn, cornerCells)))].join(' and ')}`;
-    sentences.push([`Cut away ${which}${shape(cornerCells)}${cornerCells.length === 1 ? '' : 's'}${places}, along the scores.`]);
+    const which =
+      cornerCells.length === 4
+        ? 'the four corner '
+        : `the ${cornerCells.length === 1 ? '' : `${counted(cornerCells.length)} `}corner `;
+    const places =
+      cornerCells.length === 4
+        ? ''
+        : ` at the ${[...new Set(cornerCells.map((cell) => placeOf(cell, lastRow, lastColumn, cornerCells)))].join(' and ')}`;
+    sentences.push([
+      `Cut away ${which}${shape(cornerCells)}${cornerCells.length === 1 ? '' : 's'}${places}, along the scores.`,
+    ]);
   }
   if (away.length > cornerCells.length) sentences.push(['Cut away what the drawing crosses out.']);
   return isZero(net.across) ? [] : sentences;
@@ -99,84 +147,159 @@ function placeOf(cell: Cell, lastRow: number, lastColumn: number, all: readonly 
 
 /** Slits, tapers and teeth of the tabs, alike ones together. */
 function tabsInWords({ grid, net, figure }: WordsOptions): Sentence[] {
-  const tabs = grid.cells.flat().filter((cell) => cell.kind === 'tab' && net.panels.some((panel) => panel.name === cell.name || panel.name.startsWith(`${cell.name} `)));
+  const tabs = grid.cells
+    .flat()
+    .filter(
+      (cell) =>
+        cell.kind === 'tab' &&
+        net.panels.some((panel) => panel.name === cell.name || panel.name.startsWith(`${cell.name} `)),
+    );
   const sentences: Sentence[] = [];
-  const slit = tabs.filter((cell) => neighbours(grid, cell).filter((other) => other.kind !== 'away' && other.kind !== 'tab').length > 1);
+  const slit = tabs.filter(
+    (cell) => neighbours(grid, cell).filter((other) => other.kind !== 'away' && other.kind !== 'tab').length > 1,
+  );
   if (slit.length > 0) {
     const [first] = slit as [Cell];
     const hinge = hingeOf(grid, first);
     const score = hinge === 'top' || hinge === 'bottom' ? 'left-to-right edge' : 'top-to-bottom edge';
     const size = score === 'left-to-right edge' ? grid.rows[first.row] : grid.columns[first.column];
-    sentences.push([`${slit.length === 1 ? 'Slit the corner' : `Slit ${counted(slit.length)} corners`} from the ${score}, along the score, `, figure(size as number), ` deep, to the crossing: ${slit.length === 1 ? 'it becomes a tab' : 'they become tabs'}.`]);
+    sentences.push([
+      `${slit.length === 1 ? 'Slit the corner' : `Slit ${counted(slit.length)} corners`} from the ${score}, along the score, `,
+      figure(size as number),
+      ` deep, to the crossing: ${slit.length === 1 ? 'it becomes a tab' : 'they become tabs'}.`,
+    ]);
   }
   const tapers = new Map<string, { says: Part[]; cells: Cell[] }>();
   for (const cell of tabs) {
     const shape = grid.tabs.get(cell.name);
     if (!shape || shape.teeth > 1) continue;
     const hinge = hingeOf(grid, cell);
-    const ends = Object.entries(shape.ends).filter(([side, end]) => side !== hinge && side !== opposite(hinge) && !isZero('mm' in end.by ? end.by.mm : end.by.degrees));
+    const ends = Object.entries(shape.ends).filter(
+      ([side, end]) =>
+        side !== hinge && side !== opposite(hinge) && !isZero('mm' in end.by ? end.by.mm : end.by.degrees),
+    );
     if (ends.length === 0) continue;
     const key = ends.map(([side, end]) => `${side} ${JSON.stringify(end)}`).join();
-    const amount = (end: (typeof ends)[number][1]): Part[] => ('mm' in end.by ? [figure(end.by.mm), ' at the tip'] : [`${Math.round(end.by.degrees * 10) / 10}°`]);
+    const amount = (end: (typeof ends)[number][1]): Part[] =>
+      'mm' in end.by ? [figure(end.by.mm), ' at the tip'] : [`${Math.round(end.by.degrees * 10) / 10}°`];
     const [a, b] = ends;
     const alike = a && b && JSON.stringify(a[1].by) === JSON.stringify(b[1].by);
-    const says: Part[] = alike ? ['at both ends by ', ...amount(a[1])] : listed(ends.map(([side, end]) => [`at the ${side} end by `, ...amount(end)]));
+    const says: Part[] = alike
+      ? ['at both ends by ', ...amount(a[1])]
+      : listed(ends.map(([side, end]) => [`at the ${side} end by `, ...amount(end)]));
     const group = tapers.get(alike ? JSON.stringify(a[1].by) : key) ?? { says, cells: [] };
     group.cells.push(cell);
     tapers.set(alike ? JSON.stringify(a[1].by) : key, group);
   }
   for (const { says, cells } of tapers.values()) {
-    const which = cells.length === tabs.length ? (cells.length === 1 ? 'the tab' : 'all tabs') : cells.length > 2 ? `the ${counted(cells.length)} tabs` : listed(cells.map((cell) => [`the tab “${cell.name}”`])).join('');
+    const which =
+      cells.length === tabs.length
+        ? cells.length === 1
+          ? 'the tab'
+          : 'all tabs'
+        : cells.length > 2
+          ? `the ${counted(cells.length)} tabs`
+          : listed(cells.map((cell) => [`the tab “${cell.name}”`])).join('');
     sentences.push([`Taper ${which} `, ...says, '.']);
   }
   for (const cell of tabs) {
     const shape = grid.tabs.get(cell.name);
-    if (shape && shape.teeth > 1) sentences.push([`Cut the tab “${cell.name}” into ${counted(Math.round(shape.teeth))} teeth, a narrow V between each two, down to the score.`]);
+    if (shape && shape.teeth > 1)
+      sentences.push([
+        `Cut the tab “${cell.name}” into ${counted(Math.round(shape.teeth))} teeth, a narrow V between each two, down to the score.`,
+      ]);
     if (shape?.depth !== null && shape?.depth !== undefined) {
       const hinge = hingeOf(grid, cell);
       const full = hinge === 'top' || hinge === 'bottom' ? grid.rows[cell.row] : grid.columns[cell.column];
-      if (!same(shape.depth, full as number) && cell === tabs.find((one) => grid.tabs.get(one.name)?.depth === shape.depth)) {
+      if (
+        !same(shape.depth, full as number) &&
+        cell === tabs.find((one) => grid.tabs.get(one.name)?.depth === shape.depth)
+      ) {
         sentences.push(['Trim the tabs to ', figure(shape.depth), ' deep, so that two on one wall do not meet.']);
       }
     }
   }
   return sentences;
 }
-const opposite = (side: Side): Side => ({ top: 'bottom', bottom: 'top', left: 'right', right: 'left' } as const)[side];
-const STEPS: readonly [Side, number, number][] = [['top', -1, 0], ['right', 0, 1], ['bottom', 1, 0], ['left', 0, -1]];
-const neighbours = (grid: GridPiece, cell: Cell): Cell[] => STEPS.flatMap(([, dr, dc]) => grid.cells[cell.row + dr]?.[cell.column + dc] ?? []);
+const opposite = (side: Side): Side =>
+  (({ top: 'bottom', bottom: 'top', left: 'right', right: 'left' }) as const)[side];
+const STEPS: readonly [Side, number, number][] = [
+  ['top', -1, 0],
+  ['right', 0, 1],
+  ['bottom', 1, 0],
+  ['left', 0, -1],
+];
+const neighbours = (grid: GridPiece, cell: Cell): Cell[] =>
+  STEPS.flatMap(([, dr, dc]) => grid.cells[cell.row + dr]?.[cell.column + dc] ?? []);
 function hingeOf(grid: GridPiece, cell: Cell): Side {
   const found = STEPS.find(([, dr, dc]) => {
     const other = grid.cells[cell.row + dr]?.[cell.column + dc];
-    return other !== undefined && other.kind !== 'away' && (cell.on === null ? other.kind !== 'tab' : other.name === cell.on);
+    return (
+      other !== undefined && other.kind !== 'away' && (cell.on === null ? other.kind !== 'tab' : other.name === cell.on)
+    );
   });
   return found?.[0] ?? 'bottom';
 }
 
 function arcs({ grid, net, figure }: WordsOptions): Sentence[] {
-  return grid.cells.flat().filter((cell) => cell.kind === 'cap').flatMap((cell) => {
-    const arc = net.panels.find((panel) => panel.name === cell.name)?.loop.find((curve): curve is Arc => curve.type === 'arc');
-    if (!arc) return [];
-    const side = hingeOf(grid, cell);
-    const chord = side === 'top' || side === 'bottom' ? grid.columns[cell.column] : grid.rows[cell.row];
-    const cut = net.outline.some((curve) => curve.type === 'arc' && coincident(curve.centre.x, arc.centre.x) && coincident(curve.centre.y, arc.centre.y));
-    return [[`At the ${opposite(side)} draw the arc of a `, figure(2 * arc.radius), ' circle over the ', figure(chord as number), cut ? ' between the scores and cut round it.' : ' between the scores: it is a score, and the teeth stand outside it.']];
-  });
+  return grid.cells
+    .flat()
+    .filter((cell) => cell.kind === 'cap')
+    .flatMap((cell) => {
+      const arc = net.panels
+        .find((panel) => panel.name === cell.name)
+        ?.loop.find((curve): curve is Arc => curve.type === 'arc');
+      if (!arc) return [];
+      const side = hingeOf(grid, cell);
+      const chord = side === 'top' || side === 'bottom' ? grid.columns[cell.column] : grid.rows[cell.row];
+      const cut = net.outline.some(
+        (curve) =>
+          curve.type === 'arc' && coincident(curve.centre.x, arc.centre.x) && coincident(curve.centre.y, arc.centre.y),
+      );
+      return [
+        [
+          `At the ${opposite(side)} draw the arc of a `,
+          figure(2 * arc.radius),
+          ' circle over the ',
+          figure(chord as number),
+          cut
+            ? ' between the scores and cut round it.'
+            : ' between the scores: it is a score, and the teeth stand outside it.',
+        ],
+      ];
+    });
 }
 
 function corners({ grid, figure }: WordsOptions): Sentence[] {
   const groups = new Map<number, string[]>();
-  for (const { corner, radius } of grid.corners) if (!isZero(radius)) groups.set(radius, [...(groups.get(radius) ?? []), corner]);
-  return [...groups].map(([radius, names]) => [`Round the ${names.length === 4 ? 'four corners' : `${names.join(' and ')} corner${names.length === 1 ? '' : 's'}`} to a radius of `, figure(radius), '.']);
+  for (const { corner, radius } of grid.corners)
+    if (!isZero(radius)) groups.set(radius, [...(groups.get(radius) ?? []), corner]);
+  return [...groups].map(([radius, names]) => [
+    `Round the ${names.length === 4 ? 'four corners' : `${names.join(' and ')} corner${names.length === 1 ? '' : 's'}`} to a radius of `,
+    figure(radius),
+    '.',
+  ]);
 }
 function notches({ grid, figure }: WordsOptions): Sentence[] {
   return grid.notches.map(({ cell, side, at, radius }) => [
-    `Cut a half-round notch of `, figure(radius), ` radius into the ${side} edge of “${cell}”, its middle `, figure(at), ` from the ${side === 'top' || side === 'bottom' ? 'score on its left' : 'score above it'}.`,
+    `Cut a half-round notch of `,
+    figure(radius),
+    ` radius into the ${side} edge of “${cell}”, its middle `,
+    figure(at),
+    ` from the ${side === 'top' || side === 'bottom' ? 'score on its left' : 'score above it'}.`,
   ]);
 }
 function slots({ grid, figure }: WordsOptions): Sentence[] {
   return grid.slots.map(({ cell, across, along, width, height }) => [
-    `In “${cell}” cut a slot `, figure(width, true), ' × ', figure(height), ', its middle ', figure(across), ' from the left of that panel and ', figure(along), ' from its top.',
+    `In “${cell}” cut a slot `,
+    figure(width, true),
+    ' × ',
+    figure(height),
+    ', its middle ',
+    figure(across),
+    ' from the left of that panel and ',
+    figure(along),
+    ' from its top.',
   ]);
 }
 function folding({ net }: WordsOptions): Sentence[] {

@@ -7,7 +7,7 @@ export interface PlanOptions {
   readonly stock: StockId | Stock;
   /** How many of the whole box. */
   readonly copies?: number;
-  /** Border of the sheet that cannot be used, millimetres. */
+  /** Border of the sheet that is trimmed off first, millimetres. */
   readonly margin?: number;
   /** Orders of pieces to try; more find better plans. The answer depends on nothing else. */
   readonly tries?: number;
@@ -51,7 +51,12 @@ export interface SheetPlan {
   readonly used: number;
   readonly sheets: readonly SheetLayout[];
   /** Pieces larger than the sheet either way, with what would help. */
-  readonly tooLarge: readonly { readonly name: string; readonly across: number; readonly along: number; readonly hint: string }[];
+  readonly tooLarge: readonly {
+    readonly name: string;
+    readonly across: number;
+    readonly along: number;
+    readonly hint: string;
+  }[];
 }
 
 interface Blank {
@@ -68,8 +73,16 @@ interface Box {
 /** A cut sheet as a tree: a box is left whole, holds a part, or is cut in two. */
 type Tree =
   | { readonly type: 'free'; readonly box: Box }
+  | { readonly type: 'edge'; readonly box: Box }
   | { readonly type: 'part'; readonly box: Box; readonly part: Part }
-  | { readonly type: 'cut'; readonly box: Box; readonly runs: 'across' | 'along'; readonly at: number; readonly first: Tree; readonly second: Tree };
+  | {
+      readonly type: 'cut';
+      readonly box: Box;
+      readonly runs: 'across' | 'along';
+      readonly at: number;
+      readonly first: Tree;
+      readonly second: Tree;
+    };
 
 /**
  * Plans straight edge-to-edge cuts, as a trimmer makes them: fewest sheets first, then the largest useful offcut. Pieces may
@@ -79,9 +92,18 @@ export function planSheets({ pieces }: { readonly pieces: readonly PieceFigure[]
   const { copies = 1, margin = 0, tries = 24 } = options;
   const stock = typeof options.stock === 'string' ? STOCKS[options.stock] : options.stock;
   const area: Box = { x: margin, y: margin, w: snap(stock.across - 2 * margin), h: snap(stock.along - 2 * margin) };
-  const fits = (blank: Blank) => (atLeast(area.w, blank.across) && atLeast(area.h, blank.along)) || (atLeast(area.w, blank.along) && atLeast(area.h, blank.across));
-  const blanks = pieces.flatMap((piece) => Array.from({ length: piece.count * copies }, (): Blank => ({ piece: piece.name, across: piece.across, along: piece.along })));
-  const tooLarge = pieces.filter((piece) => !fits({ piece: piece.name, across: piece.across, along: piece.along })).map(({ name, across, along }) => ({ name, across, along, hint: 'Take a larger sheet, or make the box smaller.' }));
+  const fits = (blank: Blank) =>
+    (atLeast(area.w, blank.across) && atLeast(area.h, blank.along)) ||
+    (atLeast(area.w, blank.along) && atLeast(area.h, blank.across));
+  const blanks = pieces.flatMap((piece) =>
+    Array.from(
+      { length: piece.count * copies },
+      (): Blank => ({ piece: piece.name, across: piece.across, along: piece.along }),
+    ),
+  );
+  const tooLarge = pieces
+    .filter((piece) => !fits({ piece: piece.name, across: piece.across, along: piece.along }))
+    .map(({ name, across, along }) => ({ name, across, along, hint: 'Take a larger sheet, or make the box smaller.' }));
   const usable = blanks.filter(fits);
   let best: Tree[] = [];
   let bestScore = Infinity;
@@ -94,7 +116,8 @@ export function planSheets({ pieces }: { readonly pieces: readonly PieceFigure[]
       bestScore = score;
     }
   }
-  return { stock, copies, used: best.length, sheets: nameOffcuts(best), tooLarge };
+  const sheets = nameOffcuts(best.map((tree) => trimEdges(tree, stock, margin)));
+  return { stock, copies, used: best.length, sheets, tooLarge };
 }
 
 /** A small linear congruential generator (Numerical Recipes): repeatable, good enough to shuffle. */
@@ -116,7 +139,10 @@ const BY: readonly ((blank: Blank) => number)[] = [
 function orderOf(blanks: readonly Blank[], index: number, random: () => number): Blank[] {
   const key = BY[Math.floor(index / 2) % BY.length] as (blank: Blank) => number;
   const noise = index < 2 * BY.length ? 0 : 0.35;
-  return blanks.map((blank) => ({ blank, rank: key(blank) * (1 + noise * (random() - 0.5)) })).sort((a, b) => b.rank - a.rank).map(({ blank }) => blank);
+  return blanks
+    .map((blank) => ({ blank, rank: key(blank) * (1 + noise * (random() - 0.5)) }))
+    .sort((a, b) => b.rank - a.rank)
+    .map(({ blank }) => blank);
 }
 
 /** Each blank goes where it leaves the least on its shorter side; a new sheet when it goes nowhere. */
@@ -125,12 +151,13 @@ function pack(blanks: readonly Blank[], area: Box, longFirst: boolean): Tree[] {
   for (const blank of blanks) {
     let found: { sheet: number; box: Box; turned: boolean; left: number } | null = null;
     trees.forEach((tree, sheet) => {
-      for (const box of freeBoxes(tree)) for (const turned of same(blank.across, blank.along) ? [false] : [false, true]) {
-        const [w, h] = turned ? [blank.along, blank.across] : [blank.across, blank.along];
-        if (!atLeast(box.w, w) || !atLeast(box.h, h)) continue;
-        const left = Math.min(box.w - w, box.h - h);
-        if (!found || moreThan(found.left, left)) found = { sheet, box, turned, left };
-      }
+      for (const box of freeBoxes(tree))
+        for (const turned of same(blank.across, blank.along) ? [false] : [false, true]) {
+          const [w, h] = turned ? [blank.along, blank.across] : [blank.across, blank.along];
+          if (!atLeast(box.w, w) || !atLeast(box.h, h)) continue;
+          const left = Math.min(box.w - w, box.h - h);
+          if (!found || moreThan(found.left, left)) found = { sheet, box, turned, left };
+        }
     });
     const place = found as { sheet: number; box: Box; turned: boolean } | null;
     if (place) trees[place.sheet] = put(trees[place.sheet] as Tree, place.box, blank, place.turned, longFirst);
@@ -141,11 +168,16 @@ function pack(blanks: readonly Blank[], area: Box, longFirst: boolean): Tree[] {
   }
   return trees;
 }
-const freeBoxes = (tree: Tree): readonly Box[] => (tree.type === 'free' ? [tree.box] : tree.type === 'cut' ? [...freeBoxes(tree.first), ...freeBoxes(tree.second)] : []);
+const freeBoxes = (tree: Tree): readonly Box[] =>
+  tree.type === 'free' ? [tree.box] : tree.type === 'cut' ? [...freeBoxes(tree.first), ...freeBoxes(tree.second)] : [];
 
 function put(tree: Tree, target: Box, blank: Blank, turned: boolean, longFirst: boolean): Tree {
   if (tree.type === 'cut') {
-    return { ...tree, first: put(tree.first, target, blank, turned, longFirst), second: put(tree.second, target, blank, turned, longFirst) };
+    return {
+      ...tree,
+      first: put(tree.first, target, blank, turned, longFirst),
+      second: put(tree.second, target, blank, turned, longFirst),
+    };
   }
   if (tree.type !== 'free' || tree.box !== target) return tree;
   const { x, y, w, h } = tree.box;
@@ -160,18 +192,81 @@ function put(tree: Tree, target: Box, blank: Blank, turned: boolean, longFirst: 
     const at = runs === 'across' ? along : across;
     const left = runs === 'across' ? snap(box.h - along) : snap(box.w - across);
     if (isZero(left)) return { type: 'part', box, part };
-    const second = runs === 'across' ? { x: box.x, y: snap(box.y + at), w: box.w, h: left } : { x: snap(box.x + at), y: box.y, w: left, h: box.h };
+    const second =
+      runs === 'across'
+        ? { x: box.x, y: snap(box.y + at), w: box.w, h: left }
+        : { x: snap(box.x + at), y: box.y, w: left, h: box.h };
     const first = runs === 'across' ? { ...box, h: at } : { ...box, w: at };
     return { type: 'cut', box, runs, at, first: { type: 'part', box: first, part }, second: rest(second) };
   };
   if (isZero(restRight)) return inner(tree.box, 'across');
   if (isZero(restBelow)) return inner(tree.box, 'along');
   return alongFirst
-    ? { type: 'cut', box: tree.box, runs: 'along', at: across, first: inner({ x, y, w: across, h }, 'across'), second: rest({ x: snap(x + across), y, w: restRight, h }) }
-    : { type: 'cut', box: tree.box, runs: 'across', at: along, first: inner({ x, y, w, h: along }, 'along'), second: rest({ x, y: snap(y + along), w, h: restBelow }) };
+    ? {
+        type: 'cut',
+        box: tree.box,
+        runs: 'along',
+        at: across,
+        first: inner({ x, y, w: across, h }, 'across'),
+        second: rest({ x: snap(x + across), y, w: restRight, h }),
+      }
+    : {
+        type: 'cut',
+        box: tree.box,
+        runs: 'across',
+        at: along,
+        first: inner({ x, y, w, h: along }, 'along'),
+        second: rest({ x, y: snap(y + along), w, h: restBelow }),
+      };
 }
 
-const largestFree = (trees: readonly Tree[]): number => Math.max(0, ...trees.flatMap((tree) => freeBoxes(tree)).map((box) => box.w * box.h));
+/** The four strips of the margin come off before anything else. */
+function trimEdges(tree: Tree, stock: Stock, margin: number): Tree {
+  if (isZero(margin)) return tree;
+  const [w, h] = [snap(stock.across - margin), snap(stock.along - margin)];
+  const edge = (x: number, y: number, wide: number, tall: number): Tree => ({
+    type: 'edge',
+    box: { x, y, w: snap(wide), h: snap(tall) },
+  });
+  const inner = { x: margin, y: margin, w: snap(w - margin), h: snap(stock.along - margin) };
+  const bottom: Tree = {
+    type: 'cut',
+    box: inner,
+    runs: 'across',
+    at: snap(h - margin),
+    first: tree,
+    second: edge(margin, h, w - margin, margin),
+  };
+  const column = { x: margin, y: 0, w: snap(w - margin), h: stock.along };
+  const top: Tree = {
+    type: 'cut',
+    box: column,
+    runs: 'across',
+    at: margin,
+    first: edge(margin, 0, w - margin, margin),
+    second: bottom,
+  };
+  const rest = { x: margin, y: 0, w: snap(stock.across - margin), h: stock.along };
+  const right: Tree = {
+    type: 'cut',
+    box: rest,
+    runs: 'along',
+    at: snap(w - margin),
+    first: top,
+    second: edge(w, 0, margin, stock.along),
+  };
+  return {
+    type: 'cut',
+    box: { x: 0, y: 0, w: stock.across, h: stock.along },
+    runs: 'along',
+    at: margin,
+    first: edge(0, 0, margin, stock.along),
+    second: right,
+  };
+}
+
+const largestFree = (trees: readonly Tree[]): number =>
+  Math.max(0, ...trees.flatMap((tree) => freeBoxes(tree)).map((box) => box.w * box.h));
 
 /** Offcuts are lettered over all sheets, A to Z, then A2 and on. */
 function nameOffcuts(trees: readonly Tree[]): SheetLayout[] {
@@ -193,7 +288,8 @@ function nameOffcuts(trees: readonly Tree[]): SheetLayout[] {
     return { parts: partsOf(tree), cuts: cutsOf(tree, names), offcuts };
   });
 }
-const partsOf = (tree: Tree): readonly Part[] => (tree.type === 'part' ? [tree.part] : tree.type === 'cut' ? [...partsOf(tree.first), ...partsOf(tree.second)] : []);
+const partsOf = (tree: Tree): readonly Part[] =>
+  tree.type === 'part' ? [tree.part] : tree.type === 'cut' ? [...partsOf(tree.first), ...partsOf(tree.second)] : [];
 
 /** Cuts in the order a person makes them: a cut, then those of what it set free, then those of the rest. */
 function cutsOf(tree: Tree, names: ReadonlyMap<Box, string>): readonly Cut[] {
@@ -203,10 +299,20 @@ function cutsOf(tree: Tree, names: ReadonlyMap<Box, string>): readonly Cut[] {
     const { x, y, w, h } = node.box;
     const at = node.runs === 'across' ? snap(y + node.at) : snap(x + node.at);
     cuts.push({
-      runs: node.runs, at, measure: node.at,
+      runs: node.runs,
+      at,
+      measure: node.at,
       from: node.runs === 'across' ? { x, y: at } : { x: at, y },
       to: node.runs === 'across' ? { x: snap(x + w), y: at } : { x: at, y: snap(y + h) },
-      frees: [node.first, node.second].flatMap((half) => (half.type === 'part' ? [half.part.piece] : half.type === 'free' ? [`offcut ${names.get(half.box) ?? ''}`] : [])),
+      frees: [node.first, node.second].flatMap((half) =>
+        half.type === 'part'
+          ? [half.part.piece]
+          : half.type === 'free'
+            ? [`offcut ${names.get(half.box) ?? ''}`]
+            : half.type === 'edge'
+              ? ['the edge']
+              : [],
+      ),
     });
     visit(node.first);
     visit(node.second);

@@ -10,8 +10,12 @@ export function cutsInWords(plan: SheetPlan, sheet: number): readonly Sentence[]
   });
 }
 function frees({ frees: free }: Cut): string {
+  if (free.includes('the edge')) return ' to take the edge off';
   const pieces = free.filter((name) => !name.startsWith('offcut'));
   const left = free.filter((name) => name.startsWith('offcut'));
-  const parts = [pieces.length > 0 ? `that is the ${pieces.join(' and the ')}` : '', left.length > 0 ? `left over: ${left.join(' and ')}` : ''].filter((text) => text !== '');
+  const parts = [
+    pieces.length > 0 ? `that is the ${pieces.join(' and the ')}` : '',
+    left.length > 0 ? `left over: ${left.join(' and ')}` : '',
+  ].filter((text) => text !== '');
   return parts.length === 0 ? '' : `: ${parts.join('; ')}`;
 }

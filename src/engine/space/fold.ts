@@ -26,11 +26,17 @@ export interface FoldOptions {
 }
 
 const AXES: Readonly<Record<Axis, Vector>> = {
-  '+x': vector(1, 0, 0), '-x': vector(-1, 0, 0), '+y': vector(0, 1, 0), '-y': vector(0, -1, 0), '+z': vector(0, 0, 1), '-z': vector(0, 0, -1),
+  '+x': vector(1, 0, 0),
+  '-x': vector(-1, 0, 0),
+  '+y': vector(0, 1, 0),
+  '-y': vector(0, -1, 0),
+  '+z': vector(0, 0, 1),
+  '-z': vector(0, 0, -1),
 };
 export const axis = (name: Axis): Vector => AXES[name];
 export const insideOf = (frame: Frame): Vector => unit(cross(frame.along, frame.across));
-const place = (frame: Frame, point: Point): Vector => plus(frame.origin, plus(times(frame.across, point.x), times(frame.along, point.y)));
+const place = (frame: Frame, point: Point): Vector =>
+  plus(frame.origin, plus(times(frame.across, point.x), times(frame.along, point.y)));
 
 /** A facet: a flat panel, or one strip of a rolled one. */
 interface Facet {
@@ -70,7 +76,17 @@ export function foldNet(net: Net, options: FoldOptions): readonly FoldedPanel[] 
   }
   return facets.flatMap((facet, index) => {
     const frame = frames.get(index);
-    return frame ? [{ name: facet.of.name, role: facet.of.role, points: facet.points.map((point) => place(frame, point)), inside: insideOf(frame), edges: facet.edges }] : [];
+    return frame
+      ? [
+          {
+            name: facet.of.name,
+            role: facet.of.role,
+            points: facet.points.map((point) => place(frame, point)),
+            inside: insideOf(frame),
+            edges: facet.edges,
+          },
+        ]
+      : [];
   });
 }
 
@@ -81,11 +97,15 @@ function rootFrame(start: Facet, { at, across: u, along: v }: FoldOptions, share
   const box = boxOf(start.of.loop.map((curve) => curve.from));
   let heading = acrossAxis;
   if (roll) {
-    const turn = (((box.right - box.left) / roll.radius) * (1 - 1 / stripsOf(start.of))) * share;
+    const turn = ((box.right - box.left) / roll.radius) * (1 - 1 / stripsOf(start.of)) * share;
     const lean = dot(turned(acrossAxis, alongAxis, 0.1), cross(alongAxis, acrossAxis)) > 0 ? -1 : 1;
     heading = turned(acrossAxis, alongAxis, (lean * turn) / 2);
   }
-  return { origin: minus(at, plus(times(heading, box.left), times(alongAxis, box.top))), across: heading, along: alongAxis };
+  return {
+    origin: minus(at, plus(times(heading, box.left), times(alongAxis, box.top))),
+    across: heading,
+    along: alongAxis,
+  };
 }
 
 /** The frame beyond a fold: the same flat sheet turned about the fold's line, towards the inside for a valley. */
@@ -119,19 +139,43 @@ function facetsOf(net: Net): { readonly facets: readonly Facet[]; readonly links
     const turn = ((wide / panel.roll.radius) * 180) / Math.PI;
     for (let index = 0; index < count; index += 1) {
       const [l, r] = [box.left + wide * index, box.left + wide * (index + 1)];
-      const points = [{ x: l, y: box.top }, { x: r, y: box.top }, { x: r, y: box.bottom }, { x: l, y: box.bottom }];
-      facets.push({ name: `${panel.name}#${index}`, of: panel, points, edges: [true, index === count - 1, true, index === 0] });
-      if (index > 0) links.push({ a: first + index - 1, b: first + index, from: { x: l, y: box.top }, to: { x: l, y: box.bottom }, turn });
+      const points = [
+        { x: l, y: box.top },
+        { x: r, y: box.top },
+        { x: r, y: box.bottom },
+        { x: l, y: box.bottom },
+      ];
+      facets.push({
+        name: `${panel.name}#${index}`,
+        of: panel,
+        points,
+        edges: [true, index === count - 1, true, index === 0],
+      });
+      if (index > 0)
+        links.push({
+          a: first + index - 1,
+          b: first + index,
+          from: { x: l, y: box.top },
+          to: { x: l, y: box.bottom },
+          turn,
+        });
     }
-    strips.set(panel.name, Array.from({ length: count }, (_, index) => first + index));
+    strips.set(
+      panel.name,
+      Array.from({ length: count }, (_, index) => first + index),
+    );
   }
   const facetAt = (name: string, curve: Curve): number => {
     const all = strips.get(name) ?? [];
     if (all.length <= 1) return all[0] ?? -1;
     const x = (curve.from.x + curve.to.x) / 2;
-    return all.find((index) => x <= Math.max(...(facets[index] as Facet).points.map((point) => point.x))) ?? (all.at(-1) as number);
+    return (
+      all.find((index) => x <= Math.max(...(facets[index] as Facet).points.map((point) => point.x))) ??
+      (all.at(-1) as number)
+    );
   };
-  const link = (curve: Curve, [a, b]: readonly [string, string], turn: number) => links.push({ a: facetAt(a, curve), b: facetAt(b, curve), from: curve.from, to: curve.to, turn });
+  const link = (curve: Curve, [a, b]: readonly [string, string], turn: number) =>
+    links.push({ a: facetAt(a, curve), b: facetAt(b, curve), from: curve.from, to: curve.to, turn });
   for (const fold of net.folds) link(fold.curve, fold.panels, fold.kind === 'valley' ? fold.angle : -fold.angle);
   for (const join of net.joins) link(join.curve, join.panels, 0);
   return { facets, links };
@@ -143,7 +187,7 @@ function flatFacet(panel: Panel, joined: readonly Curve[]): Facet {
   const edges: boolean[] = [];
   for (const curve of panel.loop) {
     const seam = joined.some((other) => isSame(other, curve));
-    const count = curve.type === 'arc' ? Math.max(1, Math.ceil(((sweepOf(curve) * 180) / Math.PI) / 8)) : 1;
+    const count = curve.type === 'arc' ? Math.max(1, Math.ceil((sweepOf(curve) * 180) / Math.PI / 8)) : 1;
     for (let index = 0; index < count; index += 1) {
       points.push(index === 0 ? curve.from : pointAt(curve, index / count));
       edges.push(!seam);
@@ -152,7 +196,8 @@ function flatFacet(panel: Panel, joined: readonly Curve[]): Facet {
   return { name: panel.name, of: panel, points, edges };
 }
 const near = (a: Point, b: Point): boolean => Math.hypot(a.x - b.x, a.y - b.y) < 1e-3;
-const isSame = (a: Curve, b: Curve): boolean => (near(a.from, b.from) && near(a.to, b.to)) || (near(a.from, b.to) && near(a.to, b.from));
+const isSame = (a: Curve, b: Curve): boolean =>
+  (near(a.from, b.from) && near(a.to, b.to)) || (near(a.from, b.to) && near(a.to, b.from));
 
 const stripsOf = (panel: Panel): number => {
   const box = boxOf(panel.loop.map((curve) => curve.from));

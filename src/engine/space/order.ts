@@ -61,7 +61,10 @@ function planeOf<T>(face: Face<T>): Plane | null {
   let sum: Vector = { x: 0, y: 0, z: 0 };
   const origin = face.points[0] as Vector;
   face.points.forEach((point, index) => {
-    sum = plus(sum, cross(minus(point, origin), minus(face.points[(index + 1) % face.points.length] as Vector, origin)));
+    sum = plus(
+      sum,
+      cross(minus(point, origin), minus(face.points[(index + 1) % face.points.length] as Vector, origin)),
+    );
   });
   if (dot(sum, sum) < 1e-12) return null;
   const normal = unit(sum);

@@ -9,7 +9,8 @@ export const plus = (a: Vector, b: Vector): Vector => vector(a.x + b.x, a.y + b.
 export const minus = (a: Vector, b: Vector): Vector => vector(a.x - b.x, a.y - b.y, a.z - b.z);
 export const times = (a: Vector, k: number): Vector => vector(a.x * k, a.y * k, a.z * k);
 export const dot = (a: Vector, b: Vector): number => a.x * b.x + a.y * b.y + a.z * b.z;
-export const cross = (a: Vector, b: Vector): Vector => vector(a.y * b.z - a.z * b.y, a.z * b.x - a.x * b.z, a.x * b.y - a.y * b.x);
+export const cross = (a: Vector, b: Vector): Vector =>
+  vector(a.y * b.z - a.z * b.y, a.z * b.x - a.x * b.z, a.x * b.y - a.y * b.x);
 export const size = (a: Vector): number => Math.hypot(a.x, a.y, a.z);
 /** The direction of `a`; nothing stays nothing. */
 export const unit = (a: Vector): Vector => (size(a) === 0 ? a : times(a, 1 / size(a)));

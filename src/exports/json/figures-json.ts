@@ -13,11 +13,22 @@ export function figuresJson(model: Model, figures: Figures, { stock, copies }: F
     pattern: model.pattern.slug,
     sizing: sizingOf(figures, sizing),
     measures: figures.measures.map(({ name, kind, exact, cut, unit }) => ({
-      name, kind, exact: known(exact), cut: known(cut), shown: showValue(cut, kind, { units: sizing.units, grid: sizing.grid, ...(unit ? { unit } : {}) }).text,
+      name,
+      kind,
+      exact: known(exact),
+      cut: known(cut),
+      shown: showValue(cut, kind, { units: sizing.units, grid: sizing.grid, ...(unit ? { unit } : {}) }).text,
     })),
     pieces: figures.pieces.map((piece) => ({
-      name: piece.name, count: piece.count, stock: piece.stock, across: piece.across, along: piece.along, scores: piece.scores,
-      area: piece.area, perimeter: piece.perimeter, instructions: piece.instructions.map((sentence) => say(sentence, sizing)),
+      name: piece.name,
+      count: piece.count,
+      stock: piece.stock,
+      across: piece.across,
+      along: piece.along,
+      scores: piece.scores,
+      area: piece.area,
+      perimeter: piece.perimeter,
+      instructions: piece.instructions.map((sentence) => say(sentence, sizing)),
     })),
     fits: figures.fits.map(({ name, holds, gap, advice }) => ({ name, holds, gap, ...(advice ? { advice } : {}) })),
     sheets: {
@@ -25,7 +36,9 @@ export function figuresJson(model: Model, figures: Figures, { stock, copies }: F
       count: copies,
       used: plan.used,
       plan: plan.sheets.map((sheet, index) => ({
-        parts: sheet.parts, offcuts: sheet.offcuts, cuts: cutsInWords(plan, index).map((sentence) => say(sentence, sizing)),
+        parts: sheet.parts,
+        offcuts: sheet.offcuts,
+        cuts: cutsInWords(plan, index).map((sentence) => say(sentence, sizing)),
       })),
       ...(plan.tooLarge.length > 0 ? { tooLarge: plan.tooLarge } : {}),
     },
@@ -36,7 +49,11 @@ export function figuresJson(model: Model, figures: Figures, { stock, copies }: F
 /** JSON has no NaN: a measure without a value at this size is null. */
 const known = (value: number): number | null => (Number.isFinite(value) ? value : null);
 const sizingOf = (figures: Figures, sizing: Sizing) => ({
-  values: Object.fromEntries(figures.measures.filter((measure) => measure.asked && measure.inUse).map((measure) => [measure.name, known(measure.exact)])),
+  values: Object.fromEntries(
+    figures.measures
+      .filter((measure) => measure.asked && measure.inUse)
+      .map((measure) => [measure.name, known(measure.exact)]),
+  ),
   choices: sizing.choices,
   units: sizing.units,
   grid: sizing.grid,

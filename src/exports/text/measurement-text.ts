@@ -1,7 +1,11 @@
 import { cutsInWords, planSheets, say, show, showValue, type Figures, type Model, type Stock } from '@/engine';
 
 /** The measurement sheet as plain text, for a terminal or a letter: sizes, cut list, making, fits, sheets, departure. */
-export function measurementText(model: Model, figures: Figures, options: { readonly stock: Stock; readonly copies: number }): string {
+export function measurementText(
+  model: Model,
+  figures: Figures,
+  options: { readonly stock: Stock; readonly copies: number },
+): string {
   const { sizing } = figures;
   const length = (mm: number) => show(mm, sizing).text;
   const bare = (mm: number) => show(mm, { ...sizing, bare: true }).text;
@@ -16,7 +20,10 @@ export function measurementText(model: Model, figures: Figures, options: { reado
     `Outside ${figures.finished.outside.map(({ name, mm }) => `${bare(mm)} ${name}`).join(' × ')} ${sizing.units}`,
     '',
     'ASKED',
-    ...asked.map(({ name, kind, cut, unit }) => `  ${name.padEnd(widest)}  ${showValue(cut, kind, { ...sizing, ...(unit ? { unit } : {}) }).text}`),
+    ...asked.map(
+      ({ name, kind, cut, unit }) =>
+        `  ${name.padEnd(widest)}  ${showValue(cut, kind, { ...sizing, ...(unit ? { unit } : {}) }).text}`,
+    ),
     ...Object.entries(sizing.choices).map(([name, option]) => `  ${name.padEnd(widest)}  ${option}`),
     '',
     'PIECES',
@@ -26,18 +33,33 @@ export function measurementText(model: Model, figures: Figures, options: { reado
     ]),
     '',
     'FITS',
-    ...figures.fits.map((fit) => `  ${fit.holds ? 'holds' : 'FAILS'}  ${fit.name}${fit.gap === null ? '' : ` (${gapText(fit.gap, fit.is, length)})`}${fit.holds ? '' : `: ${fit.otherwise}`}`),
+    ...figures.fits.map(
+      (fit) =>
+        `  ${fit.holds ? 'holds' : 'FAILS'}  ${fit.name}${fit.gap === null ? '' : ` (${gapText(fit.gap, fit.is, length)})`}${fit.holds ? '' : `: ${fit.otherwise}`}`,
+    ),
     '',
     `SHEETS  ${plan.used} of ${plan.stock.name}${options.copies > 1 ? ` for ${options.copies} boxes` : ''}`,
-    ...plan.sheets.flatMap((_, index) => [`  Sheet ${index + 1}`, ...cutsInWords(plan, index).map((sentence) => `    ${say(sentence, sizing)}`)]),
-    ...plan.tooLarge.map(({ name, across, along, hint }) => `  ${name}, ${bare(across)} × ${length(along)}, is larger than the sheet. ${hint}`),
+    ...plan.sheets.flatMap((_, index) => [
+      `  Sheet ${index + 1}`,
+      ...cutsInWords(plan, index).map((sentence) => `    ${say(sentence, sizing)}`),
+    ]),
+    ...plan.tooLarge.map(
+      ({ name, across, along, hint }) =>
+        `  ${name}, ${bare(across)} × ${length(along)}, is larger than the sheet. ${hint}`,
+    ),
     '',
-    figures.departure.mm === 0 ? 'Cutting to the grid changes nothing.' : `Furthest from exact: ${figures.departure.where}, ${Math.abs(figures.departure.mm).toFixed(2)} mm ${figures.departure.mm > 0 ? 'over' : 'under'}.`,
-    ...figures.problems.map((problem) => `PROBLEM ${problem.sentence}${problem.nearest === null ? '' : ` Nearest that works: ${problem.measure} ${length(problem.nearest)}.`}`),
+    figures.departure.mm === 0
+      ? 'Cutting to the grid changes nothing.'
+      : `Furthest from exact: ${figures.departure.where}, ${Math.abs(figures.departure.mm).toFixed(2)} mm ${figures.departure.mm > 0 ? 'over' : 'under'}.`,
+    ...figures.problems.map(
+      (problem) =>
+        `PROBLEM ${problem.sentence}${problem.nearest === null ? '' : ` Nearest that works: ${problem.measure} ${length(problem.nearest)}.`}`,
+    ),
   ];
   return `${lines.join('\n')}\n`;
 }
 function gapText(gap: number, is: string, length: (mm: number) => string): string {
-  if (is === 'same as') return Math.abs(gap) < 0.01 ? 'exact' : `${Math.abs(gap).toFixed(2)} mm ${gap > 0 ? 'over' : 'under'}`;
+  if (is === 'same as')
+    return Math.abs(gap) < 0.01 ? 'exact' : `${Math.abs(gap).toFixed(2)} mm ${gap > 0 ? 'over' : 'under'}`;
   return gap < 0 ? `${length(-gap)} missing` : `${length(gap)} spare`;
 }

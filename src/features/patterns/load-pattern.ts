@@ -21,7 +21,15 @@ export function loadPattern(file: string, text: string): { readonly pattern: Pat
   if (!compiled.ok) throw new PatternFileError(file, compiled.faults);
   const slug = file.replace(/^.*\//, '').replace(/\.json$/, '');
   if (parsed.data.slug !== slug) {
-    throw new PatternFileError(file, [{ code: 'pattern slug', where: 'slug', found: `“${parsed.data.slug}”`, expected: `“${slug}”, the name of the file`, hint: `Write “${slug}”, or rename the file.` }]);
+    throw new PatternFileError(file, [
+      {
+        code: 'pattern slug',
+        where: 'slug',
+        found: `“${parsed.data.slug}”`,
+        expected: `“${slug}”, the name of the file`,
+        hint: `Write “${slug}”, or rename the file.`,
+      },
+    ]);
   }
   return { pattern: parsed.data, model: compiled.value };
 }
@@ -31,7 +39,15 @@ function readJson(file: string, text: string): unknown {
     return JSON.parse(text);
   } catch (error) {
     const found = error instanceof Error ? error.message : 'something else';
-    throw new PatternFileError(file, [{ code: 'pattern json', where: 'the file', found, expected: 'JSON', hint: 'Look for a missing comma, quote or bracket there.' }]);
+    throw new PatternFileError(file, [
+      {
+        code: 'pattern json',
+        where: 'the file',
+        found,
+        expected: 'JSON',
+        hint: 'Look for a missing comma, quote or bracket there.',
+      },
+    ]);
   }
 }
 
@@ -39,14 +55,92 @@ function readJson(file: string, text: string): unknown {
 const placeOf = (path: readonly (string | number)[]): string =>
   path.length === 0 ? 'the pattern' : path.map((part) => (typeof part === 'number' ? `${part + 1}` : part)).join(' → ');
 
-const KNOWN = ['format', 'slug', 'name', 'summary', 'group', 'measures', 'choices', 'pieces', 'fits', 'finished', 'order', 'turn', 'assembly', 'columns', 'rows', 'cells', 'lines', 'tabs', 'caps', 'corners', 'notches', 'slots', 'rolls', 'edges', 'look', 'remarks', 'question', 'usual', 'from', 'to', 'finer', 'when', 'formula', 'rounds', 'unit', 'kind', 'ask', 'note', 'options', 'left', 'right', 'is', 'tolerance', 'otherwise', 'change', 'advice', 'count', 'stock', 'builder', 'depth', 'teeth', 'tooth angle', 'radius', 'corner', 'cell', 'side', 'across', 'along', 'width', 'height', 'between', 'angle', 'size', 'by', 'top', 'bottom', 'inside', 'outside', 'piece', 'root', 'at'];
+const KNOWN = [
+  'format',
+  'slug',
+  'name',
+  'summary',
+  'group',
+  'measures',
+  'choices',
+  'pieces',
+  'fits',
+  'finished',
+  'order',
+  'turn',
+  'assembly',
+  'columns',
+  'rows',
+  'cells',
+  'lines',
+  'tabs',
+  'caps',
+  'corners',
+  'notches',
+  'slots',
+  'rolls',
+  'edges',
+  'look',
+  'remarks',
+  'question',
+  'usual',
+  'from',
+  'to',
+  'finer',
+  'when',
+  'formula',
+  'rounds',
+  'unit',
+  'kind',
+  'ask',
+  'note',
+  'options',
+  'left',
+  'right',
+  'is',
+  'tolerance',
+  'otherwise',
+  'change',
+  'advice',
+  'count',
+  'stock',
+  'builder',
+  'depth',
+  'teeth',
+  'tooth angle',
+  'radius',
+  'corner',
+  'cell',
+  'side',
+  'across',
+  'along',
+  'width',
+  'height',
+  'between',
+  'angle',
+  'size',
+  'by',
+  'top',
+  'bottom',
+  'inside',
+  'outside',
+  'piece',
+  'root',
+  'at',
+];
 
 function faultOf(issue: z.ZodIssue): Fault {
   const where = placeOf(issue.path);
   if (issue.code === 'unrecognized_keys') {
     const [key = ''] = issue.keys;
     const nearest = nearestName(key, KNOWN);
-    return { code: 'pattern field', where, found: `a field called “${key}”`, expected: 'only fields that a pattern has', hint: nearest ? `The nearest is “${nearest}”.` : 'Take it out.' };
+    return {
+      code: 'pattern field',
+      where,
+      found: `a field called “${key}”`,
+      expected: 'only fields that a pattern has',
+      hint: nearest ? `The nearest is “${nearest}”.` : 'Take it out.',
+    };
   }
   if (issue.code === 'invalid_type' && issue.received === 'undefined') {
     return { code: 'pattern missing', where, found: 'nothing', expected: issue.expected, hint: 'Add it.' };

@@ -18,13 +18,22 @@ const list = <T extends z.ZodTypeAny>(item: T) => z.array(item).max(200, 'At mos
 const measure = z.strictObject({
   name,
   kind: z.enum(['length', 'area', 'angle', 'number', 'whole number']).optional(),
-  ask: z.strictObject({ question: words, usual: formula, from: formula, to: formula, finer: z.boolean().optional(), when }).optional(),
+  ask: z
+    .strictObject({ question: words, usual: formula, from: formula, to: formula, finer: z.boolean().optional(), when })
+    .optional(),
   formula: formula.optional(),
   rounds: z.enum(['nearest', 'up', 'down', 'exact']).optional(),
   unit: z.enum(['in', 'mm', 'cm']).optional(),
   note: words.optional(),
 });
-const choice = z.strictObject({ name, question: words, options: list(name), usual: name, finer: z.boolean().optional(), when });
+const choice = z.strictObject({
+  name,
+  question: words,
+  options: list(name),
+  usual: name,
+  finer: z.boolean().optional(),
+  when,
+});
 const fit = z.strictObject({
   name,
   left: formula,
@@ -47,14 +56,40 @@ const piece = z.strictObject({
   columns: list(track),
   rows: list(track),
   cells: list(list(name)),
-  lines: list(z.strictObject({ between: z.tuple([name, name]), is: z.enum(['valley', 'mountain', 'slit', 'nothing']), angle: formula.optional(), when })).optional(),
+  lines: list(
+    z.strictObject({
+      between: z.tuple([name, name]),
+      is: z.enum(['valley', 'mountain', 'slit', 'nothing']),
+      angle: formula.optional(),
+      when,
+    }),
+  ).optional(),
   tabs: list(
-    z.strictObject({ cells: list(name), depth: formula.optional(), left: tabEnd, right: tabEnd, top: tabEnd, bottom: tabEnd, teeth: formula.optional(), 'tooth angle': formula.optional(), when }),
+    z.strictObject({
+      cells: list(name),
+      depth: formula.optional(),
+      left: tabEnd,
+      right: tabEnd,
+      top: tabEnd,
+      bottom: tabEnd,
+      teeth: formula.optional(),
+      'tooth angle': formula.optional(),
+      when,
+    }),
   ).optional(),
   caps: list(z.strictObject({ cell: name, radius: formula })).optional(),
-  corners: list(z.strictObject({ cell: name, corner: z.enum(['top left', 'top right', 'bottom right', 'bottom left']), radius: formula, when })).optional(),
+  corners: list(
+    z.strictObject({
+      cell: name,
+      corner: z.enum(['top left', 'top right', 'bottom right', 'bottom left']),
+      radius: formula,
+      when,
+    }),
+  ).optional(),
   notches: list(z.strictObject({ cell: name, side, at: formula, radius: formula, when })).optional(),
-  slots: list(z.strictObject({ cell: name, across: formula, along: formula, width: formula, height: formula, when })).optional(),
+  slots: list(
+    z.strictObject({ cell: name, across: formula, along: formula, width: formula, height: formula, when }),
+  ).optional(),
   rolls: list(z.strictObject({ cell: name, radius: formula, when })).optional(),
   edges: list(z.strictObject({ name, cell: name, side })).optional(),
   look,
@@ -75,5 +110,15 @@ export const patternSchema: z.ZodType<Pattern> = z.strictObject({
   finished: z.strictObject({ inside: size, outside: size }),
   order: list(words),
   turn: z.number().finite().optional(),
-  assembly: list(z.strictObject({ piece: name, root: name, at: z.tuple([formula, formula, formula]), across: axis, along: axis, when, look })),
+  assembly: list(
+    z.strictObject({
+      piece: name,
+      root: name,
+      at: z.tuple([formula, formula, formula]),
+      across: axis,
+      along: axis,
+      when,
+      look,
+    }),
+  ),
 });

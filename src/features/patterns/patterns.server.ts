@@ -17,8 +17,15 @@ function patterns(): ReadonlyMap<string, Loaded> {
 }
 /** Reads a folder of pattern files. Throws a PatternFileError for the first file with faults. */
 export function readPatterns(folder: string): ReadonlyMap<string, Loaded> {
-  const files = readdirSync(folder).filter((name) => name.endsWith('.json')).sort();
-  return new Map(files.map((name) => [name.replace(/\.json$/, ''), loadPattern(`content/patterns/${name}`, readFileSync(join(folder, name), 'utf8'))]));
+  const files = readdirSync(folder)
+    .filter((name) => name.endsWith('.json'))
+    .sort();
+  return new Map(
+    files.map((name) => [
+      name.replace(/\.json$/, ''),
+      loadPattern(`content/patterns/${name}`, readFileSync(join(folder, name), 'utf8')),
+    ]),
+  );
 }
 
 export const listPatterns = (): readonly Pattern[] => [...patterns().values()].map(({ pattern }) => pattern);

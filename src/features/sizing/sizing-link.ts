@@ -1,4 +1,18 @@
-import { GRIDS, UNITS, defaultGrid, keyOf, nearestName, readValue, same, snap, type Fault, type GridId, type Model, type Sizing, type Unit } from '@/engine';
+import {
+  GRIDS,
+  UNITS,
+  defaultGrid,
+  keyOf,
+  nearestName,
+  readValue,
+  same,
+  snap,
+  type Fault,
+  type GridId,
+  type Model,
+  type Sizing,
+  type Unit,
+} from '@/engine';
 
 /** Names in an address: `inside-width` for “inside width”. */
 export const slugOf = (name: string): string => keyOf(name).replaceAll(' ', '-');
@@ -39,7 +53,13 @@ export function readSizing(model: Model, params: URLSearchParams, usual: Sizing)
 
 function notOneOf(code: string, where: string, typed: string, options: readonly string[]): Fault {
   const nearest = nearestName(typed, options);
-  return { code, where, found: `“${typed}”`, expected: options.join(' or '), hint: nearest ? `Did you mean ${nearest}?` : `It can be ${options.join(' or ')}.` };
+  return {
+    code,
+    where,
+    found: `“${typed}”`,
+    expected: options.join(' or '),
+    hint: nearest ? `Did you mean ${nearest}?` : `It can be ${options.join(' or ')}.`,
+  };
 }
 function readUnits(params: URLSearchParams, usual: Sizing, faults: Fault[]): Unit {
   const typed = params.get('units');
@@ -71,10 +91,12 @@ export function writeSizing(model: Model, sizing: Sizing, usual: Sizing): string
   }
   for (const { def } of model.choices) {
     const option = sizing.choices[keyOf(def.name)];
-    if (option !== undefined && option !== (usual.choices[keyOf(def.name)] ?? def.usual)) params.push(`${slugOf(def.name)}=${slugOf(option)}`);
+    if (option !== undefined && option !== (usual.choices[keyOf(def.name)] ?? def.usual))
+      params.push(`${slugOf(def.name)}=${slugOf(option)}`);
   }
   if (sizing.units !== usual.units) params.push(`units=${sizing.units}`);
-  const fallback = GRIDS[usual.grid].unit === (sizing.units === 'in' ? 'in' : 'mm') ? usual.grid : defaultGrid(sizing.units);
+  const fallback =
+    GRIDS[usual.grid].unit === (sizing.units === 'in' ? 'in' : 'mm') ? usual.grid : defaultGrid(sizing.units);
   if (sizing.grid !== fallback) params.push(`cut=${sizing.grid}`);
   return params.join('&');
 }

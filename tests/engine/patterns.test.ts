@@ -1,0 +1,254 @@
+import { Polygon, arc as flattenArc, point as flattenPoint, segment as flattenSegment } from '@flatten-js/core';
+import polygonClipping from 'polygon-clipping';
+import { describe, expect, it } from 'vitest';
+import {
+  GRIDS,
+  areaOf,
+  evaluate,
+  lengthOf,
+  perimeterOf,
+  pointsOf,
+  roundTo,
+  same,
+  say,
+  snap,
+  type Curve,
+  type Loop,
+  type Net,
+} from '@/engine';
+import { expectClose } from '../setup/expect-close';
+import { SLUGS, figuresOf, inch, modelOf, pieceOf, sizingsOf } from './patterns';
+
+describe('book-box', () => {
+  const model = modelOf('book-box');
+  it('cuts a strip of 2 1/8 in, 3 1/8 in with its tabs, round a 4 in circle over 2 in (common practice, no source)', () => {
+    const figures = figuresOf(model, { 'inside depth': inch(2), circle: inch(4) });
+    const spine = pieceOf(figures, 'Lower spine');
+    expect(spine.across).toBe(inch(3 + 1 / 8));
+    expect(snap((spine.scores.across[1] as number) - (spine.scores.across[0] as number))).toBe(53.975);
+    // 2 × 2 × asin(2 / 4) = 2.0944 in: the strip is 0.0306 in over.
+    expectClose(figures.measures.find((measure) => measure.name === 'arc')?.exact ?? NaN, inch(2.0943951), 1e-4);
+    // 0.1 mm a tooth on a circle of this size: nine teeth (derived: pitch √(8 × 0.1 × 50.8) = 6.375 mm; 53.975 / 6.375 → 9).
+    expect(figures.measures.find((measure) => measure.name === 'teeth')?.cut).toBe(9);
+  });
+  it('cuts 2 3/8 in at sixteenths over 2 1/4 in of a 4 1/2 in circle', () => {
+    const spine = pieceOf(figuresOf(model, { circle: inch(4.5) }), 'Lower spine');
+    expect(spine.across).toBe(inch(3 + 3 / 8));
+    expect(spine.along).toBe(inch(8)); // 9 − 1 1/2 + 1/2
+  });
+  it('gives the sizes worked by hand at 9 × 6 × 2 1/4 in', () => {
+    const figures = figuresOf(model, { circle: inch(4.5), overhang: inch(0.25) });
+    const sizes = Object.fromEntries(
+      figures.pieces.map(({ name, across, along }) => [name, [snap(across / 25.4), snap(along / 25.4)]]),
+    );
+    expect(sizes).toEqual({
+      Cover: [6.25, 9.25],
+      'Fore edge': [3.25, 9],
+      Floor: [3.25, 6.8125], // 1/2 + 6 + the arc's 0.3014, up to 5/16
+      'Lower spine': [3.375, 8],
+      'Upper spine': [3.3125, 1.75], // 2 3/8 − 1/16 + two tabs; 1 1/2 + 1/4
+      Lid: [3.1875, 7.3125], // 2 1/4 − 1/16 + two tabs; 1/2 + 6 + 5/16 + 1/2
+    });
+  });
+  it('draws the curve as an arc of the circle over the depth', () => {
+    const { net } = pieceOf(figuresOf(model, { circle: inch(4.5) }), 'Floor');
+    // 4 1/2 × asin(2 1/4 ÷ 4 1/2) = 2.35619 in
+    expectClose(net.edges.curve ?? NaN, inch(2.35619449), 1e-3);
+  });
+  it('lets a half round be asked: the arc is half the circle and the bulge half the depth', () => {
+    const figures = figuresOf(model, { 'inside depth': inch(3), circle: inch(3) });
+    expect(figures.problems).toEqual([]);
+    expectClose(pieceOf(figures, 'Floor').net.edges.curve ?? NaN, (Math.PI * inch(3)) / 2, 1e-6);
+  });
+  it('has a straight spine without curve, teeth or bulge', () => {
+    const figures = figuresOf(model, {}, { choices: { spine: 'straight' } });
+    expect(figures.problems).toEqual([]);
+    expect(pieceOf(figures, 'Lower spine').across).toBe(inch(3.25));
+    expect(pieceOf(figures, 'Floor').along).toBe(inch(6.5));
+    for (const piece of figures.pieces) expect(piece.net.outline.every((curve) => curve.type === 'line')).toBe(true);
+  });
+  it('closes for good without a flip lid: a full-height spine and a top', () => {
+    const figures = figuresOf(model, { overhang: inch(0.25) }, { choices: { lid: 'none' } });
+    expect(figures.pieces.map((piece) => piece.name)).toEqual(['Cover', 'Fore edge', 'Floor', 'Lower spine', 'Top']);
+    expect(pieceOf(figures, 'Lower spine').along).toBe(inch(9.75)); // 9 + 1/4 + the 1/2 in foot
+  });
+  it('says that a lid without play rubs, and draws it all the same', () => {
+    const figures = figuresOf(model, { play: 0 });
+    expect(figures.fits.find((fit) => fit.name === 'lid passes between the covers')?.holds).toBe(false);
+    expect(figures.problems[0]).toMatchObject({ code: 'fit fails', measure: 'play', nearest: inch(1 / 16) });
+    expect(figures.pieces.length).toBe(6);
+  });
+  it('rounds cover corners on the fore-edge side only, and warns when they bare the foot', () => {
+    const figures = figuresOf(
+      model,
+      { 'corner radius': inch(0.5), overhang: inch(0.25) },
+      { choices: { 'cover corners': 'rounded' } },
+    );
+    const { net } = pieceOf(figures, 'Cover');
+    const arcs = net.outline.filter((curve) => curve.type === 'arc');
+    expect(arcs.map((arc) => arc.radius)).toEqual([12.7, 12.7]);
+    expect(arcs.every((arc) => arc.from.x > net.across / 2)).toBe(true);
+    expect(figures.problems).toEqual([]);
+    expect(figures.fits.find((fit) => fit.advice)?.holds).toBe(false);
+  });
+  it('cuts the ribbon’s slot inside the lid', () => {
+    const { net } = pieceOf(figuresOf(model, {}, { choices: { 'pull ribbon': 'through the lid' } }), 'Lid');
+    expect(net.holes).toHaveLength(1);
+    expectClose(Math.abs(areaOf(net.holes[0] as Loop)), (9.525 + 1) * 2, 1e-6); // ribbon 3/8 in + 1 mm, 2 mm wide
+  });
+});
+
+describe('trays', () => {
+  it('score at the height from each of four sides', () => {
+    const tray = pieceOf(
+      figuresOf(modelOf('tray'), { 'inside length': inch(9), 'inside width': inch(6), 'inside height': inch(1.25) }),
+      'Tray',
+    );
+    expect([tray.across, tray.along]).toEqual([inch(11.5), inch(8.5)]);
+    expect(tray.scores).toEqual({ across: [inch(1.25), inch(10.25)], along: [inch(1.25), inch(7.25)] });
+  });
+  it('trim their tabs where two would meet on one wall (derived: half the length less a card’s thickness)', () => {
+    const figures = figuresOf(modelOf('tray'), { 'inside length': inch(3), 'inside height': inch(2) });
+    expect(figures.measures.find((measure) => measure.name === 'corner tab')?.cut).toBe(inch(1 + 7 / 16)); // 1 1/2 in − 0.3 mm, down
+    expect(figures.problems).toEqual([]);
+  });
+  it('lidded: the lid is 4 card thicknesses and the play wider across the tabbed walls, 2 and the play longer (derived)', () => {
+    const figures = figuresOf(
+      modelOf('lidded-box'),
+      { 'inside length': 180, 'inside width': 100, 'card thickness': 0.5, play: 2 },
+      { units: 'mm', grid: '0.5mm' },
+    );
+    const cut = (name: string) => figures.measures.find((measure) => measure.name === name)?.cut;
+    expect([cut('lid inside length'), cut('lid inside width')]).toEqual([183, 104]);
+  });
+  it('lidded: refuse a lid with no play after rounding, and name the nearest that works', () => {
+    const figures = figuresOf(modelOf('lidded-box'), { play: 0, 'card thickness': 0 });
+    expect(figures.problems[0]).toMatchObject({ code: 'fit fails', measure: 'play', nearest: inch(1 / 16) });
+  });
+});
+
+describe('sleeve-drawer', () => {
+  it('wraps the drawer: tab, wide, narrow, wide and a card’s thickness, narrow less one', () => {
+    const figures = figuresOf(
+      modelOf('sleeve-drawer'),
+      { 'inside length': 150, 'inside width': 100, 'inside height': 30, tab: 12, 'card thickness': 0.5, play: 1 },
+      { units: 'mm', grid: '0.5mm' },
+    );
+    const sleeve = pieceOf(figures, 'Sleeve');
+    // wide = 100 + 4 × 0.5 + 1 = 103; narrow = 30 + 0.5 + 1 = 31.5
+    expect(sleeve.scores.across).toEqual([12, 115, 146.5, 250]);
+    expect(sleeve.across).toBe(281);
+  });
+  it('says a step of one card thickness in words, since no ruler shows it', () => {
+    const figures = figuresOf(modelOf('sleeve-drawer'));
+    const score = pieceOf(figures, 'Sleeve').instructions[1];
+    expect(say(score ?? [], { units: 'in', grid: '1/16in' })).toBe(
+      'Along the 11 1/2 in side score at 1/2, 4 5/8, 6 and 10 1/8 and a card’s thickness.',
+    );
+  });
+});
+
+/** The same loop in flatten-js, an independent geometry library. */
+function flattened(loop: Loop): Polygon {
+  const edge = (curve: Curve) =>
+    curve.type === 'line'
+      ? flattenSegment(flattenPoint(curve.from.x, curve.from.y), flattenPoint(curve.to.x, curve.to.y))
+      : flattenArc(
+          flattenPoint(curve.centre.x, curve.centre.y),
+          curve.radius,
+          Math.atan2(curve.from.y - curve.centre.y, curve.from.x - curve.centre.x),
+          Math.atan2(curve.to.y - curve.centre.y, curve.to.x - curve.centre.x),
+          curve.clockwise,
+        );
+  const polygon = new Polygon();
+  polygon.addFace(loop.map(edge));
+  return polygon;
+}
+const ring = (loop: Loop): [number, number][] => pointsOf(loop, 0.02).map(({ x, y }) => [x, y]);
+
+function expectSound(net: Net, what: string): void {
+  net.outline.forEach((curve, index) => {
+    const next = net.outline[(index + 1) % net.outline.length] as Curve;
+    expectClose(
+      Math.hypot(curve.to.x - next.from.x, curve.to.y - next.from.y),
+      0,
+      1e-4,
+      `${what}: the outline is closed`,
+    );
+  });
+  const panels = net.panels.reduce((sum, panel) => sum + areaOf(panel.loop), 0);
+  const holes = net.holes
+    .filter((hole) => areaOf(hole) < 0 && hole.length === 4)
+    .reduce((sum, hole) => sum + Math.abs(areaOf(hole)), 0);
+  expect(panels, what).toBeGreaterThan(0);
+  expectClose(areaOf(net.outline), panels, Math.max(1e-3, panels * 1e-9), `${what}: panels fill the outline`);
+  expect(holes).toBeLessThan(panels);
+}
+
+describe.each(SLUGS)('%s over its whole range', (slug) => {
+  const model = modelOf(slug);
+  const sizings = [...sizingsOf(model, 60, 41)];
+
+  it('makes sound pieces and holds every fit at 60 sizings on every grid', () => {
+    for (const sizing of sizings) {
+      const figures = evaluate(model, sizing);
+      expect(figures.problems, JSON.stringify(sizing)).toEqual([]);
+      for (const piece of figures.pieces) {
+        expectSound(piece.net, `${piece.name} at ${JSON.stringify(sizing.values)}`);
+        expect(piece.scores.across.every((at) => piece.net.columns.some((edge) => same(edge, at)))).toBe(true);
+        expect(piece.scores.along.every((at) => piece.net.rows.some((edge) => same(edge, at)))).toBe(true);
+      }
+    }
+  });
+  it('has the areas and perimeters that flatten-js finds', () => {
+    for (const sizing of sizings.slice(0, 10)) {
+      for (const piece of evaluate(model, sizing).pieces) {
+        const polygon = flattened(piece.net.outline);
+        expectClose(areaOf(piece.net.outline), Math.abs(polygon.area()), 1e-3, `${piece.name} area`);
+        const length = [...polygon.edges].reduce((sum: number, edge: { length: number }) => sum + edge.length, 0);
+        expectClose(perimeterOf(piece.net.outline), length, 1e-6 * length + 1e-6, `${piece.name} perimeter`);
+      }
+    }
+  });
+  it('has no panels that lie over one another in the flat (polygon-clipping)', () => {
+    for (const sizing of sizings.slice(0, 6)) {
+      for (const { name, net } of evaluate(model, sizing).pieces) {
+        net.panels.forEach((a, index) => {
+          for (const b of net.panels.slice(index + 1)) {
+            const common = polygonClipping.intersection([ring(a.loop)], [ring(b.loop)]);
+            const area = common.flat().reduce(
+              (sum, points) =>
+                sum +
+                Math.abs(
+                  points.reduce((twice, [x, y], i) => {
+                    const [u, v] = points[(i + 1) % points.length] as [number, number];
+                    return twice + x * v - u * y;
+                  }, 0) / 2,
+                ),
+              0,
+            );
+            expect(area, `${name}: ${a.name} and ${b.name}`).toBeLessThan(0.3);
+          }
+        });
+      }
+    }
+  });
+  it('cuts whole grid steps, but for steps of card thickness, and equal edges stay equal', () => {
+    for (const sizing of sizings) {
+      const { step } = GRIDS[sizing.grid];
+      const figures = evaluate(model, sizing);
+      for (const piece of figures.pieces) {
+        for (const total of [piece.across, piece.along]) {
+          const cards = [0, 1, -1, 2, -2].some((count) =>
+            same(roundTo(total - count * piece.thickness, step, 'nearest'), snap(total - count * piece.thickness)),
+          );
+          expect(cards, `${piece.name}: ${total} on ${sizing.grid}`).toBe(true);
+        }
+        for (const fold of piece.net.folds) {
+          const [a, b] = fold.panels.map((panel) => piece.net.panels.find((one) => one.name === panel));
+          expect(a && b && lengthOf(fold.curve) > 0).toBe(true);
+        }
+      }
+    }
+  });
+});
