@@ -2,8 +2,20 @@
 const token = (name) => `var(--${name})`;
 
 const colours = [
-  'ink', 'soft', 'paper', 'board', 'line', 'plum', 'plum-tint', 'mint', 'mint-tint',
-  'saffron', 'saffron-tint', 'brick', 'brick-tint', 'fold',
+  'ink',
+  'soft',
+  'paper',
+  'board',
+  'line',
+  'plum',
+  'plum-tint',
+  'mint',
+  'mint-tint',
+  'saffron',
+  'saffron-tint',
+  'brick',
+  'brick-tint',
+  'fold',
 ];
 
 /** @type {import('tailwindcss').Config} */

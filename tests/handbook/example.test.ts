@@ -2,7 +2,14 @@ import { readFileSync } from 'node:fs';
 import { describe, expect, it } from 'vitest';
 import { compilePattern, type Pattern } from '@/engine';
 import { drawnAt, workExample } from '@/features/examples/example';
-import { changesWords, closesHtml, liveInside, pieceOf, troublesHtml, wordsHtml } from '@/features/examples/example-html';
+import {
+  changesWords,
+  closesHtml,
+  liveInside,
+  pieceOf,
+  troublesHtml,
+  wordsHtml,
+} from '@/features/examples/example-html';
 
 function modelOf(slug: string) {
   const file = new URL(`../../content/patterns/${slug}.json`, import.meta.url);
@@ -64,7 +71,9 @@ describe('an example', () => {
   });
 
   it('gives a piece its making in words, figures apart', () => {
-    expect(seen(wordsHtml(at('inside-length=8in&inside-width=5in&inside-height=1in'), 'Tray'))).toMatch(/^Cut 10 × 7\u00a0in\. /);
+    expect(seen(wordsHtml(at('inside-length=8in&inside-width=5in&inside-height=1in'), 'Tray'))).toMatch(
+      /^Cut 10 × 7\u00a0in\. /,
+    );
   });
 
   it('refuses a formula or a piece that the pattern does not have', () => {

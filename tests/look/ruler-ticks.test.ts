@@ -29,7 +29,9 @@ describe('rulerTicks', () => {
 
   it('leaves out figures that would touch', () => {
     // 10 in on 200 px: 20 px from inch to inch, so every second inch has a figure.
-    const figured = rulerTicks({ from: 0, to: 254, units: 'in', width: 200 }).flatMap(({ label }) => (label ? [label] : []));
+    const figured = rulerTicks({ from: 0, to: 254, units: 'in', width: 200 }).flatMap(({ label }) =>
+      label ? [label] : [],
+    );
     expect(figured).toEqual(['0', '2', '4', '6', '8', '10']);
   });
 

@@ -5,12 +5,28 @@ const place = { across: 200, up: 100 };
 
 it('lets the widest picture decide when it is the one that would not fit', () => {
   // 200 px ÷ 400 mm = 0.5; the tallest would allow 100 ÷ 50 = 2.
-  expect(shelfScale([{ across: 400, up: 50 }, { across: 10, up: 10 }], place)).toBe(0.5);
+  expect(
+    shelfScale(
+      [
+        { across: 400, up: 50 },
+        { across: 10, up: 10 },
+      ],
+      place,
+    ),
+  ).toBe(0.5);
 });
 
 it('lets the tallest picture decide when it is the one that would not fit', () => {
   // 100 px ÷ 250 mm = 0.4; the widest would allow 200 ÷ 100 = 2.
-  expect(shelfScale([{ across: 100, up: 250 }, { across: 20, up: 20 }], place)).toBe(0.4);
+  expect(
+    shelfScale(
+      [
+        { across: 100, up: 250 },
+        { across: 20, up: 20 },
+      ],
+      place,
+    ),
+  ).toBe(0.4);
 });
 
 it('is 1 when there is nothing to draw', () => {

@@ -7,7 +7,9 @@ const css = readFileSync(new URL('../../src/styles/tokens.css', import.meta.url)
 function tokensAfter(selector: string): Record<string, string> {
   const start = css.indexOf('{', css.indexOf(selector) + selector.length - 1);
   const block = css.slice(start, css.indexOf('}', start));
-  return Object.fromEntries([...block.matchAll(/--([\w-]+):\s*(#[0-9a-f]{6})/g)].map(([, name, value]) => [name, value]));
+  return Object.fromEntries(
+    [...block.matchAll(/--([\w-]+):\s*(#[0-9a-f]{6})/g)].map(([, name, value]) => [name, value]),
+  );
 }
 
 /** Contrast ratio of two colours as WCAG 2.2 defines it. */

@@ -35,8 +35,11 @@ export interface Places {
 export function pieceSvg(example: Example, name: string, { wide, narrow, tallest }: Places): string {
   const { units, grid } = example.figures.sizing;
   const piece = pieceOf(example, name);
-  const drawn = (width: number, layout: { class?: string }) => drawingSvg(drawPiece(piece, { width, units, grid, tallest }), layout);
-  return wide === narrow ? drawn(wide, {}) : drawn(wide, { class: 'wide-only' }) + drawn(narrow, { class: 'narrow-only' });
+  const drawn = (width: number, layout: { class?: string }) =>
+    drawingSvg(drawPiece(piece, { width, units, grid, tallest }), layout);
+  return wide === narrow
+    ? drawn(wide, {})
+    : drawn(wide, { class: 'wide-only' }) + drawn(narrow, { class: 'narrow-only' });
 }
 
 /** A piece's making instructions, their figures on tabs. */

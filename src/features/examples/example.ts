@@ -44,10 +44,15 @@ export function workExample(model: Model, parameters: URLSearchParams, lastGood?
   };
 }
 
-function read(model: Model, parameters: URLSearchParams, usual: Sizing): FormReading & { readonly faults: readonly Fault[] } {
+function read(
+  model: Model,
+  parameters: URLSearchParams,
+  usual: Sizing,
+): FormReading & { readonly faults: readonly Fault[] } {
   if (isSizingForm(parameters)) return { ...readSizingForm(model, parameters, usual), faults: [] };
   return { ...readSizing(model, parameters, usual), typed: {} };
 }
 
 /** The size that a form was drawn at, for its hidden field. */
-export const drawnAt = ({ model, asked, usual }: Example): string => writeSizing(model, asked, usual).replace(/^\?/, '');
+export const drawnAt = ({ model, asked, usual }: Example): string =>
+  writeSizing(model, asked, usual).replace(/^\?/, '');

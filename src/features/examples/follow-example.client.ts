@@ -2,7 +2,7 @@
  * Makes an example's form answer at once. Without this script the same form is sent to the server, which answers with
  * the whole page. The engine is fetched when somebody first reaches for the form.
  */
-type Follow = typeof import('./follow-example')['followExample'];
+type Follow = (typeof import('./follow-example'))['followExample'];
 
 for (const form of document.querySelectorAll<HTMLFormElement>('form[data-example]')) {
   let follow: Promise<ReturnType<Follow>> | null = null;

@@ -135,7 +135,9 @@ function mark(element: HTMLElement): void {
   void element.offsetWidth;
   element.classList.add('changed');
   window.clearTimeout(timers.get(element));
-  timers.set(element, window.setTimeout(() => element.classList.remove('changed'), 700));
+  timers.set(
+    element,
+    window.setTimeout(() => element.classList.remove('changed'), 700),
+  );
 }
 const timers = new WeakMap<HTMLElement, number>();
-

@@ -38,7 +38,10 @@ export function shelfOf(editions: readonly Edition[], now: Date): Shelf {
     const { model, figures } = authorsFigures(edition);
     return { edition, model, figures, extent: foldedExtent(model, figures) };
   });
-  const scale = shelfScale(drawn.map(({ extent }) => extent), LARGEST);
+  const scale = shelfScale(
+    drawn.map(({ extent }) => extent),
+    LARGEST,
+  );
   const boxes = drawn.map(({ edition, model, figures, extent }, index): ShelfBox => {
     const width = Math.ceil(extent.across * scale) + 2 * ROOM;
     const height = Math.ceil(extent.up * scale) + 2 * ROOM;
