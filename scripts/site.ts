@@ -1,5 +1,4 @@
 /** The running site: database, mail and pages in one process. Started by start.mjs; needs dist/ and TypeScript. */
-import { existsSync } from 'node:fs';
 import type { RequestListener } from 'node:http';
 import { pathToFileURL } from 'node:url';
 import { join } from 'node:path';
@@ -7,6 +6,7 @@ import { config } from '@/config.server';
 import { closeDatabase, sqlite } from '@/db/client.server';
 import { migrateDatabase } from '@/db/migrate.server';
 import { DEMO_PEOPLE } from '@/features/demo/people';
+import { seedDemo } from '@/features/demo/seed.server';
 import { frontDoor } from '@/features/http/front-door.server';
 import { serve } from '@/features/http/serve.server';
 import { startLocalMailServer } from '@/features/mailing/local-mail-server.server';
@@ -22,12 +22,8 @@ export async function startServices(): Promise<Stoppable> {
   const { applied, backup } = migrateDatabase();
   if (backup) console.log(`Brought the data up to date in ${applied} steps; the copy made before: ${backup}`);
   if (config.demo && isEmpty()) {
-    const seed = join(config.root, 'src/features/demo/seed.server.ts');
-    if (existsSync(seed)) {
-      console.log('Filling the empty database with the demo.');
-      const { seedDemo } = (await import(pathToFileURL(seed).href)) as { seedDemo(): Promise<void> };
-      await seedDemo();
-    }
+    console.log('Filling the empty database with the demo.');
+    await seedDemo();
   }
 
   const localMail = config.smtpUrl
