@@ -55,7 +55,7 @@ export function parseFormula(text: string, names: Names, where: string): Result<
     const fault: Fault = {
       code: `formula ${error.code}`,
       where,
-      span: error.span,
+      span: { from: error.span.from, to: error.span.to },
       found,
       expected,
       hint,

@@ -1,4 +1,4 @@
-import { coincident, snap } from '../measure';
+import { COINCIDENT, coincident, snap } from '../measure';
 import type { Curve, Fold, Line, Loop, Net, Panel, Point } from '../types';
 import { areaOf, distance, line, partOf, samePoint } from './curve';
 
@@ -35,11 +35,7 @@ interface Edge {
  */
 export function assemble(panels: readonly LoosePanel[], jointOf: (a: string, b: string) => Joint): Assembled {
   const edges = splitAtVertices(panels.flatMap((panel, index) => panel.loop.map((curve) => ({ panel: index, curve }))));
-  const open = new Map<string, Edge[]>();
-  for (const edge of edges) {
-    const key = keyOf(edge.curve.from);
-    open.set(key, [...(open.get(key) ?? []), edge]);
-  }
+  const open = byStart(edges);
   const folds: Fold[] = [];
   const joins: { curve: Curve; panels: [string, string] }[] = [];
   const slits: Line[] = [];
@@ -72,32 +68,48 @@ export function assemble(panels: readonly LoosePanel[], jointOf: (a: string, b: 
 /** Points nearer than a hundredth of a micrometre share a key, but for those that straddle a rounding edge: hence the snap first. */
 const keyOf = (point: Point): string => `${Math.round(snap(point.x) * 1e3)},${Math.round(snap(point.y) * 1e3)}`;
 
+function byStart(edges: readonly Edge[]): ReadonlyMap<string, Edge[]> {
+  const map = new Map<string, Edge[]>();
+  for (const edge of edges) {
+    const key = keyOf(edge.curve.from);
+    const there = map.get(key);
+    if (there) there.push(edge);
+    else map.set(key, [edge]);
+  }
+  return map;
+}
+
 function isTwin(a: Curve, b: Curve): boolean {
   if (!samePoint(a.from, b.to) || !samePoint(a.to, b.from) || a.type !== b.type) return false;
   return a.type === 'line' || (b.type === 'arc' && samePoint(a.centre, b.centre) && a.clockwise !== b.clockwise);
 }
 
-/** Straight upright edges are cut at every corner of another panel that lies on them. */
+/** Straight upright and level edges are cut at every corner of another panel that lies on them. */
 function splitAtVertices(edges: readonly Edge[]): Edge[] {
+  // Corners by the line they lie on, so that an edge looks only along its own line.
+  const [byX, byY] = [new Map<number, Set<number>>(), new Map<number, Set<number>>()];
+  const lineOf = (at: number): number => Math.round(snap(at) * 1e3);
+  const add = (map: Map<number, Set<number>>, line: number, at: number): void => {
+    const known = map.get(line);
+    if (known) known.add(at);
+    else map.set(line, new Set([at]));
+  };
+  for (const { curve } of edges) {
+    add(byX, lineOf(curve.from.x), curve.from.y);
+    add(byY, lineOf(curve.from.y), curve.from.x);
+  }
   return edges.flatMap((edge) => {
     const { from, to } = edge.curve;
     const upright = coincident(from.x, to.x);
     if (edge.curve.type !== 'line' || (!upright && !coincident(from.y, to.y))) return [edge];
     const [start, end] = upright ? [from.y, to.y] : [from.x, to.x];
-    const cuts = edges
-      .filter((other) => other.panel !== edge.panel)
-      .flatMap((other) => [other.curve.from])
-      .filter((point) => (upright ? coincident(point.x, from.x) : coincident(point.y, from.y)))
-      .map((point) => (upright ? point.y : point.x))
-      .filter(
-        (value) =>
-          value > Math.min(start, end) &&
-          value < Math.max(start, end) &&
-          !coincident(value, start) &&
-          !coincident(value, end),
-      )
+    const [low, high] = [Math.min(start, end) + COINCIDENT, Math.max(start, end) - COINCIDENT];
+    const corners = (upright ? byX.get(lineOf(from.x)) : byY.get(lineOf(from.y))) ?? [];
+    const cuts = [...corners]
+      .filter((value) => value > low && value < high)
       .sort((a, b) => (start < end ? a - b : b - a))
       .filter((value, index, all) => index === 0 || !coincident(value, all[index - 1] as number));
+    if (cuts.length === 0) return [edge];
     const stops = [from, ...cuts.map((value) => (upright ? { x: from.x, y: value } : { x: value, y: from.y })), to];
     return stops
       .slice(1)
@@ -107,8 +119,7 @@ function splitAtVertices(edges: readonly Edge[]): Edge[] {
 
 /** Loose edges to closed loops. Where several go on from a corner, the one that turns most to the right keeps loops apart. */
 function chain(edges: readonly Edge[]): Loop[] {
-  const from = new Map<string, Edge[]>();
-  for (const edge of edges) from.set(keyOf(edge.curve.from), [...(from.get(keyOf(edge.curve.from)) ?? []), edge]);
+  const from = byStart(edges);
   const used = new Set<Edge>();
   const loops: Loop[] = [];
   for (const first of edges) {
