@@ -30,7 +30,7 @@ export function DeskHeader({ store, saving, stage, mark, preview, publishLabel, 
   const look = STAGE_LOOK[stage.stage];
   return (
     <header className="desk-bar">
-      <a className="desk-home" href="/workroom">
+      <a className="desk-home" href="/workroom" aria-label="Workroom">
         {mark}
         <span>Workroom</span>
       </a>
@@ -56,10 +56,10 @@ export function DeskHeader({ store, saving, stage, mark, preview, publishLabel, 
         <Icon name="info" /> <span className="bar-word">Facts</span>
       </button>
       <span className="bar-undo">
-        <button type="button" className="bar-button" disabled={history.past.length === 0} onClick={store.undo} title="Ctrl Z">
+        <button type="button" className="bar-button" disabled={history.past.length === 0} onClick={store.undo} aria-label="Undo outside the write-up" title="Ctrl Z">
           <Icon name="undo" /> <span className="bar-word">Undo</span>
         </button>
-        <button type="button" className="bar-button" disabled={history.future.length === 0} onClick={store.redo} title="Ctrl Shift Z">
+        <button type="button" className="bar-button" disabled={history.future.length === 0} onClick={store.redo} aria-label="Redo outside the write-up" title="Ctrl Shift Z">
           <Icon name="redo" /> <span className="bar-word">Redo</span>
         </button>
       </span>

@@ -57,6 +57,8 @@ export function createDeskStore(project: OpenProject): DeskStore {
   const $state = computed([$draft, $writeUp], (draft, writeUp): ProjectState => ({ ...draft, writeUp }));
 
   const work = createWork();
+  // The state that is opened counts as good, whether or not anything has looked at its figures before it is changed.
+  work(project.state.pattern, project.state.sizing);
   const $work = computed($draft, (draft) => work(draft.pattern, draft.sizing));
   const $live = computed($work, (now) => now.live);
   const $proof = computed([$state, $work], (state, now) =>

@@ -1,0 +1,76 @@
+import { beforeEach, describe, expect, it } from 'vitest';
+import { changeMeasure } from '@/features/projects/pattern-edits';
+import type { OpenProject } from '@/features/projects/project';
+import { createDeskStore, type DeskStore } from '@/features/workroom/desk/desk-store';
+import { cureFor } from '@/features/workroom/desk/cures';
+import { AUTHORS_SIZE, FOLDER, ONE_STEP, writeUpOf } from '../server/published-project';
+
+const project: OpenProject = {
+  id: 'folder',
+  slug: 'folder',
+  revision: 3,
+  updatedAt: 0,
+  author: { id: 'ines', name: 'Ines Thornbury' },
+  stage: { stage: 'draft' },
+  state: { title: 'Folder', summary: '', minutes: null, hero: null, pattern: FOLDER, sizing: AUTHORS_SIZE, writeUp: ONE_STEP },
+};
+let store: DeskStore;
+beforeEach(() => {
+  store = createDeskStore(project);
+});
+const type = (formula: string) => store.editPattern('blank width.formula', (pattern) => changeMeasure(pattern, 'blank width', { formula }));
+const cut = (name: string) => store.$live.get()?.figures.measures.find((figure) => figure.name === name)?.cut;
+
+describe('the desk', () => {
+  it('works figures out at the author’s size', () => {
+    // 2 × 4 in = 203.2 mm
+    expect(cut('blank width')).toBeCloseTo(203.2, 6);
+    store.editSizing(null, (sizing) => ({ ...sizing, values: { 'inside width': 127 } }));
+    expect(cut('blank width')).toBeCloseTo(254, 6);
+  });
+  it('keeps the last good figures while a formula does not read, and says so', () => {
+    type('2 * inside widt');
+    expect(store.$work.get()).toMatchObject({ stale: true, compiled: { ok: false } });
+    expect(cut('blank width')).toBeCloseTo(203.2, 6);
+    type('3 * inside width');
+    expect(store.$work.get().stale).toBe(false);
+    // 3 × 4 in = 304.8 mm
+    expect(cut('blank width')).toBeCloseTo(304.8, 6);
+  });
+  it('has no figures for a pattern that never read', () => {
+    const pattern = changeMeasure(FOLDER, 'blank width', { formula: '' });
+    const broken = createDeskStore({ ...project, state: { ...project.state, pattern } });
+    expect(broken.$work.get()).toMatchObject({ live: null, stale: true });
+    expect(broken.$proof.get()[0]).toMatchObject({ code: 'formula', place: { name: 'blank width' } });
+  });
+  it('cures a formula with the nearest name', () => {
+    type('2 * inside widt');
+    const item = store.$proof.get()[0];
+    const cure = item === undefined ? null : cureFor(item, store);
+    expect(cure?.label).toBe('Use inside width');
+    cure?.apply();
+    expect(store.$draft.get().pattern.measures[2]?.formula).toBe('2 * inside width');
+    expect(store.$proof.get().filter((left) => left.blocking)).toEqual([]);
+  });
+  it('undoes measures and facts and leaves the write-up, which has an undo of its own', () => {
+    const more = writeUpOf(...ONE_STEP.doc.content, { type: 'cutList' });
+    store.edit('title', (draft) => ({ ...draft, title: 'List folder' }));
+    store.setWriteUp(more);
+    store.undo();
+    expect(store.$state.get()).toMatchObject({ title: 'Folder', writeUp: more });
+    store.redo();
+    expect(store.$state.get()).toMatchObject({ title: 'List folder', writeUp: more });
+  });
+  it('begins the editor anew when the whole state is replaced, which can be undone too', () => {
+    store.replace({ ...project.state, title: 'From the other tab' });
+    expect([store.$generation.get(), store.$draft.get().title]).toEqual([1, 'From the other tab']);
+    store.undo();
+    expect(store.$draft.get().title).toBe('Folder');
+  });
+  it('lights the selected measure first, then what follows it', () => {
+    store.select('inside width');
+    expect(store.$litNames.get()).toEqual(['inside width', 'blank width']);
+    store.select(null);
+    expect(store.$litNames.get()).toEqual([]);
+  });
+});
