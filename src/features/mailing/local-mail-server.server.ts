@@ -35,6 +35,8 @@ export async function startLocalMailServer({ port, dir }: { port: number; dir: s
     disableReverseLookup: true,
     logger: false,
     size: MOST_BYTES,
+    // How long stopping waits for clients that stay connected.
+    closeTimeout: 1_000,
     onData(stream, session, done) {
       const { mailFrom, rcptTo } = session.envelope;
       const head = [

@@ -1,4 +1,3 @@
-import { randomUUID } from 'node:crypto';
 import { config } from '@/config.server';
 import { PAUSE_AFTER_AWAY } from './backoff';
 import { copyMessage, templateOf, type Template } from './copy.server';
@@ -20,7 +19,7 @@ import {
 } from './outbox.server';
 import { senderParts } from './sender';
 import { LANES, openTransport, type MailTransport, type Message } from './transport.server';
-import { holdLease, leaveLease } from './worker-lease.server';
+import { holdLease, leaveLease, newOwner } from './worker-lease.server';
 
 export interface WorkerParts {
   readonly transport: MailTransport;
@@ -49,7 +48,7 @@ export function createMailWorker({
   clock = Date.now,
   random = Math.random,
   lanes = LANES,
-  owner = randomUUID(),
+  owner = newOwner(),
 }: WorkerParts): MailWorker {
   const claimed: number[] = [];
   const lanesInUse = new Set<Promise<void>>();

@@ -26,16 +26,18 @@ export function ProgressRuler({ counts }: { readonly counts: Counts }) {
 
   return (
     <svg className="count-ruler" width="100%" height="76" role="img" aria-label={words}>
-      {ticks.map(({ at, size }) => (
-        <line
-          key={at}
-          className={at <= accepted && accepted > 0 ? 'tick reached' : 'tick'}
-          x1={part(at)}
-          x2={part(at)}
-          y1={size === 'long' ? 14 : size === 'middle' ? 24 : 33}
-          y2={50}
-        />
-      ))}
+      <g className={ticks.length > 50 ? 'crowded' : undefined}>
+        {ticks.map(({ at, size }) => (
+          <line
+            key={at}
+            className={`tick ${size}${at <= accepted && accepted > 0 ? ' reached' : ''}`}
+            x1={part(at)}
+            x2={part(at)}
+            y1={size === 'long' ? 14 : size === 'middle' ? 24 : 33}
+            y2={50}
+          />
+        ))}
+      </g>
       <line className="bar accepted" x1="0" x2={part(accepted)} y1={47.5} y2={47.5} />
       {bars.map(({ name, x1, x2, count }) =>
         count > 0 ? <line key={name} className={`bar ${name}`} x1={x1} x2={x2} y1={47.5} y2={47.5} /> : null,

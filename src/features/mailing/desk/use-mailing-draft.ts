@@ -23,7 +23,8 @@ const inputOf = ({ subject, greeting, excerpt, withHero }: MailingView): Mailing
 
 /** What is typed into a mailing, saved a second after the last change, when the page is hidden and when it is left. */
 export function useMailingDraft(view: MailingView, onSaved: () => void): MailingDraft {
-  const start = { revision: view.revision, savedAt: view.updatedAt };
+  // Where this page began; what the server says later is no new beginning.
+  const [start] = useState({ revision: view.revision, savedAt: view.updatedAt });
   const [input, setInput] = useState(() => inputOf(view));
   const [save, setSave] = useState<SaveState>({ status: { kind: 'saved' }, ...start });
   const saver = useRef<Autosave<MailingInput> | null>(null);
@@ -65,7 +66,7 @@ export function useMailingDraft(view: MailingView, onSaved: () => void): Mailing
       made.stop();
     };
     // One saver for as long as the page shows this mailing.
-  }, [view.id]);
+  }, [view.id, start]);
 
   return {
     input,
