@@ -246,6 +246,8 @@ export interface Panel {
   readonly name: string;
   readonly role: 'panel' | 'tab';
   readonly loop: Loop;
+  /** One tooth of a toothed tab; always glued out of sight. */
+  readonly tooth?: boolean;
   /** Rolled to this radius about an axis along the given direction. */
   readonly roll?: { readonly radius: number; readonly axis: 'across' | 'along' };
 }

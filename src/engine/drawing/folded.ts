@@ -114,7 +114,9 @@ function facesOf(model: Model, figures: Figures, share: number): Face<Look>[] {
       across: def.across,
       along: def.along,
       share,
-    }).map((panel) => {
+    }).flatMap((panel) => {
+      // Teeth are glued out of sight, where narrow faces would only fight with the curve they stand on.
+      if (panel.tooth) return [];
       const shift = panel.role === 'tab' ? times(panel.inside, TAB_INSET) : vector(0, 0, 0);
       return {
         points: panel.points.map((point) => plus(point, shift)),

@@ -7,6 +7,7 @@ export interface LoosePanel {
   readonly name: string;
   readonly role: Panel['role'];
   readonly loop: Loop;
+  readonly tooth?: boolean;
   readonly roll?: Panel['roll'];
 }
 /** How two panels that share an edge are joined there. */

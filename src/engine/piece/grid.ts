@@ -136,7 +136,7 @@ class GridBuilder {
       net: {
         outline: assembled.outline,
         holes: [...assembled.holes, ...this.holes],
-        panels: this.panels.map(({ name, role, loop, roll }) => ({ name, role, loop, ...(roll ? { roll } : {}) })),
+        panels: this.panels,
         folds: assembled.folds,
         joins: assembled.joins,
         slits: assembled.slits,
@@ -189,6 +189,7 @@ class GridBuilder {
       name,
       role,
       loop: outlined.map((edge) => edge.curve),
+      ...(name !== cell.name ? { tooth: true } : {}),
       ...(roll ? { roll: { ...roll, axis: 'along' as const } } : {}),
     });
     this.cellOfPanel.set(name, cell);

@@ -11,6 +11,7 @@ export interface Frame {
 export interface FoldedPanel {
   readonly name: string;
   readonly role: Panel['role'];
+  readonly tooth: boolean;
   readonly points: readonly Vector[];
   readonly inside: Vector;
   /** For each edge from point i to i + 1: a real edge of the card, not a seam inside a rolled or continued panel. */
@@ -81,6 +82,7 @@ export function foldNet(net: Net, options: FoldOptions): readonly FoldedPanel[] 
           {
             name: facet.of.name,
             role: facet.of.role,
+            tooth: facet.of.tooth ?? false,
             points: facet.points.map((point) => place(frame, point)),
             inside: insideOf(frame),
             edges: facet.edges,
