@@ -29,7 +29,7 @@ const plain = (text: string, marks: readonly MarkNode[] = []): InlineNode[] =>
 export const p = (words: Words): BlockNode => ({ type: 'paragraph', content: inline(words) });
 export const heading = (words: Words): BlockNode => ({ type: 'heading', attrs: { level: 2 }, content: inline(words) });
 export const list = (...items: readonly Words[]): BlockNode => ({ type: 'bulletList', content: items.map(item) });
-export const ordered = (...items: readonly Words[]): BlockNode => ({ type: 'orderedList', attrs: { start: 1 }, content: items.map(item) });
+export const ordered = (...items: readonly Words[]): BlockNode => ({ type: 'orderedList', content: items.map(item) });
 const item = (words: Words) => ({ type: 'listItem' as const, content: [p(words)] });
 
 type Content = readonly (BlockNode | Words)[];

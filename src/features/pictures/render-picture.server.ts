@@ -3,7 +3,7 @@ import { createRequire } from 'node:module';
 import { join } from 'node:path';
 import { renderAsync } from '@resvg/resvg-js';
 import { config } from '@/config.server';
-import { woffToTtf } from './woff-to-ttf.server';
+import { underFirstName, woffToTtf } from './woff-to-ttf.server';
 
 const WEIGHTS = [500, 600, 800] as const;
 const { resolve } = createRequire(join(config.root, 'package.json'));
@@ -15,7 +15,7 @@ function fontFiles(): string[] {
   return WEIGHTS.map((weight) => {
     const file = join(folder, `figtree-${weight}.ttf`);
     if (!existsSync(file)) {
-      const whole = woffToTtf(readFileSync(resolve(`@fontsource/figtree/files/figtree-latin-${weight}-normal.woff`)));
+      const whole = underFirstName(woffToTtf(readFileSync(resolve(`@fontsource/figtree/files/figtree-latin-${weight}-normal.woff`))));
       // Renamed into place, so that no one reads half a font.
       const unfinished = `${file}.${process.pid}`;
       writeFileSync(unfinished, whole);

@@ -36,3 +36,32 @@ export function woffToTtf(woff: Buffer): Buffer {
   }
   return Buffer.concat(parts);
 }
+
+const FAMILY = 1;
+
+/**
+ * The same font under the first word of its family's name: `Figtree SemiBold` becomes `Figtree`. Fonts of more than four weights name
+ * each weight a family of its own, and a program that knows families by that name alone finds none of them by weight.
+ */
+export function underFirstName(font: Buffer): Buffer {
+  const renamed = Buffer.from(font);
+  const at = tableAt(renamed, 'name');
+  const texts = at + renamed.readUInt16BE(at + 4);
+  for (let record = 0; record < renamed.readUInt16BE(at + 2); record += 1) {
+    const entry = at + 6 + 12 * record;
+    if (renamed.readUInt16BE(entry + 6) !== FAMILY) continue;
+    const from = texts + renamed.readUInt16BE(entry + 10);
+    const text = renamed.subarray(from, from + renamed.readUInt16BE(entry + 8));
+    const space = text.indexOf(Buffer.from([0, 0x20]));
+    if (space > 0) renamed.writeUInt16BE(space, entry + 8);
+  }
+  return renamed;
+}
+
+function tableAt(font: Buffer, tag: string): number {
+  for (let table = 0; table < font.readUInt16BE(4); table += 1) {
+    const entry = HEADER.sfnt + table * ENTRY.sfnt;
+    if (font.toString('latin1', entry, entry + 4) === tag) return font.readUInt32BE(entry + 8);
+  }
+  throw new Error(`a font without the table ${tag}`);
+}

@@ -3,16 +3,17 @@ import { INCH, keep, type DemoProject } from '../demo-project';
 import { caution, cutList, heading, list, ordered, piece, step, tip, materials, writeUp } from '../write';
 
 const PACKETS = 9;
+/** How far the pattern's picture pulls the drawer out, as a share of its length. */
+const DRAWER_OUT = 0.45;
 
-/** The drawer alone, with packets standing in it on their long edges. */
+/** The drawer alone, with packets standing in it on their long edges and a finger's room behind the last. */
 function filled(pattern: Pattern): Pattern {
   const packets = Array.from({ length: PACKETS }, (_, index): Placement => ({
     piece: 'Packet',
     root: 'front',
-    at: [`inside length * ${(index + 1) / (PACKETS + 1)}`, 'inside width - 3 mm', `inside height * ${index % 3 === 1 ? 0.86 : 0.94}`],
+    at: [`inside length * ${DRAWER_OUT + 0.12 + (0.8 * (PACKETS - index)) / PACKETS}`, 'inside width - 3 mm', `inside height * ${index % 3 === 1 ? 0.86 : 0.94}`],
     across: '-y',
     along: '-z',
-    look: 'pages',
   }));
   return {
     ...pattern,
@@ -27,7 +28,7 @@ function filled(pattern: Pattern): Pattern {
         cells: [['panel front']],
       },
     ],
-    assembly: [...pattern.assembly.filter(({ piece: name }) => name === 'Drawer').map(({ look: _, ...one }) => one), ...packets],
+    assembly: [...pattern.assembly.filter(({ piece: name }) => name === 'Drawer'), ...packets],
   };
 }
 const sleeveAlone = keep((name) => name === 'Sleeve');
@@ -46,15 +47,15 @@ export const packetSleeve: DemoProject = {
       scene: (build) => ({ things: [{ type: 'folded', ...build() }], card: 'kraft', whole: true }),
     },
     filled: {
-      alt: 'The drawer by itself, seen from above, with nine packets standing in it one behind another, a little uneven in height.',
+      alt: 'The cream drawer by itself, seen from above, with nine brown packets standing in it one behind another, a little uneven in height.',
       scene: (build) => ({ things: [{ type: 'folded', tilt: 34, ...build(filled) }], card: 'kraft', words: 'The drawer with packets on edge' }),
     },
     round: {
-      alt: 'The sleeve twice: on the left half folded, its five panels curling up like an open hand; on the right closed to a flat tube, with notches at both open ends.',
+      alt: 'The sleeve twice: on the left almost closed, its panels curling under like a hand; on the right closed to a flat tube, with half-round notches in the wide panels at both open ends.',
       scene: (build) => ({
-        things: [0.5, 1].map((share) => ({ type: 'folded', share, turn: -52, tilt: 24, ...build(sleeveAlone) })),
+        things: [0.72, 1].map((share) => ({ type: 'folded', share, turn: -52, tilt: 24, ...build(sleeveAlone) })),
         card: 'kraft',
-        words: 'The sleeve, half folded and closed',
+        words: 'The sleeve, nearly closed and closed',
       }),
     },
   },
@@ -100,7 +101,7 @@ export const packetSleeve: DemoProject = {
           ),
           step(
             'Thumb notches | if you chose them',
-            'The drawer is pushed out with a thumb, so both wide panels get a half-round bite, [[notch radius]] deep, in the middle of their open ends. Find the middle of each **panel**, [[sleeve width / 2]] from the fold that the drawing names, and not the middle of the whole card.',
+            'The drawer is pushed out with a thumb, so both wide panels get a half-round bite, [[notch radius]] deep, in the middle of their open ends. Find the middle of each **panel**, [[sleeve width / 2]] from the score on its left, and not the middle of the whole card.',
             'Draw all four, hold the flat sleeve up, and fold it together loosely. The notches must look at each other. Only then cut.',
           ),
           heading('Put it together'),
@@ -116,7 +117,7 @@ export const packetSleeve: DemoProject = {
           step(
             'Wrap the sleeve round it, dry',
             'Fold the sleeve round the drawer with no glue, seam underneath. It should close with [[play]] of room in all, across and upwards: enough for a slip of paper on each side.',
-            show('round', 'The sleeve half folded and closed. Closed, it is [[sleeve width]] wide and [[sleeve height]] tall inside.'),
+            show('round', 'The sleeve nearly closed, and closed. Closed, it is [[sleeve width]] wide and [[sleeve height]] tall inside.'),
             list(
               '**Too tight?** Move the last score outwards by the width of your pencil line. The tab loses that much, and can spare it.',
               '**Too loose?** Fold a strip of paper once and glue it along one side of the drawer, outside. That is quicker than a new sleeve.',

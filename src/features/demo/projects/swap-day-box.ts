@@ -1,5 +1,5 @@
 import { keep, type DemoProject, type ShowPicture } from '../demo-project';
-import { caution, cutList, heading, list, ordered, piece, step, tip, materials, writeUp } from '../write';
+import { caution, cutList, heading, list, piece, step, tip, materials, writeUp } from '../write';
 import type { WriteUp } from '@/writeup/document';
 
 const baseAlone = keep((name) => name === 'Base');
@@ -65,7 +65,7 @@ const write = (show: ShowPicture, { lidScore, lidCheck }: { readonly lidScore: s
     step(
       'Slit, fold and glue the lid',
       'Just as the base, with the tabs on the **same pair of walls**: slits from the top and bottom edges of the drawing, [[lid height]] deep. Thick walls then lie over thick walls, and that is what the lid was measured for.',
-      show('both', 'Base and lid, both seen from above, open. The tabs stand at the same two ends of each.'),
+      show('both', 'Base and lid, both lying open. The lid is the lower one, [[lid height]] against [[inside height]], and its tabs lie inside the same pair of walls.'),
     ),
     step(
       'Try the lid',
@@ -86,10 +86,7 @@ const write = (show: ShowPicture, { lidScore, lidCheck }: { readonly lidScore: s
       caution('Beans and large seeds look like sweets. Some seeds are treated, some are poisonous. Keep the box out of the reach of small children, and say on the label what is in it.'),
       caution('No magnets for a catch, please: a small child who swallows them needs a hospital. The lid holds by its own fit.'),
     ),
-    ordered(
-      'Made one? Bring it on swap day and leave the lid **under** the box, not beside it.',
-      'Made two? Give one to somebody who came without.',
-    ),
+    'On swap day, leave the lid **under** the box and not beside it, and nobody goes home with yours.',
   );
 
 export const swapDayBox: DemoProject = {
