@@ -13,7 +13,15 @@ export interface DocNode {
   readonly content: readonly BlockNode[];
 }
 export type BlockNode =
-  | StepNode | ParagraphNode | HeadingNode | ListNode | PieceCardNode | CutListNode | PhotoNode | NoteNode | MaterialsNode;
+  | StepNode
+  | ParagraphNode
+  | HeadingNode
+  | ListNode
+  | PieceCardNode
+  | CutListNode
+  | PhotoNode
+  | NoteNode
+  | MaterialsNode;
 export type InlineNode = TextNode | MeasureNode | { readonly type: 'hardBreak' };
 
 /** A numbered step. `mark` is a few words beside the title, such as "optional". */
@@ -70,4 +78,7 @@ export interface TextNode {
   readonly text: string;
   readonly marks?: readonly MarkNode[];
 }
-export type MarkNode = { readonly type: 'bold' } | { readonly type: 'italic' } | { readonly type: 'link'; readonly attrs: { readonly href: string } };
+export type MarkNode =
+  | { readonly type: 'bold' }
+  | { readonly type: 'italic' }
+  | { readonly type: 'link'; readonly attrs: { readonly href: string } };

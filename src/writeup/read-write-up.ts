@@ -36,12 +36,16 @@ export function readWriteUp(json: unknown): Result<WriteUp> {
   const size = measureUp(json);
   if (size.depth > WRITE_UP_LIMITS.depth) return refuse('too deep', 'Lists lie too deep inside one another');
   if (size.parts > WRITE_UP_LIMITS.parts * 6) return refuse('too many parts', 'The write-up has too many parts');
-  if (size.characters > WRITE_UP_LIMITS.characters) return refuse('too large', `The write-up has ${size.characters} characters`);
+  if (size.characters > WRITE_UP_LIMITS.characters)
+    return refuse('too large', `The write-up has ${size.characters} characters`);
 
   const parsed = shape.safeParse(json);
   if (!parsed.success) {
     const issue = parsed.error.issues[0];
-    return refuse('not a write-up', `What was sent does not read as a write-up (${issue?.path.join(' › ') || 'whole'}: ${issue?.message ?? 'unreadable'})`);
+    return refuse(
+      'not a write-up',
+      `What was sent does not read as a write-up (${issue?.path.join(' › ') || 'whole'}: ${issue?.message ?? 'unreadable'})`,
+    );
   }
   const raw = parsed.data.doc;
   const { nodes, marks } = writeUpSchema();
@@ -70,9 +74,13 @@ export function readWriteUp(json: unknown): Result<WriteUp> {
   }
   for (const part of everyNode(doc.toJSON() as RawNode)) {
     const level = part.attrs?.['level'];
-    if (part.type === 'heading' && level !== 2 && level !== 3) return refuse('wrong value', `A heading of level ${String(level)} was found`);
+    if (part.type === 'heading' && level !== 2 && level !== 3)
+      return refuse('wrong value', `A heading of level ${String(level)} was found`);
     const start = part.attrs?.['start'];
-    if (part.type === 'orderedList' && !(typeof start === 'number' && Number.isInteger(start) && start >= 0 && start < 1_000_000)) {
+    if (
+      part.type === 'orderedList' &&
+      !(typeof start === 'number' && Number.isInteger(start) && start >= 0 && start < 1_000_000)
+    ) {
       return refuse('wrong value', `A list that starts at ${String(start)} was found`);
     }
   }
@@ -113,4 +121,7 @@ function measureUp(json: unknown): { depth: number; parts: number; characters: n
 
 const sentence = (error: unknown) => `A part was refused (${error instanceof Error ? error.message : String(error)})`;
 
-const refuse = (...given: Parameters<typeof writeUpFault>): Result<never> => ({ ok: false, faults: [writeUpFault(...given)] });
+const refuse = (...given: Parameters<typeof writeUpFault>): Result<never> => ({
+  ok: false,
+  faults: [writeUpFault(...given)],
+});

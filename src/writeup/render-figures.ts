@@ -31,7 +31,9 @@ export function renderMeasure(live: LiveFigures, text: LiveText): string {
 export const measureInside = (live: LiveFigures, text: LiveText): string => insideOf(showLive(live, text), text);
 
 function insideOf(shown: Shown | null, { formula }: LiveText): string {
-  return shown ? figure(shown) : `${esc(formula.trim() || 'empty measure')} <small class="unknown-mark">(${NOT_WORKED_OUT})</small>`;
+  return shown
+    ? figure(shown)
+    : `${esc(formula.trim() || 'empty measure')} <small class="unknown-mark">(${NOT_WORKED_OUT})</small>`;
 }
 
 /** A figure to see and the same to hear: a fraction slash is read aloud in a different way by every screen reader. */
@@ -52,7 +54,8 @@ export function pieceCardInside(figures: Figures, name: string, width = CARD_WID
   if (!piece) return `<p class="piece-card-none"><b>${esc(name)}</b> is not part of the box as it is set up now.</p>`;
   const { units, grid } = figures.sizing;
   const drawn = (w: number, name: string) => drawingSvg(drawPiece(piece, { width: w, units, grid }), { class: name });
-  const drawing = width <= PHONE_WIDTH ? drawn(width, '') : drawn(width, 'wide-only') + drawn(PHONE_WIDTH, 'narrow-only');
+  const drawing =
+    width <= PHONE_WIDTH ? drawn(width, '') : drawn(width, 'wide-only') + drawn(PHONE_WIDTH, 'narrow-only');
   const words = piece.instructions.map((sentence) => `<p>${sentenceHtml(sentence, figures.sizing)}</p>`).join('');
   return (
     '<div class="ruled" aria-hidden="true"></div>' +
@@ -81,7 +84,8 @@ export function renderCutList(figures: Figures): string {
 export function cutListInside(figures: Figures): string {
   const { units, grid } = figures.sizing;
   const bare = (mm: number) => figure(show(mm, { units, grid, bare: true }));
-  const scores = (at: readonly number[]) => (at.length === 0 ? '<span class="soft">none</span>' : at.map(bare).join(', '));
+  const scores = (at: readonly number[]) =>
+    at.length === 0 ? '<span class="soft">none</span>' : at.map(bare).join(', ');
   const cells = (piece: PieceFigure) => [
     `${piece.count} <span class="soft">${esc(piece.stock)}</span>`,
     `${bare(piece.across)} × ${figure(show(piece.along, { units, grid }))}`,

@@ -38,7 +38,8 @@ export function renderWriteUp(doc: DocNode, context: RenderContext): string {
     .join('\n');
 }
 
-const blocks = (content: readonly BlockNode[], around: Surroundings): string => content.map((node) => block(node, around)).join('');
+const blocks = (content: readonly BlockNode[], around: Surroundings): string =>
+  content.map((node) => block(node, around)).join('');
 
 function block(node: BlockNode, around: Surroundings): string {
   switch (node.type) {
@@ -103,7 +104,8 @@ function photo({ attrs, content }: PhotoNode, around: Surroundings): string {
   );
 }
 
-const inlines = (content: readonly InlineNode[] | undefined, around: Surroundings): string => (content ?? []).map((node) => inline(node, around)).join('');
+const inlines = (content: readonly InlineNode[] | undefined, around: Surroundings): string =>
+  (content ?? []).map((node) => inline(node, around)).join('');
 
 function inline(node: InlineNode, around: Surroundings): string {
   switch (node.type) {
@@ -122,7 +124,9 @@ function inline(node: InlineNode, around: Surroundings): string {
 const OUTSIDE_IN: readonly MarkNode['type'][] = ['italic', 'bold', 'link'];
 
 const marked = (html: string, marks: readonly MarkNode[] = []): string =>
-  [...marks].sort((a, b) => OUTSIDE_IN.indexOf(a.type) - OUTSIDE_IN.indexOf(b.type)).reduce((inner, mark) => wrap(inner, mark), html);
+  [...marks]
+    .sort((a, b) => OUTSIDE_IN.indexOf(a.type) - OUTSIDE_IN.indexOf(b.type))
+    .reduce((inner, mark) => wrap(inner, mark), html);
 
 function wrap(html: string, mark: MarkNode): string {
   switch (mark.type) {

@@ -30,7 +30,18 @@ export const plainText = StarterKit.configure({
 });
 
 /** Our own nodes and marks, without views: the editor swaps in those with a view, under the same names. */
-export const ownNodes: Extensions = [WholeWriteUp, Step, Measure, PieceCard, CutList, Photo, Tip, Caution, Materials, Link];
+export const ownNodes: Extensions = [
+  WholeWriteUp,
+  Step,
+  Measure,
+  PieceCard,
+  CutList,
+  Photo,
+  Tip,
+  Caution,
+  Materials,
+  Link,
+];
 
 let schema: Schema | undefined;
 

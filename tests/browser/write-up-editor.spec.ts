@@ -19,7 +19,10 @@ const test = base.extend<{ desk: { page: Page; id: string; saved: () => Promise<
       await page.waitForURL('**/workroom');
       signedIn = await page.context().cookies();
     }
-    const made = await page.request.post('/api/projects', { data: { pattern: 'book-box', title: 'Editor at work' }, headers: { origin: baseURL! } });
+    const made = await page.request.post('/api/projects', {
+      data: { pattern: 'book-box', title: 'Editor at work' },
+      headers: { origin: baseURL! },
+    });
     const { id } = (await made.json()) as { id: string };
     await page.goto(`/workroom/${id}`);
     const text = page.getByRole('textbox', { name: 'Write-up', exact: true });
@@ -50,16 +53,24 @@ async function putMeasure(page: Page, query: string) {
   await settle(page);
 }
 
-test('two colons find a measure by name; one goes on typing behind it, and it is saved as its formula', async ({ desk: { page, saved } }) => {
+test('two colons find a measure by name; one goes on typing behind it, and it is saved as its formula', async ({
+  desk: { page, saved },
+}) => {
   await page.keyboard.type('Cut the strip ::');
   await expect(field(page)).toBeFocused();
   await page.keyboard.type('dep');
-  await expect(page.getByRole('listbox', { name: 'Measures' }).getByRole('option').first()).toContainText('inside depth');
+  await expect(page.getByRole('listbox', { name: 'Measures' }).getByRole('option').first()).toContainText(
+    'inside depth',
+  );
   await page.keyboard.press('Enter');
   await settle(page);
   await page.keyboard.type(' wide.');
   await expect(written(page).locator('p').first()).toHaveText('Cut the strip 2\u202f1\u20444\u00a0in wide.');
-  await expect.poll(saved).toContain('{"type":"text","text":"Cut the strip "},{"type":"measure","attrs":{"formula":"inside depth","bare":false}},{"type":"text","text":" wide."}');
+  await expect
+    .poll(saved)
+    .toContain(
+      '{"type":"text","text":"Cut the strip "},{"type":"measure","attrs":{"formula":"inside depth","bare":false}},{"type":"text","text":" wide."}',
+    );
 });
 
 test('Escape leaves two colons as text, with the caret behind them', async ({ desk: { page } }) => {
@@ -71,7 +82,9 @@ test('Escape leaves two colons as text, with the caret behind them', async ({ de
   await expect(written(page).locator('p').first()).toHaveText('Note :: so');
 });
 
-test('arrows stop on a measure; Enter changes it, Backspace removes it, undo brings it back', async ({ desk: { page } }) => {
+test('arrows stop on a measure; Enter changes it, Backspace removes it, undo brings it back', async ({
+  desk: { page },
+}) => {
   await page.keyboard.type('A ');
   await putMeasure(page, 'inside width');
   await page.keyboard.press('ArrowLeft');
@@ -105,7 +118,9 @@ test('a formula that does not read is marked where it stands, with its cure', as
   await expect(written(page).locator('.measure')).toHaveText('3\u202f3\u20448\u00a0in');
 });
 
-test('a step takes what stands behind the caret, its title is typed first, steps change places and come back by undo', async ({ desk: { page, saved } }) => {
+test('a step takes what stands behind the caret, its title is typed first, steps change places and come back by undo', async ({
+  desk: { page, saved },
+}) => {
   await page.keyboard.press('Control+Enter');
   await settle(page);
   await page.keyboard.type('First');
@@ -116,7 +131,8 @@ test('a step takes what stands behind the caret, its title is typed first, steps
   await settle(page);
   await page.keyboard.type('Second');
   await page.keyboard.press('Enter');
-  const titles = () => page.locator('.step-title-field').evaluateAll((fields) => fields.map((f) => (f as HTMLInputElement).value));
+  const titles = () =>
+    page.locator('.step-title-field').evaluateAll((fields) => fields.map((f) => (f as HTMLInputElement).value));
   expect(await titles()).toEqual(['First', 'Second']);
   await expect(page.locator('.step-content')).toHaveText(['Cut it. ', 'Fold it.']);
   await page.waitForTimeout(600);
@@ -130,32 +146,44 @@ test('a step takes what stands behind the caret, its title is typed first, steps
   expect(await titles()).toEqual(['First', 'Second']);
 });
 
-test('a photo stands as a placeholder while one goes on typing, then in its place, and is read from its own address', async ({ desk: { page, saved } }) => {
+test('a photo stands as a placeholder while one goes on typing, then in its place, and is read from its own address', async ({
+  desk: { page, saved },
+}) => {
   await page.keyboard.type('Before');
   await page.keyboard.press('Enter');
-  const picture = await sharp({ create: { width: 900, height: 600, channels: 3, background: '#1b7155' } }).jpeg().toBuffer();
-  await page.locator('.writeup-editor input[type=file]').setInputFiles([{ name: 'strip.jpg', mimeType: 'image/jpeg', buffer: picture }]);
+  const picture = await sharp({ create: { width: 900, height: 600, channels: 3, background: '#1b7155' } })
+    .jpeg()
+    .toBuffer();
+  await page
+    .locator('.writeup-editor input[type=file]')
+    .setInputFiles([{ name: 'strip.jpg', mimeType: 'image/jpeg', buffer: picture }]);
   await page.keyboard.type('after');
   const photo = page.locator('.photo-edited');
   await expect(photo).toHaveCount(1);
   await page.keyboard.type('wards');
   await expect(written(page).locator('> p').last()).toHaveText('afterwards');
   await photo.getByLabel('What the photo shows, in words').fill('A green strip');
-  await expect.poll(() => photo.locator('img').evaluate((image) => (image as HTMLImageElement).naturalWidth)).toBeGreaterThan(0);
+  await expect
+    .poll(() => photo.locator('img').evaluate((image) => (image as HTMLImageElement).naturalWidth))
+    .toBeGreaterThan(0);
   await expect.poll(saved).toContain('"alt":"A green strip","width":900,"height":600');
 });
 
 test('a picture that is not taken says why and can be left out', async ({ desk: { page } }) => {
   await page
     .locator('.writeup-editor input[type=file]')
-    .setInputFiles([{ name: 'drawing.png', mimeType: 'image/png', buffer: Buffer.from('<svg xmlns="http://www.w3.org/2000/svg"/>') }]);
+    .setInputFiles([
+      { name: 'drawing.png', mimeType: 'image/png', buffer: Buffer.from('<svg xmlns="http://www.w3.org/2000/svg"/>') },
+    ]);
   const coming = page.locator('.photo-coming');
   await expect(coming).toContainText('This is an SVG drawing, which may hold programs');
   await coming.getByRole('button', { name: 'Leave it out' }).click();
   await expect(coming).toHaveCount(0);
 });
 
-test("a word processor's text keeps its lists, bold and table lines; pictures from elsewhere and programs in links go", async ({ desk: { page } }) => {
+test("a word processor's text keeps its lists, bold and table lines; pictures from elsewhere and programs in links go", async ({
+  desk: { page },
+}) => {
   const html =
     '<b style="font-weight:normal"><p>Cut <span style="font-weight:700">two</span> <img src="file:///c/x.png">now.</p></b>' +
     "<p class=MsoListParagraph style='mso-list:l0 level1 lfo1'><span style='mso-list:Ignore'>1.</span>One</p>" +
@@ -167,7 +195,9 @@ test("a word processor's text keeps its lists, bold and table lines; pictures fr
   await page.evaluate((pasted) => {
     const clipboardData = new DataTransfer();
     clipboardData.setData('text/html', pasted);
-    document.querySelector('.ProseMirror')?.dispatchEvent(new ClipboardEvent('paste', { clipboardData, bubbles: true, cancelable: true }));
+    document
+      .querySelector('.ProseMirror')
+      ?.dispatchEvent(new ClipboardEvent('paste', { clipboardData, bubbles: true, cancelable: true }));
   }, html);
   const text = written(page);
   await expect(text.locator('strong')).toHaveText(['two']);

@@ -19,15 +19,32 @@ const WENNA = { id: 'wenna', role: 'author' };
 beforeEach(() => {
   testDatabase();
   for (const { id } of [INES, WENNA]) {
-    db.insert(users).values({ id, name: id, email: `${id}@quilletlane.example`, emailKey: `${id}@quilletlane.example`, role: 'author' }).run();
+    db.insert(users)
+      .values({
+        id,
+        name: id,
+        email: `${id}@quilletlane.example`,
+        emailKey: `${id}@quilletlane.example`,
+        role: 'author',
+      })
+      .run();
   }
   const empty = {} as never;
   db.insert(projects)
-    .values({ id: 'seed-box', authorId: INES.id, slug: 'seed-box', title: 'Seed box', pattern: empty, sizing: empty, writeUp: emptyWriteUp() })
+    .values({
+      id: 'seed-box',
+      authorId: INES.id,
+      slug: 'seed-box',
+      title: 'Seed box',
+      pattern: empty,
+      sizing: empty,
+      writeUp: emptyWriteUp(),
+    })
     .run();
 });
 
-const plain = (width: number, height: number) => sharp({ create: { width, height, channels: 3, background: '#6d2e5b' } });
+const plain = (width: number, height: number) =>
+  sharp({ create: { width, height, channels: 3, background: '#6d2e5b' } });
 const jpeg = (width = 640, height = 400) => plain(width, height).jpeg().toBuffer();
 const fileOf = (id: string, ending: string) => join(config.dataDir, 'uploads', `${id}${ending}`);
 const store = (bytes: Uint8Array) => storeUpload({ ownerId: INES.id, projectId: 'seed-box', bytes });
@@ -71,12 +88,17 @@ describe('a picture that is taken', () => {
     const files = readdirSync(join(config.dataDir, 'uploads')).filter((name) => name.startsWith(id));
     expect(files.sort()).toEqual([`${id}-1600.webp`, `${id}-480.webp`, `${id}-960.webp`, `${id}.jpg`]);
     expect(row).toMatchObject({ id, ownerId: 'ines', projectId: 'seed-box', width: 640, height: 400 });
-    expect(row?.bytes).toBe(files.reduce((sum, name) => sum + readFileSync(join(config.dataDir, 'uploads', name)).byteLength, 0));
+    expect(row?.bytes).toBe(
+      files.reduce((sum, name) => sum + readFileSync(join(config.dataDir, 'uploads', name)).byteLength, 0),
+    );
   });
 
   it('loses its EXIF, place and camera, and stands upright', async () => {
     const withPlace = await plain(600, 400)
-      .withExif({ IFD0: { Artist: 'Ines Thornbury', Orientation: '6' }, IFD3: { GPSLatitudeRef: 'N', GPSLatitude: '51/1 30/1 3230/100' } })
+      .withExif({
+        IFD0: { Artist: 'Ines Thornbury', Orientation: '6' },
+        IFD3: { GPSLatitudeRef: 'N', GPSLatitude: '51/1 30/1 3230/100' },
+      })
       .withMetadata({ orientation: 6 })
       .jpeg()
       .toBuffer();
@@ -92,15 +114,33 @@ describe('a picture that is taken', () => {
   });
 
   it('may be a PNG with clear parts: they stay clear in WebP and turn white in the JPEG', async () => {
-    const clear = await sharp({ create: { width: 50, height: 50, channels: 4, background: { r: 0, g: 0, b: 0, alpha: 0 } } }).png().toBuffer();
+    const clear = await sharp({
+      create: { width: 50, height: 50, channels: 4, background: { r: 0, g: 0, b: 0, alpha: 0 } },
+    })
+      .png()
+      .toBuffer();
     const { id } = await stored(clear);
     expect((await sharp(readFileSync(fileOf(id, '-480.webp'))).metadata()).hasAlpha).toBe(true);
-    expect([...(await sharp(readFileSync(fileOf(id, '.jpg'))).raw().toBuffer()).subarray(0, 3)]).toEqual([255, 255, 255]);
+    expect([
+      ...(
+        await sharp(readFileSync(fileOf(id, '.jpg')))
+          .raw()
+          .toBuffer()
+      ).subarray(0, 3),
+    ]).toEqual([255, 255, 255]);
   });
 
   it('keeps the first picture alone of an animation', async () => {
-    const frames = await Promise.all(['#6d2e5b', '#1b7155'].map((background) => sharp({ create: { width: 40, height: 30, channels: 3, background } }).png().toBuffer()));
-    const moving = await sharp(frames, { join: { animated: true } }).webp().toBuffer();
+    const frames = await Promise.all(
+      ['#6d2e5b', '#1b7155'].map((background) =>
+        sharp({ create: { width: 40, height: 30, channels: 3, background } })
+          .png()
+          .toBuffer(),
+      ),
+    );
+    const moving = await sharp(frames, { join: { animated: true } })
+      .webp()
+      .toBuffer();
     expect((await sharp(moving).metadata()).pages).toBe(2);
     const { id, height } = await stored(moving);
     expect(height).toBe(30);
@@ -110,7 +150,8 @@ describe('a picture that is taken', () => {
   it('leaves behind whatever was hung onto the file', async () => {
     const polyglot = Buffer.concat([await jpeg(), Buffer.from('<script>alert(1)</script>PK\u0003\u0004')]);
     const { id } = await stored(polyglot);
-    for (const ending of ['-480.webp', '-960.webp', '-1600.webp', '.jpg']) expect(readFileSync(fileOf(id, ending)).includes('script')).toBe(false);
+    for (const ending of ['-480.webp', '-960.webp', '-1600.webp', '.jpg'])
+      expect(readFileSync(fileOf(id, ending)).includes('script')).toBe(false);
   });
 
   it('that is very tall is kept at most four times as tall as the widest width', async () => {
@@ -122,11 +163,31 @@ describe('a picture that is taken', () => {
 
 describe('a picture that is not taken', () => {
   it.each([
-    ['SVG', Buffer.from('<?xml version="1.0"?><svg xmlns="http://www.w3.org/2000/svg"><script>alert(1)</script></svg>'), 'This is an SVG drawing, which may hold programs; wanted is a JPEG, PNG or WebP picture. Save it as JPEG, PNG or WebP and send that.'],
-    ['HEIC', Buffer.from('\0\0\0\x18ftypheic\0\0\0\0', 'latin1'), 'This is a HEIC photo, as some phones keep them; it cannot be read here; wanted is a JPEG, PNG or WebP picture. On the phone, share it as JPEG (“most compatible”), or send a screenshot of it.'],
-    ['GIF', Buffer.from('GIF89a\x01\x00\x01\x00', 'latin1'), 'This is a GIF, which holds animation and few colours; wanted is a JPEG, PNG or WebP picture. Save it as JPEG, PNG or WebP and send that.'],
-    ['PDF', Buffer.from('%PDF-1.7\n'), 'This is a PDF document; wanted is a JPEG, PNG or WebP picture. Save it as JPEG, PNG or WebP and send that.'],
-    ['page', Buffer.from('<!doctype html><p>hello'), 'This file is not a picture that is known here; wanted is a JPEG, PNG or WebP picture. Save it as JPEG, PNG or WebP and send that.'],
+    [
+      'SVG',
+      Buffer.from('<?xml version="1.0"?><svg xmlns="http://www.w3.org/2000/svg"><script>alert(1)</script></svg>'),
+      'This is an SVG drawing, which may hold programs; wanted is a JPEG, PNG or WebP picture. Save it as JPEG, PNG or WebP and send that.',
+    ],
+    [
+      'HEIC',
+      Buffer.from('\0\0\0\x18ftypheic\0\0\0\0', 'latin1'),
+      'This is a HEIC photo, as some phones keep them; it cannot be read here; wanted is a JPEG, PNG or WebP picture. On the phone, share it as JPEG (“most compatible”), or send a screenshot of it.',
+    ],
+    [
+      'GIF',
+      Buffer.from('GIF89a\x01\x00\x01\x00', 'latin1'),
+      'This is a GIF, which holds animation and few colours; wanted is a JPEG, PNG or WebP picture. Save it as JPEG, PNG or WebP and send that.',
+    ],
+    [
+      'PDF',
+      Buffer.from('%PDF-1.7\n'),
+      'This is a PDF document; wanted is a JPEG, PNG or WebP picture. Save it as JPEG, PNG or WebP and send that.',
+    ],
+    [
+      'page',
+      Buffer.from('<!doctype html><p>hello'),
+      'This file is not a picture that is known here; wanted is a JPEG, PNG or WebP picture. Save it as JPEG, PNG or WebP and send that.',
+    ],
     ['nothing', Buffer.alloc(0), 'The file is empty; wanted is a picture. Choose another file.'],
   ])('names %s and says what to do', async (_, bytes, sentence) => {
     expect(await sentenceFor(bytes)).toBe(sentence);
@@ -134,7 +195,17 @@ describe('a picture that is not taken', () => {
   });
 
   it('is cut short', async () => {
-    const whole = await sharp({ create: { width: 800, height: 800, channels: 3, background: '#000', noise: { type: 'gaussian', mean: 128, sigma: 40 } } }).jpeg().toBuffer();
+    const whole = await sharp({
+      create: {
+        width: 800,
+        height: 800,
+        channels: 3,
+        background: '#000',
+        noise: { type: 'gaussian', mean: 128, sigma: 40 },
+      },
+    })
+      .jpeg()
+      .toBuffer();
     expect(await sentenceFor(whole.subarray(0, whole.length / 2))).toBe(
       'The picture is damaged or cut short; wanted is a whole picture. Open it on your machine, save it again, and send that.',
     );
@@ -142,17 +213,24 @@ describe('a picture that is not taken', () => {
 
   it('is larger than 12 MB', async () => {
     const bytes = Buffer.concat([await jpeg(), Buffer.alloc(PICTURE_LIMITS.bytes)]);
-    expect(await sentenceFor(bytes)).toBe('The file has 12.1 MB; wanted is at most 12 MB. Make it smaller, or save it as JPEG.');
+    expect(await sentenceFor(bytes)).toBe(
+      'The file has 12.1 MB; wanted is at most 12 MB. Make it smaller, or save it as JPEG.',
+    );
   });
 
   it('has more pixels than 40 million, however few bytes they take', async () => {
     const bomb = await plain(7000, 6000).png().toBuffer();
     expect(bomb.byteLength).toBeLessThan(PICTURE_LIMITS.bytes);
-    expect(await sentenceFor(bomb)).toBe('The picture has too many pixels; wanted is at most 40 million pixels. Scale it down and send it again.');
+    expect(await sentenceFor(bomb)).toBe(
+      'The picture has too many pixels; wanted is at most 40 million pixels. Scale it down and send it again.',
+    );
   });
 
   it('is an SVG behind the first bytes of a PNG', async () => {
-    const mask = Buffer.concat([Buffer.from('\x89PNG\r\n\x1a\n', 'latin1'), Buffer.from('<svg xmlns="http://www.w3.org/2000/svg"/>')]);
+    const mask = Buffer.concat([
+      Buffer.from('\x89PNG\r\n\x1a\n', 'latin1'),
+      Buffer.from('<svg xmlns="http://www.w3.org/2000/svg"/>'),
+    ]);
     expect(await sentenceFor(mask)).toMatch(/^The picture is damaged or cut short/);
   });
 });
@@ -183,26 +261,45 @@ describe('POST /api/uploads', () => {
         sent += 1;
       },
     });
-    const init = { method: 'POST', body, duplex: 'half', headers: { 'content-type': 'multipart/form-data; boundary=x' } };
+    const init = {
+      method: 'POST',
+      body,
+      duplex: 'half',
+      headers: { 'content-type': 'multipart/form-data; boundary=x' },
+    };
     const response = await receiveUpload(new Request('http://localhost/api/uploads', init as RequestInit), INES);
     expect(response.status).toBe(413);
     expect(sent).toBeLessThan(16);
-    expect(await response.json()).toMatchObject({ code: 'too-large', detail: 'The file is larger than 12 MB. Make it smaller, or save it as JPEG.' });
+    expect(await response.json()).toMatchObject({
+      code: 'too-large',
+      detail: 'The file is larger than 12 MB. Make it smaller, or save it as JPEG.',
+    });
   });
 
   it('answers 415 for what is no form or no picture, and 422 for a form without one', async () => {
-    const text = new Request('http://localhost/api/uploads', { method: 'POST', body: '{}', headers: { 'content-type': 'application/json' } });
+    const text = new Request('http://localhost/api/uploads', {
+      method: 'POST',
+      body: '{}',
+      headers: { 'content-type': 'application/json' },
+    });
     expect((await receiveUpload(text, INES)).status).toBe(415);
     const disguised = await receiveUpload(form(Buffer.from('<svg/>'), { name: 'photo.png' }), INES);
     expect(disguised.status).toBe(415);
     expect(disguised.headers.get('content-type')).toMatch('application/problem+json');
     const nothing = new FormData();
     nothing.set('project', 'seed-box');
-    expect((await receiveUpload(new Request('http://localhost/api/uploads', { method: 'POST', body: nothing }), INES)).status).toBe(422);
+    expect(
+      (await receiveUpload(new Request('http://localhost/api/uploads', { method: 'POST', body: nothing }), INES))
+        .status,
+    ).toBe(422);
   });
 
   it('answers 400 for a form that is cut short', async () => {
-    const init = { method: 'POST', body: '--x\r\nContent-Disposition: form-data; name="pro', headers: { 'content-type': 'multipart/form-data; boundary=x' } };
+    const init = {
+      method: 'POST',
+      body: '--x\r\nContent-Disposition: form-data; name="pro',
+      headers: { 'content-type': 'multipart/form-data; boundary=x' },
+    };
     expect((await receiveUpload(new Request('http://localhost/api/uploads', init), INES)).status).toBe(400);
   });
 
@@ -217,7 +314,12 @@ describe('POST /api/uploads', () => {
 describe('GET /media/…', () => {
   it('serves each file for ever, as a picture and nothing else', async () => {
     const { id } = await stored(await jpeg());
-    for (const [ending, type] of [['-480.webp', 'image/webp'], ['-960.webp', 'image/webp'], ['-1600.webp', 'image/webp'], ['.jpg', 'image/jpeg']] as const) {
+    for (const [ending, type] of [
+      ['-480.webp', 'image/webp'],
+      ['-960.webp', 'image/webp'],
+      ['-1600.webp', 'image/webp'],
+      ['.jpg', 'image/jpeg'],
+    ] as const) {
       const response = await servePicture(`${id}${ending}`);
       expect(response.status).toBe(200);
       expect(response.headers.get('content-type')).toBe(type);
@@ -227,13 +329,18 @@ describe('GET /media/…', () => {
     }
   });
 
-  it.each(['../secret', '..%2fsecret', 'secret', `${'a'.repeat(24)}-481.webp`, `${'a'.repeat(24)}.png`, `${'a'.repeat(24)}.jpg`, ''])(
-    'answers 404 for %j and is not kept',
-    async (name) => {
-      const response = await servePicture(name);
-      expect(response.status).toBe(404);
-      expect(response.headers.get('cache-control')).toBe('no-store');
-      expect(existsSync(join(config.dataDir, 'uploads', name || 'nothing'))).toBe(false);
-    },
-  );
+  it.each([
+    '../secret',
+    '..%2fsecret',
+    'secret',
+    `${'a'.repeat(24)}-481.webp`,
+    `${'a'.repeat(24)}.png`,
+    `${'a'.repeat(24)}.jpg`,
+    '',
+  ])('answers 404 for %j and is not kept', async (name) => {
+    const response = await servePicture(name);
+    expect(response.status).toBe(404);
+    expect(response.headers.get('cache-control')).toBe('no-store');
+    expect(existsSync(join(config.dataDir, 'uploads', name || 'nothing'))).toBe(false);
+  });
 });

@@ -11,14 +11,33 @@ const measures: Pattern['measures'] = [
   { name: 'floor across', formula: 'inside depth + 2 * tab' },
 ];
 const pattern: Pattern = {
-  format: 1, slug: 'strip', name: 'Strip', summary: 'A strip.', group: 'Trays', measures, choices: [],
-  pieces: [{ name: 'Strip', stock: 'card', builder: 'grid', columns: [{ name: 'middle', size: 'inside width' }], rows: [{ name: 'row', size: '2 in' }], cells: [['panel middle']] }],
-  fits: [], finished: { inside: [], outside: [] }, order: [], assembly: [{ piece: 'Strip', root: 'middle', at: ['0 in', '0 in', '0 in'], across: '+x', along: '-y' }],
+  format: 1,
+  slug: 'strip',
+  name: 'Strip',
+  summary: 'A strip.',
+  group: 'Trays',
+  measures,
+  choices: [],
+  pieces: [
+    {
+      name: 'Strip',
+      stock: 'card',
+      builder: 'grid',
+      columns: [{ name: 'middle', size: 'inside width' }],
+      rows: [{ name: 'row', size: '2 in' }],
+      cells: [['panel middle']],
+    },
+  ],
+  fits: [],
+  finished: { inside: [], outside: [] },
+  order: [],
+  assembly: [{ piece: 'Strip', root: 'middle', at: ['0 in', '0 in', '0 in'], across: '+x', along: '-y' }],
 };
 const compiled = compilePattern(pattern);
 if (!compiled.ok) throw new Error(JSON.stringify(compiled.faults));
 const live = { model: compiled.value, figures: evaluate(compiled.value, usualSizing(compiled.value)) };
-const found = (typed: string, bare = false) => measureOptions(live, typed, bare).options.map(({ formula, completes }) => completes ?? formula);
+const found = (typed: string, bare = false) =>
+  measureOptions(live, typed, bare).options.map(({ formula, completes }) => completes ?? formula);
 
 describe('the measure field', () => {
   it('offers every measure before anything is typed, with its figure as the reader sees it', () => {
@@ -52,7 +71,11 @@ describe('the measure field', () => {
   });
 
   it('takes a formula that reads, with its figure', () => {
-    expect(measureOptions(live, 'arc + 2 * tab', false).options[0]).toEqual({ formula: 'arc + 2 * tab', shown: '3\u202f3\u20448\u00a0in', is: 'formula' });
+    expect(measureOptions(live, 'arc + 2 * tab', false).options[0]).toEqual({
+      formula: 'arc + 2 * tab',
+      shown: '3\u202f3\u20448\u00a0in',
+      is: 'formula',
+    });
   });
 
   it('goes on from the last word of a formula', () => {

@@ -6,7 +6,11 @@ import { sample } from './sample';
 
 const doc = (...content: unknown[]) => ({ version: 1, doc: { type: 'doc', content } });
 const paragraph = (...content: unknown[]) => ({ type: 'paragraph', content });
-const text = (words: string, ...marks: unknown[]) => ({ type: 'text', text: words, ...(marks.length > 0 ? { marks } : {}) });
+const text = (words: string, ...marks: unknown[]) => ({
+  type: 'text',
+  text: words,
+  ...(marks.length > 0 ? { marks } : {}),
+});
 function refusal(json: unknown): string {
   const read = readWriteUp(json);
   if (read.ok) throw new Error('It was taken.');
@@ -25,21 +29,44 @@ describe('a write-up that is taken', () => {
   });
 
   it('loses attributes that the schema does not know, and nothing else', () => {
-    const strange = doc({ type: 'step', attrs: { title: 'A', mark: '', style: 'position:fixed', onclick: 'x' }, content: [{ type: 'paragraph' }] });
+    const strange = doc({
+      type: 'step',
+      attrs: { title: 'A', mark: '', style: 'position:fixed', onclick: 'x' },
+      content: [{ type: 'paragraph' }],
+    });
     expect(readWriteUp(strange)).toEqual({
       ok: true,
-      value: { version: 1, doc: { type: 'doc', content: [{ type: 'step', attrs: { title: 'A', mark: '' }, content: [{ type: 'paragraph' }] }] } },
+      value: {
+        version: 1,
+        doc: {
+          type: 'doc',
+          content: [{ type: 'step', attrs: { title: 'A', mark: '' }, content: [{ type: 'paragraph' }] }],
+        },
+      },
     });
   });
 
   it('takes lists as the editor gives them, and keeps their start only when it says something', () => {
-    const list = (start: number) => ({ type: 'orderedList', attrs: { start, type: null }, content: [{ type: 'listItem', content: [{ type: 'paragraph' }] }] });
+    const list = (start: number) => ({
+      type: 'orderedList',
+      attrs: { start, type: null },
+      content: [{ type: 'listItem', content: [{ type: 'paragraph' }] }],
+    });
     const read = readWriteUp(doc(list(1), list(4)));
-    expect(read.ok && read.value.doc.content.map((node) => ('attrs' in node ? node.attrs : undefined))).toEqual([undefined, { start: 4 }]);
+    expect(read.ok && read.value.doc.content.map((node) => ('attrs' in node ? node.attrs : undefined))).toEqual([
+      undefined,
+      { start: 4 },
+    ]);
   });
 
   it('may link to https, http, mailto and places on the site', () => {
-    for (const href of ['https://a.example/b?c=d', 'http://a.example', 'mailto:ines@quilletlane.example', '/handbook/scoring', '#step-2']) {
+    for (const href of [
+      'https://a.example/b?c=d',
+      'http://a.example',
+      'mailto:ines@quilletlane.example',
+      '/handbook/scoring',
+      '#step-2',
+    ]) {
       expect(code(doc(paragraph(text('x', { type: 'link', attrs: { href } }))))).toBe('ok');
     }
   });
@@ -48,9 +75,18 @@ describe('a write-up that is taken', () => {
 it('may hold eight lists one inside the other, in a step, with a linked word in the innermost', () => {
   const nested = (levels: number): unknown => ({
     type: 'bulletList',
-    content: [{ type: 'listItem', content: [paragraph(text('x', { type: 'link', attrs: { href: 'https://a.example' } })), ...(levels > 1 ? [nested(levels - 1)] : [])] }],
+    content: [
+      {
+        type: 'listItem',
+        content: [
+          paragraph(text('x', { type: 'link', attrs: { href: 'https://a.example' } })),
+          ...(levels > 1 ? [nested(levels - 1)] : []),
+        ],
+      },
+    ],
   });
-  const inStep = (levels: number) => doc({ type: 'step', attrs: { title: '', mark: '' }, content: [{ type: 'paragraph' }, nested(levels)] });
+  const inStep = (levels: number) =>
+    doc({ type: 'step', attrs: { title: '', mark: '' }, content: [{ type: 'paragraph' }, nested(levels)] });
   expect(code(inStep(8))).toBe('ok');
   expect(code(inStep(9))).toBe('too deep');
 });
@@ -61,7 +97,10 @@ describe('a write-up that is refused', () => {
     ['a text', 'doc'],
     ['another version', { version: 2, doc: { type: 'doc', content: [] } }],
     ['a paragraph as the whole', { version: 1, doc: { type: 'paragraph' } }],
-    ['attributes that are objects', doc({ type: 'step', attrs: { title: { html: '<b>' } }, content: [{ type: 'paragraph' }] })],
+    [
+      'attributes that are objects',
+      doc({ type: 'step', attrs: { title: { html: '<b>' } }, content: [{ type: 'paragraph' }] }),
+    ],
   ])('is %s', (_, json) => {
     expect(code(json)).toBe('not a write-up');
   });
@@ -87,26 +126,52 @@ describe('a write-up that is refused', () => {
   it.each([
     ['a link that is a program', paragraph(text('x', { type: 'link', attrs: { href: 'javascript:alert(1)' } }))],
     ['a link hidden by spaces', paragraph(text('x', { type: 'link', attrs: { href: 'java\nscript:alert(1)' } }))],
-    ['a link to another host without a scheme', paragraph(text('x', { type: 'link', attrs: { href: '//other.example' } }))],
-    ['a link to another host by a backslash', paragraph(text('x', { type: 'link', attrs: { href: '/\\other.example' } }))],
+    [
+      'a link to another host without a scheme',
+      paragraph(text('x', { type: 'link', attrs: { href: '//other.example' } })),
+    ],
+    [
+      'a link to another host by a backslash',
+      paragraph(text('x', { type: 'link', attrs: { href: '/\\other.example' } })),
+    ],
     ['data in a link', paragraph(text('x', { type: 'link', attrs: { href: 'data:text/html,x' } }))],
     ['a link to nowhere', paragraph(text('x', { type: 'link' }))],
     ['a heading of level 1', { type: 'heading', attrs: { level: 1 }, content: [text('x')] }],
     ['a heading of no level', { type: 'heading', attrs: { level: '2"><script>' }, content: [text('x')] }],
-    ['a formula of more than 300 characters', paragraph({ type: 'measure', attrs: { formula: 'a'.repeat(301), bare: false } })],
-    ['a measure whose unit is neither kept nor left', paragraph({ type: 'measure', attrs: { formula: 'tab', bare: 'yes' } })],
-    ['a picture with a path for an id', { type: 'photo', attrs: { upload: '../../secret', alt: '', width: 1, height: 1 } }],
+    [
+      'a formula of more than 300 characters',
+      paragraph({ type: 'measure', attrs: { formula: 'a'.repeat(301), bare: false } }),
+    ],
+    [
+      'a measure whose unit is neither kept nor left',
+      paragraph({ type: 'measure', attrs: { formula: 'tab', bare: 'yes' } }),
+    ],
+    [
+      'a picture with a path for an id',
+      { type: 'photo', attrs: { upload: '../../secret', alt: '', width: 1, height: 1 } },
+    ],
     ['a picture of no size', { type: 'photo', attrs: { upload: 'abc', alt: '', width: 0, height: 1 } }],
-    ['a picture that is not whole pixels wide', { type: 'photo', attrs: { upload: 'abc', alt: '', width: 1.5, height: 1 } }],
-    ['a title of more than 200 characters', { type: 'step', attrs: { title: 'a'.repeat(201), mark: '' }, content: [{ type: 'paragraph' }] }],
-    ['a list that starts in the middle of a number', { type: 'orderedList', attrs: { start: 1.5 }, content: [{ type: 'listItem', content: [{ type: 'paragraph' }] }] }],
+    [
+      'a picture that is not whole pixels wide',
+      { type: 'photo', attrs: { upload: 'abc', alt: '', width: 1.5, height: 1 } },
+    ],
+    [
+      'a title of more than 200 characters',
+      { type: 'step', attrs: { title: 'a'.repeat(201), mark: '' }, content: [{ type: 'paragraph' }] },
+    ],
+    [
+      'a list that starts in the middle of a number',
+      { type: 'orderedList', attrs: { start: 1.5 }, content: [{ type: 'listItem', content: [{ type: 'paragraph' }] }] },
+    ],
     ['an empty text', paragraph(text(''))],
   ])('has %s', (_, node) => {
     expect(code(doc(node))).toBe('wrong value');
   });
 
   it('is too long', () => {
-    expect(refusal(doc(paragraph(text('a'.repeat(500_001)))))).toMatch(/^The write-up has 500\d\d\d characters: wanted is at most 500,000 characters, pictures apart\./);
+    expect(refusal(doc(paragraph(text('a'.repeat(500_001)))))).toMatch(
+      /^The write-up has 500\d\d\d characters: wanted is at most 500,000 characters, pictures apart\./,
+    );
   });
 
   it('has too many parts', () => {
@@ -116,7 +181,8 @@ describe('a write-up that is refused', () => {
 
   it('lies too deep, however deep that is', () => {
     let deep: unknown = { type: 'paragraph' };
-    for (let n = 0; n < 100_000; n += 1) deep = { type: 'bulletList', content: [{ type: 'listItem', content: [deep] }] };
+    for (let n = 0; n < 100_000; n += 1)
+      deep = { type: 'bulletList', content: [{ type: 'listItem', content: [deep] }] };
     expect(refusal(doc(deep))).toBe(
       'Lists lie too deep inside one another: wanted is at most 8 levels of lists inside lists. Take the innermost lists out one level.',
     );

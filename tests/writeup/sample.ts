@@ -5,7 +5,15 @@ export const sampleDoc: DocNode = {
   type: 'doc',
   content: [
     { type: 'heading', attrs: { level: 2 }, content: [{ type: 'text', text: 'Cut & score' }] },
-    { type: 'materials', content: [{ type: 'bulletList', content: [{ type: 'listItem', content: [{ type: 'paragraph', content: [{ type: 'text', text: 'Card' }] }] }] }] },
+    {
+      type: 'materials',
+      content: [
+        {
+          type: 'bulletList',
+          content: [{ type: 'listItem', content: [{ type: 'paragraph', content: [{ type: 'text', text: 'Card' }] }] }],
+        },
+      ],
+    },
     { type: 'cutList' },
     {
       type: 'step',
@@ -20,16 +28,27 @@ export const sampleDoc: DocNode = {
             { type: 'measure', attrs: { formula: 'tab', bare: true } },
             { type: 'text', marks: [{ type: 'bold' }], text: ' twice' },
             { type: 'hardBreak' },
-            { type: 'text', marks: [{ type: 'link', attrs: { href: 'https://quilletlane.example/card' } }, { type: 'italic' }], text: 'which card' },
+            {
+              type: 'text',
+              marks: [{ type: 'link', attrs: { href: 'https://quilletlane.example/card' } }, { type: 'italic' }],
+              text: 'which card',
+            },
           ],
         },
         { type: 'heading', attrs: { level: 3 }, content: [{ type: 'text', text: 'Scores' }] },
-        { type: 'orderedList', attrs: { start: 3 }, content: [{ type: 'listItem', content: [{ type: 'paragraph', content: [{ type: 'text', text: 'Score' }] }] }] },
+        {
+          type: 'orderedList',
+          attrs: { start: 3 },
+          content: [{ type: 'listItem', content: [{ type: 'paragraph', content: [{ type: 'text', text: 'Score' }] }] }],
+        },
         { type: 'pieceCard', attrs: { piece: 'Strip' } },
         {
           type: 'photo',
           attrs: { upload: 'a1b2c3', alt: 'A strip', width: 700, height: 500 },
-          content: [{ type: 'text', text: 'The strip is ' }, { type: 'measure', attrs: { formula: 'tab', bare: false } }],
+          content: [
+            { type: 'text', text: 'The strip is ' },
+            { type: 'measure', attrs: { formula: 'tab', bare: false } },
+          ],
         },
         { type: 'tip', content: [{ type: 'paragraph', content: [{ type: 'text', text: 'Burnish.' }] }] },
         { type: 'caution', content: [{ type: 'paragraph', content: [{ type: 'text', text: 'Mind the blade.' }] }] },

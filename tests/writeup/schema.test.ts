@@ -8,9 +8,24 @@ import { sampleDoc } from './sample';
 describe('the schema', () => {
   it('holds the kinds of parts and marks of the stored contract and no others', () => {
     const { nodes, marks } = writeUpSchema();
-    expect(Object.keys(nodes).sort()).toEqual(
-      ['bulletList', 'caution', 'cutList', 'doc', 'hardBreak', 'heading', 'listItem', 'materials', 'measure', 'orderedList', 'paragraph', 'photo', 'pieceCard', 'step', 'text', 'tip'],
-    );
+    expect(Object.keys(nodes).sort()).toEqual([
+      'bulletList',
+      'caution',
+      'cutList',
+      'doc',
+      'hardBreak',
+      'heading',
+      'listItem',
+      'materials',
+      'measure',
+      'orderedList',
+      'paragraph',
+      'photo',
+      'pieceCard',
+      'step',
+      'text',
+      'tip',
+    ]);
     expect(Object.keys(marks).sort()).toEqual(['bold', 'italic', 'link']);
   });
 
@@ -22,7 +37,9 @@ describe('the schema', () => {
 
   it('reads as plain text with the formulas of its measures', () => {
     const doc = writeUpSchema().nodeFromJSON(sampleDoc);
-    expect(doc.textBetween(0, doc.content.size, '\n', (leaf) => leaf.type.spec['toText']?.({ node: leaf }) ?? '')).toContain('Cut inside width + 2 * tab and tab twice');
+    expect(
+      doc.textBetween(0, doc.content.size, '\n', (leaf) => leaf.type.spec['toText']?.({ node: leaf }) ?? ''),
+    ).toContain('Cut inside width + 2 * tab and tab twice');
   });
 });
 

@@ -31,7 +31,11 @@ export async function reEncode(bytes: Uint8Array): Promise<ReEncoded> {
   const narrowed = (width: number) => upright().resize({ width, withoutEnlargement: true });
 
   const files = new Map<PictureFile, Uint8Array>();
-  for (const width of PICTURE_WIDTHS) files.set(`${width}.webp`, await narrowed(width).webp({ quality: 78 }).toBuffer());
-  files.set('jpg', await narrowed(1200).flatten({ background: '#ffffff' }).jpeg({ quality: 80, mozjpeg: true }).toBuffer());
+  for (const width of PICTURE_WIDTHS)
+    files.set(`${width}.webp`, await narrowed(width).webp({ quality: 78 }).toBuffer());
+  files.set(
+    'jpg',
+    await narrowed(1200).flatten({ background: '#ffffff' }).jpeg({ quality: 80, mozjpeg: true }).toBuffer(),
+  );
   return { width: info.width, height: info.height, files };
 }

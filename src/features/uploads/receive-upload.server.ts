@@ -18,7 +18,10 @@ const STATUS: Record<string, number> = { 'too-large': 413, 'wrong-kind': 415, 'p
 export async function receiveUpload(request: Request, user: { id: string; role: string }): Promise<Response> {
   const type = request.headers.get('content-type') ?? '';
   if (!/^multipart\/form-data\s*;/i.test(type)) {
-    return problem(415, 'Not a form with a picture', { detail: 'Send the picture as multipart/form-data.', code: 'not-multipart' });
+    return problem(415, 'Not a form with a picture', {
+      detail: 'Send the picture as multipart/form-data.',
+      code: 'not-multipart',
+    });
   }
   const body = await readBytes(request, PICTURE_LIMITS.bytes + FRAME);
   if (!body) {
@@ -29,12 +32,18 @@ export async function receiveUpload(request: Request, user: { id: string; role: 
   try {
     form = await new Response(body as BodyInit, { headers: { 'content-type': type } }).formData();
   } catch {
-    return problem(400, 'The form does not read', { detail: 'What was sent was cut short. Send the picture again.', code: 'bad-form' });
+    return problem(400, 'The form does not read', {
+      detail: 'What was sent was cut short. Send the picture again.',
+      code: 'bad-form',
+    });
   }
   const projectId = form.get('project');
   const picture = form.get('picture');
   if (typeof projectId !== 'string' || !(picture instanceof File)) {
-    return problem(422, 'Something is missing', { detail: 'The form needs a “project” and a “picture” file.', code: 'does-not-fit' });
+    return problem(422, 'Something is missing', {
+      detail: 'The form needs a “project” and a “picture” file.',
+      code: 'does-not-fit',
+    });
   }
   if (!mayAddTo(projectId, user)) {
     return problem(404, 'No such project', { detail: 'There is no such project among yours.', code: 'not-found' });
@@ -42,10 +51,19 @@ export async function receiveUpload(request: Request, user: { id: string; role: 
   const stored = await storeUpload({ ownerId: user.id, projectId, bytes: new Uint8Array(await picture.arrayBuffer()) });
   if (stored.ok) return json(stored.value, { status: 201 });
   const fault = stored.faults[0] ?? pictureFaults.unreadable();
-  return problem(STATUS[fault.code] ?? 422, 'The picture was not taken', { detail: explainPictureFault(fault), code: fault.code });
+  return problem(STATUS[fault.code] ?? 422, 'The picture was not taken', {
+    detail: explainPictureFault(fault),
+    code: fault.code,
+  });
 }
 
 function mayAddTo(projectId: string, user: { id: string; role: string }): boolean {
   const mine = user.role === 'admin' ? undefined : eq(projects.authorId, user.id);
-  return db.select({ id: projects.id }).from(projects).where(and(eq(projects.id, projectId), isNull(projects.deletedAt), mine)).get() !== undefined;
+  return (
+    db
+      .select({ id: projects.id })
+      .from(projects)
+      .where(and(eq(projects.id, projectId), isNull(projects.deletedAt), mine))
+      .get() !== undefined
+  );
 }

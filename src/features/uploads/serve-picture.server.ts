@@ -10,7 +10,11 @@ const NAME = /^([a-f0-9]{24})(?:-(480\.webp|960\.webp|1600\.webp)|\.(jpg))$/;
 export async function servePicture(name: string): Promise<Response> {
   const [, id, webp, jpg] = NAME.exec(name) ?? [];
   const found = id ? await openPictureFile(id, (webp ?? jpg) as PictureFile) : null;
-  if (!found) return new Response('There is no such picture.', { status: 404, headers: { 'content-type': 'text/plain; charset=utf-8', 'cache-control': 'no-store' } });
+  if (!found)
+    return new Response('There is no such picture.', {
+      status: 404,
+      headers: { 'content-type': 'text/plain; charset=utf-8', 'cache-control': 'no-store' },
+    });
   return new Response(Readable.toWeb(found.stream) as ReadableStream, {
     headers: {
       'content-type': jpg ? 'image/jpeg' : 'image/webp',

@@ -39,7 +39,10 @@ export async function dropPictureFiles(id: string): Promise<void> {
 }
 
 /** A stored file to read from, with its length; null when there is none. */
-export async function openPictureFile(id: string, file: PictureFile): Promise<{ stream: ReadStream; length: number } | null> {
+export async function openPictureFile(
+  id: string,
+  file: PictureFile,
+): Promise<{ stream: ReadStream; length: number } | null> {
   if (!ID.test(id)) return null;
   const path = pathOf(id, file);
   const found = await stat(path).catch(() => null);

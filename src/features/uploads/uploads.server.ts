@@ -46,10 +46,16 @@ function refuseFullProject(projectId: string): Fault | null {
   return (kept?.n ?? 0) >= PICTURE_LIMITS.perProject ? pictureFaults.projectFull() : null;
 }
 
-async function encodeAndKeep(given: { ownerId: string; projectId: string | null; bytes: Uint8Array }): Promise<Result<StoredUpload>> {
+async function encodeAndKeep(given: {
+  ownerId: string;
+  projectId: string | null;
+  bytes: Uint8Array;
+}): Promise<Result<StoredUpload>> {
   const encoded = await reEncode(given.bytes).catch((error: unknown) => {
     const message = error instanceof Error ? error.message : '';
-    return /pixel limit|dimensions|too large/i.test(message) ? pictureFaults.tooManyPixels() : pictureFaults.unreadable();
+    return /pixel limit|dimensions|too large/i.test(message)
+      ? pictureFaults.tooManyPixels()
+      : pictureFaults.unreadable();
   });
   if (!('files' in encoded)) return refused(encoded);
 

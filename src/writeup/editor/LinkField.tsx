@@ -41,7 +41,8 @@ export function LinkField({ href, onTake, onRemove }: LinkFieldProps) {
       <div aria-live="polite">
         {refused ? (
           <p className="error" id={`${id}-error`}>
-            Not an address that can be linked. Give one that begins with https, an e-mail address, or a place on this site such as /handbook.
+            Not an address that can be linked. Give one that begins with https, an e-mail address, or a place on this
+            site such as /handbook.
           </p>
         ) : null}
       </div>

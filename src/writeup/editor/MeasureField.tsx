@@ -71,7 +71,11 @@ export function MeasureField({ live, begin, changing, onTake }: MeasureFieldProp
             <FaultPlace typed={typed} span={fault.span} />
             <p>{explain(fault)}</p>
             {fault.cure !== undefined && fault.span ? (
-              <button type="button" className="btn small-btn" onClick={() => type(cured(typed, fault.span, fault.cure))}>
+              <button
+                type="button"
+                className="btn small-btn"
+                onClick={() => type(cured(typed, fault.span, fault.cure))}
+              >
                 Use {fault.cure}
               </button>
             ) : null}
@@ -93,7 +97,9 @@ export function MeasureField({ live, begin, changing, onTake }: MeasureFieldProp
             onClick={() => take(option)}
           >
             <span className="measure-option-name">{option.completes ?? option.formula}</span>
-            <span className="measure-option-figure">{option.completes === undefined ? (option.shown ?? 'no value at this size') : 'go on'}</span>
+            <span className="measure-option-figure">
+              {option.completes === undefined ? (option.shown ?? 'no value at this size') : 'go on'}
+            </span>
             <small>{IS[option.is]}</small>
           </li>
         ))}
@@ -112,7 +118,13 @@ export function MeasureField({ live, begin, changing, onTake }: MeasureFieldProp
 }
 
 /** The typed text with what does not read underlined, and a caret below where it begins. */
-function FaultPlace({ typed, span }: { readonly typed: string; readonly span: { readonly from: number; readonly to: number } | undefined }) {
+function FaultPlace({
+  typed,
+  span,
+}: {
+  readonly typed: string;
+  readonly span: { readonly from: number; readonly to: number } | undefined;
+}) {
   if (!span) return null;
   const moved = typed.length - typed.trimStart().length;
   const from = Math.min(span.from + moved, typed.length);

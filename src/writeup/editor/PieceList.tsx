@@ -9,7 +9,8 @@ export interface PieceListProps {
 
 /** The box's pieces; those that no card shows yet come first. */
 export function PieceList({ figures, shown, onTake }: PieceListProps) {
-  if (!figures || figures.pieces.length === 0) return <p className="hint">There are no pieces yet: draw one up first.</p>;
+  if (!figures || figures.pieces.length === 0)
+    return <p className="hint">There are no pieces yet: draw one up first.</p>;
   const pieces = [...figures.pieces].sort((a, b) => Number(shown.has(a.name)) - Number(shown.has(b.name)));
   return (
     <ul

@@ -40,7 +40,9 @@ export function Toolbar({ label, tools, words }: ToolbarProps) {
       aria-label={label}
       className={words ? 'writeup-tools' : 'writeup-tools writeup-tools-plain'}
       onKeyDown={(event) => {
-        const to = { ArrowRight: current.current + 1, ArrowLeft: current.current - 1, Home: 0, End: tools.length - 1 }[event.key];
+        const to = { ArrowRight: current.current + 1, ArrowLeft: current.current - 1, Home: 0, End: tools.length - 1 }[
+          event.key
+        ];
         if (to === undefined) return;
         event.preventDefault();
         go(to);

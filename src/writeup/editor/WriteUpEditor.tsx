@@ -39,7 +39,13 @@ export interface WriteUpEditorProps {
 }
 
 type Opened =
-  | { readonly type: 'measure'; readonly from: number; readonly to: number; readonly begin: LiveText; readonly changing: boolean }
+  | {
+      readonly type: 'measure';
+      readonly from: number;
+      readonly to: number;
+      readonly begin: LiveText;
+      readonly changing: boolean;
+    }
   | { readonly type: 'piece' }
   | { readonly type: 'link'; readonly href: string };
 
@@ -66,7 +72,8 @@ export function WriteUpEditor({ initial, figures, lit, uploads, onChange, onSele
     };
     const change = (pos: number) => {
       const node = editing.current?.state.doc.nodeAt(pos);
-      if (node?.type.name === 'measure') setOpened({ type: 'measure', from: pos, to: pos + 1, begin: node.attrs as LiveText, changing: true });
+      if (node?.type.name === 'measure')
+        setOpened({ type: 'measure', from: pos, to: pos + 1, begin: node.attrs as LiveText, changing: true });
     };
     const shared: EditingDesk = { figures, lit, askMeasure: ask, changeMeasure: change, say: setSaid };
     return { desk: shared, send: pictureSender(uploads.projectId) };
@@ -83,24 +90,38 @@ export function WriteUpEditor({ initial, figures, lit, uploads, onChange, onSele
       setUnreadable(true);
     },
     editorProps: {
-      attributes: { class: 'article writeup-text', role: 'textbox', 'aria-multiline': 'true', 'aria-label': 'Write-up', spellcheck: 'true' },
+      attributes: {
+        class: 'article writeup-text',
+        role: 'textbox',
+        'aria-multiline': 'true',
+        'aria-label': 'Write-up',
+        spellcheck: 'true',
+      },
       transformPastedHTML: (html) => plainPastedHtml(html, figures.get()),
     },
     onCreate: ({ editor: made }) => {
       editing.current = made;
     },
     onUpdate: ({ editor: changed }) => {
-      if (changed.isEditable) told.current.onChange({ version: WRITE_UP_VERSION, doc: changed.getJSON() as unknown as DocNode });
+      if (changed.isEditable)
+        told.current.onChange({ version: WRITE_UP_VERSION, doc: changed.getJSON() as unknown as DocNode });
     },
     onSelectionUpdate: ({ editor: { state } }) => {
       const { selection } = state;
-      const formula = selection instanceof NodeSelection && selection.node.type.name === 'measure' ? String(selection.node.attrs.formula) : null;
+      const formula =
+        selection instanceof NodeSelection && selection.node.type.name === 'measure'
+          ? String(selection.node.attrs.formula)
+          : null;
       told.current.onSelectMeasure(formula === null ? null : (usesOf(desk, formula)[0] ?? null));
     },
     // What is asked for keeps its place while the text round it changes, as when a photo arrives.
     onTransaction: ({ transaction }) => {
       if (!transaction.docChanged) return;
-      setOpened((now) => (now?.type === 'measure' ? { ...now, from: transaction.mapping.map(now.from, -1), to: transaction.mapping.map(now.to, 1) } : now));
+      setOpened((now) =>
+        now?.type === 'measure'
+          ? { ...now, from: transaction.mapping.map(now.from, -1), to: transaction.mapping.map(now.to, 1) }
+          : now,
+      );
     },
   });
 
@@ -142,8 +163,8 @@ export function WriteUpEditor({ initial, figures, lit, uploads, onChange, onSele
       ) : null}
       {unreadable ? (
         <p className="problem" role="alert">
-          <b>This write-up does not read here.</b> It is shown as far as it goes and cannot be changed, so that nothing of it is lost. Reload the page: it may be older than
-          the site.
+          <b>This write-up does not read here.</b> It stays as it is and cannot be changed, so that nothing of it is
+          lost. Reload the page: it may be older than the site.
         </p>
       ) : null}
       <EditorContent editor={editor} className="writeup-page" />
@@ -164,7 +185,13 @@ export function WriteUpEditor({ initial, figures, lit, uploads, onChange, onSele
         }}
       />
       {editor && opened ? (
-        <Popover key={opened.type} label={opened.type === 'measure' ? 'Live measure' : opened.type === 'piece' ? 'Pieces' : 'Link'} anchor={anchor} within={frame} onClose={close}>
+        <Popover
+          key={opened.type}
+          label={opened.type === 'measure' ? 'Live measure' : opened.type === 'piece' ? 'Pieces' : 'Link'}
+          anchor={anchor}
+          within={frame}
+          onClose={close}
+        >
           {opened.type === 'measure' ? (
             <MeasureField
               live={live}

@@ -60,7 +60,8 @@ function intoTitle(editor: Editor): boolean {
 function backIntoTitle(editor: Editor): boolean {
   const pos = firstLineOf(editor);
   const { $from } = editor.state.selection;
-  if (pos === null || $from.parentOffset !== 0 || $from.depth !== 2 || $from.parent.type.name !== 'paragraph') return false;
+  if (pos === null || $from.parentOffset !== 0 || $from.depth !== 2 || $from.parent.type.name !== 'paragraph')
+    return false;
   focusTitle(editor, pos);
   return true;
 }

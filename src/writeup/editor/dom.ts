@@ -2,7 +2,12 @@ import { ICONS, type IconName } from '@/components/icons';
 
 /** Small pieces of DOM for node views. */
 
-export function textField(given: { className: string; label: string; placeholder: string; maxLength: number }): HTMLInputElement {
+export function textField(given: {
+  className: string;
+  label: string;
+  placeholder: string;
+  maxLength: number;
+}): HTMLInputElement {
   const field = document.createElement('input');
   field.type = 'text';
   field.className = given.className;
@@ -28,7 +33,13 @@ const SVG = 'http://www.w3.org/2000/svg';
 
 export function iconSvg(icon: IconName): SVGSVGElement {
   const svg = document.createElementNS(SVG, 'svg');
-  for (const [name, value] of Object.entries({ class: 'icon', viewBox: '0 0 24 24', width: '20', height: '20', 'aria-hidden': 'true' })) {
+  for (const [name, value] of Object.entries({
+    class: 'icon',
+    viewBox: '0 0 24 24',
+    width: '20',
+    height: '20',
+    'aria-hidden': 'true',
+  })) {
     svg.setAttribute(name, value);
   }
   const path = document.createElementNS(SVG, 'path');

@@ -10,8 +10,10 @@ export function placeForBlock($pos: ResolvedPos, node: ProseMirrorNode): { from:
     const index = $pos.index(depth - 1);
     const own = $pos.node(depth);
     const empty = depth === $pos.depth && own.type.name === 'paragraph' && own.content.size === 0;
-    if (empty && parent.canReplaceWith(index, index + 1, node.type)) return { from: $pos.before(depth), to: $pos.after(depth) };
-    if (parent.canReplaceWith(index + 1, index + 1, node.type)) return { from: $pos.after(depth), to: $pos.after(depth) };
+    if (empty && parent.canReplaceWith(index, index + 1, node.type))
+      return { from: $pos.before(depth), to: $pos.after(depth) };
+    if (parent.canReplaceWith(index + 1, index + 1, node.type))
+      return { from: $pos.after(depth), to: $pos.after(depth) };
   }
   return $pos.depth === 0 ? { from: $pos.pos, to: $pos.pos } : null;
 }
@@ -21,7 +23,10 @@ export function insertBlock(editor: Editor, node: ProseMirrorNode): boolean {
   const { state, view } = editor;
   const { selection, tr } = state;
   const $pos = selection instanceof NodeSelection ? state.doc.resolve(selection.to) : selection.$to;
-  const place = selection instanceof NodeSelection && selection.node.isBlock ? { from: selection.to, to: selection.to } : placeForBlock($pos, node);
+  const place =
+    selection instanceof NodeSelection && selection.node.isBlock
+      ? { from: selection.to, to: selection.to }
+      : placeForBlock($pos, node);
   if (!place) return false;
   tr.replaceWith(place.from, place.to, node);
   if (node.isAtom || node.type.name === 'photo') afterBlock(tr, place.from + node.nodeSize);
@@ -35,7 +40,11 @@ export function insertBlock(editor: Editor, node: ProseMirrorNode): boolean {
 export function afterBlock(tr: Editor['state']['tr'], pos: number): void {
   const $after = tr.doc.resolve(pos);
   const paragraph = tr.doc.type.schema.nodes.paragraph;
-  if (paragraph && $after.nodeAfter?.type !== paragraph && $after.parent.canReplaceWith($after.index(), $after.index(), paragraph)) {
+  if (
+    paragraph &&
+    $after.nodeAfter?.type !== paragraph &&
+    $after.parent.canReplaceWith($after.index(), $after.index(), paragraph)
+  ) {
     tr.insert(pos, paragraph.create());
   }
   tr.setSelection(TextSelection.near(tr.doc.resolve(pos + 1), 1));

@@ -37,7 +37,11 @@ export const measureKeys = (desk: EditingDesk) =>
               const [first = '', last = ''] = TRIGGER;
               if (text !== last || from !== to || from === 0) return false;
               const $from = view.state.doc.resolve(from);
-              if (!$from.parent.isTextblock || $from.parent.textBetween(Math.max(0, $from.parentOffset - 1), $from.parentOffset) !== first) return false;
+              if (
+                !$from.parent.isTextblock ||
+                $from.parent.textBetween(Math.max(0, $from.parentOffset - 1), $from.parentOffset) !== first
+              )
+                return false;
               view.dispatch(view.state.tr.insertText(text, from, to));
               desk.askMeasure({ from: from - 1, to: from + 1 });
               return true;

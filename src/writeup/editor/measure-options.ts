@@ -35,7 +35,10 @@ export function measureOptions({ model, figures }: LiveFigures, typed: string, b
 
   const wanted = query.toLowerCase();
   const ranked = measures
-    .map((measure) => ({ measure, rank: Math.min(rankOf(measure.name.toLowerCase(), wanted), figureRank(show(measure)?.text, wanted)) }))
+    .map((measure) => ({
+      measure,
+      rank: Math.min(rankOf(measure.name.toLowerCase(), wanted), figureRank(show(measure)?.text, wanted)),
+    }))
     .filter(({ rank }) => rank < NONE)
     .sort((a, b) => a.rank - b.rank);
   const named = ranked.map(({ measure }) => option(measure));
@@ -50,7 +53,11 @@ export function measureOptions({ model, figures }: LiveFigures, typed: string, b
     // A bare figure is more likely meant to find the measure that has it than to be typed in a roundabout way.
     return { options: compiled.value.uses.length === 0 ? [...named, itself] : [itself, ...named], fault: null };
   }
-  const completions = compiled.ok ? [] : goingOn(typed, measures).map((measure): MeasureOption => ({ ...option(measure), completes: completed(typed, measure.name) }));
+  const completions = compiled.ok
+    ? []
+    : goingOn(typed, measures).map(
+        (measure): MeasureOption => ({ ...option(measure), completes: completed(typed, measure.name) }),
+      );
   const options = [...named, ...completions];
   return { options, fault: compiled.ok || named.length > 0 ? null : (compiled.faults[0] ?? null) };
 }
@@ -72,7 +79,8 @@ const figureRank = (shown: string | undefined, wanted: string): number => {
 };
 
 /** The unfinished word at the end of a formula, after at least one sign. */
-const tailOf = (typed: string): string => /[-+*/^(,<>=]\s*([\p{L}][\p{L}\p{N} ]*)$/u.exec(typed)?.[1]?.toLowerCase() ?? '';
+const tailOf = (typed: string): string =>
+  /[-+*/^(,<>=]\s*([\p{L}][\p{L}\p{N} ]*)$/u.exec(typed)?.[1]?.toLowerCase() ?? '';
 
 function goingOn(typed: string, measures: readonly MeasureFigure[]): readonly MeasureFigure[] {
   const tail = tailOf(typed);

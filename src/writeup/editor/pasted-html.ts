@@ -11,12 +11,16 @@ export function plainPastedHtml(html: string, live: LiveFigures | null): string 
   const { body } = new DOMParser().parseFromString(html, 'text/html');
   // Copied inside the editor: already ours, whole.
   if (body.querySelector('[data-pm-slice]')) return html;
-  for (const unwanted of body.querySelectorAll('script, style, meta, link, title, iframe, object, svg, img, picture, video, form, input, button')) unwanted.remove();
+  for (const unwanted of body.querySelectorAll(
+    'script, style, meta, link, title, iframe, object, svg, img, picture, video, form, input, button',
+  ))
+    unwanted.remove();
   emphasise(body);
   rebuildLists(body);
   linesOfTables(body);
   resolveMeasures(body, live);
-  for (const link of body.querySelectorAll('a[href]')) if (safeHref(link.getAttribute('href') ?? '') === null) unwrap(link);
+  for (const link of body.querySelectorAll('a[href]'))
+    if (safeHref(link.getAttribute('href') ?? '') === null) unwrap(link);
   for (const h1 of body.querySelectorAll('h1')) rename(h1, 'h2');
   for (const deep of body.querySelectorAll('h4, h5, h6')) rename(deep, 'h3');
   return body.innerHTML;
@@ -41,7 +45,9 @@ function emphasise(body: Element) {
 function rebuildLists(body: Element) {
   let list: { element: Element; last: Element } | null = null;
   for (const line of [...body.querySelectorAll('p, h1, h2, h3')]) {
-    const isItem = /mso-list\s*:\s*(?!none|ignore|skip)/i.test(styleOf(line)) || (/^MsoList/.test(line.className) && /^\s*([·•o§-]|\d{1,3}[.)])\s+/.test(line.textContent ?? ''));
+    const isItem =
+      /mso-list\s*:\s*(?!none|ignore|skip)/i.test(styleOf(line)) ||
+      (/^MsoList/.test(line.className) && /^\s*([·•o§-]|\d{1,3}[.)])\s+/.test(line.textContent ?? ''));
     if (!isItem) {
       list = null;
       continue;
@@ -92,7 +98,10 @@ function linesOfTables(body: Element) {
     if (table.closest('[data-cut-list]')) continue;
     const lines = [...table.querySelectorAll('tr')].map((row) => {
       const line = table.ownerDocument.createElement('p');
-      line.textContent = [...row.children].map((cell) => (cell.textContent ?? '').trim().replace(/\s+/g, ' ')).filter(Boolean).join(', ');
+      line.textContent = [...row.children]
+        .map((cell) => (cell.textContent ?? '').trim().replace(/\s+/g, ' '))
+        .filter(Boolean)
+        .join(', ');
       return line;
     });
     table.replaceWith(...lines);

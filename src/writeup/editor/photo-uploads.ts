@@ -9,7 +9,8 @@ const uploads = new PluginKey<DecorationSet>('photoUploads');
 type Change = { readonly add: { id: string; pos: number; dom: HTMLElement } } | { readonly remove: string };
 
 const PICTURE = /^image\//;
-const picturesOf = (data: DataTransfer | null): File[] => [...(data?.files ?? [])].filter(({ type, name }) => PICTURE.test(type) || /\.(jpe?g|png|webp|heic)$/i.test(name));
+const picturesOf = (data: DataTransfer | null): File[] =>
+  [...(data?.files ?? [])].filter(({ type, name }) => PICTURE.test(type) || /\.(jpe?g|png|webp|heic)$/i.test(name));
 
 export interface PhotoUploadsOptions {
   readonly send: SendPicture;
@@ -35,10 +36,13 @@ export const photoUploads = ({ send, say }: PhotoUploadsOptions) =>
               const mapped = set.map(tr.mapping, tr.doc);
               const change = tr.getMeta(uploads) as Change | undefined;
               if (!change) return mapped;
-              if ('remove' in change) return mapped.remove(mapped.find(undefined, undefined, (spec) => spec.id === change.remove));
+              if ('remove' in change)
+                return mapped.remove(mapped.find(undefined, undefined, (spec) => spec.id === change.remove));
               const { id, pos, dom } = change.add;
               // Side 1: a photo that arrives at the same place goes in front, so that several keep their order.
-              return mapped.add(tr.doc, [Decoration.widget(pos, dom, { id, key: id, side: 1, stopEvent: () => true, ignoreSelection: true })]);
+              return mapped.add(tr.doc, [
+                Decoration.widget(pos, dom, { id, key: id, side: 1, stopEvent: () => true, ignoreSelection: true }),
+              ]);
             },
           },
           props: {
@@ -46,7 +50,14 @@ export const photoUploads = ({ send, say }: PhotoUploadsOptions) =>
             handlePaste(view, event) {
               const files = picturesOf(event.clipboardData);
               // A word processor puts a picture of the text beside the text: the text is meant.
-              if (files.length === 0 || event.clipboardData?.getData('text/html').replace(/<[^>]*>/g, '').trim()) return false;
+              if (
+                files.length === 0 ||
+                event.clipboardData
+                  ?.getData('text/html')
+                  .replace(/<[^>]*>/g, '')
+                  .trim()
+              )
+                return false;
               uploadPhotos(editor, files, { send, say });
               return true;
             },
@@ -65,12 +76,20 @@ export const photoUploads = ({ send, say }: PhotoUploadsOptions) =>
   });
 
 /** Sends files and puts a photo where the caret, or `at`, was when it began. */
-export function uploadPhotos(editor: Editor, files: readonly File[], { send, say }: PhotoUploadsOptions, at?: number): void {
+export function uploadPhotos(
+  editor: Editor,
+  files: readonly File[],
+  { send, say }: PhotoUploadsOptions,
+  at?: number,
+): void {
   const { photo, paragraph } = editor.schema.nodes;
   if (!photo || !paragraph) return;
   for (const file of files) {
     const { doc, selection } = editor.state;
-    const place = placeForBlock(at === undefined ? selection.$to : doc.resolve(at), photo.create({ upload: 'pending' }));
+    const place = placeForBlock(
+      at === undefined ? selection.$to : doc.resolve(at),
+      photo.create({ upload: 'pending' }),
+    );
     if (!place) {
       say('A photo cannot stand here.');
       continue;
@@ -85,7 +104,8 @@ let counted = 0;
 function begin(editor: Editor, file: File, pos: number, { send, say }: PhotoUploadsOptions): void {
   const id = `photo-${(counted += 1)}`;
   const placeholder = makePlaceholder(file.name || 'Photo');
-  const change = (view: EditorView, what: Change) => view.dispatch(view.state.tr.setMeta(uploads, what).setMeta('addToHistory', false));
+  const change = (view: EditorView, what: Change) =>
+    view.dispatch(view.state.tr.setMeta(uploads, what).setMeta('addToHistory', false));
   const drop = () => {
     if (!editor.isDestroyed) change(editor.view, { remove: id });
   };

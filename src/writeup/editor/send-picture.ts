@@ -18,7 +18,10 @@ export function pictureSender(projectId: string, address = '/api/uploads'): Send
   let last: Promise<unknown> = Promise.resolve();
   return (file, options) => {
     if (file.size > PICTURE_BYTES) {
-      return Promise.resolve({ ok: false, sentence: `${file.name || 'The picture'} is larger than 12 MB. Make it smaller, or save it as JPEG.` });
+      return Promise.resolve({
+        ok: false,
+        sentence: `${file.name || 'The picture'} is larger than 12 MB. Make it smaller, or save it as JPEG.`,
+      });
     }
     const turn = last.then(() => send(projectId, address, file, options));
     last = turn;
@@ -26,7 +29,12 @@ export function pictureSender(projectId: string, address = '/api/uploads'): Send
   };
 }
 
-function send(projectId: string, address: string, file: File, { onProgress, signal }: Parameters<SendPicture>[1]): ReturnType<SendPicture> {
+function send(
+  projectId: string,
+  address: string,
+  file: File,
+  { onProgress, signal }: Parameters<SendPicture>[1],
+): ReturnType<SendPicture> {
   return new Promise((resolve) => {
     const fail = (sentence: string) => resolve({ ok: false, sentence });
     if (signal.aborted) return fail('');
@@ -37,15 +45,29 @@ function send(projectId: string, address: string, file: File, { onProgress, sign
     const request = new XMLHttpRequest();
     request.open('POST', address);
     request.responseType = 'text';
-    request.upload.addEventListener('progress', ({ loaded, total, lengthComputable }) => lengthComputable && onProgress(loaded / total));
+    request.upload.addEventListener(
+      'progress',
+      ({ loaded, total, lengthComputable }) => lengthComputable && onProgress(loaded / total),
+    );
     request.addEventListener('load', () => {
       const answer = parse(request.responseText);
-      if (request.status === 201 && typeof answer.id === 'string' && typeof answer.width === 'number' && typeof answer.height === 'number') {
+      if (
+        request.status === 201 &&
+        typeof answer.id === 'string' &&
+        typeof answer.width === 'number' &&
+        typeof answer.height === 'number'
+      ) {
         return resolve({ ok: true, picture: { id: answer.id, width: answer.width, height: answer.height } });
       }
-      fail(typeof answer.detail === 'string' ? answer.detail : `The site answered ${request.status}. Try again in a moment.`);
+      fail(
+        typeof answer.detail === 'string'
+          ? answer.detail
+          : `The site answered ${request.status}. Try again in a moment.`,
+      );
     });
-    request.addEventListener('error', () => fail('The picture did not get through. Check the connection, then try again.'));
+    request.addEventListener('error', () =>
+      fail('The picture did not get through. Check the connection, then try again.'),
+    );
     request.addEventListener('abort', () => fail(''));
     signal.addEventListener('abort', () => request.abort(), { once: true });
     request.send(form);

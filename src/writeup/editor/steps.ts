@@ -36,7 +36,11 @@ export function newStep(editor: Editor): boolean {
     }
     const head = taken[0]?.type.name === 'heading' ? taken.shift() : undefined;
     const title = head?.textContent.trim().slice(0, 200) ?? '';
-    tr.replaceWith(at, end, step.create({ title, mark: '' }, taken.length > 0 ? Fragment.from(taken) : paragraph.create()));
+    tr.replaceWith(
+      at,
+      end,
+      step.create({ title, mark: '' }, taken.length > 0 ? Fragment.from(taken) : paragraph.create()),
+    );
   }
   tr.setSelection(TextSelection.near(tr.doc.resolve(at + 1), 1)).scrollIntoView();
   view.dispatch(closeHistory(tr));

@@ -7,16 +7,28 @@ import { insertBlock } from './insert-block';
 /** What buttons and fields do to the write-up, each as one step of undo. */
 
 /** Puts a live measure in place of a range, with the caret behind it. Where no text can stand, in a paragraph of its own. */
-export function putMeasure(editor: Editor, { from, to }: { readonly from: number; readonly to: number }, text: LiveText): boolean {
+export function putMeasure(
+  editor: Editor,
+  { from, to }: { readonly from: number; readonly to: number },
+  text: LiveText,
+): boolean {
   const { state, view } = editor;
   const { measure, paragraph } = state.schema.nodes;
   if (!measure || !paragraph) return false;
   const $from = state.doc.resolve(from);
   const marks = state.doc.nodeAt(from)?.isInline ? (state.doc.nodeAt(from)?.marks ?? []) : $from.marks();
-  const node = measure.create({ formula: text.formula, bare: text.bare }, null, $from.parent.inlineContent ? marks : undefined);
+  const node = measure.create(
+    { formula: text.formula, bare: text.bare },
+    null,
+    $from.parent.inlineContent ? marks : undefined,
+  );
   if (!$from.parent.inlineContent) return insertBlock(editor, paragraph.create(null, node));
   const tr = state.tr.replaceWith(from, to, node);
-  view.dispatch(closeHistory(tr).setSelection(TextSelection.create(tr.doc, from + 1)).scrollIntoView());
+  view.dispatch(
+    closeHistory(tr)
+      .setSelection(TextSelection.create(tr.doc, from + 1))
+      .scrollIntoView(),
+  );
   return true;
 }
 

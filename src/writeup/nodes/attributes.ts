@@ -19,5 +19,6 @@ export const pixels = (value: unknown) => {
 
 /** The id of a stored picture: it stands in addresses and file names, so nothing but letters, digits, hyphens and underscores. */
 export const uploadId = (value: unknown) => {
-  if (typeof value !== 'string' || !/^[\w-]{1,64}$/.test(value)) throw new RangeError('the id of a stored picture is wanted');
+  if (typeof value !== 'string' || !/^[\w-]{1,64}$/.test(value))
+    throw new RangeError('the id of a stored picture is wanted');
 };

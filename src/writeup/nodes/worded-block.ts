@@ -3,7 +3,12 @@ import type { IconName } from '@/components/icons';
 import { iconSvg } from '../editor/dom';
 
 /** Blocks that say in a word what they are: the word is no text of the author's and cannot be typed over. */
-export function wordedBlockView(given: { className: string; word: string; wordClass: string; icon?: IconName }): NodeViewRenderer {
+export function wordedBlockView(given: {
+  className: string;
+  word: string;
+  wordClass: string;
+  icon?: IconName;
+}): NodeViewRenderer {
   return () => {
     const dom = document.createElement('div');
     dom.className = given.className;

@@ -1,3 +1,4 @@
 import { wordedBlockView } from '../worded-block';
 
-export const materialsView = () => wordedBlockView({ className: 'materials', word: 'Materials', wordClass: 'materials-word' });
+export const materialsView = () =>
+  wordedBlockView({ className: 'materials', word: 'Materials', wordClass: 'materials-word' });

@@ -22,7 +22,10 @@ export function measureView(desk: EditingDesk): NodeViewRenderer {
         if (live && !shown) dom.append(' ', unknownMark());
       }
       dom.classList.toggle('unknown', live !== null && shown === null);
-      dom.setAttribute('aria-label', shown ? `${text.formula}, live: ${shown.spoken}` : `${text.formula || 'empty measure'}, ${NOT_WORKED_OUT}`);
+      dom.setAttribute(
+        'aria-label',
+        shown ? `${text.formula}, live: ${shown.spoken}` : `${text.formula || 'empty measure'}, ${NOT_WORKED_OUT}`,
+      );
       dom.title = shown ? `${text.formula}. Enter changes it.` : `${text.formula}: ${NOT_WORKED_OUT}. Enter mends it.`;
       if (changes && shownBefore !== null && shownBefore !== words) flash(dom);
       shownBefore = words;
@@ -30,7 +33,10 @@ export function measureView(desk: EditingDesk): NodeViewRenderer {
     const light = () => {
       const names = desk.lit.get();
       const uses = names.length === 0 ? [] : usesOf(desk, current.attrs.formula as string);
-      dom.classList.toggle('lit', names.some((name) => uses.includes(name)));
+      dom.classList.toggle(
+        'lit',
+        names.some((name) => uses.includes(name)),
+      );
       dom.classList.toggle('lit-picked', names[0] !== undefined && uses.includes(names[0]));
     };
 

@@ -16,7 +16,12 @@ export function photoView(): NodeViewRenderer {
     label.className = 'photo-alt';
     label.contentEditable = 'false';
     const labelWords = document.createElement('span');
-    const alt = textField({ className: 'input', label: 'What the photo shows, in words', placeholder: 'For those who cannot see it', maxLength: 500 });
+    const alt = textField({
+      className: 'input',
+      label: 'What the photo shows, in words',
+      placeholder: 'For those who cannot see it',
+      maxLength: 500,
+    });
     label.append(labelWords, alt);
     const contentDOM = document.createElement('figcaption');
     contentDOM.dataset.hint = 'Caption';
@@ -25,7 +30,12 @@ export function photoView(): NodeViewRenderer {
 
     let current = node;
     const show = () => {
-      const { upload, width, height, alt: words } = current.attrs as { upload: string; width: number; height: number; alt: string };
+      const {
+        upload,
+        width,
+        height,
+        alt: words,
+      } = current.attrs as { upload: string; width: number; height: number; alt: string };
       const src = pictureUrl(upload, 960);
       if (image.getAttribute('src') !== src) {
         image.srcset = pictureSources(upload, width);

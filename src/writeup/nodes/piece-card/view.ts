@@ -29,14 +29,24 @@ export function pieceCardView(desk: EditingDesk): NodeViewRenderer {
       const figures = desk.figures.get()?.figures;
       const piece = figures?.pieces.find((p) => p.name === name);
       const names = figures?.pieces.map((p) => p.name) ?? [];
-      choose.replaceChildren(...(names.includes(name) ? names : [name, ...names]).map((n) => new Option(n, n, false, n === name)));
+      choose.replaceChildren(
+        ...(names.includes(name) ? names : [name, ...names]).map((n) => new Option(n, n, false, n === name)),
+      );
       dom.classList.toggle('unknown', figures !== undefined && !piece);
       facts.textContent = piece
         ? `cut ${piece.count} · ${piece.stock}`
         : 'Not part of the box as it is set up now. Choose another piece, or leave it for a choice that has it.';
       picture.innerHTML =
         figures && piece
-          ? drawingSvg(drawPiece(piece, { ...SMALL, units: figures.sizing.units, grid: figures.sizing.grid, labels: false, dims: false }))
+          ? drawingSvg(
+              drawPiece(piece, {
+                ...SMALL,
+                units: figures.sizing.units,
+                grid: figures.sizing.grid,
+                labels: false,
+                dims: false,
+              }),
+            )
           : '';
     };
     draw();

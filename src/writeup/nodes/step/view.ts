@@ -22,8 +22,18 @@ export function stepView(desk: EditingDesk): NodeViewRenderer {
     const contentDOM = document.createElement('div');
     contentDOM.className = 'step-content';
 
-    const title = textField({ className: 'step-title-field', label: 'Title of the step', placeholder: 'Title of this step', maxLength: 200 });
-    const mark = textField({ className: 'step-mark-field', label: 'Mark beside the title', placeholder: 'mark', maxLength: 60 });
+    const title = textField({
+      className: 'step-title-field',
+      label: 'Title of the step',
+      placeholder: 'Title of this step',
+      maxLength: 200,
+    });
+    const mark = textField({
+      className: 'step-mark-field',
+      label: 'Mark beside the title',
+      placeholder: 'mark',
+      maxLength: 60,
+    });
     const act = (work: (pos: number) => void) => () => {
       const pos = getPos();
       if (pos !== undefined) work(pos);
@@ -31,12 +41,24 @@ export function stepView(desk: EditingDesk): NodeViewRenderer {
     const tools = document.createElement('div');
     tools.className = 'step-tools';
     tools.append(
-      iconButton('chevron-up', 'Move the step up', act((pos) => moveStep(editor, pos, -1) || desk.say('This is the first place.'))),
-      iconButton('chevron-down', 'Move the step down', act((pos) => moveStep(editor, pos, 1) || desk.say('This is the last place.'))),
-      iconButton('trash', 'Remove the step', act((pos) => {
-        removeStep(editor, pos);
-        desk.say('Step removed. Undo brings it back.');
-      })),
+      iconButton(
+        'chevron-up',
+        'Move the step up',
+        act((pos) => moveStep(editor, pos, -1) || desk.say('This is the first place.')),
+      ),
+      iconButton(
+        'chevron-down',
+        'Move the step down',
+        act((pos) => moveStep(editor, pos, 1) || desk.say('This is the last place.')),
+      ),
+      iconButton(
+        'trash',
+        'Remove the step',
+        act((pos) => {
+          removeStep(editor, pos);
+          desk.say('Step removed. Undo brings it back.');
+        }),
+      ),
     );
     head.append(title, mark, tools);
     body.append(head, contentDOM);
@@ -44,7 +66,10 @@ export function stepView(desk: EditingDesk): NodeViewRenderer {
 
     let current = node;
     const show = () => {
-      for (const [field, value] of [[title, current.attrs.title], [mark, current.attrs.mark]] as const) {
+      for (const [field, value] of [
+        [title, current.attrs.title],
+        [mark, current.attrs.mark],
+      ] as const) {
         if (field.value !== value) field.value = String(value);
       }
       // A field that is as wide as its words, so that the mark stands right behind the title.
@@ -52,13 +77,19 @@ export function stepView(desk: EditingDesk): NodeViewRenderer {
     };
     show();
 
-    const keep = (name: 'title' | 'mark', value: string) =>
-      act((pos) => typeAttribute(editor, pos, name, value))();
+    const keep = (name: 'title' | 'mark', value: string) => act((pos) => typeAttribute(editor, pos, name, value))();
     title.addEventListener('input', () => keep('title', title.value));
     mark.addEventListener('input', () => keep('mark', mark.value));
     for (const field of [title, mark]) {
       field.addEventListener('keydown', (event) => {
-        if (fieldKey(event, editor, act((pos) => intoText(editor, pos)))) event.preventDefault();
+        if (
+          fieldKey(
+            event,
+            editor,
+            act((pos) => intoText(editor, pos)),
+          )
+        )
+          event.preventDefault();
       });
     }
 
