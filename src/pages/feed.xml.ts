@@ -6,5 +6,7 @@ export const GET: APIRoute = ({ request }) => {
   const { xml, parts } = projectFeed();
   const tag = tagOf(['feed', ...parts]);
   if (hasTag(request, tag)) return notModified(tag);
-  return new Response(xml, { headers: { ...publicHeaders(tag), 'content-type': 'application/atom+xml; charset=utf-8' } });
+  return new Response(xml, {
+    headers: { ...publicHeaders(tag), 'content-type': 'application/atom+xml; charset=utf-8' },
+  });
 };

@@ -10,8 +10,18 @@ const MOST = 50_000;
 
 export const GET: APIRoute = async ({ request }) => {
   const guides = (await getCollection('handbook')).map(({ id }) => ({ path: `/handbook/${id}` }));
-  const projects = listPublished({ limit: MOST - guides.length - 4 }).map(({ slug, publishedAt }) => ({ path: `/projects/${slug}`, changed: publishedAt }));
-  const places = [{ path: '/' }, { path: '/projects' }, { path: '/handbook' }, { path: '/subscribe' }, ...guides, ...projects];
+  const projects = listPublished({ limit: MOST - guides.length - 4 }).map(({ slug, publishedAt }) => ({
+    path: `/projects/${slug}`,
+    changed: publishedAt,
+  }));
+  const places = [
+    { path: '/' },
+    { path: '/projects' },
+    { path: '/handbook' },
+    { path: '/subscribe' },
+    ...guides,
+    ...projects,
+  ];
   const xml = sitemap(config.siteUrl, places);
   const tag = tagOf(['sitemap', xml]);
   if (hasTag(request, tag)) return notModified(tag);

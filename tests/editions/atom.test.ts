@@ -17,7 +17,8 @@ const entry: FeedEntry = {
   content: '<p>9 × 6 in &amp; more</p>',
   group: 'Boxes that look like books',
 };
-const feedOf = (entries: readonly FeedEntry[]) => readXml(atomFeed({ siteUrl: 'https://boxes.example', title: 'Seed Circle', entries, began }));
+const feedOf = (entries: readonly FeedEntry[]) =>
+  readXml(atomFeed({ siteUrl: 'https://boxes.example', title: 'Seed Circle', entries, began }));
 
 test('a feed has what RFC 4287 asks of it: id, title, updated, a link to itself and an author', () => {
   const feed = feedOf([entry]);
@@ -65,6 +66,9 @@ test('control characters that XML cannot carry are left out', () => {
 test('a sitemap lists whole addresses with the day they changed', () => {
   const map = readXml(sitemap('https://boxes.example', [{ path: '/' }, { path: '/projects/a-b', changed: began }]));
   expect(map.attributes.xmlns).toBe('http://www.sitemaps.org/schemas/sitemap/0.9');
-  expect(map.all('url').map((url) => url.text('loc'))).toEqual(['https://boxes.example/', 'https://boxes.example/projects/a-b']);
+  expect(map.all('url').map((url) => url.text('loc'))).toEqual([
+    'https://boxes.example/',
+    'https://boxes.example/projects/a-b',
+  ]);
   expect(map.all('url')[1]?.text('lastmod')).toBe('2026-01-01T00:00:00.000Z');
 });

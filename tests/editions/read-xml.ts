@@ -24,7 +24,9 @@ export function readXml(xml: string): XmlElement {
     if (!open) throw new Error(`No element begins at: ${xml.slice(at, at + 60)}`);
     at += open[0].length;
     const name = open[1] as string;
-    const attributes = Object.fromEntries([...(open[2] ?? '').matchAll(/([\w:]+)="([^"]*)"/g)].map((pair) => [pair[1], decode(pair[2] ?? '')]));
+    const attributes = Object.fromEntries(
+      [...(open[2] ?? '').matchAll(/([\w:]+)="([^"]*)"/g)].map((pair) => [pair[1], decode(pair[2] ?? '')]),
+    );
     const children: XmlElement[] = [];
     let content = '';
     while (open[3] !== '/') {
@@ -51,8 +53,8 @@ export function readXml(xml: string): XmlElement {
 }
 
 function decode(text: string): string {
-  // eslint-disable-next-line no-control-regex -- XML 1.0 forbids them
-  if (/[\u0000-\u0008\u000b\u000c\u000e-\u001f]/.test(text)) throw new Error('A control character that XML cannot carry.');
+  if (/[\u0000-\u0008\u000b\u000c\u000e-\u001f]/.test(text))
+    throw new Error('A control character that XML cannot carry.');
   return text.replace(/&([^;]*);?/g, (whole, entity: string) => {
     const mark = ENTITIES[entity];
     if (mark === undefined || !whole.endsWith(';')) throw new Error(`An unknown entity: ${whole}`);

@@ -42,7 +42,9 @@ describe('figures.json', () => {
       pattern: 'folder',
       sizing: { values: { 'inside width': 127, 'inside height': 152.4 }, units: 'in', grid: '1/16in' },
       // Two panels of 5 in: 10 in across, folded in the middle; 6 in along. 254 × 152.4 = 38709.6 mm².
-      pieces: [{ name: 'Folder', count: 1, across: 254, along: 152.4, scores: { across: [127], along: [] }, area: 38709.6 }],
+      pieces: [
+        { name: 'Folder', count: 1, across: 254, along: 152.4, scores: { across: [127], along: [] }, area: 38709.6 },
+      ],
       fits: [{ name: 'it stands', holds: true, gap: 101.6 }],
       sheets: { stock: '12x12in', count: 1, used: 1 },
       departure: { mm: 0 },
@@ -53,7 +55,13 @@ describe('figures.json', () => {
 
   test('shows lengths in the units that are asked for and keeps the size', async () => {
     const { body } = await figures('?units=mm');
-    expect(body.measures).toContainEqual({ name: 'inside height', kind: 'length', exact: 152.4, cut: 152, shown: '152 mm' });
+    expect(body.measures).toContainEqual({
+      name: 'inside height',
+      kind: 'length',
+      exact: 152.4,
+      cut: 152,
+      shown: '152 mm',
+    });
   });
 
   test('is read at the author’s size without parameters, and other parameters do no harm', async () => {
@@ -127,7 +135,10 @@ describe('the feed', () => {
 
   test('tells of a correction in the same entry', async () => {
     const before = (await feed()).all('entry')[0]?.text('id');
-    db.update(projects).set({ heroUploadId: addUpload(author, 'a'.repeat(24)), revision: 2 }).where(eq(projects.id, id)).run();
+    db.update(projects)
+      .set({ heroUploadId: addUpload(author, 'a'.repeat(24)), revision: 2 })
+      .where(eq(projects.id, id))
+      .run();
     publishEdition(id, { by: author, revision: 2, note: 'A photo of <the> fold.' });
     const entries = (await feed()).all('entry');
     expect(entries.map((entry) => entry.text('id'))).toEqual([before]);

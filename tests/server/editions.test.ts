@@ -2,7 +2,13 @@ import { eq } from 'drizzle-orm';
 import { afterEach, beforeEach, describe, expect, test, vi } from 'vitest';
 import { db } from '@/db/client.server';
 import { editions, projects } from '@/db/schema';
-import { countByGroup, countPublished, editionHistory, getEdition, listPublished } from '@/features/editions/editions.server';
+import {
+  countByGroup,
+  countPublished,
+  editionHistory,
+  getEdition,
+  listPublished,
+} from '@/features/editions/editions.server';
 import { publishEdition, type PublishOutcome } from '@/features/editions/publish.server';
 import { testDatabase } from '../setup/test-database';
 import { addPerson, addProject, addUpload, FOLDER, ONE_STEP, writeUpOf } from './published-project';
@@ -29,7 +35,11 @@ const publish = (id: string, note?: string, by = author) => {
 };
 /** What a save in the workroom does to the row. */
 const save = (id: string, facts: Partial<typeof projects.$inferInsert>) =>
-  db.update(projects).set({ ...facts, revision: project(id).revision + 1 }).where(eq(projects.id, id)).run();
+  db
+    .update(projects)
+    .set({ ...facts, revision: project(id).revision + 1 })
+    .where(eq(projects.id, id))
+    .run();
 const slugOf = (id: string) => project(id).slug;
 const refusal = (outcome: PublishOutcome) => (outcome.ok ? null : outcome.refusal.code);
 
@@ -38,7 +48,12 @@ describe('publishing', () => {
     const id = addProject(author);
     const outcome = publish(id);
     expect(outcome.ok && outcome.edition.n).toBe(1);
-    expect(getEdition(slugOf(id))).toMatchObject({ n: 1, newest: 1, title: 'Seed list folder', author: { name: 'Ines Thornbury' } });
+    expect(getEdition(slugOf(id))).toMatchObject({
+      n: 1,
+      newest: 1,
+      title: 'Seed list folder',
+      author: { name: 'Ines Thornbury' },
+    });
     expect(project(id).publishedRevision).toBe(project(id).revision);
   });
 
@@ -48,13 +63,26 @@ describe('publishing', () => {
     save(id, {
       title: 'Another title',
       pattern: { ...FOLDER, name: 'Another pattern' },
-      writeUp: writeUpOf(...ONE_STEP.doc.content, { type: 'paragraph', content: [{ type: 'text', text: 'Later words.' }] }),
+      writeUp: writeUpOf(...ONE_STEP.doc.content, {
+        type: 'paragraph',
+        content: [{ type: 'text', text: 'Later words.' }],
+      }),
       heroUploadId: addUpload(author, 'late'),
     });
-    expect(getEdition(slugOf(id))).toMatchObject({ title: 'Seed list folder', pattern: { name: 'Folder' }, writeUp: ONE_STEP, hero: null });
+    expect(getEdition(slugOf(id))).toMatchObject({
+      title: 'Seed list folder',
+      pattern: { name: 'Folder' },
+      writeUp: ONE_STEP,
+      hero: null,
+    });
 
     publish(id, 'The title was wrong.');
-    expect(getEdition(slugOf(id))).toMatchObject({ n: 2, title: 'Another title', pattern: { name: 'Another pattern' }, hero: { id: 'late' } });
+    expect(getEdition(slugOf(id))).toMatchObject({
+      n: 2,
+      title: 'Another title',
+      pattern: { name: 'Another pattern' },
+      hero: { id: 'late' },
+    });
     expect(getEdition(slugOf(id), 1)).toMatchObject({ n: 1, newest: 2, title: 'Seed list folder', writeUp: ONE_STEP });
   });
 
@@ -64,7 +92,9 @@ describe('publishing', () => {
     save(id, { title: 'Mended' });
     const without = publish(id, '  \n ');
     expect(refusal(without)).toBe('note needed');
-    expect(!without.ok && without.sentence).toBe('A new edition needs a correction note. Say what changed and why it matters to someone who already cut.');
+    expect(!without.ok && without.sentence).toBe(
+      'A new edition needs a correction note. Say what changed and why it matters to someone who already cut.',
+    );
     expect(publish(id, ' The lid was too tight. ').ok).toBe(true);
     expect(editionHistory(id).map(({ n, correctionNote }) => [n, correctionNote])).toEqual([
       [2, 'The lid was too tight.'],
@@ -90,8 +120,12 @@ describe('publishing', () => {
   test('a blocking item of the proof list keeps a project back, with the items', () => {
     const id = addProject(author, { title: ' ' });
     const outcome = publish(id);
-    expect(!outcome.ok && outcome.refusal.code === 'proof blocks' && outcome.refusal.items.map(({ code }) => code)).toEqual(['no title']);
-    expect(!outcome.ok && outcome.sentence).toBe('One item of the proof list keeps this from being published. Mend it, then publish.');
+    expect(
+      !outcome.ok && outcome.refusal.code === 'proof blocks' && outcome.refusal.items.map(({ code }) => code),
+    ).toEqual(['no title']);
+    expect(!outcome.ok && outcome.sentence).toBe(
+      'One item of the proof list keeps this from being published. Mend it, then publish.',
+    );
   });
 
   test('a picture that is not stored keeps a project back', () => {
@@ -155,7 +189,15 @@ describe('what readers find', () => {
   test('every word of a search must be found, in title, summary, author or kind of box', () => {
     const other = addPerson('Bram Quillon');
     publish(addProject(author, { title: 'Seed list folder', summary: 'Keeps lists.' }));
-    publish(addProject(other, { title: 'Jar sleeve', summary: 'For 100% dry beans.', pattern: { ...FOLDER, group: 'Sleeves and drawers' } }), undefined, other);
+    publish(
+      addProject(other, {
+        title: 'Jar sleeve',
+        summary: 'For 100% dry beans.',
+        pattern: { ...FOLDER, group: 'Sleeves and drawers' },
+      }),
+      undefined,
+      other,
+    );
     const found = (query: string) => listPublished({ query, limit: 10 }).map(({ title }) => title);
     expect(found('list SEED')).toEqual(['Seed list folder']);
     expect(found('quillon jar')).toEqual(['Jar sleeve']);
@@ -178,6 +220,8 @@ describe('what readers find', () => {
       { group: 'Envelopes and pillows', count: 0 },
       { group: 'Sleeves and drawers', count: 1 },
     ]);
-    expect(listPublished({ groups: ['Sleeves and drawers'], limit: 10 }).map(({ title }) => title)).toEqual(['Jar sleeve']);
+    expect(listPublished({ groups: ['Sleeves and drawers'], limit: 10 }).map(({ title }) => title)).toEqual([
+      'Jar sleeve',
+    ]);
   });
 });

@@ -29,7 +29,12 @@ test('below an inch the figures are fractions with a fraction slash', () => {
 });
 
 test('no ruler has more than eighty-one ticks', () => {
-  for (const [from, to] of [[0, 2], [1, 9], [25.4, 355.6], [0, 2000]] as const) {
+  for (const [from, to] of [
+    [0, 2],
+    [1, 9],
+    [25.4, 355.6],
+    [0, 2000],
+  ] as const) {
     for (const units of ['in', 'mm', 'cm'] as const) {
       expect(rangeRuler({ from, to, kind: 'length', units }).length).toBeLessThanOrEqual(81);
     }

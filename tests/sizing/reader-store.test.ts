@@ -69,7 +69,12 @@ test('units never change the size, and bring their own cut grid when the old one
 });
 
 test('whole millimetres are offered for sizes in inches, and nothing for a size that has them', () => {
-  const sizing: Sizing = { values: { 'inside height': 152.4, 'inside width': 101.6 }, choices: {}, units: 'mm', grid: '1mm' };
+  const sizing: Sizing = {
+    values: { 'inside height': 152.4, 'inside width': 101.6 },
+    choices: {},
+    units: 'mm',
+    grid: '1mm',
+  };
   const moved = onWholeSteps(model, sizing, evaluate(model, sizing));
   expect(moved?.values).toEqual({ 'inside height': 152, 'inside width': 102 });
   expect(moved && onWholeSteps(model, moved, evaluate(model, moved))).toBeNull();

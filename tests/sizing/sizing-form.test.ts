@@ -6,7 +6,10 @@ import { FOLDER } from '../server/published-project';
 
 const compiled = compilePattern({
   ...FOLDER,
-  measures: [...FOLDER.measures, { name: 'flap', ask: { question: 'How deep is the flap?', usual: 'inside height / 3', from: '1 in', to: '4 in' } }],
+  measures: [
+    ...FOLDER.measures,
+    { name: 'flap', ask: { question: 'How deep is the flap?', usual: 'inside height / 3', from: '1 in', to: '4 in' } },
+  ],
   choices: [{ name: 'corners', question: 'Which corners?', options: ['square', 'rounded'], usual: 'square' }],
 });
 if (!compiled.ok) throw new Error(JSON.stringify(compiled.faults));
@@ -16,7 +19,11 @@ const INCHES = { 'inside-width': '4', 'inside-height': '6', flap: '2' };
 
 /** What a browser sends when the form drawn at `from` is sent with these fields. */
 const send = (fields: Record<string, string>, from: Sizing = usual) =>
-  readSizingForm(model, new URLSearchParams({ [FROM]: writeSizing(model, from, usual).replace(/^\?/, ''), ...fields }), usual);
+  readSizingForm(
+    model,
+    new URLSearchParams({ [FROM]: writeSizing(model, from, usual).replace(/^\?/, ''), ...fields }),
+    usual,
+  );
 
 test('the names of fields are those of links', () => {
   expect(parameterName('Inside  Width')).toBe('inside-width');
@@ -31,7 +38,9 @@ test('a form sent unchanged changes nothing and sets nothing', () => {
 
 test('one changed field is read and the others stay unset, so that usual values go on following', () => {
   expect(send({ ...INCHES, 'inside-width': '5 3/8' }).sizing.values).toEqual({ 'inside width': 136.525 });
-  expect(send({ ...INCHES, 'inside-width': 'five and three eighths' }).sizing.values).toEqual({ 'inside width': 136.525 });
+  expect(send({ ...INCHES, 'inside-width': 'five and three eighths' }).sizing.values).toEqual({
+    'inside width': 136.525,
+  });
   expect(send({ ...INCHES, 'inside-width': '136 mm' }).sizing.values).toEqual({ 'inside width': 136 });
 });
 
@@ -59,12 +68,20 @@ test('a field that does not read keeps what was typed, with a sentence; the othe
   const { sizing, typed } = send({ 'inside-width': '5', 'inside-height': 'tall', flap: '2' });
   expect(sizing.values).toEqual({ 'inside width': 127 });
   expect(typed['inside height']?.text).toBe('tall');
-  expect(typed['inside height']?.sentence).toBe('“tall” does not read as a length. Write it like 5 3/8 in, 5.375 in, 136 mm or 13.6 cm.');
+  expect(typed['inside height']?.sentence).toBe(
+    '“tall” does not read as a length. Write it like 5 3/8 in, 5.375 in, 136 mm or 13.6 cm.',
+  );
 });
 
 test('choices and cut grid are taken when they exist and left alone when they do not', () => {
-  expect(send({ ...INCHES, corners: 'rounded', cut: '1/8in' }).sizing).toMatchObject({ choices: { corners: 'rounded' }, grid: '1/8in' });
-  expect(send({ ...INCHES, corners: 'wavy', cut: '1mm' }).sizing).toMatchObject({ choices: { corners: 'square' }, grid: '1/16in' });
+  expect(send({ ...INCHES, corners: 'rounded', cut: '1/8in' }).sizing).toMatchObject({
+    choices: { corners: 'rounded' },
+    grid: '1/8in',
+  });
+  expect(send({ ...INCHES, corners: 'wavy', cut: '1mm' }).sizing).toMatchObject({
+    choices: { corners: 'square' },
+    grid: '1/16in',
+  });
 });
 
 test('what the form makes of it survives a link', () => {

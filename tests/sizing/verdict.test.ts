@@ -9,7 +9,8 @@ if (!compiled.ok) throw new Error(JSON.stringify(compiled.faults));
 const model: Model = compiled.value;
 const authors: Sizing = { values: {}, choices: {}, units: 'in', grid: '1/16in' };
 const tall = (inches: number): Sizing => ({ ...authors, values: { 'inside height': inches * INCH } });
-const heightOf = (figures: { measures: readonly { name: string; exact: number }[] }) => figures.measures.find(({ name }) => name === 'inside height')?.exact;
+const heightOf = (figures: { measures: readonly { name: string; exact: number }[] }) =>
+  figures.measures.find(({ name }) => name === 'inside height')?.exact;
 
 test('a size that can be made is shown as it is asked', () => {
   const verdict = judge(model, tall(7), authors);
@@ -24,7 +25,9 @@ test('a size whose fit fails keeps the last good figures and offers the nearest 
   expect(verdict.good).toBe(false);
   expect(heightOf(verdict.figures)).toBe(228.6);
   expect(heightOf(verdict.shown)).toBe(152.4);
-  expect(verdict.refusals.map(({ problem }) => [problem.code, problem.measure])).toEqual([['fit fails', 'inside height']]);
+  expect(verdict.refusals.map(({ problem }) => [problem.code, problem.measure])).toEqual([
+    ['fit fails', 'inside height'],
+  ]);
   expect(verdict.refusals[0]?.cures.map(({ label }) => label)).toEqual(['Use 8\u00a0in', 'Back to 6\u00a0in']);
   expect(verdict.refusals[0]?.cures[0]?.sizing.values).toEqual({ 'inside height': 203.2 });
 });
@@ -37,7 +40,9 @@ test('without a last good size the nearest that works is shown', () => {
 
 test('a size outside its range says which measure and the end of the range', () => {
   const verdict = judge(model, { ...authors, values: { 'inside width': 9 * INCH } }, authors, { nearest: true });
-  expect(verdict.refusals.map(({ problem }) => [problem.code, problem.measure, problem.nearest])).toEqual([['above range', 'inside width', 203.2]]);
+  expect(verdict.refusals.map(({ problem }) => [problem.code, problem.measure, problem.nearest])).toEqual([
+    ['above range', 'inside width', 203.2],
+  ]);
   expect(verdict.shown.problems).toEqual([]);
 });
 

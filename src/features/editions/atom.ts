@@ -64,5 +64,4 @@ function entryXml(entry: FeedEntry, siteUrl: string): string {
 }
 
 /** XML 1.0 has no place for most control characters, not even escaped. */
-// eslint-disable-next-line no-control-regex -- they are what is taken out
 const text = (words: string): string => esc(words.replace(/[\u0000-\u0008\u000b\u000c\u000e-\u001f\ufffe\uffff]/g, ''));

@@ -44,6 +44,8 @@ function workOut(edition: Edition): CardFacts {
     sheets: tooLarge ? `Needs more than ${plan.stock.name}` : `Takes ${plan.used} of ${plan.stock.name}`,
     tooLarge,
     time: shortTimeWords(edition.minutes),
-    picture: edition.hero ? null : drawingSvg(drawFolded(model, figures, { width: 240, height: 180 }), { class: 'folded' }),
+    picture: edition.hero
+      ? null
+      : drawingSvg(drawFolded(model, figures, { width: 240, height: 180 }), { class: 'folded' }),
   };
 }

@@ -69,7 +69,10 @@ export function editionHistory(projectId: string): readonly EditionNote[] {
 export function listPublished({ limit, offset = 0, order = 'newest', ...filter }: PublishedPage): readonly Edition[] {
   return select()
     .where(matches(filter))
-    .orderBy(...(order === 'title' ? [asc(sql`lower(${editions.title})`)] : [desc(editions.publishedAt)]), asc(projects.slug))
+    .orderBy(
+      ...(order === 'title' ? [asc(sql`lower(${editions.title})`)] : [desc(editions.publishedAt)]),
+      asc(projects.slug),
+    )
     .limit(limit)
     .offset(offset)
     .all()

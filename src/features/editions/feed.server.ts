@@ -23,7 +23,11 @@ export function projectFeed(): { readonly xml: string; readonly parts: readonly 
 }
 
 function toEntry(edition: Edition): FeedEntry {
-  const first = db.select({ at: min(editions.publishedAt) }).from(editions).where(eq(editions.projectId, edition.projectId)).get();
+  const first = db
+    .select({ at: min(editions.publishedAt) })
+    .from(editions)
+    .where(eq(editions.projectId, edition.projectId))
+    .get();
   return {
     projectId: edition.projectId,
     slug: edition.slug,
@@ -51,7 +55,10 @@ function contentHtml(edition: Edition): string {
   const picture = edition.hero
     ? `<p><img src="${esc(config.siteUrl + jpegUrl(edition.hero.id))}" alt="${esc(edition.title)}"></p>`
     : '';
-  const correction = edition.correctionNote === '' ? '' : `<p><strong>Corrected in edition ${edition.n}.</strong> ${esc(edition.correctionNote)}</p>`;
+  const correction =
+    edition.correctionNote === ''
+      ? ''
+      : `<p><strong>Corrected in edition ${edition.n}.</strong> ${esc(edition.correctionNote)}</p>`;
   const summary = edition.summary || edition.pattern.summary;
   return (
     `${picture}<p>${esc(summary)}</p>${correction}<ul>${facts.map((fact) => `<li>${esc(fact)}</li>`).join('')}</ul>` +

@@ -14,7 +14,12 @@ export interface AuthorsFigures {
 }
 
 /** An edition's pattern, compiled. The proof list let it through, so that it does not compile is our own fault. */
-export function modelOf(edition: { readonly id: string; readonly slug: string; readonly n: number; readonly pattern: Pattern }): Model {
+export function modelOf(edition: {
+  readonly id: string;
+  readonly slug: string;
+  readonly n: number;
+  readonly pattern: Pattern;
+}): Model {
   return kept(models, edition.id, () => {
     const compiled = compilePattern(edition.pattern);
     if (!compiled.ok) {

@@ -39,13 +39,21 @@ export function publishEdition(projectId: string, request: PublishRequest, now =
       if (!project || project.deletedAt || !by || (by.role !== 'admin' && project.authorId !== by.id)) {
         return refuse({ code: 'not found' });
       }
-      if (project.revision !== request.revision) return refuse({ code: 'changed meanwhile', revision: project.revision });
+      if (project.revision !== request.revision)
+        return refuse({ code: 'changed meanwhile', revision: project.revision });
 
       const items = proofList(project).filter((item) => item.blocking);
       if (items.length > 0) return refuse({ code: 'proof blocks', items });
 
       const pictures = uploadsIn(project.writeUp, project.heroUploadId);
-      const kept = pictures.length === 0 ? [] : tx.select({ id: uploads.id }).from(uploads).where(inArray(uploads.id, [...pictures])).all();
+      const kept =
+        pictures.length === 0
+          ? []
+          : tx
+              .select({ id: uploads.id })
+              .from(uploads)
+              .where(inArray(uploads.id, [...pictures]))
+              .all();
       const missing = pictures.filter((id) => !kept.some((upload) => upload.id === id));
       if (missing.length > 0) return refuse({ code: 'picture missing', uploads: missing });
 

@@ -64,7 +64,11 @@ function readForm(model: Model, params: URLSearchParams, authors: Sizing): Readi
 function readLink(model: Model, params: URLSearchParams, authors: Sizing): Reading {
   const { sizing, faults } = readSizing(model, params, authors);
   // A link that names units alone takes those units' usual cut grid.
-  return { sizing: inUnits(sizing, sizing.units), typed: {}, faults: faults.map((fault) => ({ where: fault.where, sentence: readingWords([fault]) })) };
+  return {
+    sizing: inUnits(sizing, sizing.units),
+    typed: {},
+    faults: faults.map((fault) => ({ where: fault.where, sentence: readingWords([fault]) })),
+  };
 }
 
 function cardFaults(card: string | null): readonly FieldFault[] {

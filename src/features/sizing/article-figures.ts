@@ -21,7 +21,11 @@ export function articleFigures(root: ParentNode, model: Model): ArticleFigures {
     text: { formula: element.dataset.live ?? '', bare: element.dataset.bare !== undefined },
     html: element.innerHTML,
   }));
-  const cards = [...root.querySelectorAll<HTMLElement>('[data-piece]')];
+  const cards = [...root.querySelectorAll<HTMLElement>('[data-piece]')].map((element) => ({
+    element,
+    piece: element.dataset.piece ?? '',
+    html: '',
+  }));
   const lists = [...root.querySelectorAll<HTMLElement>('[data-cut-list]')];
 
   return {
@@ -37,7 +41,14 @@ export function articleFigures(root: ParentNode, model: Model): ArticleFigures {
         span.element.classList.toggle('unknown', html.includes('unknown-mark'));
         markChanged(span.element);
       }
-      for (const card of cards) morphInto(card, pieceCardInside(figures, card.dataset.piece ?? ''), markChanged);
+      const drawn = new Map<string, string>();
+      for (const card of cards) {
+        let html = drawn.get(card.piece);
+        if (html === undefined) drawn.set(card.piece, (html = pieceCardInside(figures, card.piece)));
+        if (html === card.html) continue;
+        card.html = html;
+        morphInto(card.element, html, markChanged);
+      }
       for (const list of lists) morphInto(list, cutListInside(figures), markChanged);
     },
   };

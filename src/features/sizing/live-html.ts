@@ -24,7 +24,8 @@ export function sizingHref({ model, authors, path, keep = '' }: Links, sizing: S
   return `${path}${below}${query === '' ? '' : `?${query}`}`;
 }
 
-const CHECK = '<svg class="icon" viewBox="0 0 24 24" width="20" height="20" aria-hidden="true"><path d="M4.5 12.5 10 18 19.5 7"/></svg>';
+const CHECK =
+  '<svg class="icon" viewBox="0 0 24 24" width="20" height="20" aria-hidden="true"><path d="M4.5 12.5 10 18 19.5 7"/></svg>';
 const WARNING =
   '<svg class="icon" viewBox="0 0 24 24" width="20" height="20" aria-hidden="true"><path d="M12 3.5 22 20.5H2ZM12 10v5M12 17.6v.4"/></svg>';
 
@@ -32,7 +33,10 @@ const WARNING =
 export function factsHtml(figures: Figures, plan: SheetPlan, minutes: number | null): string {
   const { units, grid } = figures.sizing;
   const outside = figures.finished.outside
-    .map(({ mm, name }) => `<span class="measure" title="${esc(name)}">${esc(show(mm, { units, grid, bare: true }).typeset)}</span>`)
+    .map(
+      ({ mm, name }) =>
+        `<span class="measure" title="${esc(name)}">${esc(show(mm, { units, grid, bare: true }).typeset)}</span>`,
+    )
     .join(' × ');
   const cut = cutWords(figures);
   const rows: [string, string][] = [
@@ -55,7 +59,12 @@ export function fitsHtml(figures: Figures, plan: SheetPlan): string {
   });
   const large = plan.tooLarge.length > 0;
   const sheets = large
-    ? item('fails', `Too large for ${plan.stock.name}`, plan.tooLarge.map(({ name }) => name).join(', '), `<span class="fit-why">${esc(plan.tooLarge[0]?.hint ?? '')}</span>`)
+    ? item(
+        'fails',
+        `Too large for ${plan.stock.name}`,
+        plan.tooLarge.map(({ name }) => name).join(', '),
+        `<span class="fit-why">${esc(plan.tooLarge[0]?.hint ?? '')}</span>`,
+      )
     : item('holds', `All pieces fit ${plan.stock.name}`, `${plan.used} ${plan.used === 1 ? 'sheet' : 'sheets'}`, '');
   return [...fits, sheets].join('');
 }
@@ -69,7 +78,9 @@ const capital = (words: string): string => words.charAt(0).toUpperCase() + words
 
 /** `It closes` or what it does instead, over the list of fits. */
 export const closesWords = (figures: Figures): string =>
-  figures.fits.some((fit) => !fit.holds && !fit.advice) || figures.problems.length > 0 ? 'It does not close' : 'It closes';
+  figures.fits.some((fit) => !fit.holds && !fit.advice) || figures.problems.length > 0
+    ? 'It does not close'
+    : 'It closes';
 
 /** What is wrong at one field, with what would mend it; empty when nothing is. */
 export function fieldTroubleHtml(measure: string, verdict: Verdict, typed: Typed, links: Links): string {

@@ -27,6 +27,8 @@ function morphChildren(target: Element, source: ParentNode & Node, onFigure: (el
 }
 
 function morphAttributes(target: Element, source: Element): void {
-  for (const { name, value } of [...source.attributes]) if (target.getAttribute(name) !== value) target.setAttribute(name, value);
-  for (const { name } of [...target.attributes]) if (!source.hasAttribute(name) && name !== 'open') target.removeAttribute(name);
+  for (const { name, value } of [...source.attributes])
+    if (target.getAttribute(name) !== value) target.setAttribute(name, value);
+  for (const { name } of [...target.attributes])
+    if (!source.hasAttribute(name) && name !== 'open') target.removeAttribute(name);
 }

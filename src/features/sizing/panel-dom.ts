@@ -105,14 +105,20 @@ export function bindPanel(panel: HTMLElement, page: HTMLElement, store: ReaderSt
 /** Brings the form to a state. A field that has the caret keeps what is being typed. */
 export function showPanel(
   root: HTMLElement,
-  { view, panel, typed, links }: { readonly view: ReaderView; readonly panel: Panel; readonly typed: Typed; readonly links: Links },
+  {
+    view,
+    panel,
+    typed,
+    links,
+  }: { readonly view: ReaderView; readonly panel: Panel; readonly typed: Typed; readonly links: Links },
 ): void {
   const { verdict } = view;
   const put = (selector: string, html: string) => {
     const place = root.querySelector(selector);
     if (place) morphInto(place, html);
   };
-  for (const field of panel.fields) showField(root, field, fieldTroubleHtml(field.name, verdict, typed, links), field.name in typed);
+  for (const field of panel.fields)
+    showField(root, field, fieldTroubleHtml(field.name, verdict, typed, links), field.name in typed);
   put('[data-other-trouble]', otherTroubleHtml(verdict, links));
   put('[data-whole-steps]', wholeStepsHtml(verdict.figures, view.whole, links));
   put('[data-grids]', gridsHtml(panel));
@@ -125,7 +131,9 @@ export function showPanel(
 }
 
 function showField(root: HTMLElement, field: PanelField, trouble: string, unread: boolean): void {
-  const place = [...root.querySelectorAll<HTMLElement>('[data-field]')].find(({ dataset }) => dataset.field === field.name);
+  const place = [...root.querySelectorAll<HTMLElement>('[data-field]')].find(
+    ({ dataset }) => dataset.field === field.name,
+  );
   const input = place?.querySelector<HTMLInputElement>('input[type=text]');
   if (!place || !input) return;
   place.hidden = !field.inUse;
@@ -150,7 +158,11 @@ function showField(root: HTMLElement, field: PanelField, trouble: string, unread
     slider.min = String(field.from);
     slider.max = String(field.to);
     const ruler = place.querySelector('[data-ruler]');
-    if (ruler) morphInto(ruler, rangeRulerSvg(rangeRuler({ from: field.from, to: field.to, kind: field.kind, units: field.unit })));
+    if (ruler)
+      morphInto(
+        ruler,
+        rangeRulerSvg(rangeRuler({ from: field.from, to: field.to, kind: field.kind, units: field.unit })),
+      );
   }
   // While it is held the thumb stays under the finger; it comes to rest on its step when it is let go.
   if (!slider.matches(':active')) slider.value = String(field.value);
@@ -182,8 +194,10 @@ function measuring(slider: HTMLInputElement, store: ReaderStore) {
 }
 
 const snapTo = (value: number, step: number): number => Math.round(value / step) * step;
-const clamp = (slider: HTMLInputElement, value: number): number => Math.min(Number(slider.max), Math.max(Number(slider.min), value));
-const onStep = (slider: HTMLInputElement, value: number, store: ReaderStore): number => clamp(slider, snapTo(value, measuring(slider, store).step));
+const clamp = (slider: HTMLInputElement, value: number): number =>
+  Math.min(Number(slider.max), Math.max(Number(slider.min), value));
+const onStep = (slider: HTMLInputElement, value: number, store: ReaderStore): number =>
+  clamp(slider, snapTo(value, measuring(slider, store).step));
 
 function namesOf(model: Model): { readonly choices: ReadonlyMap<string, string> } {
   return { choices: new Map(model.pattern.choices.map(({ name }) => [parameterName(name), name])) };

@@ -1,4 +1,13 @@
-import { gridsFor, showValue, type Figures, type GridId, type MeasureFigure, type Model, type Sizing, type Unit } from '@/engine';
+import {
+  gridsFor,
+  showValue,
+  type Figures,
+  type GridId,
+  type MeasureFigure,
+  type Model,
+  type Sizing,
+  type Unit,
+} from '@/engine';
 import { chosenOption } from './sizing-values';
 
 /** One asked measure in the panel. */
@@ -57,11 +66,16 @@ export function panelFor(model: Model, figures: Figures): Panel {
   };
 }
 
-function fieldFor(measure: MeasureFigure, ask: { readonly question: string; readonly finer?: boolean }, sizing: Sizing): PanelField {
+function fieldFor(
+  measure: MeasureFigure,
+  ask: { readonly question: string; readonly finer?: boolean },
+  sizing: Sizing,
+): PanelField {
   const unit = measure.unit ?? sizing.units;
   const from = measure.from ?? measure.exact;
   const to = measure.to ?? measure.exact;
-  const told = (value: number, bare: boolean) => showValue(value, measure.kind, { units: sizing.units, grid: sizing.grid, unit: measure.unit, bare }).typeset;
+  const told = (value: number, bare: boolean) =>
+    showValue(value, measure.kind, { units: sizing.units, grid: sizing.grid, unit: measure.unit, bare }).typeset;
   return {
     name: measure.name,
     question: ask.question,
@@ -81,5 +95,6 @@ function fieldFor(measure: MeasureFigure, ask: { readonly question: string; read
 
 /** An asked value as it stands in its field: exact, not rounded to the cut grid, and without its unit. */
 export function fieldText(measure: MeasureFigure, { units, grid }: Pick<Sizing, 'units' | 'grid'>): string {
-  return showValue(measure.exact, measure.kind, { units, grid, unit: measure.unit, bare: measure.kind === 'length' }).text;
+  return showValue(measure.exact, measure.kind, { units, grid, unit: measure.unit, bare: measure.kind === 'length' })
+    .text;
 }

@@ -20,7 +20,12 @@ const MOST_LABELS = 8;
  * The ruler under a slider: ticks and figures of the range's own units, from its start to its end. Ticks stand on whole
  * steps of the unit, not of the range, so that 3 3/8 to 10 in still reads 4, 5, 6 … as a ruler does.
  */
-export function rangeRuler(range: { readonly from: number; readonly to: number; readonly kind: KindName; readonly units: Unit }): readonly RangeTick[] {
+export function rangeRuler(range: {
+  readonly from: number;
+  readonly to: number;
+  readonly kind: KindName;
+  readonly units: Unit;
+}): readonly RangeTick[] {
   const { from, to, kind, units } = range;
   if (!(to > from)) return [];
   const { mm, steps } = kind === 'length' ? MM_PER_STEP[units] : { mm: 1, steps: PLAIN_STEPS };
@@ -47,9 +52,15 @@ export function rangeRuler(range: { readonly from: number; readonly to: number; 
 /** The ruler as SVG whose places are percentages, so that it fits whatever width its slider has. */
 export function rangeRulerSvg(ticks: readonly RangeTick[]): string {
   const length = { short: 5, middle: 8, tall: 11 };
-  const lines = ticks.map(({ at, height }) => `<line x1="${at.toFixed(2)}%" x2="${at.toFixed(2)}%" y1="0" y2="${length[height]}"/>`);
+  const lines = ticks.map(
+    ({ at, height }) => `<line x1="${at.toFixed(2)}%" x2="${at.toFixed(2)}%" y1="0" y2="${length[height]}"/>`,
+  );
   const figures = ticks.flatMap(({ at, label }) =>
-    label === undefined ? [] : [`<text x="${at.toFixed(2)}%" y="25" text-anchor="${at < 4 ? 'start' : at > 96 ? 'end' : 'middle'}">${label}</text>`],
+    label === undefined
+      ? []
+      : [
+          `<text x="${at.toFixed(2)}%" y="25" text-anchor="${at < 4 ? 'start' : at > 96 ? 'end' : 'middle'}">${label}</text>`,
+        ],
   );
   return `<svg class="range-ruler" width="100%" height="28" aria-hidden="true">${lines.join('')}${figures.join('')}</svg>`;
 }

@@ -68,7 +68,10 @@ function painter(page: HTMLElement, panel: HTMLElement, model: Model, data: Proj
     put('closes', closesWords(shown));
     put('dock-size', view.insideWords);
     put('dock-closes', `${closesWords(shown)} · ${view.sheetsWords}`);
-    if (folded) after(() => morphInto(folded, drawingSvg(drawFolded(model, shown, { width: 400, height: 440 }), { class: 'folded' })));
+    if (folded)
+      after(() =>
+        morphInto(folded, drawingSvg(drawFolded(model, shown, { width: 400, height: 440 }), { class: 'folded' })),
+      );
 
     const stale = lastGoodHtml(verdict, typed, links);
     page.toggleAttribute('data-stale', stale !== '');

@@ -1,7 +1,17 @@
 import { atom, type ReadableAtom } from 'nanostores';
 import {
-  defaultGrid, evaluate, GRIDS, gridsFor, readValue,
-  type Figures, type GridId, type Model, type Result, type Sizing, type Stock, type Unit,
+  defaultGrid,
+  evaluate,
+  GRIDS,
+  gridsFor,
+  readValue,
+  type Figures,
+  type GridId,
+  type Model,
+  type Result,
+  type Sizing,
+  type Stock,
+  type Unit,
 } from '@/engine';
 import { readingWords } from './reading-words';
 import { valueIn, withChoice, withValue } from './sizing-values';
@@ -31,7 +41,10 @@ export interface ReaderStore {
   ask(sizing: Sizing): void;
 }
 
-export function createReaderStore(model: Model, start: { readonly sizing: Sizing; readonly authors: Sizing; readonly stock: Stock }): ReaderStore {
+export function createReaderStore(
+  model: Model,
+  start: { readonly sizing: Sizing; readonly authors: Sizing; readonly stock: Stock },
+): ReaderStore {
   const first = judge(model, start.sizing, start.authors, { nearest: true });
   const $state = atom<ReaderState>({ verdict: first, lastGood: first.shown.sizing, typed: {}, stock: start.stock });
 
@@ -92,7 +105,15 @@ export function onWholeSteps(model: Model, sizing: Sizing, figures: Figures): Si
     const compiled = model.measures.find(({ def }) => def.name === measure.name);
     const ask = compiled?.def.ask;
     // A size that follows from the others goes on following them.
-    if (!ask || (!measure.set && compiled.formula.uses.length > 0) || ask.finer || measure.kind !== 'length' || measure.unit || !measure.inUse) continue;
+    if (
+      !ask ||
+      (!measure.set && compiled.formula.uses.length > 0) ||
+      ask.finer ||
+      measure.kind !== 'length' ||
+      measure.unit ||
+      !measure.inUse
+    )
+      continue;
     const steps = measure.exact / step;
     if (Math.abs(steps - Math.round(steps)) < 1e-6) continue;
     const nearest = Math.round(steps) * step;

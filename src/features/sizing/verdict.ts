@@ -34,7 +34,8 @@ const ROUNDS = 4;
  */
 export function judge(model: Model, asked: Sizing, fallback: Sizing, { nearest = false } = {}): Verdict {
   const figures = evaluate(model, asked);
-  if (figures.problems.length === 0) return { asked, good: true, figures, shown: figures, instead: 'nothing', refusals: [] };
+  if (figures.problems.length === 0)
+    return { asked, good: true, figures, shown: figures, instead: 'nothing', refusals: [] };
   const near = nearest ? nearestGood(model, figures) : null;
   const shown = near ?? evaluate(model, inUnitsOf(fallback, asked));
   return {
@@ -64,10 +65,16 @@ function curesFor(problem: SizingProblem, asked: Sizing, figures: Figures, shown
   const measure = figures.measures.find(({ name }) => name === problem.measure);
   if (!measure?.asked) return [];
   const good = shown.measures.find(({ name }) => name === problem.measure);
-  const named = (value: number) => showValue(value, measure.kind, { units: asked.units, grid: asked.grid, unit: measure.unit }).typeset;
+  const named = (value: number) =>
+    showValue(value, measure.kind, { units: asked.units, grid: asked.grid, unit: measure.unit }).typeset;
   const cures: Cure[] = [];
-  if (problem.nearest !== null) cures.push({ label: `Use ${named(problem.nearest)}`, sizing: withValue(asked, problem.measure, problem.nearest) });
-  if (good && good.exact !== measure.exact && named(good.exact) !== (problem.nearest === null ? '' : named(problem.nearest))) {
+  if (problem.nearest !== null)
+    cures.push({ label: `Use ${named(problem.nearest)}`, sizing: withValue(asked, problem.measure, problem.nearest) });
+  if (
+    good &&
+    good.exact !== measure.exact &&
+    named(good.exact) !== (problem.nearest === null ? '' : named(problem.nearest))
+  ) {
     cures.push({ label: `Back to ${named(good.exact)}`, sizing: withValue(asked, problem.measure, good.exact) });
   }
   return cures;

@@ -14,17 +14,28 @@ const MOST_COPIES = 12;
 export const GET: APIRoute = ({ params, url, request }) => {
   const page = loadReaderPage(params.slug ?? '', url);
   if (!page) {
-    return problem(404, 'No such project', { detail: 'Nothing is published at this address. /projects lists what is.', code: 'not-found' });
+    return problem(404, 'No such project', {
+      detail: 'Nothing is published at this address. /projects lists what is.',
+      code: 'not-found',
+    });
   }
   if (page.faults.length > 0) {
     const errors = page.faults.map(({ where, sentence }) => ({ where, sentence }));
-    return problem(400, 'Something in the address does not read', { detail: errors[0]?.sentence, code: 'bad-sizing', errors });
+    return problem(400, 'Something in the address does not read', {
+      detail: errors[0]?.sentence,
+      code: 'bad-sizing',
+      errors,
+    });
   }
   const text = url.searchParams.get('copies') ?? '1';
   const copies = /^\d{1,4}$/.test(text) ? Number(text) : 0;
   if (copies < 1 || copies > MOST_COPIES) {
     const sentence = `“${text}” is no number of copies. Give a whole number from 1 to ${MOST_COPIES}.`;
-    return problem(400, 'Something in the address does not read', { detail: sentence, code: 'bad-copies', errors: [{ where: 'copies', sentence }] });
+    return problem(400, 'Something in the address does not read', {
+      detail: sentence,
+      code: 'bad-copies',
+      errors: [{ where: 'copies', sentence }],
+    });
   }
   const tag = tagOf(['figures', page.edition.id, url.search]);
   if (hasTag(request, tag)) return notModified(tag);

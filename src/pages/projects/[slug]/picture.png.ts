@@ -9,5 +9,7 @@ export const GET: APIRoute = ({ params, request }) => {
   if (!edition) return problem(404, 'No such project', { code: 'not-found' });
   const tag = tagOf(['picture', edition.id]);
   if (hasTag(request, tag)) return notModified(tag);
-  return new Response(new Uint8Array(previewPicture(edition)), { headers: { ...publicHeaders(tag), 'content-type': 'image/png' } });
+  return new Response(new Uint8Array(previewPicture(edition)), {
+    headers: { ...publicHeaders(tag), 'content-type': 'image/png' },
+  });
 };
