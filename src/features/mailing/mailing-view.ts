@@ -39,6 +39,6 @@ export interface SendingView {
   readonly nextRetryAt: number | null;
   /** The mail server is away; when it is tried next. */
   readonly away: { readonly until: number; readonly reply: string } | null;
-  /** Nothing has moved for two minutes though something should have. */
+  /** Nothing moves though something should. */
   readonly isStuck: boolean;
 }

@@ -15,6 +15,7 @@ import { missingIn, type MailingInput } from './mailing-text-input';
 import type { MailingView, SendingView } from './mailing-view';
 import { acceptedSince, countDeliveries, troublesOf } from './outbox.server';
 import { listHeaders, senderParts } from './sender';
+import { workerSeenAt } from './worker-lease.server';
 
 export interface Sender extends Asker {
   readonly name: string;
@@ -290,8 +291,14 @@ function sendingView(row: Row, now: number): SendingView {
       gate && gate.opensAt > now - MINUTE && row.state === 'sending'
         ? { until: gate.opensAt, reply: gate.reply }
         : null,
-    isStuck: isBusy && !gate && now - lastMove(row) > 2 * MINUTE,
+    isStuck: isBusy && !gate && standsStill(row, now),
   };
+}
+
+/** No worker to be seen, or one that has done nothing for two minutes. */
+function standsStill(row: Row, now: number): boolean {
+  const rest = now - lastMove(row);
+  return rest > 2 * MINUTE || (rest > MINUTE / 4 && now - (workerSeenAt() ?? 0) > MINUTE / 2);
 }
 
 function lastMove(row: Row): number {

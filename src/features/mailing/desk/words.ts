@@ -29,7 +29,7 @@ export function headline(state: MailingState, { accepted, total }: Counts): stri
 export function progressWords(state: MailingState, { counts, perMinute, isStuck, pauseReason }: SendingView): string {
   const { waiting, retrying, uncertain } = counts;
   if (isStuck)
-    return 'Nothing has moved for two minutes. The mail worker may not be running: start the site again, and it goes on where it was.';
+    return 'Nothing is moving: the mail worker seems not to be running. Start the site again, and it goes on where it was.';
   switch (state) {
     case 'draft':
     case 'preparing':
@@ -80,7 +80,7 @@ export function troubleWords({ what, reply, enhanced, suppressed, nextAt }: Trou
         what: 'Refused',
         said: isReply ? `“${reply}”` : reply,
         remark: aboutUs ? 'about us, not about the person' : '',
-        happens: suppressed ? 'not written to again; an admin can put them back' : 'not tried again; stays on the list',
+        happens: suppressed ? 'not written to again, in any mailing' : 'not tried again; stays on the list',
       };
     case 'expired':
       return {
