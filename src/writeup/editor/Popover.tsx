@@ -25,6 +25,7 @@ export function Popover({ label, anchor, within, onClose, children }: PopoverPro
     element.style.top = `${bottom - frame.top + 6}px`;
     element.scrollIntoView({ block: 'nearest' });
     // Placed once, where it was asked for: it does not wander while one types in it.
+    // eslint-disable-next-line react-hooks/exhaustive-deps
   }, []);
 
   return (

@@ -4,7 +4,7 @@ import type { Editor } from '@tiptap/core';
 import { NodeSelection } from '@tiptap/pm/state';
 import { EditorContent, useEditor, useEditorState } from '@tiptap/react';
 import type { ReadableAtom } from 'nanostores';
-import { useEffect, useRef, useState, type KeyboardEvent } from 'react';
+import { useEffect, useRef, useState } from 'react';
 import { WRITE_UP_VERSION, type DocNode, type WriteUp } from '../document';
 import type { FiguresStore } from '../figures-store';
 import type { LiveText } from '../live';
@@ -20,6 +20,7 @@ import { PieceList } from './PieceList';
 import { Popover } from './Popover';
 import { pictureSender } from './send-picture';
 import { markTools, partTools, toolState } from './tools';
+import { shortcut } from './shortcuts';
 import { Toolbar } from './Toolbar';
 import { insertPart, linkAt, putMeasure, setLink } from './writing';
 
@@ -231,23 +232,4 @@ export function WriteUpEditor({ initial, figures, lit, uploads, onChange, onSele
       </p>
     </div>
   );
-}
-
-/** What a key does that ProseMirror does not know of; also from a step's title or a photo's words. */
-function shortcut(
-  { altKey, shiftKey, ctrlKey, metaKey, code, key }: KeyboardEvent,
-  editor: Editor,
-  open: { readonly openLink: () => void; readonly openPiece: () => void; readonly choosePhoto: () => void },
-): (() => void) | undefined {
-  if ((ctrlKey || metaKey) && !altKey) return key.toLowerCase() === 'k' ? open.openLink : undefined;
-  if (!altKey || !shiftKey || ctrlKey || metaKey) return undefined;
-  // By place on the keyboard: on some layouts Alt turns letters into other signs.
-  return {
-    KeyP: open.openPiece,
-    KeyO: open.choosePhoto,
-    KeyT: () => insertPart(editor, 'tip'),
-    KeyC: () => insertPart(editor, 'caution'),
-    KeyM: () => insertPart(editor, 'materials'),
-    KeyL: () => insertPart(editor, 'cutList'),
-  }[code];
 }
