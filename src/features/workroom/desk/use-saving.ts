@@ -45,8 +45,11 @@ export function useSaving(store: DeskStore, project: OpenProject): Saving {
     void openCopyKeeper(project.id).then(async (opened) => {
       if (gone) return opened.close();
       keeper = opened;
-      const [copy] = await opened.takeOrphans();
-      if (copy === undefined || sameState(copy.state, store.$state.get())) return opened.drop();
+      const [copy, ...older] = await opened.orphans();
+      for (const other of older) if (await keepAsDraft(project.id, other.state, store.$state.get())) other.forget();
+      if (copy === undefined || gone) return;
+      copy.forget();
+      if (sameState(copy.state, store.$state.get())) return;
       if (copy.revision === project.revision) {
         setNotice({ words: 'What was typed here and not yet saved has been brought back.' });
       } else {
@@ -117,4 +120,10 @@ export function useSaving(store: DeskStore, project: OpenProject): Saving {
       setNotice({ words: `The other is shown now, revision ${other.value.revision}. Yours is kept as the draft “${copy.value.title}”.`, link: { href: `/workroom/${copy.value.id}`, words: 'Open it' } });
     },
   };
+}
+
+/** Stores a state as a draft of its own, unless it says nothing that is not there already. False: it could not be stored. */
+async function keepAsDraft(projectId: string, state: ProjectState, now: ProjectState): Promise<boolean> {
+  if (sameState(state, now)) return true;
+  return (await call(`/api/projects/${projectId}/duplicate`, { method: 'POST', body: { state } })).ok;
 }

@@ -13,8 +13,8 @@ const TAB = `${PREFIX}.tab`;
 export interface CopyKeeper {
   keep(state: ProjectState, revision: number): void;
   drop(): void;
-  /** Copies that no open tab is busy with, newest first. Reading takes them over: they are this tab's from now on. */
-  takeOrphans(): Promise<readonly LocalCopy[]>;
+  /** Copies that no other open tab is busy with, newest first; each stays until it is forgotten. */
+  orphans(): Promise<readonly (LocalCopy & { forget(): void })[]>;
   close(): void;
 }
 
@@ -28,27 +28,32 @@ export async function openCopyKeeper(projectId: string): Promise<CopyKeeper> {
   return {
     keep: (state, revision) => write(key, JSON.stringify({ state, revision, keptAt: Date.now() } satisfies LocalCopy)),
     drop: () => localStorage.removeItem(key),
-    async takeOrphans() {
+    async orphans() {
       const held = await heldTabs();
-      const copies: LocalCopy[] = [];
-      for (const found of Object.keys(localStorage)) {
-        const owner = found.startsWith(`${PREFIX}.${projectId}.`) ? found.slice(`${PREFIX}.${projectId}.`.length) : null;
-        if (owner === null || (owner !== tab && held.has(owner))) continue;
-        const copy = read(localStorage.getItem(found));
-        if (copy !== null) copies.push(copy);
-        if (found !== key) localStorage.removeItem(found);
-      }
-      return copies.sort((a, b) => b.keptAt - a.keptAt);
+      const prefix = `${PREFIX}.${projectId}.`;
+      return Object.keys(localStorage)
+        .filter((found) => found.startsWith(prefix) && (found === key || !held.has(found.slice(prefix.length))))
+        .flatMap((found) => {
+          const copy = read(localStorage.getItem(found));
+          return copy === null ? [] : [{ ...copy, forget: () => localStorage.removeItem(found) }];
+        })
+        .sort((a, b) => b.keptAt - a.keptAt);
     },
     close: release,
   };
 }
 
-/** The name in the session survives a reload; a duplicated tab finds it locked and takes a new one. */
+/**
+ * The name in the session survives a reload; a duplicated tab finds it locked and takes a new one. After a reload the page
+ * that is going may hold its lock for a moment longer, so it is asked for more than once.
+ */
 async function claimTab(): Promise<{ readonly tab: string; readonly release: () => void }> {
   const known = sessionStorage.getItem(TAB);
-  const free = known === null ? null : await hold(known);
-  if (known !== null && free !== null) return { tab: known, release: free };
+  for (let tries = 0; known !== null && tries < 5; tries += 1) {
+    const free = await hold(known);
+    if (free !== null) return { tab: known, release: free };
+    await new Promise((resolve) => setTimeout(resolve, 150));
+  }
   const tab = crypto.randomUUID();
   sessionStorage.setItem(TAB, tab);
   return { tab, release: (await hold(tab)) ?? (() => undefined) };
