@@ -25,7 +25,7 @@ export interface PieceDrawingOptions extends Pick<ShowOptions, 'units' | 'grid'>
  */
 export function drawPiece(piece: PieceFigure, options: PieceDrawingOptions): Drawing {
   const { net } = piece;
-  const { units, grid, width, dims = true, labels = true, tallest = 420 } = options;
+  const { units, grid, width, dims = true, labels = true, tallest = 340 } = options;
   const figure = figureMaker(GRIDS[grid ?? defaultGrid(units)].step, piece.thickness);
   // A position a card's thickness off the ruler carries a sign; the sentences say what it means.
   const says = (mm: number) => {

@@ -108,7 +108,9 @@ export function planSheets({ pieces }: { readonly pieces: readonly PieceFigure[]
   let best: Tree[] = [];
   let bestScore = Infinity;
   const random = seeded(usable.length * 7919 + 17);
-  for (let index = 0; index < tries; index += 1) {
+  // Many copies leave little to win by other orders, and each order costs more.
+  const rounds = Math.max(2, Math.min(tries, Math.ceil(2400 / Math.max(1, usable.length))));
+  for (let index = 0; index < rounds; index += 1) {
     const trees = pack(orderOf(usable, index, random), area, index % 2 === 0);
     const score = trees.length * 10 - largestFree(trees) / (area.w * area.h);
     if (score < bestScore - 1e-9) {
@@ -145,28 +147,35 @@ function orderOf(blanks: readonly Blank[], index: number, random: () => number):
     .map(({ blank }) => blank);
 }
 
+/** A sheet that is being filled, with what is free on it. */
+interface Filling {
+  readonly tree: Tree;
+  readonly free: readonly Box[];
+}
 /** Each blank goes where it leaves the least on its shorter side; a new sheet when it goes nowhere. */
 function pack(blanks: readonly Blank[], area: Box, longFirst: boolean): Tree[] {
-  const trees: Tree[] = [];
+  const sheets: Filling[] = [];
   for (const blank of blanks) {
+    const ways: readonly boolean[] = same(blank.across, blank.along) ? [false] : [false, true];
     let found: { sheet: number; box: Box; turned: boolean; left: number } | null = null;
-    trees.forEach((tree, sheet) => {
-      for (const box of freeBoxes(tree))
-        for (const turned of same(blank.across, blank.along) ? [false] : [false, true]) {
+    for (let sheet = 0; sheet < sheets.length; sheet += 1) {
+      for (const box of (sheets[sheet] as Filling).free) {
+        for (const turned of ways) {
           const [w, h] = turned ? [blank.along, blank.across] : [blank.across, blank.along];
           if (!atLeast(box.w, w) || !atLeast(box.h, h)) continue;
           const left = Math.min(box.w - w, box.h - h);
           if (!found || moreThan(found.left, left)) found = { sheet, box, turned, left };
         }
-    });
-    const place = found as { sheet: number; box: Box; turned: boolean } | null;
-    if (place) trees[place.sheet] = put(trees[place.sheet] as Tree, place.box, blank, place.turned, longFirst);
-    else {
-      const turned = !atLeast(area.w, blank.across) || !atLeast(area.h, blank.along);
-      trees.push(put({ type: 'free', box: area }, area, blank, turned, longFirst));
+      }
     }
+    const turned = found?.turned ?? (!atLeast(area.w, blank.across) || !atLeast(area.h, blank.along));
+    const before: Tree = found ? (sheets[found.sheet] as Filling).tree : { type: 'free', box: area };
+    const tree = put(before, found?.box ?? area, blank, turned, longFirst);
+    const filled = { tree, free: freeBoxes(tree) };
+    if (found) sheets[found.sheet] = filled;
+    else sheets.push(filled);
   }
-  return trees;
+  return sheets.map(({ tree }) => tree);
 }
 const freeBoxes = (tree: Tree): readonly Box[] =>
   tree.type === 'free' ? [tree.box] : tree.type === 'cut' ? [...freeBoxes(tree.first), ...freeBoxes(tree.second)] : [];
