@@ -1,5 +1,4 @@
 import { useStore } from '@nanostores/react';
-import '@/styles/writeup-editor.css';
 import type { Editor } from '@tiptap/core';
 import { NodeSelection } from '@tiptap/pm/state';
 import { EditorContent, useEditor, useEditorState } from '@tiptap/react';
