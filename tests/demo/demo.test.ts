@@ -2,8 +2,29 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { openDatabase, useDatabase } from '@/db/client.server';
 import { migrateDatabase } from '@/db/migrate.server';
 import { db } from '@/db/client.server';
-import { attempts, deliveries, editions, letters, mailings, projects, settings, subscribers, suppressions, users } from '@/db/schema';
-import { compileLive, compilePattern, evaluate, showValue, type ChoiceDef, type Figures, type Model, type Pattern, type Sizing } from '@/engine';
+import {
+  attempts,
+  deliveries,
+  editions,
+  letters,
+  mailings,
+  projects,
+  settings,
+  subscribers,
+  suppressions,
+  users,
+} from '@/db/schema';
+import {
+  compileLive,
+  compilePattern,
+  evaluate,
+  showValue,
+  type ChoiceDef,
+  type Figures,
+  type Model,
+  type Pattern,
+  type Sizing,
+} from '@/engine';
 import { passwordFits } from '@/features/accounts/passwords.server';
 import { DEMO_PEOPLE } from '@/features/demo/people';
 import { seedDemo } from '@/features/demo/seed.server';
@@ -57,11 +78,22 @@ describe('what the demo holds', () => {
   it('has three published projects in four editions, and a draft', () => {
     const rows = db.select().from(projects).all();
     expect(rows).toHaveLength(4);
-    expect(rows.filter(({ publishedRevision }) => publishedRevision !== null).map(({ slug }) => slug).sort()).toEqual([...SLUGS].sort());
+    expect(
+      rows
+        .filter(({ publishedRevision }) => publishedRevision !== null)
+        .map(({ slug }) => slug)
+        .sort(),
+    ).toEqual([...SLUGS].sort());
     expect(db.select().from(editions).all()).toHaveLength(4);
   });
   it('is marked as the demo', () => {
-    expect(db.select().from(settings).all().map(({ key }) => key)).toContain('demo');
+    expect(
+      db
+        .select()
+        .from(settings)
+        .all()
+        .map(({ key }) => key),
+    ).toContain('demo');
   });
   it('has 25 subscribers: 22 on the list in every unit, 2 who have not confirmed, 1 who left', () => {
     const rows = db.select().from(subscribers).all();
@@ -77,7 +109,10 @@ describe('what the demo holds', () => {
   it('says what edition 2 of the swap-day box corrected', () => {
     expect(published('swap-day-box').n).toBe(2);
     expect(published('swap-day-box').correctionNote).toMatch(/cut a new blank/);
-    const formulas = (n: number) => collectUses(published('swap-day-box', n).writeUp.doc).formulas.filter(({ step }) => step === 7).map(({ formula }) => formula);
+    const formulas = (n: number) =>
+      collectUses(published('swap-day-box', n).writeUp.doc)
+        .formulas.filter(({ step }) => step === 7)
+        .map(({ formula }) => formula);
     expect(formulas(1).slice(0, 3)).toEqual(['lid.across', 'lid.along', 'inside height']);
     expect(formulas(2).slice(0, 3)).toEqual(['lid.across', 'lid.along', 'lid height']);
   });
@@ -92,12 +127,18 @@ describe('the mailing that was sent', () => {
     expect(copies.filter(({ state, attempts: tries }) => state === 'accepted' && tries === 2)).toHaveLength(1);
     expect(copies.filter(({ state }) => state === 'rejected')).toMatchObject([{ code: 550, enhanced: '5.1.1' }]);
     expect(db.select().from(attempts).all()).toHaveLength(22);
-    expect(db.select().from(suppressions).all()).toMatchObject([{ emailKey: 'pascoe@marrowend.example', reason: 'hard' }]);
+    expect(db.select().from(suppressions).all()).toMatchObject([
+      { emailKey: 'pascoe@marrowend.example', reason: 'hard' },
+    ]);
   });
   it('went out after the edition, within minutes', () => {
     const [mailing] = db.select().from(mailings).all();
     const out = published('seed-keepers-book-box').publishedAt.getTime();
-    const times = db.select().from(deliveries).all().flatMap(({ acceptedAt }) => acceptedAt?.getTime() ?? []);
+    const times = db
+      .select()
+      .from(deliveries)
+      .all()
+      .flatMap(({ acceptedAt }) => acceptedAt?.getTime() ?? []);
     expect(Math.min(...times)).toBeGreaterThan(out);
     expect(mailing?.finishedAt?.getTime()).toBe(Math.max(...times));
     expect(Math.max(...times) - Math.min(...times)).toBeLessThan(10 * 60_000);
@@ -111,7 +152,13 @@ describe('the mailing that was sent', () => {
   });
   it('leaves nothing to be sent when the site starts', () => {
     expect(db.select().from(letters).all()).toEqual([]);
-    expect(db.select().from(deliveries).all().filter(({ state }) => ['queued', 'leased', 'in_flight', 'unknown'].includes(state))).toEqual([]);
+    expect(
+      db
+        .select()
+        .from(deliveries)
+        .all()
+        .filter(({ state }) => ['queued', 'leased', 'in_flight', 'unknown'].includes(state)),
+    ).toEqual([]);
   });
 });
 
@@ -133,7 +180,9 @@ describe('the write-ups', () => {
   });
   it('use every piece of the pattern in a step', () => {
     each(({ title, pattern, writeUp }) => {
-      const used = collectUses(writeUp.doc).pieces.filter(({ step }) => step !== null).map(({ piece }) => piece);
+      const used = collectUses(writeUp.doc)
+        .pieces.filter(({ step }) => step !== null)
+        .map(({ piece }) => piece);
       expect(new Set(used), title).toEqual(new Set(pattern.pieces.map(({ name }) => name)));
     });
   });
@@ -142,7 +191,10 @@ describe('the write-ups', () => {
       const { doc } = published(slug).writeUp;
       const uses = collectUses(doc);
       expect([uses.cutLists.length, uses.materials.length], slug).toEqual([1, 1]);
-      const cautions = blocksOf(doc.content).filter(({ type }) => type === 'caution').map((node) => textOf(node)).join(' ');
+      const cautions = blocksOf(doc.content)
+        .filter(({ type }) => type === 'caution')
+        .map((node) => textOf(node))
+        .join(' ');
       for (const word of [/trimmer/i, /child/, /maker/]) expect(cautions, slug).toMatch(word);
     }
     expect(textOf(published('seed-keepers-book-box').writeUp.doc)).toMatch(/food/);
@@ -171,7 +223,9 @@ describe('the write-ups', () => {
     // 2.25 in over a 4.5 in circle spans 2 asin(1/2) = 60°: an arc of 4.5 pi / 6 = 2.356 in.
     const value = valueOf(model, 'lower spine.strip', evaluate(model, sizing));
     expect(showValue(value ?? 0, 'length', { units: 'in', grid: '1/16in' }).text).toBe('2 3/8 in');
-    const sizes = ['inside height', 'inside width', 'inside depth', 'circle', 'overhang'].map((name) => valueOf(model, name, evaluate(model, sizing)));
+    const sizes = ['inside height', 'inside width', 'inside depth', 'circle', 'overhang'].map((name) =>
+      valueOf(model, name, evaluate(model, sizing)),
+    );
     expect(sizes).toEqual([228.6, 152.4, 57.15, 114.3, 6.35]);
   });
 });
@@ -191,7 +245,10 @@ describe('the pictures', () => {
       for (const { attrs, content } of photos) {
         expect(attrs.alt.length, attrs.alt).toBeGreaterThan(60);
         expect(attrs.alt).not.toMatch(/\d/);
-        expect((content ?? []).some(({ type }) => type === 'measure'), attrs.alt).toBe(true);
+        expect(
+          (content ?? []).some(({ type }) => type === 'measure'),
+          attrs.alt,
+        ).toBe(true);
       }
     });
   });
@@ -199,9 +256,19 @@ describe('the pictures', () => {
 
 describe('the draft', () => {
   it('is half written, and its proof list says what is missing', () => {
-    const draft = db.select().from(projects).all().find(({ title }) => title === 'Potting-bench packet tray');
+    const draft = db
+      .select()
+      .from(projects)
+      .all()
+      .find(({ title }) => title === 'Potting-bench packet tray');
     expect(draft?.publishedRevision).toBeNull();
-    expect(draft ? proofList(draft).map(({ code }) => code).sort() : []).toEqual(['live measure', 'no alt text', 'no materials', 'no summary']);
+    expect(
+      draft
+        ? proofList(draft)
+            .map(({ code }) => code)
+            .sort()
+        : [],
+    ).toEqual(['live measure', 'no alt text', 'no materials', 'no summary']);
   });
 });
 
@@ -211,9 +278,17 @@ describe('filling', () => {
     migrateDatabase(other);
     useDatabase(other);
     try {
-      db.insert(users).values({ id: 'x', email: 'wenna@quilletlane.example', emailKey: 'wenna@quilletlane.example' }).run();
+      db.insert(users)
+        .values({ id: 'x', email: 'wenna@quilletlane.example', emailKey: 'wenna@quilletlane.example' })
+        .run();
       await expect(seedDemo(NOW)).rejects.toThrow('Somebody has an account with wenna@quilletlane.example.');
-      expect(db.select().from(users).all().map(({ id }) => id)).toEqual(['x']);
+      expect(
+        db
+          .select()
+          .from(users)
+          .all()
+          .map(({ id }) => id),
+      ).toEqual(['x']);
       expect(db.select().from(settings).all()).toEqual([]);
     } finally {
       useDatabase(database);
@@ -230,7 +305,9 @@ const blocksOf = (nodes: readonly Any[]): Any[] => nodes.flatMap((node) => [node
 const textOf = (node: Any): string => (node.type === 'text' ? node.text : inside(node).map(textOf).join(''));
 /** Every text that is typed: text nodes, titles and marks of steps. */
 const textsOf = (nodes: readonly Any[]): string[] =>
-  blocksOf(nodes).flatMap((node) => (node.type === 'text' ? [node.text] : node.type === 'step' ? [node.attrs.title, node.attrs.mark] : []));
+  blocksOf(nodes).flatMap((node) =>
+    node.type === 'text' ? [node.text] : node.type === 'step' ? [node.attrs.title, node.attrs.mark] : [],
+  );
 
 function valueOf(model: Model, formula: string, figures: Figures): number | null {
   const live = compileLive(model, formula);
@@ -242,7 +319,11 @@ function valueOf(model: Model, formula: string, figures: Figures): number | null
 function figuresAtAll(model: Model, sizing: Sizing): Figures[] {
   const usual = evaluate(model, sizing);
   const sizes = [1, 1.33, 0.8].map((times) =>
-    Object.fromEntries(usual.measures.filter(({ name, asked }) => asked && name.startsWith('inside')).map(({ name, cut }) => [name, cut * times])),
+    Object.fromEntries(
+      usual.measures
+        .filter(({ name, asked }) => asked && name.startsWith('inside'))
+        .map(({ name, cut }) => [name, cut * times]),
+    ),
   );
   return sizes.flatMap((values) =>
     choicesOf(model.pattern.choices).flatMap((choices) => [

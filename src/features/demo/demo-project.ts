@@ -41,4 +41,7 @@ export const INCH = 25.4;
 /** Keeps only these placements of the folded picture. */
 export const keep =
   (wanted: (piece: string, index: number) => boolean) =>
-  (pattern: Pattern): Pattern => ({ ...pattern, assembly: pattern.assembly.filter(({ piece }, index) => wanted(piece, index)) });
+  (pattern: Pattern): Pattern => ({
+    ...pattern,
+    assembly: pattern.assembly.filter(({ piece }, index) => wanted(piece, index)),
+  });

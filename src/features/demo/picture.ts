@@ -7,6 +7,8 @@ const WIDTH = 900;
 /** 3 : 2, as photos are; pictures of flat things are lower. */
 const HIGHEST = 600;
 const ROOM = { beside: 55, between: 46, above: 56, name: 30 };
+/** A first picture is shown in frames of other shapes, too, which cut off its sides. */
+const ROOM_TO_CUT = 130;
 /** From the table's edge, which is a ruler to the picture's own scale, to the picture's foot. */
 const FOOT = 92;
 const RULER = 40;
@@ -55,7 +57,10 @@ export function pictureSvg(scene: Scene): string {
   const gaps = ROOM.between * (things.length - 1);
   const across = things.reduce((sum, thing) => sum + thing.across, 0);
   const tallest = Math.max(...things.map(({ up }) => up));
-  const scale = Math.min((WIDTH - 2 * ROOM.beside - gaps) / across, (HIGHEST - FOOT - above) / tallest);
+  const scale = Math.min(
+    (WIDTH - 2 * (scene.whole ? ROOM_TO_CUT : ROOM.beside) - gaps) / across,
+    (HIGHEST - FOOT - above) / tallest,
+  );
   const height = scene.whole ? HIGHEST : Math.round(Math.min(HIGHEST, tallest * scale + above + FOOT));
   const table = height - FOOT;
   let x = (WIDTH - across * scale - gaps) / 2;
@@ -64,7 +69,10 @@ export function pictureSvg(scene: Scene): string {
     const margin = (drawing.width - thing.across * scale) / 2;
     const top = table - drawing.height + margin - (thing.name === undefined ? 0 : 14);
     const inside = drawingSvgStandalone(drawing, theme).replace('<svg ', `<svg x="${n(x - margin)}" y="${n(top)}" `);
-    const name = thing.name === undefined ? '' : words(thing.name, { x: x + (thing.across * scale) / 2, y: top - 8, anchor: 'middle' });
+    const name =
+      thing.name === undefined
+        ? ''
+        : words(thing.name, { x: x + (thing.across * scale) / 2, y: top - 8, anchor: 'middle' });
     x += thing.across * scale + ROOM.between;
     return inside + name;
   });
@@ -81,30 +89,70 @@ function placedOf(thing: Thing): Placed[] {
     return thing.pieces.flatMap((name): Placed[] => {
       const piece = figures.pieces.find((one) => one.name === name);
       if (!piece) return [];
-      const draw = (scale: number) => drawPiece(piece, { ...figures.sizing, width: piece.across * scale + 12, tallest: piece.along * scale, scale, dims: false, labels: false });
-      return [{ across: piece.across, up: piece.along, draw, name: piece.count > 1 ? `${piece.name}, ${piece.count} times` : piece.name }];
+      const draw = (scale: number) =>
+        drawPiece(piece, {
+          ...figures.sizing,
+          width: piece.across * scale + 12,
+          tallest: piece.along * scale,
+          scale,
+          dims: false,
+          labels: false,
+        });
+      return [
+        {
+          across: piece.across,
+          up: piece.along,
+          draw,
+          name: piece.count > 1 ? `${piece.name}, ${piece.count} times` : piece.name,
+        },
+      ];
     });
   }
   const { turn, tilt, share } = thing;
-  const view = { ...(turn === undefined ? {} : { turn }), ...(tilt === undefined ? {} : { tilt }), ...(share === undefined ? {} : { share }) };
+  const view = {
+    ...(turn === undefined ? {} : { turn }),
+    ...(tilt === undefined ? {} : { tilt }),
+    ...(share === undefined ? {} : { share }),
+  };
   const { across, up } = extentOf(drawFolded(model, figures, { ...view, width: 1, height: 1, scale: 1 }));
-  return [{ across, up, draw: (scale) => drawFolded(model, figures, { ...view, width: across * scale + 8, height: up * scale + 8, scale }) }];
+  return [
+    {
+      across,
+      up,
+      draw: (scale) =>
+        drawFolded(model, figures, { ...view, width: across * scale + 8, height: up * scale + 8, scale }),
+    },
+  ];
 }
 
 /** Of what is drawn at one unit a millimetre, also half folded. */
 function extentOf({ shapes }: Drawing): { readonly across: number; readonly up: number } {
-  const points = shapes.flatMap((shape) => (shape.type === 'path' ? [...shape.d.matchAll(/(-?[\d.]+)[ ,](-?[\d.]+)/gu)] : []));
+  const points = shapes.flatMap((shape) =>
+    shape.type === 'path' ? [...shape.d.matchAll(/(-?[\d.]+)[ ,](-?[\d.]+)/gu)] : [],
+  );
   const [xs, ys] = [points.map(([, x]) => Number(x)), points.map(([, , y]) => Number(y))];
   return { across: Math.max(...xs) - Math.min(...xs), up: Math.max(...ys) - Math.min(...ys) };
 }
 
 /** The table's edge: paper with ticks in the box's own units, at the scale of what stands on it. */
-function rulerSvg({ scene, scale, table, theme }: { scene: Scene; scale: number; table: number; theme: Theme }): string {
+function rulerSvg({
+  scene,
+  scale,
+  table,
+  theme,
+}: {
+  scene: Scene;
+  scale: number;
+  table: number;
+  theme: Theme;
+}): string {
   const units = scene.things[0]?.figures.sizing.units ?? 'in';
   const ticks = rulerTicks({ from: 0, to: WIDTH / scale, units, width: WIDTH });
   const d = ticks.map(({ at, size }) => `M${n(at * WIDTH)} ${table}v${size}`).join('');
   const figures = ticks.flatMap(({ at, label }) =>
-    label === undefined || at * WIDTH < 12 || at * WIDTH > WIDTH - 12 ? [] : [words(label, { x: at * WIDTH, y: table + 31, anchor: 'middle', size: 13 })],
+    label === undefined || at * WIDTH < 12 || at * WIDTH > WIDTH - 12
+      ? []
+      : [words(label, { x: at * WIDTH, y: table + 31, anchor: 'middle', size: 13 })],
   );
   return (
     `<rect y="${table}" width="${WIDTH}" height="${RULER}" fill="${theme.paper}"/>` +
@@ -114,7 +162,10 @@ function rulerSvg({ scene, scale, table, theme }: { scene: Scene; scale: number;
   );
 }
 
-function words(text: string, { x, y, anchor, size = 16 }: { x: number; y: number; anchor: string; size?: number }): string {
+function words(
+  text: string,
+  { x, y, anchor, size = 16 }: { x: number; y: number; anchor: string; size?: number },
+): string {
   const safe = text.replaceAll('&', '&amp;').replaceAll('<', '&lt;');
   return `<text x="${n(x)}" y="${n(y)}" text-anchor="${anchor}" font-family="Figtree" font-size="${size}" font-weight="600" fill="${LIGHT_THEME.ink}">${safe}</text>`;
 }

@@ -63,7 +63,11 @@ function deliverAll(start: number): number {
   let clock = start;
   let last = start;
   for (let rests = 0; rests < 3; rests += 1) {
-    for (let ids = claim(OWNER, { now: clock, limit: 16 }); ids.length > 0; ids = claim(OWNER, { now: clock, limit: 16 })) {
+    for (
+      let ids = claim(OWNER, { now: clock, limit: 16 });
+      ids.length > 0;
+      ids = claim(OWNER, { now: clock, limit: 16 })
+    ) {
       for (const id of ids) {
         const copy = handOver(id, OWNER, clock);
         if (!copy) continue;
@@ -82,5 +86,8 @@ function deliverAll(start: number): number {
 
 function leaveTokenOf(email: string): string {
   const key = emailKey(email) ?? '';
-  return db.select({ token: subscribers.leaveToken }).from(subscribers).where(eq(subscribers.emailKey, key)).get()?.token ?? '';
+  return (
+    db.select({ token: subscribers.leaveToken }).from(subscribers).where(eq(subscribers.emailKey, key)).get()?.token ??
+    ''
+  );
 }

@@ -21,14 +21,29 @@ export async function seedProject(demo: DemoProject, author: Asker, now: number)
   const pattern = getPattern(demo.pattern);
   if (!pattern) throw new Error(`The demo needs the pattern ${demo.pattern}.`);
   const { id } = createProject(pattern, { title: demo.title, asker: author });
-  const stored = await drawPictures(demo, { pattern, projectId: id, ownerId: author.id, at: new Date(now - demo.createdDaysAgo * DAY) });
+  const stored = await drawPictures(demo, {
+    pattern,
+    projectId: id,
+    ownerId: author.id,
+    at: new Date(now - demo.createdDaysAgo * DAY),
+  });
   const show: ShowPicture = (name, caption) => photo(stored(name), caption);
 
   for (const edition of demo.editions) {
-    const revision = save(id, author, demo, { writeUp: edition.writeUp(show), hero: demo.hero === null ? null : stored(demo.hero).upload });
-    const outcome = publishEdition(id, { by: author.id, revision, ...(edition.note === undefined ? {} : { note: edition.note }) }, now - edition.daysAgo * DAY);
+    const revision = save(id, author, demo, {
+      writeUp: edition.writeUp(show),
+      hero: demo.hero === null ? null : stored(demo.hero).upload,
+    });
+    const outcome = publishEdition(
+      id,
+      { by: author.id, revision, ...(edition.note === undefined ? {} : { note: edition.note }) },
+      now - edition.daysAgo * DAY,
+    );
     if (!outcome.ok) {
-      const items = outcome.refusal.code === 'proof blocks' ? outcome.refusal.items.map(({ title, detail }) => `${title}: ${detail}`) : [];
+      const items =
+        outcome.refusal.code === 'proof blocks'
+          ? outcome.refusal.items.map(({ title, detail }) => `${title}: ${detail}`)
+          : [];
       throw new Error([`${demo.title}: ${outcome.sentence}`, ...items].join('\n'));
     }
   }
@@ -42,11 +57,23 @@ export async function seedProject(demo: DemoProject, author: Asker, now: number)
 }
 
 /** The revision that it is saved as. */
-function save(id: string, author: Asker, demo: DemoProject, parts: { readonly writeUp: WriteUp; readonly hero: string | null }): number {
+function save(
+  id: string,
+  author: Asker,
+  demo: DemoProject,
+  parts: { readonly writeUp: WriteUp; readonly hero: string | null },
+): number {
   const open = openProject(id, author);
   if (!open) throw new Error(`${demo.title} cannot be opened.`);
   const { title, summary, minutes, values = {} } = demo;
-  const state: ProjectState = { ...open.state, ...parts, title, summary, minutes, sizing: { ...open.state.sizing, values: { ...open.state.sizing.values, ...values } } };
+  const state: ProjectState = {
+    ...open.state,
+    ...parts,
+    title,
+    summary,
+    minutes,
+    sizing: { ...open.state.sizing, values: { ...open.state.sizing.values, ...values } },
+  };
   const saved = saveProject(id, author, { state, revision: open.revision });
   if (!saved.ok) throw new Error(`${title} could not be saved: ${saved.code}.`);
   return saved.revision;
@@ -59,7 +86,10 @@ interface Surroundings {
   readonly at: Date;
 }
 
-async function drawPictures(demo: DemoProject, { pattern, projectId, ownerId, at }: Surroundings): Promise<(name: string) => StoredPicture> {
+async function drawPictures(
+  demo: DemoProject,
+  { pattern, projectId, ownerId, at }: Surroundings,
+): Promise<(name: string) => StoredPicture> {
   const stored = new Map<string, StoredPicture>();
   for (const [name, { alt, scene }] of Object.entries(demo.pictures)) {
     const bytes = await renderPicture(pictureSvg(scene(builderOf(pattern, demo))), { width: PICTURE_WIDTH });
@@ -82,6 +112,9 @@ export function builderOf(pattern: Pattern, { values = {} }: Pick<DemoProject, '
     const compiled = compilePattern(change(pattern));
     if (!compiled.ok) throw new Error(compiled.faults.map(explain).join('\n'));
     const sizing = usualSizing(compiled.value);
-    return { model: compiled.value, figures: evaluate(compiled.value, { ...sizing, values: { ...sizing.values, ...values } }) };
+    return {
+      model: compiled.value,
+      figures: evaluate(compiled.value, { ...sizing, values: { ...sizing.values, ...values } }),
+    };
   };
 }

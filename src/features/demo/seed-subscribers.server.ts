@@ -16,7 +16,11 @@ export function seedSubscribers(now: number): void {
     const key = emailKey(email);
     if (!key) throw new Error(`${email} is not an e-mail address.`);
     const confirmed = confirmedDaysAgo === undefined ? null : now - confirmedDaysAgo * DAY;
-    const pending = { state: 'pending', confirmHash: createHash('sha256').update(randomBytes(24)).digest('hex'), confirmExpires: new Date(now + 2 * DAY) } as const;
+    const pending = {
+      state: 'pending',
+      confirmHash: createHash('sha256').update(randomBytes(24)).digest('hex'),
+      confirmExpires: new Date(now + 2 * DAY),
+    } as const;
     db.insert(subscribers)
       .values({
         id: randomBytes(9).toString('hex'),

@@ -42,7 +42,9 @@ async function seed(now: number): Promise<void> {
   seedSubscribers(now);
   for (const project of DEMO_PROJECTS) await seedProject(project, author, now);
   await seedMailing(projectCalled('Seed keeper’s book box'), author, now);
-  db.insert(settings).values({ key: 'demo', value: new Date(now).toISOString() }).run();
+  db.insert(settings)
+    .values({ key: 'demo', value: new Date(now).toISOString() })
+    .run();
 }
 
 function projectCalled(title: string): string {

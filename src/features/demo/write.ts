@@ -1,4 +1,11 @@
-import { WRITE_UP_VERSION, type BlockNode, type InlineNode, type MarkNode, type PhotoNode, type WriteUp } from '@/writeup/document';
+import {
+  WRITE_UP_VERSION,
+  type BlockNode,
+  type InlineNode,
+  type MarkNode,
+  type PhotoNode,
+  type WriteUp,
+} from '@/writeup/document';
 
 /*
  * Write-ups in code, close to how they read. In every text, `[[inside width]]` is a live measure, `[[inside width|bare]]` one
@@ -15,7 +22,8 @@ export function inline(words: Words): InlineNode[] {
   for (const found of words.matchAll(MARKED)) {
     const [whole, formula, bare, strong, label, href] = found;
     nodes.push(...plain(words.slice(at, found.index)));
-    if (formula !== undefined) nodes.push({ type: 'measure', attrs: { formula: formula.trim(), bare: bare !== undefined } });
+    if (formula !== undefined)
+      nodes.push({ type: 'measure', attrs: { formula: formula.trim(), bare: bare !== undefined } });
     else if (strong !== undefined) nodes.push(...plain(strong, [{ type: 'bold' }]));
     else nodes.push(...plain(label ?? '', [{ type: 'link', attrs: { href: href ?? '' } }]));
     at = found.index + whole.length;
@@ -53,6 +61,13 @@ export interface StoredPicture {
   readonly width: number;
   readonly height: number;
 }
-export const photo = (attrs: StoredPicture, caption: Words): PhotoNode => ({ type: 'photo', attrs, content: inline(caption) });
+export const photo = (attrs: StoredPicture, caption: Words): PhotoNode => ({
+  type: 'photo',
+  attrs,
+  content: inline(caption),
+});
 
-export const writeUp = (...content: Content): WriteUp => ({ version: WRITE_UP_VERSION, doc: { type: 'doc', content: blocks(content) } });
+export const writeUp = (...content: Content): WriteUp => ({
+  version: WRITE_UP_VERSION,
+  doc: { type: 'doc', content: blocks(content) },
+});

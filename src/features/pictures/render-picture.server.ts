@@ -15,7 +15,9 @@ function fontFiles(): string[] {
   return WEIGHTS.map((weight) => {
     const file = join(folder, `figtree-${weight}.ttf`);
     if (!existsSync(file)) {
-      const whole = underFirstName(woffToTtf(readFileSync(resolve(`@fontsource/figtree/files/figtree-latin-${weight}-normal.woff`))));
+      const whole = underFirstName(
+        woffToTtf(readFileSync(resolve(`@fontsource/figtree/files/figtree-latin-${weight}-normal.woff`))),
+      );
       // Renamed into place, so that no one reads half a font.
       const unfinished = `${file}.${process.pid}`;
       writeFileSync(unfinished, whole);

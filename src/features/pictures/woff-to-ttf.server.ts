@@ -22,7 +22,11 @@ export function woffToTtf(woff: Buffer): Buffer {
   let at = directory.length;
   for (let table = 0; table < count; table += 1) {
     const from = HEADER.woff + table * ENTRY.woff;
-    const [offset, packed, length] = [woff.readUInt32BE(from + 4), woff.readUInt32BE(from + 8), woff.readUInt32BE(from + 12)];
+    const [offset, packed, length] = [
+      woff.readUInt32BE(from + 4),
+      woff.readUInt32BE(from + 8),
+      woff.readUInt32BE(from + 12),
+    ];
     const stored = woff.subarray(offset, offset + packed);
     const content = packed < length ? inflateSync(stored) : stored;
     const to = HEADER.sfnt + table * ENTRY.sfnt;

@@ -6,9 +6,14 @@ import { caution, cutList, heading, list, ordered, piece, step, tip, materials, 
 function opened(pattern: Pattern): Pattern {
   return {
     ...pattern,
-    pieces: pattern.pieces.map((one) => (one.name === 'Lid' ? { ...one, lines: [...(one.lines ?? []), { between: ['end', 'lid'], is: 'valley', angle: '0°' }] } : one)),
+    pieces: pattern.pieces.map((one) =>
+      one.name === 'Lid'
+        ? { ...one, lines: [...(one.lines ?? []), { between: ['end', 'lid'], is: 'valley', angle: '0°' }] }
+        : one,
+    ),
     assembly: pattern.assembly.map((one) => {
-      if (one.piece === 'Upper spine') return { ...one, at: ['-overhang', 'inside depth - play / 2', 'inside height + inside width'], along: '+x' };
+      if (one.piece === 'Upper spine')
+        return { ...one, at: ['-overhang', 'inside depth - play / 2', 'inside height + inside width'], along: '+x' };
       if (one.piece === 'Lid') return { ...one, at: ['0 mm', 'inside depth - play / 2', 'inside height'], along: '+z' };
       return one;
     }),
@@ -32,18 +37,31 @@ export const bookBox: DemoProject = {
     pieces: {
       alt: 'The pieces lie side by side above a ruler: a plain cover, then fore edge and floor with tabs, the lower spine with teeth at its foot, the short upper spine, and the lid with teeth round its curve.',
       scene: (build) => ({
-        things: [{ type: 'flat', pieces: ['Cover', 'Fore edge', 'Floor', 'Lower spine', 'Upper spine', 'Lid'], ...build() }],
+        things: [
+          { type: 'flat', pieces: ['Cover', 'Fore edge', 'Floor', 'Lower spine', 'Upper spine', 'Lid'], ...build() },
+        ],
         card: 'plum',
         words: 'Every piece, flat, from the inside',
       }),
     },
     skeleton: {
       alt: 'The half-made box with its near cover still off. The far cover stands upright; in front of it the cream fore edge on the left, the floor at the foot and the round lower spine on the right make a frame.',
-      scene: (build) => ({ things: [{ type: 'folded', turn: -32, ...build(withoutFirstCover) }], card: 'plum', words: 'One cover still off' }),
+      scene: (build) => ({
+        things: [{ type: 'folded', turn: -32, ...build(withoutFirstCover) }],
+        card: 'plum',
+        words: 'One cover still off',
+      }),
     },
     open: {
       alt: 'The box twice. On the left it is closed. On the right its lid is swung up: the cream lid stands on the fore edge with the upper part of the spine at its end, and the lower spine ends below the tops of the covers.',
-      scene: (build) => ({ things: [{ type: 'folded', ...build() }, { type: 'folded', ...build(opened) }], card: 'plum', words: 'Closed, and open' }),
+      scene: (build) => ({
+        things: [
+          { type: 'folded', ...build() },
+          { type: 'folded', ...build(opened) },
+        ],
+        card: 'plum',
+        words: 'Closed, and open',
+      }),
     },
   },
   editions: [
@@ -51,12 +69,12 @@ export const bookBox: DemoProject = {
       daysAgo: 4,
       writeUp: (show) =>
         writeUp(
-          'On the shelf it is a book. Lift the top of the pages and it is a box, with a season of seed packets standing in it like pages. The upper part of the spine is glued to the lid and comes up with it, so that nobody sees a seam until you open it.',
+          'On the shelf it is a book. Lift the top of the pages and it is a box, with a season of seed packets standing in it like pages. The upper part of the spine is glued to the lid and comes up with it, and a band of paper hides the joint.',
           'We drew it for our own packets; yours may be another size. The figures below are for an inside [[inside height]] tall, [[inside width]] wide and [[inside depth]] deep. Set your own beside this text, and every figure that stands on a tab follows.',
           materials(
             '**Card for covers and spine**, about 270 g/m² (100 lb cover): [[2 * cover.area + lower spine.area + (if lid is flip then upper spine.area else 0 mm * 0 mm)]] of it. Take a colour that you would like to see on a shelf.',
             '**Card for the pages**, cream, about 216 g/m² (80 lb cover): [[fore edge.area + floor.area + (if lid is flip then lid.area else top.area)]].',
-            'The sheet plan shows which pieces share a sheet. Our figures are for card [[card thickness]] thick; measure yours if it feels different, and change it among the finer points.',
+            'The sheet plan shows which pieces share a sheet. The figures are for card [[card thickness]] thick; measure yours if it feels different, and change it among the finer points.',
             'White glue that dries clear, and a scrap of card to spread it with. Glue sticks let go when the spine pulls.',
             'Trimmer, or knife, metal ruler and mat; scoring board or a blunt point; bone folder; pencil; a few clothes pegs.',
             'A compass, or something round that measures [[circle]] across.',
@@ -72,7 +90,10 @@ export const bookBox: DemoProject = {
             'Find the grain before you cut anything: bend the sheet both ways, and it gives more easily along the grain. On a cover the grain should run **up and down**, along the side that measures [[cover.along]]. Covers cut across it bow outwards within a week.',
             'Cut two, [[cover.across|bare]] × [[cover.along]]. Lay one on the other and look at the light along all four edges. If one is a hair larger, trim them together: the box takes its squareness from these two.',
             piece('Cover'),
-            show('pieces', 'All the pieces of ours. Cut yours to your own figures; only the covers are needed twice, [[cover.across|bare]] × [[cover.along]] each.'),
+            show(
+              'pieces',
+              'All the pieces of ours. Cut yours to your own figures; only the covers are needed twice, [[cover.across|bare]] × [[cover.along]] each.',
+            ),
           ),
           step(
             'The fore edge',
@@ -85,12 +106,16 @@ export const bookBox: DemoProject = {
             'The floor is a strip with a tab on three sides. On the fourth it runs on into a curve, and that curve is what the whole spine will follow. Take your time with this one.',
             piece('Floor'),
             'Draw the curve between the ends of the side tabs, [[inside depth]] apart. It is part of a circle [[circle]] across, so set a compass to [[radius]] and put its point on the middle line of the floor, where the pencil just reaches both ends. At its middle the curve stands out by [[bulge]]. Cut round it in one slow pass with scissors, turning the card and not the scissors.',
-            tip('No compass? Find something round, measure across it, and put that in as the circle. The spine follows. A jar lid gives a round back, a dinner plate a flat one.'),
-            tip('With a **straight spine** there is no curve: the floor simply ends where its side tabs end. Leave the compass in the drawer, and read “spine” wherever we say “curve”.'),
+            tip(
+              'No compass? Find something round, measure across it, and put that in as the circle. The spine follows. A jar lid gives a round back, a dinner plate a flat one.',
+            ),
+            tip(
+              'With a **straight spine** there is no curve: the floor simply ends where its side tabs end. Leave the compass in the drawer, and read “spine” wherever we say “curve”.',
+            ),
           ),
           step(
             'The lower spine',
-            'Between its tabs this strip is [[lower spine.strip]] wide. On a curved spine it has to be as wide as the curve is **long**, and that is more than the straight way across, [[inside depth]]. People get this number wrong when they lay a ruler across the box.',
+            'Between its tabs this strip is [[lower spine.strip]] wide. On a curved spine it has to be as wide as the curve is **long**, and that is more than the straight way across, [[inside depth]]. People get this number wrong when they lay a ruler across the box. The grain runs up and down here too, or the strip cracks when it is rolled.',
             piece('Lower spine'),
             'Check it before you cut the teeth. Lay a strip of paper on edge round the curve of your floor and mark both ends: flat again, the marks should be [[floor.curve length]] apart. What your trimmer can cut comes near enough to it. If your own curve came out longer, trust the paper and score the second tab there.',
             'Then cut the foot into narrow teeth, [[teeth]] of them, from the edge almost to the score. A cut **past** the score opens a hole at the foot of the spine; one that stops a hair short does no harm. A straight spine keeps its foot whole.',
@@ -105,14 +130,18 @@ export const bookBox: DemoProject = {
             'The lid | flip lid',
             'The lid is the floor once more, a little narrower: [[lid.deep]] between its tabs, so that it passes between the covers without rubbing. On a curved spine its curve is a **score**, and the teeth, [[lid teeth]] of them, stand outside it.',
             piece('Lid'),
-            'Score a curve freehand with a blunt point along the edge of your own floor, used as a ruler. Go over it twice, lightly; a curve scored hard in one go tears when the teeth are turned.',
-            tip('We turn the sides of the lid down because a flat lid twists. If you chose **plain** sides, there is nothing to turn down, and the upper spine has no tabs either.'),
+            'Score the curve with a blunt point along the edge of your own floor: it is the same circle. Go over it twice, lightly; a curve scored hard in one go tears when the teeth are turned.',
+            tip(
+              'We turn the sides of the lid down because a flat lid twists. If you chose **plain** sides, there is nothing to turn down, and the upper spine has no tabs either.',
+            ),
           ),
           step(
             'A ribbon to lift it by | optional',
             'Do this while the lid is flat. Cut a slot [[ribbon width + 1 mm]] long across the middle line of the lid, [[inside width - tab]] from the fold of its end tab. If you chose the ribbon among the options, the lid’s drawing shows it.',
             'Push both ends of the ribbon down through the slot until a loop for one finger stands out. Turn the ends back in opposite directions and glue them under the lid for at least [[max(tab, 15 mm)]].',
-            caution('A ribbon loop is the right handle for a box that small children will use. Beads, knobs and magnets come off and are swallowed; magnets are the worst of them. Leave them away, or follow what their maker says about age.'),
+            caution(
+              'A ribbon loop is the right handle for a box that small children will use. Beads, knobs and magnets come off and are swallowed; magnets are the worst of them. Leave them away, or follow what their maker says about age.',
+            ),
           ),
           heading('Put it together'),
           step(
@@ -132,9 +161,14 @@ export const bookBox: DemoProject = {
           step(
             'The lower spine, tooth by tooth',
             'Turn all the teeth to the inside. They are glued **on top of** the floor. Begin with the middle tooth on the middle of the curve and hold it until it stays. Then work outwards, one left, one right. What is left over lands at the two ends in halves, where a fold hides it.',
-            show('skeleton', 'Everything but the second cover. The spine is [[lower spine.tall]] tall; the floor lies [[inside width]] deep between fore edge and spine, and its curve another [[bulge]].'),
-            'When the foot holds, glue the spine’s side tab to the cover’s rear edge. Run a fingernail round the foot from outside. Where you feel a step, lift the tooth and ease it while you still can.',
-            caution('Do not reach for hot glue to speed this up. It sets before a curve can be eased, it leaves a ridge, and nozzle and glue burn skin. If you use it elsewhere, follow its maker’s instructions and keep it away from children.'),
+            show(
+              'skeleton',
+              'Everything but the second cover. The spine is [[lower spine.tall]] tall; the floor is [[inside width]] from the fore edge to the ends of its tabs, and its curve stands out another [[bulge]].',
+            ),
+            'When the foot holds, glue the spine’s side tab to the cover’s rear edge. Run a fingernail round the foot from outside. Where you feel a step, lift the tooth and ease it while you still can. There is more about this in [Gluing, and gluing curves](/handbook/gluing-and-curves).',
+            caution(
+              'Do not reach for hot glue to speed this up. It sets before a curve can be eased, it leaves a ridge, and nozzle and glue burn skin. If you use it elsewhere, follow its maker’s instructions and keep it away from children.',
+            ),
           ),
           step(
             'The second cover',
@@ -149,7 +183,10 @@ export const bookBox: DemoProject = {
               'When this is dry, set it on: the upper spine stands on the edge of the lower one, all the way round. Lid closed, glue its end tab to the inside of the fore edge, the fold level with the top.',
               'Leave it closed until the glue is dry. Only then swing it.',
             ),
-            show('open', 'Open. The upper spine comes up with the lid, because it is glued to nothing else; [[play]] of room in all keeps it from rubbing on the covers.'),
+            show(
+              'open',
+              'Open. The upper spine comes up with the lid, because it is glued to nothing else; [[play]] of room in all keeps it from rubbing on the covers.',
+            ),
             'It rubs on one side? The lid was glued a little skew. Slide a strip of card between lid and cover to find the place, and shave that edge of the upper spine. It falls shut and springs up again? The end tab’s fold is stiff: open it all the way a few times.',
           ),
           step(
@@ -169,7 +206,9 @@ export const bookBox: DemoProject = {
               'The lid falls shut by its own weight and opens without touching anything.',
             ),
             'Packets up to [[inside width - 1/8 in]] wide and [[inside height - 1/4 in]] tall stand in it one behind another, faces to the cover. Write the year on the fore edge, in pencil: next year you will want another volume.',
-            caution('Card, glue and inks are not made to touch food unless their maker says so. Seed that somebody may eat stays in its own bag.'),
+            caution(
+              'Card, glue and inks are not made to touch food unless their maker says so. Seed that somebody may eat stays in its own bag.',
+            ),
           ),
         ),
     },

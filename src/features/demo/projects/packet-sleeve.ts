@@ -8,13 +8,20 @@ const DRAWER_OUT = 0.45;
 
 /** The drawer alone, with packets standing in it on their long edges and a finger's room behind the last. */
 function filled(pattern: Pattern): Pattern {
-  const packets = Array.from({ length: PACKETS }, (_, index): Placement => ({
-    piece: 'Packet',
-    root: 'front',
-    at: [`inside length * ${DRAWER_OUT + 0.12 + (0.8 * (PACKETS - index)) / PACKETS}`, 'inside width - 3 mm', `inside height * ${index % 3 === 1 ? 0.86 : 0.94}`],
-    across: '-y',
-    along: '-z',
-  }));
+  const packets = Array.from(
+    { length: PACKETS },
+    (_, index): Placement => ({
+      piece: 'Packet',
+      root: 'front',
+      at: [
+        `inside length * ${DRAWER_OUT + 0.12 + (0.8 * (PACKETS - index)) / PACKETS}`,
+        'inside width - 3 mm',
+        `inside height * ${index % 3 === 1 ? 0.86 : 0.94}`,
+      ],
+      across: '-y',
+      along: '-z',
+    }),
+  );
   return {
     ...pattern,
     pieces: [
@@ -48,7 +55,11 @@ export const packetSleeve: DemoProject = {
     },
     filled: {
       alt: 'The cream drawer by itself, seen from above, with nine brown packets standing in it one behind another, a little uneven in height.',
-      scene: (build) => ({ things: [{ type: 'folded', tilt: 34, ...build(filled) }], card: 'kraft', words: 'The drawer with packets on edge' }),
+      scene: (build) => ({
+        things: [{ type: 'folded', tilt: 34, ...build(filled) }],
+        card: 'kraft',
+        words: 'The drawer with packets on edge',
+      }),
     },
     round: {
       alt: 'The sleeve twice: on the left almost closed, its panels curling under like a hand; on the right closed to a flat tube, with half-round notches in the wide panels at both open ends.',
@@ -74,7 +85,9 @@ export const packetSleeve: DemoProject = {
             'Trimmer, or knife, metal ruler and mat; scoring board; bone folder; scissors.',
             'For the notches: a punch, or something round that measures [[2 * notch radius]] across to draw round.',
           ),
-          caution('Trimmer and knife: as their makers say, guards on, hand behind the ruler, blade in when you put it down. A punch bites too; press it on the table, not in your palm.'),
+          caution(
+            'Trimmer and knife: as their makers say, guards on, hand behind the ruler, blade in when you put it down. A punch bites too; press it on the table, not in your palm.',
+          ),
           cutList,
           heading('Cut and score'),
           step(
@@ -117,9 +130,13 @@ export const packetSleeve: DemoProject = {
           step(
             'Wrap the sleeve round it, dry',
             'Fold the sleeve round the drawer with no glue, seam underneath. It should close with [[play]] of room in all, across and upwards: enough for a slip of paper on each side.',
-            show('round', 'The sleeve nearly closed, and closed. Closed, it is [[sleeve width]] wide and [[sleeve height]] tall inside.'),
+            show(
+              'round',
+              'The sleeve nearly closed, and closed. Closed, it is [[sleeve width]] wide and [[sleeve height]] tall inside.',
+            ),
             list(
-              '**Too tight?** Move the last score outwards by the width of your pencil line. The tab loses that much, and can spare it.',
+              '**Tight under the top?** Set the seam tab in a hair less far; the last panel then stands that much taller.',
+              '**Tight at the sides?** The scores stand too close. Cut the sleeve again with more play, and keep this one for smaller packets.',
               '**Too loose?** Fold a strip of paper once and glue it along one side of the drawer, outside. That is quicker than a new sleeve.',
             ),
           ),
@@ -127,23 +144,35 @@ export const packetSleeve: DemoProject = {
             'Glue the seam, drawer out',
             'Take the drawer **out**. Everybody leaves it in once, and then owns a box that does not open. Glue on the seam tab, [[sleeve.seam tab]] wide, right to its edges. Set it inside the last panel, fold line first, and press it with a ruler laid inside.',
             'Squeeze the tube flat one way, then the other, before the glue takes. It will stand square by itself afterwards.',
-            caution('Hot glue is too thick for this seam, and its ridge stops the drawer. If you do use it anywhere, mind the nozzle and the melted glue, and do as its maker says.'),
+            caution(
+              'Hot glue is too thick for this seam, and its ridge stops the drawer. If you do use it anywhere, mind the nozzle and the melted glue, and do as its maker says.',
+            ),
           ),
           step(
             'Try it',
             'Slide the drawer in, seam underneath. Tilt it: it stays. Tilt it further: it begins to move. If it stops half way, the sleeve was glued a little skew. Rub the inside corners with a candle end and work the drawer to and fro.',
-            show('halfOut', 'Half out. Closed, the whole is [[sleeve length]] long, [[outside width]] wide and [[outside height]] tall.'),
+            show(
+              'halfOut',
+              'Half out. Closed, the whole is [[sleeve length]] long, [[outside width]] wide and [[outside height]] tall.',
+            ),
           ),
           step(
             'Cards for the months | optional',
             'Cut twelve cards, [[inside width - 1/8 in|bare]] × [[inside height - 1/16 in]], and write a month along the top edge of each. Stagger the words, or you will only ever see January.',
-            show('filled', 'On edge, with a finger’s room behind the last one. Fill all [[inside length]] of it and you can no longer leaf.'),
+            show(
+              'filled',
+              'On edge, with a finger’s room behind the last one. Fill all [[inside length]] of it and you can no longer leaf.',
+            ),
           ),
           step(
             'A loop to pull by | optional',
             'If you left the notches out, the drawer needs a handle. Glue a loop of ribbon or string between the end wall and a second layer of card, cut [[inside width|bare]] × [[inside height]].',
-            caution('No beads, buttons or magnets on a box that small children can reach: they come off and go into mouths.'),
-            caution('Glue, ink and card are not meant for food. Keep seed that may be eaten in its own bag, and treated seed out of everybody’s reach, with a label that says so.'),
+            caution(
+              'No beads, buttons or magnets on a box that small children can reach: they come off and go into mouths.',
+            ),
+            caution(
+              'Glue, ink and card are not meant for food. Keep seed that may be eaten in its own bag, and treated seed out of everybody’s reach, with a label that says so.',
+            ),
           ),
         ),
     },

@@ -12,7 +12,10 @@ export const pottingBenchTray: DemoProject = {
   savedDaysAgo: 0.2,
   hero: null,
   pictures: {
-    bench: { alt: '', scene: (build) => ({ things: [{ type: 'folded', tilt: 32, ...build() }], card: 'green', words: 'Packet tray' }) },
+    bench: {
+      alt: '',
+      scene: (build) => ({ things: [{ type: 'folded', tilt: 32, ...build() }], card: 'green', words: 'Packet tray' }),
+    },
   },
   editions: [],
   draft: (show) =>
@@ -25,7 +28,10 @@ export const pottingBenchTray: DemoProject = {
         'Cut one piece, [[tray.across|bare]] × [[tray.along]]. Kraft card does not show the soil.',
         piece('Tray'),
       ),
-      step('Score and slit', 'Score [[inside height]] in from all four sides. Slit the corners from the top and bottom edges of the drawing, as far as the crossing.'),
+      step(
+        'Score and slit',
+        'Score [[inside height]] in from all four sides. Slit the corners from the top and bottom edges of the drawing, as far as the crossing.',
+      ),
       heading('Put it together'),
       step('Glue the corners', show('bench', 'The tray is [[inside heigth]] tall. Take a better photo, on the bench.')),
       step('Wax the floor | optional', 'Candle? Ask Bram what he used on his.'),

@@ -7,13 +7,16 @@ const baseAlone = keep((name) => name === 'Base');
 const lidAlone = keep((name) => name === 'Lid');
 
 /** The whole write-up. Edition 1 scored the lid at the wrong measure; `lidScore` is what the sentence says. */
-const write = (show: ShowPicture, { lidScore, lidCheck }: { readonly lidScore: string; readonly lidCheck: string }): WriteUp =>
+const write = (
+  show: ShowPicture,
+  { lidScore, lidCheck }: { readonly lidScore: string; readonly lidCheck: string },
+): WriteUp =>
   writeUp(
     'On swap day everybody puts a box on the long table, takes off the lid and stands it underneath. By noon the boxes hold other people’s seeds. This is the box: two trays, one a little larger than the other, from two pieces of card. If you have never made a box, begin here.',
     'Inside, the base is [[inside length]] long, [[inside width]] wide and [[inside height]] tall. The lid comes down over it by [[lid height]]. Measure what you want to keep in it, add a finger’s room, and set the sizes beside this text.',
     materials(
       '**Card**, 270 to 300 g/m² (100 to 110 lb cover): [[base.area]] for the base and [[lid.area]] for the lid. Another colour for the lid looks well.',
-      'The sums are for card [[card thickness]] thick. Thicker card needs a larger lid; tell the finer points, and the lid grows.',
+      'The sums are for card [[card thickness]] thick. Thicker card needs a larger lid: set the thickness among the finer points, and the lid grows.',
       'White glue and a scrap of card to spread it with, or strong double-sided tape for the tabs.',
       'Trimmer, or knife, metal ruler and mat; scoring board; bone folder; scissors for the slits; a few clothes pegs.',
       'Paper for a label, if you like.',
@@ -38,12 +41,17 @@ const write = (show: ShowPicture, { lidScore, lidCheck }: { readonly lidScore: s
       'Slit the corners',
       'Lay the card as in the drawing. The four slits start at the **top and bottom edges** and run in along a score, [[inside height]] deep, to the crossing. Each corner square now hangs on an end wall: it is a tab.',
       'Stop at the crossing or a hair before it. A slit that runs on opens a hole in the corner of the floor. Then trim a thin wedge off both sides of each tab, about [[taper]] at the tip, so that it finds its place without scraping.',
-      tip('Cut the slits with scissors, from the edge inwards, and stop when the points of the blades reach the crossing. A knife runs on before you notice.'),
+      tip(
+        'Cut the slits with scissors, from the edge inwards, and stop when the points of the blades reach the crossing. A knife runs on before you notice.',
+      ),
     ),
     step(
       'Fold and burnish',
-      'Fold every score to a right angle, press it flat, rub it down with the folder, and open it again. Do all of them before any glue comes to the table.',
-      show('stages', 'The base flat, half folded and glued: walls of [[inside height]] round a floor of [[base.length|bare]] × [[base.width]].'),
+      'Fold every score to a right angle, press it flat, rub it down with the folder, and open it again. Do all of them before any glue comes to the table. If a fold cracks, [Scoring, folding and cutting safely](/handbook/scoring-folding-and-cutting-safely) says why.',
+      show(
+        'stages',
+        'The base flat, half folded and glued: walls of [[inside height]] round a floor of [[base.length|bare]] × [[base.width]].',
+      ),
     ),
     heading('Put it together'),
     step(
@@ -65,7 +73,10 @@ const write = (show: ShowPicture, { lidScore, lidCheck }: { readonly lidScore: s
     step(
       'Slit, fold and glue the lid',
       'Just as the base, with the tabs on the **same pair of walls**: slits from the top and bottom edges of the drawing, [[lid height]] deep. Thick walls then lie over thick walls, and that is what the lid was measured for.',
-      show('both', 'Base and lid, both lying open. The lid is the lower one, [[lid height]] against [[inside height]], and its tabs lie inside the same pair of walls.'),
+      show(
+        'both',
+        'Base and lid, both lying open. The lid is the lower one, [[lid height]] against [[inside height]], and its tabs lie inside the same pair of walls.',
+      ),
     ),
     step(
       'Try the lid',
@@ -74,7 +85,10 @@ const write = (show: ShowPicture, { lidScore, lidCheck }: { readonly lidScore: s
         '**It sticks.** Burnish the lid’s tabs flat, and look for a drop of dried glue in its corners. For the next one, give it more play.',
         '**It wobbles.** Line the two walls of the lid that hold its tabs with a strip of card each, [[lid inside length - play|bare]] × [[lid height * 3 / 4]], or cut the next one with less play.',
       ),
-      show('lifted', 'The lid is [[lid height]] tall and leaves [[inside height - lid height]] of the base to be seen; that is where fingers take hold.'),
+      show(
+        'lifted',
+        'The lid is [[lid height]] tall and leaves [[inside height - lid height]] of the base to be seen; that is where fingers take hold.',
+      ),
     ),
     step(
       'Dividers | optional',
@@ -83,8 +97,10 @@ const write = (show: ShowPicture, { lidScore, lidCheck }: { readonly lidScore: s
     step(
       'A label, and what not to put in | optional',
       'A label half as long as the box, [[inside length / 2|bare]] × [[lid height * 2 / 3]], sits well on the front of the lid. Write the year in pencil and the name of the circle in ink.',
-      caution('Beans and large seeds look like sweets. Some seeds are treated, some are poisonous. Keep the box out of the reach of small children, and say on the label what is in it.'),
-      caution('No magnets for a catch, please: a small child who swallows them needs a hospital. The lid holds by its own fit.'),
+      caution(
+        'Beans and large seeds look like sweets. Some seeds are treated, some are poisonous. Keep the box out of the reach of small children, and say on the label what is in it.',
+      ),
+      caution('No magnets for a catch, please: swallowed, they are an emergency. The lid holds by its own fit.'),
     ),
     'On swap day, leave the lid **under** the box and not beside it, and nobody goes home with yours.',
   );
@@ -114,7 +130,19 @@ export const swapDayBox: DemoProject = {
       scene: (build) => ({
         things: [
           { type: 'folded', turn: -24, tilt: 38, ...build(baseAlone) },
-          { type: 'folded', turn: -24, tilt: 38, ...build((pattern) => ({ ...pattern, assembly: lidAlone(pattern).assembly.map((one) => ({ ...one, at: ['0 mm', 'lid inside width', '0 mm'], along: '-y' as const })) })) },
+          {
+            type: 'folded',
+            turn: -24,
+            tilt: 38,
+            ...build((pattern) => ({
+              ...pattern,
+              assembly: lidAlone(pattern).assembly.map((one) => ({
+                ...one,
+                at: ['0 mm', 'lid inside width', '0 mm'],
+                along: '-y' as const,
+              })),
+            })),
+          },
         ],
         card: 'green',
         words: 'Base and lid, open',
@@ -124,7 +152,11 @@ export const swapDayBox: DemoProject = {
   editions: [
     {
       daysAgo: 24,
-      writeUp: (show) => write(show, { lidScore: '[[inside height]]', lidCheck: 'The field in the middle should be large enough to go over the base.' }),
+      writeUp: (show) =>
+        write(show, {
+          lidScore: '[[inside height]]',
+          lidCheck: 'The field in the middle should be large enough to go over the base.',
+        }),
     },
     {
       daysAgo: 9,
@@ -134,7 +166,8 @@ export const swapDayBox: DemoProject = {
       writeUp: (show) =>
         write(show, {
           lidScore: '[[lid height]], which is **not** the height of the base,',
-          lidCheck: 'The field in the middle should now be [[lid.length|bare]] × [[lid.width]], larger than that of the base both ways.',
+          lidCheck:
+            'The field in the middle should now be [[lid.length|bare]] × [[lid.width]], larger than that of the base both ways.',
         }),
     },
   ],
