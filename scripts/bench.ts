@@ -8,7 +8,6 @@ import { HyperFormula } from 'hyperformula';
 import { compile as compileMath } from 'mathjs';
 import { build } from 'vite';
 import { compilePattern, drawPiece, evaluate, usualSizing, type Model, type Pattern } from '@/engine';
-import { workOut } from '@/engine/model/values';
 import { getPatternModel } from '@/features/patterns/patterns.server';
 
 const MEASURES = 150;
@@ -87,7 +86,7 @@ const sizing = (x: number) => ({ values: { x }, choices: {}, units: 'mm', grid: 
 
 async function engine(): Promise<void> {
   const model = modelOf(MEASURES);
-  const both = median(ROUNDS, (round) => workOut(model, sizing(100 + round)));
+  const both = median(ROUNDS, (round) => evaluate(model, sizing(100 + round)));
   const cells = HyperFormula.buildFromArray([[100], ...formulas.map((text) => [`=${inCells(text)}`])], {
     licenseKey: 'gpl-v3',
   });
@@ -109,7 +108,7 @@ async function engine(): Promise<void> {
   report('a whole book box: both evaluations, nets, fits, words, drawings', whole, 'hyperformula, 150 formulas', sheet);
 
   const [few, many] = [modelOf(19), modelOf(190)].map((one) =>
-    median(ROUNDS, (round) => void workOut(one, sizing(100 + round))),
+    median(ROUNDS, (round) => void evaluate(one, sizing(100 + round))),
   ) as [number, number];
   console.log(
     JSON.stringify({

@@ -12,9 +12,16 @@ function messageOf(changed: string): string {
     return error instanceof PatternFileError ? error.message : String(error);
   }
 }
-const changedBy = (change: (pattern: any) => void): string => {
-  // eslint-disable-line @typescript-eslint/no-explicit-any -- files are spoilt here on purpose
-  const pattern = JSON.parse(text);
+/** As far as these tests spoil it; fields are taken out and misspelt on purpose. */
+interface Spoilt {
+  slug: string;
+  group?: string;
+  measures: { name: string; formula?: string }[];
+  pieces: { colums?: unknown; cells: string[][]; tabs: { cells: string[] }[] }[];
+  fits: { left: string }[];
+}
+const changedBy = (change: (pattern: Spoilt) => void): string => {
+  const pattern = JSON.parse(text) as Spoilt;
   change(pattern);
   return messageOf(JSON.stringify(pattern));
 };
@@ -27,14 +34,14 @@ describe('a pattern file', () => {
     [
       'a formula with an unknown name',
       changedBy((p) => {
-        p.measures[4].formula = 'min(inside hight, inside length)';
+        p.measures[4]!.formula = 'min(inside hight, inside length)';
       }),
       'measure “corner tab”: No measure is called “inside hight”. The nearest name is “inside height”.',
     ],
     [
       'a field that we do not know',
       changedBy((p) => {
-        p.pieces[0].colums = [];
+        p.pieces[0]!.colums = [];
       }),
       'pieces → 1: A field called “colums”. The nearest is “columns”.',
     ],
@@ -48,28 +55,28 @@ describe('a pattern file', () => {
     [
       'a row with too few cells',
       changedBy((p) => {
-        p.pieces[0].cells[1].pop();
+        p.pieces[0]!.cells[1]!.pop();
       }),
       'piece “Tray”, row 2: 2 cells. Give every row one cell for every column.',
     ],
     [
       'a cell of no kind',
       changedBy((p) => {
-        p.pieces[0].cells[1][1] = 'flor floor';
+        p.pieces[0]!.cells[1]![1] = 'flor floor';
       }),
       'piece “Tray”, row 2, column 2: The cell “flor floor”. Write it like “panel floor” or “tab left on floor”.',
     ],
     [
       'a tab shape for no cell',
       changedBy((p) => {
-        p.pieces[0].tabs[0].cells = ['cornr 1'];
+        p.pieces[0]!.tabs[0]!.cells = ['cornr 1'];
       }),
       'piece “Tray”, tabs 1: No cell is called “cornr 1”. The nearest name is “corner 1”.',
     ],
     [
       'a name that is used twice',
       changedBy((p) => {
-        p.measures[1].name = 'inside length';
+        p.measures[1]!.name = 'inside length';
       }),
       'measure “inside length”: Two things are called “inside length”. Rename one of them.',
     ],
@@ -87,8 +94,8 @@ describe('a pattern file', () => {
   });
   it('reports every fault at once', () => {
     const message = changedBy((p) => {
-      p.measures[4].formula = 'nothing';
-      p.fits[0].left = 'inside length + 2';
+      p.measures[4]!.formula = 'nothing';
+      p.fits[0]!.left = 'inside length + 2';
     });
     expect(message.split('\n')).toHaveLength(3);
   });
