@@ -21,7 +21,7 @@ export function gapWords({ gap, is }: Pick<FitFigure, 'gap' | 'is'>, { units, gr
   const step = units === 'in' ? 25.4 / 64 : 0.1;
   const steps = size / step;
   const exact = Math.abs(steps - Math.round(steps)) < 1e-4;
-  if (/^0\D/.test(typeset))
+  if (/^0[^\d.]/.test(typeset))
     return exact ? (is === 'same as' ? 'exactly' : 'just') : is === 'same as' ? 'nearly exactly' : 'just';
   const [more, less] = is === 'same as' ? ['over', 'short'] : ['spare', 'missing'];
   return `${exact ? '' : 'about '}${typeset} ${gap > 0 ? more : less}`;
