@@ -1,6 +1,6 @@
 import { drawPiece, sayParts, show, type Figures, type PieceFigure, type Sentence, type Shown } from '@/engine';
 import { drawingSvg } from '@/exports/svg/drawing';
-import { esc } from './escape';
+import { esc } from '@/exports/escape';
 import { showLive, type LiveFigures, type LiveText } from './live';
 
 /**

@@ -1,5 +1,5 @@
 import type { BlockNode, DocNode, InlineNode, MarkNode, PhotoNode, StepNode } from './document';
-import { esc } from './escape';
+import { esc } from '@/exports/escape';
 import { safeHref } from './links';
 import type { LiveFigures } from './live';
 import { pictureSources, pictureUrl } from './pictures';

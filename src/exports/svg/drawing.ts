@@ -1,13 +1,6 @@
 import type { Drawing, Role, Shape } from '@/engine';
+import { esc } from '../escape';
 
-const ESCAPES: Readonly<Record<string, string>> = {
-  '&': '&amp;',
-  '<': '&lt;',
-  '>': '&gt;',
-  '"': '&quot;',
-  "'": '&#39;',
-};
-const escape = (text: string): string => text.replace(/[&<>"']/g, (mark) => ESCAPES[mark] ?? mark);
 const className = (role: Role): string => `dr-${role.replace(' ', '-')}`;
 const round = (value: number): number => Math.round(value * 100) / 100;
 
@@ -19,16 +12,16 @@ export interface SvgOptions {
 
 /** A drawing for a page. Looks come from the page's style sheet by role, so that themes and print need no second drawing. */
 export function drawingSvg(drawing: Drawing, options: SvgOptions = {}): string {
-  const name = options.decorative ? 'aria-hidden="true"' : `role="img" aria-label="${escape(drawing.alt)}"`;
-  return `<svg class="${escape(['drawing', options.class].filter(Boolean).join(' '))}" viewBox="0 0 ${round(drawing.width)} ${round(drawing.height)}" width="${round(drawing.width)}" height="${round(drawing.height)}" ${name}>${drawing.shapes.map((shape) => element(shape)).join('')}</svg>`;
+  const name = options.decorative ? 'aria-hidden="true"' : `role="img" aria-label="${esc(drawing.alt)}"`;
+  return `<svg class="${esc(['drawing', options.class].filter(Boolean).join(' '))}" viewBox="0 0 ${round(drawing.width)} ${round(drawing.height)}" width="${round(drawing.width)}" height="${round(drawing.height)}" ${name}>${drawing.shapes.map((shape) => element(shape)).join('')}</svg>`;
 }
 
 function element(shape: Shape, paint = ''): string {
-  const of = shape.of === undefined ? '' : ` data-of="${escape(shape.of)}"`;
+  const of = shape.of === undefined ? '' : ` data-of="${esc(shape.of)}"`;
   if (shape.type === 'path')
-    return `<path class="${className(shape.role)}${shape.tone === undefined ? '' : ` ${escape(shape.tone)}`}" d="${shape.d}"${of}${paint}/>`;
+    return `<path class="${className(shape.role)}${shape.tone === undefined ? '' : ` ${esc(shape.tone)}`}" d="${shape.d}"${of}${paint}/>`;
   const turn = shape.turned ? ` transform="rotate(-90 ${round(shape.x)} ${round(shape.y)})"` : '';
-  return `<text class="${className(shape.role)}" x="${round(shape.x)}" y="${round(shape.y)}" text-anchor="${shape.anchor}"${turn}${of}${paint}>${escape(shape.text)}</text>`;
+  return `<text class="${className(shape.role)}" x="${round(shape.x)}" y="${round(shape.y)}" text-anchor="${shape.anchor}"${turn}${of}${paint}>${esc(shape.text)}</text>`;
 }
 
 /** Colours for a picture that stands alone, without a style sheet. */

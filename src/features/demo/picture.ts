@@ -1,5 +1,6 @@
 import { rulerTicks } from '@/components/ruler-ticks';
 import { drawFolded, drawPiece, type Drawing, type Figures, type Model } from '@/engine';
+import { esc } from '@/exports/escape';
 import { drawingSvgStandalone, LIGHT_THEME, type Theme } from '@/exports/svg/drawing';
 
 /** Drawing units across; a picture is rendered larger. */
@@ -166,8 +167,7 @@ function words(
   text: string,
   { x, y, anchor, size = 16 }: { x: number; y: number; anchor: string; size?: number },
 ): string {
-  const safe = text.replaceAll('&', '&amp;').replaceAll('<', '&lt;');
-  return `<text x="${n(x)}" y="${n(y)}" text-anchor="${anchor}" font-family="Figtree" font-size="${size}" font-weight="600" fill="${LIGHT_THEME.ink}">${safe}</text>`;
+  return `<text x="${n(x)}" y="${n(y)}" text-anchor="${anchor}" font-family="Figtree" font-size="${size}" font-weight="600" fill="${LIGHT_THEME.ink}">${esc(text)}</text>`;
 }
 
 const n = (value: number): number => Math.round(value * 100) / 100;

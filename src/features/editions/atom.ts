@@ -1,4 +1,4 @@
-import { esc } from '@/writeup/escape';
+import { esc } from '@/exports/escape';
 
 /** One published project as the feed tells of it. */
 export interface FeedEntry {

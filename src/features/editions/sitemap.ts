@@ -1,4 +1,4 @@
-import { esc } from '@/writeup/escape';
+import { esc } from '@/exports/escape';
 
 export interface SitemapPlace {
   /** From the origin: `/projects/seed-box`. */

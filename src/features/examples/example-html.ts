@@ -2,7 +2,7 @@ import { drawPiece, explain, planSheets, sayParts, showValue, type PieceFigure }
 import { ICONS } from '@/components/icons';
 import { drawingSvg } from '@/exports/svg/drawing';
 import { pieceCount } from '@/features/sizing/facts';
-import { esc } from '@/writeup/escape';
+import { esc } from '@/exports/escape';
 import { readLive } from '@/writeup/live';
 import { measureInside } from '@/writeup/render-figures';
 import type { Example } from './example';

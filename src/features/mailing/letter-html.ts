@@ -1,4 +1,4 @@
-import { escapeHtml } from '@/features/sizing/escape';
+import { esc } from '@/exports/escape';
 
 const FONT = "Figtree,'Segoe UI',Helvetica,Arial,sans-serif";
 const LINK = /https?:\/\/[^\s<>"']+[^\s<>"'.,;:!?)]/g;
@@ -28,9 +28,9 @@ function linked(text: string): string {
   let html = '';
   let from = 0;
   for (const match of text.matchAll(LINK)) {
-    html += escapeHtml(text.slice(from, match.index));
-    html += `<a href="${escapeHtml(match[0])}" style="color:#6d2e5b">${escapeHtml(match[0])}</a>`;
+    html += esc(text.slice(from, match.index));
+    html += `<a href="${esc(match[0])}" style="color:#6d2e5b">${esc(match[0])}</a>`;
     from = match.index + match[0].length;
   }
-  return html + escapeHtml(text.slice(from));
+  return html + esc(text.slice(from));
 }

@@ -1,5 +1,5 @@
 import { GRIDS, show, type Figures, type Model, type SheetPlan, type Sizing } from '@/engine';
-import { esc } from '@/writeup/escape';
+import { esc } from '@/exports/escape';
 import { cutWords, gapWords, insideWords, pieceCount, piecesWords, sheetsWords, timeWords } from './facts';
 import type { Panel } from './panel';
 import type { Typed } from './reader-store';

@@ -1,4 +1,4 @@
-import { escapeHtml } from '@/features/sizing/escape';
+import { esc } from '@/exports/escape';
 import { dayWords } from '@/features/editions/dates';
 import { preferencesUrl, unsubscribeUrl } from '../sender';
 import { greet } from './greeting';
@@ -35,7 +35,7 @@ export function fillCopy(
     'preferences-url': preferencesUrl(siteUrl, leaveToken),
     'project-url': part.projectUrl,
   };
-  const escaped = Object.fromEntries(Object.entries(plain).map(([slot, value]) => [slot, escapeHtml(value)]));
+  const escaped = Object.fromEntries(Object.entries(plain).map(([slot, value]) => [slot, esc(value)]));
   return {
     html: fillSlots(html, { ...escaped, inside: part.insideHtml, outside: part.outsideHtml }),
     text: fillSlots(text, { ...plain, inside: part.insideText, outside: part.outsideText }),

@@ -1,5 +1,5 @@
 import { defaultGrid, show, type Figures, type SizeFigure, type Sizing, type Unit } from '@/engine';
-import { escapeHtml } from '@/features/sizing/escape';
+import { esc } from '@/exports/escape';
 
 export const MAIL_UNITS = ['in', 'mm', 'cm'] as const satisfies readonly Unit[];
 
@@ -42,7 +42,7 @@ const each = (sizes: readonly SizeFigure[], shown: Shown) =>
 /** Set with a plain slash and a space: where a mail's font has no fractions of its own, "9 1/4" must not become "91/4". */
 const sizesHtml = (sizes: readonly SizeFigure[], shown: Shown, style: string): string =>
   each(sizes, shown)
-    .map(({ text }) => `<b style="${style}">${escapeHtml(text.replaceAll(' ', '\u00a0'))}</b>`)
+    .map(({ text }) => `<b style="${style}">${esc(text.replaceAll(' ', '\u00a0'))}</b>`)
     .join(' × ');
 
 /** `9 × 6 × 2 1/4 in`, with a plain slash. */

@@ -6,5 +6,5 @@ const ENTITIES: Readonly<Record<string, string>> = {
   "'": '&#39;',
 };
 
-/** Text made safe for an HTML element or a quoted attribute. */
+/** Text made safe for an element or a quoted attribute of HTML, SVG or XML: the one place where that is done. */
 export const esc = (text: string): string => text.replace(/[&<>"']/g, (mark) => ENTITIES[mark] ?? mark);

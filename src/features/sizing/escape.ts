@@ -1,1 +1,0 @@
-export { esc as escapeHtml } from '@/writeup/escape';
