@@ -26,15 +26,15 @@ export async function startServices(): Promise<Stoppable> {
     await seedDemo();
   }
 
-  const localMail = config.smtpUrl
-    ? null
+  const mailServer = config.smtpUrl
+    ? { url: config.smtpUrl, stop: async () => {} }
     : await startLocalMailServer({ port: config.localMailPort, dir: join(config.dataDir, 'mail') });
-  const worker = startMailWorker({ smtpUrl: config.smtpUrl ?? localMail?.url ?? null });
+  const worker = startMailWorker({ smtpUrl: mailServer.url });
 
   return {
     async stop() {
       await worker.stop();
-      await localMail?.stop();
+      await mailServer.stop();
       closeDatabase();
     },
   };

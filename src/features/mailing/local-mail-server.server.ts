@@ -14,11 +14,6 @@ export interface LocalMailServer {
 }
 
 const MOST_BYTES = 5 * 1024 * 1024;
-const HOLDER = Symbol.for('foldwright.local-mail-server');
-const holder = globalThis as typeof globalThis & { [HOLDER]?: string };
-
-/** Where this process's local mail server listens, once it has been started. */
-export const localMailUrl = (): string | null => holder[HOLDER] ?? null;
 
 /**
  * Stands in for the world's mail servers: takes every message, sends none on, and keeps each as it came in a file of its
@@ -66,14 +61,8 @@ export async function startLocalMailServer({ port, dir }: { port: number; dir: s
     once(server.server, 'listening'),
     once(server.server, 'error').then(([error]: unknown[]) => Promise.reject(error as Error)),
   ]);
-  const url = `smtp://127.0.0.1:${(server.server.address() as AddressInfo).port}`;
-  holder[HOLDER] = url;
   return {
-    url,
-    stop: () =>
-      new Promise((resolve) => {
-        if (holder[HOLDER] === url) holder[HOLDER] = undefined;
-        server.close(() => resolve());
-      }),
+    url: `smtp://127.0.0.1:${(server.server.address() as AddressInfo).port}`,
+    stop: () => new Promise((resolve) => server.close(() => resolve())),
   };
 }

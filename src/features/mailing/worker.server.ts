@@ -4,7 +4,6 @@ import { copyMessage, templateOf, type Template } from './copy.server';
 import { fanOut, mailingsToPrepare } from './fan-out.server';
 import { openGate, readGate, shutGate } from './gate.server';
 import { letterMessage, recordLetter, takeLetter, type DueLetter } from './letters.server';
-import { localMailUrl } from './local-mail-server.server';
 import { judge, type Answer } from './outcome';
 import {
   claim,
@@ -176,13 +175,10 @@ const BETWEEN_ROUNDS = 400;
  * Sends what the outbox and the letters hold until it is stopped. Several processes may start one: only the one that
  * holds the lease works, another takes over when it is gone.
  */
-export function startMailWorker({
-  signal,
-  smtpUrl = config.smtpUrl ?? localMailUrl(),
-}: { signal?: AbortSignal; smtpUrl?: string | null } = {}): {
+export function startMailWorker({ smtpUrl }: { readonly smtpUrl: string }): {
+  /** Waits for what is under way; asked again, for the same. */
   stop(): Promise<void>;
 } {
-  if (!smtpUrl) throw new Error('No mail server: set SMTP_URL, or start the local mail server first.');
   const worker = createMailWorker({ transport: openTransport(smtpUrl) });
   const turn = () => {
     try {
@@ -199,6 +195,5 @@ export function startMailWorker({
     clearInterval(timer);
     return (stopped ??= worker.stop());
   };
-  signal?.addEventListener('abort', () => void stop(), { once: true });
   return { stop };
 }
