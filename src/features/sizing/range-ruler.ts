@@ -62,7 +62,7 @@ export function rangeRulerSvg(ticks: readonly RangeTick[]): string {
           `<text x="${at.toFixed(2)}%" y="25" text-anchor="${at < 4 ? 'start' : at > 96 ? 'end' : 'middle'}">${label}</text>`,
         ],
   );
-  return `<svg class="range-ruler" width="100%" height="28" aria-hidden="true">${lines.join('')}${figures.join('')}</svg>`;
+  return `<svg class="ruler" width="100%" height="28" aria-hidden="true">${lines.join('')}${figures.join('')}</svg>`;
 }
 
 const isWhole = (x: number): boolean => Math.abs(x - Math.round(x)) < 1e-9;
