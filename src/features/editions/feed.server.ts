@@ -3,7 +3,7 @@ import { config } from '@/config.server';
 import { db } from '@/db/client.server';
 import { editions } from '@/db/schema';
 import { pieceCount, piecesWords, sheetsWords, sizesTogether, timeWords } from '@/features/sizing/facts';
-import { esc } from '@/writeup/escape';
+import { esc } from '@/exports/escape';
 import { jpegUrl } from '@/writeup/pictures';
 import { atomFeed, type FeedEntry } from './atom';
 import { listPublished, type Edition } from './editions.server';
@@ -58,7 +58,7 @@ function contentHtml(edition: Edition): string {
   const correction =
     edition.correctionNote === ''
       ? ''
-      : `<p><strong>Corrected in edition ${edition.n}.</strong> ${esc(edition.correctionNote)}</p>`;
+      : `<p><strong>Corrected in edition ${edition.n}.</strong> ${esc(edition.correctionNote).replaceAll('\n', '<br>')}</p>`;
   const summary = edition.summary || edition.pattern.summary;
   return (
     `${picture}<p>${esc(summary)}</p>${correction}<ul>${facts.map((fact) => `<li>${esc(fact)}</li>`).join('')}</ul>` +
