@@ -102,11 +102,20 @@ export interface FitDef {
   readonly advice?: boolean;
 }
 
-export interface PieceDef {
+export type PieceDef = GridPieceDef | FanPieceDef | DiscPieceDef | SectorPieceDef | OutlinePieceDef;
+interface PieceBase {
   readonly name: string;
   readonly count?: string;
   readonly stock: 'card' | 'patterned paper' | 'greyboard';
   readonly when?: string;
+  /** Colour role in the folded picture. Usual: card. */
+  readonly look?: 'card' | 'pages';
+  /** Words for the maker that geometry cannot know, said after the sentences from geometry. */
+  readonly remarks?: readonly string[];
+}
+
+/** Columns and rows of card. */
+export interface GridPieceDef extends PieceBase {
   readonly builder: 'grid';
   readonly columns: readonly Track[];
   readonly rows: readonly Track[];
@@ -120,14 +129,103 @@ export interface PieceDef {
   readonly corners?: readonly CornerDef[];
   readonly notches?: readonly NotchDef[];
   readonly slots?: readonly SlotDef[];
+  readonly holes?: readonly HoleDef[];
+  readonly creases?: readonly CreaseDef[];
   /** Panels that are rolled instead of lying flat, by cell name. */
   readonly rolls?: readonly { readonly cell: string; readonly radius: string; readonly when?: string }[];
   /** Sides that fits may measure: `Floor.curve length`. */
   readonly edges?: readonly { readonly name: string; readonly cell: string; readonly side: Side }[];
-  /** Decorative layer or drawn card: colour role in the folded picture. Usual: card. */
-  readonly look?: 'card' | 'pages';
-  /** Words for the maker that geometry cannot know, said after the sentences from geometry. */
-  readonly remarks?: readonly string[];
+}
+
+/** A regular polygon with a flap on every side, and a tab on one end of every flap. */
+export interface FanPieceDef extends PieceBase {
+  readonly builder: 'fan';
+  readonly centre: string;
+  readonly sides: string;
+  readonly side: string;
+  readonly flap: {
+    readonly name: string;
+    readonly shape: 'rectangle' | 'triangle';
+    /** Out from the polygon's side. */
+    readonly height: string;
+    /** Turn from flat. */
+    readonly angle: string;
+    /** A round hole on the middle line, by its distance from the tip of the flap. */
+    readonly hole?: { readonly diameter: string; readonly 'from tip': string; readonly when?: string };
+  };
+  readonly tab?: {
+    readonly width: string;
+    /** Between the hinge and the tab's end, at the polygon and at the tip. */
+    readonly low: string;
+    readonly high: string;
+    readonly angle: string;
+    readonly when?: string;
+  };
+}
+
+/** A circle of card, with or without a toothed rim. */
+export interface DiscPieceDef extends PieceBase {
+  readonly builder: 'disc';
+  readonly disc: string;
+  /** The circle itself; the teeth stand outside it. */
+  readonly diameter: string;
+  readonly rim?: {
+    readonly teeth: string;
+    readonly depth: string;
+    readonly 'tooth angle': string;
+    readonly angle: string;
+    readonly when?: string;
+  };
+}
+
+/** A ring sector that rolls into a cone or the frustum of one, with a seam tab. */
+export interface SectorPieceDef extends PieceBase {
+  readonly builder: 'sector';
+  readonly body: string;
+  /** Nothing for a pointed cone. */
+  readonly 'inner radius': string;
+  readonly 'outer radius': string;
+  readonly angle: string;
+  readonly seam: { readonly width: string; readonly low: string; readonly high: string };
+}
+
+/** Panels between named points: what the other builders do not make. */
+export interface OutlinePieceDef extends PieceBase {
+  readonly builder: 'outline';
+  readonly points: readonly { readonly name: string; readonly across: string; readonly along: string }[];
+  readonly panels: readonly OutlinePanelDef[];
+  readonly lines?: readonly LineDef[];
+  /** Edges that fits may measure, from point to point along one panel. */
+  readonly edges?: readonly {
+    readonly name: string;
+    readonly panel: string;
+    readonly from: string;
+    readonly to: string;
+  }[];
+}
+export interface OutlinePanelDef {
+  readonly name: string;
+  readonly role?: 'panel' | 'tab';
+  /** Point names in order, clockwise on the drawing; `b bowed out by r` goes to `b` along an arc of radius `r` (out or in). */
+  readonly loop: readonly string[];
+  readonly when?: string;
+}
+/** A round hole; position of its middle from the cell's left and top. */
+export interface HoleDef {
+  readonly cell: string;
+  readonly across: string;
+  readonly along: string;
+  readonly diameter: string;
+  readonly when?: string;
+}
+/** A fold inside a cell that lets a flat box open: drawn and said, lying flat in the folded picture. */
+export interface CreaseDef {
+  readonly cell: string;
+  readonly is: 'valley' | 'mountain';
+  /** Across and along from the cell's top left corner. */
+  readonly from: readonly [string, string];
+  readonly to: readonly [string, string];
+  readonly when?: string;
 }
 export interface Track {
   readonly name: string;
@@ -135,9 +233,9 @@ export interface Track {
   readonly when?: string;
 }
 /**
- * What a cell of the grid is: `away`, `panel floor`, `tab left`, `tab corner 1 on left end`, `cap curve on floor`.
- * A tab is hinged on one neighbour only (`on …`; needed when it touches several) and cut free from the others. A cap is a
- * circular segment that continues its neighbour without a fold.
+ * What a cell of the grid is: `away`, `panel floor`, `tab left`, `tab corner 1 on left end`, `flap dust on second`,
+ * `cap curve on floor`. A tab (glued) or flap (not glued) is hinged on one neighbour only (`on …`; needed when it touches
+ * several) and cut free from the others. A cap is a circular segment that continues its neighbour without a fold.
  */
 export type CellDef = string;
 export type Side = 'top' | 'right' | 'bottom' | 'left';
@@ -159,6 +257,10 @@ export interface TabDef {
   readonly bottom?: TabEnd;
   /** Number of teeth that the tab is cut into; usual 1, a plain tab. */
   readonly teeth?: string;
+  /** Radius of the two corners of the tip. */
+  readonly round?: string;
+  /** A shape of its own instead: corners as `[along the hinge, out from it]`, hinge from left to right or top to bottom. */
+  readonly shape?: readonly (readonly [string, string])[];
   /** Half the angle that each tooth must give way to its neighbour when the tab is bent. */
   readonly 'tooth angle'?: string;
   readonly when?: string;
@@ -248,8 +350,10 @@ export interface Panel {
   readonly loop: Loop;
   /** One tooth of a toothed tab; always glued out of sight. */
   readonly tooth?: boolean;
-  /** Rolled to this radius about an axis along the given direction. */
-  readonly roll?: { readonly radius: number; readonly axis: 'across' | 'along' };
+  /** Rolled to this radius about an axis that runs along. */
+  readonly roll?: { readonly radius: number };
+  /** Rolled into a cone about this point of the flat, over this angle in degrees. */
+  readonly cone?: { readonly apex: Point; readonly angle: number };
 }
 export interface Fold {
   readonly curve: Curve;
@@ -264,6 +368,8 @@ export interface Net {
   readonly holes: readonly Loop[];
   readonly panels: readonly Panel[];
   readonly folds: readonly Fold[];
+  /** Folds inside panels, lying flat when the box stands. */
+  readonly creases: readonly { readonly curve: Curve; readonly kind: Fold['kind'] }[];
   /** Lines where two panels go on without a fold. */
   readonly joins: readonly { readonly curve: Curve; readonly panels: readonly [string, string] }[];
   /** Cuts that end inside the card. */

@@ -10,7 +10,10 @@ const found = (formula: string) => namesIn(formula, names).map(({ name, from, to
 describe('names in a formula', () => {
   it('takes the longest name that stands there', () => {
     //       0123456789012345
-    expect(found('inside depth + 2 * tab')).toEqual([['inside depth', 0, 12], ['tab', 19, 22]]);
+    expect(found('inside depth + 2 * tab')).toEqual([
+      ['inside depth', 0, 12],
+      ['tab', 19, 22],
+    ]);
   });
   it('finds a name whatever its case and however wide its gaps', () => {
     expect(found('Inside  Depth')).toEqual([['inside depth', 0, 13]]);
@@ -22,11 +25,18 @@ describe('names in a formula', () => {
     expect(found('floor.tab + tab')).toEqual([['tab', 12, 15]]);
   });
   it('leaves alone a name that begins the name of a function', () => {
-    expect(namesIn('arc length(tab, arc) + arc', ['arc', 'tab']).map(({ name, from }) => [name, from])).toEqual([['tab', 11], ['arc', 16], ['arc', 23]]);
+    expect(namesIn('arc length(tab, arc) + arc', ['arc', 'tab']).map(({ name, from }) => [name, from])).toEqual([
+      ['tab', 11],
+      ['arc', 16],
+      ['arc', 23],
+    ]);
     expect(namesIn('if arc > tab and (tab) then arc else (arc)', ['arc', 'tab'])).toHaveLength(5);
   });
   it('works in a formula that does not read', () => {
-    expect(found('if spine is ( tab +')).toEqual([['spine', 3, 8], ['tab', 14, 17]]);
+    expect(found('if spine is ( tab +')).toEqual([
+      ['spine', 3, 8],
+      ['tab', 14, 17],
+    ]);
   });
   it('finds nothing when there are no names', () => {
     expect(namesIn('tab', [])).toEqual([]);
@@ -53,7 +63,13 @@ describe('what follows a measure', () => {
     expect(litBy(pattern, 'ribbon').pieces).toEqual([]);
   });
   it('ends where measures go round in a circle', () => {
-    const circle: Pattern = { ...FOLDER, measures: [{ name: 'a', formula: 'b' }, { name: 'b', formula: 'a' }] };
+    const circle: Pattern = {
+      ...FOLDER,
+      measures: [
+        { name: 'a', formula: 'b' },
+        { name: 'b', formula: 'a' },
+      ],
+    };
     expect(litBy(circle, 'a').followers).toEqual(['b']);
   });
 });

@@ -1,5 +1,13 @@
 import { describe, expect, it } from 'vitest';
-import { addMeasure, changeAsk, changeTrack, nameTrouble, removeMeasure, turnOver, usersOf } from '@/features/projects/pattern-edits';
+import {
+  addMeasure,
+  changeAsk,
+  changeTrack,
+  nameTrouble,
+  removeMeasure,
+  turnOver,
+  usersOf,
+} from '@/features/projects/pattern-edits';
 import { curedText } from '@/features/workroom/desk/cured-text';
 import { FOLDER } from '../server/published-project';
 
@@ -8,11 +16,19 @@ const measure = (pattern: typeof FOLDER, name: string) => pattern.measures.find(
 describe('editing a pattern', () => {
   it('changes one field of a question and nothing else', () => {
     const changed = changeAsk(FOLDER, 'inside width', { to: '9 in' });
-    expect(measure(changed, 'inside width')?.ask).toEqual({ question: 'How wide is what goes in?', usual: '4 in', from: '2 in', to: '9 in' });
+    expect(measure(changed, 'inside width')?.ask).toEqual({
+      question: 'How wide is what goes in?',
+      usual: '4 in',
+      from: '2 in',
+      to: '9 in',
+    });
     expect(measure(changed, 'blank width')).toBe(measure(FOLDER, 'blank width'));
   });
   it('makes the usual value of an asked measure its formula when it is to be worked out', () => {
-    expect(measure(turnOver(FOLDER, 'inside width'), 'inside width')).toEqual({ name: 'inside width', formula: '4 in' });
+    expect(measure(turnOver(FOLDER, 'inside width'), 'inside width')).toEqual({
+      name: 'inside width',
+      formula: '4 in',
+    });
   });
   it('makes the formula of a worked measure its usual value when the reader is to be asked', () => {
     const turned = measure(turnOver(FOLDER, 'blank width'), 'blank width');
@@ -20,13 +36,24 @@ describe('editing a pattern', () => {
     expect(turned?.ask?.usual).toBe('2 * inside width');
   });
   it('changes the size of one column', () => {
-    const changed = changeTrack(FOLDER, { piece: 'Folder', axis: 'columns', index: 1 }, { size: 'inside width + 1 mm' });
-    expect(changed.pieces[0]?.columns.map((column) => column.size)).toEqual(['inside width', 'inside width + 1 mm']);
+    const changed = changeTrack(
+      FOLDER,
+      { piece: 'Folder', axis: 'columns', index: 1 },
+      { size: 'inside width + 1 mm' },
+    );
+    const [folder] = changed.pieces;
+    expect(folder?.builder === 'grid' && folder.columns.map((column) => column.size)).toEqual([
+      'inside width',
+      'inside width + 1 mm',
+    ]);
   });
   it('says what uses a measure before it is taken out', () => {
     expect(usersOf(FOLDER, 'inside width')).toEqual(['measure “blank width”', 'piece “Folder”', 'fit “it stands”']);
     expect(usersOf(addMeasure(FOLDER, { name: 'spare', formula: '1 in' }), 'spare')).toEqual([]);
-    expect(removeMeasure(FOLDER, 'blank width').measures.map((known) => known.name)).toEqual(['inside width', 'inside height']);
+    expect(removeMeasure(FOLDER, 'blank width').measures.map((known) => known.name)).toEqual([
+      'inside width',
+      'inside height',
+    ]);
   });
   it.each([
     ['', 'Give the measure a name, such as “rib height”.'],

@@ -37,9 +37,15 @@ describe('what differs from the newest edition', () => {
   const edition = { title: 'Folder', summary: 'For lists.', pattern: FOLDER, sizing: AUTHORS_SIZE, writeUp: ONE_STEP };
   it('is nothing when nothing was changed', () => expect(differenceWords(edition, { ...edition })).toBe(''));
   it('counts measures and steps', () => {
-    const measures = FOLDER.measures.map((measure) => (measure.name === 'blank width' ? { ...measure, rounds: 'up' as const } : measure));
+    const measures = FOLDER.measures.map((measure) =>
+      measure.name === 'blank width' ? { ...measure, rounds: 'up' as const } : measure,
+    );
     const [step] = ONE_STEP.doc.content;
-    const now = { ...edition, pattern: { ...FOLDER, measures }, writeUp: writeUpOf(...(step ? [step, step, step] : [])) };
+    const now = {
+      ...edition,
+      pattern: { ...FOLDER, measures },
+      writeUp: writeUpOf(...(step ? [step, step, step] : [])),
+    };
     expect(differenceWords(edition, now)).toBe('1 measure and 2 steps differ');
   });
   it('counts what was taken out', () => {
@@ -51,13 +57,25 @@ describe('what differs from the newest edition', () => {
 });
 
 describe('a revision in a header', () => {
-  it.each([['"48"', 48], ['W/"48"', 48], [etagOf(7), 7], ['*', null], ['48', null], ['"x"', null], ['', null], [null, null]])('%s names %s', (header, revision) =>
-    expect(revisionIn(header)).toBe(revision),
-  );
+  it.each([
+    ['"48"', 48],
+    ['W/"48"', 48],
+    [etagOf(7), 7],
+    ['*', null],
+    ['48', null],
+    ['"x"', null],
+    ['', null],
+    [null, null],
+  ])('%s names %s', (header, revision) => expect(revisionIn(header)).toBe(revision));
 });
 
 describe('the search', () => {
-  const project = { title: 'Seed keeper’s box', patternName: 'Book box', words: 'Lower spine arc', author: { id: 'i', name: 'Ines' } };
+  const project = {
+    title: 'Seed keeper’s box',
+    patternName: 'Book box',
+    words: 'Lower spine arc',
+    author: { id: 'i', name: 'Ines' },
+  };
   it('finds words of title, pattern, pieces and measures, whatever their case', () => {
     expect(matchesSearch(project, 'ARC keeper')).toBe(true);
     expect(matchesSearch(project, ' ')).toBe(true);
@@ -90,7 +108,11 @@ describe('the write-up that a project begins with', () => {
           { type: 'pieceCard', attrs: { piece: 'Folder' } },
         ],
       },
-      { type: 'step', attrs: { title: '', mark: '' }, content: [{ type: 'paragraph', content: [{ type: 'text', text: 'Fold the folder.' }] }] },
+      {
+        type: 'step',
+        attrs: { title: '', mark: '' },
+        content: [{ type: 'paragraph', content: [{ type: 'text', text: 'Fold the folder.' }] }],
+      },
     ]);
   });
 });

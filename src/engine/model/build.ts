@@ -1,28 +1,170 @@
 import type { Formula, Values } from '../formula';
 import { isZero } from '../measure';
-import { buildGrid, type Built, type EndShape, type GridPiece, type TabShape } from '../piece';
+import {
+  buildDisc,
+  buildFan,
+  buildGrid,
+  buildOutline,
+  buildSector,
+  type Built,
+  type EndShape,
+  type GridPiece,
+  type TabShape,
+} from '../piece';
 import type { Side } from '../types';
-import type { CompiledPiece } from './model';
+import { CUT_GRID } from './compile';
+import type { CompiledGrid, CompiledLine, CompiledPiece, Conditional, Model, Pair } from './model';
 import { isInUse } from './values';
 
-/** The piece with every formula worked out; columns and rows that are not in use, or of no size, are left out with their cells. */
-export function resolvePiece(piece: CompiledPiece, values: Values): GridPiece {
-  const used = (tracks: CompiledPiece['columns']) =>
+/** A built piece, with the worked-out grid where there is one: its words need the cells. */
+export interface BuiltPiece {
+  readonly built: Built;
+  readonly grid: GridPiece | null;
+}
+
+/** Works every formula of a piece out and builds its net. */
+export function buildPiece(model: Model, piece: CompiledPiece, values: Values): BuiltPiece {
+  const { def, shape } = piece;
+  const step = values[model.scope.slot(CUT_GRID)] as number;
+  const at = (formula: Formula) => formula.work(values);
+  switch (shape.builder) {
+    case 'grid': {
+      const grid = resolveGrid(shape, def.builder === 'grid' ? (def.edges ?? []) : [], values);
+      return { grid, built: buildGrid(grid) };
+    }
+    case 'fan': {
+      const { centre, flap } = def as Extract<typeof def, { builder: 'fan' }>;
+      const { hole, tab } = shape;
+      const fan = {
+        centre,
+        step,
+        sides: Math.round(at(shape.sides)),
+        side: at(shape.side),
+        flap: {
+          name: flap.name,
+          shape: flap.shape,
+          height: at(shape.height),
+          angle: at(shape.angle),
+          hole: hole && isInUse(hole, values) ? { diameter: at(hole.diameter), fromTip: at(hole.fromTip) } : null,
+        },
+        tab:
+          tab && isInUse(tab, values)
+            ? { width: at(tab.width), low: at(tab.low), high: at(tab.high), angle: at(tab.angle) }
+            : null,
+      };
+      return { grid: null, built: buildFan(fan) };
+    }
+    case 'disc': {
+      const { disc } = def as Extract<typeof def, { builder: 'disc' }>;
+      const { rim } = shape;
+      const made =
+        rim && isInUse(rim, values)
+          ? {
+              teeth: Math.round(at(rim.teeth)),
+              depth: at(rim.depth),
+              toothAngle: at(rim.toothAngle),
+              angle: at(rim.angle),
+            }
+          : null;
+      return { grid: null, built: buildDisc({ disc, diameter: at(shape.diameter), rim: made, step }) };
+    }
+    case 'sector': {
+      const { body } = def as Extract<typeof def, { builder: 'sector' }>;
+      const seam = { width: at(shape.seam.width), low: at(shape.seam.low), high: at(shape.seam.high) };
+      return {
+        grid: null,
+        built: buildSector({
+          body,
+          inner: at(shape.inner),
+          outer: at(shape.outer),
+          angle: at(shape.angle),
+          seam,
+          step,
+        }),
+      };
+    }
+    case 'outline': {
+      const { edges = [] } = def as Extract<typeof def, { builder: 'outline' }>;
+      const outline = {
+        points: new Map(shape.points.map(({ name, at: [x, y] }) => [name, { x: at(x), y: at(y) }])),
+        panels: shape.panels
+          .filter((panel) => isInUse(panel, values))
+          .map((panel) => ({
+            name: panel.name,
+            role: panel.role,
+            loop: panel.loop.map(({ point, bow }) => ({ point, bow: bow && { to: bow.to, radius: at(bow.radius) } })),
+          })),
+        lines: linesOf(shape.lines, values),
+        edges,
+        step,
+      };
+      return { grid: null, built: buildOutline(outline) };
+    }
+  }
+}
+
+const inUse = <T extends Conditional>(list: readonly T[], values: Values): readonly T[] =>
+  list.filter((one) => isInUse(one, values));
+const linesOf = (lines: readonly CompiledLine[], values: Values): GridPiece['lines'] =>
+  inUse(lines, values).map(({ between, is, angle }) => ({ between, is, angle: angle?.work(values) ?? 90 }));
+
+/** The grid with every formula worked out; columns and rows that are not in use, or of no size, are left out with their cells. */
+function resolveGrid(shape: CompiledGrid, edges: GridPiece['edges'], values: Values): GridPiece {
+  const used = (tracks: CompiledGrid['columns']) =>
     tracks
       .map((track, index) => ({ index, size: track.size.work(values), kept: isInUse(track, values) }))
       .filter((track) => track.kept && !isZero(track.size));
-  const [columns, rows] = [used(piece.columns), used(piece.rows)];
-  const cells = rows.map((row, r) =>
-    columns.map((column, c) => ({
-      ...(piece.cells[row.index]?.[column.index] as GridPiece['cells'][number][number]),
-      row: r,
-      column: c,
+  const [columns, rows] = [used(shape.columns), used(shape.rows)];
+  const at = (formula: Formula) => formula.work(values);
+  const pair = ([a, b]: Pair): readonly [number, number] => [at(a), at(b)];
+  return {
+    columns: columns.map((column) => column.size),
+    rows: rows.map((row) => row.size),
+    cells: rows.map((row, r) =>
+      columns.map((column, c) => ({
+        ...(shape.cells[row.index]?.[column.index] as GridPiece['cells'][number][number]),
+        row: r,
+        column: c,
+      })),
+    ),
+    lines: linesOf(shape.lines, values),
+    tabs: tabsOf(shape, values),
+    caps: new Map(shape.caps.map(({ cell, radius }) => [cell, at(radius)])),
+    corners: inUse(shape.corners, values).map(({ cell, corner, radius }) => ({ cell, corner, radius: at(radius) })),
+    notches: inUse(shape.notches, values).map(({ cell, side, at: place, radius }) => ({
+      cell,
+      side,
+      at: at(place),
+      radius: at(radius),
     })),
-  );
-  const inUse = <T extends { readonly when?: Formula }>(list: readonly T[]): readonly T[] =>
-    list.filter((one) => isInUse(one, values));
+    slots: inUse(shape.slots, values).map(({ cell, at: [x, y], size: [w, h] }) => ({
+      cell,
+      across: at(x),
+      along: at(y),
+      width: at(w),
+      height: at(h),
+    })),
+    holes: inUse(shape.holes, values).map(({ cell, at: [x, y], diameter }) => ({
+      cell,
+      across: at(x),
+      along: at(y),
+      diameter: at(diameter),
+    })),
+    creases: inUse(shape.creases, values).map(({ cell, is, from, to }) => ({
+      cell,
+      is,
+      from: pair(from),
+      to: pair(to),
+    })),
+    rolls: new Map(inUse(shape.rolls, values).map(({ cell, radius }) => [cell, { radius: at(radius) }])),
+    edges,
+  };
+}
+
+/** What is said of a tab later adds to what was said before. */
+function tabsOf(shape: CompiledGrid, values: Values): GridPiece['tabs'] {
   const tabs = new Map<string, TabShape>();
-  for (const tab of inUse(piece.tabs)) {
+  for (const tab of inUse(shape.tabs, values)) {
     const ends = Object.fromEntries(
       Object.entries(tab.ends).map(([side, end]): [string, EndShape] => {
         const by = end.by?.work(values) ?? 0;
@@ -39,39 +181,10 @@ export function resolvePiece(piece: CompiledPiece, values: Values): GridPiece {
         ends: { ...before?.ends, ...ends },
         teeth: tab.teeth?.work(values) ?? before?.teeth ?? 1,
         toothAngle: tab.toothAngle?.work(values) ?? before?.toothAngle ?? 0,
+        round: tab.round?.work(values) ?? before?.round ?? 0,
+        shape: tab.shape?.map(([u, v]) => [u.work(values), v.work(values)] as const) ?? before?.shape ?? null,
       });
     }
   }
-  return {
-    columns: columns.map((column) => column.size),
-    rows: rows.map((row) => row.size),
-    cells,
-    lines: inUse(piece.lines).map(({ between, is, angle }) => ({ between, is, angle: angle?.work(values) ?? 90 })),
-    tabs,
-    caps: new Map(piece.caps.map(({ cell, radius }) => [cell, radius.work(values)])),
-    corners: inUse(piece.corners).map(({ cell, corner, radius }) => ({ cell, corner, radius: radius.work(values) })),
-    notches: inUse(piece.notches).map(({ cell, side, at, radius }) => ({
-      cell,
-      side,
-      at: at.work(values),
-      radius: radius.work(values),
-    })),
-    slots: inUse(piece.slots).map(({ cell, across, along, width, height }) => ({
-      cell,
-      across: across.work(values),
-      along: along.work(values),
-      width: width.work(values),
-      height: height.work(values),
-    })),
-    rolls: new Map(inUse(piece.rolls).map(({ cell, radius }) => [cell, { radius: radius.work(values) }])),
-    edges: piece.def.edges ?? [],
-  };
+  return tabs;
 }
-
-export const buildPiece = (
-  piece: CompiledPiece,
-  values: Values,
-): { readonly grid: GridPiece; readonly built: Built } => {
-  const grid = resolvePiece(piece, values);
-  return { grid, built: buildGrid(grid) };
-};

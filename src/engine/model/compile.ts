@@ -1,31 +1,21 @@
 import {
-  ANGLE,
+  AREA,
   LENGTH,
   NUMBER,
   TRUTH,
   WHOLE,
-  AREA,
   compileFormula,
   kindOf,
   nearestName,
-  sayKind,
   type Formula,
   type Kind,
   type Scope,
 } from '../formula';
-import { isFunctionName, isName, keyOf, reservedWordIn, sizeNames, drawnNames } from '../pattern/names';
 import { SAYS } from '../pattern/messages';
-import { SIDES, readCell, type Cell } from '../piece';
-import type { Fault, Pattern, PieceDef, Result, Track } from '../types';
-import type {
-  CompiledEnd,
-  CompiledFit,
-  CompiledMeasure,
-  CompiledPiece,
-  CompiledTrack,
-  CompiledValue,
-  Model,
-} from './model';
+import { drawnNames, isFunctionName, isName, keyOf, reservedWordIn, sizeNames } from '../pattern/names';
+import type { Fault, Pattern, PieceDef, Result } from '../types';
+import { compileShape } from './compile-shape';
+import type { CompiledFit, CompiledMeasure, CompiledPiece, CompiledTrack, CompiledValue, Model } from './model';
 
 /** One step of the reader's cut grid; nothing in the exact evaluation. Always there, for tolerances. */
 export const CUT_GRID = 'cut grid';
@@ -96,7 +86,7 @@ class Compiler {
   }
   private limits(): void {
     const { measures, choices, pieces, fits } = this.pattern;
-    const cells = pieces.reduce((sum, piece) => sum + piece.cells.flat().length, 0);
+    const cells = pieces.reduce((sum, piece) => sum + (piece.builder === 'grid' ? piece.cells.flat().length : 1), 0);
     const counts = {
       measures: measures.length,
       choices: choices.length,
@@ -139,14 +129,9 @@ class Compiler {
     for (const piece of this.pattern.pieces) {
       const where = `piece “${piece.name}”`;
       if (!isName(piece.name)) this.complain('bad name', where, SAYS.badName(piece.name));
-      const names = sizeNames(piece);
-      this.declare(names.across, where, { kind: LENGTH });
-      this.declare(names.along, where, { kind: LENGTH });
-      for (const name of new Set([...piece.columns, ...piece.rows].map((track) => names.track(track.name)))) {
-        if (name !== names.across && name !== names.along) this.declare(name, where, { kind: LENGTH });
-      }
-      for (const name of drawnNames(piece))
-        this.declare(name, where, { kind: name.endsWith('.area') ? AREA : LENGTH, late: true });
+      for (const name of sizeNames(piece)) this.declare(name, where, { kind: LENGTH });
+      for (const { name, of } of drawnNames(piece))
+        this.declare(name, where, { kind: of === 'area' ? AREA : LENGTH, late: true });
     }
   }
   /** Late names are known only once pieces are drawn; measures may not wait for them. */
@@ -197,143 +182,20 @@ class Compiler {
     return formula && from && to && { def, slot, kind, formula, from, to, ...(when ? { when } : {}) };
   }
 
-  private track(track: Track, where: string): CompiledTrack | undefined {
-    const place = `${where}, “${track.name}”`;
-    const size = this.formula(track.size, LENGTH, place, false);
-    const when = this.optional(track.when, TRUTH, `${place}, when`);
-    return size && { name: track.name, size, ...(when ? { when } : {}) };
-  }
-
   private piece(def: PieceDef): CompiledPiece | undefined {
     const where = `piece “${def.name}”`;
     const before = this.faults.length;
-    const cells = this.cells(def, where);
-    const names = new Set(cells.flat().map((cell) => cell.name));
-    const mustBeCell = (name: string, place: string) => {
-      if (!names.has(keyOf(name))) this.complain('no cell', place, SAYS.noCell(name, nearestName(name, names)));
-      return keyOf(name);
-    };
-    const length = (text: string, place: string) => this.formula(text, LENGTH, place, false);
-    const when = (text: string | undefined, place: string) => {
-      const formula = this.optional(text, TRUTH, `${place}, when`);
-      return formula ? { when: formula } : {};
-    };
-    const columns = def.columns.flatMap((track) => this.track(track, `${where}, column`) ?? []);
-    const rows = def.rows.flatMap((track) => this.track(track, `${where}, row`) ?? []);
     const count = this.formula(def.count ?? '1', WHOLE, `${where}, count`, false);
-    const lines = (def.lines ?? []).map((one, index) => {
-      const place = `${where}, line ${index + 1}`;
-      const angle = this.optional(one.angle, ANGLE, place);
-      return {
-        between: [mustBeCell(one.between[0], place), mustBeCell(one.between[1], place)] as const,
-        is: one.is,
-        ...(angle ? { angle } : {}),
-        ...when(one.when, place),
-      };
+    const when = this.optional(def.when, TRUTH, `${where}, when`);
+    const shape = compileShape(def, where, {
+      formula: (text, wanted, place) => this.formula(text, wanted, place, false),
+      complain: (code, place, says) => this.complain(code, place, says),
     });
-    const tabs = (def.tabs ?? []).map((one, index) => {
-      const place = `${where}, tabs ${index + 1}`;
-      const depth = this.optional(one.depth, LENGTH, `${place}, depth`);
-      const teeth = this.optional(one.teeth, WHOLE, `${place}, teeth`);
-      const toothAngle = this.optional(one['tooth angle'], ANGLE, `${place}, tooth angle`);
-      const ends = Object.fromEntries(
-        SIDES.flatMap((side) => (one[side] ? [[side, this.end(one[side], `${place}, ${side}`)]] : [])),
-      );
-      return {
-        cells: one.cells.map((cell) => mustBeCell(cell, place)),
-        ends,
-        ...(depth ? { depth } : {}),
-        ...(teeth ? { teeth } : {}),
-        ...(toothAngle ? { toothAngle } : {}),
-        ...when(one.when, place),
-      };
-    });
-    const caps = (def.caps ?? []).flatMap((one) => {
-      const place = `${where}, cap “${one.cell}”`;
-      const radius = length(one.radius, place);
-      return radius ? [{ cell: mustBeCell(one.cell, place), radius }] : [];
-    });
-    for (const cell of cells.flat()) {
-      if (cell.kind === 'cap' && !caps.some((cap) => cap.cell === cell.name))
-        this.complain('no cap', where, SAYS.noCap(cell.name));
-    }
-    const corners = (def.corners ?? []).flatMap((one) => {
-      const place = `${where}, ${one.corner} corner of “${one.cell}”`;
-      const radius = length(one.radius, place);
-      return radius
-        ? [{ cell: mustBeCell(one.cell, place), corner: one.corner, radius, ...when(one.when, place) }]
-        : [];
-    });
-    const notches = (def.notches ?? []).flatMap((one) => {
-      const place = `${where}, notch of “${one.cell}”`;
-      const [at, radius] = [length(one.at, place), length(one.radius, place)];
-      return at && radius
-        ? [{ cell: mustBeCell(one.cell, place), side: one.side, at, radius, ...when(one.when, place) }]
-        : [];
-    });
-    const slots = (def.slots ?? []).flatMap((one) => {
-      const place = `${where}, slot of “${one.cell}”`;
-      const [across, along, width, height] = [
-        length(one.across, place),
-        length(one.along, place),
-        length(one.width, place),
-        length(one.height, place),
-      ];
-      return across && along && width && height
-        ? [{ cell: mustBeCell(one.cell, place), across, along, width, height, ...when(one.when, place) }]
-        : [];
-    });
-    const rolls = (def.rolls ?? []).flatMap((one) => {
-      const place = `${where}, roll of “${one.cell}”`;
-      const radius = length(one.radius, place);
-      return radius ? [{ cell: mustBeCell(one.cell, place), radius, ...when(one.when, place) }] : [];
-    });
-    for (const edge of def.edges ?? []) mustBeCell(edge.cell, `${where}, edge “${edge.name}”`);
     if (this.faults.length > before || !count) return undefined;
-    return {
-      def,
-      count,
-      columns,
-      rows,
-      cells,
-      lines,
-      tabs,
-      caps,
-      corners,
-      notches,
-      slots,
-      rolls,
-      drawn: this.drawn(def),
-      ...when(def.when, where),
-    };
+    return { def, count, shape, drawn: this.drawn(def), ...(when ? { when } : {}) };
   }
   private drawn(def: PieceDef): CompiledPiece['drawn'] {
-    const [area, perimeter, ...edges] = drawnNames(def).map((name) => this.entries.get(name)?.slot ?? -1);
-    return [
-      { slot: area as number, of: 'area' },
-      { slot: perimeter as number, of: 'perimeter' },
-      ...edges.map((slot, index) => ({ slot, of: { edge: def.edges?.[index]?.name ?? '' } })),
-    ];
-  }
-  private end(end: { from?: string; by?: string }, where: string): CompiledEnd {
-    const from = this.optional(end.from, LENGTH, where);
-    const by = end.by === undefined ? undefined : this.formula(end.by, undefined, where, false);
-    if (by && by.kind.type !== 'angle' && !(by.kind.type === 'quantity' && by.kind.power === 1))
-      this.complain('bad taper', where, SAYS.badAngleOrLength(sayKind(by.kind)));
-    return { ...(from ? { from } : {}), ...(by ? { by } : {}) };
-  }
-  private cells(def: PieceDef, where: string): readonly (readonly Cell[])[] {
-    if (def.cells.length !== def.rows.length)
-      this.complain('cell count', where, SAYS.cellCount(def.cells.length, def.rows.length, 'rows of cells'));
-    return def.cells.map((row, r) => {
-      if (row.length !== def.columns.length)
-        this.complain('cell count', `${where}, row ${r + 1}`, SAYS.cellCount(row.length, def.columns.length, 'cells'));
-      return row.map((text, c) => {
-        const cell = readCell(text, r, c);
-        if (!cell) this.complain('bad cell', `${where}, row ${r + 1}, column ${c + 1}`, SAYS.badCell(text));
-        return cell ?? { kind: 'away' as const, name: `away ${r + 1}.${c + 1}`, on: null, row: r, column: c };
-      });
-    });
+    return drawnNames(def).map(({ name, of }) => ({ slot: this.entries.get(name)?.slot ?? -1, of }));
   }
 
   private fit(def: Pattern['fits'][number]): CompiledFit | undefined {
@@ -403,12 +265,15 @@ class Compiler {
   }
 }
 
+/** What a grid's columns and rows add up to, by the names that formulas use. */
 function sizesOf(piece: CompiledPiece): { readonly name: string; readonly parts: readonly CompiledTrack[] }[] {
-  const names = sizeNames(piece.def);
-  const tracks = [...piece.columns, ...piece.rows];
-  const single = [...new Set(tracks.map((track) => track.name))].map((name) => ({
-    name: names.track(name),
-    parts: tracks.filter((track) => track.name === name),
+  if (piece.shape.builder !== 'grid') return [];
+  const { columns, rows } = piece.shape;
+  const stem = keyOf(piece.def.name);
+  const tracks = [...columns, ...rows];
+  const single = [...new Set(tracks.map((track) => keyOf(track.name)))].map((name) => ({
+    name: `${stem}.${name}`,
+    parts: tracks.filter((track) => keyOf(track.name) === name),
   }));
-  return [{ name: names.across, parts: piece.columns }, { name: names.along, parts: piece.rows }, ...single];
+  return [{ name: `${stem}.across`, parts: columns }, { name: `${stem}.along`, parts: rows }, ...single];
 }

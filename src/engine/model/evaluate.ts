@@ -15,7 +15,7 @@ import type {
   Unit,
 } from '../types';
 import { buildPiece } from './build';
-import type { CompiledFit, CompiledMeasure, Model } from './model';
+import { tracksOf, type CompiledFit, type CompiledMeasure, type CompiledPiece, type Model } from './model';
 import { answerTo, isInUse, workOut, type BothValues } from './values';
 
 /** Values behind figures that were worked out, for live measures; figures made elsewhere have none. */
@@ -178,13 +178,13 @@ function piecesOf(model: Model, { exact, cut }: BothValues, sizing: Sizing, prob
   return model.pieces.flatMap((piece) => {
     const count = Math.round(piece.count.work(cut));
     if (!isInUse(piece, cut) || count < 1) return [];
-    const { grid, built } = buildPiece(piece, cut);
+    const { grid, built } = buildPiece(model, piece, cut);
     if (!built.ok) {
       problems.push({
         code: 'piece fails',
         measure: firstAskedOf(
           model,
-          piece.columns.concat(piece.rows).map((track) => track.size),
+          tracksOf(piece).map((track) => track.size),
         ),
         sentence: `The ${piece.def.name.toLowerCase()} cannot be cut at this size: ${built.reason}.`,
         nearest: null,
@@ -197,7 +197,7 @@ function piecesOf(model: Model, { exact, cut }: BothValues, sizing: Sizing, prob
       perimeterOf(net.outline) + net.holes.reduce((sum, hole) => sum + perimeterOf(hole), 0),
     ];
     for (const { slot, of } of piece.drawn) {
-      const value = of === 'area' ? area : of === 'perimeter' ? perimeter : (net.edges[of.edge] ?? NaN);
+      const value = drawnValue(of, net, area, perimeter);
       cut[slot] = value;
       exact[slot] = value;
     }
@@ -232,6 +232,11 @@ function thicknessOf(model: Model, values: Values): number {
   return Number.isFinite(value) ? value : 0;
 }
 
+function drawnValue(of: CompiledPiece['drawn'][number]['of'], net: Net, area: number, perimeter: number): number {
+  if (typeof of === 'object') return net.edges[of.edge] ?? NaN;
+  return { area, perimeter, across: net.across, along: net.along }[of];
+}
+
 /** Positions of straight score lines from the left and from the top edge, each once. */
 export function scoresOf(net: Net): PieceFigure['scores'] {
   const upright: number[] = [];
@@ -251,7 +256,7 @@ function departureOf(model: Model, { exact, cut }: BothValues): Figures['departu
   let worst = { mm: 0, where: '' };
   for (const piece of model.pieces) {
     if (!isInUse(piece, cut)) continue;
-    for (const track of [...piece.columns, ...piece.rows]) {
+    for (const track of tracksOf(piece)) {
       if (!isInUse(track, cut) || !isInUse(track, exact)) continue;
       const mm = snap(track.size.work(cut) - track.size.work(exact));
       if (Math.abs(mm) > Math.abs(worst.mm)) worst = { mm, where: `${piece.def.name}, ${track.name}` };

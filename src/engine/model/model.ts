@@ -36,75 +36,134 @@ export interface CompiledChoice {
   readonly slot: number;
   readonly when?: Formula;
 }
-export interface CompiledTrack {
+/** Anything that counts only when a condition holds. */
+export interface Conditional {
+  readonly when?: Formula;
+}
+export interface CompiledTrack extends Conditional {
   readonly name: string;
   readonly size: Formula;
-  readonly when?: Formula;
 }
 export interface CompiledEnd {
   readonly from?: Formula;
   readonly by?: Formula;
 }
-export interface CompiledPiece {
-  readonly def: PieceDef;
-  readonly count: Formula;
-  readonly when?: Formula;
+export interface CompiledLine extends Conditional {
+  readonly between: readonly [string, string];
+  readonly is: 'valley' | 'mountain' | 'slit' | 'nothing';
+  readonly angle?: Formula;
+}
+export interface CompiledTab extends Conditional {
+  readonly cells: readonly string[];
+  readonly depth?: Formula;
+  readonly ends: Readonly<Partial<Record<Side, CompiledEnd>>>;
+  readonly teeth?: Formula;
+  readonly toothAngle?: Formula;
+  readonly round?: Formula;
+  readonly shape?: readonly Pair[];
+}
+export type Pair = readonly [Formula, Formula];
+
+export interface CompiledGrid {
+  readonly builder: 'grid';
   readonly columns: readonly CompiledTrack[];
   readonly rows: readonly CompiledTrack[];
   readonly cells: readonly (readonly Cell[])[];
-  readonly lines: readonly {
-    readonly between: readonly [string, string];
-    readonly is: 'valley' | 'mountain' | 'slit' | 'nothing';
-    readonly angle?: Formula;
-    readonly when?: Formula;
-  }[];
-  readonly tabs: readonly {
-    readonly cells: readonly string[];
-    readonly depth?: Formula;
-    readonly ends: Readonly<Partial<Record<Side, CompiledEnd>>>;
-    readonly teeth?: Formula;
-    readonly toothAngle?: Formula;
-    readonly when?: Formula;
-  }[];
+  readonly lines: readonly CompiledLine[];
+  readonly tabs: readonly CompiledTab[];
   readonly caps: readonly { readonly cell: string; readonly radius: Formula }[];
-  readonly corners: readonly {
+  readonly corners: readonly ({
     readonly cell: string;
     readonly corner: string;
     readonly radius: Formula;
-    readonly when?: Formula;
-  }[];
-  readonly notches: readonly {
+  } & Conditional)[];
+  readonly notches: readonly ({
     readonly cell: string;
     readonly side: Side;
     readonly at: Formula;
     readonly radius: Formula;
-    readonly when?: Formula;
-  }[];
-  readonly slots: readonly {
+  } & Conditional)[];
+  readonly slots: readonly ({ readonly cell: string; readonly at: Pair; readonly size: Pair } & Conditional)[];
+  readonly holes: readonly ({ readonly cell: string; readonly at: Pair; readonly diameter: Formula } & Conditional)[];
+  readonly creases: readonly ({
     readonly cell: string;
-    readonly across: Formula;
-    readonly along: Formula;
-    readonly width: Formula;
-    readonly height: Formula;
-    readonly when?: Formula;
-  }[];
-  readonly rolls: readonly { readonly cell: string; readonly radius: Formula; readonly when?: Formula }[];
-  /** Slots of area, perimeter and named edges, by what they are. */
-  readonly drawn: readonly { readonly slot: number; readonly of: 'area' | 'perimeter' | { readonly edge: string } }[];
+    readonly is: 'valley' | 'mountain';
+    readonly from: Pair;
+    readonly to: Pair;
+  } & Conditional)[];
+  readonly rolls: readonly ({ readonly cell: string; readonly radius: Formula } & Conditional)[];
 }
-export interface CompiledFit {
+export interface CompiledFan {
+  readonly builder: 'fan';
+  readonly sides: Formula;
+  readonly side: Formula;
+  readonly height: Formula;
+  readonly angle: Formula;
+  readonly hole?: { readonly diameter: Formula; readonly fromTip: Formula } & Conditional;
+  readonly tab?: {
+    readonly width: Formula;
+    readonly low: Formula;
+    readonly high: Formula;
+    readonly angle: Formula;
+  } & Conditional;
+}
+export interface CompiledDisc {
+  readonly builder: 'disc';
+  readonly diameter: Formula;
+  readonly rim?: {
+    readonly teeth: Formula;
+    readonly depth: Formula;
+    readonly toothAngle: Formula;
+    readonly angle: Formula;
+  } & Conditional;
+}
+export interface CompiledSector {
+  readonly builder: 'sector';
+  readonly inner: Formula;
+  readonly outer: Formula;
+  readonly angle: Formula;
+  readonly seam: { readonly width: Formula; readonly low: Formula; readonly high: Formula };
+}
+export interface CompiledOutline {
+  readonly builder: 'outline';
+  readonly points: readonly { readonly name: string; readonly at: Pair }[];
+  readonly panels: readonly ({
+    readonly name: string;
+    readonly role: 'panel' | 'tab';
+    readonly loop: readonly {
+      readonly point: string;
+      readonly bow: { readonly to: 'out' | 'in'; readonly radius: Formula } | null;
+    }[];
+  } & Conditional)[];
+  readonly lines: readonly CompiledLine[];
+}
+export type CompiledShape = CompiledGrid | CompiledFan | CompiledDisc | CompiledSector | CompiledOutline;
+
+export interface CompiledPiece extends Conditional {
+  readonly def: PieceDef;
+  readonly count: Formula;
+  readonly shape: CompiledShape;
+  /** Slots of what is known once the piece is drawn. */
+  readonly drawn: readonly {
+    readonly slot: number;
+    readonly of: 'area' | 'perimeter' | 'across' | 'along' | { readonly edge: string };
+  }[];
+}
+/** Columns and rows, for pieces that have them. */
+export const tracksOf = ({ shape }: CompiledPiece): readonly CompiledTrack[] =>
+  shape.builder === 'grid' ? [...shape.columns, ...shape.rows] : [];
+
+export interface CompiledFit extends Conditional {
   readonly def: FitDef;
   readonly left: Formula;
   readonly right: Formula;
   readonly tolerance?: Formula;
-  readonly when?: Formula;
 }
 export interface CompiledSize {
   readonly def: NamedFormula;
   readonly formula: Formula;
 }
-export interface CompiledPlacement {
+export interface CompiledPlacement extends Conditional {
   readonly def: Placement;
   readonly at: readonly [Formula, Formula, Formula];
-  readonly when?: Formula;
 }

@@ -9,6 +9,7 @@ export interface LoosePanel {
   readonly loop: Loop;
   readonly tooth?: boolean;
   readonly roll?: Panel['roll'];
+  readonly cone?: Panel['cone'];
 }
 /** How two panels that share an edge are joined there. */
 export type Joint =

@@ -44,6 +44,11 @@ export const SAYS = {
     'the name of a cell',
     nearest === null ? 'Check the names of the cells.' : `The nearest name is “${nearest}”.`,
   ],
+  noPoint: (name: string, nearest: string | null) => [
+    `no point is called “${name}”`,
+    'the name of a point',
+    nearest === null ? 'Check the names of the points.' : `The nearest name is “${nearest}”.`,
+  ],
   noPiece: (name: string, nearest: string | null) => [
     `no piece is called “${name}”`,
     'the name of a piece',

@@ -13,19 +13,23 @@ export const reservedWordIn = (name: string): string | undefined =>
     .find((word) => WORDS_OF_FORMULAS.includes(word));
 export const isFunctionName = (name: string): boolean => FUNCTION_NAMES.has(keyOf(name));
 
-/** Names that a piece offers to formulas: sums of its columns and rows, and each of them. */
-export const sizeNames = (
-  piece: PieceDef,
-): { readonly across: string; readonly along: string; readonly track: (name: string) => string } => {
+/** Names that a grid piece offers to formulas before it is drawn: sums of its columns and rows, and each of them. */
+export function sizeNames(piece: PieceDef): readonly string[] {
+  if (piece.builder !== 'grid') return [];
   const stem = keyOf(piece.name);
-  return { across: `${stem}.across`, along: `${stem}.along`, track: (name) => `${stem}.${keyOf(name)}` };
-};
-/** Names known once the piece is drawn. */
-export const drawnNames = (piece: PieceDef): readonly string[] => {
+  const tracks = [...piece.columns, ...piece.rows].map((track) => `${stem}.${keyOf(track.name)}`);
+  return [...new Set([`${stem}.across`, `${stem}.along`, ...tracks])];
+}
+/** Names known once the piece is drawn, and what each of them is. */
+export function drawnNames(piece: PieceDef): readonly { readonly name: string; readonly of: Drawn }[] {
   const stem = keyOf(piece.name);
+  const sizes: readonly Drawn[] =
+    piece.builder === 'grid' ? ['area', 'perimeter'] : ['area', 'perimeter', 'across', 'along'];
+  const edges: readonly { readonly name: string }[] =
+    piece.builder === 'sector' ? [{ name: 'rim' }, { name: 'foot' }] : 'edges' in piece ? (piece.edges ?? []) : [];
   return [
-    `${stem}.area`,
-    `${stem}.perimeter`,
-    ...(piece.edges ?? []).map((edge) => `${stem}.${keyOf(edge.name)} length`),
+    ...sizes.map((of) => ({ name: `${stem}.${of as string}`, of })),
+    ...edges.map(({ name }) => ({ name: `${stem}.${keyOf(name)} length`, of: { edge: name } })),
   ];
-};
+}
+type Drawn = 'area' | 'perimeter' | 'across' | 'along' | { readonly edge: string };

@@ -1,8 +1,8 @@
-import type { PieceDef, Side } from '../types';
+import type { GridPieceDef, Side } from '../types';
 
 /** One cell of a grid piece, read from its words. */
 export interface Cell {
-  readonly kind: 'panel' | 'tab' | 'cap' | 'away';
+  readonly kind: 'panel' | 'tab' | 'flap' | 'cap' | 'away';
   readonly name: string;
   /** Name of the neighbour that a tab or cap hangs on; null: the only one it touches. */
   readonly on: string | null;
@@ -11,7 +11,10 @@ export interface Cell {
 }
 export const SIDES: readonly Side[] = ['top', 'right', 'bottom', 'left'];
 export const OPPOSITE: Readonly<Record<Side, Side>> = { top: 'bottom', right: 'left', bottom: 'top', left: 'right' };
-const KINDS: ReadonlySet<string> = new Set(['panel', 'tab', 'cap', 'away']);
+const KINDS: ReadonlySet<string> = new Set(['panel', 'tab', 'flap', 'cap', 'away']);
+
+/** Tabs and flaps hang on one neighbour. */
+export const hangs = (cell: Cell): boolean => cell.kind === 'tab' || cell.kind === 'flap';
 
 /** Reads `tab corner 1 on left end`; null when the first word is no kind of cell. A nameless cell is named by its place. */
 export function readCell(text: string, row: number, column: number): Cell | null {
@@ -29,7 +32,7 @@ export function readCell(text: string, row: number, column: number): Cell | null
 }
 
 /** Every cell of a piece, unreadable ones as cut away (the check reports them). */
-export const cellsOf = (piece: PieceDef): readonly (readonly Cell[])[] =>
+export const cellsOf = (piece: GridPieceDef): readonly (readonly Cell[])[] =>
   piece.cells.map((row, r) =>
     row.map(
       (text, c) =>

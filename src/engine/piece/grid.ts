@@ -1,17 +1,10 @@
 import { atLeast, isZero, moreThan, snap } from '../measure';
-import {
-  arcThrough,
-  areaOf,
-  assemble,
-  lengthOf,
-  line,
-  pointAt,
-  selfCrossing,
-  type Joint,
-  type LoosePanel,
-} from '../net';
+import { arcThrough, areaOf, lengthOf, line, pointAt, type Joint, type LoosePanel } from '../net';
 import type { Arc, Curve, Loop, Net, Panel, Point, Side } from '../types';
-import { OPPOSITE, SIDES, type Cell } from './cells';
+import { OPPOSITE, SIDES, hangs, type Cell } from './cells';
+import { toothOn } from './disc';
+import { finishNet, type Built } from './finish';
+import { circle, fillet, polygon } from './shapes';
 
 /** A grid piece with every formula worked out: lengths in mm, angles in degrees. Tracks of nothing are already left out. */
 export interface GridPiece {
@@ -39,6 +32,18 @@ export interface GridPiece {
     readonly width: number;
     readonly height: number;
   }[];
+  readonly holes: readonly {
+    readonly cell: string;
+    readonly across: number;
+    readonly along: number;
+    readonly diameter: number;
+  }[];
+  readonly creases: readonly {
+    readonly cell: string;
+    readonly is: 'valley' | 'mountain';
+    readonly from: readonly [number, number];
+    readonly to: readonly [number, number];
+  }[];
   readonly rolls: ReadonlyMap<string, { readonly radius: number }>;
   readonly edges: readonly { readonly name: string; readonly cell: string; readonly side: Side }[];
 }
@@ -47,15 +52,14 @@ export interface TabShape {
   readonly ends: Readonly<Partial<Record<Side, EndShape>>>;
   readonly teeth: number;
   readonly toothAngle: number;
+  readonly round: number;
+  readonly shape: readonly (readonly [number, number])[] | null;
 }
 export interface EndShape {
   readonly from: number;
   /** How much narrower at the tip: millimetres, or degrees off square. */
   readonly by: { readonly mm: number } | { readonly degrees: number };
 }
-/** A net, or the reason why these sizes make nonsense: the end of "Floor: …". */
-export type Built = { readonly ok: true; readonly net: Net } | { readonly ok: false; readonly reason: string };
-
 interface Sided {
   readonly side: Side | 'inner';
   readonly curve: Curve;
@@ -86,6 +90,7 @@ class GridBuilder {
   private readonly sides = new Map<string, Outlined>();
   private readonly cellOfPanel = new Map<string, Cell>();
   private readonly holes: Loop[] = [];
+  private readonly creases: { readonly curve: Curve; readonly kind: 'valley' | 'mountain' }[] = [];
 
   constructor(
     private readonly piece: GridPiece,
@@ -96,14 +101,18 @@ class GridBuilder {
   build(): string | null {
     const kept = this.piece.cells.flat().filter((cell) => cell.kind !== 'away');
     // Caps before the tabs that hang on them.
-    for (const cell of [...kept].sort((a, b) => Number(a.kind === 'tab') - Number(b.kind === 'tab'))) {
+    for (const cell of [...kept].sort((a, b) => Number(hangs(a)) - Number(hangs(b)))) {
       const failure = this.add(cell);
       if (failure !== null) return failure;
     }
-    for (const slot of this.piece.slots) {
-      const cell = kept.find((one) => one.name === slot.cell);
-      if (cell) {
-        const failure = this.cutSlot(cell, slot);
+    for (const [list, cut] of [
+      [this.piece.slots, (cell: Cell, one: GridPiece['slots'][number]) => this.cutSlot(cell, one)],
+      [this.piece.holes, (cell: Cell, one: GridPiece['holes'][number]) => this.cutHole(cell, one)],
+      [this.piece.creases, (cell: Cell, one: GridPiece['creases'][number]) => this.addCrease(cell, one)],
+    ] as const) {
+      for (const one of list) {
+        const cell = kept.find(({ name }) => name === one.cell);
+        const failure = cell ? (cut as (cell: Cell, one: unknown) => string | null)(cell, one) : null;
         if (failure !== null) return failure;
       }
     }
@@ -111,11 +120,6 @@ class GridBuilder {
   }
 
   net(): Built {
-    const assembled = assemble(this.panels, (a, b) => this.joint(a, b));
-    if (assembled.outline.length === 0) return { ok: false, reason: 'nothing is left of it' };
-    if (assembled.parts > 1) return { ok: false, reason: `it falls apart into ${assembled.parts} parts` };
-    const crossing = selfCrossing(assembled.outline);
-    if (crossing) return { ok: false, reason: 'its outline crosses itself' };
     const away = this.piece.cells
       .flat()
       .filter((cell) => cell.kind === 'away')
@@ -131,23 +135,21 @@ class GridBuilder {
           .reduce((sum, edge) => sum + lengthOf(edge.curve), 0),
       ]),
     );
-    return {
-      ok: true,
-      net: {
-        outline: assembled.outline,
-        holes: [...assembled.holes, ...this.holes],
-        panels: this.panels,
-        folds: assembled.folds,
-        joins: assembled.joins,
-        slits: assembled.slits,
+    return finishNet({
+      panels: this.panels,
+      jointOf: (a, b) => this.joint(a, b),
+      holes: this.holes,
+      creases: this.creases,
+      edges,
+      blank: {
         away,
         across: this.xs.at(-1) as number,
         along: this.ys.at(-1) as number,
-        edges,
         columns: this.xs,
         rows: this.ys,
       },
-    };
+      step: 0,
+    });
   }
 
   private box(cell: Cell) {
@@ -167,9 +169,7 @@ class GridBuilder {
     const touching = SIDES.filter((side) => {
       const other = this.neighbour(cell, side);
       return (
-        other !== undefined &&
-        other.kind !== 'away' &&
-        (cell.on === null ? other.kind !== 'tab' : other.name === cell.on)
+        other !== undefined && other.kind !== 'away' && (cell.on === null ? !hangs(other) : other.name === cell.on)
       );
     });
     return touching.length === 1 ? (touching[0] as Side) : cell.on === null ? null : (touching[0] ?? null);
@@ -190,7 +190,7 @@ class GridBuilder {
       role,
       loop: outlined.map((edge) => edge.curve),
       ...(name !== cell.name ? { tooth: true } : {}),
-      ...(roll ? { roll: { ...roll, axis: 'along' as const } } : {}),
+      ...(roll ? { roll } : {}),
     });
     this.cellOfPanel.set(name, cell);
     this.sides.set(name, outlined);
@@ -230,7 +230,15 @@ class GridBuilder {
   }
 
   private addTab(cell: Cell, side: Side, host: Cell): string | null {
-    const shape = this.piece.tabs.get(cell.name) ?? { depth: null, ends: {}, teeth: 1, toothAngle: 0 };
+    const shape = this.piece.tabs.get(cell.name) ?? {
+      depth: null,
+      ends: {},
+      teeth: 1,
+      toothAngle: 0,
+      round: 0,
+      shape: null,
+    };
+    if (shape.shape) return this.addShaped(cell, side, host, shape.shape);
     const box = this.box(cell);
     const full = side === 'top' || side === 'bottom' ? box.bottom - box.top : box.right - box.left;
     const depth = shape.depth === null ? full : shape.depth;
@@ -242,6 +250,29 @@ class GridBuilder {
         : undefined;
     if (hostArc) return this.addArcTeeth(cell, host, hostArc, depth, shape);
     return this.addStraightTab(cell, side, host, depth, shape);
+  }
+
+  /** A flap of its own shape, given along the hinge from left to right or top to bottom, and out from it. */
+  private addShaped(cell: Cell, side: Side, host: Cell, shape: readonly (readonly [number, number])[]): string | null {
+    const corners = cornersOf(this.box(cell));
+    const [start, end] = endsOf(corners, side);
+    const length = Math.hypot(end.x - start.x, end.y - start.y);
+    const along = { x: (end.x - start.x) / length, y: (end.y - start.y) / length };
+    const forward = side === 'top' || side === 'right';
+    const points = shape.map(([u, v]): Point => {
+      const at = forward ? u : length - u;
+      return { x: snap(start.x + along.x * at - along.y * v), y: snap(start.y + along.y * at + along.x * v) };
+    });
+    const loop = polygon(points);
+    const clockwise = areaOf(loop) > 0 ? loop : polygon([...points].reverse());
+    if (!moreThan(areaOf(clockwise), 0)) return `“${cell.name}” comes out smaller than nothing`;
+    this.push(
+      cell,
+      cell.name,
+      host,
+      clockwise.map((curve) => ({ side: 'inner' as const, curve })),
+    );
+    return null;
   }
 
   /** A tab along a straight hinge, cut into teeth when asked. Works in its own frame: u along the hinge, v out from it. */
@@ -281,36 +312,30 @@ class GridBuilder {
         side: tags[index] ?? 'inner',
         curve: line(point, corners[(index + 1) % corners.length] as Point),
       }));
-      this.push(cell, teeth === 1 ? cell.name : `${cell.name} ${tooth + 1}`, host, outlined);
+      const rounded = shape.round > 0 && teeth === 1 ? roundTip(outlined, shape.round) : outlined;
+      if (rounded === null) return `the corners of “${cell.name}” are rounder than it is deep`;
+      this.push(cell, teeth === 1 ? cell.name : `${cell.name} ${tooth + 1}`, host, rounded);
     }
     return null;
   }
 
-  /** Teeth along the arc of a cap: root on the arc, sides that give way by the tooth angle, a straight tip. */
+  /** Teeth along the arc of a cap. */
   private addArcTeeth(cell: Cell, host: Cell, arc: Arc, depth: number, shape: TabShape): string | null {
     const teeth = Math.max(1, Math.round(shape.teeth));
-    const give = depth * Math.tan((shape.toothAngle * Math.PI) / 180);
-    for (let tooth = 0; tooth < teeth; tooth += 1) {
-      // The host's arc runs clockwise; a tooth outside it runs back along its root.
-      const [from, to] = [pointAt(arc, (tooth + 1) / teeth), pointAt(arc, tooth / teeth)];
-      const middle = pointAt(arc, (tooth + 0.5) / teeth);
-      const out = { x: (middle.x - arc.centre.x) / arc.radius, y: (middle.y - arc.centre.y) / arc.radius };
-      const pitch = Math.hypot(to.x - from.x, to.y - from.y);
-      const along = { x: (to.x - from.x) / pitch, y: (to.y - from.y) / pitch };
-      const half = pitch / 2 - give;
-      if (!moreThan(half, 0)) return `the teeth of “${cell.name}” come to nothing`;
-      const tip = (u: number): Point => ({
-        x: middle.x + out.x * depth + along.x * u,
-        y: middle.y + out.y * depth + along.y * u,
-      });
-      const root: Arc = { ...arc, from, to, clockwise: !arc.clockwise };
-      const [a, b] = [tip(half), tip(-half)];
-      this.push(cell, teeth === 1 ? cell.name : `${cell.name} ${tooth + 1}`, host, [
-        { side: 'inner', curve: root },
-        { side: 'inner', curve: line(to, a) },
-        { side: 'inner', curve: line(a, b) },
-        { side: 'inner', curve: line(b, from) },
-      ]);
+    for (let index = 0; index < teeth; index += 1) {
+      const tooth = toothOn(
+        { ...arc, from: pointAt(arc, index / teeth), to: pointAt(arc, (index + 1) / teeth) },
+        depth,
+        shape.toothAngle,
+      );
+      if (!tooth) return `the teeth of “${cell.name}” come to nothing`;
+      const name = teeth === 1 ? cell.name : `${cell.name} ${index + 1}`;
+      this.push(
+        cell,
+        name,
+        host,
+        tooth.map((curve) => ({ side: 'inner' as const, curve })),
+      );
     }
     this.splitHostArc(host, arc, teeth);
     return null;
@@ -344,6 +369,25 @@ class GridBuilder {
     return null;
   }
 
+  private cutHole(cell: Cell, hole: GridPiece['holes'][number]): string | null {
+    const { left, top, right, bottom } = this.box(cell);
+    const [centre, radius] = [{ x: left + hole.across, y: top + hole.along }, hole.diameter / 2];
+    const inside =
+      moreThan(centre.x - radius, left) &&
+      moreThan(right, centre.x + radius) &&
+      moreThan(centre.y - radius, top) &&
+      moreThan(bottom, centre.y + radius);
+    if (!inside || !moreThan(radius, 0)) return `a hole does not fit inside “${cell.name}”`;
+    this.holes.push(circle(centre, radius, false));
+    return null;
+  }
+  private addCrease(cell: Cell, crease: GridPiece['creases'][number]): string | null {
+    const { left, top } = this.box(cell);
+    const place = ([x, y]: readonly [number, number]): Point => ({ x: left + x, y: top + y });
+    this.creases.push({ curve: line(place(crease.from), place(crease.to)), kind: crease.is });
+    return null;
+  }
+
   private joint(a: string, b: string): Joint {
     const [cellA, cellB] = [this.cellOfPanel.get(a) as Cell, this.cellOfPanel.get(b) as Cell];
     const hinged = this.hinges.get(a) === cellB.name || this.hinges.get(b) === cellA.name;
@@ -355,10 +399,9 @@ class GridBuilder {
       if (said.is === 'nothing') return { is: 'nothing' };
       return { is: 'fold', kind: said.is, angle: said.angle };
     }
-    const [kindA, kindB] = [cellA.kind, cellB.kind];
-    if (kindA === 'panel' && kindB === 'panel') return { is: 'fold', kind: 'valley', angle: 90 };
+    if (cellA.kind === 'panel' && cellB.kind === 'panel') return { is: 'fold', kind: 'valley', angle: 90 };
     if (!hinged) return { is: 'slit' };
-    return kindA === 'tab' || kindB === 'tab' ? { is: 'fold', kind: 'valley', angle: 90 } : { is: 'nothing' };
+    return hangs(cellA) || hangs(cellB) ? { is: 'fold', kind: 'valley', angle: 90 } : { is: 'nothing' };
   }
 }
 
@@ -388,6 +431,25 @@ const endSides = (hinge: Side): readonly [Side, Side] =>
 function meet(a: number, b: number, first: number, last: number): [number, number] {
   const point = a + ((b - a) * first) / (first + last);
   return [point, point];
+}
+
+/** The two corners of the tip of a tab with four corners: hinge, end, tip, end. */
+function roundTip(edges: readonly Sided[], radius: number): Outlined | null {
+  if (edges.length !== 4) return null;
+  const sides = edges.map((edge) => edge.side);
+  const first = fillet(
+    edges.map((edge) => edge.curve),
+    1,
+    radius,
+  );
+  const both = first && fillet(first, 3, radius);
+  return (
+    both &&
+    both.map((curve, index) => ({
+      side: curve.type === 'arc' ? ('inner' as const) : (sides[[0, 1, 1, 2, 2, 3][index] ?? 0] as Side),
+      curve,
+    }))
+  );
 }
 
 const CORNER_SIDES: Readonly<Record<string, readonly [Side, Side]>> = {

@@ -1,17 +1,22 @@
 import { coincident, isZero, same } from '../measure';
 import { areaOf } from '../net';
 import type { Arc, Net, PieceDef, Sentence, SentenceFigure, Side } from '../types';
-import type { Cell } from './cells';
+import { hangs, type Cell } from './cells';
+import { shapeWords } from './shape-words';
 import type { GridPiece } from './grid';
 
 export interface WordsOptions {
   readonly net: Net;
-  readonly grid: GridPiece;
+  /** The worked-out grid; null for pieces of the other builders. */
+  readonly grid: GridPiece | null;
   readonly def: PieceDef;
   /** Positions of scores from the left and from the top edge. */
   readonly scores: { readonly across: readonly number[]; readonly along: readonly number[] };
   /** Splits a position into what a ruler shows and card thicknesses. */
   readonly figure: (mm: number, bare?: boolean) => SentenceFigure;
+}
+interface GridWords extends WordsOptions {
+  readonly grid: GridPiece;
 }
 
 /**
@@ -20,20 +25,25 @@ export interface WordsOptions {
  * piece again without a picture.
  */
 export function makingOf(options: WordsOptions): readonly Sentence[] {
-  const { def } = options;
+  const { def, grid } = options;
   return [
     blank(options),
-    ...scoring(options),
-    ...cuttingAway(options),
-    ...tabsInWords(options),
-    ...arcs(options),
-    ...corners(options),
-    ...notches(options),
-    ...slots(options),
+    ...(grid ? gridWords({ ...options, grid }) : shapeWords(options)),
     ...folding(options),
     ...(def.remarks ?? []).map((remark) => [remark]),
   ];
 }
+const gridWords = (options: GridWords): Sentence[] => [
+  ...scoring(options),
+  ...cuttingAway(options),
+  ...tabsInWords(options),
+  ...arcs(options),
+  ...corners(options),
+  ...notches(options),
+  ...slots(options),
+  ...holes(options),
+  ...creases(options),
+];
 
 type Part = Sentence[number];
 const COUNTS = [
@@ -109,7 +119,7 @@ function scoring({ net, scores, figure }: WordsOptions): Sentence[] {
 }
 
 /** Corners of the blank that fall away, and rectangles elsewhere on its edge. */
-function cuttingAway({ net, grid }: WordsOptions): Sentence[] {
+function cuttingAway({ net, grid }: GridWords): Sentence[] {
   const away = grid.cells.flat().filter((cell) => cell.kind === 'away');
   if (away.length === 0) return [];
   const [lastRow, lastColumn] = [grid.cells.length - 1, (grid.cells[0]?.length ?? 1) - 1];
@@ -146,17 +156,16 @@ function placeOf(cell: Cell, lastRow: number, lastColumn: number, all: readonly 
 }
 
 /** Slits, tapers and teeth of the tabs, alike ones together. */
-function tabsInWords({ grid, net, figure }: WordsOptions): Sentence[] {
+function tabsInWords({ grid, net, figure }: GridWords): Sentence[] {
   const tabs = grid.cells
     .flat()
     .filter(
       (cell) =>
-        cell.kind === 'tab' &&
-        net.panels.some((panel) => panel.name === cell.name || panel.name.startsWith(`${cell.name} `)),
+        hangs(cell) && net.panels.some((panel) => panel.name === cell.name || panel.name.startsWith(`${cell.name} `)),
     );
   const sentences: Sentence[] = [];
   const slit = tabs.filter(
-    (cell) => neighbours(grid, cell).filter((other) => other.kind !== 'away' && other.kind !== 'tab').length > 1,
+    (cell) => neighbours(grid, cell).filter((other) => other.kind !== 'away' && !hangs(other)).length > 1,
   );
   if (slit.length > 0) {
     const [first] = slit as [Cell];
@@ -234,14 +243,12 @@ const neighbours = (grid: GridPiece, cell: Cell): Cell[] =>
 function hingeOf(grid: GridPiece, cell: Cell): Side {
   const found = STEPS.find(([, dr, dc]) => {
     const other = grid.cells[cell.row + dr]?.[cell.column + dc];
-    return (
-      other !== undefined && other.kind !== 'away' && (cell.on === null ? other.kind !== 'tab' : other.name === cell.on)
-    );
+    return other !== undefined && other.kind !== 'away' && (cell.on === null ? !hangs(other) : other.name === cell.on);
   });
   return found?.[0] ?? 'bottom';
 }
 
-function arcs({ grid, net, figure }: WordsOptions): Sentence[] {
+function arcs({ grid, net, figure }: GridWords): Sentence[] {
   return grid.cells
     .flat()
     .filter((cell) => cell.kind === 'cap')
@@ -270,7 +277,7 @@ function arcs({ grid, net, figure }: WordsOptions): Sentence[] {
     });
 }
 
-function corners({ grid, figure }: WordsOptions): Sentence[] {
+function corners({ grid, figure }: GridWords): Sentence[] {
   const groups = new Map<number, string[]>();
   for (const { corner, radius } of grid.corners)
     if (!isZero(radius)) groups.set(radius, [...(groups.get(radius) ?? []), corner]);
@@ -280,7 +287,7 @@ function corners({ grid, figure }: WordsOptions): Sentence[] {
     '.',
   ]);
 }
-function notches({ grid, figure }: WordsOptions): Sentence[] {
+function notches({ grid, figure }: GridWords): Sentence[] {
   return grid.notches.map(({ cell, side, at, radius }) => [
     `Cut a half-round notch of `,
     figure(radius),
@@ -289,7 +296,7 @@ function notches({ grid, figure }: WordsOptions): Sentence[] {
     ` from the ${side === 'top' || side === 'bottom' ? 'score on its left' : 'score above it'}.`,
   ]);
 }
-function slots({ grid, figure }: WordsOptions): Sentence[] {
+function slots({ grid, figure }: GridWords): Sentence[] {
   return grid.slots.map(({ cell, across, along, width, height }) => [
     `In “${cell}” cut a slot `,
     figure(width, true),
@@ -306,4 +313,29 @@ function folding({ net }: WordsOptions): Sentence[] {
   const mountains = net.folds.filter((fold) => fold.kind === 'mountain');
   if (mountains.length > 0) return [['Fold the dash-dot lines away from you, all others towards you.']];
   return net.folds.length > 0 && areaOf(net.outline) > 0 ? [['Fold every score towards you and burnish it.']] : [];
+}
+
+function holes({ grid, figure }: GridWords): Sentence[] {
+  return grid.holes.map(({ cell, across, along, diameter }) => [
+    `In “${cell}” punch a hole of `,
+    figure(diameter),
+    ' diameter, its middle ',
+    figure(across),
+    ' from the left of that panel and ',
+    figure(along),
+    ' from its top.',
+  ]);
+}
+function creases({ grid, figure }: GridWords): Sentence[] {
+  return grid.creases.map(({ cell, is, from, to }) => [
+    `In “${cell}” score a ${is} fold from `,
+    figure(from[0], true),
+    ' across and ',
+    figure(from[1], true),
+    ' down to ',
+    figure(to[0], true),
+    ' across and ',
+    figure(to[1], true),
+    ' down.',
+  ]);
 }

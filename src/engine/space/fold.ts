@@ -95,7 +95,8 @@ export function foldNet(net: Net, options: FoldOptions): readonly FoldedPanel[] 
 /** A rolled root is placed by its chord: its first strip leans back by half the whole turn. */
 function rootFrame(start: Facet, { at, across: u, along: v }: FoldOptions, share: number): Frame {
   const [acrossAxis, alongAxis] = [axis(u), axis(v)];
-  const roll = start.of.roll;
+  const { roll, cone } = start.of;
+  if (cone) return coneFrame(cone, at, acrossAxis, alongAxis);
   const box = boxOf(start.of.loop.map((curve) => curve.from));
   let heading = acrossAxis;
   if (roll) {
@@ -108,6 +109,23 @@ function rootFrame(start: Facet, { at, across: u, along: v }: FoldOptions, share
     across: heading,
     along: alongAxis,
   };
+}
+
+/** A cone is placed by its apex and its axis (`along`); its first strip looks towards `across`. */
+function coneFrame(
+  cone: { readonly apex: Point; readonly angle: number },
+  at: Vector,
+  side: Vector,
+  down: Vector,
+): Frame {
+  const lean = coneLean(cone.angle);
+  const middle = plus(times(down, Math.cos(lean)), times(side, Math.sin(lean)));
+  const level = cross(side, down);
+  // In the flat the first strip's middle line lies at this angle, its outward-clockwise neighbour follows.
+  const flat = ((90 - cone.angle / 2 + cone.angle / CONE_STRIPS / 2) * Math.PI) / 180;
+  const across = plus(times(middle, Math.cos(flat)), times(level, -Math.sin(flat)));
+  const along = plus(times(middle, Math.sin(flat)), times(level, Math.cos(flat)));
+  return { origin: minus(at, plus(times(across, cone.apex.x), times(along, cone.apex.y))), across, along };
 }
 
 /** The frame beyond a fold: the same flat sheet turned about the fold's line, towards the inside for a valley. */
@@ -130,6 +148,10 @@ function facetsOf(net: Net): { readonly facets: readonly Facet[]; readonly links
   const joined = net.joins.map((join) => join.curve);
   for (const panel of net.panels) {
     const first = facets.length;
+    if (panel.cone) {
+      strips.set(panel.name, coneFacets(panel, panel.cone, facets, links));
+      continue;
+    }
     if (!panel.roll) {
       facets.push(flatFacet(panel, joined));
       strips.set(panel.name, [first]);
@@ -170,6 +192,8 @@ function facetsOf(net: Net): { readonly facets: readonly Facet[]; readonly links
   const facetAt = (name: string, curve: Curve): number => {
     const all = strips.get(name) ?? [];
     if (all.length <= 1) return all[0] ?? -1;
+    const cone = net.panels.find((panel) => panel.name === name)?.cone;
+    if (cone) return all[coneStripAt(cone, curve, all.length)] as number;
     const x = (curve.from.x + curve.to.x) / 2;
     return (
       all.find((index) => x <= Math.max(...(facets[index] as Facet).points.map((point) => point.x))) ??
@@ -181,6 +205,67 @@ function facetsOf(net: Net): { readonly facets: readonly Facet[]; readonly links
   for (const fold of net.folds) link(fold.curve, fold.panels, fold.kind === 'valley' ? fold.angle : -fold.angle);
   for (const join of net.joins) link(join.curve, join.panels, 0);
   return { facets, links };
+}
+
+const CONE_STRIPS = 36;
+/** Which strip of a cone an edge lies on, by its angle about the apex. */
+function coneStripAt(cone: { readonly apex: Point; readonly angle: number }, curve: Curve, count: number): number {
+  const [x, y] = [(curve.from.x + curve.to.x) / 2 - cone.apex.x, (curve.from.y + curve.to.y) / 2 - cone.apex.y];
+  const at = ((Math.atan2(y, x) * 180) / Math.PI - (90 - cone.angle / 2) + 720) % 360;
+  return Math.min(count - 1, Math.max(0, Math.floor((at / cone.angle) * count)));
+}
+/**
+ * A rolled sector as the side faces of a regular pyramid with as many sides as strips. Neighbouring faces turn by the angle
+ * between their normals: cos = sin²m + cos²m cos(360° / n), m the angle of a face's middle line to the axis.
+ */
+function coneFacets(
+  panel: Panel,
+  cone: { readonly apex: Point; readonly angle: number },
+  facets: Facet[],
+  links: Link[],
+): readonly number[] {
+  const radii = panel.loop
+    .flatMap((curve) => [curve.from, curve.to])
+    .map((point) => Math.hypot(point.x - cone.apex.x, point.y - cone.apex.y));
+  const [inner, outer] = [Math.min(...radii), Math.max(...radii)];
+  const first = facets.length;
+  const each = cone.angle / CONE_STRIPS;
+  const at = (radius: number, index: number): Point => {
+    const turn = ((90 - cone.angle / 2 + each * index) * Math.PI) / 180;
+    return { x: cone.apex.x + radius * Math.cos(turn), y: cone.apex.y + radius * Math.sin(turn) };
+  };
+  const lean = coneLean(cone.angle);
+  const turn =
+    (Math.acos(Math.sin(lean) ** 2 + Math.cos(lean) ** 2 * Math.cos((2 * Math.PI) / CONE_STRIPS)) * 180) / Math.PI;
+  for (let index = 0; index < CONE_STRIPS; index += 1) {
+    const pointed = inner < 1e-6;
+    const points = pointed
+      ? [at(outer, index), at(outer, index + 1), cone.apex]
+      : [at(outer, index), at(outer, index + 1), at(inner, index + 1), at(inner, index)];
+    const [start, end] = [index === 0, index === CONE_STRIPS - 1];
+    facets.push({
+      name: `${panel.name}#${index}`,
+      of: panel,
+      points,
+      edges: pointed ? [true, end, start] : [true, end, true, start],
+    });
+    if (index > 0)
+      links.push({
+        a: first + index - 1,
+        b: first + index,
+        from: at(outer, index),
+        to: pointed ? cone.apex : at(inner, index),
+        turn,
+      });
+  }
+  return Array.from({ length: CONE_STRIPS }, (_, index) => first + index);
+}
+/** Angle between the axis and the middle line of a face, for a cone whose flat is a sector of this angle. */
+function coneLean(angle: number): number {
+  const edge = Math.asin(
+    Math.min(1, Math.sin(((angle / CONE_STRIPS) * Math.PI) / 360) / Math.sin(Math.PI / CONE_STRIPS)),
+  );
+  return Math.atan(Math.tan(edge) * Math.cos(Math.PI / CONE_STRIPS));
 }
 
 /** Arcs stay as fine as the panel's own corners plus a few points; seams to a continued panel are no edges. */

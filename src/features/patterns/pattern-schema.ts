@@ -47,23 +47,30 @@ const fit = z.strictObject({
 });
 const track = z.strictObject({ name, size: formula, when });
 const tabEnd = z.strictObject({ from: formula.optional(), by: formula.optional() }).optional();
-const piece = z.strictObject({
+const base = {
   name,
   count: formula.optional(),
   stock: z.enum(['card', 'patterned paper', 'greyboard']),
   when,
+  look,
+  remarks: list(words).optional(),
+};
+const pair = z.tuple([formula, formula]);
+const lines = list(
+  z.strictObject({
+    between: z.tuple([name, name]),
+    is: z.enum(['valley', 'mountain', 'slit', 'nothing']),
+    angle: formula.optional(),
+    when,
+  }),
+).optional();
+const grid = z.strictObject({
+  ...base,
   builder: z.literal('grid'),
   columns: list(track),
   rows: list(track),
   cells: list(list(name)),
-  lines: list(
-    z.strictObject({
-      between: z.tuple([name, name]),
-      is: z.enum(['valley', 'mountain', 'slit', 'nothing']),
-      angle: formula.optional(),
-      when,
-    }),
-  ).optional(),
+  lines,
   tabs: list(
     z.strictObject({
       cells: list(name),
@@ -74,6 +81,8 @@ const piece = z.strictObject({
       bottom: tabEnd,
       teeth: formula.optional(),
       'tooth angle': formula.optional(),
+      round: formula.optional(),
+      shape: list(pair).optional(),
       when,
     }),
   ).optional(),
@@ -90,11 +99,53 @@ const piece = z.strictObject({
   slots: list(
     z.strictObject({ cell: name, across: formula, along: formula, width: formula, height: formula, when }),
   ).optional(),
+  holes: list(z.strictObject({ cell: name, across: formula, along: formula, diameter: formula, when })).optional(),
+  creases: list(
+    z.strictObject({ cell: name, is: z.enum(['valley', 'mountain']), from: pair, to: pair, when }),
+  ).optional(),
   rolls: list(z.strictObject({ cell: name, radius: formula, when })).optional(),
   edges: list(z.strictObject({ name, cell: name, side })).optional(),
-  look,
-  remarks: list(words).optional(),
 });
+const fan = z.strictObject({
+  ...base,
+  builder: z.literal('fan'),
+  centre: name,
+  sides: formula,
+  side: formula,
+  flap: z.strictObject({
+    name,
+    shape: z.enum(['rectangle', 'triangle']),
+    height: formula,
+    angle: formula,
+    hole: z.strictObject({ diameter: formula, 'from tip': formula, when }).optional(),
+  }),
+  tab: z.strictObject({ width: formula, low: formula, high: formula, angle: formula, when }).optional(),
+});
+const disc = z.strictObject({
+  ...base,
+  builder: z.literal('disc'),
+  disc: name,
+  diameter: formula,
+  rim: z.strictObject({ teeth: formula, depth: formula, 'tooth angle': formula, angle: formula, when }).optional(),
+});
+const sector = z.strictObject({
+  ...base,
+  builder: z.literal('sector'),
+  body: name,
+  'inner radius': formula,
+  'outer radius': formula,
+  angle: formula,
+  seam: z.strictObject({ width: formula, low: formula, high: formula }),
+});
+const outline = z.strictObject({
+  ...base,
+  builder: z.literal('outline'),
+  points: list(z.strictObject({ name, across: formula, along: formula })),
+  panels: list(z.strictObject({ name, role: z.enum(['panel', 'tab']).optional(), loop: list(words), when })),
+  lines,
+  edges: list(z.strictObject({ name, panel: name, from: name, to: name })).optional(),
+});
+const piece = z.discriminatedUnion('builder', [grid, fan, disc, sector, outline]);
 const size = list(z.strictObject({ name, formula }));
 
 export const patternSchema: z.ZodType<Pattern> = z.strictObject({

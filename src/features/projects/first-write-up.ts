@@ -22,9 +22,19 @@ export function firstWriteUp(pattern: Pick<Pattern, 'pieces' | 'order'>): WriteU
     doc: {
       type: 'doc',
       content: [
-        { type: 'materials', content: [{ type: 'bulletList', content: stocks.map((stock) => ({ type: 'listItem', content: [line(capital(stock))] })) }] },
+        {
+          type: 'materials',
+          content: [
+            {
+              type: 'bulletList',
+              content: stocks.map((stock) => ({ type: 'listItem', content: [line(capital(stock))] })),
+            },
+          ],
+        },
         { type: 'cutList' },
-        ...(steps.length > 0 ? steps : [{ type: 'step', attrs: { title: '', mark: '' }, content: [{ type: 'paragraph' }] } as BlockNode]),
+        ...(steps.length > 0
+          ? steps
+          : [{ type: 'step', attrs: { title: '', mark: '' }, content: [{ type: 'paragraph' }] } as BlockNode]),
       ],
     },
   };
@@ -33,12 +43,16 @@ export function firstWriteUp(pattern: Pick<Pattern, 'pieces' | 'order'>): WriteU
 const line = (text: string): BlockNode => ({ type: 'paragraph', content: [{ type: 'text', text }] });
 const capital = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);
 const names = (sentence: string, piece: string): boolean =>
-  new RegExp(`(?<![\\p{L}\\p{N}])${piece.replace(/[.*+?^${}()|[\]\\]/gu, '\\$&')}(?![\\p{L}\\p{N}])`, 'iu').test(sentence);
+  new RegExp(`(?<![\\p{L}\\p{N}])${piece.replace(/[.*+?^${}()|[\]\\]/gu, '\\$&')}(?![\\p{L}\\p{N}])`, 'iu').test(
+    sentence,
+  );
 
 /** `Score at [[tab]]` is text and a live measure. */
 function inline(sentence: string): InlineNode[] {
   return sentence.split(/\[\[(.+?)\]\]/gu).flatMap((part, i): InlineNode[] => {
     if (part === '') return [];
-    return [i % 2 === 1 ? { type: 'measure', attrs: { formula: part.trim(), bare: false } } : { type: 'text', text: part }];
+    return [
+      i % 2 === 1 ? { type: 'measure', attrs: { formula: part.trim(), bare: false } } : { type: 'text', text: part },
+    ];
   });
 }

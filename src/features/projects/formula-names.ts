@@ -46,21 +46,42 @@ function finder(names: readonly string[]): Finder {
   return made;
 }
 
-/** Every formula of a piece: sizes, counts, conditions, angles, radii. */
+/** Fields of a piece that are names, words or kinds and not formulas. */
+const NOT_FORMULAS: ReadonlySet<string> = new Set([
+  'name',
+  'stock',
+  'builder',
+  'look',
+  'remarks',
+  'cells',
+  'cell',
+  'is',
+  'between',
+  'corner',
+  'centre',
+  'disc',
+  'body',
+  'role',
+  'panel',
+  'edges',
+]);
+const SIDES: ReadonlySet<string> = new Set(['top', 'right', 'bottom', 'left', 'rectangle', 'triangle']);
+
+/** Every formula of a piece, whatever its builder: sizes, counts, conditions, angles, radii, places of points. */
 export function formulasOfPiece(piece: PieceDef): readonly string[] {
-  const found: (string | undefined)[] = [piece.count, piece.when];
-  for (const track of [...piece.columns, ...piece.rows]) found.push(track.size, track.when);
-  for (const line of piece.lines ?? []) found.push(line.angle, line.when);
-  for (const tab of piece.tabs ?? []) {
-    found.push(tab.depth, tab.teeth, tab['tooth angle'], tab.when);
-    for (const end of [tab.left, tab.right, tab.top, tab.bottom]) found.push(end?.from, end?.by);
-  }
-  for (const cap of piece.caps ?? []) found.push(cap.radius);
-  for (const corner of piece.corners ?? []) found.push(corner.radius, corner.when);
-  for (const notch of piece.notches ?? []) found.push(notch.at, notch.radius, notch.when);
-  for (const slot of piece.slots ?? []) found.push(slot.across, slot.along, slot.width, slot.height, slot.when);
-  for (const roll of piece.rolls ?? []) found.push(roll.radius, roll.when);
-  return found.filter((formula): formula is string => formula !== undefined && formula !== '');
+  const found: string[] = [];
+  const collect = (value: unknown, key: string): void => {
+    if (NOT_FORMULAS.has(key)) return;
+    if (typeof value === 'string') {
+      // A loop names points; only the radius of a bowed edge is a formula there.
+      const formula = key === 'loop' ? (/ bowed (?:out|in) by (.+)$/u.exec(value)?.[1] ?? '') : value;
+      if (formula !== '' && !SIDES.has(formula)) found.push(formula);
+    } else if (Array.isArray(value)) for (const item of value) collect(item, key);
+    else if (typeof value === 'object' && value !== null)
+      for (const [name, item] of Object.entries(value)) collect(item, name);
+  };
+  for (const [key, value] of Object.entries(piece)) collect(value, key);
+  return found;
 }
 
 /** Names that a formula may use: measures and choices. */

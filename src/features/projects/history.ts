@@ -13,17 +13,24 @@ export const begin = <T>(present: T): History<T> => ({ past: [], present, future
 /** `field` names what is being typed in: a second edit of the same field in a row replaces the first. */
 export function edit<T>(history: History<T>, next: T, field: string | null = null): History<T> {
   if (next === history.present) return history;
-  const past = field !== null && field === history.field ? history.past : [...history.past, history.present].slice(-LIMIT);
+  const past =
+    field !== null && field === history.field ? history.past : [...history.past, history.present].slice(-LIMIT);
   return { past, present: next, future: [], field };
 }
 
 /** Ends a run of edits in one field: the next edit is a step of its own. */
-export const settle = <T>(history: History<T>): History<T> => (history.field === null ? history : { ...history, field: null });
+export const settle = <T>(history: History<T>): History<T> =>
+  history.field === null ? history : { ...history, field: null };
 
 export function undo<T>(history: History<T>): History<T> {
   const previous = history.past.at(-1);
   if (previous === undefined) return history;
-  return { past: history.past.slice(0, -1), present: previous, future: [history.present, ...history.future], field: null };
+  return {
+    past: history.past.slice(0, -1),
+    present: previous,
+    future: [history.present, ...history.future],
+    field: null,
+  };
 }
 
 export function redo<T>(history: History<T>): History<T> {

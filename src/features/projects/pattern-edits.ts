@@ -20,7 +20,7 @@ export const changeChoice = (pattern: Pattern, name: string, change: Partial<Cho
   choices: pattern.choices.map((choice) => (choice.name === name ? { ...choice, ...change } : choice)),
 });
 
-/** Changes a column or row of a piece. */
+/** Changes a column or row of a grid piece. */
 export const changeTrack = (
   pattern: Pattern,
   at: { readonly piece: string; readonly axis: 'columns' | 'rows'; readonly index: number },
@@ -28,14 +28,17 @@ export const changeTrack = (
 ): Pattern => ({
   ...pattern,
   pieces: pattern.pieces.map((piece) =>
-    piece.name === at.piece
+    piece.name === at.piece && piece.builder === 'grid'
       ? { ...piece, [at.axis]: piece[at.axis].map((track, i) => (i === at.index ? { ...track, ...change } : track)) }
       : piece,
   ),
 });
 
 /** A new measure goes last: the order of writing does not matter to what is worked out. */
-export const addMeasure = (pattern: Pattern, measure: MeasureDef): Pattern => ({ ...pattern, measures: [...pattern.measures, measure] });
+export const addMeasure = (pattern: Pattern, measure: MeasureDef): Pattern => ({
+  ...pattern,
+  measures: [...pattern.measures, measure],
+});
 
 export const removeMeasure = (pattern: Pattern, name: string): Pattern => ({
   ...pattern,
@@ -50,7 +53,10 @@ export function turnOver(pattern: Pattern, name: string): Pattern {
       if (measure.name !== name) return measure;
       const { ask, formula, ...rest } = measure;
       if (ask) return { ...rest, formula: ask.usual };
-      return { ...rest, ask: { question: `How much is the ${name}?`, usual: formula ?? '', from: '0 in', to: '12 in' } };
+      return {
+        ...rest,
+        ask: { question: `How much is the ${name}?`, usual: formula ?? '', from: '0 in', to: '12 in' },
+      };
     }),
   };
 }
@@ -59,22 +65,28 @@ export function turnOver(pattern: Pattern, name: string): Pattern {
 export function nameTrouble(pattern: Pattern, name: string): string | null {
   const clean = cleanName(name);
   if (clean === '') return 'Give the measure a name, such as “rib height”.';
-  if (!/^\p{L}[\p{L}\p{N} ]*$/u.test(clean)) return 'A name is made of letters, digits and spaces, and begins with a letter.';
+  if (!/^\p{L}[\p{L}\p{N} ]*$/u.test(clean))
+    return 'A name is made of letters, digits and spaces, and begins with a letter.';
   if (clean.length > 40) return 'A name has at most 40 characters.';
-  const taken = [...pattern.measures, ...pattern.choices].some((item) => item.name.toLowerCase() === clean.toLowerCase());
+  const taken = [...pattern.measures, ...pattern.choices].some(
+    (item) => item.name.toLowerCase() === clean.toLowerCase(),
+  );
   return taken ? `There is a measure or choice called “${clean}” already.` : null;
 }
 export const cleanName = (name: string): string => name.trim().replace(/\s+/gu, ' ');
 
 /** What would stop reading if the measure were taken out, in words: `measure “arc”`, `piece “Floor”`, `fit “lid goes on”`. */
 export function usersOf(pattern: Pattern, name: string): readonly string[] {
-  const uses = (formulas: readonly (string | undefined)[]) => formulas.some((f) => f !== undefined && namesIn(f, [name, ...others]).some((s) => s.name === name));
+  const uses = (formulas: readonly (string | undefined)[]) =>
+    formulas.some((f) => f !== undefined && namesIn(f, [name, ...others]).some((s) => s.name === name));
   const others = pattern.measures.map((measure) => measure.name).filter((other) => other !== name);
   return [
     ...pattern.measures
       .filter((m) => m.name !== name && uses([...formulasOfMeasure(m), m.ask?.from, m.ask?.to]))
       .map((m) => `measure “${m.name}”`),
     ...pattern.pieces.filter((piece) => uses(formulasOfPiece(piece))).map((piece) => `piece “${piece.name}”`),
-    ...pattern.fits.filter((fit) => uses([fit.left, fit.right, fit.tolerance, fit.when])).map((fit) => `fit “${fit.name}”`),
+    ...pattern.fits
+      .filter((fit) => uses([fit.left, fit.right, fit.tolerance, fit.when]))
+      .map((fit) => `fit “${fit.name}”`),
   ];
 }

@@ -22,13 +22,18 @@ export function patternShelf(): readonly ShelfPattern[] {
     const model = getPatternModel(pattern.slug);
     if (model === undefined) return [];
     const figures = evaluate(model, usualSizing(model));
-    return [{
-      slug: pattern.slug,
-      name: pattern.name,
-      summary: pattern.summary,
-      asks: pattern.measures.filter((measure) => measure.ask && !measure.ask.finer).map((measure) => measure.name).join(', '),
-      folded: drawingSvg(drawFolded(model, figures, { width: 120, height: 104 }), { class: 'card-cream' }),
-    }];
+    return [
+      {
+        slug: pattern.slug,
+        name: pattern.name,
+        summary: pattern.summary,
+        asks: pattern.measures
+          .filter((measure) => measure.ask && !measure.ask.finer)
+          .map((measure) => measure.name)
+          .join(', '),
+        folded: drawingSvg(drawFolded(model, figures, { width: 120, height: 104 }), { class: 'card-cream' }),
+      },
+    ];
   });
   return shelf;
 }

@@ -1,7 +1,18 @@
 import { and, desc, eq, isNull, sql } from 'drizzle-orm';
 import { db } from '@/db/client.server';
 import { editions, projects, users } from '@/db/schema';
-import { compilePattern, drawFolded, drawPiece, evaluate, show, type Figures, type GridId, type Model, type PieceFigure, type Unit } from '@/engine';
+import {
+  compilePattern,
+  drawFolded,
+  drawPiece,
+  evaluate,
+  show,
+  type Figures,
+  type GridId,
+  type Model,
+  type PieceFigure,
+  type Unit,
+} from '@/engine';
 import { drawingSvg } from '@/exports/svg/drawing';
 import type { ProjectList, ProjectSummary } from './project';
 import { differenceWords, stageOf } from './project-stage';
@@ -55,14 +66,21 @@ function picture(row: Row): Pictured {
 function commonScale(pieces: readonly PieceFigure[]): number {
   const across = Math.max(0, ...pieces.map((piece) => piece.across)) / MM_AN_INCH;
   const along = Math.max(0, ...pieces.map((piece) => piece.along)) / MM_AN_INCH;
-  return Math.min(FLAT.pixelsAnInch, across > 0 ? FLAT.width / across : FLAT.pixelsAnInch, along > 0 ? FLAT.height / along : FLAT.pixelsAnInch);
+  return Math.min(
+    FLAT.pixelsAnInch,
+    across > 0 ? FLAT.width / across : FLAT.pixelsAnInch,
+    along > 0 ? FLAT.height / along : FLAT.pixelsAnInch,
+  );
 }
 
 function summary({ row, worked, pieces }: Pictured, pixelsAnInch: number): ProjectSummary {
   const { project, authorName, editionCount } = row;
   const { units, grid } = project.sizing;
   const stage = stageOf({ ...project, editions: editionCount });
-  const items = proofList({ ...project }, worked ? { figures: worked.figures, compiled: { ok: true, value: worked.model } } : {});
+  const items = proofList(
+    { ...project },
+    worked ? { figures: worked.figures, compiled: { ok: true, value: worked.model } } : {},
+  );
   const stops = blocking(items).length;
   return {
     id: project.id,
@@ -77,9 +95,13 @@ function summary({ row, worked, pieces }: Pictured, pixelsAnInch: number): Proje
     revision: project.revision,
     updatedAt: project.updatedAt.getTime(),
     author: { id: project.authorId, name: authorName ?? 'Unnamed' },
-    flat: thatFit(pieces, pixelsAnInch / MM_AN_INCH).map((piece) => flatSvg(piece, { units, grid, scale: pixelsAnInch / MM_AN_INCH })),
+    flat: thatFit(pieces, pixelsAnInch / MM_AN_INCH).map((piece) =>
+      flatSvg(piece, { units, grid, scale: pixelsAnInch / MM_AN_INCH }),
+    ),
     folded: worked ? drawingSvg(drawFolded(worked.model, worked.figures, FOLDED)) : null,
-    words: [...project.pattern.pieces, ...project.pattern.measures, ...project.pattern.choices].map((item) => item.name).join(' '),
+    words: [...project.pattern.pieces, ...project.pattern.measures, ...project.pattern.choices]
+      .map((item) => item.name)
+      .join(' '),
   };
 }
 
@@ -93,17 +115,31 @@ function thatFit(pieces: readonly PieceFigure[], scale: number): readonly PieceF
   return beside || above ? pieces : [first];
 }
 
-function flatSvg(piece: PieceFigure, options: { readonly units: Unit; readonly grid: GridId; readonly scale: number }): string {
-  return drawingSvg(drawPiece(piece, { ...options, width: piece.across * options.scale + 2 * FLAT.inset, labels: false, dims: false }));
+function flatSvg(
+  piece: PieceFigure,
+  options: { readonly units: Unit; readonly grid: GridId; readonly scale: number },
+): string {
+  return drawingSvg(
+    drawPiece(piece, { ...options, width: piece.across * options.scale + 2 * FLAT.inset, labels: false, dims: false }),
+  );
 }
 
 /** "9 × 6 × 2 1/4 in" */
-export function sizeWords(figures: Pick<Figures, 'finished'>, options: { readonly units: Unit; readonly grid: GridId }): string {
+export function sizeWords(
+  figures: Pick<Figures, 'finished'>,
+  options: { readonly units: Unit; readonly grid: GridId },
+): string {
   const sizes = figures.finished.inside.length > 0 ? figures.finished.inside : figures.finished.outside;
   return sizes.map((size, i) => show(size.mm, { ...options, bare: i < sizes.length - 1 }).typeset).join(' × ');
 }
 
 function differenceOf({ project }: Row): string {
-  const newest = db.select().from(editions).where(eq(editions.projectId, project.id)).orderBy(desc(editions.n)).limit(1).get();
+  const newest = db
+    .select()
+    .from(editions)
+    .where(eq(editions.projectId, project.id))
+    .orderBy(desc(editions.n))
+    .limit(1)
+    .get();
   return newest ? differenceWords(newest, project) : '';
 }

@@ -34,9 +34,18 @@ interface Content {
 /** In a few words, what differs from the newest edition: "4 measures and 2 steps differ"; empty when nothing of it does. */
 export function differenceWords(edition: Content, now: Content): string {
   const parts = [
-    counted(differing(edition.pattern.measures, now.pattern.measures, (m) => m.name), 'measure'),
-    counted(differing(edition.pattern.pieces, now.pattern.pieces, (p) => p.name), 'piece'),
-    counted(differing(steps(edition.writeUp), steps(now.writeUp), (_, n) => String(n)), 'step'),
+    counted(
+      differing(edition.pattern.measures, now.pattern.measures, (m) => m.name),
+      'measure',
+    ),
+    counted(
+      differing(edition.pattern.pieces, now.pattern.pieces, (p) => p.name),
+      'piece',
+    ),
+    counted(
+      differing(steps(edition.writeUp), steps(now.writeUp), (_, n) => String(n)),
+      'step',
+    ),
     same(rest(edition.writeUp), rest(now.writeUp)) ? '' : 'the text around the steps',
     same(edition.sizing, now.sizing) ? '' : 'the size shown first',
     edition.title === now.title && edition.summary === now.summary ? '' : 'the title or summary',

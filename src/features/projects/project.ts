@@ -77,10 +77,19 @@ export const sizingSchema = z.object({
 });
 
 /** Whether a project answers to what was typed: every word must begin a word of its title, pattern, pieces, measures or author. */
-export function matchesSearch(project: Pick<ProjectSummary, 'title' | 'patternName' | 'words' | 'author'>, query: string): boolean {
+export function matchesSearch(
+  project: Pick<ProjectSummary, 'title' | 'patternName' | 'words' | 'author'>,
+  query: string,
+): boolean {
   const text = ` ${plain(`${project.title} ${project.patternName} ${project.words} ${project.author.name}`)}`;
   return plain(query)
     .split(' ')
     .every((word) => text.includes(` ${word}`));
 }
-const plain = (text: string): string => text.normalize('NFKD').replace(/\p{M}/gu, '').toLowerCase().replace(/[^\p{L}\p{N}]+/gu, ' ').trim();
+const plain = (text: string): string =>
+  text
+    .normalize('NFKD')
+    .replace(/\p{M}/gu, '')
+    .toLowerCase()
+    .replace(/[^\p{L}\p{N}]+/gu, ' ')
+    .trim();

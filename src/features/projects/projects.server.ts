@@ -41,7 +41,10 @@ export function openProject(id: string, asker: Asker): OpenProject | null {
 }
 
 /** A new project of the asker's from a pattern, with the pattern's usual size and order of making. */
-export function createProject(pattern: Pattern, { title, asker }: { readonly title: string; readonly asker: Asker }): { readonly id: string; readonly slug: string } {
+export function createProject(
+  pattern: Pattern,
+  { title, asker }: { readonly title: string; readonly asker: Asker },
+): { readonly id: string; readonly slug: string } {
   const compiled = compilePattern(pattern);
   if (!compiled.ok) throw new Error(`The pattern ${pattern.slug} does not compile: it must not be offered.`);
   return insertProject(db, asker.id, {
@@ -59,7 +62,11 @@ export function createProject(pattern: Pattern, { title, asker }: { readonly tit
  * Saves a state over the revision that it was made from. When another save came between, nothing is written and the answer
  * tells that version. `keepOther` first puts what stands there into a new draft, so that the save can be undone by hand.
  */
-export function saveProject(id: string, asker: Asker, save: { readonly state: ProjectState; readonly revision: number; readonly keepOther?: boolean }): SaveOutcome {
+export function saveProject(
+  id: string,
+  asker: Asker,
+  save: { readonly state: ProjectState; readonly revision: number; readonly keepOther?: boolean },
+): SaveOutcome {
   return db.transaction(
     (tx): SaveOutcome => {
       const row = mine(tx, id, asker);
@@ -68,7 +75,8 @@ export function saveProject(id: string, asker: Asker, save: { readonly state: Pr
         return { ok: false, code: 'changed meanwhile', revision: row.revision, updatedAt: row.updatedAt.getTime() };
       }
       const { hero, ...state } = save.state;
-      if (hero !== null && hero !== row.heroUploadId && !ownsUpload(tx, hero, [row.authorId, asker.id])) return { ok: false, code: 'picture unknown' };
+      if (hero !== null && hero !== row.heroUploadId && !ownsUpload(tx, hero, [row.authorId, asker.id]))
+        return { ok: false, code: 'picture unknown' };
       let kept: { id: string; title: string } | null = null;
       if (save.keepOther === true) {
         const title = tailed(row.title, '(from the other tab)');
@@ -86,7 +94,11 @@ export function saveProject(id: string, asker: Asker, save: { readonly state: Pr
 }
 
 /** A copy as a new draft of the same author: of what is stored, or of a state that was never stored. */
-export function duplicateProject(id: string, asker: Asker, copy: { readonly state?: ProjectState; readonly tail?: string } = {}): { readonly id: string; readonly title: string } | null {
+export function duplicateProject(
+  id: string,
+  asker: Asker,
+  copy: { readonly state?: ProjectState; readonly tail?: string } = {},
+): { readonly id: string; readonly title: string } | null {
   return db.transaction(
     (tx) => {
       const row = mine(tx, id, asker);
@@ -103,7 +115,13 @@ export function duplicateProject(id: string, asker: Asker, copy: { readonly stat
 /** Takes a project out of the workroom and off the site; `restoreProject` brings it back as it was. */
 export function deleteProject(id: string, asker: Asker): boolean {
   if (mine(db, id, asker) === null) return false;
-  return db.update(projects).set({ deletedAt: new Date() }).where(and(eq(projects.id, id), isNull(projects.deletedAt))).run().changes > 0;
+  return (
+    db
+      .update(projects)
+      .set({ deletedAt: new Date() })
+      .where(and(eq(projects.id, id), isNull(projects.deletedAt)))
+      .run().changes > 0
+  );
 }
 
 /** Brings a deleted project back. True also when it was not deleted: an undo pressed twice does no harm. */
@@ -113,7 +131,9 @@ export function restoreProject(id: string, asker: Asker): boolean {
   return true;
 }
 
-export type MoveOutcome = { readonly ok: true; readonly slug: string } | { readonly ok: false; readonly code: 'not found' | 'taken' | 'published' };
+export type MoveOutcome =
+  | { readonly ok: true; readonly slug: string }
+  | { readonly ok: false; readonly code: 'not found' | 'taken' | 'published' };
 
 /** Gives a project another address. One that was published keeps its own: links to it are out. */
 export function moveProject(id: string, asker: Asker, slug: string): MoveOutcome {
@@ -148,11 +168,17 @@ const stateOf = (row: Row): ProjectState => ({
   writeUp: row.writeUp,
 });
 
-function insertProject(tx: Transaction | typeof db, authorId: string, { hero, ...state }: ProjectState): { readonly id: string; readonly slug: string } {
+function insertProject(
+  tx: Transaction | typeof db,
+  authorId: string,
+  { hero, ...state }: ProjectState,
+): { readonly id: string; readonly slug: string } {
   const id = randomUUID();
   const slug = freeSlug(slugOf(state.title), (candidate) => slugTaken(tx, candidate));
   const now = new Date();
-  tx.insert(projects).values({ id, authorId, slug, ...state, heroUploadId: hero, createdAt: now, updatedAt: now }).run();
+  tx.insert(projects)
+    .values({ id, authorId, slug, ...state, heroUploadId: hero, createdAt: now, updatedAt: now })
+    .run();
   return { id, slug };
 }
 
@@ -163,7 +189,12 @@ const editionsOf = (tx: Transaction | typeof db, projectId: string): number =>
   tx.select({ n: count() }).from(editions).where(eq(editions.projectId, projectId)).get()?.n ?? 0;
 
 const ownsUpload = (tx: Transaction | typeof db, id: string, owners: readonly string[]): boolean =>
-  tx.select({ id: uploads.id }).from(uploads).where(and(eq(uploads.id, id), inArray(uploads.ownerId, [...owners]))).get() !== undefined;
+  tx
+    .select({ id: uploads.id })
+    .from(uploads)
+    .where(and(eq(uploads.id, id), inArray(uploads.ownerId, [...owners])))
+    .get() !== undefined;
 
 /** "Seed box (copy)"; a title at its limit loses letters, not the tail. */
-const tailed = (title: string, tail: string): string => `${title.replace(/ \((?:copy|from the other tab|from this tab)\)$/u, '').slice(0, TITLE_LIMIT - 1 - tail.length)} ${tail}`.trim();
+const tailed = (title: string, tail: string): string =>
+  `${title.replace(/ \((?:copy|from the other tab|from this tab)\)$/u, '').slice(0, TITLE_LIMIT - 1 - tail.length)} ${tail}`.trim();

@@ -24,7 +24,8 @@ const COLUMNS: Readonly<Record<string, { readonly column: ProofPlace['column']; 
 export function placeOfFault(fault: Pick<Fault, 'where'>): ProofPlace {
   const match = /^(measure|choice|fit|piece) “([^”]*)”(.*)$/su.exec(fault.where);
   const column = COLUMNS[match?.[1] ?? ''];
-  if (match === null || column === undefined) return { column: 'measures', label: fault.where === '' ? 'Measures' : `Measures · ${fault.where}` };
+  if (match === null || column === undefined)
+    return { column: 'measures', label: fault.where === '' ? 'Measures' : `Measures · ${fault.where}` };
   return { column: column.column, name: match[2] ?? '', label: `${column.heading} · ${match[2]}${match[3]}` };
 }
 
@@ -39,5 +40,7 @@ export function fieldOfFault(fault: Pick<Fault, 'where'>, name: string): Measure
 }
 
 /** Whether a fault stands in a column or row of a piece. */
-export const isInTrack = (fault: Pick<Fault, 'where'>, track: { readonly piece: string; readonly axis: 'column' | 'row'; readonly name: string }): boolean =>
-  fault.where.startsWith(`piece “${track.piece}”, ${track.axis}, “${track.name}”`);
+export const isInTrack = (
+  fault: Pick<Fault, 'where'>,
+  track: { readonly piece: string; readonly axis: 'column' | 'row'; readonly name: string },
+): boolean => fault.where.startsWith(`piece “${track.piece}”, ${track.axis}, “${track.name}”`);

@@ -1,4 +1,14 @@
-import { compilePattern, evaluate, explain, type Fault, type Figures, type Model, type Pattern, type Result, type Sizing } from '@/engine';
+import {
+  compilePattern,
+  evaluate,
+  explain,
+  type Fault,
+  type Figures,
+  type Model,
+  type Pattern,
+  type Result,
+  type Sizing,
+} from '@/engine';
 import type { WriteUp } from '@/writeup/document';
 import { readLive } from '@/writeup/live';
 import { collectUses, type Uses } from '@/writeup/uses';
@@ -7,8 +17,18 @@ import { placeOfFault, type ProofColumn, type ProofPlace } from './proof-place';
 export type { ProofColumn, ProofPlace };
 export interface ProofItem {
   readonly code:
-    | 'no title' | 'formula' | 'sizing' | 'fit fails' | 'no steps' | 'live measure' | 'unknown piece' | 'no alt text'
-    | 'no summary' | 'no materials' | 'piece unused' | 'fit advice';
+    | 'no title'
+    | 'formula'
+    | 'sizing'
+    | 'fit fails'
+    | 'no steps'
+    | 'live measure'
+    | 'unknown piece'
+    | 'no alt text'
+    | 'no summary'
+    | 'no materials'
+    | 'piece unused'
+    | 'fit advice';
   /** Keeps the project from being published; the others are worth a look. */
   readonly blocking: boolean;
   readonly title: string;
@@ -38,7 +58,9 @@ export function proofList(subject: ProofSubject, worked: Worked = {}): readonly 
   const at = inText(subject.writeUp);
   const items = [
     ...factItems(subject),
-    ...(compiled.ok ? sizeItems(worked.figures ?? evaluate(compiled.value, subject.sizing)) : compiled.faults.map(faultItem)),
+    ...(compiled.ok
+      ? sizeItems(worked.figures ?? evaluate(compiled.value, subject.sizing))
+      : compiled.faults.map(faultItem)),
     ...(compiled.ok ? liveItems(compiled.value, uses, at) : []),
     ...writeUpItems(uses, subject.pattern, at),
   ];
@@ -51,14 +73,20 @@ function factItems({ title, summary }: ProofSubject): ProofItem[] {
   const items: ProofItem[] = [];
   if (title.trim() === '') {
     items.push({
-      code: 'no title', blocking: true, title: 'The project has no title',
-      detail: 'Give it a title: it is what readers see first.', place: { column: 'facts', name: 'title', label: 'Project' },
+      code: 'no title',
+      blocking: true,
+      title: 'The project has no title',
+      detail: 'Give it a title: it is what readers see first.',
+      place: { column: 'facts', name: 'title', label: 'Project' },
     });
   }
   if (summary.trim() === '') {
     items.push({
-      code: 'no summary', blocking: false, title: 'No summary yet',
-      detail: 'Say in one line what it is: cards and search results show it.', place: { column: 'facts', name: 'summary', label: 'Project' },
+      code: 'no summary',
+      blocking: false,
+      title: 'No summary yet',
+      detail: 'Say in one line what it is: cards and search results show it.',
+      place: { column: 'facts', name: 'summary', label: 'Project' },
     });
   }
   return items;
@@ -67,9 +95,12 @@ function factItems({ title, summary }: ProofSubject): ProofItem[] {
 function faultItem(fault: Fault): ProofItem {
   const place = placeOfFault(fault);
   return {
-    code: 'formula', blocking: true,
+    code: 'formula',
+    blocking: true,
     title: place.name === undefined ? 'The pattern does not read' : `${place.name} does not read`,
-    detail: explain(fault), place, fault,
+    detail: explain(fault),
+    place,
+    fault,
   };
 }
 
@@ -77,17 +108,31 @@ function sizeItems(figures: Figures): ProofItem[] {
   const fits = figures.fits.filter((fit) => !fit.holds);
   const problems = figures.problems.filter((problem) => problem.code !== 'fit fails');
   return [
-    ...problems.map((problem): ProofItem => ({
-      code: 'sizing', blocking: true,
-      title: problem.measure === '' ? 'The size shown first does not work' : `${problem.measure}: the size shown first does not work`,
-      detail: problem.sentence,
-      place: { column: 'measures', label: problem.measure === '' ? 'Measures' : `Measures · ${problem.measure}`, name: problem.measure || undefined },
-    })),
-    ...fits.map((fit): ProofItem => ({
-      code: fit.advice ? 'fit advice' : 'fit fails', blocking: !fit.advice,
-      title: fit.advice ? `${fit.name}: not at this size` : `${fit.name}: fails`,
-      detail: fit.otherwise, place: { column: 'measures', label: `Fits · ${fit.name}`, name: fit.name },
-    })),
+    ...problems.map(
+      (problem): ProofItem => ({
+        code: 'sizing',
+        blocking: true,
+        title:
+          problem.measure === ''
+            ? 'The size shown first does not work'
+            : `${problem.measure}: the size shown first does not work`,
+        detail: problem.sentence,
+        place: {
+          column: 'measures',
+          label: problem.measure === '' ? 'Measures' : `Measures · ${problem.measure}`,
+          name: problem.measure || undefined,
+        },
+      }),
+    ),
+    ...fits.map(
+      (fit): ProofItem => ({
+        code: fit.advice ? 'fit advice' : 'fit fails',
+        blocking: !fit.advice,
+        title: fit.advice ? `${fit.name}: not at this size` : `${fit.name}: fails`,
+        detail: fit.otherwise,
+        place: { column: 'measures', label: `Fits · ${fit.name}`, name: fit.name },
+      }),
+    ),
   ];
 }
 
@@ -96,10 +141,16 @@ function liveItems(model: Model, uses: Uses, at: InText): ProofItem[] {
     const live = readLive(model, formula);
     if (live.ok) return [];
     const fault = live.faults[0];
-    return [{
-      code: 'live measure', blocking: true, title: `“${formula}” in the text does not read`,
-      detail: fault === undefined ? 'Choose a measure from the list instead.' : explain(fault), place: at(step, nth), fault,
-    }];
+    return [
+      {
+        code: 'live measure',
+        blocking: true,
+        title: `“${formula}” in the text does not read`,
+        detail: fault === undefined ? 'Choose a measure from the list instead.' : explain(fault),
+        place: at(step, nth),
+        fault,
+      },
+    ];
   });
 }
 
@@ -107,37 +158,52 @@ function writeUpItems(uses: Uses, pattern: Pattern, at: InText): ProofItem[] {
   const items: ProofItem[] = [];
   if (uses.steps === 0) {
     items.push({
-      code: 'no steps', blocking: true, title: 'There are no steps',
-      detail: 'Put in the first step: what does the maker do first?', place: { column: 'write-up', label: 'Write-up' },
+      code: 'no steps',
+      blocking: true,
+      title: 'There are no steps',
+      detail: 'Put in the first step: what does the maker do first?',
+      place: { column: 'write-up', label: 'Write-up' },
     });
   }
   const known = new Set(pattern.pieces.map((piece) => piece.name));
   uses.pieces.forEach(({ piece, step }, nth) => {
     if (known.has(piece)) return;
     items.push({
-      code: 'unknown piece', blocking: true, title: `No piece is called “${piece}”`,
-      detail: 'Choose another piece for this card, or take the card out.', place: at(step, nth),
+      code: 'unknown piece',
+      blocking: true,
+      title: `No piece is called “${piece}”`,
+      detail: 'Choose another piece for this card, or take the card out.',
+      place: at(step, nth),
     });
   });
   uses.photos.forEach(({ alt, step }, nth) => {
     if (alt.trim() !== '') return;
     items.push({
-      code: 'no alt text', blocking: true, title: 'A photo has no words',
-      detail: 'Say what the photo shows, for those who cannot see it.', place: at(step, nth),
+      code: 'no alt text',
+      blocking: true,
+      title: 'A photo has no words',
+      detail: 'Say what the photo shows, for those who cannot see it.',
+      place: at(step, nth),
     });
   });
   if (uses.materials.length === 0) {
     items.push({
-      code: 'no materials', blocking: false, title: 'No materials yet',
-      detail: 'List the card, the glue and the tools, so that readers can lay them out first.', place: { column: 'write-up', label: 'Write-up' },
+      code: 'no materials',
+      blocking: false,
+      title: 'No materials yet',
+      detail: 'List the card, the glue and the tools, so that readers can lay them out first.',
+      place: { column: 'write-up', label: 'Write-up' },
     });
   }
   const used = new Set(uses.pieces.map((card) => card.piece));
   for (const piece of pattern.pieces) {
     if (used.has(piece.name) || uses.cutLists.length > 0) continue;
     items.push({
-      code: 'piece unused', blocking: false, title: `No step uses ${piece.name}`,
-      detail: `Put its piece card into the step that cuts it.`, place: { column: 'pieces', label: `Pieces · ${piece.name}`, name: piece.name },
+      code: 'piece unused',
+      blocking: false,
+      title: `No step uses ${piece.name}`,
+      detail: `Put its piece card into the step that cuts it.`,
+      place: { column: 'pieces', label: `Pieces · ${piece.name}`, name: piece.name },
     });
   }
   return items;

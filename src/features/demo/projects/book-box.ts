@@ -7,7 +7,7 @@ function opened(pattern: Pattern): Pattern {
   return {
     ...pattern,
     pieces: pattern.pieces.map((one) =>
-      one.name === 'Lid'
+      one.name === 'Lid' && one.builder === 'grid'
         ? { ...one, lines: [...(one.lines ?? []), { between: ['end', 'lid'], is: 'valley', angle: '0°' }] }
         : one,
     ),

@@ -16,12 +16,19 @@ export function AddMeasure({ store, pattern }: { readonly store: DeskStore; read
     if (found !== null) return;
     const clean = cleanName(name);
     store.editPattern(null, (now) =>
-      addMeasure(now, asked ? { name: clean, ask: { question: `How much is the ${clean}?`, usual: '1 in', from: '0 in', to: '12 in' } } : { name: clean, formula: '1 in' }),
+      addMeasure(
+        now,
+        asked
+          ? { name: clean, ask: { question: `How much is the ${clean}?`, usual: '1 in', from: '0 in', to: '12 in' } }
+          : { name: clean, formula: '1 in' },
+      ),
     );
     store.select(clean);
     setName('');
     setOpen(false);
-    requestAnimationFrame(() => document.querySelector<HTMLElement>(`[data-place="measure:${CSS.escape(clean)}"]`)?.focus());
+    requestAnimationFrame(() =>
+      document.querySelector<HTMLElement>(`[data-place="measure:${CSS.escape(clean)}"]`)?.focus(),
+    );
   };
   if (!open) {
     return (
@@ -43,7 +50,15 @@ export function AddMeasure({ store, pattern }: { readonly store: DeskStore; read
       <label className="small soft" htmlFor="new-measure">
         Name of the new measure
       </label>
-      <input id="new-measure" className="input" autoFocus value={name} maxLength={40} aria-invalid={trouble === null ? undefined : true} onChange={(event) => setName(event.currentTarget.value)} />
+      <input
+        id="new-measure"
+        className="input"
+        autoFocus
+        value={name}
+        maxLength={40}
+        aria-invalid={trouble === null ? undefined : true}
+        onChange={(event) => setName(event.currentTarget.value)}
+      />
       <button type="submit" className="btn small-btn">
         Worked out
       </button>
@@ -53,7 +68,11 @@ export function AddMeasure({ store, pattern }: { readonly store: DeskStore; read
       <button type="button" className="text-button small" onClick={() => setOpen(false)}>
         Cancel
       </button>
-      {trouble === null ? null : <p className="fault-words" role="alert">{trouble}</p>}
+      {trouble === null ? null : (
+        <p className="fault-words" role="alert">
+          {trouble}
+        </p>
+      )}
     </form>
   );
 }

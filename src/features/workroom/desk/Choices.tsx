@@ -4,7 +4,15 @@ import type { Lit } from '@/features/projects/followers';
 import type { DeskStore, Draft } from './desk-store';
 
 /** The pattern's choices: which option readers see first, and which is usual. */
-export function Choices({ store, draft, lit }: { readonly store: DeskStore; readonly draft: Draft; readonly lit: Lit | null }) {
+export function Choices({
+  store,
+  draft,
+  lit,
+}: {
+  readonly store: DeskStore;
+  readonly draft: Draft;
+  readonly lit: Lit | null;
+}) {
   const { pattern, sizing } = draft;
   if (pattern.choices.length === 0) return null;
   return (
@@ -16,7 +24,13 @@ export function Choices({ store, draft, lit }: { readonly store: DeskStore; read
           const selected = lit?.selected === choice.name;
           return (
             <div key={choice.name} className={selected ? 'choice selected' : 'choice'}>
-              <button type="button" className="measure-name" aria-pressed={selected} data-place={`name:${choice.name}`} onClick={() => store.select(selected ? null : choice.name)}>
+              <button
+                type="button"
+                className="measure-name"
+                aria-pressed={selected}
+                data-place={`name:${choice.name}`}
+                onClick={() => store.select(selected ? null : choice.name)}
+              >
                 {choice.name}
               </button>
               <Segmented
@@ -24,12 +38,18 @@ export function Choices({ store, draft, lit }: { readonly store: DeskStore; read
                 quietLegend
                 options={choice.options.map((option) => ({ value: option, label: option }))}
                 value={shown}
-                onChange={(option) => store.editSizing(null, (now) => ({ ...now, choices: { ...now.choices, [choice.name]: option } }))}
+                onChange={(option) =>
+                  store.editSizing(null, (now) => ({ ...now, choices: { ...now.choices, [choice.name]: option } }))
+                }
               />
               {shown === choice.usual ? (
                 <span className="small soft">usual</span>
               ) : (
-                <button type="button" className="text-button small" onClick={() => store.editPattern(null, (now) => changeChoice(now, choice.name, { usual: shown }))}>
+                <button
+                  type="button"
+                  className="text-button small"
+                  onClick={() => store.editPattern(null, (now) => changeChoice(now, choice.name, { usual: shown }))}
+                >
                   Make it usual
                 </button>
               )}

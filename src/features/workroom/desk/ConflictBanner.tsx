@@ -16,8 +16,9 @@ export function ConflictBanner({ saving }: { readonly saving: Saving }) {
       {status.kind === 'conflict' ? (
         <div className="desk-banner problem" role="alert">
           <p>
-            <b>Changed in another place.</b> Revision {status.other.revision} was saved {agoWords(Date.now() - status.other.updatedAt)} from another tab or by
-            another person. Nothing of yours or theirs is lost: what is not shown becomes a draft of its own.
+            <b>Changed in another place.</b> Revision {status.other.revision} was saved{' '}
+            {agoWords(Date.now() - status.other.updatedAt)} from another tab or by another person. Nothing of yours or
+            theirs is lost: what is not shown becomes a draft of its own.
           </p>
           <div className="banner-deeds">
             <button type="button" className="btn small-btn" disabled={busy} onClick={act(saving.keepMine)}>
@@ -32,7 +33,8 @@ export function ConflictBanner({ saving }: { readonly saving: Saving }) {
       {saving.notice === null ? null : (
         <div className="desk-banner note" role="status">
           <p>
-            {saving.notice.words} {saving.notice.link ? <a href={saving.notice.link.href}>{saving.notice.link.words}</a> : null}
+            {saving.notice.words}{' '}
+            {saving.notice.link ? <a href={saving.notice.link.href}>{saving.notice.link.words}</a> : null}
           </p>
           <button type="button" className="btn small-btn" onClick={saving.dismiss}>
             Close

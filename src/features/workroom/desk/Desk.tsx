@@ -38,7 +38,9 @@ export default function Desk({ project }: { readonly project: OpenProject }) {
   const [listOpen, setListOpen] = useState(() => location.hash === '#proof');
   const [dialog, setDialog] = useState<'facts' | 'publish' | null>(null);
   const [slug, setSlug] = useState(project.slug);
-  const [published, setPublished] = useState<{ readonly edition: number; readonly revision: number | null }>(() => publishedOf(project));
+  const [published, setPublished] = useState<{ readonly edition: number; readonly revision: number | null }>(() =>
+    publishedOf(project),
+  );
 
   const show = (column: Column) => {
     setOpen(column);
@@ -57,7 +59,11 @@ export default function Desk({ project }: { readonly project: OpenProject }) {
 
   const stops = blocking(proof);
   const { revision, status } = saving.state;
-  const stage: Stage = stageOf({ editions: published.edition, publishedRevision: published.revision, revision: status.kind === 'saved' ? revision : -1 });
+  const stage: Stage = stageOf({
+    editions: published.edition,
+    publishedRevision: published.revision,
+    revision: status.kind === 'saved' ? revision : -1,
+  });
   const next = published.edition + 1;
   const hindrance =
     stops.length > 0
@@ -96,7 +102,15 @@ export default function Desk({ project }: { readonly project: OpenProject }) {
       <ConflictBanner saving={saving} />
       <div className="desk-switch" role="tablist" aria-label="Parts of the desk">
         {COLUMNS.map(({ id, label }) => (
-          <button key={id} type="button" role="tab" data-tab={id} aria-selected={open === id || (id === side && open === 'write-up')} data-alone={open === id ? '' : undefined} onClick={() => show(id)}>
+          <button
+            key={id}
+            type="button"
+            role="tab"
+            data-tab={id}
+            aria-selected={open === id || (id === side && open === 'write-up')}
+            data-alone={open === id ? '' : undefined}
+            onClick={() => show(id)}
+          >
             {label}
           </button>
         ))}
@@ -108,8 +122,22 @@ export default function Desk({ project }: { readonly project: OpenProject }) {
         <FoldGrip between="pieces" />
         <WriteUpColumn store={store} projectId={project.id} />
       </div>
-      <ProofStrip items={proof} open={listOpen} onOpen={setListOpen} onGo={go} cureOf={(item) => cureFor(item, store)} />
-      <FactsDialog open={dialog === 'facts'} store={store} projectId={project.id} slug={slug} published={published.edition > 0} onSlug={setSlug} onClose={() => setDialog(null)} />
+      <ProofStrip
+        items={proof}
+        open={listOpen}
+        onOpen={setListOpen}
+        onGo={go}
+        cureOf={(item) => cureFor(item, store)}
+      />
+      <FactsDialog
+        open={dialog === 'facts'}
+        store={store}
+        projectId={project.id}
+        slug={slug}
+        published={published.edition > 0}
+        onSlug={setSlug}
+        onClose={() => setDialog(null)}
+      />
       <PublishDialog
         open={dialog === 'publish'}
         projectId={project.id}
@@ -121,7 +149,10 @@ export default function Desk({ project }: { readonly project: OpenProject }) {
           setPublished({ edition: done.n, revision: done.revision });
           setSlug(done.slug);
           setDialog(null);
-          saving.say({ words: `Edition ${done.n} is out.`, link: { href: `/projects/${done.slug}`, words: 'See it as readers do' } });
+          saving.say({
+            words: `Edition ${done.n} is out.`,
+            link: { href: `/projects/${done.slug}`, words: 'See it as readers do' },
+          });
         }}
       />
     </div>
@@ -129,4 +160,6 @@ export default function Desk({ project }: { readonly project: OpenProject }) {
 }
 
 const publishedOf = ({ stage, revision }: OpenProject) =>
-  stage.stage === 'draft' ? { edition: 0, revision: null } : { edition: stage.edition, revision: stage.stage === 'published' ? revision : null };
+  stage.stage === 'draft'
+    ? { edition: 0, revision: null }
+    : { edition: stage.edition, revision: stage.stage === 'published' ? revision : null };

@@ -22,9 +22,24 @@ export interface DeskHeaderProps {
   readonly mailing: string | null;
 }
 
-const STAGE_LOOK = { draft: { icon: 'draft', tone: 'quiet' }, published: { icon: 'check', tone: 'good' }, changed: { icon: 'pencil', tone: 'warn' } } as const;
+const STAGE_LOOK = {
+  draft: { icon: 'draft', tone: 'quiet' },
+  published: { icon: 'check', tone: 'good' },
+  changed: { icon: 'pencil', tone: 'warn' },
+} as const;
 
-export function DeskHeader({ store, saving, stage, mark, preview, publishLabel, onFacts, onPublish, hindrance, mailing }: DeskHeaderProps) {
+export function DeskHeader({
+  store,
+  saving,
+  stage,
+  mark,
+  preview,
+  publishLabel,
+  onFacts,
+  onPublish,
+  hindrance,
+  mailing,
+}: DeskHeaderProps) {
   const draft = useStore(store.$draft);
   const history = useStore(store.$history);
   const look = STAGE_LOOK[stage.stage];
@@ -56,10 +71,24 @@ export function DeskHeader({ store, saving, stage, mark, preview, publishLabel, 
         <Icon name="info" /> <span className="bar-word">Facts</span>
       </button>
       <span className="bar-undo">
-        <button type="button" className="bar-button" disabled={history.past.length === 0} onClick={store.undo} aria-label="Undo outside the write-up" title="Ctrl Z">
+        <button
+          type="button"
+          className="bar-button"
+          disabled={history.past.length === 0}
+          onClick={store.undo}
+          aria-label="Undo outside the write-up"
+          title="Ctrl Z"
+        >
           <Icon name="undo" /> <span className="bar-word">Undo</span>
         </button>
-        <button type="button" className="bar-button" disabled={history.future.length === 0} onClick={store.redo} aria-label="Redo outside the write-up" title="Ctrl Shift Z">
+        <button
+          type="button"
+          className="bar-button"
+          disabled={history.future.length === 0}
+          onClick={store.redo}
+          aria-label="Redo outside the write-up"
+          title="Ctrl Shift Z"
+        >
           <Icon name="redo" /> <span className="bar-word">Redo</span>
         </button>
       </span>

@@ -50,14 +50,19 @@ export function FactsDialog({ open, store, projectId, slug, published, onSlug, o
               value={draft.minutes ?? ''}
               onChange={(event) => {
                 const digits = event.currentTarget.value.replace(/\D/gu, '').slice(0, 4);
-                store.edit('minutes', (now) => ({ ...now, minutes: digits === '' || Number(digits) === 0 ? null : Number(digits) }));
+                store.edit('minutes', (now) => ({
+                  ...now,
+                  minutes: digits === '' || Number(digits) === 0 ? null : Number(digits),
+                }));
               }}
             />
           )}
         </Field>
         <HeroChoice store={store} hero={draft.hero} />
         {published ? (
-          <p className="small soft">Address: /projects/{slug}. A published project keeps its address, because readers have links to it.</p>
+          <p className="small soft">
+            Address: /projects/{slug}. A published project keeps its address, because readers have links to it.
+          </p>
         ) : (
           <SlugField key={slug} projectId={projectId} slug={slug} title={draft.title} onSlug={onSlug} />
         )}
@@ -74,17 +79,30 @@ export function FactsDialog({ open, store, projectId, slug, published, onSlug, o
 function HeroChoice({ store, hero }: { readonly store: DeskStore; readonly hero: string | null }) {
   const writeUp = useStore(store.$writeUp);
   const photos = [...new Map(collectUses(writeUp.doc).photos.map((photo) => [photo.upload, photo])).values()];
-  const choices = hero !== null && !photos.some((photo) => photo.upload === hero) ? [{ upload: hero, alt: 'The picture chosen now' }, ...photos] : photos;
+  const choices =
+    hero !== null && !photos.some((photo) => photo.upload === hero)
+      ? [{ upload: hero, alt: 'The picture chosen now' }, ...photos]
+      : photos;
   const choose = (next: string | null) => store.edit(null, (now) => ({ ...now, hero: next }));
   return (
     <fieldset className="field">
       <legend>First picture</legend>
-      {choices.length === 0 ? <p className="hint">Put a photo into the write-up; then it can be chosen here. Until then cards show the folded box.</p> : null}
+      {choices.length === 0 ? (
+        <p className="hint">
+          Put a photo into the write-up; then it can be chosen here. Until then cards show the folded box.
+        </p>
+      ) : null}
       <div className="heroes">
         {choices.map((photo) => (
           <label key={photo.upload} className="hero-choice">
             <input type="radio" name="hero" checked={hero === photo.upload} onChange={() => choose(photo.upload)} />
-            <img src={pictureUrl(photo.upload, 480)} alt={photo.alt || 'A photo without words yet'} width="120" height="80" loading="lazy" />
+            <img
+              src={pictureUrl(photo.upload, 480)}
+              alt={photo.alt || 'A photo without words yet'}
+              width="120"
+              height="80"
+              loading="lazy"
+            />
           </label>
         ))}
         {choices.length > 0 ? (
@@ -98,12 +116,25 @@ function HeroChoice({ store, hero }: { readonly store: DeskStore; readonly hero:
   );
 }
 
-function SlugField({ projectId, slug, title, onSlug }: { readonly projectId: string; readonly slug: string; readonly title: string; readonly onSlug: (slug: string) => void }) {
+function SlugField({
+  projectId,
+  slug,
+  title,
+  onSlug,
+}: {
+  readonly projectId: string;
+  readonly slug: string;
+  readonly title: string;
+  readonly onSlug: (slug: string) => void;
+}) {
   const [typed, setTyped] = useState(slug);
   const [error, setError] = useState<string | undefined>();
   const suggested = slugOf(title);
   const move = async (to: string) => {
-    const answer = await call<{ slug: string }>(`/api/projects/${projectId}/address`, { method: 'PUT', body: { slug: to.trim() } });
+    const answer = await call<{ slug: string }>(`/api/projects/${projectId}/address`, {
+      method: 'PUT',
+      body: { slug: to.trim() },
+    });
     if (!answer.ok) return setError(answer.refusal.errors[0]?.sentence ?? answer.refusal.sentence);
     setError(undefined);
     onSlug(answer.value.slug);
@@ -116,7 +147,16 @@ function SlugField({ projectId, slug, title, onSlug }: { readonly projectId: str
       }}
     >
       <Field label="Address" hint="Stands after /projects/ and is fixed with the first edition." error={error}>
-        {(control) => <input {...control} className="input" value={typed} maxLength={60} spellCheck={false} onChange={(event) => setTyped(event.currentTarget.value)} />}
+        {(control) => (
+          <input
+            {...control}
+            className="input"
+            value={typed}
+            maxLength={60}
+            spellCheck={false}
+            onChange={(event) => setTyped(event.currentTarget.value)}
+          />
+        )}
       </Field>
       <p className="slug-deeds">
         <button type="submit" className="btn small-btn" disabled={typed.trim() === slug}>

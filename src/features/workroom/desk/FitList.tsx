@@ -28,16 +28,37 @@ export function FitList({ work, draft, lit, names }: FitListProps) {
           const fault = faults.find((found) => found.where.startsWith(`fit “${fit.name}”`));
           const figure = figures.get(fit.name);
           const follows = lit !== null && [fit.left, fit.right].some((formula) => usesAny(formula, names, lit.names));
-          const state = fault ? 'bad' : figure === undefined ? 'quiet' : figure.holds ? 'good' : figure.advice ? 'warn' : 'bad';
+          const state = fault
+            ? 'bad'
+            : figure === undefined
+              ? 'quiet'
+              : figure.holds
+                ? 'good'
+                : figure.advice
+                  ? 'warn'
+                  : 'bad';
           return (
-            <li key={fit.name} className={follows ? 'follows' : undefined} data-lit={follows ? '' : undefined} data-place={`fit:${fit.name}`} tabIndex={-1}>
+            <li
+              key={fit.name}
+              className={follows ? 'follows' : undefined}
+              data-lit={follows ? '' : undefined}
+              data-place={`fit:${fit.name}`}
+              tabIndex={-1}
+            >
               <span className={`state ${state}`}>
-                <Icon name={state === 'good' ? 'check' : state === 'quiet' ? 'minus' : 'warning'} label={state === 'good' ? 'Holds' : state === 'quiet' ? 'Not in use' : 'Does not hold'} />
+                <Icon
+                  name={state === 'good' ? 'check' : state === 'quiet' ? 'minus' : 'warning'}
+                  label={state === 'good' ? 'Holds' : state === 'quiet' ? 'Not in use' : 'Does not hold'}
+                />
               </span>
               <span>{fit.name}</span>
-              <em>{fault ? 'does not read' : figure === undefined ? 'not in use' : gapText(figure.gap, draft.sizing)}</em>
+              <em>
+                {fault ? 'does not read' : figure === undefined ? 'not in use' : gapText(figure.gap, draft.sizing)}
+              </em>
               {fault ? <p className="fault-words">{explain(fault)}</p> : null}
-              {figure && !figure.holds && !fault ? <p className={figure.advice ? 'small soft' : 'fault-words'}>{figure.otherwise}</p> : null}
+              {figure && !figure.holds && !fault ? (
+                <p className={figure.advice ? 'small soft' : 'fault-words'}>{figure.otherwise}</p>
+              ) : null}
             </li>
           );
         })}

@@ -31,7 +31,18 @@ export function FoldGrip({ between }: { readonly between: 'measures' | 'pieces' 
     set(width() + by);
   };
   return (
-    <div ref={grip} className="fold-grip" role="separator" aria-orientation="vertical" aria-label={`Width of ${between}`} aria-valuenow={LEAST} aria-valuemin={LEAST} tabIndex={0} onPointerDown={drag} onKeyDown={press}>
+    <div
+      ref={grip}
+      className="fold-grip"
+      role="separator"
+      aria-orientation="vertical"
+      aria-label={`Width of ${between}`}
+      aria-valuenow={LEAST}
+      aria-valuemin={LEAST}
+      tabIndex={0}
+      onPointerDown={drag}
+      onKeyDown={press}
+    >
       <i aria-hidden="true" />
     </div>
   );

@@ -21,13 +21,29 @@ interface Piece {
 }
 
 /** A formula to type in, with what does not read underlined at its place. It grows with its text; Enter leaves the field. */
-export function FormulaField({ label, value, names, lit, faults = [], describedBy, place, onChange, onFocus }: FormulaFieldProps) {
+export function FormulaField({
+  label,
+  value,
+  names,
+  lit,
+  faults = [],
+  describedBy,
+  place,
+  onChange,
+  onFocus,
+}: FormulaFieldProps) {
   const span = faults.find((fault) => fault.span !== undefined)?.span;
   return (
     <div className={faults.length > 0 ? 'formula wrong' : 'formula'}>
       <div className="formula-ink" aria-hidden="true">
         {marked(value, names, lit ?? null, span).map(({ text, mark }, i) =>
-          mark === null ? text : <mark key={i} className={mark === 'bad' ? 'formula-bad' : 'formula-lit'}>{text}</mark>,
+          mark === null ? (
+            text
+          ) : (
+            <mark key={i} className={mark === 'bad' ? 'formula-bad' : 'formula-lit'}>
+              {text}
+            </mark>
+          ),
         )}
         {'\u200b'}
       </div>
@@ -56,7 +72,12 @@ export function FormulaField({ label, value, names, lit, faults = [], describedB
 
 function marked(value: string, names: readonly string[], lit: ReadonlySet<string> | null, bad: Fault['span']): Piece[] {
   const marks: { from: number; to: number; mark: 'lit' | 'bad' }[] = [];
-  if (bad !== undefined) marks.push({ from: Math.min(bad.from, value.length), to: Math.min(Math.max(bad.to, bad.from + 1), value.length), mark: 'bad' });
+  if (bad !== undefined)
+    marks.push({
+      from: Math.min(bad.from, value.length),
+      to: Math.min(Math.max(bad.to, bad.from + 1), value.length),
+      mark: 'bad',
+    });
   if (lit !== null) {
     for (const found of namesIn(value, names)) {
       const covered = bad !== undefined && found.from < bad.to && found.to > bad.from;

@@ -14,7 +14,15 @@ const RANGE_FIELDS: readonly { readonly key: 'usual' | 'from' | 'to'; readonly l
 ];
 
 /** What else a selected measure has: the size shown, usual value and range, and leaving the pattern. */
-export function MeasureDetails({ store, measure, names, figure, lit, sizing, own }: MeasureRowProps & { readonly own: readonly Fault[] }) {
+export function MeasureDetails({
+  store,
+  measure,
+  names,
+  figure,
+  lit,
+  sizing,
+  own,
+}: MeasureRowProps & { readonly own: readonly Fault[] }) {
   const { name, ask } = measure;
   return (
     <div className="measure-details">
@@ -23,11 +31,19 @@ export function MeasureDetails({ store, measure, names, figure, lit, sizing, own
       <div className="measure-deeds">
         {ask ? (
           <label className="check tight">
-            <input type="checkbox" checked={ask.finer ?? false} onChange={() => store.editPattern(null, (pattern) => changeAsk(pattern, name, { finer: !ask.finer }))} />
+            <input
+              type="checkbox"
+              checked={ask.finer ?? false}
+              onChange={() => store.editPattern(null, (pattern) => changeAsk(pattern, name, { finer: !ask.finer }))}
+            />
             <span>Among the finer points</span>
           </label>
         ) : null}
-        <button type="button" className="text-button small" onClick={() => store.editPattern(null, (pattern) => turnOver(pattern, name))}>
+        <button
+          type="button"
+          className="text-button small"
+          onClick={() => store.editPattern(null, (pattern) => turnOver(pattern, name))}
+        >
           {ask ? 'Work it out by a formula' : 'Ask the reader instead'}
         </button>
         <TakeOut {...{ store, name }} />
@@ -36,7 +52,21 @@ export function MeasureDetails({ store, measure, names, figure, lit, sizing, own
   );
 }
 
-function AskFields({ store, name, ask, names, own, lit }: { readonly store: MeasureRowProps['store']; readonly name: string; readonly ask: Ask; readonly names: readonly string[]; readonly own: readonly Fault[]; readonly lit: ReadonlySet<string> | null }) {
+function AskFields({
+  store,
+  name,
+  ask,
+  names,
+  own,
+  lit,
+}: {
+  readonly store: MeasureRowProps['store'];
+  readonly name: string;
+  readonly ask: Ask;
+  readonly names: readonly string[];
+  readonly own: readonly Fault[];
+  readonly lit: ReadonlySet<string> | null;
+}) {
   return (
     <>
       <div className="ask-fields">
@@ -49,7 +79,9 @@ function AskFields({ store, name, ask, names, own, lit }: { readonly store: Meas
               names={names}
               lit={lit}
               faults={inField(own, name, key)}
-              onChange={(value) => store.editPattern(`${name}.${key}`, (pattern) => changeAsk(pattern, name, { [key]: value }))}
+              onChange={(value) =>
+                store.editPattern(`${name}.${key}`, (pattern) => changeAsk(pattern, name, { [key]: value }))
+              }
             />
           </div>
         ))}
@@ -57,7 +89,12 @@ function AskFields({ store, name, ask, names, own, lit }: { readonly store: Meas
       {own.slice(0, 1).map((fault) => {
         const key = RANGE_FIELDS.find((field) => inField([fault], name, field.key).length > 0)?.key ?? 'usual';
         return (
-          <FaultWords key={fault.where} faults={[fault]} value={ask[key]} onCure={(value) => store.editPattern(null, (pattern) => changeAsk(pattern, name, { [key]: value }))} />
+          <FaultWords
+            key={fault.where}
+            faults={[fault]}
+            value={ask[key]}
+            onCure={(value) => store.editPattern(null, (pattern) => changeAsk(pattern, name, { [key]: value }))}
+          />
         );
       })}
     </>

@@ -31,15 +31,26 @@ export function MeasureRow(props: MeasureRowProps) {
   const own = faults.filter((fault) => fieldOfFault(fault, name) !== null);
   const inFormula = measure.ask ? [] : own;
   const usualRounding: Rounding = (measure.kind ?? 'length') === 'length' ? 'nearest' : 'exact';
-  const setFormula = (formula: string) => store.editPattern(`${name}.formula`, (pattern) => changeMeasure(pattern, name, { formula }));
-  const className = ['measure-row', selected ? 'selected' : '', follows ? 'follows' : '', own.length > 0 ? 'wrong' : ''].filter(Boolean).join(' ');
-  const meanwhile = figure ? `Until it reads, pieces keep the last good ${cutText(figure, sizing)}.` : 'Until it reads, no piece can be drawn.';
+  const setFormula = (formula: string) =>
+    store.editPattern(`${name}.formula`, (pattern) => changeMeasure(pattern, name, { formula }));
+  const className = ['measure-row', selected ? 'selected' : '', follows ? 'follows' : '', own.length > 0 ? 'wrong' : '']
+    .filter(Boolean)
+    .join(' ');
+  const meanwhile = figure
+    ? `Until it reads, pieces keep the last good ${cutText(figure, sizing)}.`
+    : 'Until it reads, no piece can be drawn.';
 
   return (
     <>
       <tr className={className} data-lit={follows ? '' : undefined} data-measure={name}>
         <th scope="row">
-          <button type="button" className="measure-name" aria-pressed={selected} data-place={`name:${name}`} onClick={() => store.select(selected ? null : name)}>
+          <button
+            type="button"
+            className="measure-name"
+            aria-pressed={selected}
+            data-place={`name:${name}`}
+            onClick={() => store.select(selected ? null : name)}
+          >
             {name}
           </button>
         </th>
@@ -96,7 +107,13 @@ export function MeasureRow(props: MeasureRowProps) {
         <tr className="row-fault">
           <td />
           <td colSpan={4}>
-            <FaultWords id={errorId} faults={inFormula} value={measure.formula ?? ''} meanwhile={meanwhile} onCure={setFormula} />
+            <FaultWords
+              id={errorId}
+              faults={inFormula}
+              value={measure.formula ?? ''}
+              meanwhile={meanwhile}
+              onCure={setFormula}
+            />
           </td>
         </tr>
       ) : null}

@@ -24,12 +24,24 @@ export function MeasuresColumn({ store }: { readonly store: DeskStore }) {
   const follow = lit === null ? '' : lit.followers.length === 1 ? '1 follows it' : `${lit.followers.length} follow it`;
   const rows = (measures: readonly MeasureDef[]) =>
     measures.map((measure) => (
-      <MeasureRow key={measure.name} store={store} measure={measure} names={names} faults={faults} figure={figures.get(measure.name)} lit={lit} stale={work.stale} sizing={draft.sizing} />
+      <MeasureRow
+        key={measure.name}
+        store={store}
+        measure={measure}
+        names={names}
+        faults={faults}
+        figure={figures.get(measure.name)}
+        lit={lit}
+        stale={work.stale}
+        sizing={draft.sizing}
+      />
     ));
   const finer = draft.pattern.measures.filter((measure) => measure.ask?.finer);
   const [finerOpen, setFinerOpen] = useState(false);
   // What is selected or does not read is never folded away.
-  const needsFiner = finer.some((measure) => lit?.selected === measure.name || faults.some((fault) => fieldOfFault(fault, measure.name) !== null));
+  const needsFiner = finer.some(
+    (measure) => lit?.selected === measure.name || faults.some((fault) => fieldOfFault(fault, measure.name) !== null),
+  );
   const finerShown = finerOpen || needsFiner;
 
   const inShort = (measure: MeasureDef) => {
@@ -47,8 +59,12 @@ export function MeasuresColumn({ store }: { readonly store: DeskStore }) {
             <tr>
               <th scope="col">Name</th>
               <th scope="col">Question or formula</th>
-              <th scope="col" className="figures">Exact</th>
-              <th scope="col" className="figures">As cut</th>
+              <th scope="col" className="figures">
+                Exact
+              </th>
+              <th scope="col" className="figures">
+                As cut
+              </th>
               <th scope="col">Rounds</th>
             </tr>
           </thead>
@@ -63,11 +79,7 @@ export function MeasuresColumn({ store }: { readonly store: DeskStore }) {
                   <button type="button" aria-expanded={finerShown} onClick={() => setFinerOpen(!finerShown)}>
                     <Icon name={finerShown ? 'chevron-down' : 'chevron-right'} />
                     <b>Finer points</b>
-                    <span>
-                      {finerShown
-                        ? 'asked, but set apart'
-                        : finer.map(inShort).join(' · ')}
-                    </span>
+                    <span>{finerShown ? 'asked, but set apart' : finer.map(inShort).join(' · ')}</span>
                   </button>
                 </td>
               </tr>

@@ -25,33 +25,71 @@ export function PiecesColumn({ store, piece, onPiece }: PiecesColumnProps) {
   const { pieces } = draft.pattern;
   const chosen = pieces.find((known) => known.name === piece) ?? pieces[0];
   const figures = new Map(live?.figures.pieces.map((figure) => [figure.name, figure]));
-  const faults = compiled.ok ? [] : compiled.faults.filter((fault) => fault.where.startsWith(`piece “${chosen?.name ?? ''}”`));
+  const faults = compiled.ok
+    ? []
+    : compiled.faults.filter((fault) => fault.where.startsWith(`piece “${chosen?.name ?? ''}”`));
   const litPieces = pieces.filter((known) => lit?.pieces.includes(known.name));
 
   const step = (by: 1 | -1) => {
     if (litPieces.length === 0) return;
     const at = litPieces.findIndex((known) => known.name === chosen?.name);
-    const next = litPieces[(at === -1 ? (by === 1 ? 0 : litPieces.length - 1) : at + by + litPieces.length) % litPieces.length];
+    const next =
+      litPieces[(at === -1 ? (by === 1 ? 0 : litPieces.length - 1) : at + by + litPieces.length) % litPieces.length];
     if (next) onPiece(next.name);
   };
 
   return (
     <section className="desk-column" data-column="pieces" aria-label="Pieces" tabIndex={-1}>
-      <ColumnHead title="Pieces" shortcut="Alt 2" lit={lit === null ? null : `${litPieces.length} of ${pieces.length} lit`} onStep={step} />
+      <ColumnHead
+        title="Pieces"
+        shortcut="Alt 2"
+        lit={lit === null ? null : `${litPieces.length} of ${pieces.length} lit`}
+        onStep={step}
+      />
       <div className="piece-tabs" role="tablist" aria-label="Pieces">
         {pieces.map((known) => (
-          <PieceTab key={known.name} name={known.name} figure={figures.get(known.name)} count={figures.get(known.name)?.count} lit={lit?.pieces.includes(known.name) ?? false} selected={known.name === chosen?.name} onSelect={() => onPiece(known.name)} sizing={draft.sizing} />
+          <PieceTab
+            key={known.name}
+            name={known.name}
+            figure={figures.get(known.name)}
+            count={figures.get(known.name)?.count}
+            lit={lit?.pieces.includes(known.name) ?? false}
+            selected={known.name === chosen?.name}
+            onSelect={() => onPiece(known.name)}
+            sizing={draft.sizing}
+          />
         ))}
       </div>
-      <div className="desk-scroll" data-stale={stale ? '' : undefined} role="tabpanel" aria-label={chosen?.name ?? 'No piece'}>
+      <div
+        className="desk-scroll"
+        data-stale={stale ? '' : undefined}
+        role="tabpanel"
+        aria-label={chosen?.name ?? 'No piece'}
+      >
         {chosen === undefined ? <p className="desk-empty">This pattern has no pieces.</p> : null}
         {stale ? <p className="stale-words">A formula does not read. These are the last good figures.</p> : null}
-        {live === null ? <p className="desk-empty">Nothing can be drawn until every formula reads. What is wrong stands in the measures.</p> : null}
+        {live === null ? (
+          <p className="desk-empty">
+            Nothing can be drawn until every formula reads. What is wrong stands in the measures.
+          </p>
+        ) : null}
         {faults.map((fault) => (
-          <p key={fault.where + fault.code} className="fault-words piece-fault">{explain(fault)}</p>
+          <p key={fault.where + fault.code} className="fault-words piece-fault">
+            {explain(fault)}
+          </p>
         ))}
-        {chosen && live ? <PieceView figure={figures.get(chosen.name)} name={chosen.name} live={live} isLit={(formula) => lit !== null && usesAny(formula, namesOf(draft.pattern), lit.names)} pattern={draft.pattern} /> : null}
-        {chosen ? <TrackFields store={store} piece={chosen} pattern={draft.pattern} lit={lit} faults={faults} /> : null}
+        {chosen && live ? (
+          <PieceView
+            figure={figures.get(chosen.name)}
+            name={chosen.name}
+            live={live}
+            isLit={(formula) => lit !== null && usesAny(formula, namesOf(draft.pattern), lit.names)}
+            pattern={draft.pattern}
+          />
+        ) : null}
+        {chosen?.builder === 'grid' ? (
+          <TrackFields store={store} piece={chosen} pattern={draft.pattern} lit={lit} faults={faults} />
+        ) : null}
         {live ? <WholeBox live={live} figure={chosen ? figures.get(chosen.name) : undefined} /> : null}
       </div>
     </section>
@@ -69,9 +107,26 @@ interface PieceTabProps {
 }
 function PieceTab({ name, figure, count, lit, selected, onSelect, sizing }: PieceTabProps) {
   return (
-    <button type="button" role="tab" aria-selected={selected} className={lit ? 'piece-tab lit' : 'piece-tab'} data-place={`piece:${name}`} onClick={onSelect}>
+    <button
+      type="button"
+      role="tab"
+      aria-selected={selected}
+      className={lit ? 'piece-tab lit' : 'piece-tab'}
+      data-place={`piece:${name}`}
+      onClick={onSelect}
+    >
       <span className="thumb" aria-hidden="true">
-        {figure ? <DrawingView drawing={drawPiece(figure, { ...THUMB, units: sizing.units, grid: sizing.grid, labels: false, dims: false })} /> : null}
+        {figure ? (
+          <DrawingView
+            drawing={drawPiece(figure, {
+              ...THUMB,
+              units: sizing.units,
+              grid: sizing.grid,
+              labels: false,
+              dims: false,
+            })}
+          />
+        ) : null}
       </span>
       <span>
         {name}
@@ -92,7 +147,9 @@ interface PieceViewProps {
 function PieceView({ figure, name, live, isLit, pattern }: PieceViewProps) {
   const { units, grid } = live.figures.sizing;
   if (figure === undefined) {
-    const problem = live.figures.problems.find((found) => found.code === 'piece fails' || found.code === 'cannot be worked out');
+    const problem = live.figures.problems.find(
+      (found) => found.code === 'piece fails' || found.code === 'cannot be worked out',
+    );
     return <p className="desk-empty">{problem?.sentence ?? `${name} is not cut with these choices.`}</p>;
   }
   const piece = pattern.pieces.find((known) => known.name === name);
@@ -102,10 +159,14 @@ function PieceView({ figure, name, live, isLit, pattern }: PieceViewProps) {
       <p className="piece-facts">
         <b>{name}</b>
         <span className="soft">
-          cut {figure.count} · {figure.stock} · {show(figure.across, { units, grid, bare: true }).typeset} × {show(figure.along, { units, grid }).typeset}
+          cut {figure.count} · {figure.stock} · {show(figure.across, { units, grid, bare: true }).typeset} ×{' '}
+          {show(figure.along, { units, grid }).typeset}
         </span>
       </p>
-      <DrawingView drawing={drawPiece(figure, { width: 400, tallest: 250, units, grid })} isLit={(of) => sizes?.get(of)?.some(isLit) ?? false} />
+      <DrawingView
+        drawing={drawPiece(figure, { width: 400, tallest: 250, units, grid })}
+        isLit={(of) => sizes?.get(of)?.some(isLit) ?? false}
+      />
     </div>
   );
 }
@@ -121,7 +182,9 @@ function WholeBox({ live, figure }: { readonly live: LiveFigures; readonly figur
           {figures.finished.inside.map((size, i) => (
             <span key={size.name}>
               {i > 0 ? ' × ' : ''}
-              <span className="measure">{show(size.mm, { units, grid, bare: i < figures.finished.inside.length - 1 }).typeset}</span>
+              <span className="measure">
+                {show(size.mm, { units, grid, bare: i < figures.finished.inside.length - 1 }).typeset}
+              </span>
             </span>
           ))}
         </p>
@@ -132,7 +195,15 @@ function WholeBox({ live, figure }: { readonly live: LiveFigures; readonly figur
         {figure === undefined ? <p className="soft">This piece is not cut with these choices.</p> : null}
         {figure?.instructions.map((sentence, i) => (
           <p key={i}>
-            {sayParts(sentence, { units, grid }).map((part, j) => (part.figure ? <span key={j} className="measure">{part.typeset}</span> : part.text))}
+            {sayParts(sentence, { units, grid }).map((part, j) =>
+              part.figure ? (
+                <span key={j} className="measure">
+                  {part.typeset}
+                </span>
+              ) : (
+                part.text
+              ),
+            )}
           </p>
         ))}
       </div>

@@ -32,19 +32,39 @@ export function ProofStrip({ items, open, onOpen, onGo, cureOf }: ProofStripProp
             if (event.key === 'Escape') onOpen(false);
           }}
         >
-          <ProofGroup title="Keeps it from being published" tone="bad" items={stops} empty="Nothing keeps this from being published." onGo={onGo} cureOf={cureOf} />
-          <ProofGroup title="Worth a look" tone="warn" items={advice} empty="Nothing else to look at." onGo={onGo} cureOf={cureOf} />
+          <ProofGroup
+            title="Keeps it from being published"
+            tone="bad"
+            items={stops}
+            empty="Nothing keeps this from being published."
+            onGo={onGo}
+            cureOf={cureOf}
+          />
+          <ProofGroup
+            title="Worth a look"
+            tone="warn"
+            items={advice}
+            empty="Nothing else to look at."
+            onGo={onGo}
+            cureOf={cureOf}
+          />
         </div>
       ) : null}
       <div className="proof-row">
         <p className={stops.length > 0 ? 'proof-count bad' : 'proof-count good'}>
           <b>{stops.length}</b>
           <span>
-            {stops.length === 0 ? 'nothing in the way of publishing' : stops.length === 1 ? 'thing before you can publish' : 'things before you can publish'}
+            {stops.length === 0
+              ? 'nothing in the way of publishing'
+              : stops.length === 1
+                ? 'thing before you can publish'
+                : 'things before you can publish'}
           </span>
         </p>
         <ul className="proof-first">
-          {open ? null : stops.slice(0, SHOWN).map((item, i) => <ProofLine key={i} item={item} onGo={onGo} cure={cureOf(item)} />)}
+          {open
+            ? null
+            : stops.slice(0, SHOWN).map((item, i) => <ProofLine key={i} item={item} onGo={onGo} cure={cureOf(item)} />)}
         </ul>
         <p className="proof-more">
           <button type="button" className="text-button small" aria-expanded={open} onClick={() => onOpen(!open)}>

@@ -29,7 +29,11 @@ export function PublishDialog({ open, projectId, edition, advice, flush, onClose
     const saved = await flush();
     if (saved.status.kind !== 'saved') {
       setBusy(false);
-      return setRefusal({ sentence: 'It is not saved yet, so it cannot be published. Look at the top of the desk for what is in the way.', code: 'unsaved', errors: [] });
+      return setRefusal({
+        sentence: 'It is not saved yet, so it cannot be published. Look at the top of the desk for what is in the way.',
+        code: 'unsaved',
+        errors: [],
+      });
     }
     const answer = await call<{ n: number; slug: string }>(`/api/projects/${projectId}/publish`, {
       method: 'POST',
@@ -50,7 +54,10 @@ export function PublishDialog({ open, projectId, edition, advice, flush, onClose
           void publish();
         }}
       >
-        <p>An edition is kept for ever as it is now: pieces, text and pictures. What you change later reaches readers with the next one.</p>
+        <p>
+          An edition is kept for ever as it is now: pieces, text and pictures. What you change later reaches readers
+          with the next one.
+        </p>
         {advice.length === 0 ? null : (
           <div className="note">
             <b>Worth a look first.</b>
@@ -62,8 +69,21 @@ export function PublishDialog({ open, projectId, edition, advice, flush, onClose
           </div>
         )}
         {edition > 1 ? (
-          <Field label="Correction note" hint="What changed since the last edition, and what someone who already cut should do.">
-            {(control) => <textarea {...control} className="input" rows={4} maxLength={2000} required value={note} onChange={(event) => setNote(event.currentTarget.value)} />}
+          <Field
+            label="Correction note"
+            hint="What changed since the last edition, and what someone who already cut should do."
+          >
+            {(control) => (
+              <textarea
+                {...control}
+                className="input"
+                rows={4}
+                maxLength={2000}
+                required
+                value={note}
+                onChange={(event) => setNote(event.currentTarget.value)}
+              />
+            )}
           </Field>
         ) : null}
         {refusal === null ? null : (

@@ -29,7 +29,9 @@ export function SaveWords({ state }: { readonly state: SaveState }) {
       return (
         <span className="save-words bad" role="alert">
           <Icon name="warning" />
-          <span>Not saved: {status.sentence} Trying again in {Math.max(1, Math.ceil((status.retryAt - now) / 1000))} s.</span>
+          <span>
+            Not saved: {status.sentence} Trying again in {Math.max(1, Math.ceil((status.retryAt - now) / 1000))} s.
+          </span>
         </span>
       );
     case 'refused':

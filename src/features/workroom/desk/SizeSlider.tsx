@@ -21,7 +21,8 @@ export function SizeSlider({ store, figure, sizing }: SizeSliderProps) {
     setFault(null);
   }, [shown]);
 
-  const set = (value: number, field: string | null) => store.editSizing(field, (now) => ({ ...now, values: { ...now.values, [name]: value } }));
+  const set = (value: number, field: string | null) =>
+    store.editSizing(field, (now) => ({ ...now, values: { ...now.values, [name]: value } }));
   const commit = () => {
     if (typed.trim() === shown) return;
     const read = readValue(figure, typed, { units: figure.unit ?? sizing.units });
@@ -61,7 +62,9 @@ export function SizeSlider({ store, figure, sizing }: SizeSliderProps) {
             value={figure.exact}
             onChange={(event) => set(onStep(Number(event.currentTarget.value), { step, from, to }), `${name}.slider`)}
             onKeyDown={(event) => {
-              const steps = { ArrowLeft: -1, ArrowDown: -1, ArrowRight: 1, ArrowUp: 1, PageDown: -8, PageUp: 8 }[event.key];
+              const steps = { ArrowLeft: -1, ArrowDown: -1, ArrowRight: 1, ArrowUp: 1, PageDown: -8, PageUp: 8 }[
+                event.key
+              ];
               if (steps === undefined) return;
               event.preventDefault();
               set(onStep(figure.exact + steps * step, { step, from, to }), `${name}.slider`);
@@ -71,17 +74,27 @@ export function SizeSlider({ store, figure, sizing }: SizeSliderProps) {
         </div>
       ) : null}
       {figure.set ? (
-        <button type="button" className="text-button small" onClick={() => store.editSizing(null, (now) => ({ ...now, values: without(now.values, name) }))}>
+        <button
+          type="button"
+          className="text-button small"
+          onClick={() => store.editSizing(null, (now) => ({ ...now, values: without(now.values, name) }))}
+        >
           Back to usual
         </button>
       ) : null}
-      {fault === null ? null : <p className="fault-words" role="alert">{fault}</p>}
+      {fault === null ? null : (
+        <p className="fault-words" role="alert">
+          {fault}
+        </p>
+      )}
     </div>
   );
 }
 
-const onStep = (value: number, { step, from, to }: { readonly step: number; readonly from: number; readonly to: number }): number =>
-  Math.min(to, Math.max(from, Number((Math.round(value / step) * step).toFixed(6))));
+const onStep = (
+  value: number,
+  { step, from, to }: { readonly step: number; readonly from: number; readonly to: number },
+): number => Math.min(to, Math.max(from, Number((Math.round(value / step) * step).toFixed(6))));
 
 const without = (values: Readonly<Record<string, number>>, name: string): Record<string, number> =>
   Object.fromEntries(Object.entries(values).filter(([key]) => key !== name));

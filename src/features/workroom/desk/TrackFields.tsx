@@ -1,4 +1,4 @@
-import type { Fault, Pattern, PieceDef } from '@/engine';
+import type { Fault, Pattern, GridPieceDef } from '@/engine';
 import { namesOf } from '@/features/projects/formula-names';
 import { changeTrack } from '@/features/projects/pattern-edits';
 import { usesAny, type Lit } from '@/features/projects/followers';
@@ -9,7 +9,7 @@ import { FormulaField } from './FormulaField';
 
 export interface TrackFieldsProps {
   readonly store: DeskStore;
-  readonly piece: PieceDef;
+  readonly piece: GridPieceDef;
   readonly pattern: Pattern;
   readonly lit: Lit | null;
   readonly faults: readonly Fault[];
@@ -29,13 +29,25 @@ export function TrackFields({ store, piece, pattern, lit, faults }: TrackFieldsP
           <h3>{heading}</h3>
           <ul>
             {piece[axis].map((track, i) => {
-              const own = faults.filter((fault) => isInTrack(fault, { piece: piece.name, axis: one, name: track.name }));
+              const own = faults.filter((fault) =>
+                isInTrack(fault, { piece: piece.name, axis: one, name: track.name }),
+              );
               const follows = lit !== null && usesAny(track.size, names, lit.names);
-              const set = (size: string) => store.editPattern(`${piece.name}.${axis}.${i}`, (now) => changeTrack(now, { piece: piece.name, axis, index: i }, { size }));
+              const set = (size: string) =>
+                store.editPattern(`${piece.name}.${axis}.${i}`, (now) =>
+                  changeTrack(now, { piece: piece.name, axis, index: i }, { size }),
+                );
               return (
                 <li key={i} className={follows ? 'follows' : undefined} data-lit={follows ? '' : undefined}>
                   <span className="track-name">{track.name}</span>
-                  <FormulaField label={`Size of ${one} ${track.name}`} value={track.size} names={names} lit={lit?.names ?? null} faults={own} onChange={set} />
+                  <FormulaField
+                    label={`Size of ${one} ${track.name}`}
+                    value={track.size}
+                    names={names}
+                    lit={lit?.names ?? null}
+                    faults={own}
+                    onChange={set}
+                  />
                   {own.length > 0 ? <FaultWords faults={own} value={track.size} onCure={set} /> : null}
                 </li>
               );

@@ -13,10 +13,18 @@ export function WriteUpColumn({ store, projectId }: { readonly store: DeskStore;
   const draft = useStore(store.$draft);
   const generation = useStore(store.$generation);
   const names = namesOf(draft.pattern);
-  const places = lit === null ? 0 : collectUses(writeUp.doc).formulas.filter(({ formula }) => usesAny(formula, names, lit.names)).length;
+  const places =
+    lit === null
+      ? 0
+      : collectUses(writeUp.doc).formulas.filter(({ formula }) => usesAny(formula, names, lit.names)).length;
   return (
     <section className="desk-column" data-column="write-up" aria-label="Write-up" tabIndex={-1}>
-      <ColumnHead title="Write-up" shortcut="Alt 3" lit={lit === null ? null : places === 1 ? '1 place lit' : `${places} places lit`} places=".lit" />
+      <ColumnHead
+        title="Write-up"
+        shortcut="Alt 3"
+        lit={lit === null ? null : places === 1 ? '1 place lit' : `${places} places lit`}
+        places=".lit"
+      />
       <WriteUpEditor
         key={generation}
         initial={store.$writeUp.get()}

@@ -45,7 +45,14 @@ export interface DeskStore {
   select(name: string | null): void;
 }
 
-const draftOf = ({ title, summary, minutes, hero, pattern, sizing }: ProjectState): Draft => ({ title, summary, minutes, hero, pattern, sizing });
+const draftOf = ({ title, summary, minutes, hero, pattern, sizing }: ProjectState): Draft => ({
+  title,
+  summary,
+  minutes,
+  hero,
+  pattern,
+  sizing,
+});
 
 /** The one place where the desk's columns meet: what is typed, what follows from it, and what is selected. */
 export function createDeskStore(project: OpenProject): DeskStore {
@@ -64,12 +71,24 @@ export function createDeskStore(project: OpenProject): DeskStore {
   const $proof = computed([$state, $work], (state, now) =>
     proofList(state, { compiled: now.compiled, figures: now.stale ? undefined : now.live?.figures }),
   );
-  const $lit = computed([$selected, $draft], (selected, draft) => (selected === null ? null : litBy(draft.pattern, selected)));
+  const $lit = computed([$selected, $draft], (selected, draft) =>
+    selected === null ? null : litBy(draft.pattern, selected),
+  );
 
   const $litNames = computed($lit, (lit): readonly string[] => (lit === null ? [] : [lit.selected, ...lit.followers]));
 
   const store: DeskStore = {
-    $history, $draft, $writeUp, $state, $work, $live, $proof, $selected, $lit, $litNames, $generation,
+    $history,
+    $draft,
+    $writeUp,
+    $state,
+    $work,
+    $live,
+    $proof,
+    $selected,
+    $lit,
+    $litNames,
+    $generation,
     edit: (field, change) => $history.set(edit($history.get(), change($history.get().present), field)),
     editPattern: (field, change) => store.edit(field, (draft) => ({ ...draft, pattern: change(draft.pattern) })),
     editSizing: (field, change) => store.edit(field, (draft) => ({ ...draft, sizing: change(draft.sizing) })),

@@ -21,7 +21,8 @@ export function cutText(figure: MeasureFigure, { units, grid }: Showing): string
 }
 
 /** Text to type over: "2 1/4 in". */
-export const typedText = (value: number, kind: KindName, { units, grid }: Showing, unit?: Unit): string => showValue(value, kind, { units, grid, unit }).text;
+export const typedText = (value: number, kind: KindName, { units, grid }: Showing, unit?: Unit): string =>
+  showValue(value, kind, { units, grid, unit }).text;
 
 /** "3/16 in spare", "1/16 in missing", "exact". */
 export function gapText(gap: number | null, { units, grid }: Showing): string {

@@ -15,7 +15,12 @@ const UNREACHABLE = 'The server cannot be reached. What you typed is kept on thi
 /** A browser takes at most 64 kB with a page that is going away. */
 const LEAVING_BYTES = 60_000;
 
-export async function sendState(id: string, state: ProjectState, revision: number, { leaving, keepOther = false }: { readonly leaving: boolean; readonly keepOther?: boolean }): Promise<SaveAnswer> {
+export async function sendState(
+  id: string,
+  state: ProjectState,
+  revision: number,
+  { leaving, keepOther = false }: { readonly leaving: boolean; readonly keepOther?: boolean },
+): Promise<SaveAnswer> {
   const body = JSON.stringify(state);
   let response: Response;
   try {
@@ -31,18 +36,28 @@ export async function sendState(id: string, state: ProjectState, revision: numbe
   const now = revisionIn(response.headers.get('etag'));
   if (response.ok && now !== null) {
     const saved: unknown = await response.json();
-    const updatedAt = typeof saved === 'object' && saved !== null && 'updatedAt' in saved ? Number(saved.updatedAt) : Date.now();
+    const updatedAt =
+      typeof saved === 'object' && saved !== null && 'updatedAt' in saved ? Number(saved.updatedAt) : Date.now();
     return { kind: 'saved', revision: now, updatedAt };
   }
   if (response.status === 412 && now !== null) {
-    return { kind: 'changed', revision: now, updatedAt: Date.parse(response.headers.get('last-modified') ?? '') || Date.now() };
+    return {
+      kind: 'changed',
+      revision: now,
+      updatedAt: Date.parse(response.headers.get('last-modified') ?? '') || Date.now(),
+    };
   }
   const { sentence } = await refusalIn(response);
-  return response.status >= 500 || response.status === 401 || response.status === 429 ? { kind: 'unreachable', sentence } : { kind: 'refused', sentence };
+  return response.status >= 500 || response.status === 401 || response.status === 429
+    ? { kind: 'unreachable', sentence }
+    : { kind: 'refused', sentence };
 }
 
 /** Any other call of the API: its JSON, or what it refused and why. */
-export async function call<T>(path: string, { method = 'GET', body }: { readonly method?: 'GET' | 'POST' | 'PUT' | 'DELETE'; readonly body?: unknown } = {}): Promise<Answer<T>> {
+export async function call<T>(
+  path: string,
+  { method = 'GET', body }: { readonly method?: 'GET' | 'POST' | 'PUT' | 'DELETE'; readonly body?: unknown } = {},
+): Promise<Answer<T>> {
   try {
     const response = await fetch(path, {
       method,
@@ -58,10 +73,23 @@ export async function call<T>(path: string, { method = 'GET', body }: { readonly
 export const fetchProject = (id: string): Promise<Answer<OpenProject>> => call(`/api/projects/${id}`);
 
 async function refusalIn(response: Response): Promise<Refusal> {
-  const fallback = { sentence: `The server answered ${response.status}. Try again in a moment.`, code: 'unknown', errors: [] };
+  const fallback = {
+    sentence: `The server answered ${response.status}. Try again in a moment.`,
+    code: 'unknown',
+    errors: [],
+  };
   try {
-    const said = (await response.json()) as { detail?: string; title?: string; code?: string; errors?: Refusal['errors'] };
-    return { sentence: said.detail ?? said.title ?? fallback.sentence, code: said.code ?? 'unknown', errors: said.errors ?? [] };
+    const said = (await response.json()) as {
+      detail?: string;
+      title?: string;
+      code?: string;
+      errors?: Refusal['errors'];
+    };
+    return {
+      sentence: said.detail ?? said.title ?? fallback.sentence,
+      code: said.code ?? 'unknown',
+      errors: said.errors ?? [],
+    };
   } catch {
     return fallback;
   }

@@ -102,14 +102,20 @@ export function useSaving(store: DeskStore, project: OpenProject): Saving {
       if (answer.kind === 'saved') {
         saver.goOn(answer);
         if (store.$state.get() !== mine) saver.changed(store.$state.get());
-        setNotice({ words: `Yours is revision ${answer.revision} now. The other is in the workroom as a draft of its own, “(from the other tab)”.`, link: { href: '/workroom', words: 'Open the workroom' } });
+        setNotice({
+          words: `Yours is revision ${answer.revision} now. The other is in the workroom as a draft of its own, “(from the other tab)”.`,
+          link: { href: '/workroom', words: 'Open the workroom' },
+        });
       } else if (answer.kind === 'changed') saver.conflict(answer);
       else setNotice({ words: answer.sentence });
     },
     async takeOther() {
       const saver = autosave.current;
       if (saver === null) return;
-      const copy = await call<{ id: string; title: string }>(`/api/projects/${project.id}/duplicate`, { method: 'POST', body: { state: store.$state.get() } });
+      const copy = await call<{ id: string; title: string }>(`/api/projects/${project.id}/duplicate`, {
+        method: 'POST',
+        body: { state: store.$state.get() },
+      });
       if (!copy.ok) return setNotice({ words: copy.refusal.sentence });
       const other = await fetchProject(project.id);
       if (!other.ok) return setNotice({ words: other.refusal.sentence });
@@ -117,7 +123,10 @@ export function useSaving(store: DeskStore, project: OpenProject): Saving {
       store.replace(other.value.state);
       quiet.current = false;
       saver.goOn(other.value);
-      setNotice({ words: `The other is shown now, revision ${other.value.revision}. Yours is kept as the draft “${copy.value.title}”.`, link: { href: `/workroom/${copy.value.id}`, words: 'Open it' } });
+      setNotice({
+        words: `The other is shown now, revision ${other.value.revision}. Yours is kept as the draft “${copy.value.title}”.`,
+        link: { href: `/workroom/${copy.value.id}`, words: 'Open it' },
+      });
     },
   };
 }

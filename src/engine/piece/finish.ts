@@ -1,0 +1,74 @@
+import { roundTo, snap } from '../measure';
+import { assemble, boundsOf, selfCrossing, type Joint, type LoosePanel } from '../net';
+import type { Curve, Loop, Net, Point } from '../types';
+
+/** A net, or the reason why these sizes make nonsense: the end of "Floor: …". */
+export type Built = { readonly ok: true; readonly net: Net } | { readonly ok: false; readonly reason: string };
+export const nonsense = (reason: string): Built => ({ ok: false, reason });
+
+export interface LoosePiece {
+  readonly panels: readonly LoosePanel[];
+  readonly jointOf: (a: string, b: string) => Joint;
+  readonly holes?: readonly Loop[];
+  readonly creases?: Net['creases'];
+  readonly edges?: Net['edges'];
+  /** Given by a grid; others take the smallest upright rectangle, rounded up to whole steps. */
+  readonly blank?: Pick<Net, 'away' | 'across' | 'along' | 'columns' | 'rows'>;
+  readonly step: number;
+}
+
+/** Joins the panels of a piece and checks the whole: one part, closed, not crossing itself. */
+export function finishNet(piece: LoosePiece): Built {
+  const assembled = assemble(piece.panels, piece.jointOf);
+  if (assembled.outline.length === 0) return nonsense('nothing is left of it');
+  if (assembled.parts > 1) return nonsense(`it falls apart into ${assembled.parts} parts`);
+  if (selfCrossing(assembled.outline)) return nonsense('its outline crosses itself');
+  const net: Net = {
+    outline: assembled.outline,
+    holes: [...assembled.holes, ...(piece.holes ?? [])],
+    panels: piece.panels,
+    folds: assembled.folds,
+    creases: piece.creases ?? [],
+    joins: assembled.joins,
+    slits: assembled.slits,
+    away: [],
+    across: 0,
+    along: 0,
+    edges: piece.edges ?? {},
+    columns: [],
+    rows: [],
+  };
+  return { ok: true, net: piece.blank ? { ...net, ...piece.blank } : onBlank(net, piece.step) };
+}
+
+/** Moves a net into the smallest blank of whole grid steps that holds it, in the middle of what is over. */
+function onBlank(net: Net, step: number): Net {
+  const box = boundsOf(net.outline);
+  const size = (mm: number) => (step > 0 ? roundTo(mm, step, 'up') : snap(mm));
+  const [across, along] = [size(box.right - box.left), size(box.bottom - box.top)];
+  const by = { x: (across - (box.right - box.left)) / 2 - box.left, y: (along - (box.bottom - box.top)) / 2 - box.top };
+  const point = (at: Point): Point => ({ x: at.x + by.x, y: at.y + by.y });
+  const curve = <T extends Curve>(one: T): T =>
+    one.type === 'line'
+      ? { ...one, from: point(one.from), to: point(one.to) }
+      : { ...one, from: point(one.from), to: point(one.to), centre: point(one.centre) };
+  const loop = (curves: Loop): Loop => curves.map(curve);
+  return {
+    ...net,
+    across,
+    along,
+    columns: [0, across],
+    rows: [0, along],
+    outline: loop(net.outline),
+    holes: net.holes.map(loop),
+    panels: net.panels.map((panel) => ({
+      ...panel,
+      loop: loop(panel.loop),
+      ...(panel.cone ? { cone: { ...panel.cone, apex: point(panel.cone.apex) } } : {}),
+    })),
+    folds: net.folds.map((fold) => ({ ...fold, curve: curve(fold.curve) })),
+    creases: net.creases.map((crease) => ({ ...crease, curve: curve(crease.curve) })),
+    joins: net.joins.map((join) => ({ ...join, curve: curve(join.curve) })),
+    slits: net.slits.map(curve),
+  };
+}
