@@ -7,6 +7,18 @@ export const typeset = (text: string): string =>
     .replace(/(\d)\/(\d)/g, '$1\u2044$2')
     .replace(/ (in|mm|cm)\b/g, '\u00a0$1');
 
+/** What is seen of a place, without the words to hear beside a figure, as one types it: `7 1/4 × 9 1/4 in`. */
+export const seen = (place: Locator): Promise<string> =>
+  place.evaluate((element) => {
+    const copy = element.cloneNode(true) as Element;
+    for (const heard of copy.querySelectorAll('.visually-hidden')) heard.remove();
+    return (copy.textContent ?? '').replace(/\u2044/g, '/').replace(/\s+/g, ' ').trim();
+  });
+
+/** Waits until a place shows some text. */
+export const shows = (place: Locator, text: string) =>
+  expect.poll(() => seen(place), { message: `“${text}” is shown`, timeout: 10_000 }).toContain(text);
+
 /** Until the island has taken over the form, what is typed is only sent. */
 export const panelReady = (page: Page) => expect(page.locator('sizing-panel[data-ready]')).toBeAttached({ timeout: 15_000 });
 

@@ -72,7 +72,7 @@ export function ProjectRow({ project, first, withAuthor, now, onCopy, onDelete }
             Open desk
           </TabButton>
         ) : (
-          <a className="open-desk" href={desk} aria-label={`Open the desk of ${title}`}>
+          <a className="open-desk" href={desk} aria-label={`Open desk: ${title}`}>
             Open desk <Icon name="arrow-right" />
           </a>
         )}
