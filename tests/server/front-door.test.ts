@@ -2,7 +2,10 @@ import { createServer, request, type IncomingHttpHeaders, type RequestListener, 
 import type { AddressInfo } from 'node:net';
 import { brotliDecompressSync } from 'node:zlib';
 import { afterEach, describe, expect, it } from 'vitest';
+import { LIMITS } from '@/features/http/body-limit.server';
 import { frontDoor, isAllowedHost } from '@/features/http/front-door.server';
+import { STATE_BYTES } from '@/features/projects/project-input';
+import { PICTURE_LIMITS } from '@/features/uploads/limits';
 
 let server: Server | undefined;
 afterEach(() => {
@@ -113,11 +116,11 @@ describe('forwarding headers', () => {
 
 describe('a body', () => {
   it.each([
-    ['/api/projects/1', MB, 200],
-    ['/api/projects/1', MB + 1, 413],
+    ['/api/projects/1', 3 * MB, 200],
+    ['/api/projects/1', 3 * MB + 1, 413],
     ['/api/uploads', 13 * MB, 200],
     ['/api/uploads', 13 * MB + 1, 413],
-    ['/subscribe?next=/api/uploads', MB + 1, 413],
+    ['/subscribe?next=/api/uploads', 3 * MB + 1, 413],
   ])('to %s of %i bytes is answered with %i', async (path, bytes, status) => {
     const ask = await behindDoor(readAll);
     const answer = await ask({ path, method: 'POST', body: Buffer.alloc(bytes) }).catch((error: Error) => error);
@@ -131,16 +134,21 @@ describe('a body', () => {
     const ask = await behindDoor(readAll);
     const { status, body } = await ask({
       method: 'POST',
-      headers: { 'content-length': String(MB + 1), expect: '100-continue' },
+      headers: { 'content-length': String(3 * MB + 1), expect: '100-continue' },
     });
-    expect([status, body.toString()]).toEqual([413, 'That is too much to take in: 1 MB at most.\n']);
+    expect([status, body.toString()]).toEqual([413, 'That is too much to take in: 3 MB at most.\n']);
+  });
+
+  it('may be larger at the door than any route takes', () => {
+    expect(LIMITS.usual).toBeGreaterThan(STATE_BYTES);
+    expect(LIMITS.upload).toBeGreaterThan(PICTURE_LIMITS.bytes);
   });
 
   it('sent in chunks is counted as it comes', async () => {
     const ask = await behindDoor(readAll);
     const small = await ask({ method: 'POST', body: Buffer.alloc(MB), chunked: true });
     expect(small.body.toString()).toBe(String(MB));
-    const answer = await ask({ method: 'POST', body: Buffer.alloc(3 * MB), chunked: true }).catch(
+    const answer = await ask({ method: 'POST', body: Buffer.alloc(5 * MB), chunked: true }).catch(
       (error: Error) => error,
     );
     expect(answer instanceof Error ? 413 : answer.status).toBe(413);

@@ -1,7 +1,8 @@
 import type { IncomingMessage, ServerResponse } from 'node:http';
 
+/** Above what any route takes, so that a route can refuse in its own words what is only too much for it. */
 export const LIMITS = {
-  usual: 2 ** 20,
+  usual: 3 * 2 ** 20,
   /** A picture of 12 MB and the form round it. */
   upload: 13 * 2 ** 20,
 } as const;
