@@ -2,7 +2,7 @@ import { randomUUID } from 'node:crypto';
 import type { APIContext, MiddlewareHandler } from 'astro';
 import { config } from '@/config.server';
 import { accessTo, includesRole, type Access } from '@/features/accounts/access';
-import { notForThisRole, signInFirst } from '@/features/accounts/guard.server';
+import { isAtThisMachine, notForThisRole, signInFirst } from '@/features/accounts/guard.server';
 import { returnPath } from '@/features/accounts/return-path';
 import { readSession } from '@/features/accounts/session.server';
 import { isFromHere } from '@/features/http/origin';
@@ -42,10 +42,6 @@ async function refusal(context: APIContext, access: Access | null): Promise<Resp
   const to = returnPath(context.url.pathname + context.url.search);
   return new Response(null, { status: 303, headers: { location: `/sign-in?${new URLSearchParams({ to })}` } });
 }
-
-/** What only the person at the computer may see, while letters go nowhere else. */
-const isAtThisMachine = ({ clientAddress }: APIContext): boolean =>
-  config.smtpUrl === null && config.isLocal && /^(127\.|::1$|::ffff:127\.)/.test(clientAddress);
 
 /** Without a body Astro shows the site's own page for it. */
 const notFound = (context: APIContext): Response =>

@@ -25,9 +25,6 @@ export interface ReceivedMail extends MailSummary {
   readonly raw: string;
 }
 
-/** There is a mailbox only while no real mail server is set up. */
-export const hasMailbox = (): boolean => config.smtpUrl === null;
-
 /** Newest first. */
 export async function listMails(): Promise<{ readonly mails: readonly MailSummary[]; readonly total: number }> {
   const ids = await mailIds();
