@@ -300,7 +300,7 @@ export interface Placement {
   readonly piece: string;
   /** The cell that is placed; the others fold from it. */
   readonly root: string;
-  /** Where the top left corner of the root cell goes. */
+  /** Where the top left corner of the root cell goes; the middle of a fan or disc, the apex of a sector (`along` its axis). */
   readonly at: readonly [string, string, string];
   /** Directions in space of the flat piece's across and along. */
   readonly across: Axis;
@@ -454,7 +454,7 @@ export interface FitFigure {
   readonly change: readonly string[];
 }
 export interface SizingProblem {
-  readonly code: 'below range' | 'above range' | 'fit fails' | 'cannot be worked out' | 'piece fails';
+  readonly code: 'below range' | 'above range' | 'not whole' | 'fit fails' | 'cannot be worked out' | 'piece fails';
   /** The measure to change. */
   readonly measure: string;
   readonly sentence: string;

@@ -42,9 +42,10 @@ export function* sizingsOf(model: Model, count: number, seed: number): Generator
     );
     let sizing: Sizing = { values: {}, choices: chosen, units: GRIDS[grid].unit, grid };
     for (const { name } of measures.filter(({ ask }) => ask && !ask.finer)) {
-      const { from = 0, to = 0 } = evaluate(model, sizing).measures.find((one) => one.name === name) ?? {};
+      const { from = 0, to = 0, kind } = evaluate(model, sizing).measures.find((one) => one.name === name) ?? {};
       const at = random();
-      const value = at < 0.1 ? from : at > 0.9 ? to : from + (to - from) * random();
+      const between = at < 0.1 ? from : at > 0.9 ? to : from + (to - from) * random();
+      const value = kind === 'whole number' ? Math.round(between) : between;
       sizing = { ...sizing, values: { ...sizing.values, [name]: snap(value) } };
     }
     yield sizing;

@@ -102,6 +102,8 @@ function viewOf(turn: number, tilt: number) {
 function facesOf(model: Model, figures: Figures, share: number): Face<Look>[] {
   const values = valuesBehind(figures)?.cut;
   if (!values) return [];
+  const round = (name: string) =>
+    ['fan', 'disc'].includes(model.pattern.pieces.find((one) => keyOf(one.name) === keyOf(name))?.builder ?? '');
   return model.placements.flatMap(({ def, at, when }) => {
     if (!isInUse(when ? { when } : {}, values)) return [];
     const piece = figures.pieces.find((one) => keyOf(one.name) === keyOf(def.piece));
@@ -114,6 +116,7 @@ function facesOf(model: Model, figures: Figures, share: number): Face<Look>[] {
       across: def.across,
       along: def.along,
       share,
+      anchor: round(def.piece) ? 'middle' : 'corner',
     }).flatMap((panel) => {
       // Teeth are glued out of sight, where narrow faces would only fight with the curve they stand on.
       if (panel.tooth) return [];

@@ -1,5 +1,5 @@
 import { diagnose, kindName, type Formula, type Values } from '../formula';
-import { GRIDS, atLeast, isZero, moreThan, roundTo, same, showValue, snap } from '../measure';
+import { GRIDS, decimal, atLeast, isZero, moreThan, roundTo, same, showValue, snap } from '../measure';
 import { perimeterOf } from '../net';
 import { keyOf } from '../pattern/names';
 import { areaOfNet, figureMaker, makingOf } from '../piece';
@@ -133,6 +133,14 @@ function valueProblem(
     };
   }
   if (!measure.from || !measure.to) return null;
+  if (measure.def.kind === 'whole number' && !same(value, Math.round(value))) {
+    return {
+      code: 'not whole',
+      measure: name,
+      sentence: `${capital(name)} is ${decimal(value, 3)}; it must be a whole number.`,
+      nearest: null,
+    };
+  }
   const [from, to] = [measure.from.work(exact), measure.to.work(exact)];
   const says = (mm: number) =>
     showValue(mm, measure.def.kind ?? 'length', { ...sizing, ...(measure.def.unit ? { unit: measure.def.unit } : {}) })
@@ -201,7 +209,8 @@ function piecesOf(model: Model, { exact, cut }: BothValues, sizing: Sizing, prob
       cut[slot] = value;
       exact[slot] = value;
     }
-    const scores = scoresOf(net);
+    // Running positions are read from an edge of the blank: only a grid's scores lie square to it.
+    const scores = grid ? scoresOf(net) : { across: [], along: [] };
     return [
       {
         name: piece.def.name,

@@ -33,7 +33,10 @@ export function buildSector(piece: SectorPiece): Built {
   const tab = tabOnEdge(rimEnd, footEnd, { name: 'seam', width: seam.width, low: seam.high, high: seam.low });
   if (!tab) return nonsense('the seam tab comes to a point before its full width');
   return finishNet({
-    panels: [{ name: piece.body, role: 'panel', loop, cone: { apex: centre, angle } }, tab],
+    panels: [
+      { name: piece.body, role: 'panel', loop, cone: { apex: centre, angle } },
+      { ...tab, tooth: true },
+    ],
     jointOf: () => ({ is: 'fold', kind: 'valley', angle: 0 }),
     edges: { rim: (angle / 180) * Math.PI * outer, foot: (angle / 180) * Math.PI * inner },
     step: piece.step,

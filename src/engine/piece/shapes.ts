@@ -38,16 +38,14 @@ export function arcs(
   const stops = Array.from({ length: parts + 1 }, (_, index) =>
     polar(centre, radius, from + ((to - from) * index) / parts),
   );
-  return stops
-    .slice(1)
-    .map((stop, index) => ({
-      type: 'arc',
-      from: stops[index] as Point,
-      to: stop,
-      centre,
-      radius,
-      clockwise: to > from,
-    }));
+  return stops.slice(1).map((stop, index) => ({
+    type: 'arc',
+    from: stops[index] as Point,
+    to: stop,
+    centre,
+    radius,
+    clockwise: to > from,
+  }));
 }
 
 /** The loop with corner `index` (where that curve ends) rounded; null when the sides are too short or not straight. */

@@ -312,7 +312,9 @@ function slots({ grid, figure }: GridWords): Sentence[] {
 function folding({ net }: WordsOptions): Sentence[] {
   const mountains = net.folds.filter((fold) => fold.kind === 'mountain');
   if (mountains.length > 0) return [['Fold the dash-dot lines away from you, all others towards you.']];
-  return net.folds.length > 0 && areaOf(net.outline) > 0 ? [['Fold every score towards you and burnish it.']] : [];
+  return net.folds.some((fold) => fold.angle !== 0) && areaOf(net.outline) > 0
+    ? [['Fold every score towards you and burnish it.']]
+    : [];
 }
 
 function holes({ grid, figure }: GridWords): Sentence[] {

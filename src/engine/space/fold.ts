@@ -22,6 +22,8 @@ export interface FoldOptions {
   readonly at: Vector;
   readonly across: Axis;
   readonly along: Axis;
+  /** What of the root panel is put at `at`: the corner of its upright rectangle, or its middle. Usual: the corner. */
+  readonly anchor?: 'corner' | 'middle';
   /** Share of every fold's turn, 0 flat to 1 closed. */
   readonly share?: number;
 }
@@ -93,11 +95,15 @@ export function foldNet(net: Net, options: FoldOptions): readonly FoldedPanel[] 
 }
 
 /** A rolled root is placed by its chord: its first strip leans back by half the whole turn. */
-function rootFrame(start: Facet, { at, across: u, along: v }: FoldOptions, share: number): Frame {
+function rootFrame(start: Facet, { at, across: u, along: v, anchor }: FoldOptions, share: number): Frame {
   const [acrossAxis, alongAxis] = [axis(u), axis(v)];
   const { roll, cone } = start.of;
   if (cone) return coneFrame(cone, at, acrossAxis, alongAxis);
   const box = boxOf(start.of.loop.map((curve) => curve.from));
+  const held =
+    anchor === 'middle'
+      ? { x: (box.left + box.right) / 2, y: (box.top + box.bottom) / 2 }
+      : { x: box.left, y: box.top };
   let heading = acrossAxis;
   if (roll) {
     const turn = ((box.right - box.left) / roll.radius) * (1 - 1 / stripsOf(start.of)) * share;
@@ -105,7 +111,7 @@ function rootFrame(start: Facet, { at, across: u, along: v }: FoldOptions, share
     heading = turned(acrossAxis, alongAxis, (lean * turn) / 2);
   }
   return {
-    origin: minus(at, plus(times(heading, box.left), times(alongAxis, box.top))),
+    origin: minus(at, plus(times(heading, held.x), times(alongAxis, held.y))),
     across: heading,
     along: alongAxis,
   };
@@ -202,7 +208,15 @@ function facetsOf(net: Net): { readonly facets: readonly Facet[]; readonly links
   };
   const link = (curve: Curve, [a, b]: readonly [string, string], turn: number) =>
     links.push({ a: facetAt(a, curve), b: facetAt(b, curve), from: curve.from, to: curve.to, turn });
-  for (const fold of net.folds) link(fold.curve, fold.panels, fold.kind === 'valley' ? fold.angle : -fold.angle);
+  const coneOf = (name: string) => net.panels.find((panel) => panel.name === name)?.cone;
+  for (const fold of net.folds) {
+    const cone = coneOf(fold.panels[0]) ?? coneOf(fold.panels[1]);
+    link(
+      fold.curve,
+      fold.panels,
+      (fold.kind === 'valley' ? fold.angle : -fold.angle) + (cone ? coneTurn(cone.angle) : 0),
+    );
+  }
   for (const join of net.joins) link(join.curve, join.panels, 0);
   return { facets, links };
 }
@@ -234,9 +248,7 @@ function coneFacets(
     const turn = ((90 - cone.angle / 2 + each * index) * Math.PI) / 180;
     return { x: cone.apex.x + radius * Math.cos(turn), y: cone.apex.y + radius * Math.sin(turn) };
   };
-  const lean = coneLean(cone.angle);
-  const turn =
-    (Math.acos(Math.sin(lean) ** 2 + Math.cos(lean) ** 2 * Math.cos((2 * Math.PI) / CONE_STRIPS)) * 180) / Math.PI;
+  const turn = coneTurn(cone.angle);
   for (let index = 0; index < CONE_STRIPS; index += 1) {
     const pointed = inner < 1e-6;
     const points = pointed
@@ -259,6 +271,12 @@ function coneFacets(
       });
   }
   return Array.from({ length: CONE_STRIPS }, (_, index) => first + index);
+}
+/** Degrees from one strip of a cone to the next; also from its last strip to a seam tab, which lies under the first. */
+function coneTurn(angle: number): number {
+  const lean = coneLean(angle);
+  const between = Math.acos(Math.sin(lean) ** 2 + Math.cos(lean) ** 2 * Math.cos((2 * Math.PI) / CONE_STRIPS));
+  return (between * 180) / Math.PI;
 }
 /** Angle between the axis and the middle line of a face, for a cone whose flat is a sector of this angle. */
 function coneLean(angle: number): number {
