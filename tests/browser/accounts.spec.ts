@@ -26,14 +26,20 @@ test('a password signs in, a wrong one does not and says so, and signing out end
   await expect(account(page)).toContainText(author.name);
 
   await account(page).click();
-  await page.locator('.account-menu').getByRole('button', { name: /sign out/i }).click();
+  await page
+    .locator('.account-menu')
+    .getByRole('button', { name: /sign out/i })
+    .click();
   await page.waitForURL((url) => url.pathname === '/');
   await expect(page.locator('.site-account').getByRole('link', { name: 'Sign in' })).toBeVisible();
   await page.goto('/workroom');
   await expect(page).toHaveURL(/\/sign-in/);
 });
 
-test('a link in a letter signs in by its button, once, and reading it alone does nothing', async ({ page, request }) => {
+test('a link in a letter signs in by its button, once, and reading it alone does nothing', async ({
+  page,
+  request,
+}) => {
   const reader = demoPerson('reader');
   const before = (await lettersTo(reader.email)).length;
   await page.goto('/sign-in?to=/account');

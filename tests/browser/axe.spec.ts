@@ -91,13 +91,17 @@ test.describe('axe finds nothing serious', () => {
       for (const colorScheme of place.main ? (['light', 'dark'] as const) : (['light'] as const)) {
         await page.emulateMedia({ colorScheme });
         // Colours that are on their way to the other theme are neither one's.
-        await page.evaluate(() => Promise.all(document.getAnimations().map(({ finished }) => finished.catch(() => null))));
+        await page.evaluate(() =>
+          Promise.all(document.getAnimations().map(({ finished }) => finished.catch(() => null))),
+        );
         const found = await page.evaluate(async () => {
           const { axe } = window as unknown as { axe: { run(options: object): Promise<AxeResults> } };
           const { violations } = await axe.run({ resultTypes: ['violations'], iframes: false });
           return violations
             .filter(({ impact }) => impact === 'serious' || impact === 'critical')
-            .flatMap(({ id, nodes }) => nodes.map((node) => `${id}: ${node.target.join(' ')} (${node.failureSummary ?? ''})`));
+            .flatMap(({ id, nodes }) =>
+              nodes.map((node) => `${id}: ${node.target.join(' ')} (${node.failureSummary ?? ''})`),
+            );
         });
         expect.soft(found, `${place.name} in ${colorScheme}`).toEqual([]);
       }

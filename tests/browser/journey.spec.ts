@@ -14,7 +14,12 @@ test.use({ actionTimeout: 15_000 });
 /** Keys that are pressed at once after the focus has moved are lost. */
 const settle = (page: Page) => page.waitForTimeout(80);
 
-test('a box goes from its pattern to the subscribers and to a reader’s own size', async ({ browser, page, request, baseURL }) => {
+test('a box goes from its pattern to the subscribers and to a reader’s own size', async ({
+  browser,
+  page,
+  request,
+  baseURL,
+}) => {
   test.setTimeout(150_000);
   await page.setViewportSize({ width: 1440, height: 1000 });
   let desk = '';
@@ -60,7 +65,10 @@ test('a box goes from its pattern to the subscribers and to a reader’s own siz
     await measure(page, 'inside width + overhang');
     await page.keyboard.type(' across.');
     await page.keyboard.press('Alt+Shift+p');
-    await page.locator('.piece-list').getByRole('button', { name: /^Cover/ }).click();
+    await page
+      .locator('.piece-list')
+      .getByRole('button', { name: /^Cover/ })
+      .click();
     await settle(page);
     await page.keyboard.press('Alt+Shift+m');
     await settle(page);
@@ -167,7 +175,12 @@ test('a box goes from its pattern to the subscribers and to a reader’s own siz
     leave = (mail.headers.get('list') as unknown as { unsubscribe: { url: string } }).unsubscribe.url;
     // 10 × 5 1/2 × 2 in are 254 × 139.7 × 50.8 mm.
     expect(mail.text).toContain('254 × 140 × 51 mm');
-    expect(String(mail.html).replace(/<[^>]+>/g, '').replaceAll('&nbsp;', ' ').replaceAll('\u00a0', ' ')).toContain('254 × 140 × 51 mm');
+    expect(
+      String(mail.html)
+        .replace(/<[^>]+>/g, '')
+        .replaceAll('&nbsp;', ' ')
+        .replaceAll('\u00a0', ' '),
+    ).toContain('254 × 140 × 51 mm');
     expect(String(mail.html)).toContain('alt="The finished box on the swap shelf"');
     read = linkIn(mail, slug);
     expect(read).toBe(`${baseURL}${slug}?units=mm`);
@@ -193,7 +206,9 @@ test('a box goes from its pattern to the subscribers and to a reader’s own siz
     // The overhang of 1/4 in is 6 mm at whole millimetres, so a cover is 206 across and 254 + 6 along.
     await expect(liveMeasure(reader, 'inside width + overhang')).toContainText('206\u00a0mm');
     await expect(liveMeasure(reader, 'inside width')).toContainText('200\u00a0mm');
-    await expect(reader.locator('figcaption').filter({ hasText: 'wide inside' })).toContainText('It stands 200\u00a0mm');
+    await expect(reader.locator('figcaption').filter({ hasText: 'wide inside' })).toContainText(
+      'It stands 200\u00a0mm',
+    );
     await shows(cutListRow(reader, 'Cover'), '206 × 260 mm');
     // Floor: tabs of 13 (1/2 in), 51 deep, 200 wide and a bulge of 50.8 − √(50.8² − 25.5²) = 6.9, up to 7.
     await shows(cutListRow(reader, 'Floor'), '77 × 220 mm');
@@ -202,7 +217,9 @@ test('a box goes from its pattern to the subscribers and to a reader’s own siz
     expect(await drawing.innerHTML()).not.toBe(drawingBefore);
     // The strip is 53 mm; the floor's curve, a chord of 51 on a circle of 101.6, is 53.43.
     const fits = reader.locator('sizing-panel [data-fits]');
-    await expect(fits.locator('li').filter({ hasText: 'Spine goes round the curve' })).toContainText('about 0.4\u00a0mm short');
+    await expect(fits.locator('li').filter({ hasText: 'Spine goes round the curve' })).toContainText(
+      'about 0.4\u00a0mm short',
+    );
     byScript = await everyFigure(reader);
     // Beside a cover of 206 × 260 a sheet of 305 has room for one of the four long pieces (75 to 79 wide) alone.
     const sheets = (figures: typeof byScript) => figures.fits.join().match(/\d+(?= sheets)/)?.[0];
@@ -284,6 +301,8 @@ async function send(page: Page): Promise<number> {
   const button = page.getByRole('dialog').getByRole('button', { name: /^Send to \d+ people$/ });
   const many = Number((await button.textContent())?.match(/\d+/)?.[0]);
   await button.click();
-  await expect(page.getByRole('heading', { name: `Done: ${many} of ${many} accepted` })).toBeVisible({ timeout: 30_000 });
+  await expect(page.getByRole('heading', { name: `Done: ${many} of ${many} accepted` })).toBeVisible({
+    timeout: 30_000,
+  });
   return many;
 }

@@ -34,7 +34,9 @@ test('other units change the figures and leave the box as it is', async ({ page 
   await expect.poll(() => page.url()).not.toContain('units=');
 });
 
-test('a size out of range says so with the nearest that works, and the last good figures stay, marked', async ({ page }) => {
+test('a size out of range says so with the nearest that works, and the last good figures stay, marked', async ({
+  page,
+}) => {
   await open(page);
   const width = page.locator('[data-field="inside width"]');
   const lastGood = page.locator('[data-last-good]');
@@ -60,7 +62,10 @@ test('a size out of range says so with the nearest that works, and the last good
   await shows(cover(page), '10 1/4 × 9 1/4 in');
 });
 
-test('without JavaScript a size out of range is refused in the same words, with the nearest', async ({ browser, baseURL }) => {
+test('without JavaScript a size out of range is refused in the same words, with the nearest', async ({
+  browser,
+  baseURL,
+}) => {
   const context = await browser.newContext({ baseURL, javaScriptEnabled: false });
   const page = await context.newPage();
   await page.goto(BOOK_BOX);
@@ -126,7 +131,9 @@ test(`the page brings no editor, and less than ${MOST_SCRIPT / 1000} kB of scrip
     .locator('script:not([src]):not([type="application/json"])')
     .evaluateAll((all) => all.map((script) => script.textContent ?? ''));
   expect(loaded.filter(({ body }) => body.includes('ProseMirror')).map(({ url }) => url)).toEqual([]);
-  const bytes = [...loaded.map(({ body }) => body), ...inPage.map((text) => Buffer.from(text))].map((body) => gzipSync(body).length);
+  const bytes = [...loaded.map(({ body }) => body), ...inPage.map((text) => Buffer.from(text))].map(
+    (body) => gzipSync(body).length,
+  );
   const sum = bytes.reduce((all, one) => all + one, 0);
   console.log(`Script of a project's page: ${(sum / 1000).toFixed(1)} kB gzipped, in ${loaded.length} files`);
   expect(loaded.length).toBeGreaterThan(0);
@@ -138,7 +145,10 @@ test('two hundred live measures follow a change', async ({ browser, baseURL, pag
   const author = await browser.newContext({ baseURL });
   await beSignedIn(author, 'author');
   const headers = { origin: baseURL! };
-  const made = await author.request.post('/api/projects', { headers, data: { pattern: 'book-box', title: 'Two hundred figures' } });
+  const made = await author.request.post('/api/projects', {
+    headers,
+    data: { pattern: 'book-box', title: 'Two hundred figures' },
+  });
   const { id } = (await made.json()) as { id: string };
   const opened = await author.request.get(`/api/projects/${id}`);
   const { state, revision } = (await opened.json()) as { state: Record<string, unknown>; revision: number };
@@ -147,7 +157,9 @@ test('two hundred live measures follow a change', async ({ browser, baseURL, pag
     { type: 'measure', attrs: { formula: `inside width + ${n} mm`, bare: false } },
     { type: 'text', text: ' ' },
   ]).flat();
-  const content = [{ type: 'step', attrs: { title: 'Many', mark: '' }, content: [{ type: 'paragraph', content: measures }] }];
+  const content = [
+    { type: 'step', attrs: { title: 'Many', mark: '' }, content: [{ type: 'paragraph', content: measures }] },
+  ];
   const saved = await author.request.put(`/api/projects/${id}`, {
     headers: { ...headers, 'if-match': `"${revision}"` },
     data: { ...state, writeUp: { version: 1, doc: { type: 'doc', content } } },
@@ -188,5 +200,7 @@ test('two hundred live measures follow a change', async ({ browser, baseURL, pag
   await expect(figures.last()).toContainText(`${165 + FIGURES - 1}\u00a0mm`);
   const sorted = [...times].sort((a, b) => a - b);
   const middle = sorted[Math.floor(sorted.length / 2)]!;
-  console.log(`From change to repaint with ${FIGURES} figures: ${middle.toFixed(0)} ms in the middle, ${sorted.at(-1)!.toFixed(0)} ms at most`);
+  console.log(
+    `From change to repaint with ${FIGURES} figures: ${middle.toFixed(0)} ms in the middle, ${sorted.at(-1)!.toFixed(0)} ms at most`,
+  );
 });

@@ -15,14 +15,18 @@ export async function lettersTo(address: string): Promise<ParsedMail[]> {
   const sources = await Promise.all(names.map((name) => readFile(join(folder(), name))));
   const head = (source: Buffer) => source.subarray(0, 2000).toString('latin1');
   return Promise.all(
-    sources.filter((source) => head(source).includes(`\r\nDelivered-To: ${address}\r\n`)).map((source) => simpleParser(source)),
+    sources
+      .filter((source) => head(source).includes(`\r\nDelivered-To: ${address}\r\n`))
+      .map((source) => simpleParser(source)),
   );
 }
 
 /** Waits for the newest letter to an address whose subject holds these words. */
 export async function letterTo(address: string, subject: string): Promise<ParsedMail> {
   const find = async () => (await lettersTo(address)).filter((mail) => mail.subject?.includes(subject)).at(-1);
-  await expect.poll(async () => (await find())?.subject, { message: `a letter “${subject}” to ${address}`, timeout: 20_000 }).toBeTruthy();
+  await expect
+    .poll(async () => (await find())?.subject, { message: `a letter “${subject}” to ${address}`, timeout: 20_000 })
+    .toBeTruthy();
   return (await find())!;
 }
 

@@ -12,7 +12,10 @@ export const seen = (place: Locator): Promise<string> =>
   place.evaluate((element) => {
     const copy = element.cloneNode(true) as Element;
     for (const heard of copy.querySelectorAll('.visually-hidden')) heard.remove();
-    return (copy.textContent ?? '').replace(/\u2044/g, '/').replace(/\s+/g, ' ').trim();
+    return (copy.textContent ?? '')
+      .replace(/\u2044/g, '/')
+      .replace(/\s+/g, ' ')
+      .trim();
   });
 
 /** Waits until a place shows some text. */
@@ -20,7 +23,8 @@ export const shows = (place: Locator, text: string) =>
   expect.poll(() => seen(place), { message: `“${text}” is shown`, timeout: 10_000 }).toContain(text);
 
 /** Until the island has taken over the form, what is typed is only sent. */
-export const panelReady = (page: Page) => expect(page.locator('sizing-panel[data-ready]')).toBeAttached({ timeout: 15_000 });
+export const panelReady = (page: Page) =>
+  expect(page.locator('sizing-panel[data-ready]')).toBeAttached({ timeout: 15_000 });
 
 export const sizeField = (page: Page, measure: string): Locator =>
   page.locator(`[data-field="${measure}"] input[type=text]`);
@@ -30,7 +34,9 @@ export const liveMeasure = (page: Page, formula: string): Locator =>
   page.locator(`[data-reader] [data-live="${formula}"]`).first();
 
 /** Every text on the page that follows the size, in order. */
-export async function everyFigure(page: Page): Promise<Record<'live' | 'cards' | 'cutList' | 'facts' | 'fits', string[]>> {
+export async function everyFigure(
+  page: Page,
+): Promise<Record<'live' | 'cards' | 'cutList' | 'facts' | 'fits', string[]>> {
   const texts = async (selector: string) =>
     (await page.locator(selector).allTextContents()).map((text) => text.replace(/\s+/g, ' ').trim());
   return {
@@ -44,4 +50,7 @@ export async function everyFigure(page: Page): Promise<Record<'live' | 'cards' |
 
 /** The row of a piece in the article's cut list. */
 export const cutListRow = (page: Page, piece: string): Locator =>
-  page.locator('[data-cut-list] tr').filter({ has: page.getByRole('rowheader', { name: piece, exact: true }) }).first();
+  page
+    .locator('[data-cut-list] tr')
+    .filter({ has: page.getByRole('rowheader', { name: piece, exact: true }) })
+    .first();

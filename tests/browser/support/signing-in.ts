@@ -5,7 +5,11 @@ export type Role = (typeof DEMO_PEOPLE)[number]['role'];
 export const demoPerson = (role: Role) => DEMO_PEOPLE.find((person) => person.role === role)!;
 
 /** Signs in by the form with a password and goes on to `to`. */
-export async function signIn(page: Page, person: { readonly email: string; readonly password: string }, to = '/account') {
+export async function signIn(
+  page: Page,
+  person: { readonly email: string; readonly password: string },
+  to = '/account',
+) {
   await page.goto(`/sign-in?to=${encodeURIComponent(to)}`);
   await page.getByLabel('E-mail address', { exact: true }).fill(person.email);
   await page.getByLabel('Password', { exact: true }).fill(person.password);
