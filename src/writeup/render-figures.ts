@@ -66,7 +66,7 @@ export function pieceCardInside(figures: Figures, name: string, width = CARD_WID
 }
 
 /** A sentence from the geometry; its figures look like live measures, for they follow the size in the same way. */
-function sentenceHtml(sentence: Sentence, { units, grid }: Looked): string {
+export function sentenceHtml(sentence: Sentence, { units, grid }: Looked): string {
   return sayParts(sentence, { units, grid })
     .map((part) => (part.figure ? `<span class="measure">${figure(part)}</span>` : esc(part.text)))
     .join('');

@@ -1,3 +1,5 @@
+import type { AstroGlobal } from 'astro';
+
 /** Pages that everybody may read are checked again at every visit and sent again only when something changed. */
 
 /** Another build or start may answer differently for the same edition. */
@@ -25,6 +27,22 @@ export function publicHeaders(tag: string, { personal = false } = {}): Record<st
 export function hasTag(request: Request, tag: string): boolean {
   const sent = request.headers.get('if-none-match');
   return sent !== null && sent.split(',').some((each) => each.trim() === tag || each.trim() === '*');
+}
+
+/**
+ * Begins the answer of a project's page, made of `parts`, its query and who sees it. Gives what to return instead when the
+ * browser has this very page; else the headers are set and it is null.
+ */
+export function beginPublicPage(
+  { request, url, locals, response }: Pick<AstroGlobal, 'request' | 'url' | 'locals' | 'response'>,
+  parts: readonly (string | number | null | undefined)[],
+): Response | null {
+  const { user } = locals;
+  const personal = user !== null;
+  const tag = tagOf([...parts, url.search, user?.id, user?.name, user?.role]);
+  if (import.meta.env.PROD && hasTag(request, tag)) return notModified(tag, { personal });
+  for (const [name, value] of Object.entries(publicHeaders(tag, { personal }))) response.headers.set(name, value);
+  return null;
 }
 
 export function notModified(tag: string, options: { readonly personal?: boolean } = {}): Response {

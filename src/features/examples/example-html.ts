@@ -1,10 +1,10 @@
-import { drawPiece, explain, planSheets, sayParts, showValue, type PieceFigure } from '@/engine';
+import { drawPiece, explain, planSheets, showValue, type PieceFigure } from '@/engine';
 import { ICONS } from '@/components/icons';
+import { esc } from '@/exports/escape';
 import { drawingSvg } from '@/exports/svg/drawing';
 import { pieceCount } from '@/features/sizing/facts';
-import { esc } from '@/exports/escape';
 import { readLive } from '@/writeup/live';
-import { measureInside } from '@/writeup/render-figures';
+import { measureInside, sentenceHtml } from '@/writeup/render-figures';
 import type { Example } from './example';
 
 /** The parts of an example that follow its size, as HTML for the server and the browser alike. */
@@ -44,19 +44,10 @@ export function pieceSvg(example: Example, name: string, { wide, narrow, tallest
 
 /** A piece's making instructions, their figures on tabs. */
 export function wordsHtml(example: Example, name: string): string {
-  const { units, grid } = example.figures.sizing;
   return pieceOf(example, name)
-    .instructions.map((sentence) =>
-      sayParts(sentence, { units, grid })
-        .map((part) => (part.figure ? `<span class="measure">${heard(part)}</span>` : esc(part.text)))
-        .join(''),
-    )
+    .instructions.map((sentence) => sentenceHtml(sentence, example.figures.sizing))
     .join(' ');
 }
-
-/** A figure to see and the same to hear, as in a write-up. */
-const heard = ({ typeset, spoken }: { typeset: string; spoken: string }): string =>
-  `<span class="figure" aria-hidden="true">${esc(typeset)}</span><span class="visually-hidden spoken">${esc(spoken)}</span>`;
 
 /** What keeps the asked size from being made; empty when nothing does. */
 export function troublesHtml({ troubles, figures }: Example): string {
