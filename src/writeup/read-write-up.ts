@@ -6,7 +6,7 @@ import { writeUpFault } from './messages';
 import { writeUpSchema } from './schema';
 
 /** Characters of all texts and attribute values together, nesting, and parts in one write-up. */
-export const WRITE_UP_LIMITS = { characters: 500_000, depth: 44, parts: 5_000 } as const;
+const WRITE_UP_LIMITS = { characters: 500_000, depth: 44, parts: 5_000 } as const;
 
 const attribute = z.union([z.string(), z.number().finite(), z.boolean(), z.null()]);
 const mark = z.object({ type: z.string().max(40), attrs: z.record(attribute).optional() });

@@ -8,7 +8,7 @@ import { postAccount } from '@/features/accounts/own-account.server';
 import { postInvitation, postSignIn, postSignInLink, postSignUp, postSignUpConfirm } from '@/features/accounts/sign-in-forms.server';
 import { readSignUp } from '@/features/accounts/sign-up.server';
 import { onRequest } from '@/middleware';
-import { emptyWriteUp } from '@/writeup/empty-write-up';
+import { emptyWriteUp } from '../setup/empty-write-up';
 import { testDatabase } from '../setup/test-database';
 import { call, cast, contextOf, cookiesOf, HERE, sessionCookie, withCookies, type Cast } from './harness';
 

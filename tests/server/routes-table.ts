@@ -17,7 +17,7 @@
 import { db } from '@/db/client.server';
 import { editions, mailings, projects } from '@/db/schema';
 import type { Access } from '@/features/accounts/access';
-import { emptyWriteUp } from '@/writeup/empty-write-up';
+import { emptyWriteUp } from '../setup/empty-write-up';
 import type { Cast, Method } from './harness';
 
 export interface RouteRow {

@@ -5,7 +5,7 @@ import { beforeEach, describe, expect, it } from 'vitest';
 import { config } from '@/config.server';
 import { db } from '@/db/client.server';
 import { projects, uploads, users } from '@/db/schema';
-import { emptyWriteUp } from '@/writeup/empty-write-up';
+import { emptyWriteUp } from '../setup/empty-write-up';
 import { PICTURE_LIMITS } from '@/features/uploads/limits';
 import { explainPictureFault } from '@/features/uploads/messages';
 import { receiveUpload } from '@/features/uploads/receive-upload.server';

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { emptyWriteUp } from '@/writeup/empty-write-up';
+import { emptyWriteUp } from '../setup/empty-write-up';
 import { explainWriteUpFault } from '@/writeup/messages';
 import { readWriteUp } from '@/writeup/read-write-up';
 import { sample } from './sample';

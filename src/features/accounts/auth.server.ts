@@ -34,7 +34,7 @@ declare module '@auth/core/jwt' {
 
 export const AUTH_PATH = '/api/auth';
 export const SESSION_SECONDS = 30 * 24 * 60 * 60;
-export const LINK_MINUTES = 15;
+const LINK_MINUTES = 15;
 
 const isSecure = config.siteUrl.startsWith('https:');
 export const SESSION_COOKIE = `${isSecure ? '__Secure-' : ''}foldwright.session`;

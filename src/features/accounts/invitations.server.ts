@@ -13,7 +13,7 @@ import { post } from './post.server';
  * Invitations to become an author. The link proves the address; the role is given when it is used, not before.
  * They are kept beside the sign-in links under a name that no address can have (a colon stands in none).
  */
-export const INVITATION_DAYS = 7;
+const INVITATION_DAYS = 7;
 const MARK = 'invite:';
 
 export interface Invitation {

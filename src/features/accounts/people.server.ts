@@ -89,11 +89,6 @@ export async function setPassword(id: string, password: string): Promise<PersonO
   return change(id, () => null, { passwordHash, sessionVersion: sql`${users.sessionVersion} + 1` });
 }
 
-/** Ends every session of this person. */
-export function endSessions(id: string): PersonOutcome {
-  return change(id, () => null, { sessionVersion: sql`${users.sessionVersion} + 1` });
-}
-
 type Changes = { [K in keyof Person]?: Person[K] | SQL };
 
 function change(id: string, check: (person: Person) => Refused | null, changes: Changes): PersonOutcome {

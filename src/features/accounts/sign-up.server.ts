@@ -15,7 +15,7 @@ import { post } from './post.server';
  * The link is tied to the browser that signed up. From any other browser the password must be typed again: otherwise
  * somebody could sign up with a stranger's address and their own password, and wait for the stranger to press the button.
  */
-export const SIGN_UP_HOURS = 24;
+const SIGN_UP_HOURS = 24;
 const SALT = 'foldwright sign-up';
 const BROWSER_COOKIE = `${SESSION_COOKIE.startsWith('__Secure-') ? '__Secure-' : ''}foldwright.sign-up`;
 

@@ -100,7 +100,7 @@ function refuse(refusal: PublishRefusal): PublishOutcome {
 }
 
 /** One sentence for the author: what was found and what to do. */
-export function explainRefusal(refusal: PublishRefusal): string {
+function explainRefusal(refusal: PublishRefusal): string {
   switch (refusal.code) {
     case 'not found':
       return 'There is no such project among yours. Look for it in the workroom.';

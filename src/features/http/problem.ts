@@ -67,7 +67,7 @@ export async function readJson<S extends z.ZodTypeAny>(
 }
 
 /** A 422 that names every fault found by a schema. */
-export function doesNotFit(error: z.ZodError): Response {
+function doesNotFit(error: z.ZodError): Response {
   const errors = error.issues.map((issue) => ({ where: issue.path.join('.'), sentence: issue.message }));
   const first = errors[0];
   const detail = first ? (first.where ? `${first.where}: ${first.sentence}` : first.sentence) : undefined;

@@ -81,6 +81,6 @@ function curesFor(problem: SizingProblem, asked: Sizing, figures: Figures, shown
 }
 
 /** The same box, spoken of in the asked sizing's units and cut to its grid. */
-export function inUnitsOf(sizing: Sizing, asked: Sizing): Sizing {
+function inUnitsOf(sizing: Sizing, asked: Sizing): Sizing {
   return { ...sizing, units: asked.units, grid: asked.grid };
 }

@@ -8,7 +8,7 @@ import { PICTURE_WIDTHS, type PictureWidth } from '@/writeup/pictures';
 
 export type PictureFile = `${PictureWidth}.webp` | 'jpg';
 
-export const PICTURE_FILES: readonly PictureFile[] = [...PICTURE_WIDTHS.map((w) => `${w}.webp` as const), 'jpg'];
+const PICTURE_FILES: readonly PictureFile[] = [...PICTURE_WIDTHS.map((w) => `${w}.webp` as const), 'jpg'];
 
 const ID = /^[a-f0-9]{24}$/;
 const folder = () => join(config.dataDir, 'uploads');

@@ -3,7 +3,7 @@ import { NodeSelection, Plugin } from '@tiptap/pm/state';
 import type { EditingDesk } from './editing-desk';
 
 /** Typed twice in a row, it asks for a measure; Escape leaves it as text. */
-export const TRIGGER = '::';
+const TRIGGER = '::';
 
 /** Alt M and `::` ask for a measure; Enter on a selected one changes it. */
 export const measureKeys = (desk: EditingDesk) =>

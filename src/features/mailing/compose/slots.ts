@@ -6,17 +6,15 @@ const OPEN = '\uE000';
 const CLOSE = '\uE001';
 const SLOT = /\uE000([a-z-]+)\uE001/g;
 
-export const SLOTS = [
-  'greeting',
-  'address',
-  'confirmed-on',
-  'leave-url',
-  'preferences-url',
-  'project-url',
-  'inside',
-  'outside',
-] as const;
-export type SlotName = (typeof SLOTS)[number];
+export type SlotName =
+  | 'greeting'
+  | 'address'
+  | 'confirmed-on'
+  | 'leave-url'
+  | 'preferences-url'
+  | 'project-url'
+  | 'inside'
+  | 'outside';
 
 export const slot = (name: SlotName): string => `${OPEN}${name}${CLOSE}`;
 

@@ -7,7 +7,7 @@ export interface CountTick {
 const MOST_TICKS = 130;
 
 /** 1, 2, 5, 10, 20…: as few people a tick as leaves at most 130 ticks. */
-export function tickStep(total: number): number {
+function tickStep(total: number): number {
   for (let power = 1; ; power *= 10)
     for (const digit of [1, 2, 5]) if (total / (digit * power) <= MOST_TICKS) return digit * power;
 }

@@ -2,7 +2,7 @@ import { mergeAttributes, Node } from '@tiptap/core';
 import { textUpTo, yesNo } from '../attributes';
 
 /** The longest formula that is kept in the text. */
-export const FORMULA_LENGTH = 300;
+const FORMULA_LENGTH = 300;
 
 /** A live measure in the text. Its value is never stored: it is worked out wherever the text is shown. */
 export const Measure = Node.create({
