@@ -8,7 +8,18 @@ export { explain, explainAt, nearestName } from './formula';
 export * from './measure';
 export { areaOf, boundsOf, lengthOf, perimeterOf, pointsOf } from './net';
 export { isName, keyOf } from './pattern/names';
-export { compileLive, compilePattern, evaluate, type LiveMeasure, type Model } from './model';
+export {
+  around,
+  compileLive,
+  compilePattern,
+  evaluate,
+  largest,
+  sweep,
+  type LiveMeasure,
+  type Model,
+  type Solved,
+  type Sweep,
+} from './model';
 export { cutsInWords, planSheets, stockOf, STOCKS, type SheetPlan, type Stock, type StockId } from './sheet';
 export {
   drawFolded,

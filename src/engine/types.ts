@@ -195,6 +195,8 @@ export interface OutlinePieceDef extends PieceBase {
   readonly points: readonly { readonly name: string; readonly across: string; readonly along: string }[];
   readonly panels: readonly OutlinePanelDef[];
   readonly lines?: readonly LineDef[];
+  /** Rectangular holes; the cell is a panel, measured from the left and top of the upright rectangle round it. */
+  readonly slots?: readonly SlotDef[];
   /** Edges that fits may measure, from point to point along one panel. */
   readonly edges?: readonly {
     readonly name: string;
@@ -208,6 +210,11 @@ export interface OutlinePanelDef {
   readonly role?: 'panel' | 'tab';
   /** Point names in order, clockwise on the drawing; `b bowed out by r` goes to `b` along an arc of radius `r` (out or in). */
   readonly loop: readonly string[];
+  /**
+   * Bent about lines that run along, so far that a crease across the whole panel, an arc of this radius, lies in a plane at
+   * 45°: a face of a pillow, or one of its closing flaps, which then stands square.
+   */
+  readonly bent?: string;
   readonly when?: string;
 }
 /** A round hole; position of its middle from the cell's left and top. */
@@ -244,6 +251,8 @@ export interface LineDef {
   readonly is: 'valley' | 'mountain' | 'slit' | 'nothing';
   /** Turn from flat; usual 90°. */
   readonly angle?: string;
+  /** Turn in the folded picture, where it stands open to show the inside; usual the angle itself. */
+  readonly shown?: string;
   readonly when?: string;
 }
 /** How tabs are shaped. Ends are named by the side they lie on; the tip is the side away from the hinge. */
@@ -354,12 +363,16 @@ export interface Panel {
   readonly roll?: { readonly radius: number };
   /** Rolled into a cone about this point of the flat, over this angle in degrees. */
   readonly cone?: { readonly apex: Point; readonly angle: number };
+  /** Bent about lines that run along, after a crease of this radius that lies in a plane at 45°. */
+  readonly bent?: { readonly radius: number };
 }
 export interface Fold {
   readonly curve: Curve;
   readonly kind: 'valley' | 'mountain';
   /** Degrees turned from flat; 0 lies flat. */
   readonly angle: number;
+  /** Degrees turned in the folded picture, where that is not all the way. */
+  readonly shown?: number;
   /** Names of the two panels that meet there. */
   readonly panels: readonly [string, string];
 }

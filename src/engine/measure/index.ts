@@ -1,3 +1,4 @@
+export * from './random';
 export * from './read';
 export * from './round';
 export * from './show';

@@ -93,8 +93,10 @@ export function buildPiece(model: Model, piece: CompiledPiece, values: Values): 
             name: panel.name,
             role: panel.role,
             loop: panel.loop.map(({ point, bow }) => ({ point, bow: bow && { to: bow.to, radius: at(bow.radius) } })),
+            bent: panel.bent ? { radius: at(panel.bent) } : null,
           })),
         lines: linesOf(shape.lines, values),
+        slots: slotsOf(shape.slots, values),
         edges,
         step,
       };
@@ -106,7 +108,20 @@ export function buildPiece(model: Model, piece: CompiledPiece, values: Values): 
 const inUse = <T extends Conditional>(list: readonly T[], values: Values): readonly T[] =>
   list.filter((one) => isInUse(one, values));
 const linesOf = (lines: readonly CompiledLine[], values: Values): GridPiece['lines'] =>
-  inUse(lines, values).map(({ between, is, angle }) => ({ between, is, angle: angle?.work(values) ?? 90 }));
+  inUse(lines, values).map(({ between, is, angle, shown }) => ({
+    between,
+    is,
+    angle: angle?.work(values) ?? 90,
+    ...(shown ? { shown: shown.work(values) } : {}),
+  }));
+const slotsOf = (slots: CompiledGrid['slots'], values: Values): GridPiece['slots'] =>
+  inUse(slots, values).map(({ cell, at: [x, y], size: [w, h] }) => ({
+    cell,
+    across: x.work(values),
+    along: y.work(values),
+    width: w.work(values),
+    height: h.work(values),
+  }));
 
 /** The grid with every formula worked out; columns and rows that are not in use, or of no size, are left out with their cells. */
 function resolveGrid(shape: CompiledGrid, edges: GridPiece['edges'], values: Values): GridPiece {
@@ -137,13 +152,7 @@ function resolveGrid(shape: CompiledGrid, edges: GridPiece['edges'], values: Val
       at: at(place),
       radius: at(radius),
     })),
-    slots: inUse(shape.slots, values).map(({ cell, at: [x, y], size: [w, h] }) => ({
-      cell,
-      across: at(x),
-      along: at(y),
-      width: at(w),
-      height: at(h),
-    })),
+    slots: slotsOf(shape.slots, values),
     holes: inUse(shape.holes, values).map(({ cell, at: [x, y], diameter }) => ({
       cell,
       across: at(x),

@@ -10,6 +10,7 @@ import type {
   OutlinePieceDef,
   PieceDef,
   SectorPieceDef,
+  SlotDef,
   TabDef,
   Track,
 } from '../types';
@@ -80,6 +81,18 @@ class ShapeCompiler {
         between: [this.nameIn(names, one.between[0], place), this.nameIn(names, one.between[1], place)],
         is: one.is,
         ...this.maybe('angle', one.angle, ANGLE, place),
+        ...this.maybe('shown', one.shown, ANGLE, `${place}, shown`),
+        ...this.when(one.when, place),
+      };
+    });
+  }
+  private slots(slots: readonly SlotDef[] | undefined, names: ReadonlySet<string>): CompiledGrid['slots'] {
+    return (slots ?? []).map((one) => {
+      const place = `slot of “${one.cell}”`;
+      return {
+        cell: this.nameIn(names, one.cell, place),
+        at: this.pair([one.across, one.along], place),
+        size: this.pair([one.width, one.height], place),
         ...this.when(one.when, place),
       };
     });
@@ -131,15 +144,7 @@ class ShapeCompiler {
           ...this.when(one.when, place),
         };
       }),
-      slots: (def.slots ?? []).map((one) => {
-        const place = `slot of “${one.cell}”`;
-        return {
-          cell: cell(one.cell, place),
-          at: this.pair([one.across, one.along], place),
-          size: this.pair([one.width, one.height], place),
-          ...this.when(one.when, place),
-        };
-      }),
+      slots: this.slots(def.slots, names),
       holes: (def.holes ?? []).map((one) => {
         const place = `hole of “${one.cell}”`;
         return {
@@ -292,9 +297,16 @@ class ShapeCompiler {
             bow: stop.bow && { to: stop.bow.to, radius: this.length(stop.bow.radius, place) },
           };
         });
-        return { name: keyOf(panel.name), role: panel.role ?? 'panel', loop, ...this.when(panel.when, place) };
+        return {
+          name: keyOf(panel.name),
+          role: panel.role ?? 'panel',
+          loop,
+          ...this.maybe('bent', panel.bent, LENGTH, `${place}, bent`),
+          ...this.when(panel.when, place),
+        };
       }),
       lines: this.lines(def.lines, panels),
+      slots: this.slots(def.slots, panels),
     };
   }
 }

@@ -10,6 +10,7 @@ import type {
   MeasureFigure,
   Net,
   PieceFigure,
+  Sentence,
   Sizing,
   SizingProblem,
   Unit,
@@ -47,7 +48,8 @@ export function usualSizing(model: Model, units: Unit, grid: Sizing['grid']): Si
   };
 }
 
-function judge(model: Model, sizing: Sizing): { figures: Figures; values: BothValues } {
+/** A sizing judged without looking for the nearest that works. */
+export function judge(model: Model, sizing: Sizing): { figures: Figures; values: BothValues } {
   const values = workOut(model, sizing);
   const problems: SizingProblem[] = [];
   const measures = model.measures.map((measure) => measureFigure(measure, sizing, values));
@@ -211,6 +213,7 @@ function piecesOf(model: Model, { exact, cut }: BothValues, sizing: Sizing, prob
     }
     // Running positions are read from an edge of the blank: only a grid's scores lie square to it.
     const scores = grid ? scoresOf(net) : { across: [], along: [] };
+    let words: readonly Sentence[] | undefined;
     return [
       {
         name: piece.def.name,
@@ -223,7 +226,11 @@ function piecesOf(model: Model, { exact, cut }: BothValues, sizing: Sizing, prob
         thickness,
         area,
         perimeter,
-        instructions: makingOf({ net, grid, def: piece.def, scores, figure }),
+        // Worked out when first asked for: a sweep over a thousand sizings reads none.
+        get instructions() {
+          words ??= makingOf({ net, grid, def: piece.def, scores, figure });
+          return words;
+        },
       },
     ];
   });

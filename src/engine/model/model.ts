@@ -52,6 +52,7 @@ export interface CompiledLine extends Conditional {
   readonly between: readonly [string, string];
   readonly is: 'valley' | 'mountain' | 'slit' | 'nothing';
   readonly angle?: Formula;
+  readonly shown?: Formula;
 }
 export interface CompiledTab extends Conditional {
   readonly cells: readonly string[];
@@ -134,8 +135,10 @@ export interface CompiledOutline {
       readonly point: string;
       readonly bow: { readonly to: 'out' | 'in'; readonly radius: Formula } | null;
     }[];
+    readonly bent?: Formula;
   } & Conditional)[];
   readonly lines: readonly CompiledLine[];
+  readonly slots: CompiledGrid['slots'];
 }
 export type CompiledShape = CompiledGrid | CompiledFan | CompiledDisc | CompiledSector | CompiledOutline;
 

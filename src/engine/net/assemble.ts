@@ -10,10 +10,11 @@ export interface LoosePanel {
   readonly tooth?: boolean;
   readonly roll?: Panel['roll'];
   readonly cone?: Panel['cone'];
+  readonly bent?: Panel['bent'];
 }
 /** How two panels that share an edge are joined there. */
 export type Joint =
-  | { readonly is: 'fold'; readonly kind: Fold['kind']; readonly angle: number }
+  | { readonly is: 'fold'; readonly kind: Fold['kind']; readonly angle: number; readonly shown?: number }
   | { readonly is: 'nothing' }
   | { readonly is: 'slit' };
 export interface Assembled {
@@ -51,7 +52,10 @@ export function assemble(panels: readonly LoosePanel[], jointOf: (a: string, b: 
     matched.add(edge).add(twin);
     const names: [string, string] = [(panels[edge.panel] as LoosePanel).name, (panels[twin.panel] as LoosePanel).name];
     const joint = jointOf(...names);
-    if (joint.is === 'fold') folds.push({ curve: edge.curve, kind: joint.kind, angle: joint.angle, panels: names });
+    if (joint.is === 'fold') {
+      const { kind, angle, shown } = joint;
+      folds.push({ curve: edge.curve, kind, angle, ...(shown === undefined ? {} : { shown }), panels: names });
+    }
     else if (joint.is === 'nothing') joins.push({ curve: edge.curve, panels: names });
     else slits.push(line(edge.curve.from, edge.curve.to));
   }

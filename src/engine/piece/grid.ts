@@ -15,6 +15,7 @@ export interface GridPiece {
     readonly between: readonly [string, string];
     readonly is: 'valley' | 'mountain' | 'slit' | 'nothing';
     readonly angle: number;
+    readonly shown?: number;
   }[];
   readonly tabs: ReadonlyMap<string, TabShape>;
   readonly caps: ReadonlyMap<string, number>;
@@ -397,7 +398,7 @@ class GridBuilder {
     if (said) {
       if (said.is === 'slit') return { is: 'slit' };
       if (said.is === 'nothing') return { is: 'nothing' };
-      return { is: 'fold', kind: said.is, angle: said.angle };
+      return foldAsSaid(said.is, said);
     }
     if (cellA.kind === 'panel' && cellB.kind === 'panel') return { is: 'fold', kind: 'valley', angle: 90 };
     if (!hinged) return { is: 'slit' };

@@ -1,4 +1,4 @@
-import { atLeast, isZero, moreThan, same, snap } from '../measure';
+import { atLeast, isZero, moreThan, same, seeded, snap } from '../measure';
 import type { PieceFigure } from '../types';
 import { STOCKS, type Stock, type StockId } from './stock';
 
@@ -120,15 +120,6 @@ export function planSheets({ pieces }: { readonly pieces: readonly PieceFigure[]
   }
   const sheets = nameOffcuts(best.map((tree) => trimEdges(tree, stock, margin)));
   return { stock, copies, used: best.length, sheets, tooLarge };
-}
-
-/** A small linear congruential generator (Numerical Recipes): repeatable, good enough to shuffle. */
-function seeded(seed: number): () => number {
-  let state = seed >>> 0;
-  return () => {
-    state = (Math.imul(state, 1664525) + 1013904223) >>> 0;
-    return state / 2 ** 32;
-  };
 }
 
 const BY: readonly ((blank: Blank) => number)[] = [
