@@ -1,6 +1,6 @@
 import { drawFolded, show } from '@/engine';
 import { drawingSvg } from '@/exports/svg/drawing';
-import { pieceCount, piecesWords, shortTimeWords } from '@/features/sizing/facts';
+import { pieceCount, piecesWords, sheetsWords, shortTimeWords } from '@/features/sizing/facts';
 import type { Edition } from './editions.server';
 import { authorsFigures } from './models.server';
 
@@ -41,7 +41,7 @@ function workOut(edition: Edition): CardFacts {
   return {
     range,
     pieces: piecesWords(pieceCount(figures)),
-    sheets: tooLarge ? `Needs more than ${plan.stock.name}` : `Takes ${plan.used} of ${plan.stock.name}`,
+    sheets: tooLarge ? `Needs more than ${plan.stock.name}` : `Takes ${sheetsWords(plan)}`,
     tooLarge,
     time: shortTimeWords(edition.minutes),
     picture: edition.hero
