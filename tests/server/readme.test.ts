@@ -1,4 +1,4 @@
-import { existsSync, readFileSync } from 'node:fs';
+import { readdirSync, readFileSync } from 'node:fs';
 import { describe, expect, it } from 'vitest';
 import { DEMO_PEOPLE } from '@/features/demo/people';
 
@@ -26,8 +26,20 @@ describe('README.md', () => {
   );
 });
 
-it('every decision is in the index', () => {
-  const links = [...read('docs/decisions/README.md').matchAll(/\]\((.+?\.md)\)/g)].map(([, file]) => file);
-  expect(links.length).toBeGreaterThan(0);
-  for (const file of links) expect(existsSync(`docs/decisions/${file}`), file).toBe(true);
+describe('the index of decisions', () => {
+  const files = readdirSync('docs/decisions').filter((name) => name !== 'README.md');
+
+  it('has every decision by its own heading, in the order of their numbers', () => {
+    const links = [...read('docs/decisions/README.md').matchAll(/^- \[(.+)\]\((.+\.md)\)$/gm)].map(
+      ([, title, file]) => [file, title],
+    );
+    expect(links).toEqual(
+      files.sort().map((file) => [file, read(`docs/decisions/${file}`).split('\n')[0]?.replace(/^# /, '')]),
+    );
+  });
+
+  it('gives no number twice', () => {
+    const numbers = files.map((file) => file.slice(0, 3));
+    expect(numbers).toEqual([...new Set(numbers)]);
+  });
 });
