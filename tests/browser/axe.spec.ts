@@ -8,6 +8,9 @@ import { beSignedIn, type Role } from './support/signing-in';
 const axe = readFileSync(createRequire(import.meta.url).resolve('axe-core/axe.min.js'), 'utf8');
 const BOOK_BOX = '/projects/seed-keepers-book-box';
 
+// A trace looks into frames that run no scripts, and the console tells of it.
+test.use({ trace: 'off' });
+
 interface Place {
   readonly name: string;
   readonly path: string | ((context: BrowserContext, baseURL: string) => Promise<string>);
@@ -117,11 +120,8 @@ test.describe('at 360 px, with the pages’ own policy in force,', () => {
       // What the policy refuses is told on the console, too.
       const troubles: string[] = [];
       const isItself = (url: string) => place.status !== undefined && url === page.url();
-      // The test's own trace tries to look into frames that run no scripts.
-      const isTrace = (text: string) => text.startsWith('Blocked script execution') && text.includes('sandboxed');
       page.on('console', (message) => {
-        if (message.type() !== 'error' || isItself(message.location().url) || isTrace(message.text())) return;
-        troubles.push(message.text());
+        if (message.type() === 'error' && !isItself(message.location().url)) troubles.push(message.text());
       });
       page.on('pageerror', (error) => troubles.push(error.message));
       await open(page, place, baseURL!);
