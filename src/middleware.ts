@@ -19,7 +19,8 @@ export const onRequest: MiddlewareHandler = async (context, next) => {
   locals.signIn = null;
   if (context.isPrerendered) return next();
 
-  if (!isFromHere(request, { url, ownOrigins: [url.origin, config.siteUrl] })) return finish(context, sentFromElsewhere(context));
+  if (!isFromHere(request, { url, ownOrigins: [url.origin, config.siteUrl] }))
+    return finish(context, sentFromElsewhere(context));
   const session = await readSession(context);
   locals.user = session?.user ?? null;
   locals.signIn = session?.signIn ?? null;
@@ -45,7 +46,9 @@ async function refusal(context: APIContext, access: Access | null): Promise<Resp
 
 /** Without a body Astro shows the site's own page for it. */
 const notFound = (context: APIContext): Response =>
-  isApi(context) ? problem(404, 'Not found', { detail: 'Nothing is at this address.', code: 'not-found' }) : new Response(null, { status: 404 });
+  isApi(context)
+    ? problem(404, 'Not found', { detail: 'Nothing is at this address.', code: 'not-found' })
+    : new Response(null, { status: 404 });
 
 function sentFromElsewhere(context: APIContext): Response {
   const detail = 'This was not sent from a page of this site, so it was not done. Open the page here and try again.';

@@ -132,7 +132,9 @@ export const subscribers = sqliteTable('subscriber', {
   /** Trimmed, NFC, lower case: what is compared. */
   emailKey: text('email_key').notNull().unique(),
   state: text('state', { enum: ['pending', 'confirmed', 'left'] }).notNull(),
-  units: text('units', { enum: ['in', 'mm', 'cm'] }).notNull().default('in'),
+  units: text('units', { enum: ['in', 'mm', 'cm'] })
+    .notNull()
+    .default('in'),
   /** SHA-256 of the confirmation token; null once used. */
   confirmHash: text('confirm_hash'),
   confirmExpires: integer('confirm_expires', { mode: 'timestamp_ms' }),
@@ -190,7 +192,15 @@ export const mailings = sqliteTable(
 );
 
 export const DELIVERY_STATES = [
-  'queued', 'leased', 'in_flight', 'accepted', 'rejected', 'unknown', 'suppressed', 'cancelled', 'expired',
+  'queued',
+  'leased',
+  'in_flight',
+  'accepted',
+  'rejected',
+  'unknown',
+  'suppressed',
+  'cancelled',
+  'expired',
 ] as const;
 /** One recipient's copy. The only truth about what was sent. */
 export const deliveries = sqliteTable(
@@ -255,7 +265,9 @@ export const letters = sqliteTable(
     text: text('text').notNull(),
     html: text('html').notNull(),
     headers: text('headers', { mode: 'json' }).$type<Record<string, string>>().notNull().default({}),
-    state: text('state', { enum: ['queued', 'accepted', 'rejected', 'expired'] }).notNull().default('queued'),
+    state: text('state', { enum: ['queued', 'accepted', 'rejected', 'expired'] })
+      .notNull()
+      .default('queued'),
     attempts: integer('attempts').notNull().default(0),
     nextAt: integer('next_at', { mode: 'timestamp_ms' }).notNull().default(now),
     expiresAt: integer('expires_at', { mode: 'timestamp_ms' }).notNull(),

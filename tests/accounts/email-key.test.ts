@@ -49,7 +49,11 @@ describe('the compared form of an e-mail address', () => {
   });
 
   it('is its own compared form, holds one @ and nothing that breaks a header', () => {
-    const anything = fc.oneof(fc.string({ unit: 'binary' }), fc.emailAddress(), fc.tuple(fc.string(), fc.domain()).map(([local, domain]) => `${local}@${domain}`));
+    const anything = fc.oneof(
+      fc.string({ unit: 'binary' }),
+      fc.emailAddress(),
+      fc.tuple(fc.string(), fc.domain()).map(([local, domain]) => `${local}@${domain}`),
+    );
     fc.assert(
       fc.property(anything, (typed) => {
         const key = emailKey(typed);
@@ -65,7 +69,9 @@ describe('the compared form of an e-mail address', () => {
 describe('an address that letters are sent to', () => {
   it('has letters from a to z before the @, since mail goes out without SMTPUTF8; the domain may have others', () => {
     expect(addressFault('wenna@bücher.example')).toBeNull();
-    expect(addressFault('ren\u00e9@quilletlane.example')).toBe('Before the @, only letters from a to z can be written to from here. Use another address.');
+    expect(addressFault('ren\u00e9@quilletlane.example')).toBe(
+      'Before the @, only letters from a to z can be written to from here. Use another address.',
+    );
     expect(addressFault('wenna')).toBe('That is not an e-mail address: it looks like name@place.example.');
   });
 });

@@ -4,14 +4,33 @@ import { isFromHere } from '@/features/http/origin';
 import { problem, readJson } from '@/features/http/problem';
 
 const post = (body: BodyInit, type = 'application/json') =>
-  new Request('http://localhost:4321/api/x', { method: 'POST', headers: { 'content-type': type }, body, duplex: 'half' } as RequestInit);
+  new Request('http://localhost:4321/api/x', {
+    method: 'POST',
+    headers: { 'content-type': type },
+    body,
+    duplex: 'half',
+  } as RequestInit);
 const schema = z.object({ title: z.string().min(1, 'Give it a title.') });
 
 describe('a problem document', () => {
   it('holds type, status, title and what was said about it, and is not kept by caches', async () => {
-    const answer = problem(412, 'Changed meanwhile', { detail: 'Another tab saved it.', code: 'changed-meanwhile', headers: { etag: '"8"' } });
-    expect(await answer.json()).toEqual({ type: 'about:blank', status: 412, title: 'Changed meanwhile', detail: 'Another tab saved it.', code: 'changed-meanwhile' });
-    expect(Object.fromEntries(answer.headers)).toEqual({ 'content-type': 'application/problem+json; charset=utf-8', 'cache-control': 'no-store', etag: '"8"' });
+    const answer = problem(412, 'Changed meanwhile', {
+      detail: 'Another tab saved it.',
+      code: 'changed-meanwhile',
+      headers: { etag: '"8"' },
+    });
+    expect(await answer.json()).toEqual({
+      type: 'about:blank',
+      status: 412,
+      title: 'Changed meanwhile',
+      detail: 'Another tab saved it.',
+      code: 'changed-meanwhile',
+    });
+    expect(Object.fromEntries(answer.headers)).toEqual({
+      'content-type': 'application/problem+json; charset=utf-8',
+      'cache-control': 'no-store',
+      etag: '"8"',
+    });
   });
 });
 
@@ -76,7 +95,11 @@ describe('where a request comes from', () => {
 
   it.each([
     ['our own origin', { origin: 'http://localhost:4321' }, true],
-    ['the address that the site is known by', { origin: 'https://boxes.example', 'sec-fetch-site': 'same-origin' }, true],
+    [
+      'the address that the site is known by',
+      { origin: 'https://boxes.example', 'sec-fetch-site': 'same-origin' },
+      true,
+    ],
     ['another port', { origin: 'http://localhost:4322' }, false],
     ['another scheme', { origin: 'http://boxes.example' }, false],
     ['a name that begins like ours', { origin: 'https://boxes.example.elsewhere.example' }, false],

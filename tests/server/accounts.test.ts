@@ -3,9 +3,24 @@ import { beforeEach, describe, expect, it } from 'vitest';
 import { db } from '@/db/client.server';
 import { editions, letters, projects, users, verificationTokens } from '@/db/schema';
 import type { FormFaults } from '@/features/accounts/form-outcome';
-import { createPerson, findByEmail, findById, listPeople, setDisabled, setPassword, setRole, type Person } from '@/features/accounts/people.server';
+import {
+  createPerson,
+  findByEmail,
+  findById,
+  listPeople,
+  setDisabled,
+  setPassword,
+  setRole,
+  type Person,
+} from '@/features/accounts/people.server';
 import { postAccount } from '@/features/accounts/own-account.server';
-import { postInvitation, postSignIn, postSignInLink, postSignUp, postSignUpConfirm } from '@/features/accounts/sign-in-forms.server';
+import {
+  postInvitation,
+  postSignIn,
+  postSignInLink,
+  postSignUp,
+  postSignUpConfirm,
+} from '@/features/accounts/sign-in-forms.server';
 import { readSignUp } from '@/features/accounts/sign-up.server';
 import { onRequest } from '@/middleware';
 import { emptyWriteUp } from '../setup/empty-write-up';
@@ -29,16 +44,38 @@ async function made(person: Parameters<typeof createPerson>[0]): Promise<Person>
 }
 
 /** Posts a form to a page's handler. */
-async function post(handler: (context: ReturnType<typeof contextOf>) => Promise<Response | FormFaults>, fields: Record<string, string>, { cookie = '', path = '/sign-in' } = {}) {
-  const request = new Request(HERE + path, { method: 'POST', headers: { origin: HERE, cookie }, body: new URLSearchParams(fields) });
+async function post(
+  handler: (context: ReturnType<typeof contextOf>) => Promise<Response | FormFaults>,
+  fields: Record<string, string>,
+  { cookie = '', path = '/sign-in' } = {},
+) {
+  const request = new Request(HERE + path, {
+    method: 'POST',
+    headers: { origin: HERE, cookie },
+    body: new URLSearchParams(fields),
+  });
   const context = contextOf(request, { path });
   await onRequest(context, () => Promise.resolve(new Response('')));
   const outcome = await handler(context);
-  return outcome instanceof Response ? { status: outcome.status, to: outcome.headers.get('location'), cookie: cookiesOf(withCookies(outcome, context)), faults: {} } : { ...outcome, to: null, cookie: '' };
+  return outcome instanceof Response
+    ? {
+        status: outcome.status,
+        to: outcome.headers.get('location'),
+        cookie: cookiesOf(withCookies(outcome, context)),
+        faults: {},
+      }
+    : { ...outcome, to: null, cookie: '' };
 }
-const signIn = (fields: Record<string, string>) => post(postSignIn, { email: wenna.email, password: PASSWORD, ...fields });
-const who = async (cookie: string) => (await (await call('GET', '/api/account', { headers: { cookie } })).json()) as { email?: string; role?: string; code?: string };
-const lettersTo = (address: string) => db.select().from(letters).where(eq(letters.toAddress, address)).orderBy(letters.createdAt).all();
+const signIn = (fields: Record<string, string>) =>
+  post(postSignIn, { email: wenna.email, password: PASSWORD, ...fields });
+const who = async (cookie: string) =>
+  (await (await call('GET', '/api/account', { headers: { cookie } })).json()) as {
+    email?: string;
+    role?: string;
+    code?: string;
+  };
+const lettersTo = (address: string) =>
+  db.select().from(letters).where(eq(letters.toAddress, address)).orderBy(letters.createdAt).all();
 function linkIn(text: string | undefined): URLSearchParams {
   const address = /^http:\/\/\S+$/m.exec(text ?? '')?.[0];
   if (!address) throw new Error('The letter holds no address on a line of its own.');
@@ -91,7 +128,10 @@ describe('signing in with a password', () => {
 
   it('is refused after eight wrong passwords even with the right one, and says that a link still works', async () => {
     for (let i = 0; i < 8; i += 1) await signIn({ password: `wrong ${i}` });
-    expect(await signIn({})).toMatchObject({ status: 429, faults: { '': 'That was tried too often. Wait 15 minutes, then try again. A sign-in link still works.' } });
+    expect(await signIn({})).toMatchObject({
+      status: 429,
+      faults: { '': 'That was tried too often. Wait 15 minutes, then try again. A sign-in link still works.' },
+    });
     expect((await signIn({ with: 'link' })).to).toBe('/sign-in/sent');
   });
 
@@ -166,7 +206,9 @@ describe('a sign-in link', () => {
 
   it('no longer works after a quarter of an hour', async () => {
     await ask(wenna.email);
-    db.update(verificationTokens).set({ expires: new Date(Date.now() - 1) }).run();
+    db.update(verificationTokens)
+      .set({ expires: new Date(Date.now() - 1) })
+      .run();
     expect((await post(postSignInLink, asFields(linkIn(lettersTo(wenna.email)[0]?.text)))).status).toBe(400);
   });
 
@@ -207,8 +249,10 @@ describe('a sign-in link', () => {
 
 describe('signing up', () => {
   const fields = { name: 'Odo Marl', email: 'odo@quilletlane.example', password: 'seven wet gloves' };
-  const signUp = (changed: Partial<typeof fields> = {}) => post(postSignUp, { ...fields, ...changed }, { path: '/sign-up' });
-  const confirm = (token: string, { cookie = '', password = '' } = {}) => post(postSignUpConfirm, { token, password }, { cookie, path: '/sign-up/confirm' });
+  const signUp = (changed: Partial<typeof fields> = {}) =>
+    post(postSignUp, { ...fields, ...changed }, { path: '/sign-up' });
+  const confirm = (token: string, { cookie = '', password = '' } = {}) =>
+    post(postSignUpConfirm, { token, password }, { cookie, path: '/sign-up/confirm' });
   const tokenFor = (email: string) => linkIn(lettersTo(email).at(-1)?.text).get('token') ?? '';
 
   it('makes a reader when the button behind the letter is pressed in the same browser, not before', async () => {
@@ -226,7 +270,10 @@ describe('signing up', () => {
     const token = tokenFor(fields.email);
     const elsewhere = contextOf(new Request(`${HERE}/sign-up/confirm`));
     expect(await readSignUp(elsewhere, token)).toEqual({ email: fields.email, name: 'Odo Marl', needsPassword: true });
-    expect(await confirm(token, { password: 'a guess of mine' })).toMatchObject({ status: 401, faults: { password: 'That is not the password that you chose when you signed up.' } });
+    expect(await confirm(token, { password: 'a guess of mine' })).toMatchObject({
+      status: 401,
+      faults: { password: 'That is not the password that you chose when you signed up.' },
+    });
     expect(findByEmail(fields.email)).toBeUndefined();
     expect((await confirm(token, { password: fields.password })).status).toBe(303);
   });
@@ -270,9 +317,17 @@ describe('an invitation', () => {
   it('makes an author with a name and a password of their own', async () => {
     expect((await inviteTo('ines@quilletlane.example')).status).toBe(201);
     expect(findByEmail('ines@quilletlane.example')).toBeUndefined();
-    const accepted = await post(postInvitation, { ...linkTo('ines@quilletlane.example'), name: 'Ines Thornbury', password: 'paper lantern seeds' });
+    const accepted = await post(postInvitation, {
+      ...linkTo('ines@quilletlane.example'),
+      name: 'Ines Thornbury',
+      password: 'paper lantern seeds',
+    });
     expect([accepted.status, accepted.to]).toEqual([303, '/workroom']);
-    expect(await who(accepted.cookie)).toMatchObject({ email: 'ines@quilletlane.example', role: 'author', name: 'Ines Thornbury' });
+    expect(await who(accepted.cookie)).toMatchObject({
+      email: 'ines@quilletlane.example',
+      role: 'author',
+      name: 'Ines Thornbury',
+    });
   });
 
   it('makes a reader an author when they accept, and leaves their password', async () => {
@@ -289,8 +344,13 @@ describe('an invitation', () => {
     await inviteTo(wenna.email);
     const second = linkTo(wenna.email);
     expect((await post(postInvitation, first)).status).toBe(400);
-    expect((await call('DELETE', '/api/admin/invitations', { as: people.admin, body: { email: wenna.email } })).status).toBe(204);
-    expect(await post(postInvitation, second)).toMatchObject({ status: 400, faults: { '': 'This invitation no longer works. Ask for a new one.' } });
+    expect(
+      (await call('DELETE', '/api/admin/invitations', { as: people.admin, body: { email: wenna.email } })).status,
+    ).toBe(204);
+    expect(await post(postInvitation, second)).toMatchObject({
+      status: 400,
+      faults: { '': 'This invitation no longer works. Ask for a new one.' },
+    });
     expect(findById(wenna.id)?.role).toBe('reader');
   });
 
@@ -305,9 +365,14 @@ describe('an invitation', () => {
   });
 
   it('does not go to somebody who is an author already or is disabled', async () => {
-    expect(await (await inviteTo(people.author.email)).json()).toMatchObject({ status: 409, detail: 'author@quilletlane.example is an author already.' });
+    expect(await (await inviteTo(people.author.email)).json()).toMatchObject({
+      status: 409,
+      detail: 'author@quilletlane.example is an author already.',
+    });
     setDisabled(wenna.id, true);
-    expect(await (await inviteTo(wenna.email)).json()).toMatchObject({ detail: 'wenna@quilletlane.example is disabled. Enable the account first.' });
+    expect(await (await inviteTo(wenna.email)).json()).toMatchObject({
+      detail: 'wenna@quilletlane.example is disabled. Enable the account first.',
+    });
   });
 });
 
@@ -315,9 +380,15 @@ describe('looking after people', () => {
   it('never leaves the site without an admin', async () => {
     const sentence = 'A test admin is the only admin. Make somebody else an admin first.';
     expect(setRole(people.admin.id, 'reader')).toEqual({ ok: false, code: 'last-admin', sentence });
-    const answer = await call('PATCH', `/api/admin/people/${people.admin.id}`, { as: people.admin, body: { disabled: true } });
+    const answer = await call('PATCH', `/api/admin/people/${people.admin.id}`, {
+      as: people.admin,
+      body: { disabled: true },
+    });
     expect(await answer.json()).toMatchObject({ status: 409, code: 'last-admin' });
-    expect((await call('DELETE', '/api/account', { as: people.admin, body: { email: people.admin.email, keepName: true } })).status).toBe(409);
+    expect(
+      (await call('DELETE', '/api/account', { as: people.admin, body: { email: people.admin.email, keepName: true } }))
+        .status,
+    ).toBe(409);
     setRole(wenna.id, 'admin');
     expect(setRole(people.admin.id, 'reader').ok).toBe(true);
     expect(setDisabled(wenna.id, true).ok).toBe(false);
@@ -335,11 +406,23 @@ describe('looking after people', () => {
     const answer = await call('GET', '/api/admin/people?search=wenna', { as: people.admin });
     const { people: rows, total } = (await answer.json()) as { people: object[]; total: number };
     expect(total).toBe(1);
-    expect(Object.keys(rows[0] ?? {}).sort()).toEqual(['disabled', 'email', 'hasPassword', 'id', 'name', 'role', 'since']);
+    expect(Object.keys(rows[0] ?? {}).sort()).toEqual([
+      'disabled',
+      'email',
+      'hasPassword',
+      'id',
+      'name',
+      'role',
+      'since',
+    ]);
   });
 
   it('refuses an address that somebody has, however it is written', async () => {
-    expect(await createPerson({ email: 'WENNA@quilletlane.example' })).toEqual({ ok: false, code: 'taken', sentence: 'Somebody has an account with wenna@quilletlane.example.' });
+    expect(await createPerson({ email: 'WENNA@quilletlane.example' })).toEqual({
+      ok: false,
+      code: 'taken',
+      sentence: 'Somebody has an account with wenna@quilletlane.example.',
+    });
   });
 
   it('takes one change at a time', async () => {
@@ -347,12 +430,15 @@ describe('looking after people', () => {
     expect((await change({})).status).toBe(422);
     expect((await change({ role: 'author', disabled: true })).status).toBe(422);
     expect((await change({ role: 'owner' })).status).toBe(422);
-    expect((await call('PATCH', '/api/admin/people/nobody', { as: people.admin, body: { role: 'author' } })).status).toBe(404);
+    expect(
+      (await call('PATCH', '/api/admin/people/nobody', { as: people.admin, body: { role: 'author' } })).status,
+    ).toBe(404);
   });
 });
 
 describe('one’s own account', () => {
-  const account = (person: Person, fields: Record<string, string>, cookie: string) => post(postAccount, { email: person.email, ...fields }, { cookie, path: '/account' });
+  const account = (person: Person, fields: Record<string, string>, cookie: string) =>
+    post(postAccount, { email: person.email, ...fields }, { cookie, path: '/account' });
 
   it('changes the password, keeps this session and ends every other', async () => {
     const other = await sessionCookie(wenna);
@@ -367,15 +453,24 @@ describe('one’s own account', () => {
   });
 
   it('asks for the old password, except of someone who has just used a link', async () => {
-    const wrong = await account(wenna, { do: 'password', current: 'a guess of mine', next: 'eight wet gloves' }, await sessionCookie(wenna));
+    const wrong = await account(
+      wenna,
+      { do: 'password', current: 'a guess of mine', next: 'eight wet gloves' },
+      await sessionCookie(wenna),
+    );
     expect(wrong).toMatchObject({ status: 422, faults: { current: 'That is not your password as it is now.' } });
-    const byLink = await account(wenna, { do: 'password', next: 'eight wet gloves' }, await sessionCookie(wenna, 'link'));
+    const byLink = await account(
+      wenna,
+      { do: 'password', next: 'eight wet gloves' },
+      await sessionCookie(wenna, 'link'),
+    );
     expect(byLink.status).toBe(303);
   });
 
   it('lets nobody guess the old password without end', async () => {
     const cookie = await sessionCookie(wenna);
-    const guess = (current: string) => call('PUT', '/api/account/password', { headers: { cookie }, body: { current, next: 'eight wet gloves' } });
+    const guess = (current: string) =>
+      call('PUT', '/api/account/password', { headers: { cookie }, body: { current, next: 'eight wet gloves' } });
     for (let i = 0; i < 8; i += 1) expect((await guess(`wrong ${i}`)).status).toBe(422);
     expect((await guess(PASSWORD)).status).toBe(429);
   });
@@ -383,7 +478,10 @@ describe('one’s own account', () => {
   it('changes the name, and says what is wrong with one', async () => {
     const change = (name: string) => call('PATCH', '/api/account', { as: wenna, body: { name } });
     expect(await (await change('  Wenna T.  ')).json()).toMatchObject({ name: 'Wenna T.' });
-    expect(await (await change('Wen\u202ena')).json()).toMatchObject({ status: 422, detail: 'The name holds characters that cannot be seen. Type it anew.' });
+    expect(await (await change('Wen\u202ena')).json()).toMatchObject({
+      status: 422,
+      detail: 'The name holds characters that cannot be seen. Type it anew.',
+    });
     expect((await change('x'.repeat(81))).status).toBe(422);
   });
 
@@ -391,7 +489,10 @@ describe('one’s own account', () => {
     const answer = await call('GET', '/api/account/export', { as: wenna });
     expect(answer.headers.get('content-disposition')).toBe('attachment; filename="foldwright-own-data.json"');
     const text = await answer.text();
-    expect(JSON.parse(text)).toMatchObject({ account: { name: 'Wenna Tolliver', email: 'Wenna@QuilletLane.example', role: 'reader', hasPassword: true }, projects: [] });
+    expect(JSON.parse(text)).toMatchObject({
+      account: { name: 'Wenna Tolliver', email: 'Wenna@QuilletLane.example', role: 'reader', hasPassword: true },
+      projects: [],
+    });
     expect(text).not.toContain('argon2');
     expect(text).not.toContain(people.admin.email);
   });
@@ -399,7 +500,9 @@ describe('one’s own account', () => {
   const remove = (person: Person, body: object) => call('DELETE', '/api/account', { as: person, body });
 
   it('of a reader is deleted without a trace, after the address was typed', async () => {
-    expect(await (await remove(wenna, { email: 'ines@quilletlane.example', keepName: true })).json()).toMatchObject({ detail: 'Type Wenna@QuilletLane.example to show that you mean it.' });
+    expect(await (await remove(wenna, { email: 'ines@quilletlane.example', keepName: true })).json()).toMatchObject({
+      detail: 'Type Wenna@QuilletLane.example to show that you mean it.',
+    });
     expect((await remove(wenna, { email: 'wenna@quilletlane.example', keepName: true })).status).toBe(204);
     expect(findById(wenna.id)).toBeUndefined();
   });
@@ -407,8 +510,13 @@ describe('one’s own account', () => {
   function projectOf(author: Person, id: string, published: boolean): void {
     const nothing = {} as never;
     const state = { title: id, pattern: nothing, sizing: nothing, writeUp: emptyWriteUp() };
-    db.insert(projects).values({ id, authorId: author.id, slug: id, ...state }).run();
-    if (published) db.insert(editions).values({ id: `${id}-1`, projectId: id, n: 1, summary: '', publishedBy: author.id, ...state }).run();
+    db.insert(projects)
+      .values({ id, authorId: author.id, slug: id, ...state })
+      .run();
+    if (published)
+      db.insert(editions)
+        .values({ id: `${id}-1`, projectId: id, n: 1, summary: '', publishedBy: author.id, ...state })
+        .run();
   }
 
   it.each([
@@ -437,7 +545,10 @@ describe('one’s own account', () => {
 });
 
 describe('pages', () => {
-  const page = async (path: string, { as, ip = '127.0.0.1', route = path }: { as?: Person; ip?: string; route?: string } = {}) => {
+  const page = async (
+    path: string,
+    { as, ip = '127.0.0.1', route = path }: { as?: Person; ip?: string; route?: string } = {},
+  ) => {
     const cookie = as ? await sessionCookie(as) : '';
     const context = contextOf(new Request(HERE + path, { headers: { cookie } }), { ip, path: route });
     return (await onRequest(context, () => Promise.resolve(new Response('page')))) as Response;
@@ -469,9 +580,14 @@ describe('pages', () => {
   });
 
   it('refuse a form from another site in plain words', async () => {
-    const request = new Request(`${HERE}/sign-out`, { method: 'POST', headers: { origin: 'https://elsewhere.example' } });
+    const request = new Request(`${HERE}/sign-out`, {
+      method: 'POST',
+      headers: { origin: 'https://elsewhere.example' },
+    });
     const answer = (await onRequest(contextOf(request), () => Promise.resolve(new Response('page')))) as Response;
     expect(answer.status).toBe(403);
-    expect(await answer.text()).toBe('This was not sent from a page of this site, so it was not done. Open the page here and try again.\n');
+    expect(await answer.text()).toBe(
+      'This was not sent from a page of this site, so it was not done. Open the page here and try again.\n',
+    );
   });
 });

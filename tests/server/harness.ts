@@ -23,7 +23,10 @@ export const pagePaths = Object.keys(import.meta.glob(['../../src/pages/**/*.{as
 export const routeModules = new Map(Object.entries(files).map(([file, load]) => [pathOf(file), load]));
 
 function pathOf(file: string): string {
-  const path = file.replace('../../src/pages', '').replace(/\.(astro|ts|mdx|md)$/, '').replace(/\/index$/, '');
+  const path = file
+    .replace('../../src/pages', '')
+    .replace(/\.(astro|ts|mdx|md)$/, '')
+    .replace(/\/index$/, '');
   return path || '/';
 }
 
@@ -58,25 +61,35 @@ export async function callUnguarded(method: Method, address: string, options: Ca
   return withCookies(await handler(context), context);
 }
 
-async function prepare(method: Method, address: string, { as, body, headers = {}, origin = HERE, ip = '127.0.0.1' }: Call) {
+async function prepare(
+  method: Method,
+  address: string,
+  { as, body, headers = {}, origin = HERE, ip = '127.0.0.1' }: Call,
+) {
   const url = new URL(address, HERE);
   const found = findRoute(url.pathname);
   const module = found ? await routeModules.get(found.path)?.() : undefined;
   const sent = new Headers(headers);
   if (origin !== null && method !== 'GET') sent.set('origin', origin);
-  if (body !== undefined && typeof body !== 'string' && !(body instanceof FormData) && !sent.has('content-type')) sent.set('content-type', 'application/json');
+  if (body !== undefined && typeof body !== 'string' && !(body instanceof FormData) && !sent.has('content-type'))
+    sent.set('content-type', 'application/json');
   if (as) sent.set('cookie', [sent.get('cookie'), await sessionCookie(as)].filter(Boolean).join('; '));
   const request = new Request(url, {
     method,
     headers: sent,
-    ...(body === undefined ? {} : { body: typeof body === 'string' || body instanceof FormData ? body : JSON.stringify(body) }),
+    ...(body === undefined
+      ? {}
+      : { body: typeof body === 'string' || body instanceof FormData ? body : JSON.stringify(body) }),
   });
   const context = contextOf(request, { ip, params: found?.params ?? {}, path: found?.path ?? '/404' });
   return { context, handler: module?.[method], path: found?.path ?? url.pathname };
 }
 
 /** The part of Astro's context that routes and the middleware use. */
-export function contextOf(request: Request, { ip = '127.0.0.1', params = {}, path = '/' }: { ip?: string; params?: Record<string, string>; path?: string } = {}): APIContext {
+export function contextOf(
+  request: Request,
+  { ip = '127.0.0.1', params = {}, path = '/' }: { ip?: string; params?: Record<string, string>; path?: string } = {},
+): APIContext {
   const context = {
     request,
     url: new URL(request.url),
@@ -131,11 +144,16 @@ export async function sessionCookie(person: Person, by: 'password' | 'link' = 'p
 
 /** The cookies that a response leaves in the browser, as a request would send them. */
 export const cookiesOf = (response: Response): string =>
-  response.headers.getSetCookie().map((line) => line.split(';')[0]).filter((pair) => !pair?.endsWith('=')).join('; ');
+  response.headers
+    .getSetCookie()
+    .map((line) => line.split(';')[0])
+    .filter((pair) => !pair?.endsWith('='))
+    .join('; ');
 
 export function withCookies(response: Response, { cookies }: APIContext): Response {
   const copy = new Response(response.body, response);
-  for (const { name, value } of (cookies as unknown as Cookies).written) copy.headers.append('set-cookie', `${name}=${value}; Path=/`);
+  for (const { name, value } of (cookies as unknown as Cookies).written)
+    copy.headers.append('set-cookie', `${name}=${value}; Path=/`);
   return copy;
 }
 
@@ -145,10 +163,13 @@ class Cookies {
   readonly #sent: Map<string, string>;
 
   constructor(header: string) {
-    const pairs = header.split(/;\s*/).filter(Boolean).map((pair): [string, string] => {
-      const at = pair.indexOf('=');
-      return [pair.slice(0, at), pair.slice(at + 1)];
-    });
+    const pairs = header
+      .split(/;\s*/)
+      .filter(Boolean)
+      .map((pair): [string, string] => {
+        const at = pair.indexOf('=');
+        return [pair.slice(0, at), pair.slice(at + 1)];
+      });
     this.#sent = new Map(pairs);
   }
   get(name: string) {

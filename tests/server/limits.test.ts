@@ -20,12 +20,17 @@ const many = async (n: number, who = wenna) => {
 describe('counting tries', () => {
   it('allows eight for one e-mail address in a quarter of an hour, and refuses the ninth from anywhere', async () => {
     expect(await many(8)).toEqual(Array(8).fill(true));
-    expect(await takeTurn('sign-in', { ...wenna, ip: '198.51.100.1' })).toMatchObject({ ok: false, seconds: 900, sentence: 'That was tried too often. Wait 15 minutes, then try again.' });
+    expect(await takeTurn('sign-in', { ...wenna, ip: '198.51.100.1' })).toMatchObject({
+      ok: false,
+      seconds: 900,
+      sentence: 'That was tried too often. Wait 15 minutes, then try again.',
+    });
     expect((await takeTurn('sign-in', { ...wenna, emailKey: 'odo@quilletlane.example' })).ok).toBe(true);
   });
 
   it('allows forty from one address on the net, whoever they are for', async () => {
-    for (let i = 0; i < 40; i += 1) expect((await takeTurn('sign-in', { ip: '192.0.2.7', emailKey: `a${i}@quilletlane.example` })).ok).toBe(true);
+    for (let i = 0; i < 40; i += 1)
+      expect((await takeTurn('sign-in', { ip: '192.0.2.7', emailKey: `a${i}@quilletlane.example` })).ok).toBe(true);
     expect((await takeTurn('sign-in', { ip: '192.0.2.7', emailKey: 'b@quilletlane.example' })).ok).toBe(false);
     expect((await takeTurn('sign-in', { ip: '192.0.2.8', emailKey: 'b@quilletlane.example' })).ok).toBe(true);
   });
@@ -69,10 +74,15 @@ describe('counting tries', () => {
 });
 
 describe('a wait in words', () => {
-  it.each([[1, 'a minute'], [60, 'a minute'], [61, '2 minutes'], [840, '14 minutes'], [3600, 'an hour'], [3601, '2 hours'], [7200, '2 hours']])(
-    'of %i seconds is %s',
-    (seconds, words) => {
-      expect(waitInWords(seconds)).toBe(words);
-    },
-  );
+  it.each([
+    [1, 'a minute'],
+    [60, 'a minute'],
+    [61, '2 minutes'],
+    [840, '14 minutes'],
+    [3600, 'an hour'],
+    [3601, '2 hours'],
+    [7200, '2 hours'],
+  ])('of %i seconds is %s', (seconds, words) => {
+    expect(waitInWords(seconds)).toBe(words);
+  });
 });

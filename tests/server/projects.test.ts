@@ -20,12 +20,18 @@ beforeEach(async () => {
   id = addProject(ines.id, { slug: 'seed-list-folder' });
 });
 
-const ask = (method: Method, path = '', options: Call = {}) => call(method, `/api/projects/${id}${path}`, { as: ines, ...options });
+const ask = (method: Method, path = '', options: Call = {}) =>
+  call(method, `/api/projects/${id}${path}`, { as: ines, ...options });
 const open = async () => (await (await ask('GET')).json()) as OpenProject;
 const save = (state: unknown, revision: number | null, options: Call & { query?: string } = {}) =>
-  ask('PUT', options.query ?? '', { body: state, headers: revision === null ? {} : { 'if-match': `"${revision}"` }, ...options });
+  ask('PUT', options.query ?? '', {
+    body: state,
+    headers: revision === null ? {} : { 'if-match': `"${revision}"` },
+    ...options,
+  });
 const stored = (of = id) => db.select().from(projects).where(eq(projects.id, of)).get();
-const titles = async (as = ines) => ((await (await call('GET', '/api/projects', { as })).json()) as ProjectList).projects.map((project) => project.title);
+const titles = async (as = ines) =>
+  ((await (await call('GET', '/api/projects', { as })).json()) as ProjectList).projects.map((project) => project.title);
 const change = async (part: Partial<ProjectState>) => ({ ...(await open()).state, ...part });
 
 describe('saving a project', () => {
@@ -36,7 +42,11 @@ describe('saving a project', () => {
     expect(stored()).toMatchObject({ title: 'List folder', revision: 2 });
   });
   it('gives back what was saved', async () => {
-    const state = await change({ summary: 'Ä summary', minutes: 35, sizing: { values: { 'inside width': 101.6 }, choices: {}, units: 'mm', grid: '1mm' } });
+    const state = await change({
+      summary: 'Ä summary',
+      minutes: 35,
+      sizing: { values: { 'inside width': 101.6 }, choices: {}, units: 'mm', grid: '1mm' },
+    });
     await save(state, 1);
     expect((await open()).state).toEqual(state);
     expect((await ask('GET')).headers.get('etag')).toBe('"2"');
@@ -46,12 +56,17 @@ describe('saving a project', () => {
     const answer = await save(await change({ title: 'From the second tab' }), 1);
     expect([answer.status, answer.headers.get('etag')]).toEqual([412, '"2"']);
     // HTTP tells the time to the second.
-    expect(Date.parse(answer.headers.get('last-modified') ?? '')).toBe(Math.floor((stored()?.updatedAt.getTime() ?? 0) / 1000) * 1000);
+    expect(Date.parse(answer.headers.get('last-modified') ?? '')).toBe(
+      Math.floor((stored()?.updatedAt.getTime() ?? 0) / 1000) * 1000,
+    );
     expect(await answer.json()).toMatchObject({ code: 'changed-meanwhile' });
     expect(stored()).toMatchObject({ title: 'From the first tab', revision: 2 });
   });
   it('takes one of two saves made from the same revision', async () => {
-    const [first, second] = await Promise.all([save(await change({ title: 'One' }), 1), save(await change({ title: 'Two' }), 1)]);
+    const [first, second] = await Promise.all([
+      save(await change({ title: 'One' }), 1),
+      save(await change({ title: 'Two' }), 1),
+    ]);
     expect([first.status, second.status].sort()).toEqual([200, 412]);
     expect(stored()?.revision).toBe(2);
   });
@@ -65,14 +80,21 @@ describe('saving a project', () => {
     const { revision, kept } = (await answer.json()) as { revision: number; kept: { id: string; title: string } };
     expect([revision, kept.title]).toEqual([3, 'Folder (from the other tab)']);
     expect(stored()).toMatchObject({ summary: 'mine', revision: 3 });
-    expect(stored(kept.id)).toMatchObject({ summary: 'theirs', authorId: ines.id, revision: 1, publishedRevision: null });
+    expect(stored(kept.id)).toMatchObject({
+      summary: 'theirs',
+      authorId: ines.id,
+      revision: 1,
+      publishedRevision: null,
+    });
   });
   it('keeps no second version when the save itself is refused', async () => {
     expect((await save(await change({}), 9, { query: '?keep=other' })).status).toBe(412);
     expect(db.select().from(projects).all()).toHaveLength(1);
   });
   it('takes formulas that do not read, as they were typed', async () => {
-    const measures = FOLDER.measures.map((measure) => (measure.name === 'blank width' ? { ...measure, formula: '2 * ( insde' } : measure));
+    const measures = FOLDER.measures.map((measure) =>
+      measure.name === 'blank width' ? { ...measure, formula: '2 * ( insde' } : measure,
+    );
     expect((await save(await change({ pattern: { ...FOLDER, measures } }), 1)).status).toBe(200);
     expect((await open()).state.pattern.measures[2]?.formula).toBe('2 * ( insde');
   });
@@ -87,9 +109,15 @@ describe('a state that does not fit', () => {
     ['a pattern that is none', { pattern: { name: 'Folder' } }],
     ['a field that a pattern does not have', { pattern: { ...FOLDER, script: 'x' } }],
     ['a formula that is a number', { pattern: { ...FOLDER, measures: [{ name: 'a', formula: 7 }] } }],
-    ['an unknown part in the write-up', { writeUp: { version: 1, doc: { type: 'doc', content: [{ type: 'script', content: [] }] } } }],
+    [
+      'an unknown part in the write-up',
+      { writeUp: { version: 1, doc: { type: 'doc', content: [{ type: 'script', content: [] }] } } },
+    ],
     ['a write-up of no version', { writeUp: { doc: { type: 'doc', content: [] } } }],
-    ['a size that is no number', { sizing: { values: { 'inside width': 'wide' }, choices: {}, units: 'in', grid: '1/16in' } }],
+    [
+      'a size that is no number',
+      { sizing: { values: { 'inside width': 'wide' }, choices: {}, units: 'in', grid: '1/16in' } },
+    ],
     ['an unknown unit', { sizing: { values: {}, choices: {}, units: 'ell', grid: '1/16in' } }],
     ['half a minute', { minutes: 0.5 }],
     ['a title longer than 120 characters', { title: 'x'.repeat(121) }],
@@ -122,7 +150,11 @@ describe('somebody else’s project', () => {
     ['PUT', '/address', { slug: 'taken-over' }],
   ])('is not there for another author: %s %s', async (method, path, body) => {
     setRole(people.reader.id, 'author');
-    const answer = await ask(method, path, { as: { ...people.reader, role: 'author' }, body, headers: { 'if-match': '"1"' } });
+    const answer = await ask(method, path, {
+      as: { ...people.reader, role: 'author' },
+      body,
+      headers: { 'if-match': '"1"' },
+    });
     expect([answer.status, ((await answer.json()) as { code: string }).code]).toEqual([404, 'no-such-project']);
     expect(stored()).toMatchObject({ deletedAt: null, revision: 1, slug: 'seed-list-folder' });
   });
@@ -143,7 +175,9 @@ describe('deleting', () => {
     const before = stored();
     const answer = (await (await ask('DELETE')).json()) as { restore: string };
     expect(await titles()).toEqual([]);
-    expect([(await ask('GET')).status, (await save({}, 1)).status, (await ask('DELETE')).status]).toEqual([404, 404, 404]);
+    expect([(await ask('GET')).status, (await save({}, 1)).status, (await ask('DELETE')).status]).toEqual([
+      404, 404, 404,
+    ]);
     expect((await call('POST', answer.restore, { as: ines })).status).toBe(200);
     expect(stored()).toEqual(before);
     expect(await titles()).toEqual(['Seed list folder']);
@@ -158,11 +192,19 @@ describe('a copy', () => {
   it('is a draft of its own at an address of its own', async () => {
     const copy = (await (await ask('POST', '/duplicate', { body: {} })).json()) as { id: string; title: string };
     expect(copy.title).toBe('Seed list folder (copy)');
-    expect(stored(copy.id)).toMatchObject({ slug: 'seed-list-folder-copy', revision: 1, publishedRevision: null, authorId: ines.id, pattern: FOLDER });
+    expect(stored(copy.id)).toMatchObject({
+      slug: 'seed-list-folder-copy',
+      revision: 1,
+      publishedRevision: null,
+      authorId: ines.id,
+      pattern: FOLDER,
+    });
   });
   it('of a copy is not called a copy of a copy', async () => {
     const first = (await (await ask('POST', '/duplicate', { body: {} })).json()) as { id: string };
-    const second = (await (await call('POST', `/api/projects/${first.id}/duplicate`, { as: ines, body: {} })).json()) as { id: string; title: string };
+    const second = (await (
+      await call('POST', `/api/projects/${first.id}/duplicate`, { as: ines, body: {} })
+    ).json()) as { id: string; title: string };
     expect(second.title).toBe('Seed list folder (copy)');
     expect(stored(second.id)?.slug).toBe('seed-list-folder-copy-2');
   });
@@ -177,25 +219,38 @@ describe('a copy', () => {
 
 describe('a new project', () => {
   const begin = (body: unknown) => call('POST', '/api/projects', { as: ines, body });
-  it.each(['tray', 'lidded-box', 'sleeve-drawer', 'book-box'])('from %s opens with its measures, usual size and steps, and nothing but advice on its proof list', async (pattern) => {
-    const answer = await begin({ pattern, title: '  Seed box ' });
-    const { id: made, slug } = (await answer.json()) as { id: string; slug: string };
-    expect([answer.status, slug, answer.headers.get('location')]).toEqual([201, 'seed-box', `/workroom/${made}`]);
-    expect(stored(made)).toMatchObject({ title: 'Seed box', authorId: ines.id, revision: 1, publishedRevision: null });
-    const list = (await (await call('GET', '/api/projects', { as: ines })).json()) as ProjectList;
-    const row = list.projects.find((project) => project.id === made);
-    expect(row).toMatchObject({ blocking: 0, stage: { stage: 'draft' } });
-    expect(row?.folded).toContain('<svg');
-    const state = (await (await call('GET', `/api/projects/${made}`, { as: ines })).json()) as OpenProject;
-    expect((await call('PUT', `/api/projects/${made}`, { as: ines, body: state.state, headers: { 'if-match': '"1"' } })).status).toBe(200);
-  });
+  it.each(['tray', 'lidded-box', 'sleeve-drawer', 'book-box'])(
+    'from %s opens with its measures, usual size and steps, and nothing but advice on its proof list',
+    async (pattern) => {
+      const answer = await begin({ pattern, title: '  Seed box ' });
+      const { id: made, slug } = (await answer.json()) as { id: string; slug: string };
+      expect([answer.status, slug, answer.headers.get('location')]).toEqual([201, 'seed-box', `/workroom/${made}`]);
+      expect(stored(made)).toMatchObject({
+        title: 'Seed box',
+        authorId: ines.id,
+        revision: 1,
+        publishedRevision: null,
+      });
+      const list = (await (await call('GET', '/api/projects', { as: ines })).json()) as ProjectList;
+      const row = list.projects.find((project) => project.id === made);
+      expect(row).toMatchObject({ blocking: 0, stage: { stage: 'draft' } });
+      expect(row?.folded).toContain('<svg');
+      const state = (await (await call('GET', `/api/projects/${made}`, { as: ines })).json()) as OpenProject;
+      expect(
+        (await call('PUT', `/api/projects/${made}`, { as: ines, body: state.state, headers: { 'if-match': '"1"' } }))
+          .status,
+      ).toBe(200);
+    },
+  );
   it('has an address that nobody else has', async () => {
     await begin({ pattern: 'tray', title: 'Seed box' });
     expect(await (await begin({ pattern: 'tray', title: 'Seed box' })).json()).toMatchObject({ slug: 'seed-box-2' });
   });
   it('needs a title and a pattern that exists', async () => {
     expect((await begin({ pattern: 'tray', title: ' ' })).status).toBe(422);
-    expect(await (await begin({ pattern: 'hat-box', title: 'Hat box' })).json()).toMatchObject({ code: 'no-such-pattern' });
+    expect(await (await begin({ pattern: 'hat-box', title: 'Hat box' })).json()).toMatchObject({
+      code: 'no-such-pattern',
+    });
   });
 });
 
@@ -209,7 +264,9 @@ describe('the address', () => {
     expect(await move('list-folder')).toEqual([200, 'list-folder']);
     expect(await move('seed-box')).toEqual([409, 'list-folder']);
   });
-  it.each(['No', 'ab', 'two  words', '-edge', 'double--hyphen', 'a/b'])('is not “%s”', async (slug) => expect(await move(slug)).toEqual([422, 'seed-list-folder']));
+  it.each(['No', 'ab', 'two  words', '-edge', 'double--hyphen', 'a/b'])('is not “%s”', async (slug) =>
+    expect(await move(slug)).toEqual([422, 'seed-list-folder']),
+  );
   it('of a published project stays', async () => {
     expect((await ask('POST', '/publish', { body: { revision: 1 } })).status).toBe(201);
     expect(await move('list-folder')).toEqual([409, 'seed-list-folder']);
@@ -219,9 +276,13 @@ describe('the address', () => {
 describe('publishing from the desk', () => {
   const publish = async (body: unknown) => {
     const answer = await ask('POST', '/publish', { body });
-    return { status: answer.status, ...((await answer.json()) as { n?: number; slug?: string; code?: string; errors?: unknown[]; detail?: string }) };
+    return {
+      status: answer.status,
+      ...((await answer.json()) as { n?: number; slug?: string; code?: string; errors?: unknown[]; detail?: string }),
+    };
   };
-  const stage = async () => ((await (await call('GET', '/api/projects', { as: ines })).json()) as ProjectList).projects[0]?.stage;
+  const stage = async () =>
+    ((await (await call('GET', '/api/projects', { as: ines })).json()) as ProjectList).projects[0]?.stage;
 
   it('makes edition 1, then asks the next one for a correction note', async () => {
     expect(await publish({ revision: 1 })).toMatchObject({ status: 201, n: 1, slug: 'seed-list-folder' });
@@ -230,7 +291,13 @@ describe('publishing from the desk', () => {
     expect(await stage()).toEqual({ stage: 'changed', edition: 1 });
     expect(await publish({ revision: 2 })).toMatchObject({ status: 422, code: 'note-needed' });
     expect(await publish({ revision: 2, note: 'The summary says more.' })).toMatchObject({ status: 201, n: 2 });
-    expect(db.select().from(editions).all().map((edition) => edition.correctionNote)).toEqual(['', 'The summary says more.']);
+    expect(
+      db
+        .select()
+        .from(editions)
+        .all()
+        .map((edition) => edition.correctionNote),
+    ).toEqual(['', 'The summary says more.']);
   });
   it('refuses a revision that the author has not seen', async () => {
     await save(await change({ summary: 'Saved meanwhile.' }), 1);

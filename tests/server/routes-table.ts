@@ -34,7 +34,15 @@ export interface RouteRow {
 function draft({ author }: Cast): { id: string } {
   const nothing = {} as never;
   db.insert(projects)
-    .values({ id: 'draft', authorId: author.id, slug: 'draft', title: 'Draft', pattern: nothing, sizing: nothing, writeUp: emptyWriteUp() })
+    .values({
+      id: 'draft',
+      authorId: author.id,
+      slug: 'draft',
+      title: 'Draft',
+      pattern: nothing,
+      sizing: nothing,
+      writeUp: emptyWriteUp(),
+    })
     .run();
   return { id: 'draft' };
 }
@@ -45,10 +53,22 @@ function mailing(people: Cast): { id: string } {
   const nothing = {} as never;
   const { id: publishedBy } = people.author;
   db.insert(editions)
-    .values({ id: 'edition', projectId, n: 1, title: 'Draft', summary: '', pattern: nothing, sizing: nothing, writeUp: emptyWriteUp(), publishedBy })
+    .values({
+      id: 'edition',
+      projectId,
+      n: 1,
+      title: 'Draft',
+      summary: '',
+      pattern: nothing,
+      sizing: nothing,
+      writeUp: emptyWriteUp(),
+      publishedBy,
+    })
     .run();
   const words = { subject: 'A box', greeting: 'Hello', excerpt: 'It is new.' };
-  db.insert(mailings).values({ id: 'mailing', projectId, edition: 1, authorId: publishedBy, ...words }).run();
+  db.insert(mailings)
+    .values({ id: 'mailing', projectId, edition: 1, authorId: publishedBy, ...words })
+    .run();
   return { id: 'mailing' };
 }
 /** For routes that read no body: who may come so far is all there is to try. */
@@ -59,12 +79,23 @@ export const ROUTES: readonly RouteRow[] = [
 
   { path: '/api/account', method: 'GET', who: 'reader' },
   { path: '/api/account', method: 'PATCH', who: 'reader', body: { name: 'Wenna Tolliver' } },
-  { path: '/api/account', method: 'DELETE', who: 'reader', body: { email: 'reader@quilletlane.example', keepName: true } },
+  {
+    path: '/api/account',
+    method: 'DELETE',
+    who: 'reader',
+    body: { email: 'reader@quilletlane.example', keepName: true },
+  },
   { path: '/api/account/password', method: 'PUT', who: 'reader', body: { next: 'seven damp snails' } },
   { path: '/api/account/export', method: 'GET', who: 'reader' },
 
   { path: '/api/admin/people', method: 'GET', who: 'admin' },
-  { path: '/api/admin/people/[id]', method: 'PATCH', who: 'admin', prepare: ({ reader }) => ({ id: reader.id }), body: { role: 'author' } },
+  {
+    path: '/api/admin/people/[id]',
+    method: 'PATCH',
+    who: 'admin',
+    prepare: ({ reader }) => ({ id: reader.id }),
+    body: { role: 'author' },
+  },
   { path: '/api/admin/invitations', method: 'GET', who: 'admin' },
   { path: '/api/admin/invitations', method: 'POST', who: 'admin', body: { email: 'odo@quilletlane.example' } },
   { path: '/api/admin/invitations', method: 'DELETE', who: 'admin', body: { email: 'odo@quilletlane.example' } },
@@ -72,7 +103,14 @@ export const ROUTES: readonly RouteRow[] = [
   { path: '/api/projects', method: 'GET', who: 'author' },
   { path: '/api/projects', method: 'POST', who: 'author', body: { pattern: 'no-such-pattern', title: 'Seed box' } },
   { path: '/api/projects/[id]', method: 'GET', who: 'author', prepare: draft },
-  { path: '/api/projects/[id]', method: 'PUT', who: 'author', prepare: draft, headers: { 'if-match': '"1"' }, body: {} },
+  {
+    path: '/api/projects/[id]',
+    method: 'PUT',
+    who: 'author',
+    prepare: draft,
+    headers: { 'if-match': '"1"' },
+    body: {},
+  },
   { path: '/api/projects/[id]', method: 'DELETE', who: 'author', prepare: draft },
   { path: '/api/projects/[id]/address', method: 'PUT', who: 'author', prepare: draft, body: { slug: 'seed-box' } },
   { path: '/api/projects/[id]/duplicate', method: 'POST', who: 'author', prepare: draft, body: {} },

@@ -18,13 +18,19 @@ async function addressOf(row: RouteRow): Promise<string> {
   const params = (await row.prepare?.(people)) ?? {};
   return row.path.replace(/\[(\w+)\]/g, (_, name: string) => {
     const value = params[name];
-    if (value === undefined) throw new Error(`${named(row)}: its row in tests/server/routes-table.ts needs \`prepare\` to give “${name}”.`);
+    if (value === undefined)
+      throw new Error(`${named(row)}: its row in tests/server/routes-table.ts needs \`prepare\` to give “${name}”.`);
     return encodeURIComponent(value);
   });
 }
-const fitting = ({ body, form, headers = {} }: RouteRow) => ({ headers, ...(form ? { body: new FormData() } : body === undefined ? {} : { body }) });
-const mayNot = ({ who }: RouteRow) => (who === 'all' || who === 'this machine' ? [] : ROLES.filter((role) => !includesRole(role, who)));
-const may = ({ who }: RouteRow) => (who === 'all' || who === 'this machine' ? ROLES : ROLES.filter((role) => includesRole(role, who)));
+const fitting = ({ body, form, headers = {} }: RouteRow) => ({
+  headers,
+  ...(form ? { body: new FormData() } : body === undefined ? {} : { body }),
+});
+const mayNot = ({ who }: RouteRow) =>
+  who === 'all' || who === 'this machine' ? [] : ROLES.filter((role) => !includesRole(role, who));
+const may = ({ who }: RouteRow) =>
+  who === 'all' || who === 'this machine' ? ROLES : ROLES.filter((role) => includesRole(role, who));
 
 async function expectProblem(answer: Response, status: number, code?: string): Promise<void> {
   expect(answer.headers.get('content-type')).toMatch(/^application\/problem\+json/);
@@ -43,8 +49,14 @@ describe('the table of routes', () => {
     const listed = ROUTES.map(named);
     const missing = existing.filter((route) => !listed.includes(route));
     const gone = listed.filter((route) => !existing.includes(route));
-    expect(missing, `No row for: ${missing.join(', ')}. Add one to tests/server/routes-table.ts; its head says how.`).toEqual([]);
-    expect(gone, `No such route any more: ${gone.join(', ')}. Take its row out of tests/server/routes-table.ts.`).toEqual([]);
+    expect(
+      missing,
+      `No row for: ${missing.join(', ')}. Add one to tests/server/routes-table.ts; its head says how.`,
+    ).toEqual([]);
+    expect(
+      gone,
+      `No such route any more: ${gone.join(', ')}. Take its row out of tests/server/routes-table.ts.`,
+    ).toEqual([]);
     expect(listed).toHaveLength(new Set(listed).size);
     expect(listed).toHaveLength(existing.length);
   });
@@ -62,7 +74,9 @@ describe('the table of routes', () => {
   });
 });
 
-describe.each(ROUTES.filter((row) => mayNot(row).length > 0 || row.who === 'reader').map((row) => [named(row), row] as const))('%s', (_, row) => {
+describe.each(
+  ROUTES.filter((row) => mayNot(row).length > 0 || row.who === 'reader').map((row) => [named(row), row] as const),
+)('%s', (_, row) => {
   it('asks those who are not signed in to sign in', async () => {
     const address = await addressOf(row);
     await expectProblem(await call(row.method, address, fitting(row)), 401, 'sign-in-first');
@@ -74,7 +88,11 @@ describe.each(ROUTES.filter((row) => mayNot(row).length > 0 || row.who === 'read
     it.each(low)('refuses %s, in the middleware and once more itself', async (role) => {
       const address = await addressOf(row);
       await expectProblem(await call(row.method, address, { ...fitting(row), as: people[role] }), 403, 'wrong-role');
-      await expectProblem(await callUnguarded(row.method, address, { ...fitting(row), as: people[role] }), 403, 'wrong-role');
+      await expectProblem(
+        await callUnguarded(row.method, address, { ...fitting(row), as: people[role] }),
+        403,
+        'wrong-role',
+      );
     });
   }
 });
@@ -93,7 +111,12 @@ describe.each(ROUTES.map((row) => [named(row), row] as const))('%s', (_, row) =>
       ['by a page of another site, as the browser says', { headers: { 'sec-fetch-site': 'cross-site' } }],
     ])('refuses what is sent %s', async (_how, how) => {
       const sent = fitting(row);
-      const answer = await call(row.method, await addressOf(row), { ...sent, ...how, headers: { ...sent.headers, ...('headers' in how ? how.headers : {}) }, as: people.admin });
+      const answer = await call(row.method, await addressOf(row), {
+        ...sent,
+        ...how,
+        headers: { ...sent.headers, ...('headers' in how ? how.headers : {}) },
+        as: people.admin,
+      });
       await expectProblem(answer, 403, 'other-origin');
     });
   }
@@ -103,17 +126,34 @@ describe.each(ROUTES.map((row) => [named(row), row] as const))('%s', (_, row) =>
 
     it('refuses JSON that is cut short', async () => {
       const headers = { ...row.headers, 'content-type': 'application/json' };
-      await expectProblem(await call(row.method, await addressOf(row), { as: as(), headers, body: '{"cut' }), 400, 'bad-json');
+      await expectProblem(
+        await call(row.method, await addressOf(row), { as: as(), headers, body: '{"cut' }),
+        400,
+        'bad-json',
+      );
     });
 
     it('refuses a body that is not sent as JSON', async () => {
       const headers = { ...row.headers, 'content-type': 'text/plain' };
-      await expectProblem(await call(row.method, await addressOf(row), { as: as(), headers, body: JSON.stringify(row.body) }), 415, 'not-json');
+      await expectProblem(
+        await call(row.method, await addressOf(row), { as: as(), headers, body: JSON.stringify(row.body) }),
+        415,
+        'not-json',
+      );
     });
 
-    it.each([['a list', []], ['null', null], ['a number', 7], ['a text', 'text']])('refuses %s where an object is due', async (_what, wrong) => {
+    it.each([
+      ['a list', []],
+      ['null', null],
+      ['a number', 7],
+      ['a text', 'text'],
+    ])('refuses %s where an object is due', async (_what, wrong) => {
       const headers = { ...row.headers, 'content-type': 'application/json' };
-      await expectProblem(await call(row.method, await addressOf(row), { as: as(), headers, body: JSON.stringify(wrong) }), 422, 'does-not-fit');
+      await expectProblem(
+        await call(row.method, await addressOf(row), { as: as(), headers, body: JSON.stringify(wrong) }),
+        422,
+        'does-not-fit',
+      );
     });
   }
 });

@@ -20,7 +20,14 @@ function desk(answers: SaveAnswer[] = []) {
     now: Date.now,
     start: { revision: 7, savedAt: 0 },
   });
-  return { saver, sent, copies, states, answer: (answer: SaveAnswer) => waiting.shift()?.(answer), kind: () => saver.state().status.kind };
+  return {
+    saver,
+    sent,
+    copies,
+    states,
+    answer: (answer: SaveAnswer) => waiting.shift()?.(answer),
+    kind: () => saver.state().status.kind,
+  };
 }
 const saved = (revision: number): SaveAnswer => ({ kind: 'saved', revision, updatedAt: 1000 * revision });
 
@@ -100,7 +107,11 @@ describe('when another tab saved meanwhile', () => {
     const { saver, sent, copies } = desk([changed]);
     saver.changed('a');
     await vi.advanceTimersByTimeAsync(1000);
-    expect(saver.state()).toEqual({ status: { kind: 'conflict', other: { revision: 9, updatedAt: 5000 } }, revision: 7, savedAt: 0 });
+    expect(saver.state()).toEqual({
+      status: { kind: 'conflict', other: { revision: 9, updatedAt: 5000 } },
+      revision: 7,
+      savedAt: 0,
+    });
     saver.changed('ab');
     await vi.advanceTimersByTimeAsync(60_000);
     await saver.flush();

@@ -12,13 +12,22 @@ const project: OpenProject = {
   updatedAt: 0,
   author: { id: 'ines', name: 'Ines Thornbury' },
   stage: { stage: 'draft' },
-  state: { title: 'Folder', summary: '', minutes: null, hero: null, pattern: FOLDER, sizing: AUTHORS_SIZE, writeUp: ONE_STEP },
+  state: {
+    title: 'Folder',
+    summary: '',
+    minutes: null,
+    hero: null,
+    pattern: FOLDER,
+    sizing: AUTHORS_SIZE,
+    writeUp: ONE_STEP,
+  },
 };
 let store: DeskStore;
 beforeEach(() => {
   store = createDeskStore(project);
 });
-const type = (formula: string) => store.editPattern('blank width.formula', (pattern) => changeMeasure(pattern, 'blank width', { formula }));
+const type = (formula: string) =>
+  store.editPattern('blank width.formula', (pattern) => changeMeasure(pattern, 'blank width', { formula }));
 const cut = (name: string) => store.$live.get()?.figures.measures.find((figure) => figure.name === name)?.cut;
 
 describe('the desk', () => {

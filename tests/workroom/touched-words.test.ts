@@ -10,7 +10,11 @@ it.each([
   [Date.UTC(2026, 2, 2, 12, 0), '2 March 2026'],
 ])('%i was touched %s', (at, words) => expect(touchedWords(at, { now, timeZone: 'UTC' })).toBe(words));
 
-it.each([[400, 'just now'], [2000, '2 s ago'], [59_000, '59 s ago'], [60_000, '1 min ago'], [7_200_000, '2 h ago'], [172_800_000, '2 d ago']])(
-  '%i ms is %s',
-  (ms, words) => expect(agoWords(ms)).toBe(words),
-);
+it.each([
+  [400, 'just now'],
+  [2000, '2 s ago'],
+  [59_000, '59 s ago'],
+  [60_000, '1 min ago'],
+  [7_200_000, '2 h ago'],
+  [172_800_000, '2 d ago'],
+])('%i ms is %s', (ms, words) => expect(agoWords(ms)).toBe(words));

@@ -21,13 +21,35 @@ export function exportOwnData(person: Person) {
       hasPassword: person.passwordHash !== null,
     },
     subscription: subscription
-      ? { state: subscription.state, name: subscription.name, units: subscription.units, since: subscription.createdAt, confirmedAt: subscription.confirmedAt, leftAt: subscription.leftAt }
+      ? {
+          state: subscription.state,
+          name: subscription.name,
+          units: subscription.units,
+          since: subscription.createdAt,
+          confirmedAt: subscription.confirmedAt,
+          leftAt: subscription.leftAt,
+        }
       : null,
     projects: own,
-    editions: ids.length > 0 ? db.select().from(editions).where(inArray(editions.projectId, ids)).orderBy(editions.publishedAt).all() : [],
-    pictures: db.select().from(uploads).where(eq(uploads.ownerId, person.id)).all().map((upload) => ({ ...upload, address: `/media/${upload.id}-1600.webp` })),
+    editions:
+      ids.length > 0
+        ? db.select().from(editions).where(inArray(editions.projectId, ids)).orderBy(editions.publishedAt).all()
+        : [],
+    pictures: db
+      .select()
+      .from(uploads)
+      .where(eq(uploads.ownerId, person.id))
+      .all()
+      .map((upload) => ({ ...upload, address: `/media/${upload.id}-1600.webp` })),
     mailings: db
-      .select({ subject: mailings.subject, greeting: mailings.greeting, excerpt: mailings.excerpt, state: mailings.state, total: mailings.total, createdAt: mailings.createdAt })
+      .select({
+        subject: mailings.subject,
+        greeting: mailings.greeting,
+        excerpt: mailings.excerpt,
+        state: mailings.state,
+        total: mailings.total,
+        createdAt: mailings.createdAt,
+      })
       .from(mailings)
       .where(eq(mailings.authorId, person.id))
       .all(),
@@ -43,7 +65,10 @@ export function exportOwnData(person: Person) {
 /** What deleting the account would leave standing. */
 export function whatStays(personId: string): { readonly published: number; readonly drafts: number } {
   const own = db.select({ id: projects.id }).from(projects).where(eq(projects.authorId, personId)).all();
-  const published = publishedAmong(db, own.map(({ id }) => id)).length;
+  const published = publishedAmong(
+    db,
+    own.map(({ id }) => id),
+  ).length;
   return { published, drafts: own.length - published };
 }
 
@@ -64,7 +89,12 @@ export async function deleteAccount(person: Person, { keepName }: { keepName: bo
 function removePerson(tx: Transaction, person: Person, keepName: boolean): { ok: true; pictures: string[] } | Refused {
   const fault = lastAdmin(person, 'Make somebody else an admin before you delete this account.');
   if (fault) return fault;
-  const own = tx.select({ id: projects.id }).from(projects).where(eq(projects.authorId, person.id)).all().map(({ id }) => id);
+  const own = tx
+    .select({ id: projects.id })
+    .from(projects)
+    .where(eq(projects.authorId, person.id))
+    .all()
+    .map(({ id }) => id);
   const kept = publishedAmong(tx, own);
   const pictures = unusedPictures(tx, person.id, kept);
   if (pictures.length > 0) tx.delete(uploads).where(inArray(uploads.id, pictures)).run();
@@ -94,7 +124,11 @@ function removePerson(tx: Transaction, person: Person, keepName: boolean): { ok:
 
 function publishedAmong(tx: Pick<Transaction, 'selectDistinct'>, ids: readonly string[]): string[] {
   if (ids.length === 0) return [];
-  const told = tx.selectDistinct({ id: editions.projectId }).from(editions).where(inArray(editions.projectId, [...ids])).all();
+  const told = tx
+    .selectDistinct({ id: editions.projectId })
+    .from(editions)
+    .where(inArray(editions.projectId, [...ids]))
+    .all();
   return told.map(({ id }) => id);
 }
 
@@ -104,10 +138,19 @@ function unusedPictures(tx: Transaction, ownerId: string, keptProjects: readonly
   return pictures
     .map(({ id }) => id)
     .filter((id) => {
-      const shows = (table: typeof editions | typeof projects) => or(eq(table.heroUploadId, id), sql`instr(${table.writeUp}, ${id}) > 0`);
+      const shows = (table: typeof editions | typeof projects) =>
+        or(eq(table.heroUploadId, id), sql`instr(${table.writeUp}, ${id}) > 0`);
       const inEdition = tx.select({ id: editions.id }).from(editions).where(shows(editions)).limit(1).get();
-      const stays = keptProjects.length > 0 ? or(sql`${projects.authorId} <> ${ownerId}`, inArray(projects.id, [...keptProjects])) : sql`${projects.authorId} <> ${ownerId}`;
-      const inProject = tx.select({ id: projects.id }).from(projects).where(and(shows(projects), stays)).limit(1).get();
+      const stays =
+        keptProjects.length > 0
+          ? or(sql`${projects.authorId} <> ${ownerId}`, inArray(projects.id, [...keptProjects]))
+          : sql`${projects.authorId} <> ${ownerId}`;
+      const inProject = tx
+        .select({ id: projects.id })
+        .from(projects)
+        .where(and(shows(projects), stays))
+        .limit(1)
+        .get();
       return !inEdition && !inProject;
     });
 }
@@ -115,7 +158,7 @@ function unusedPictures(tx: Transaction, ownerId: string, keptProjects: readonly
 function isReferredTo(tx: Transaction, id: string): boolean {
   return Boolean(
     tx.select({ id: uploads.id }).from(uploads).where(eq(uploads.ownerId, id)).limit(1).get() ??
-      tx.select({ id: editions.id }).from(editions).where(eq(editions.publishedBy, id)).limit(1).get() ??
-      tx.select({ id: mailings.id }).from(mailings).where(eq(mailings.authorId, id)).limit(1).get(),
+    tx.select({ id: editions.id }).from(editions).where(eq(editions.publishedBy, id)).limit(1).get() ??
+    tx.select({ id: mailings.id }).from(mailings).where(eq(mailings.authorId, id)).limit(1).get(),
   );
 }

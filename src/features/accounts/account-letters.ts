@@ -4,9 +4,20 @@ export interface AccountLetter {
   readonly text: string;
 }
 
-const letter = (subject: string, ...paragraphs: readonly string[]): AccountLetter => ({ subject, text: `${paragraphs.join('\n\n')}\n` });
+const letter = (subject: string, ...paragraphs: readonly string[]): AccountLetter => ({
+  subject,
+  text: `${paragraphs.join('\n\n')}\n`,
+});
 
-export function signInLetter({ address, minutes, isNew }: { address: string; minutes: number; isNew: boolean }): AccountLetter {
+export function signInLetter({
+  address,
+  minutes,
+  isNew,
+}: {
+  address: string;
+  minutes: number;
+  isNew: boolean;
+}): AccountLetter {
   return letter(
     'Your sign-in link for Foldwright',
     isNew
@@ -18,7 +29,15 @@ export function signInLetter({ address, minutes, isNew }: { address: string; min
   );
 }
 
-export function signUpLetter({ address, name, hours }: { address: string; name: string; hours: number }): AccountLetter {
+export function signUpLetter({
+  address,
+  name,
+  hours,
+}: {
+  address: string;
+  name: string;
+  hours: number;
+}): AccountLetter {
   return letter(
     'Confirm your Foldwright account',
     `Hello ${name},`,
@@ -39,7 +58,15 @@ export function alreadyKnownLetter({ signIn }: { signIn: string }): AccountLette
   );
 }
 
-export function invitationLetter({ address, invitedBy, days }: { address: string; invitedBy: string; days: number }): AccountLetter {
+export function invitationLetter({
+  address,
+  invitedBy,
+  days,
+}: {
+  address: string;
+  invitedBy: string;
+  days: number;
+}): AccountLetter {
   return letter(
     'You are invited to write for Foldwright',
     `${invitedBy} invites you to publish your own cardstock projects at Foldwright as an author.`,

@@ -92,7 +92,9 @@ export const authConfig = {
   adapter,
   providers: [password, link],
   session: { strategy: 'jwt', maxAge: SESSION_SECONDS },
-  cookies: { sessionToken: { name: SESSION_COOKIE, options: { httpOnly: true, sameSite: 'lax', path: '/', secure: isSecure } } },
+  cookies: {
+    sessionToken: { name: SESSION_COOKIE, options: { httpOnly: true, sameSite: 'lax', path: '/', secure: isSecure } },
+  },
   pages: { signIn: '/sign-in', signOut: '/sign-out', error: '/sign-in', verifyRequest: '/sign-in/sent' },
   callbacks: {
     /** Asked when a link is asked for and again when it is used. */

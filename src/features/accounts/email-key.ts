@@ -32,7 +32,9 @@ export function emailKey(text: string): string | null {
 export function addressFault(text: string): string | null {
   const key = emailKey(text);
   if (!key) return EMAIL_SENTENCE;
-  return /[^\0-\x7f]/.test(key) ? 'Before the @, only letters from a to z can be written to from here. Use another address.' : null;
+  return /[^\0-\x7f]/.test(key)
+    ? 'Before the @, only letters from a to z can be written to from here. Use another address.'
+    : null;
 }
 
 function asciiDomain(typed: string): string | null {

@@ -7,7 +7,11 @@ export interface FormFaults {
   readonly typed: Readonly<Record<string, string>>;
 }
 
-export const formFaults = (status: number, faults: FormFaults['faults'], typed: FormFaults['typed'] = {}): FormFaults => ({ status, faults, typed });
+export const formFaults = (
+  status: number,
+  faults: FormFaults['faults'],
+  typed: FormFaults['typed'] = {},
+): FormFaults => ({ status, faults, typed });
 
 /** Goes on to a page after a form was taken; reloading that page does not send the form again. */
 export const seeOther = (path: string): Response => new Response(null, { status: 303, headers: { location: path } });

@@ -37,7 +37,10 @@ export function requireRole(context: Pick<APIContext, 'locals'>, needed: Role): 
 }
 
 export const signInFirst = (): Response =>
-  problem(401, 'Not signed in', { detail: 'Sign in, then try again. What you typed here is still in this page.', code: 'sign-in-first' });
+  problem(401, 'Not signed in', {
+    detail: 'Sign in, then try again. What you typed here is still in this page.',
+    code: 'sign-in-first',
+  });
 
 export const notForThisRole = (needed: Role): Response =>
   problem(403, 'Not for your role', {

@@ -22,23 +22,35 @@ export interface Invitation {
 }
 
 /** Sends an invitation; an older one to the same address stops working. */
-export function invite(email: string, invitedBy: string): { readonly ok: true; readonly invitation: Invitation } | Refused {
+export function invite(
+  email: string,
+  invitedBy: string,
+): { readonly ok: true; readonly invitation: Invitation } | Refused {
   const key = emailKey(email);
   const fault = addressFault(email);
   if (!key || fault) return refused('no-address', fault ?? EMAIL_SENTENCE);
   const person = findByEmail(key);
   if (person?.disabledAt) return refused('disabled', `${key} is disabled. Enable the account first.`);
-  if (person && person.role !== 'reader') return refused('already', `${key} is ${person.role === 'admin' ? 'an admin' : 'an author'} already.`);
+  if (person && person.role !== 'reader')
+    return refused('already', `${key} is ${person.role === 'admin' ? 'an admin' : 'an author'} already.`);
 
   const token = randomBytes(32).toString('base64url');
   const expires = new Date(Date.now() + INVITATION_DAYS * 86_400_000);
   forgetExpiredTokens();
   db.transaction((tx) => {
-    tx.delete(verificationTokens).where(eq(verificationTokens.identifier, MARK + key)).run();
-    tx.insert(verificationTokens).values({ identifier: MARK + key, token: tokenHash(token), expires }).run();
+    tx.delete(verificationTokens)
+      .where(eq(verificationTokens.identifier, MARK + key))
+      .run();
+    tx.insert(verificationTokens)
+      .values({ identifier: MARK + key, token: tokenHash(token), expires })
+      .run();
   });
   const address = `${config.siteUrl}/sign-up/invitation?${new URLSearchParams({ email: key, token })}`;
-  post({ email: person?.email ?? email.trim(), name: person?.name }, invitationLetter({ address, invitedBy, days: INVITATION_DAYS }), INVITATION_DAYS * 1440);
+  post(
+    { email: person?.email ?? email.trim(), name: person?.name },
+    invitationLetter({ address, invitedBy, days: INVITATION_DAYS }),
+    INVITATION_DAYS * 1440,
+  );
   return { ok: true, invitation: { email: key, expires } };
 }
 
@@ -51,13 +63,25 @@ export function openInvitations(): Invitation[] {
 
 /** Makes the invitation to this address stop working. False when there was none. */
 export function withdrawInvitation(email: string): boolean {
-  return db.delete(verificationTokens).where(eq(verificationTokens.identifier, MARK + emailKey(email))).run().changes > 0;
+  return (
+    db
+      .delete(verificationTokens)
+      .where(eq(verificationTokens.identifier, MARK + emailKey(email)))
+      .run().changes > 0
+  );
 }
 
 /** The invitation behind a link, without using it up; null when it is too old, withdrawn or used. */
 export function readInvitation(email: string, token: string): (Invitation & { readonly person: Person | null }) | null {
-  const matches = and(eq(verificationTokens.identifier, MARK + emailKey(email)), eq(verificationTokens.token, tokenHash(token)));
-  const row = db.select().from(verificationTokens).where(and(matches, gt(verificationTokens.expires, new Date()))).get();
+  const matches = and(
+    eq(verificationTokens.identifier, MARK + emailKey(email)),
+    eq(verificationTokens.token, tokenHash(token)),
+  );
+  const row = db
+    .select()
+    .from(verificationTokens)
+    .where(and(matches, gt(verificationTokens.expires, new Date())))
+    .get();
   const person = findByEmail(email) ?? null;
   return row && !person?.disabledAt ? { email: row.identifier.slice(MARK.length), expires: row.expires, person } : null;
 }

@@ -8,7 +8,17 @@ import { deleteAccount } from './account-data.server';
 import { formFaults, seeOther, type FormFaults } from './form-outcome';
 import { judgePassword, PASSWORD_MOST } from './password-rule';
 import { passwordFits } from './passwords.server';
-import { emailKey, findById, personName, refused, setName, setPassword, type Person, type PersonOutcome, type Refused } from './people.server';
+import {
+  emailKey,
+  findById,
+  personName,
+  refused,
+  setName,
+  setPassword,
+  type Person,
+  type PersonOutcome,
+  type Refused,
+} from './people.server';
 import { post } from './post.server';
 import { nameFault } from './sign-in-forms.server';
 import { beginSession, endSession, type SignIn } from './session.server';
@@ -23,7 +33,9 @@ export const needsOldPassword = (person: Person, signIn: SignIn | null): boolean
   person.passwordHash !== null && !(signIn?.by === 'link' && Date.now() - signIn.at < LINK_COUNTS_MINUTES * 60_000);
 
 export const nameSchema = z.object({ name: z.string() }).strict();
-export const passwordSchema = z.object({ current: z.string().max(PASSWORD_MOST).optional(), next: z.string() }).strict();
+export const passwordSchema = z
+  .object({ current: z.string().max(PASSWORD_MOST).optional(), next: z.string() })
+  .strict();
 export const deletionSchema = z.object({ email: z.string(), keepName: z.boolean() }).strict();
 
 /** The person behind the request; the middleware has seen that there is one. */
@@ -39,13 +51,18 @@ export function changeName(person: Person, name: string): PersonOutcome {
 }
 
 /** Changes the password, ends every other session, keeps this one, and tells the owner by mail. */
-export async function changePassword(context: Context, person: Person, { current = '', next }: z.infer<typeof passwordSchema>): Promise<PersonOutcome | TooOften> {
+export async function changePassword(
+  context: Context,
+  person: Person,
+  { current = '', next }: z.infer<typeof passwordSchema>,
+): Promise<PersonOutcome | TooOften> {
   const verdict = judgePassword(next, { name: person.name ?? '', email: person.email });
   if (!verdict.ok) return refused('next', verdict.sentence);
   if (needsOldPassword(person, context.locals.signIn)) {
     const turn = await takeTurn('sign-in', { ip: context.clientAddress, emailKey: person.emailKey });
     if (!turn.ok) return { ...turn, code: 'too-often' };
-    if (!(await passwordFits(person.passwordHash, current))) return refused('current', 'That is not your password as it is now.');
+    if (!(await passwordFits(person.passwordHash, current)))
+      return refused('current', 'That is not your password as it is now.');
     await turn.giveBack();
   }
   const changed = await setPassword(person.id, next);
@@ -57,7 +74,11 @@ export async function changePassword(context: Context, person: Person, { current
 }
 type TooOften = { readonly ok: false; readonly code: 'too-often'; readonly sentence: string; readonly seconds: number };
 
-export async function removeAccount(context: Context, person: Person, { email, keepName }: z.infer<typeof deletionSchema>): Promise<{ ok: true } | Refused> {
+export async function removeAccount(
+  context: Context,
+  person: Person,
+  { email, keepName }: z.infer<typeof deletionSchema>,
+): Promise<{ ok: true } | Refused> {
   if (emailKey(email) !== person.emailKey) return refused('email', `Type ${person.email} to show that you mean it.`);
   const deleted = await deleteAccount(person, { keepName });
   if (deleted.ok) endSession(context);
@@ -72,15 +93,27 @@ export async function postAccount(context: Context): Promise<Response | FormFaul
   switch (field('do')) {
     case 'name': {
       const outcome = changeName(person, field('name'));
-      return outcome.ok ? seeOther('/account?done=name') : formFaults(422, { name: outcome.sentence }, { name: field('name') });
+      return outcome.ok
+        ? seeOther('/account?done=name')
+        : formFaults(422, { name: outcome.sentence }, { name: field('name') });
     }
     case 'password': {
-      const outcome = await changePassword(context, person, { current: field('current').slice(0, PASSWORD_MOST), next: field('next') });
-      return outcome.ok ? seeOther('/account?done=password') : formFaults(422, { [outcome.code === 'next' ? 'next' : 'current']: outcome.sentence });
+      const outcome = await changePassword(context, person, {
+        current: field('current').slice(0, PASSWORD_MOST),
+        next: field('next'),
+      });
+      return outcome.ok
+        ? seeOther('/account?done=password')
+        : formFaults(422, { [outcome.code === 'next' ? 'next' : 'current']: outcome.sentence });
     }
     case 'delete': {
-      const outcome = await removeAccount(context, person, { email: field('email'), keepName: field('keep-name') === 'yes' });
-      return outcome.ok ? seeOther('/sign-in?gone') : formFaults(422, { email: outcome.sentence }, { email: field('email') });
+      const outcome = await removeAccount(context, person, {
+        email: field('email'),
+        keepName: field('keep-name') === 'yes',
+      });
+      return outcome.ok
+        ? seeOther('/sign-in?gone')
+        : formFaults(422, { email: outcome.sentence }, { email: field('email') });
     }
     default:
       return formFaults(400, { '': `There is nothing here called “${field('do').slice(0, 40)}”.` });
@@ -88,4 +121,9 @@ export async function postAccount(context: Context): Promise<Response | FormFaul
 }
 
 /** How the API shows a person to themselves. */
-export const asOwnAccount = (person: Person) => ({ id: person.id, name: personName(person), email: person.email, role: person.role });
+export const asOwnAccount = (person: Person) => ({
+  id: person.id,
+  name: personName(person),
+  email: person.email,
+  role: person.role,
+});

@@ -8,9 +8,16 @@ export type PasswordVerdict = { readonly ok: boolean; readonly sentence: string 
  * Whether a password may be chosen, and a sentence on how strong it is. Length counts most; what can be guessed from
  * the person, repeats and runs is refused.
  */
-export function judgePassword(password: string, known: { readonly name?: string; readonly email?: string } = {}): PasswordVerdict {
+export function judgePassword(
+  password: string,
+  known: { readonly name?: string; readonly email?: string } = {},
+): PasswordVerdict {
   const length = [...password].length;
-  if (length === 0) return { ok: false, sentence: `${PASSWORD_LEAST} characters or more. Three or four words that do not belong together are easy to keep.` };
+  if (length === 0)
+    return {
+      ok: false,
+      sentence: `${PASSWORD_LEAST} characters or more. Three or four words that do not belong together are easy to keep.`,
+    };
   if (length < PASSWORD_LEAST) {
     const missing = PASSWORD_LEAST - length;
     return { ok: false, sentence: `Too short: ${missing} more ${missing === 1 ? 'character' : 'characters'} to go.` };
@@ -34,16 +41,29 @@ export function judgePassword(password: string, known: { readonly name?: string;
 }
 
 /** Why a password may not be chosen; null when it may. */
-export function passwordFault(password: string, known: { readonly name?: string; readonly email?: string } = {}): string | null {
+export function passwordFault(
+  password: string,
+  known: { readonly name?: string; readonly email?: string } = {},
+): string | null {
   const { ok, sentence } = judgePassword(password, known);
   return ok ? null : sentence;
 }
 
-const ROWS = ['abcdefghijklmnopqrstuvwxyz', '01234567890', 'qwertyuiop', 'asdfghjkl', 'zxcvbnm', 'qwertzuiop', 'azertyuiop'];
+const ROWS = [
+  'abcdefghijklmnopqrstuvwxyz',
+  '01234567890',
+  'qwertyuiop',
+  'asdfghjkl',
+  'zxcvbnm',
+  'qwertzuiop',
+  'azertyuiop',
+];
 
 /** All but a few characters follow their neighbour in the alphabet, the digits or on the keyboard, either way. */
 function isRun(text: string): boolean {
-  const pairs = new Set(ROWS.flatMap((row) => [...row].slice(1).flatMap((letter, i) => [row[i]! + letter, letter + row[i]!])));
+  const pairs = new Set(
+    ROWS.flatMap((row) => [...row].slice(1).flatMap((letter, i) => [row[i]! + letter, letter + row[i]!])),
+  );
   const steps = text.length - 1;
   let along = 0;
   for (let i = 0; i < steps; i += 1) if (pairs.has(text.slice(i, i + 2))) along += 1;

@@ -10,7 +10,10 @@ import { findById, personName, refused, setDisabled, setRole, type Person, type 
 export const personChangeSchema = z
   .object({ role: z.enum(ROLES).optional(), disabled: z.boolean().optional() })
   .strict()
-  .refine(({ role, disabled }) => (role === undefined) !== (disabled === undefined), 'Give a role, or whether the person is disabled: one of the two.');
+  .refine(
+    ({ role, disabled }) => (role === undefined) !== (disabled === undefined),
+    'Give a role, or whether the person is disabled: one of the two.',
+  );
 export const invitationSchema = z.object({ email: z.string().max(320) }).strict();
 
 /** A person as admins see them. */
@@ -41,7 +44,9 @@ export function changePerson(id: string, { role, disabled }: z.infer<typeof pers
 }
 
 /** POST /admin: the forms of the page without JavaScript, told apart by their button. */
-export async function postPeople(context: Pick<APIContext, 'request' | 'url' | 'locals'>): Promise<Response | FormFaults> {
+export async function postPeople(
+  context: Pick<APIContext, 'request' | 'url' | 'locals'>,
+): Promise<Response | FormFaults> {
   const field = await readForm(context.request);
   if (!field) return formFaults(400, { '': 'What was sent does not read. Load the page anew and try again.' });
   const back = seeOther(`/admin${context.url.search}`);
@@ -57,7 +62,9 @@ export async function postPeople(context: Pick<APIContext, 'request' | 'url' | '
     case 'role':
     case 'disable':
     case 'enable': {
-      const change = personChangeSchema.safeParse(field('do') === 'role' ? { role: field('role') } : { disabled: field('do') === 'disable' });
+      const change = personChangeSchema.safeParse(
+        field('do') === 'role' ? { role: field('role') } : { disabled: field('do') === 'disable' },
+      );
       if (!change.success) return formFaults(422, { '': 'There is no such role.' });
       const outcome = changePerson(field('id'), change.data);
       return outcome.ok ? back : formFaults(409, { '': outcome.sentence });

@@ -28,13 +28,15 @@ async function change(row: HTMLElement, form: HTMLFormElement, button: HTMLButto
     });
     const answer: unknown = await response.json();
     if (response.ok) show(row, answer as Changed);
-    else refuse(row, (answer as { detail?: string }).detail ?? 'Nothing was changed. Load the page anew and try again.');
+    else
+      refuse(row, (answer as { detail?: string }).detail ?? 'Nothing was changed. Load the page anew and try again.');
   } catch {
     refuse(row, 'The site did not answer, so nothing was changed. Try again when you are connected.');
   } finally {
     if (button) button.disabled = false;
     // The button that was pressed may be gone now; the other one stands at its place.
-    if (button && button.offsetParent === null) [...form.querySelectorAll('button')].find((other) => other.offsetParent !== null)?.focus();
+    if (button && button.offsetParent === null)
+      [...form.querySelectorAll('button')].find((other) => other.offsetParent !== null)?.focus();
     else button?.focus();
   }
 }
@@ -43,7 +45,12 @@ function show(row: HTMLElement, { name, role, disabled }: Changed): void {
   for (const option of row.querySelectorAll('option')) option.defaultSelected = option.selected = option.value === role;
   row.toggleAttribute('data-disabled', disabled);
   say('people-fault', '');
-  say('people-said', disabled ? `${name} is disabled and signed out everywhere.` : `${name} is ${role === 'reader' ? 'a' : 'an'} ${role}, and may sign in.`);
+  say(
+    'people-said',
+    disabled
+      ? `${name} is disabled and signed out everywhere.`
+      : `${name} is ${role === 'reader' ? 'a' : 'an'} ${role}, and may sign in.`,
+  );
 }
 
 function refuse(row: HTMLElement, sentence: string): void {

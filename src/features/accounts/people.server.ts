@@ -26,13 +26,27 @@ export type PersonOutcome = { readonly ok: true; readonly person: Person } | Ref
  * Makes a person whose address is known to be theirs (a link was used, an admin vouches for it).
  * Refused when the address does not read or somebody has it.
  */
-export async function createPerson({ email, name, role = 'reader', password, passwordHash }: NewPerson): Promise<PersonOutcome> {
+export async function createPerson({
+  email,
+  name,
+  role = 'reader',
+  password,
+  passwordHash,
+}: NewPerson): Promise<PersonOutcome> {
   const key = emailKey(email);
   if (!key) return refused('no-address', `"${email}" is not an e-mail address.`);
   const hashed = passwordHash ?? (password === undefined ? null : await hashPassword(password));
   const person = db
     .insert(users)
-    .values({ id: randomUUID(), email: email.trim(), emailKey: key, name: name?.trim() || null, role, passwordHash: hashed, emailVerified: new Date() })
+    .values({
+      id: randomUUID(),
+      email: email.trim(),
+      emailKey: key,
+      name: name?.trim() || null,
+      role,
+      passwordHash: hashed,
+      emailVerified: new Date(),
+    })
     .onConflictDoNothing({ target: users.emailKey })
     .returning()
     .get();
@@ -52,7 +66,10 @@ export function listPeople(search = '', { limit = 200 } = {}): { people: Person[
   const words = search.trim().toLowerCase().split(/\s+/).filter(Boolean).slice(0, 8);
   const holds = (word: string) => {
     const pattern = `%${word.replace(/[\\%_]/g, '\\$&')}%`;
-    return or(sql`lower(${users.name}) like ${pattern} escape '\\'`, sql`${users.emailKey} like ${pattern} escape '\\'`) as SQL;
+    return or(
+      sql`lower(${users.name}) like ${pattern} escape '\\'`,
+      sql`${users.emailKey} like ${pattern} escape '\\'`,
+    ) as SQL;
   };
   // Emptied accounts keep a row for what they published; there is nobody behind it.
   const where = and(sql`${users.emailKey} not like ${`%@${GONE_DOMAIN}`}`, ...words.map(holds));
@@ -67,12 +84,15 @@ export const GONE_DOMAIN = 'gone.invalid';
 
 /** Gives a role. Takes effect on the person's next request. Never leaves the site without an admin. */
 export function setRole(id: string, role: Role): PersonOutcome {
-  return change(id, (person) => (role === 'admin' ? null : lastAdmin(person, 'Make somebody else an admin first.')), { role });
+  return change(id, (person) => (role === 'admin' ? null : lastAdmin(person, 'Make somebody else an admin first.')), {
+    role,
+  });
 }
 
 /** Disables or enables. Disabling ends every session at once; enabling does not bring them back. */
 export function setDisabled(id: string, disabled: boolean): PersonOutcome {
-  const check = (person: Person) => (disabled ? lastAdmin(person, 'Make somebody else an admin before you disable this one.') : null);
+  const check = (person: Person) =>
+    disabled ? lastAdmin(person, 'Make somebody else an admin before you disable this one.') : null;
   const set = disabled
     ? { disabledAt: new Date(), sessionVersion: sql`${users.sessionVersion} + 1` }
     : { disabledAt: null };
@@ -109,11 +129,16 @@ function change(id: string, check: (person: Person) => Refused | null, changes: 
 /** The refusal when this is the only admin who can sign in. Call inside the transaction that changes them. */
 export function lastAdmin(person: Person, cure: string): Refused | null {
   if (person.role !== 'admin' || person.disabledAt) return null;
-  const others = db.select({ n: count() }).from(users).where(and(eq(users.role, 'admin'), isNull(users.disabledAt))).get();
+  const others = db
+    .select({ n: count() })
+    .from(users)
+    .where(and(eq(users.role, 'admin'), isNull(users.disabledAt)))
+    .get();
   return (others?.n ?? 0) > 1 ? null : refused('last-admin', `${personName(person)} is the only admin. ${cure}`);
 }
 
 /** What a person is called where they gave no name: the part of the address before the @. */
-export const personName = (person: Pick<Person, 'name' | 'email'>): string => person.name ?? person.email.split('@')[0] ?? person.email;
+export const personName = (person: Pick<Person, 'name' | 'email'>): string =>
+  person.name ?? person.email.split('@')[0] ?? person.email;
 
 export const refused = (code: string, sentence: string): Refused => ({ ok: false, code, sentence });

@@ -33,7 +33,10 @@ export async function readSession(context: Context): Promise<{ user: User; signI
 export type SignedIn = { readonly ok: true } | { readonly ok: false };
 
 /** Signs in when the password fits. The caller counts the tries. */
-export function signInWithPassword(context: Context, { email, password }: { email: string; password: string }): Promise<SignedIn> {
+export function signInWithPassword(
+  context: Context,
+  { email, password }: { email: string; password: string },
+): Promise<SignedIn> {
   return attempt(context, 'callback/password', { body: new URLSearchParams({ email, password }) });
 }
 
@@ -43,7 +46,10 @@ export async function sendSignInLink(context: Context, { email, to }: { email: s
 }
 
 /** Uses a link up. A new address becomes a reader: having the link proves that it is theirs. */
-export function signInWithLink(context: Context, { email, token }: { email: string; token: string }): Promise<SignedIn> {
+export function signInWithLink(
+  context: Context,
+  { email, token }: { email: string; token: string },
+): Promise<SignedIn> {
   return attempt(context, `callback/link?${new URLSearchParams({ email, token })}`, {});
 }
 
@@ -54,13 +60,18 @@ async function attempt(context: Context, path: string, { body }: { body?: URLSea
     keepSessionCookies(context, await callAuth(request));
     return { ok: true };
   } catch (error) {
-    if (error instanceof AuthError && ['CredentialsSignin', 'AccessDenied', 'Verification'].includes(error.type)) return { ok: false };
+    if (error instanceof AuthError && ['CredentialsSignin', 'AccessDenied', 'Verification'].includes(error.type))
+      return { ok: false };
     throw error;
   }
 }
 
 /** Signs a person in who has just shown in another way that they are who they say. */
-export async function beginSession({ cookies }: Pick<APIContext, 'cookies'>, person: Person, by: SignIn['by']): Promise<void> {
+export async function beginSession(
+  { cookies }: Pick<APIContext, 'cookies'>,
+  person: Person,
+  by: SignIn['by'],
+): Promise<void> {
   const token = { sub: person.id, sv: person.sessionVersion, by, at: Date.now() };
   const value = await encode({ token, secret: config.secret(), salt: SESSION_COOKIE, maxAge: SESSION_SECONDS });
   cookies.set(SESSION_COOKIE, value, { ...authConfig.cookies.sessionToken.options, maxAge: SESSION_SECONDS });
@@ -79,7 +90,10 @@ async function callAuth(request: Request): Promise<ResponseInternal> {
 }
 
 /** The other cookies of Auth.js serve its own pages, which are not used. */
-function keepSessionCookies({ cookies }: Pick<APIContext, 'cookies'>, { cookies: written = [] }: ResponseInternal): void {
+function keepSessionCookies(
+  { cookies }: Pick<APIContext, 'cookies'>,
+  { cookies: written = [] }: ResponseInternal,
+): void {
   for (const { name, value, options } of written) {
     if (!name.startsWith(SESSION_COOKIE)) continue;
     const { path = '/', httpOnly, secure, expires, maxAge, sameSite } = options;

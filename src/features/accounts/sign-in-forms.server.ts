@@ -18,7 +18,8 @@ type Context = Pick<APIContext, 'request' | 'url' | 'cookies' | 'clientAddress'>
 type Outcome = Promise<Response | FormFaults>;
 
 const NO_FORM = formFaults(400, { '': 'What was sent does not read. Load the page anew and try again.' });
-const tooOften = ({ sentence }: Turn & { ok: false }, typed: FormFaults['typed']) => formFaults(429, { '': sentence }, typed);
+const tooOften = ({ sentence }: Turn & { ok: false }, typed: FormFaults['typed']) =>
+  formFaults(429, { '': sentence }, typed);
 
 /** POST /sign-in: with a password, or with the button that sends a link. */
 export async function postSignIn(context: Context): Outcome {
@@ -29,7 +30,8 @@ export async function postSignIn(context: Context): Outcome {
   const key = emailKey(email);
   if (!key) return formFaults(422, { email: EMAIL_SENTENCE }, typed);
   if (field('with') === 'link') return sendLink(context, key, typed);
-  if (!field('password')) return formFaults(422, { password: 'Type your password, or have a link sent instead.' }, typed);
+  if (!field('password'))
+    return formFaults(422, { password: 'Type your password, or have a link sent instead.' }, typed);
 
   const turn = await takeTurn('sign-in', { ip: context.clientAddress, emailKey: key });
   if (!turn.ok) return formFaults(429, { '': `${turn.sentence} A sign-in link still works.` }, typed);
@@ -88,14 +90,18 @@ export async function postSignUpConfirm(context: Context): Outcome {
   const field = await readForm(context.request);
   if (!field) return NO_FORM;
   const pending = await readSignUp(context, field('token'));
-  const turn = await takeTurn('use-link', { ip: context.clientAddress, emailKey: emailKey(pending?.email ?? '') ?? undefined });
+  const turn = await takeTurn('use-link', {
+    ip: context.clientAddress,
+    emailKey: emailKey(pending?.email ?? '') ?? undefined,
+  });
   if (!turn.ok) return tooOften(turn, {});
   const outcome = await confirmSignUp(context, field('token'), field('password'));
   if (outcome.ok) {
     await beginSession(context, outcome.person, 'password');
     return seeOther('/account?welcome');
   }
-  if (outcome.code === 'wrong password') return formFaults(401, { password: 'That is not the password that you chose when you signed up.' });
+  if (outcome.code === 'wrong password')
+    return formFaults(401, { password: 'That is not the password that you chose when you signed up.' });
   if (outcome.code === 'known') return seeOther('/sign-in');
   return formFaults(400, { '': 'This link no longer works: it is older than a day, or not complete. Sign up again.' });
 }
@@ -104,7 +110,10 @@ export async function postSignUpConfirm(context: Context): Outcome {
 export async function postInvitation(context: Context): Outcome {
   const field = await readForm(context.request);
   if (!field) return NO_FORM;
-  const turn = await takeTurn('use-link', { ip: context.clientAddress, emailKey: emailKey(field('email')) ?? undefined });
+  const turn = await takeTurn('use-link', {
+    ip: context.clientAddress,
+    emailKey: emailKey(field('email')) ?? undefined,
+  });
   if (!turn.ok) return tooOften(turn, {});
   const link = { email: field('email'), token: field('token') };
   const typed = { name: field('name').trim() };

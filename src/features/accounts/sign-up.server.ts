@@ -31,7 +31,11 @@ export async function askToSignUp(
   const passwordHash = await hashPassword(password);
   const browser = randomBytes(24).toString('base64url');
   cookies.set(BROWSER_COOKIE, browser, {
-    httpOnly: true, sameSite: 'lax', path: '/sign-up', secure: BROWSER_COOKIE.startsWith('__Secure-'), maxAge: SIGN_UP_HOURS * 3600,
+    httpOnly: true,
+    sameSite: 'lax',
+    path: '/sign-up',
+    secure: BROWSER_COOKIE.startsWith('__Secure-'),
+    maxAge: SIGN_UP_HOURS * 3600,
   });
   const token = await seal({ email, name, passwordHash, browser: digest(browser) });
 
@@ -52,7 +56,10 @@ export interface PendingSignUp {
 }
 
 /** What a link holds; null when it is too old, damaged or not ours. */
-export async function readSignUp({ cookies }: Pick<APIContext, 'cookies'>, token: string): Promise<PendingSignUp | null> {
+export async function readSignUp(
+  { cookies }: Pick<APIContext, 'cookies'>,
+  token: string,
+): Promise<PendingSignUp | null> {
   const sealed = await unseal(token);
   return sealed && { email: sealed.email, name: sealed.name, needsPassword: !isSameBrowser(cookies, sealed) };
 }
@@ -61,17 +68,23 @@ export type SignUpOutcome =
   | { readonly ok: true; readonly person: Person }
   | { readonly ok: false; readonly code: 'no link' | 'wrong password' | 'known' };
 
-export async function confirmSignUp({ cookies }: Pick<APIContext, 'cookies'>, token: string, password: string): Promise<SignUpOutcome> {
+export async function confirmSignUp(
+  { cookies }: Pick<APIContext, 'cookies'>,
+  token: string,
+  password: string,
+): Promise<SignUpOutcome> {
   const sealed = await unseal(token);
   if (!sealed) return { ok: false, code: 'no link' };
-  if (!isSameBrowser(cookies, sealed) && !(await passwordFits(sealed.passwordHash, password))) return { ok: false, code: 'wrong password' };
+  if (!isSameBrowser(cookies, sealed) && !(await passwordFits(sealed.passwordHash, password)))
+    return { ok: false, code: 'wrong password' };
   const made = await createPerson({ email: sealed.email, name: sealed.name, passwordHash: sealed.passwordHash });
   if (!made.ok) return { ok: false, code: 'known' };
   cookies.delete(BROWSER_COOKIE, { path: '/sign-up' });
   return made;
 }
 
-const seal = (sealed: Sealed) => encode({ token: { ...sealed }, secret: config.secret(), salt: SALT, maxAge: SIGN_UP_HOURS * 3600 });
+const seal = (sealed: Sealed) =>
+  encode({ token: { ...sealed }, secret: config.secret(), salt: SALT, maxAge: SIGN_UP_HOURS * 3600 });
 
 async function unseal(token: string): Promise<Sealed | null> {
   try {

@@ -10,7 +10,10 @@ const FROM_ANYWHERE = new Set(['/unsubscribe']);
  * Whether a request that changes something was sent by one of our own pages. Browsers say where a request comes from;
  * one that does not say is refused too. Reading requests always pass.
  */
-export function isFromHere(request: Request, { url, ownOrigins }: { url: URL; ownOrigins: readonly string[] }): boolean {
+export function isFromHere(
+  request: Request,
+  { url, ownOrigins }: { url: URL; ownOrigins: readonly string[] },
+): boolean {
   if (SAFE.has(request.method)) return true;
   if (request.method === 'POST' && FROM_ANYWHERE.has(url.pathname)) return true;
   const site = request.headers.get('sec-fetch-site');

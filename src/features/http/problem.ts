@@ -59,7 +59,9 @@ export async function readJson<S extends z.ZodTypeAny>(
   try {
     data = JSON.parse(new TextDecoder('utf-8', { fatal: true }).decode(bytes));
   } catch {
-    return refuse(problem(400, 'The JSON does not read', { detail: 'The body is not valid JSON in UTF-8.', code: 'bad-json' }));
+    return refuse(
+      problem(400, 'The JSON does not read', { detail: 'The body is not valid JSON in UTF-8.', code: 'bad-json' }),
+    );
   }
   const parsed = schema.safeParse(data);
   if (parsed.success) return { ok: true, value: parsed.data };

@@ -53,7 +53,11 @@ export async function takeTurn(name: LimitName, who: Who): Promise<Turn> {
 
 /** The 429 of an API route, with when to come back. */
 export function tooMany({ seconds, sentence }: { seconds: number; sentence: string }): Response {
-  return problem(429, 'Tried too often', { detail: sentence, code: 'too-often', headers: { 'retry-after': String(seconds) } });
+  return problem(429, 'Tried too often', {
+    detail: sentence,
+    code: 'too-often',
+    headers: { 'retry-after': String(seconds) },
+  });
 }
 
 /** One subscriber line of IPv6 is usually a /64; counting single addresses in it would count nobody. */
@@ -63,8 +67,13 @@ function networkOf(ip: string): string {
   const [head = '', tail = ''] = address.toLowerCase().split('::');
   const before = head ? head.split(':') : [];
   const after = tail ? tail.split(':') : [];
-  const groups = address.includes('::') ? [...before, ...Array<string>(Math.max(0, 8 - before.length - after.length)).fill('0'), ...after] : before;
-  return groups.slice(0, 4).map((group) => group.replace(/^0+(?=.)/, '')).join(':');
+  const groups = address.includes('::')
+    ? [...before, ...Array<string>(Math.max(0, 8 - before.length - after.length)).fill('0'), ...after]
+    : before;
+  return groups
+    .slice(0, 4)
+    .map((group) => group.replace(/^0+(?=.)/, ''))
+    .join(':');
 }
 
 type Counters = Record<LimitName, { readonly byIp: RateLimiterSQLite; readonly byEmail: RateLimiterSQLite }>;
@@ -74,7 +83,9 @@ function countersOf(database: Sqlite.Database): Counters {
   const before = known.get(database);
   if (before) return before;
   // Counts are no part of the data that migrations look after: they may be lost at any time.
-  database.exec('CREATE TABLE IF NOT EXISTS rate_limit (key TEXT PRIMARY KEY, points INTEGER NOT NULL DEFAULT 0, expire INTEGER)');
+  database.exec(
+    'CREATE TABLE IF NOT EXISTS rate_limit (key TEXT PRIMARY KEY, points INTEGER NOT NULL DEFAULT 0, expire INTEGER)',
+  );
   database.prepare('DELETE FROM rate_limit WHERE expire < ?').run(Date.now());
   const limiter = (keyPrefix: string, { tries, seconds }: { tries: number; seconds: number }) =>
     new RateLimiterSQLite({

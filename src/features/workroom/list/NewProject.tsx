@@ -54,15 +54,34 @@ export function NewProject({ patterns, open, chosen, onClose }: NewProjectProps)
         }}
       >
         <Field label="Title" hint="What the box is for, such as “Seed packet box”." error={error}>
-          {(control) => <input {...control} ref={titleField} className="input" value={title} maxLength={TITLE_LIMIT} onChange={(event) => setTitle(event.currentTarget.value)} />}
+          {(control) => (
+            <input
+              {...control}
+              ref={titleField}
+              className="input"
+              value={title}
+              maxLength={TITLE_LIMIT}
+              onChange={(event) => setTitle(event.currentTarget.value)}
+            />
+          )}
         </Field>
         <fieldset className="field">
           <legend>Pattern</legend>
           <div className="pattern-choices">
             {patterns.map((pattern) => (
               <label key={pattern.slug} className="pattern-choice">
-                <input type="radio" name="pattern" value={pattern.slug} checked={slug === pattern.slug} onChange={() => setSlug(pattern.slug)} />
-                <span className="pattern-picture" aria-hidden="true" dangerouslySetInnerHTML={{ __html: pattern.folded }} />
+                <input
+                  type="radio"
+                  name="pattern"
+                  value={pattern.slug}
+                  checked={slug === pattern.slug}
+                  onChange={() => setSlug(pattern.slug)}
+                />
+                <span
+                  className="pattern-picture"
+                  aria-hidden="true"
+                  dangerouslySetInnerHTML={{ __html: pattern.folded }}
+                />
                 <span>
                   <b>{pattern.name}</b>
                   <span className="small soft">{pattern.summary}</span>

@@ -1,12 +1,20 @@
 import type { ShelfPattern } from './NewProject';
 
 /** Every pattern, folded, standing on a ruled shelf. */
-export function PatternShelf({ patterns, onChoose }: { readonly patterns: readonly ShelfPattern[]; readonly onChoose: (slug: string) => void }) {
+export function PatternShelf({
+  patterns,
+  onChoose,
+}: {
+  readonly patterns: readonly ShelfPattern[];
+  readonly onChoose: (slug: string) => void;
+}) {
   return (
     <section className="pattern-shelf" aria-labelledby="shelf-title">
       <div className="shelf-head">
         <h2 id="shelf-title">Start from a pattern</h2>
-        <p className="soft">It comes with its measures, pieces, fits and making instructions. All of it is yours to change.</p>
+        <p className="soft">
+          It comes with its measures, pieces, fits and making instructions. All of it is yours to change.
+        </p>
       </div>
       <ul className="shelf-patterns">
         {patterns.map((pattern) => (

@@ -14,7 +14,11 @@ export interface ProjectRowProps {
   readonly onCopy: () => void;
   readonly onDelete: () => void;
 }
-const LOOK = { draft: { icon: 'draft', tone: 'quiet' }, published: { icon: 'check', tone: 'good' }, changed: { icon: 'pencil', tone: 'warn' } } as const;
+const LOOK = {
+  draft: { icon: 'draft', tone: 'quiet' },
+  published: { icon: 'check', tone: 'good' },
+  changed: { icon: 'pencil', tone: 'warn' },
+} as const;
 
 export function ProjectRow({ project, first, withAuthor, now, onCopy, onDelete }: ProjectRowProps) {
   const { stage } = project;
@@ -24,7 +28,11 @@ export function ProjectRow({ project, first, withAuthor, now, onCopy, onDelete }
   return (
     <li className={first ? 'project-row now' : 'project-row'}>
       <div className="project-flat">
-        {project.flat.length === 0 ? <p className="no-pieces">Its formulas do not read yet</p> : project.flat.map((svg, i) => <Svg key={i} svg={svg} />)}
+        {project.flat.length === 0 ? (
+          <p className="no-pieces">Its formulas do not read yet</p>
+        ) : (
+          project.flat.map((svg, i) => <Svg key={i} svg={svg} />)
+        )}
       </div>
       <div className="project-folded">{project.folded === null ? '–' : <Svg svg={project.folded} />}</div>
       <div className="project-name">
@@ -50,10 +58,16 @@ export function ProjectRow({ project, first, withAuthor, now, onCopy, onDelete }
           <Icon name={look.icon} />
           {stageWords(stage)}
         </p>
-        <p className="small soft">{stage.stage === 'changed' ? project.difference : stage.stage === 'published' ? 'Nothing changed since' : ''}</p>
+        <p className="small soft">
+          {stage.stage === 'changed' ? project.difference : stage.stage === 'published' ? 'Nothing changed since' : ''}
+        </p>
         <p className="small">
           {project.blocking > 0 ? (
-            <a href={`${desk}#proof`}>{project.blocking === 1 ? '1 thing before you can publish' : `${project.blocking} things before you can publish`}</a>
+            <a href={`${desk}#proof`}>
+              {project.blocking === 1
+                ? '1 thing before you can publish'
+                : `${project.blocking} things before you can publish`}
+            </a>
           ) : stage.stage === 'published' ? (
             <a href={`/projects/${project.slug}`}>See it as readers do</a>
           ) : (

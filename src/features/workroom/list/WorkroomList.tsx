@@ -33,7 +33,11 @@ async function fetchList(path: string): Promise<ProjectList> {
 
 /** The author's projects: found, filtered, begun, copied, deleted and brought back. */
 export function WorkroomList({ list, patterns, withAuthors, now }: WorkroomListProps) {
-  const { data = list, error, mutate } = useSWR<ProjectList, Error>('/api/projects', fetchList, { fallbackData: list, revalidateOnMount: false });
+  const {
+    data = list,
+    error,
+    mutate,
+  } = useSWR<ProjectList, Error>('/api/projects', fetchList, { fallbackData: list, revalidateOnMount: false });
   const [query, setQuery] = useState('');
   const [filter, setFilter] = useState<Filter>('all');
   const [begun, setBegun] = useState<string | true | null>(null);
@@ -62,7 +66,15 @@ export function WorkroomList({ list, patterns, withAuthors, now }: WorkroomListP
         <div className="find">
           <label htmlFor="find-project">Find a project, piece or measure</label>
           <Icon name="search" />
-          <input ref={find} id="find-project" type="search" className="input" placeholder="for example: arc" value={query} onChange={(event) => setQuery(event.currentTarget.value)} />
+          <input
+            ref={find}
+            id="find-project"
+            type="search"
+            className="input"
+            placeholder="for example: arc"
+            value={query}
+            onChange={(event) => setQuery(event.currentTarget.value)}
+          />
           <kbd>/</kbd>
         </div>
         <TabButton onClick={() => setBegun(true)}>
@@ -77,7 +89,12 @@ export function WorkroomList({ list, patterns, withAuthors, now }: WorkroomListP
       <div className="paper">
         <nav className="project-filter" aria-label="Which projects">
           {FILTERS.map(({ id, label, holds: fits }) => (
-            <button key={id} type="button" aria-current={filter === id ? 'true' : undefined} onClick={() => setFilter(id)}>
+            <button
+              key={id}
+              type="button"
+              aria-current={filter === id ? 'true' : undefined}
+              onClick={() => setFilter(id)}
+            >
               {label} <b>{found.filter(fits).length}</b>
             </button>
           ))}
@@ -102,7 +119,8 @@ export function WorkroomList({ list, patterns, withAuthors, now }: WorkroomListP
               onCopy={() => void act(`/api/projects/${project.id}/duplicate`, 'POST', {})}
               onDelete={() =>
                 void act(`/api/projects/${project.id}`, 'DELETE').then((done) => {
-                  if (done) setDeleted({ id: project.id, title: project.title, published: project.stage.stage !== 'draft' });
+                  if (done)
+                    setDeleted({ id: project.id, title: project.title, published: project.stage.stage !== 'draft' });
                 })
               }
             />
@@ -117,7 +135,12 @@ export function WorkroomList({ list, patterns, withAuthors, now }: WorkroomListP
         onDismiss={() => setDeleted(null)}
       />
       <PatternShelf patterns={patterns} onChoose={setBegun} />
-      <NewProject patterns={patterns} open={begun !== null} chosen={typeof begun === 'string' ? begun : null} onClose={() => setBegun(null)} />
+      <NewProject
+        patterns={patterns}
+        open={begun !== null}
+        chosen={typeof begun === 'string' ? begun : null}
+        onClose={() => setBegun(null)}
+      />
     </>
   );
 }
@@ -127,7 +150,9 @@ function useSlashKey() {
   const field = useRef<HTMLInputElement>(null);
   useEffect(() => {
     const press = (event: KeyboardEvent) => {
-      const typing = event.target instanceof Element && event.target.closest('input, textarea, select, dialog, [contenteditable]') !== null;
+      const typing =
+        event.target instanceof Element &&
+        event.target.closest('input, textarea, select, dialog, [contenteditable]') !== null;
       if (event.key !== '/' || typing || event.ctrlKey || event.metaKey || event.altKey) return;
       event.preventDefault();
       field.current?.focus();
@@ -154,7 +179,8 @@ function FlatScale({ pixels }: { readonly pixels: number }) {
 }
 
 function countWords(projects: readonly ProjectSummary[]): string {
-  if (projects.length === 0) return 'No projects yet. Choose a pattern below: it comes with its measures, pieces and making instructions.';
+  if (projects.length === 0)
+    return 'No projects yet. Choose a pattern below: it comes with its measures, pieces and making instructions.';
   const waiting = projects.filter((project) => project.stage.stage === 'changed').length;
   const all = projects.length === 1 ? 'One project.' : `${projects.length} projects.`;
   if (waiting === 0) return all;
@@ -162,4 +188,8 @@ function countWords(projects: readonly ProjectSummary[]): string {
 }
 
 const noneWords = (all: number, query: string): string =>
-  all === 0 ? 'Nothing here yet. Begin with “New project”.' : query.trim() === '' ? 'None of your projects is in this state.' : `Nothing of yours has “${query.trim()}” in its title, pieces or measures.`;
+  all === 0
+    ? 'Nothing here yet. Begin with “New project”.'
+    : query.trim() === ''
+      ? 'None of your projects is in this state.'
+      : `Nothing of yours has “${query.trim()}” in its title, pieces or measures.`;

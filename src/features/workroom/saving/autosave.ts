@@ -96,7 +96,8 @@ export function createAutosave<T>({ send, keepCopy, dropCopy, onState, now, star
       return;
     }
     queued ??= { value };
-    if (answer.kind === 'changed') return set({ kind: 'conflict', other: { revision: answer.revision, updatedAt: answer.updatedAt } });
+    if (answer.kind === 'changed')
+      return set({ kind: 'conflict', other: { revision: answer.revision, updatedAt: answer.updatedAt } });
     if (answer.kind === 'refused') return set({ kind: 'refused', sentence: answer.sentence });
     const delay = Math.min(RETRY_MOST, RETRY_FIRST * 2 ** failures);
     failures += 1;

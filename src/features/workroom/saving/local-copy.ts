@@ -72,7 +72,12 @@ function hold(tab: string): Promise<(() => void) | null> {
 async function heldTabs(): Promise<ReadonlySet<string>> {
   if (!('locks' in navigator)) return new Set();
   const { held = [] } = await navigator.locks.query();
-  return new Set(held.map((lock) => lock.name ?? '').filter((name) => name.startsWith(`${TAB}.`)).map((name) => name.slice(TAB.length + 1)));
+  return new Set(
+    held
+      .map((lock) => lock.name ?? '')
+      .filter((name) => name.startsWith(`${TAB}.`))
+      .map((name) => name.slice(TAB.length + 1)),
+  );
 }
 
 function write(key: string, text: string): void {
@@ -86,7 +91,9 @@ function write(key: string, text: string): void {
 function read(text: string | null): LocalCopy | null {
   try {
     const copy: unknown = JSON.parse(text ?? 'null');
-    return typeof copy === 'object' && copy !== null && 'state' in copy && 'revision' in copy ? (copy as LocalCopy) : null;
+    return typeof copy === 'object' && copy !== null && 'state' in copy && 'revision' in copy
+      ? (copy as LocalCopy)
+      : null;
   } catch {
     return null;
   }

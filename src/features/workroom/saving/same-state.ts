@@ -4,6 +4,10 @@ export const sameState = (a: unknown, b: unknown): boolean => ordered(a) === ord
 const ordered = (value: unknown): string =>
   JSON.stringify(value, (_, inner: unknown) =>
     typeof inner === 'object' && inner !== null && !Array.isArray(inner)
-      ? Object.fromEntries(Object.entries(inner).filter(([, v]) => v !== undefined).sort(([x], [y]) => (x < y ? -1 : 1)))
+      ? Object.fromEntries(
+          Object.entries(inner)
+            .filter(([, v]) => v !== undefined)
+            .sort(([x], [y]) => (x < y ? -1 : 1)),
+        )
       : inner,
   );

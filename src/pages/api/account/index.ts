@@ -1,6 +1,13 @@
 import type { APIRoute } from 'astro';
 import { requireRole } from '@/features/accounts/guard.server';
-import { asOwnAccount, changeName, deletionSchema, nameSchema, ownPerson, removeAccount } from '@/features/accounts/own-account.server';
+import {
+  asOwnAccount,
+  changeName,
+  deletionSchema,
+  nameSchema,
+  ownPerson,
+  removeAccount,
+} from '@/features/accounts/own-account.server';
 import { json, problem, readJson } from '@/features/http/problem';
 
 export const GET: APIRoute = (context) => {
@@ -27,5 +34,8 @@ export const DELETE: APIRoute = async (context) => {
   if (!body.ok) return body.response;
   const outcome = await removeAccount(context, ownPerson(context), body.value);
   if (outcome.ok) return new Response(null, { status: 204 });
-  return problem(outcome.code === 'last-admin' ? 409 : 422, 'The account was not deleted', { detail: outcome.sentence, code: outcome.code });
+  return problem(outcome.code === 'last-admin' ? 409 : 422, 'The account was not deleted', {
+    detail: outcome.sentence,
+    code: outcome.code,
+  });
 };

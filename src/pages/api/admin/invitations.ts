@@ -17,7 +17,10 @@ export const POST: APIRoute = async (context) => {
   if (!body.ok) return body.response;
   const outcome = invite(body.value.email, user.name);
   if (outcome.ok) return json(outcome.invitation, { status: 201 });
-  return problem(outcome.code === 'no-address' ? 422 : 409, 'Nobody was invited', { detail: outcome.sentence, code: outcome.code });
+  return problem(outcome.code === 'no-address' ? 422 : 409, 'Nobody was invited', {
+    detail: outcome.sentence,
+    code: outcome.code,
+  });
 };
 
 /** `{ email }`: the invitation stops working. */
@@ -27,5 +30,8 @@ export const DELETE: APIRoute = async (context) => {
   const body = await readJson(context.request, invitationSchema);
   if (!body.ok) return body.response;
   if (withdrawInvitation(body.value.email)) return new Response(null, { status: 204 });
-  return problem(404, 'No such invitation', { detail: `No invitation to ${body.value.email} is open.`, code: 'no-invitation' });
+  return problem(404, 'No such invitation', {
+    detail: `No invitation to ${body.value.email} is open.`,
+    code: 'no-invitation',
+  });
 };

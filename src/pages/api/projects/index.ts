@@ -16,7 +16,11 @@ export const GET: APIRoute = (context) => {
 
 const newProject = z.object({
   pattern: z.string().min(1).max(80),
-  title: z.string().trim().min(1, 'Give the project a title.').max(TITLE_LIMIT, `A title has at most ${TITLE_LIMIT} characters.`),
+  title: z
+    .string()
+    .trim()
+    .min(1, 'Give the project a title.')
+    .max(TITLE_LIMIT, `A title has at most ${TITLE_LIMIT} characters.`),
 });
 
 /** A new project from a pattern: `{pattern, title}`. Answers `{id, slug}`. */

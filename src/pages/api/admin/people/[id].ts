@@ -11,5 +11,8 @@ export const PATCH: APIRoute = async (context) => {
   if (!body.ok) return body.response;
   const outcome = changePerson(context.params.id ?? '', body.value);
   if (outcome.ok) return json(asRow(outcome.person));
-  return problem(outcome.code === 'nobody' ? 404 : 409, 'Nothing was changed', { detail: outcome.sentence, code: outcome.code });
+  return problem(outcome.code === 'nobody' ? 404 : 409, 'Nothing was changed', {
+    detail: outcome.sentence,
+    code: outcome.code,
+  });
 };

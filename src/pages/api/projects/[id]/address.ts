@@ -17,6 +17,12 @@ export const PUT: APIRoute = async (context) => {
   if (moved.ok) return json({ slug: moved.slug });
   if (moved.code === 'not found') return noSuchProject();
   return moved.code === 'taken'
-    ? problem(409, 'Address taken', { detail: `Another project is at /projects/${read.value.slug}. Choose another address.`, code: 'address-taken' })
-    : problem(409, 'Address fixed', { detail: 'A published project keeps its address: readers have links to it.', code: 'address-fixed' });
+    ? problem(409, 'Address taken', {
+        detail: `Another project is at /projects/${read.value.slug}. Choose another address.`,
+        code: 'address-taken',
+      })
+    : problem(409, 'Address fixed', {
+        detail: 'A published project keeps its address: readers have links to it.',
+        code: 'address-fixed',
+      });
 };

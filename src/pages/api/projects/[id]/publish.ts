@@ -30,6 +30,9 @@ export const POST: APIRoute = async (context) => {
   return problem(422, 'Not published', {
     detail: sentence,
     code: refusal.code.replaceAll(' ', '-'),
-    errors: refusal.code === 'proof blocks' ? refusal.items.map((item) => ({ where: item.place.label, sentence: `${item.title}. ${item.detail}` })) : undefined,
+    errors:
+      refusal.code === 'proof blocks'
+        ? refusal.items.map((item) => ({ where: item.place.label, sentence: `${item.title}. ${item.detail}` }))
+        : undefined,
   });
 };
