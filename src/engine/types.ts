@@ -441,6 +441,8 @@ export interface PieceFigure {
   readonly across: number;
   readonly along: number;
   readonly scores: { readonly across: readonly number[]; readonly along: readonly number[] };
+  /** A fan's side that lies level at the foot, and how far the flap on it stands out. */
+  readonly fan?: { readonly side: Line; readonly height: number };
   /** Card thickness at this sizing; 0 when the pattern has none. */
   readonly thickness: number;
   readonly area: number;

@@ -102,13 +102,14 @@ function viewOf(turn: number, tilt: number) {
 function facesOf(model: Model, figures: Figures, share: number): Face<Look>[] {
   const values = valuesBehind(figures)?.cut;
   if (!values) return [];
-  const round = (name: string) =>
-    ['fan', 'disc'].includes(model.pattern.pieces.find((one) => keyOf(one.name) === keyOf(name))?.builder ?? '');
   return model.placements.flatMap(({ def, at, when }) => {
     if (!isInUse(when ? { when } : {}, values)) return [];
     const piece = figures.pieces.find((one) => keyOf(one.name) === keyOf(def.piece));
     if (!piece) return [];
-    const look = def.look ?? model.pattern.pieces.find((one) => one.name === piece.name)?.look ?? 'card';
+    const made = model.pattern.pieces.find((one) => one.name === piece.name);
+    const look = def.look ?? made?.look ?? 'card';
+    // Walls that meet in a point hide their tabs, and leave them no room at the point.
+    const pointed = share === 1 && made?.builder === 'fan' && made.flap.shape === 'triangle';
     const [x, y, z] = at.map((formula) => formula.work(values)) as [number, number, number];
     return foldNet(piece.net, {
       root: keyOf(def.root),
@@ -116,10 +117,10 @@ function facesOf(model: Model, figures: Figures, share: number): Face<Look>[] {
       across: def.across,
       along: def.along,
       share,
-      anchor: round(def.piece) ? 'middle' : 'corner',
+      anchor: made?.builder === 'fan' || made?.builder === 'disc' ? 'middle' : 'corner',
     }).flatMap((panel) => {
       // Teeth are glued out of sight, where narrow faces would only fight with the curve they stand on.
-      if (panel.tooth) return [];
+      if (panel.tooth || (pointed && panel.role === 'tab')) return [];
       const shift = panel.role === 'tab' ? times(panel.inside, TAB_INSET) : vector(0, 0, 0);
       return {
         points: panel.points.map((point) => plus(point, shift)),

@@ -1,6 +1,6 @@
 import { GRIDS, defaultGrid, show, type ShowOptions } from '../measure';
-import { areaOf, boundsOf } from '../net';
-import { figureMaker } from '../piece';
+import { areaOf, boundsOf, lengthOf } from '../net';
+import { figureMaker, seamsOf } from '../piece';
 import type { Drawing, PieceFigure, Point, Shape } from '../types';
 import { acrossTop, downLeft, textWidth, topRows, type Stop } from './dimensions';
 import { closedPath, n, pathOf, segment, type Place } from './path';
@@ -35,10 +35,14 @@ export function drawPiece(piece: PieceFigure, options: PieceDrawingOptions): Dra
       (cards === undefined ? '' : cards > 0 ? '+' : '−')
     );
   };
-  const acrossMm = [...piece.scores.across, net.across];
-  const alongMm = [...piece.scores.along, net.along];
+  const seams = seamsOf(net);
+  const stopsOf = (scores: readonly number[], tabs: readonly number[], size: number) =>
+    [...scores, ...(piece.fan ? [] : tabs), size].sort((a, b) => a - b);
+  const acrossMm = stopsOf(piece.scores.across, seams.across, net.across);
+  const alongMm = stopsOf(piece.scores.along, seams.along, net.along);
+  const fan = dims ? (piece.fan ?? null) : null;
   const left = dims ? Math.max(...alongMm.map((mm) => textWidth(says(mm)))) + 34 : 6;
-  const right = dims ? textWidth(says(net.across)) / 2 + 6 : 6;
+  const right = fan ? textWidth(says(fan.height)) + 30 : dims ? textWidth(says(net.across)) / 2 + 6 : 6;
   const scale = options.scale ?? Math.min((width - left - right) / net.across, tallest / net.along);
   const inset = left + Math.max(0, (width - left - right - net.across * scale) / 2);
   const stopsAcross: Stop[] = acrossMm.map((mm) => ({ at: inset + mm * scale, text: says(mm) }));
@@ -46,7 +50,7 @@ export function drawPiece(piece: PieceFigure, options: PieceDrawingOptions): Dra
   const top = rulerHeight + (dims ? 34 + Math.max(...topRows(stopsAcross)) * 15 : 6);
   const place: Place = (point) => ({ x: inset + point.x * scale, y: top + point.y * scale });
   const bottom = top + net.along * scale;
-  const height = bottom + (dims ? 12 : 6);
+  const height = bottom + (fan ? 36 : dims ? 12 : 6);
   const stopsAlong: Stop[] = alongMm.map((mm) => ({ at: top + mm * scale, text: says(mm) }));
 
   const shapes: Shape[] = [
@@ -83,9 +87,42 @@ export function drawPiece(piece: PieceFigure, options: PieceDrawingOptions): Dra
           { type: 'path', role: 'origin', d: `M${n(inset - 2)} ${n(top - 2)}v-8h-8z` } satisfies Shape,
         ]
       : []),
+    ...(fan ? fanDimensions(fan, place, says, { right: inset + net.across * scale, bottom }) : []),
     ...(options.ruler ? ruler({ width, start: inset, scale, units }) : []),
   ];
   return { width, height, title: piece.name, alt: altOf(piece, options), shapes };
+}
+
+/** The side that lies level at the foot, dimensioned below the piece, and how far its flap stands out, on the right. */
+function fanDimensions(
+  { side, height }: NonNullable<PieceFigure['fan']>,
+  place: Place,
+  says: (mm: number) => string,
+  edge: { readonly right: number; readonly bottom: number },
+): Shape[] {
+  const [a, b] = [place(side.from), place(side.to)].sort((p, q) => p.x - q.x) as [Point, Point];
+  const foot = place({ x: side.from.x, y: side.from.y + height }).y;
+  const [x, y] = [edge.right + 14, edge.bottom + 12];
+  return [
+    {
+      type: 'path',
+      role: 'extension',
+      d:
+        [a.x, b.x].map((at) => segment(at, foot + 3, at, y + 4)).join('') +
+        segment(b.x + 3, a.y, x + 4, a.y) +
+        segment((a.x + b.x) / 2 + 3, foot, x + 4, foot),
+    },
+    { type: 'path', role: 'dimension', d: segment(a.x, y, b.x, y) + segment(x, a.y, x, foot) },
+    {
+      type: 'text',
+      role: 'figure',
+      x: (a.x + b.x) / 2,
+      y: y + 17,
+      text: says(lengthOf(side)),
+      anchor: 'middle',
+    },
+    { type: 'text', role: 'figure', x: x + 6, y: (a.y + foot) / 2 + 4.5, text: says(height), anchor: 'start' },
+  ];
 }
 
 /** A slit with a short tick at either end. */
@@ -105,11 +142,19 @@ function labelsOf(piece: PieceFigure, place: Place, scale: number): Shape[] {
   return piece.net.panels.flatMap((panel): Shape[] => {
     if (panel.role === 'tab' || joined.has(panel.name) || areaOf(panel.loop) <= 0) return [];
     const box = boundsOf(panel.loop);
-    const [wide, tall] = [(box.right - box.left) * scale, (box.bottom - box.top) * scale];
+    // Where the middle of a triangle's corners lies, two thirds of it are left across and down.
+    const pointed = panel.loop.length === 3;
+    const left = pointed ? (scale * 2) / 3 : scale;
+    const [wide, tall] = [(box.right - box.left) * left, (box.bottom - box.top) * left];
     const room = textWidth(panel.name) + 10;
     const turned = wide < room && tall >= room;
     if ((turned ? wide : tall) < 18 || (turned ? tall : wide) < room) return [];
-    const middle = place({ x: (box.left + box.right) / 2, y: (box.top + box.bottom) / 2 });
+    const mean = (read: (point: Point) => number) => panel.loop.reduce((sum, { from }) => sum + read(from), 0) / 3;
+    const middle = place(
+      pointed
+        ? { x: mean(({ x }) => x), y: mean(({ y }) => y) }
+        : { x: (box.left + box.right) / 2, y: (box.top + box.bottom) / 2 },
+    );
     return [
       {
         type: 'text',

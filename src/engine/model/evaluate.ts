@@ -2,7 +2,7 @@ import { diagnose, kindName, type Formula, type Values } from '../formula';
 import { GRIDS, decimal, atLeast, isZero, moreThan, roundTo, same, showValue, snap } from '../measure';
 import { perimeterOf } from '../net';
 import { keyOf } from '../pattern/names';
-import { areaOfNet, figureMaker, makingOf } from '../piece';
+import { areaOfNet, fanSizes, figureMaker, makingOf } from '../piece';
 import type {
   Figures,
   FitFigure,
@@ -214,6 +214,7 @@ function piecesOf(model: Model, { exact, cut }: BothValues, sizing: Sizing, prob
     // Running positions are read from an edge of the blank: only a grid's scores lie square to it.
     const scores = grid ? scoresOf(net) : { across: [], along: [] };
     let words: readonly Sentence[] | undefined;
+    const fan = piece.def.builder === 'fan' ? fanSizes(net, piece.def) : null;
     return [
       {
         name: piece.def.name,
@@ -223,6 +224,7 @@ function piecesOf(model: Model, { exact, cut }: BothValues, sizing: Sizing, prob
         across: net.across,
         along: net.along,
         scores,
+        ...(fan && fan.side.type === 'line' ? { fan: { side: fan.side, height: fan.height } } : {}),
         thickness,
         area,
         perimeter,

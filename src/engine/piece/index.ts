@@ -6,4 +6,5 @@ export * from './finish';
 export * from './grid';
 export * from './outline';
 export * from './sector';
+export { fanSizes } from './shape-words';
 export * from './words';

@@ -1,6 +1,6 @@
 import { decimal } from '../measure';
-import { lengthOf, pointAt } from '../net';
-import type { Net, Sentence } from '../types';
+import { distance, lengthOf, pointAt } from '../net';
+import type { Curve, FanPieceDef, Net, Panel, Point, Sentence } from '../types';
 import type { WordsOptions } from './words';
 
 /** The making of a piece that is not a grid, in words. */
@@ -24,40 +24,112 @@ const panel = (net: Net, name: string) =>
 
 function fan({ net, def, figure }: WordsOptions): Sentence[] {
   if (def.builder !== 'fan') return [];
-  const centre = panel(net, def.centre)?.loop ?? [];
-  const side = centre[0] ? lengthOf(centre[0]) : 0;
-  const flap = panel(net, `${def.flap.name} 1`)?.loop ?? [];
-  const height = def.flap.shape === 'triangle' ? 0 : flap[1] ? lengthOf(flap[1]) : 0;
-  const middle = {
-    x: ((centre[0]?.from.x ?? 0) + (centre[0]?.to.x ?? 0)) / 2,
-    y: ((centre[0]?.from.y ?? 0) + (centre[0]?.to.y ?? 0)) / 2,
-  };
-  const tip = flap[1]?.to ?? middle;
-  const tall = def.flap.shape === 'triangle' ? Math.hypot(tip.x - middle.x, tip.y - middle.y) : height;
-  const turns = [...new Set(net.folds.map((fold) => degrees(fold.angle)))];
+  const fan = fanSizes(net, def);
+  if (!fan) return [];
+  const [tab] = net.panels.filter((one) => one.role === 'tab').map(tabSizes);
+  const [hole] = net.holes.flatMap((loop) => loop.flatMap((curve) => (curve.type === 'arc' ? [curve] : [])));
+  const turnOf = (name: string) => net.folds.find((fold) => fold.panels.includes(name))?.angle ?? 0;
+  const flaps = `${def.flap.name}s`;
   return [
-    [`Draw a regular shape of ${centre.length} sides, each `, figure(side), '.'],
+    [
+      'Draw a circle of ',
+      figure(distance(fan.middle, fan.side.from)),
+      ' radius, its middle ',
+      figure(fan.middle.x),
+      ' from the left edge and ',
+      figure(fan.middle.y),
+      ` from the top; mark it every ${degrees(360 / fan.sides)}, beginning ${degrees(180 / fan.sides)} beside the lowest point, and join the ${fan.sides} marks: sides of `,
+      figure(lengthOf(fan.side)),
+      ', each ',
+      figure(distance(fan.middle, pointAt(fan.side, 0.5))),
+      ' from the middle.',
+    ],
     def.flap.shape === 'triangle'
-      ? ['On every side draw a triangle, its point ', figure(tall), ' out from the middle of the side.']
-      : ['On every side draw a rectangle ', figure(tall), ' tall.'],
-    ...(net.panels.some((one) => one.role === 'tab')
-      ? [['On the same-handed end of every one stands a glue tab; taper it as drawn.']]
+      ? ['On every side draw a triangle, its tip ', figure(fan.height), ' out from the middle of the side.']
+      : ['On every side draw a rectangle ', figure(fan.height), ' tall.'],
+    ...(tab
+      ? [
+          [
+            `On the left edge of every ${def.flap.name}, seen from the middle, draw a glue tab `,
+            figure(tab.width),
+            ` wide; its ends stand at ${degrees(tab.low)} to that edge on the inner side and ${degrees(tab.high)} on the outer.`,
+          ],
+        ]
       : []),
-    ...(net.holes.length > 0 ? [['Punch a hole in every point, on its middle line, as drawn.']] : []),
-    [`Score every side and every tab; they turn by ${turns.join(' and ')}.`],
+    ...(hole
+      ? [
+          [
+            'In every tip punch a hole of ',
+            figure(2 * hole.radius),
+            ' diameter on the middle line, its middle ',
+            figure(fan.tipOf(hole.centre)),
+            ' from the tip.',
+          ],
+        ]
+      : []),
+    [
+      `Score the ${fan.sides} sides${tab ? ' and the edges with tabs' : ''}: the ${flaps} turn by ${degrees(turnOf(def.centre.toLowerCase()))}${tab ? `, the tabs by ${degrees(turnOf('tab 1'))}` : ''}.`,
+    ],
   ];
+}
+
+/** What is measured on a fan: its middle, the side that lies level at the foot, how far the flap on it stands out. */
+export function fanSizes(net: Net, def: Pick<FanPieceDef, 'centre' | 'flap'>) {
+  const centre = panel(net, def.centre)?.loop ?? [];
+  const flap = panel(net, `${def.flap.name} 1`)?.loop;
+  const [side, out] = [centre[0], flap?.[1]];
+  if (!side || !out) return null;
+  const mean = (values: readonly number[]) => values.reduce((sum, value) => sum + value, 0) / centre.length;
+  const tip = def.flap.shape === 'triangle' ? out.to : pointAt(side, 0.5);
+  const height = def.flap.shape === 'triangle' ? distance(tip, pointAt(side, 0.5)) : Math.abs(out.to.y - out.from.y);
+  const tips = net.panels.flatMap((one) =>
+    one.role === 'panel' && one.name.startsWith(`${def.flap.name} `.toLowerCase()) ? [one.loop[1]?.to ?? tip] : [],
+  );
+  return {
+    sides: centre.length,
+    side,
+    height,
+    middle: { x: mean(centre.map(({ from }) => from.x)), y: mean(centre.map(({ from }) => from.y)) },
+    /** From a point on the middle line of a triangle to its tip. */
+    tipOf: (point: Point) => Math.min(...tips.map((one) => distance(one, point))),
+  };
+}
+
+/** A tab on an edge: how far it stands out and the angles of its ends to the edge. */
+function tabSizes({ loop }: Panel) {
+  const [hinge, first] = loop as [Curve, Curve];
+  const last = loop.at(-1) as Curve;
+  const width = Math.abs(
+    ((hinge.to.x - hinge.from.x) * (first.to.y - hinge.to.y) -
+      (hinge.to.y - hinge.from.y) * (first.to.x - hinge.to.x)) /
+      lengthOf(hinge),
+  );
+  const lean = (end: Curve) => (Math.asin(Math.min(1, width / lengthOf(end))) * 180) / Math.PI;
+  return { width, low: lean(first), high: lean(last) };
 }
 
 function disc({ net, def, figure }: WordsOptions): Sentence[] {
   if (def.builder !== 'disc') return [];
   const arc = panel(net, def.disc)?.loop.find((curve) => curve.type === 'arc');
-  const diameter = arc?.type === 'arc' ? 2 * arc.radius : net.across;
-  const teeth = net.panels.filter((one) => one.tooth).length;
-  if (teeth === 0) return [['Draw a circle of ', figure(diameter), ' diameter and cut it out.']];
-  const depth = (net.across - diameter) / 2;
+  if (arc?.type !== 'arc') return [];
+  const teeth = net.panels.filter((one) => one.tooth);
+  const [root, , tip] = teeth[0]?.loop ?? [];
+  if (!root || !tip) return [['Draw a circle of ', figure(2 * arc.radius), ' diameter and cut it out.']];
   return [
-    ['Draw a circle of ', figure(diameter), ' diameter and score it; the rim outside it is ', figure(depth), ' deep.'],
-    [`Cut the rim into ${teeth} teeth, a narrow V between each two, down to the score.`],
+    [
+      'Draw a circle of ',
+      figure(2 * arc.radius),
+      ' diameter and score it; the rim outside it is ',
+      figure(distance(arc.centre, pointAt(tip, 0.5)) - arc.radius),
+      ' deep.',
+    ],
+    [
+      `Cut the rim into ${teeth.length} teeth, one every ${degrees(360 / teeth.length)}, each `,
+      figure(distance(root.from, root.to)),
+      ' wide at the score and ',
+      figure(lengthOf(tip)),
+      ' at the tip, a V between each two, down to the score.',
+    ],
   ];
 }
 

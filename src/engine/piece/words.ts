@@ -1,6 +1,6 @@
-import { coincident, isZero, same } from '../measure';
-import { areaOf } from '../net';
-import type { Arc, Net, PieceDef, Sentence, SentenceFigure, Side } from '../types';
+import { coincident, isZero, same, snap } from '../measure';
+import { areaOf, distance } from '../net';
+import type { Arc, Net, PieceDef, Point, Sentence, SentenceFigure, Side } from '../types';
 import { hangs, type Cell } from './cells';
 import { shapeWords } from './shape-words';
 import type { GridPiece } from './grid';
@@ -35,6 +35,7 @@ export function makingOf(options: WordsOptions): readonly Sentence[] {
 }
 const gridWords = (options: GridWords): Sentence[] => [
   ...scoring(options),
+  ...pencilling(options),
   ...cuttingAway(options),
   ...tabsInWords(options),
   ...arcs(options),
@@ -116,6 +117,35 @@ function scoring({ net, scores, figure }: WordsOptions): Sentence[] {
     '.',
   ];
   return first.length === 0 ? [turned] : [first, turned];
+}
+
+/** Tabs that go on without a fold: a line to glue to. */
+function pencilling({ net, figure }: GridWords): Sentence[] {
+  const { across, along } = seamsOf(net);
+  const line = (size: number, at: readonly number[]): Sentence[] =>
+    at.length === 0
+      ? []
+      : [
+          [
+            'Along the ',
+            figure(size),
+            ` side draw ${at.length === 1 ? 'a pencil line' : 'pencil lines'} at `,
+            ...listed(at.map((position) => [figure(position, true)])),
+            `; do not score ${at.length === 1 ? 'it' : 'them'}.`,
+          ],
+        ];
+  return [...line(net.across, across), ...line(net.along, along)];
+}
+/** Positions of the upright and level lines at which a tab goes on without a fold. */
+export function seamsOf(net: Net): { readonly across: readonly number[]; readonly along: readonly number[] } {
+  const seams = net.folds.filter(({ curve, angle }) => curve.type === 'line' && isZero(angle));
+  const places = (read: (point: Point) => number) =>
+    seams
+      .filter(({ curve }) => same(read(curve.from), read(curve.to)))
+      .map(({ curve }) => snap(read(curve.from)))
+      .sort((a, b) => a - b)
+      .filter((value, index, all) => index === 0 || !same(value, all[index - 1] as number));
+  return { across: places(({ x }) => x), along: places(({ y }) => y) };
 }
 
 /** Corners of the blank that fall away, and rectangles elsewhere on its edge. */
@@ -213,9 +243,14 @@ function tabsInWords({ grid, net, figure }: GridWords): Sentence[] {
   }
   for (const cell of tabs) {
     const shape = grid.tabs.get(cell.name);
-    if (shape && shape.teeth > 1)
+    const [root, , tip] = net.panels.find((panel) => panel.name === `${cell.name} 2`)?.loop ?? [];
+    if (shape && shape.teeth > 1 && root && tip)
       sentences.push([
-        `Cut the tab “${cell.name}” into ${counted(Math.round(shape.teeth))} teeth, a narrow V between each two, down to the score.`,
+        `Cut the tab “${cell.name}” into ${counted(Math.round(shape.teeth))} teeth, each `,
+        figure(distance(root.from, root.to)),
+        ' wide at the score and ',
+        figure(distance(tip.from, tip.to)),
+        ' at the tip: a narrow V between each two, down to the score.',
       ]);
     if (shape?.depth !== null && shape?.depth !== undefined) {
       const hinge = hingeOf(grid, cell);

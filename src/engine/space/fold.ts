@@ -22,7 +22,7 @@ export interface FoldOptions {
   readonly at: Vector;
   readonly across: Axis;
   readonly along: Axis;
-  /** What of the root panel is put at `at`: the corner of its upright rectangle, or its middle. Usual: the corner. */
+  /** What of the root panel is put at `at`: the corner of its upright rectangle, or the middle of its corners. Usual: the corner. */
   readonly anchor?: 'corner' | 'middle';
   /** Share of every fold's turn, 0 flat to 1 closed. */
   readonly share?: number;
@@ -99,10 +99,12 @@ function rootFrame(start: Facet, { at, across: u, along: v, anchor }: FoldOption
   const [acrossAxis, alongAxis] = [axis(u), axis(v)];
   const { roll, cone } = start.of;
   if (cone) return coneFrame(cone, at, acrossAxis, alongAxis);
-  const box = boxOf(start.of.loop.map((curve) => curve.from));
+  const corners = start.of.loop.map((curve) => curve.from);
+  const box = boxOf(corners);
+  const mean = (values: readonly number[]) => values.reduce((sum, value) => sum + value, 0) / values.length;
   const held =
     anchor === 'middle'
-      ? { x: (box.left + box.right) / 2, y: (box.top + box.bottom) / 2 }
+      ? { x: mean(corners.map(({ x }) => x)), y: mean(corners.map(({ y }) => y)) }
       : { x: box.left, y: box.top };
   let heading = acrossAxis;
   if (roll) {
@@ -208,14 +210,13 @@ function facetsOf(net: Net): { readonly facets: readonly Facet[]; readonly links
   };
   const link = (curve: Curve, [a, b]: readonly [string, string], turn: number) =>
     links.push({ a: facetAt(a, curve), b: facetAt(b, curve), from: curve.from, to: curve.to, turn });
-  const coneOf = (name: string) => net.panels.find((panel) => panel.name === name)?.cone;
   for (const fold of net.folds) {
-    const cone = coneOf(fold.panels[0]) ?? coneOf(fold.panels[1]);
-    link(
-      fold.curve,
-      fold.panels,
-      (fold.kind === 'valley' ? fold.angle : -fold.angle) + (cone ? coneTurn(cone.angle) : 0),
-    );
+    const own = net.panels.filter((panel) => fold.panels.includes(panel.name));
+    const cone = own.find((panel) => panel.cone)?.cone;
+    const tube = own.find((panel) => panel.roll && wholeTurn(panel) > 350);
+    // A tab that goes on without a fold lies under the first strip, once round.
+    const round = cone ? coneTurn(cone.angle) : tube && fold.angle === 0 ? wholeTurn(tube) / stripsOf(tube) : 0;
+    link(fold.curve, fold.panels, (fold.kind === 'valley' ? fold.angle : -fold.angle) + round);
   }
   for (const join of net.joins) link(join.curve, join.panels, 0);
   return { facets, links };
@@ -304,11 +305,12 @@ const near = (a: Point, b: Point): boolean => Math.hypot(a.x - b.x, a.y - b.y) <
 const isSame = (a: Curve, b: Curve): boolean =>
   (near(a.from, b.from) && near(a.to, b.to)) || (near(a.from, b.to) && near(a.to, b.from));
 
-const stripsOf = (panel: Panel): number => {
+/** Degrees over which a panel is rolled. */
+const wholeTurn = (panel: Panel): number => {
   const box = boxOf(panel.loop.map((curve) => curve.from));
-  const degrees = (((box.right - box.left) / (panel.roll?.radius ?? 1)) * 180) / Math.PI;
-  return Math.min(24, Math.max(6, Math.ceil(degrees / 6)));
+  return (((box.right - box.left) / (panel.roll?.radius ?? 1)) * 180) / Math.PI;
 };
+const stripsOf = (panel: Panel): number => Math.min(24, Math.max(6, Math.ceil(wholeTurn(panel) / 6)));
 const boxOf = (points: readonly Point[]) => {
   const [xs, ys] = [points.map((point) => point.x), points.map((point) => point.y)];
   return { left: Math.min(...xs), right: Math.max(...xs), top: Math.min(...ys), bottom: Math.max(...ys) };
