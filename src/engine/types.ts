@@ -119,7 +119,7 @@ export interface GridPieceDef extends PieceBase {
   readonly builder: 'grid';
   readonly columns: readonly Track[];
   readonly rows: readonly Track[];
-  /** One list per row, one cell per column. */
+  /** One list per row, one cell per column; cells of one name are one cell, and together a rectangle. */
   readonly cells: readonly (readonly CellDef[])[];
   /** Lines between two named cells that are not the usual ones. */
   readonly lines?: readonly LineDef[];
@@ -225,13 +225,18 @@ export interface HoleDef {
   readonly diameter: string;
   readonly when?: string;
 }
-/** A fold inside a cell that lets a flat box open: drawn and said, lying flat in the folded picture. */
+/**
+ * A fold inside a cell that lets a flat box open: drawn and said, lying flat in the folded picture. With `parts` it runs from
+ * edge to edge and parts the cell: what lies to its right is a panel of that name, turned by `angle` (usual 90°).
+ */
 export interface CreaseDef {
   readonly cell: string;
   readonly is: 'valley' | 'mountain';
   /** Across and along from the cell's top left corner. */
   readonly from: readonly [string, string];
   readonly to: readonly [string, string];
+  readonly parts?: string;
+  readonly angle?: string;
   readonly when?: string;
 }
 export interface Track {

@@ -1,8 +1,10 @@
+import { same } from '../measure';
 import { isInUse } from '../model/values';
 import { valuesBehind, type Model } from '../model';
+import { areaOf } from '../net';
 import { keyOf } from '../pattern/names';
-import { backToFront, dot, foldNet, plus, times, unit, vector, type Face, type Vector } from '../space';
-import type { Drawing, Figures, Shape } from '../types';
+import { backToFront, dot, foldNet, plus, times, unit, vector, type Face, type FoldedPanel, type Vector } from '../space';
+import type { Drawing, Figures, Net, Shape } from '../types';
 import { n } from './path';
 
 export interface FoldedDrawingOptions {
@@ -25,6 +27,8 @@ const LIGHT = unit(vector(-0.5, -0.55, 1.1));
 const TONES = 7;
 /** How far a tab is drawn inside what it is glued to: more than cutting to a grid can push it out. */
 const TAB_INSET = 1;
+/** How far a face that is folded back stands off. */
+const DOUBLED_LIFT = 0.5;
 
 /** The folded box in parallel projection, hidden faces behind others. Faces carry a tone by how the light falls on them. */
 export function drawFolded(model: Model, figures: Figures, options: FoldedDrawingOptions): Drawing {
@@ -111,17 +115,21 @@ function facesOf(model: Model, figures: Figures, share: number): Face<Look>[] {
     // Walls that meet in a point hide their tabs, and leave them no room at the point.
     const pointed = share === 1 && made?.builder === 'fan' && made.flap.shape === 'triangle';
     const [x, y, z] = at.map((formula) => formula.work(values)) as [number, number, number];
-    return foldNet(piece.net, {
+    const folded = foldNet(piece.net, {
       root: keyOf(def.root),
       at: vector(x, y, z),
       across: def.across,
       along: def.along,
       share,
+      asShown: true,
       anchor: made?.builder === 'fan' || made?.builder === 'disc' ? 'middle' : 'corner',
-    }).flatMap((panel) => {
+    });
+    const lifts = doubled(piece.net, folded, share);
+    return folded.flatMap((panel) => {
       // Teeth are glued out of sight, where narrow faces would only fight with the curve they stand on.
       if (panel.tooth || (pointed && panel.role === 'tab')) return [];
-      const shift = panel.role === 'tab' ? times(panel.inside, TAB_INSET) : vector(0, 0, 0);
+      const inset = panel.role === 'tab' ? TAB_INSET : 0;
+      const shift = lifts.get(panel.name) ?? times(panel.inside, inset);
       return {
         points: panel.points.map((point) => plus(point, shift)),
         edges: panel.edges,
@@ -129,4 +137,20 @@ function facesOf(model: Model, figures: Figures, share: number): Face<Look>[] {
       };
     });
   });
+}
+
+/** Where card is folded back on itself, the smaller of the two faces lies a hair above the larger, on the side it is folded to. */
+function doubled(net: Net, folded: readonly FoldedPanel[], share: number): ReadonlyMap<string, Vector> {
+  const lifts = new Map<string, Vector>();
+  for (const { panels, angle, shown, kind } of share === 1 ? net.folds : []) {
+    // A fold that says how it is shown stands as it says.
+    if (!same(angle, 180) || shown !== undefined) continue;
+    const [small, large] = net.panels
+      .filter(({ name }) => panels.includes(name))
+      .sort((a, b) => areaOf(a.loop) - areaOf(b.loop));
+    const under = folded.find((panel) => panel.name === large?.name);
+    if (!small || !under || (kind === 'mountain' && lifts.has(small.name))) continue;
+    lifts.set(small.name, times(under.inside, kind === 'valley' ? DOUBLED_LIFT : -DOUBLED_LIFT));
+  }
+  return lifts;
 }

@@ -73,6 +73,7 @@ export function drawPiece(piece: PieceFigure, options: PieceDrawingOptions): Dra
     ...net.folds
       .filter((fold) => fold.angle !== 0)
       .map((fold): Shape => ({ type: 'path', role: fold.kind, d: pathOf([fold.curve], place, scale) })),
+    ...net.creases.map(({ curve, kind }): Shape => ({ type: 'path', role: kind, d: pathOf([curve], place, scale) })),
     ...net.slits.map((slit): Shape => ({ type: 'path', role: 'slit', d: slitPath(place(slit.from), place(slit.to)) })),
     {
       type: 'path',

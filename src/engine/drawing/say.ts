@@ -1,4 +1,4 @@
-import { show, type ShowOptions } from '../measure';
+import { isZero, show, type ShowOptions } from '../measure';
 import type { Sentence } from '../types';
 
 export interface SaidPart {
@@ -20,6 +20,9 @@ export function sayParts(sentence: Sentence, options: Pick<ShowOptions, 'units' 
   return sentence.map((part) => {
     if (typeof part === 'string') return { text: part, typeset: part, spoken: part, figure: false };
     const shown = show(part.mm, { ...options, ...(part.bare ? { bare: true } : {}) });
+    // Nothing and a card's thickness is a card's thickness.
+    const bare = isZero(part.mm) ? CARDS[part.cards ?? 0] : undefined;
+    if (bare) return { text: bare, typeset: bare, spoken: bare, figure: true };
     const cards =
       part.cards === undefined ? '' : `${part.cards > 0 ? ' and ' : ' less '}${CARDS[Math.abs(part.cards)] ?? ''}`;
     return { text: shown.text + cards, typeset: shown.typeset + cards, spoken: shown.spoken + cards, figure: true };

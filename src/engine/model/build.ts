@@ -159,11 +159,13 @@ function resolveGrid(shape: CompiledGrid, edges: GridPiece['edges'], values: Val
       along: at(y),
       diameter: at(diameter),
     })),
-    creases: inUse(shape.creases, values).map(({ cell, is, from, to }) => ({
+    creases: inUse(shape.creases, values).map(({ cell, is, from, to, parts, angle }) => ({
       cell,
       is,
       from: pair(from),
       to: pair(to),
+      parts,
+      angle: angle?.work(values) ?? 90,
     })),
     rolls: new Map(inUse(shape.rolls, values).map(({ cell, radius }) => [cell, { radius: at(radius) }])),
     edges,

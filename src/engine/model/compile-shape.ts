@@ -102,7 +102,8 @@ class ShapeCompiler {
 
   grid(def: GridPieceDef): CompiledGrid {
     const cells = this.cells(def);
-    const names = new Set(cells.flat().map((cell) => cell.name));
+    const parted = (def.creases ?? []).flatMap(({ parts }) => (parts === undefined ? [] : [keyOf(parts)]));
+    const names = new Set([...cells.flat().map((cell) => cell.name), ...parted]);
     const cell = (name: string, place: string) => this.nameIn(names, name, place);
     const track = (kind: string) => (one: Track) => {
       const place = `${kind}, “${one.name}”`;
@@ -161,6 +162,8 @@ class ShapeCompiler {
           is: one.is,
           from: this.pair(one.from, place),
           to: this.pair(one.to, place),
+          parts: one.parts === undefined ? null : keyOf(one.parts),
+          ...this.maybe('angle', one.angle, ANGLE, place),
           ...this.when(one.when, place),
         };
       }),

@@ -91,6 +91,8 @@ export interface CompiledGrid {
     readonly is: 'valley' | 'mountain';
     readonly from: Pair;
     readonly to: Pair;
+    readonly parts: string | null;
+    readonly angle?: Formula;
   } & Conditional)[];
   readonly rolls: readonly ({ readonly cell: string; readonly radius: Formula } & Conditional)[];
 }

@@ -6,6 +6,17 @@ import type { Curve, Loop, Net, Point } from '../types';
 export type Built = { readonly ok: true; readonly net: Net } | { readonly ok: false; readonly reason: string };
 export const nonsense = (reason: string): Built => ({ ok: false, reason });
 
+/** How a line that the pattern speaks of joins its two panels. */
+export function jointAsSaid(said: {
+  readonly is: 'valley' | 'mountain' | 'slit' | 'nothing';
+  readonly angle: number;
+  readonly shown?: number;
+}): Joint {
+  if (said.is === 'slit' || said.is === 'nothing') return { is: said.is };
+  const { is: kind, angle, shown } = said;
+  return { is: 'fold', kind, angle, ...(shown === undefined ? {} : { shown }) };
+}
+
 export interface LoosePiece {
   readonly panels: readonly LoosePanel[];
   readonly jointOf: (a: string, b: string) => Joint;

@@ -1,10 +1,10 @@
-import { atLeast, isZero, moreThan, snap } from '../measure';
-import { arcThrough, areaOf, lengthOf, line, pointAt, type Joint, type LoosePanel } from '../net';
+import { atLeast, coincident, isZero, moreThan, snap } from '../measure';
+import { arcThrough, areaOf, distance, lengthOf, line, pointAt, samePoint, type Joint, type LoosePanel } from '../net';
 import type { Arc, Curve, Loop, Net, Panel, Point, Side } from '../types';
 import { OPPOSITE, SIDES, hangs, type Cell } from './cells';
 import { toothOn } from './disc';
-import { finishNet, type Built } from './finish';
-import { circle, fillet, polygon } from './shapes';
+import { finishNet, jointAsSaid, type Built } from './finish';
+import { circle, fillet, polygon, slotIn } from './shapes';
 
 /** A grid piece with every formula worked out: lengths in mm, angles in degrees. Tracks of nothing are already left out. */
 export interface GridPiece {
@@ -44,6 +44,9 @@ export interface GridPiece {
     readonly is: 'valley' | 'mountain';
     readonly from: readonly [number, number];
     readonly to: readonly [number, number];
+    /** Name of the panel that it parts off; null: a crease that lies flat. */
+    readonly parts: string | null;
+    readonly angle: number;
   }[];
   readonly rolls: ReadonlyMap<string, { readonly radius: number }>;
   readonly edges: readonly { readonly name: string; readonly cell: string; readonly side: Side }[];
@@ -69,7 +72,8 @@ type Outlined = readonly Sided[];
 
 /**
  * Columns and rows of card to a flat net. Panels are rectangles; a tab is hinged on one neighbour and cut free elsewhere;
- * a cap is the circular segment over its neighbour's edge. Two panels side by side fold (valley, 90°) unless a line says otherwise.
+ * a cap is the circular segment over its neighbour's edge. Cells of one name are one, a rectangle. Two panels side by side
+ * fold (valley, 90°) unless a line says otherwise.
  */
 export function buildGrid(piece: GridPiece): Built {
   const negative = [...piece.columns, ...piece.rows].find((size) => !atLeast(size, 0) || !Number.isFinite(size));
@@ -90,6 +94,8 @@ class GridBuilder {
   private readonly hinges = new Map<string, string>();
   private readonly sides = new Map<string, Outlined>();
   private readonly cellOfPanel = new Map<string, Cell>();
+  private readonly partings = new Map<string, Joint>();
+  private readonly spans = new Map<string, Cell[]>();
   private readonly holes: Loop[] = [];
   private readonly creases: { readonly curve: Curve; readonly kind: 'valley' | 'mountain' }[] = [];
 
@@ -97,10 +103,22 @@ class GridBuilder {
     private readonly piece: GridPiece,
     private readonly xs: readonly number[],
     private readonly ys: readonly number[],
-  ) {}
+  ) {
+    for (const cell of piece.cells.flat()) {
+      const span = this.spans.get(cell.name);
+      if (span) span.push(cell);
+      else this.spans.set(cell.name, [cell]);
+    }
+  }
 
   build(): string | null {
-    const kept = this.piece.cells.flat().filter((cell) => cell.kind !== 'away');
+    const kept = this.piece.cells.flat().filter((cell) => cell.kind !== 'away' && this.spanOf(cell)[0] === cell);
+    for (const cell of kept) {
+      const span = this.spanOf(cell);
+      const [columns, rows] = [new Set(span.map(({ column }) => column)), new Set(span.map(({ row }) => row))];
+      const [wide, tall] = [1 + Math.max(...columns) - Math.min(...columns), 1 + Math.max(...rows) - Math.min(...rows)];
+      if (wide * tall !== span.length) return `the cells of “${cell.name}” make no rectangle`;
+    }
     // Caps before the tabs that hang on them.
     for (const cell of [...kept].sort((a, b) => Number(hangs(a)) - Number(hangs(b)))) {
       const failure = this.add(cell);
@@ -153,12 +171,18 @@ class GridBuilder {
     });
   }
 
+  /** The cells of one name: together they are one rectangle. */
+  private spanOf(cell: Cell): readonly Cell[] {
+    return this.spans.get(cell.name) ?? [cell];
+  }
   private box(cell: Cell) {
+    const span = this.spanOf(cell);
+    const [columns, rows] = [span.map(({ column }) => column), span.map(({ row }) => row)];
     return {
-      left: this.xs[cell.column] as number,
-      right: this.xs[cell.column + 1] as number,
-      top: this.ys[cell.row] as number,
-      bottom: this.ys[cell.row + 1] as number,
+      left: this.xs[Math.min(...columns)] as number,
+      right: this.xs[Math.max(...columns) + 1] as number,
+      top: this.ys[Math.min(...rows)] as number,
+      bottom: this.ys[Math.max(...rows) + 1] as number,
     };
   }
   private neighbour(cell: Cell, side: Side): Cell | undefined {
@@ -167,12 +191,14 @@ class GridBuilder {
   }
   /** The side on which a tab or cap hangs. */
   private hingeSide(cell: Cell): Side | null {
-    const touching = SIDES.filter((side) => {
-      const other = this.neighbour(cell, side);
-      return (
-        other !== undefined && other.kind !== 'away' && (cell.on === null ? !hangs(other) : other.name === cell.on)
-      );
-    });
+    const span = this.spanOf(cell);
+    const touching = SIDES.filter((side) =>
+      span.some((part) => {
+        const other = this.neighbour(part, side);
+        if (other === undefined || other.kind === 'away' || other.name === cell.name) return false;
+        return cell.on === null ? !hangs(other) : other.name === cell.on;
+      }),
+    );
     return touching.length === 1 ? (touching[0] as Side) : cell.on === null ? null : (touching[0] ?? null);
   }
 
@@ -180,7 +206,11 @@ class GridBuilder {
     if (cell.kind === 'panel') return this.addPanel(cell);
     const side = this.hingeSide(cell);
     if (side === null) return `“${cell.name}” hangs on nothing`;
-    const host = this.neighbour(cell, side) as Cell;
+    const host = this.spanOf(cell)
+      .flatMap((part) => this.neighbour(part, side) ?? [])
+      .find(
+        ({ kind, name }) => kind !== 'away' && name !== cell.name && (cell.on === null || name === cell.on),
+      ) as Cell;
     return cell.kind === 'cap' ? this.addCap(cell, side, host) : this.addTab(cell, side, host);
   }
   private push(cell: Cell, name: string, host: Cell | null, outlined: Outlined): void {
@@ -239,7 +269,7 @@ class GridBuilder {
       round: 0,
       shape: null,
     };
-    if (shape.shape) return this.addShaped(cell, side, host, shape.shape);
+    if (shape.shape) return this.addShaped(cell, side, host, shape.shape, shape.round);
     const box = this.box(cell);
     const full = side === 'top' || side === 'bottom' ? box.bottom - box.top : box.right - box.left;
     const depth = shape.depth === null ? full : shape.depth;
@@ -254,7 +284,13 @@ class GridBuilder {
   }
 
   /** A flap of its own shape, given along the hinge from left to right or top to bottom, and out from it. */
-  private addShaped(cell: Cell, side: Side, host: Cell, shape: readonly (readonly [number, number])[]): string | null {
+  private addShaped(
+    cell: Cell,
+    side: Side,
+    host: Cell,
+    shape: readonly (readonly [number, number])[],
+    round: number,
+  ): string | null {
     const corners = cornersOf(this.box(cell));
     const [start, end] = endsOf(corners, side);
     const length = Math.hypot(end.x - start.x, end.y - start.y);
@@ -267,11 +303,25 @@ class GridBuilder {
     const loop = polygon(points);
     const clockwise = areaOf(loop) > 0 ? loop : polygon([...points].reverse());
     if (!moreThan(areaOf(clockwise), 0)) return `“${cell.name}” comes out smaller than nothing`;
+    const depth = Math.max(...shape.map(([, v]) => v));
+    const out = ({ x, y }: Point) => (x - start.x) * -along.y + (y - start.y) * along.x;
+    const atTip = clockwise.filter((curve) => moreThan(round, 0) && coincident(out(curve.to), depth));
+    const rounded = atTip.reduce<Loop | null>(
+      (sides, { to }) =>
+        sides &&
+        fillet(
+          sides,
+          sides.findIndex((curve) => curve.to === to),
+          round,
+        ),
+      clockwise,
+    );
+    if (rounded === null) return `the corners of “${cell.name}” are rounder than it is deep`;
     this.push(
       cell,
       cell.name,
       host,
-      clockwise.map((curve) => ({ side: 'inner' as const, curve })),
+      rounded.map((curve) => ({ side: 'inner' as const, curve })),
     );
     return null;
   }
@@ -357,16 +407,9 @@ class GridBuilder {
   }
 
   private cutSlot(cell: Cell, slot: GridPiece['slots'][number]): string | null {
-    const { left, top, right, bottom } = this.box(cell);
-    const [x, y] = [left + slot.across, top + slot.along];
-    const [a, b] = [
-      { x: x - slot.width / 2, y: y - slot.height / 2 },
-      { x: x + slot.width / 2, y: y + slot.height / 2 },
-    ];
-    if (!(moreThan(a.x, left) && moreThan(right, b.x) && moreThan(a.y, top) && moreThan(bottom, b.y)))
-      return `a slot does not fit inside “${cell.name}”`;
-    const corners = [a, { x: a.x, y: b.y }, b, { x: b.x, y: a.y }];
-    this.holes.push(corners.map((point, index) => line(point, corners[(index + 1) % 4] as Point)));
+    const hole = slotIn(this.box(cell), slot);
+    if (!hole) return `a slot does not fit inside “${cell.name}”`;
+    this.holes.push(hole);
     return null;
   }
 
@@ -384,8 +427,26 @@ class GridBuilder {
   }
   private addCrease(cell: Cell, crease: GridPiece['creases'][number]): string | null {
     const { left, top } = this.box(cell);
-    const place = ([x, y]: readonly [number, number]): Point => ({ x: left + x, y: top + y });
-    this.creases.push({ curve: line(place(crease.from), place(crease.to)), kind: crease.is });
+    const place = ([x, y]: readonly [number, number]): Point => ({ x: snap(left + x), y: snap(top + y) });
+    const [from, to] = [place(crease.from), place(crease.to)];
+    if (crease.parts !== null) return this.part(cell, from, to, { ...crease, parts: crease.parts });
+    this.creases.push({ curve: line(from, to), kind: crease.is });
+    return null;
+  }
+  /** Cuts a panel in two along a fold from edge to edge; what lies to the right of the fold takes a name of its own. */
+  private part(
+    cell: Cell,
+    from: Point,
+    to: Point,
+    { parts, is, angle }: { readonly parts: string; readonly is: 'valley' | 'mountain'; readonly angle: number },
+  ): string | null {
+    const index = this.panels.findIndex((panel) => panel.name === cell.name);
+    const panel = this.panels[index];
+    const halves = panel && parted(panel.loop, from, to);
+    if (!halves) return `a fold does not run from edge to edge of “${cell.name}”`;
+    this.panels.splice(index, 1, { ...panel, loop: halves.left }, { ...panel, name: parts, loop: halves.right });
+    this.cellOfPanel.set(parts, { ...cell, name: parts });
+    this.partings.set(pairOf(cell.name, parts), { is: 'fold', kind: is, angle });
     return null;
   }
 
@@ -395,15 +456,39 @@ class GridBuilder {
     const said = this.piece.lines.find(
       ({ between: [p, q] }) => (p === cellA.name && q === cellB.name) || (p === cellB.name && q === cellA.name),
     );
-    if (said) {
-      if (said.is === 'slit') return { is: 'slit' };
-      if (said.is === 'nothing') return { is: 'nothing' };
-      return foldAsSaid(said.is, said);
-    }
+    const parting = this.partings.get(pairOf(a, b));
+    if (parting) return parting;
+    if (said) return jointAsSaid(said);
     if (cellA.kind === 'panel' && cellB.kind === 'panel') return { is: 'fold', kind: 'valley', angle: 90 };
     if (!hinged) return { is: 'slit' };
     return hangs(cellA) || hangs(cellB) ? { is: 'fold', kind: 'valley', angle: 90 } : { is: 'nothing' };
   }
+}
+
+const pairOf = (a: string, b: string): string => [a, b].sort().join('|');
+
+/** A loop of straight edges cut in two from one point of it to another; null when one of them is not on it. */
+function parted(loop: Loop, from: Point, to: Point): { readonly left: Loop; readonly right: Loop } | null {
+  const corners = loop.flatMap((curve) => {
+    const length = lengthOf(curve);
+    const on = [from, to].filter((point) => {
+      const [a, b] = [distance(curve.from, point), distance(point, curve.to)];
+      return coincident(a + b, length) && !isZero(a) && !isZero(b);
+    });
+    return [curve.from, ...on.sort((a, b) => distance(curve.from, a) - distance(curve.from, b))];
+  });
+  const [start, end] = [from, to].map((point) => corners.findIndex((corner) => samePoint(corner, point))) as [
+    number,
+    number,
+  ];
+  if (start < 0 || end < 0 || start === end) return null;
+  const walk = (first: number, last: number): Point[] => {
+    const count = ((last - first + corners.length) % corners.length) + 1;
+    return Array.from({ length: count }, (_, step) => corners[(first + step) % corners.length] as Point);
+  };
+  // Loops run clockwise on screen: back from the fold's end to its start they go round what lies to its right.
+  const [right, left] = [polygon(walk(end, start)), polygon(walk(start, end))];
+  return moreThan(areaOf(right), 0) && moreThan(areaOf(left), 0) ? { left, right } : null;
 }
 
 interface Corners {

@@ -1,16 +1,20 @@
-import { arcThrough, areaOf, line, lengthOf, reversed, type Joint, type LoosePanel } from '../net';
-import type { Curve, Point } from '../types';
-import { finishNet, nonsense, type Built } from './finish';
+import { arcThrough, areaOf, boundsOf, line, lengthOf, reversed, type Joint, type LoosePanel } from '../net';
+import type { Curve, Loop, Point } from '../types';
+import { finishNet, jointAsSaid, nonsense, type Built } from './finish';
+import type { GridPiece } from './grid';
+import { slotIn } from './shapes';
 
 /** An outline piece with every formula worked out. */
 export interface OutlinePiece {
   readonly points: ReadonlyMap<string, Point>;
-  readonly panels: readonly { readonly name: string; readonly role: 'panel' | 'tab'; readonly loop: readonly Stop[] }[];
-  readonly lines: readonly {
-    readonly between: readonly [string, string];
-    readonly is: 'valley' | 'mountain' | 'slit' | 'nothing';
-    readonly angle: number;
+  readonly panels: readonly {
+    readonly name: string;
+    readonly role: 'panel' | 'tab';
+    readonly loop: readonly Stop[];
+    readonly bent: { readonly radius: number } | null;
   }[];
+  readonly lines: GridPiece['lines'];
+  readonly slots: GridPiece['slots'];
   readonly edges: readonly {
     readonly name: string;
     readonly panel: string;
@@ -54,19 +58,23 @@ export function buildOutline(piece: OutlinePiece): Built {
     }
     if (loop.length < 2) continue;
     if (areaOf(loop) <= 0) return nonsense(`“${panel.name}” comes out smaller than nothing`);
-    panels.push({ name: panel.name, role: panel.role, loop });
+    panels.push({ name: panel.name, role: panel.role, loop, ...(panel.bent ? { bent: panel.bent } : {}) });
   }
   const jointOf = (a: string, b: string): Joint => {
     const said = piece.lines.find(({ between: [p, q] }) => (p === a && q === b) || (p === b && q === a));
-    if (!said) return { is: 'fold', kind: 'valley', angle: 90 };
-    return said.is === 'slit' || said.is === 'nothing'
-      ? { is: said.is }
-      : { is: 'fold', kind: said.is, angle: said.angle };
+    return said ? jointAsSaid(said) : { is: 'fold', kind: 'valley', angle: 90 };
   };
+  const holes: Loop[] = [];
+  for (const slot of piece.slots) {
+    const panel = panels.find((one) => one.name === slot.cell);
+    const hole = panel && slotIn(boundsOf(panel.loop), slot);
+    if (!hole) return nonsense(`a slot does not fit inside “${slot.cell}”`);
+    holes.push(hole);
+  }
   const edges = Object.fromEntries(
     piece.edges.map(({ name, panel, from, to }) => [name, lengthBetween(piece, panels, panel, from, to)]),
   );
-  return finishNet({ panels, jointOf, edges, step: piece.step });
+  return finishNet({ panels, jointOf, holes, edges, step: piece.step });
 }
 
 /** Length of the edge of a panel that joins two points, whichever way round; NaN when there is none. */

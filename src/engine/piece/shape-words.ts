@@ -1,6 +1,6 @@
 import { decimal } from '../measure';
-import { distance, lengthOf, pointAt } from '../net';
-import type { Curve, FanPieceDef, Net, Panel, Point, Sentence } from '../types';
+import { boundsOf, distance, lengthOf, pointAt } from '../net';
+import type { Arc, Curve, FanPieceDef, Net, Panel, Point, Sentence } from '../types';
 import type { WordsOptions } from './words';
 
 /** The making of a piece that is not a grid, in words. */
@@ -154,20 +154,17 @@ function sector({ net, def, figure }: WordsOptions): Sentence[] {
 
 /** Corners of the outline in order, each by how far it lies from the left and from the top edge. */
 function outline({ net, figure }: WordsOptions): Sentence[] {
-  const corners = net.outline.flatMap(
-    (curve): Sentence => [
+  const corners = net.outline.flatMap((curve, index): Sentence => {
+    const end = index === net.outline.length - 1 ? '.' : ';';
+    return [
       figure(curve.from.x, true),
       ' across, ',
       figure(curve.from.y, true),
-      curve.type === 'arc' ? ' down (then an arc); ' : ' down; ',
-    ],
-  );
+      ...(curve.type === 'arc' ? [' down (then ', ...bow(curve, figure), `)${end} `] : [` down${end} `]),
+    ];
+  });
   return [
-    [
-      'Mark the corners, each from the left and from the top edge: ',
-      ...corners.slice(0, -1),
-      ' down. Join them in this order and cut.',
-    ],
+    ['Mark the corners, each from the left and from the top edge: ', ...corners, 'Join them in this order and cut.'],
     ...net.folds
       .filter((fold) => fold.angle !== 0)
       .map((fold): Sentence => {
@@ -181,8 +178,42 @@ function outline({ net, figure }: WordsOptions): Sentence[] {
           figure(to.x, true),
           ' across, ',
           figure(to.y, true),
-          ' down.',
+          ...(fold.curve.type === 'arc' ? [' down, ', ...bow(fold.curve, figure), '.'] : [' down.']),
         ];
       }),
+    ...net.slits.map(
+      ({ from, to }): Sentence => [
+        'Slit from ',
+        figure(from.x, true),
+        ' across, ',
+        figure(from.y, true),
+        ' down, to ',
+        figure(to.x, true),
+        ' across, ',
+        figure(to.y, true),
+        ' down.',
+      ],
+    ),
+    ...net.holes.map((hole): Sentence => {
+      const { left, top, right, bottom } = boundsOf(hole);
+      return [
+        'Cut out a window ',
+        figure(right - left, true),
+        ' × ',
+        figure(bottom - top),
+        ', its top left corner ',
+        figure(left, true),
+        ' across, ',
+        figure(top, true),
+        ' down.',
+      ];
+    }),
   ];
+}
+/** An arc by its radius and the way its middle stands out from the straight line between its ends. */
+function bow(arc: Arc, figure: WordsOptions['figure']): Sentence {
+  const middle = pointAt(arc, 0.5);
+  const [x, y] = [middle.x - (arc.from.x + arc.to.x) / 2, middle.y - (arc.from.y + arc.to.y) / 2];
+  const way = Math.abs(y) >= Math.abs(x) ? (y < 0 ? 'up' : 'down') : x < 0 ? 'to the left' : 'to the right';
+  return ['an arc of ', figure(arc.radius), ` radius, bowed ${way}`];
 }

@@ -1,5 +1,5 @@
 import { coincident, moreThan } from '../measure';
-import { arcThrough, line } from '../net';
+import { arcThrough, line, type Box } from '../net';
 import type { Arc, Curve, Loop, Point } from '../types';
 
 /** Straight lines round these corners, in order; corners that coincide with the one before are dropped. */
@@ -9,6 +9,20 @@ export function polygon(corners: readonly Point[]): Loop {
     return !coincident(point.x, before.x) || !coincident(point.y, before.y);
   });
   return kept.map((point, index) => line(point, kept[(index + 1) % kept.length] as Point));
+}
+
+/** A rectangular hole, its middle measured from the left and top of the box; null when it does not fit inside. */
+export function slotIn(
+  { left, top, right, bottom }: Box,
+  slot: { readonly across: number; readonly along: number; readonly width: number; readonly height: number },
+): Loop | null {
+  const [x, y] = [left + slot.across, top + slot.along];
+  const [a, b] = [
+    { x: x - slot.width / 2, y: y - slot.height / 2 },
+    { x: x + slot.width / 2, y: y + slot.height / 2 },
+  ];
+  if (!(moreThan(a.x, left) && moreThan(right, b.x) && moreThan(a.y, top) && moreThan(bottom, b.y))) return null;
+  return polygon([a, { x: a.x, y: b.y }, b, { x: b.x, y: a.y }]);
 }
 
 /** A circle as two half arcs, clockwise, or the other way round for a hole. */

@@ -38,6 +38,7 @@ const gridWords = (options: GridWords): Sentence[] => [
   ...pencilling(options),
   ...cuttingAway(options),
   ...tabsInWords(options),
+  ...shapedInWords(options),
   ...arcs(options),
   ...corners(options),
   ...notches(options),
@@ -191,7 +192,9 @@ function tabsInWords({ grid, net, figure }: GridWords): Sentence[] {
     .flat()
     .filter(
       (cell) =>
-        hangs(cell) && net.panels.some((panel) => panel.name === cell.name || panel.name.startsWith(`${cell.name} `)),
+        hangs(cell) &&
+        !grid.tabs.get(cell.name)?.shape &&
+        net.panels.some((panel) => panel.name === cell.name || panel.name.startsWith(`${cell.name} `)),
     );
   const sentences: Sentence[] = [];
   const slit = tabs.filter(
@@ -265,6 +268,33 @@ function tabsInWords({ grid, net, figure }: GridWords): Sentence[] {
   }
   return sentences;
 }
+
+/** Flaps of a shape of their own, corner by corner; alike ones together. */
+function shapedInWords({ grid, net, figure }: GridWords): Sentence[] {
+  const alike = new Map<string, Cell[]>();
+  for (const cell of grid.cells.flat()) {
+    const { shape, round } = grid.tabs.get(cell.name) ?? {};
+    if (!hangs(cell) || !shape || !net.panels.some((panel) => panel.name === cell.name)) continue;
+    const from = ['left', 'right'].includes(hingeOf(grid, cell)) ? 'top' : 'left';
+    const key = JSON.stringify([from, shape, round]);
+    const group = alike.get(key) ?? [];
+    if (!group.some(({ name }) => name === cell.name)) alike.set(key, [...group, cell]);
+  }
+  return [...alike].map(([key, cells]): Sentence => {
+    const [from, shape, round] = JSON.parse(key) as [string, [number, number][], number];
+    return [
+      `Cut ${cells.map(({ name }) => `“${name}”`).join(' and ')} by these corners, along the score from its ${from} end and out from it: `,
+      ...shape.flatMap(([along, out], index): Part[] => [
+        index === 0 ? '' : '; ',
+        figure(along, true),
+        ' along, ',
+        figure(out, true),
+        ' out',
+      ]),
+      ...(isZero(round) ? ['.'] : ['. Round the two corners at its tip to a radius of ', figure(round), '.']),
+    ];
+  });
+}
 const opposite = (side: Side): Side =>
   (({ top: 'bottom', bottom: 'top', left: 'right', right: 'left' }) as const)[side];
 const STEPS: readonly [Side, number, number][] = [
@@ -331,9 +361,11 @@ function notches({ grid, figure }: GridWords): Sentence[] {
     ` from the ${side === 'top' || side === 'bottom' ? 'score on its left' : 'score above it'}.`,
   ]);
 }
+/** What is wider both ways is a window. */
+const LARGEST_SLOT = 12.7;
 function slots({ grid, figure }: GridWords): Sentence[] {
   return grid.slots.map(({ cell, across, along, width, height }) => [
-    `In “${cell}” cut a slot `,
+    `In “${cell}” cut a ${Math.min(width, height) > LARGEST_SLOT ? 'window' : 'slot'} `,
     figure(width, true),
     ' × ',
     figure(height),

@@ -1,5 +1,6 @@
 import { pointAt, sweepOf } from '../net';
-import type { Axis, Curve, Net, Panel, Point } from '../types';
+import type { Axis, Curve, Loop, Net, Panel, Point } from '../types';
+import { bentStrips, bentTurn, creaseSeams, edgeTurn } from './bent';
 import { cross, dot, minus, plus, times, turned, unit, vector, type Vector } from './vector';
 
 /** Where a flat panel lies: flat (x, y) is at `origin + x·across + y·along`; the inside of the box is on the side of `inside`. */
@@ -26,6 +27,8 @@ export interface FoldOptions {
   readonly anchor?: 'corner' | 'middle';
   /** Share of every fold's turn, 0 flat to 1 closed. */
   readonly share?: number;
+  /** Folds that the picture shows open turn only so far. */
+  readonly asShown?: boolean;
 }
 
 const AXES: Readonly<Record<Axis, Vector>> = {
@@ -63,7 +66,7 @@ interface Link {
  */
 export function foldNet(net: Net, options: FoldOptions): readonly FoldedPanel[] {
   const share = options.share ?? 1;
-  const { facets, links } = facetsOf(net);
+  const { facets, links } = facetsOf(net, options.asShown ?? false);
   const root = facets.findIndex((facet) => facet.of.name === options.root);
   const start = facets[root];
   if (!start) return [];
@@ -97,7 +100,7 @@ export function foldNet(net: Net, options: FoldOptions): readonly FoldedPanel[] 
 /** A rolled root is placed by its chord: its first strip leans back by half the whole turn. */
 function rootFrame(start: Facet, { at, across: u, along: v, anchor }: FoldOptions, share: number): Frame {
   const [acrossAxis, alongAxis] = [axis(u), axis(v)];
-  const { roll, cone } = start.of;
+  const { roll, cone, bent } = start.of;
   if (cone) return coneFrame(cone, at, acrossAxis, alongAxis);
   const corners = start.of.loop.map((curve) => curve.from);
   const box = boxOf(corners);
@@ -107,8 +110,10 @@ function rootFrame(start: Facet, { at, across: u, along: v, anchor }: FoldOption
       ? { x: mean(corners.map(({ x }) => x)), y: mean(corners.map(({ y }) => y)) }
       : { x: box.left, y: box.top };
   let heading = acrossAxis;
-  if (roll) {
-    const turn = ((box.right - box.left) / roll.radius) * (1 - 1 / stripsOf(start.of)) * share;
+  if (roll || bent) {
+    const turn = bent
+      ? bentTurn(start.of) * (Math.PI / 180) * share
+      : ((box.right - box.left) / (roll?.radius ?? 1)) * (1 - 1 / stripsOf(start.of)) * share;
     const lean = dot(turned(acrossAxis, alongAxis, 0.1), cross(alongAxis, acrossAxis)) > 0 ? -1 : 1;
     heading = turned(acrossAxis, alongAxis, (lean * turn) / 2);
   }
@@ -149,7 +154,7 @@ function across(frame: Frame, link: Link, beyond: Facet, share: number): Frame {
   return { origin: plus(p, turn(minus(frame.origin, p))), across: turn(frame.across), along: turn(frame.along) };
 }
 
-function facetsOf(net: Net): { readonly facets: readonly Facet[]; readonly links: readonly Link[] } {
+function facetsOf(net: Net, asShown: boolean): { readonly facets: readonly Facet[]; readonly links: readonly Link[] } {
   const facets: Facet[] = [];
   const links: Link[] = [];
   const strips = new Map<string, readonly number[]>();
@@ -160,8 +165,18 @@ function facetsOf(net: Net): { readonly facets: readonly Facet[]; readonly links
       strips.set(panel.name, coneFacets(panel, panel.cone, facets, links));
       continue;
     }
+    if (panel.bent) {
+      const { strips: all, seams } = bentStrips(panel);
+      facets.push(...all.map((strip, index) => ({ name: `${panel.name}#${index}`, of: panel, ...strip })));
+      links.push(...seams.map((seam, index) => ({ a: first + index, b: first + index + 1, ...seam })));
+      strips.set(
+        panel.name,
+        all.map((_, index) => first + index),
+      );
+      continue;
+    }
     if (!panel.roll) {
-      facets.push(flatFacet(panel, joined));
+      facets.push(pierced(flatFacet(panel, joined), net.holes));
       strips.set(panel.name, [first]);
       continue;
     }
@@ -212,11 +227,24 @@ function facetsOf(net: Net): { readonly facets: readonly Facet[]; readonly links
     links.push({ a: facetAt(a, curve), b: facetAt(b, curve), from: curve.from, to: curve.to, turn });
   for (const fold of net.folds) {
     const own = net.panels.filter((panel) => fold.panels.includes(panel.name));
+    const bent = own.filter((panel) => panel.bent);
+    const [face, flap] = bent;
+    if (fold.curve.type === 'arc' && face && flap) {
+      const [a, b] = [strips.get(face.name) as readonly number[], strips.get(flap.name) as readonly number[]];
+      const seams = creaseSeams(fold.curve, face);
+      links.push(...seams.map((seam, index) => ({ a: a[index] as number, b: b[index] as number, ...seam })));
+      continue;
+    }
+    const turn = (asShown ? fold.shown : undefined) ?? fold.angle;
     const cone = own.find((panel) => panel.cone)?.cone;
-    const tube = own.find((panel) => panel.roll && wholeTurn(panel) > 350);
-    // A tab that goes on without a fold lies under the first strip, once round.
-    const round = cone ? coneTurn(cone.angle) : tube && fold.angle === 0 ? wholeTurn(tube) / stripsOf(tube) : 0;
-    link(fold.curve, fold.panels, (fold.kind === 'valley' ? fold.angle : -fold.angle) + round);
+    const rolled = Math.abs(fold.curve.from.x - fold.curve.to.x) < 1e-6 ? own.find((panel) => panel.roll) : undefined;
+    const strip = rolled ? wholeTurn(rolled) / stripsOf(rolled) : 0;
+    // The first strip leans half its turn from the round that it stands for; a tab that goes on without a fold, once round,
+    // lies under it.
+    const under = rolled && wholeTurn(rolled) > 350 && fold.angle === 0;
+    const round = cone ? coneTurn(cone.angle) : under ? strip : strip / 2;
+    const beyond = bent.reduce((sum, panel) => sum + edgeTurn(panel), round);
+    link(fold.curve, fold.panels, (fold.kind === 'valley' ? turn : -turn) + beyond);
   }
   for (const join of net.joins) link(join.curve, join.panels, 0);
   return { facets, links };
@@ -301,6 +329,26 @@ function flatFacet(panel: Panel, joined: readonly Curve[]): Facet {
   }
   return { name: panel.name, of: panel, points, edges };
 }
+/** A face with the holes that lie in it, each joined to the first corner by a seam that is no edge, so that it stays one loop. */
+function pierced(facet: Facet, holes: readonly Loop[]): Facet {
+  const [points, edges] = [[...facet.points], [...facet.edges]];
+  for (const hole of holes) {
+    const rim = hole.flatMap((curve) =>
+      curve.type === 'arc' ? Array.from({ length: 8 }, (_, index) => pointAt(curve, index / 8)) : [curve.from],
+    );
+    if (!encloses(facet.points, middleOf(rim))) continue;
+    points.push(facet.points[0] as Point, ...rim, rim[0] as Point);
+    edges.push(false, ...rim.map(() => true), false);
+  }
+  return { ...facet, points, edges };
+}
+function encloses(corners: readonly Point[], point: Point): boolean {
+  return corners.reduce((inside, a, index) => {
+    const b = corners[(index + 1) % corners.length] as Point;
+    const crosses = a.y > point.y !== b.y > point.y && point.x < ((b.x - a.x) * (point.y - a.y)) / (b.y - a.y) + a.x;
+    return crosses ? !inside : inside;
+  }, false);
+}
 const near = (a: Point, b: Point): boolean => Math.hypot(a.x - b.x, a.y - b.y) < 1e-3;
 const isSame = (a: Curve, b: Curve): boolean =>
   (near(a.from, b.from) && near(a.to, b.to)) || (near(a.from, b.to) && near(a.to, b.from));
@@ -315,7 +363,8 @@ const boxOf = (points: readonly Point[]) => {
   const [xs, ys] = [points.map((point) => point.x), points.map((point) => point.y)];
   return { left: Math.min(...xs), right: Math.max(...xs), top: Math.min(...ys), bottom: Math.max(...ys) };
 };
-const middleOf = (points: readonly Point[]): Point => {
-  const box = boxOf(points);
-  return { x: (box.left + box.right) / 2, y: (box.top + box.bottom) / 2 };
-};
+/** The mean of the corners: inside any face that bulges nowhere inwards, which the middle of its upright rectangle is not. */
+const middleOf = (points: readonly Point[]): Point => ({
+  x: points.reduce((sum, { x }) => sum + x, 0) / points.length,
+  y: points.reduce((sum, { y }) => sum + y, 0) / points.length,
+});

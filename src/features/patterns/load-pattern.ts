@@ -79,6 +79,8 @@ const KNOWN = [
   'notches',
   'slots',
   'rolls',
+  'bent',
+  'shown',
   'edges',
   'look',
   'remarks',

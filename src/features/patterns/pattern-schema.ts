@@ -61,8 +61,12 @@ const lines = list(
     between: z.tuple([name, name]),
     is: z.enum(['valley', 'mountain', 'slit', 'nothing']),
     angle: formula.optional(),
+    shown: formula.optional(),
     when,
   }),
+).optional();
+const slots = list(
+  z.strictObject({ cell: name, across: formula, along: formula, width: formula, height: formula, when }),
 ).optional();
 const grid = z.strictObject({
   ...base,
@@ -96,12 +100,18 @@ const grid = z.strictObject({
     }),
   ).optional(),
   notches: list(z.strictObject({ cell: name, side, at: formula, radius: formula, when })).optional(),
-  slots: list(
-    z.strictObject({ cell: name, across: formula, along: formula, width: formula, height: formula, when }),
-  ).optional(),
+  slots,
   holes: list(z.strictObject({ cell: name, across: formula, along: formula, diameter: formula, when })).optional(),
   creases: list(
-    z.strictObject({ cell: name, is: z.enum(['valley', 'mountain']), from: pair, to: pair, when }),
+    z.strictObject({
+      cell: name,
+      is: z.enum(['valley', 'mountain']),
+      from: pair,
+      to: pair,
+      parts: name.optional(),
+      angle: formula.optional(),
+      when,
+    }),
   ).optional(),
   rolls: list(z.strictObject({ cell: name, radius: formula, when })).optional(),
   edges: list(z.strictObject({ name, cell: name, side })).optional(),
@@ -141,8 +151,17 @@ const outline = z.strictObject({
   ...base,
   builder: z.literal('outline'),
   points: list(z.strictObject({ name, across: formula, along: formula })),
-  panels: list(z.strictObject({ name, role: z.enum(['panel', 'tab']).optional(), loop: list(words), when })),
+  panels: list(
+    z.strictObject({
+      name,
+      role: z.enum(['panel', 'tab']).optional(),
+      loop: list(words),
+      bent: formula.optional(),
+      when,
+    }),
+  ),
   lines,
+  slots,
   edges: list(z.strictObject({ name, panel: name, from: name, to: name })).optional(),
 });
 const piece = z.discriminatedUnion('builder', [grid, fan, disc, sector, outline]);
