@@ -3,7 +3,18 @@ import { isInUse } from '../model/values';
 import { valuesBehind, type Model } from '../model';
 import { areaOf } from '../net';
 import { keyOf } from '../pattern/names';
-import { backToFront, dot, foldNet, plus, times, unit, vector, type Face, type FoldedPanel, type Vector } from '../space';
+import {
+  backToFront,
+  dot,
+  foldNet,
+  plus,
+  times,
+  unit,
+  vector,
+  type Face,
+  type FoldedPanel,
+  type Vector,
+} from '../space';
 import type { Drawing, Figures, Net, Shape } from '../types';
 import { n } from './path';
 
