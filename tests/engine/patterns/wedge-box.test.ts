@@ -69,11 +69,11 @@ describe('the circle’s share', () => {
 });
 
 describe('closing the round', () => {
-  it('leaves 2.9 mm open in all for 8 slices of 100 mm at sixteenths of an inch (constructions, worked example)', () => {
+  it('leaves 3 mm open in all for 8 slices of 100 mm at sixteenths of an inch (derived)', () => {
     const figures = slice({ slices: 8, radius: 100 }, {}, {});
     expect(measure(figures, 'chord').cut).toBe(inch(3)); // 2 × 100 × sin 22.5° = 76.54 mm, down
-    // 100 mm is cut as 3 15/16 in = 100.0125 mm: 16 × asin(76.2 / 200.025) = 358.274°, and 1.726 / 360 of the round is 3.01 mm.
-    expectClose(measure(figures, 'open gap').cut, 2.9, 0.15);
+    // 100 mm is cut as 3 15/16 in = 100.0125 mm: 16 × asin(76.2 / 200.025) = 358.283°, and 1.717 / 360 of the round is 2.997 mm (2.914 at 100 mm).
+    expectClose(measure(figures, 'open gap').cut, 2.997, 0.001);
     expect(measure(figures, 'open gap').exact).toBeLessThan(1e-4);
     expect(figures.fits.find((fit) => fit.name === 'slices close')?.holds).toBe(true);
   });
