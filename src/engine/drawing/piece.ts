@@ -1,7 +1,7 @@
 import { GRIDS, defaultGrid, show, type ShowOptions } from '../measure';
-import { areaOf, boundsOf, lengthOf } from '../net';
+import { areaOf, boundsOf, lengthOf, pointsOf } from '../net';
 import { figureMaker, seamsOf } from '../piece';
-import type { Drawing, PieceFigure, Point, Shape } from '../types';
+import type { Drawing, Loop, PieceFigure, Point, Shape } from '../types';
 import { acrossTop, downLeft, textWidth, topRows, type Stop } from './dimensions';
 import { closedPath, n, pathOf, segment, type Place } from './path';
 import { ruler } from './ruler';
@@ -143,19 +143,14 @@ function labelsOf(piece: PieceFigure, place: Place, scale: number): Shape[] {
   return piece.net.panels.flatMap((panel): Shape[] => {
     if (panel.role === 'tab' || joined.has(panel.name) || areaOf(panel.loop) <= 0) return [];
     const box = boundsOf(panel.loop);
-    // Where the middle of a triangle's corners lies, two thirds of it are left across and down.
+    // Where a triangle balances, two thirds of it are left across and down.
     const pointed = panel.loop.length === 3;
     const left = pointed ? (scale * 2) / 3 : scale;
     const [wide, tall] = [(box.right - box.left) * left, (box.bottom - box.top) * left];
     const room = textWidth(panel.name) + 10;
     const turned = wide < room && tall >= room;
     if ((turned ? wide : tall) < 18 || (turned ? tall : wide) < room) return [];
-    const mean = (read: (point: Point) => number) => panel.loop.reduce((sum, { from }) => sum + read(from), 0) / 3;
-    const middle = place(
-      pointed
-        ? { x: mean(({ x }) => x), y: mean(({ y }) => y) }
-        : { x: (box.left + box.right) / 2, y: (box.top + box.bottom) / 2 },
-    );
+    const middle = place(centroidOf(panel.loop));
     return [
       {
         type: 'text',
@@ -169,6 +164,22 @@ function labelsOf(piece: PieceFigure, place: Place, scale: number): Shape[] {
       },
     ];
   });
+}
+
+/** Where a panel would balance. */
+function centroidOf(loop: Loop): Point {
+  const points = pointsOf(loop);
+  const origin = points[0] ?? { x: 0, y: 0 };
+  const sum = points.reduce(
+    (so, a, index) => {
+      const b = points[(index + 1) % points.length] ?? a;
+      const twice = (a.x - origin.x) * (b.y - origin.y) - (b.x - origin.x) * (a.y - origin.y);
+      const [x, y] = [(a.x + b.x + origin.x) / 3, (a.y + b.y + origin.y) / 3];
+      return { x: so.x + twice * x, y: so.y + twice * y, twice: so.twice + twice };
+    },
+    { x: 0, y: 0, twice: 0 },
+  );
+  return { x: sum.x / sum.twice, y: sum.y / sum.twice };
 }
 
 /** Size and scores in words, for those who hear the drawing. */

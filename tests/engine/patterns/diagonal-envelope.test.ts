@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { lengthOf, type Figures, type Point, type Sizing } from '@/engine';
+import { drawPiece, lengthOf, type Figures, type Point, type Sizing } from '@/engine';
 import { cross, dot, foldNet, minus, size, unit, vector } from '@/engine/space';
 import groups from '../../reference/check-values.json' with { type: 'json' };
 import { expectClose } from '../../setup/expect-close';
@@ -139,6 +139,15 @@ describe('diagonal-envelope', () => {
         1e-9,
         name,
       );
+  });
+  it('names every flap on the flap, clear of the folds', () => {
+    const figures = figuresOf(model, { 'card width': 127, 'card height': 89, ease: 6, overlap: 10 }, METRIC);
+    // Marks 133 / √2 → 95 and 95 / √2 → 68, and 10: 173 mm, drawn at one unit a millimetre with a margin of 6.
+    const { shapes } = drawPiece(pieceOf(figures, 'Envelope'), { ...METRIC, width: 185, scale: 1, dims: false });
+    const name = shapes.find((shape) => shape.type === 'text' && shape.of === 'top');
+    if (name?.type !== 'text') throw new Error('the top flap has no name');
+    // Its fold runs where across and down come to 105; a capital stands 4.5 over the line that it is written on.
+    expect(name.x - 6 + (name.y - 4.5 - 6)).toBeLessThan(105 - 15);
   });
   it('refuses bands too narrow for glue and flaps that do not meet, and names the nearest that works', () => {
     const figures = figuresOf(model, { 'card width': 100, 'card height': 100, ease: 5, overlap: 2 }, METRIC);
