@@ -170,7 +170,7 @@ function labelsOf(piece: PieceFigure, place: Place, scale: number): Shape[] {
 function centroidOf(loop: Loop): Point {
   const points = pointsOf(loop);
   const origin = points[0] ?? { x: 0, y: 0 };
-  const sum = points.reduce(
+  const sum = points.reduce<Point & { readonly twice: number }>(
     (so, a, index) => {
       const b = points[(index + 1) % points.length] ?? a;
       const twice = (a.x - origin.x) * (b.y - origin.y) - (b.x - origin.x) * (a.y - origin.y);
