@@ -18,7 +18,10 @@ const test = base.extend<{ id: string }>({
       await page.waitForURL('**/workroom');
       signedIn = await context.cookies();
     }
-    const made = await page.request.post('/api/projects', { data: { pattern: 'tray', title: 'Desk at work' }, headers: { origin: baseURL! } });
+    const made = await page.request.post('/api/projects', {
+      data: { pattern: 'tray', title: 'Desk at work' },
+      headers: { origin: baseURL! },
+    });
     await use(((await made.json()) as { id: string }).id);
   },
 });
@@ -30,15 +33,24 @@ async function openDesk(page: Page, id: string): Promise<void> {
 }
 const saveWords = (page: Page) => page.locator('.save-words');
 const title = (page: Page) => page.getByLabel('Title of the project');
-const revision = async (page: Page, n: number) => expect(saveWords(page)).toHaveText(new RegExp(`Saved.*revision ${n}$`));
-const titles = async (page: Page) => ((await (await page.request.get('/api/projects')).json()) as { projects: { title: string }[] }).projects.map((project) => project.title);
+const revision = async (page: Page, n: number) =>
+  expect(saveWords(page)).toHaveText(new RegExp(`Saved.*revision ${n}$`));
+const titles = async (page: Page) =>
+  ((await (await page.request.get('/api/projects')).json()) as { projects: { title: string }[] }).projects.map(
+    (project) => project.title,
+  );
 
-test('a formula that does not read is told at its place, cured with one press, and saved as typed meanwhile', async ({ page, id }) => {
+test('a formula that does not read is told at its place, cured with one press, and saved as typed meanwhile', async ({
+  page,
+  id,
+}) => {
   await page.setViewportSize({ width: 1440, height: 1000 });
   await openDesk(page, id);
   const formula = page.getByLabel('Formula of outside length');
   await formula.fill('inside lenght + 2 * card thickness');
-  await expect(page.locator('.row-fault')).toContainText('No measure is called “inside lenght”. The nearest name is “inside length”.');
+  await expect(page.locator('.row-fault')).toContainText(
+    'No measure is called “inside lenght”. The nearest name is “inside length”.',
+  );
   await expect(page.locator('.formula-bad')).toHaveText('inside lenght');
   await expect(page.getByText('These are the last good figures')).toBeVisible();
   await expect(page.getByRole('button', { name: /^Publish edition 1/ })).toHaveAttribute('aria-disabled', 'true');
@@ -49,7 +61,10 @@ test('a formula that does not read is told at its place, cured with one press, a
   await expect(page.getByRole('button', { name: /^Publish edition 1/ })).toHaveAttribute('aria-disabled', 'false');
 });
 
-test('selecting a measure lights what follows it in the list, the pieces and the text, and Escape puts it out', async ({ page, id }) => {
+test('selecting a measure lights what follows it in the list, the pieces and the text, and Escape puts it out', async ({
+  page,
+  id,
+}) => {
   await page.setViewportSize({ width: 1440, height: 1000 });
   await openDesk(page, id);
   await page.getByRole('button', { name: 'inside height', exact: true }).click();
@@ -61,7 +76,10 @@ test('selecting a measure lights what follows it in the list, the pieces and the
   await expect(page.locator('.lit-count')).toHaveCount(0);
 });
 
-test('a size typed at the desk changes the drawing, is undone with Ctrl Z, and a senseless one says why', async ({ page, id }) => {
+test('a size typed at the desk changes the drawing, is undone with Ctrl Z, and a senseless one says why', async ({
+  page,
+  id,
+}) => {
   await page.setViewportSize({ width: 1440, height: 1000 });
   await openDesk(page, id);
   const blank = page.locator('.piece-facts');
@@ -79,7 +97,11 @@ test('a size typed at the desk changes the drawing, is undone with Ctrl Z, and a
   await expect(blank).toContainText('11\u202f1\u20442 × 8\u202f1\u20442');
 });
 
-test('another tab’s save is never overwritten, and both versions are kept whichever is chosen', async ({ context, page: first, id }) => {
+test('another tab’s save is never overwritten, and both versions are kept whichever is chosen', async ({
+  context,
+  page: first,
+  id,
+}) => {
   const second = await context.newPage();
   await openDesk(first, id);
   await openDesk(second, id);
@@ -92,16 +114,24 @@ test('another tab’s save is never overwritten, and both versions are kept whic
   await expect(title(second)).toHaveValue('Tray from the second tab');
   await second.getByRole('button', { name: 'Keep mine as a new revision' }).click();
   await revision(second, 3);
-  expect(await titles(first)).toEqual(expect.arrayContaining(['Tray from the second tab', 'Tray from the first tab (from the other tab)']));
+  expect(await titles(first)).toEqual(
+    expect.arrayContaining(['Tray from the second tab', 'Tray from the first tab (from the other tab)']),
+  );
 
   await title(first).fill('Tray from the first tab, later');
   await first.getByRole('button', { name: 'Take the other' }).click();
   await expect(title(first)).toHaveValue('Tray from the second tab');
   await revision(first, 3);
-  expect(await titles(first)).toEqual(expect.arrayContaining(['Tray from the second tab', 'Tray from the first tab, later (from this tab)']));
+  expect(await titles(first)).toEqual(
+    expect.arrayContaining(['Tray from the second tab', 'Tray from the first tab, later (from this tab)']),
+  );
 });
 
-test('what was typed without a connection is said to be unsaved, and is there when the page is opened again', async ({ context, page, id }) => {
+test('what was typed without a connection is said to be unsaved, and is there when the page is opened again', async ({
+  context,
+  page,
+  id,
+}) => {
   await openDesk(page, id);
   await context.setOffline(true);
   await title(page).fill('Typed without a connection');

@@ -137,9 +137,10 @@ function slitPath(a: Point, b: Point): string {
   );
 }
 
-/** Names of panels in their middle, where there is room for them. */
+/** Names of panels where they balance, where there is room for them and no other name stands there. */
 function labelsOf(piece: PieceFigure, place: Place, scale: number): Shape[] {
   const joined = new Set(piece.net.joins.map((join) => join.panels[1]));
+  const taken: { readonly x: number; readonly y: number; readonly wide: number; readonly tall: number }[] = [];
   return piece.net.panels.flatMap((panel): Shape[] => {
     if (panel.role === 'tab' || joined.has(panel.name) || areaOf(panel.loop) <= 0) return [];
     const box = boundsOf(panel.loop);
@@ -150,13 +151,18 @@ function labelsOf(piece: PieceFigure, place: Place, scale: number): Shape[] {
     const room = textWidth(panel.name) + 10;
     const turned = wide < room && tall >= room;
     if ((turned ? wide : tall) < 18 || (turned ? tall : wide) < room) return [];
-    const middle = place(centroidOf(panel.loop));
+    const { x, y } = place(centroidOf(panel.loop));
+    const own = { x, y, wide: turned ? 18 : room, tall: turned ? room : 18 };
+    const meets = (other: typeof own) =>
+      Math.abs(other.x - x) * 2 < other.wide + own.wide && Math.abs(other.y - y) * 2 < other.tall + own.tall;
+    if (taken.some(meets)) return [];
+    taken.push(own);
     return [
       {
         type: 'text',
         role: 'label',
-        x: middle.x + (turned ? 4.5 : 0),
-        y: middle.y + (turned ? 0 : 4.5),
+        x: x + (turned ? 4.5 : 0),
+        y: y + (turned ? 0 : 4.5),
         text: panel.name,
         anchor: 'middle',
         of: panel.name,

@@ -55,8 +55,7 @@ export function assemble(panels: readonly LoosePanel[], jointOf: (a: string, b: 
     if (joint.is === 'fold') {
       const { kind, angle, shown } = joint;
       folds.push({ curve: edge.curve, kind, angle, ...(shown === undefined ? {} : { shown }), panels: names });
-    }
-    else if (joint.is === 'nothing') joins.push({ curve: edge.curve, panels: names });
+    } else if (joint.is === 'nothing') joins.push({ curve: edge.curve, panels: names });
     else slits.push(line(edge.curve.from, edge.curve.to));
   }
   const loops = chain(edges.filter((edge) => !matched.has(edge)));
