@@ -121,6 +121,11 @@ describe('trays', () => {
     const cut = (name: string) => figures.measures.find((measure) => measure.name === name)?.cut;
     expect([cut('lid inside length'), cut('lid inside width')]).toEqual([183, 104]);
   });
+  it('lidded: take the usual lid height for an answer: 25.4 mm is cut 25 mm, not worked out again from a rounded height', () => {
+    const figures = figuresOf(modelOf('lidded-box'), {}, { units: 'mm', grid: '1mm' });
+    // 1 1/2 in × 2/3 = 1 in, which lies on eighths; 38 mm × 2/3 would not.
+    expect(figures.measures.find((measure) => measure.name === 'lid height')).toMatchObject({ exact: 25.4, cut: 25 });
+  });
   it('lidded: refuse a lid with no play after rounding, and name the nearest that works', () => {
     const figures = figuresOf(modelOf('lidded-box'), { play: 0, 'card thickness': 0 });
     expect(figures.problems[0]).toMatchObject({ code: 'fit fails', measure: 'play', nearest: inch(1 / 16) });

@@ -23,14 +23,15 @@ export function optionOf(choice: Model['choices'][number], sizing: Sizing): stri
 
 /**
  * Works a sizing out twice. As cut, each measure is rounded as soon as it is known and everything after it is computed from
- * the rounded one: equal edges stay equal on every piece and nothing accumulates.
+ * the rounded one: equal edges stay equal on every piece and nothing accumulates. The usual value of an asked measure stands
+ * for the reader's answer, so as cut it is the exact one rounded, and not worked out again from rounded measures.
  */
 export function workOut(model: Model, sizing: Sizing): BothValues {
-  const { step } = GRIDS[sizing.grid];
-  return { exact: pass(model, sizing, null), cut: pass(model, sizing, step) };
+  const exact = pass(model, sizing, null, null);
+  return { exact, cut: pass(model, sizing, GRIDS[sizing.grid].step, exact) };
 }
 
-function pass(model: Model, sizing: Sizing, step: number | null): Values {
+function pass(model: Model, sizing: Sizing, step: number | null, answers: Values | null): Values {
   const values = new Float64Array(model.slots).fill(NaN);
   values[model.scope.slot(CUT_GRID)] = step ?? 0;
   for (const choice of model.choices) values[choice.slot] = choice.def.options.indexOf(optionOf(choice, sizing));
@@ -40,7 +41,10 @@ function pass(model: Model, sizing: Sizing, step: number | null): Values {
       continue;
     }
     const { measure } = one;
-    const value = answerTo(measure, sizing) ?? measure.formula.work(values);
+    const value =
+      measure.def.ask && answers
+        ? (answers[measure.slot] as number)
+        : (answerTo(measure, sizing) ?? measure.formula.work(values));
     values[one.slot] = step === null ? value : roundTo(value, step, roundingOf(measure));
   }
   return values;
