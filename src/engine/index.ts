@@ -28,6 +28,7 @@ export {
   foldedExtent,
   say,
   sayParts,
+  showPosition,
   type FoldedDrawingOptions,
   type PieceDrawingOptions,
   type SaidPart,

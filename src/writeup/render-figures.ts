@@ -1,4 +1,13 @@
-import { drawPiece, sayParts, show, type Figures, type PieceFigure, type Sentence, type Shown } from '@/engine';
+import {
+  drawPiece,
+  sayParts,
+  show,
+  showPosition,
+  type Figures,
+  type PieceFigure,
+  type Sentence,
+  type Shown,
+} from '@/engine';
 import { drawingSvg } from '@/exports/svg/drawing';
 import { esc } from '@/exports/escape';
 import { showLive, type LiveFigures, type LiveText } from './live';
@@ -84,18 +93,22 @@ export function renderCutList(figures: Figures): string {
 export function cutListInside(figures: Figures): string {
   const { units, grid } = figures.sizing;
   const bare = (mm: number) => figure(show(mm, { units, grid, bare: true }));
-  const scores = (at: readonly number[]) =>
-    at.length === 0 ? '<span class="soft">none</span>' : at.map(bare).join(', ');
+  const scores = (at: readonly number[], { thickness }: PieceFigure) =>
+    at.length === 0
+      ? '<span class="soft">none</span>'
+      : at.map((mm) => figure(showPosition(mm, thickness, { units, grid }))).join(', ');
   const cells = (piece: PieceFigure) => [
     `${piece.count} <span class="soft">${esc(piece.stock)}</span>`,
     `${bare(piece.across)} × ${figure(show(piece.along, { units, grid }))}`,
-    scores(piece.scores.across),
-    scores(piece.scores.along),
+    scores(piece.scores.across, piece),
+    scores(piece.scores.along, piece),
   ];
   const rows = figures.pieces.map((piece) => {
     const rest = cells(piece).map((cell, n) => `<td data-label="${COLUMNS[n + 1]}">${cell}</td>`);
     return `<tr><th scope="row">${esc(piece.name)}</th>${rest.join('')}</tr>`;
   });
   const head = COLUMNS.map((name) => `<th scope="col">${name}</th>`).join('');
-  return `<table class="table"><caption>Cut list</caption><thead><tr>${head}</tr></thead><tbody>${rows.join('')}</tbody></table>`;
+  const steps = /[+−]/u.test(rows.join('').replace(/<[^>]*>/gu, ''));
+  const note = steps ? '<p class="small soft">+ a card’s thickness more, − one less.</p>' : '';
+  return `<table class="table"><caption>Cut list</caption><thead><tr>${head}</tr></thead><tbody>${rows.join('')}</tbody></table>${note}`;
 }

@@ -1,11 +1,11 @@
-import { GRIDS, defaultGrid, show, type ShowOptions } from '../measure';
+import { type ShowOptions } from '../measure';
 import { areaOf, boundsOf, lengthOf, pointsOf } from '../net';
-import { figureMaker, seamsOf } from '../piece';
+import { seamsOf } from '../piece';
 import type { Drawing, Loop, PieceFigure, Point, Shape } from '../types';
 import { acrossTop, downLeft, textWidth, topRows, type Stop } from './dimensions';
 import { closedPath, n, pathOf, segment, type Place } from './path';
 import { ruler } from './ruler';
-import { say } from './say';
+import { say, showPosition } from './say';
 
 export interface PieceDrawingOptions extends Pick<ShowOptions, 'units' | 'grid'> {
   /** Drawing units across, all in (CSS pixels on a page). */
@@ -26,15 +26,8 @@ export interface PieceDrawingOptions extends Pick<ShowOptions, 'units' | 'grid'>
 export function drawPiece(piece: PieceFigure, options: PieceDrawingOptions): Drawing {
   const { net } = piece;
   const { units, grid, width, dims = true, labels = true, tallest = 340 } = options;
-  const figure = figureMaker(GRIDS[grid ?? defaultGrid(units)].step, piece.thickness);
   // A position a card's thickness off the ruler carries a sign; the sentences say what it means.
-  const says = (mm: number) => {
-    const { mm: shown, cards } = figure(mm);
-    return (
-      show(shown, { units, ...(grid ? { grid } : {}), bare: true }).typeset +
-      (cards === undefined ? '' : cards > 0 ? '+' : '−')
-    );
-  };
+  const says = (mm: number) => showPosition(mm, piece.thickness, { units, ...(grid ? { grid } : {}) }).typeset;
   const seams = seamsOf(net);
   const stopsOf = (scores: readonly number[], tabs: readonly number[], size: number) =>
     [...scores, ...(piece.fan ? [] : tabs), size].sort((a, b) => a - b);

@@ -1,4 +1,5 @@
-import { isZero, show, type ShowOptions } from '../measure';
+import { GRIDS, defaultGrid, isZero, show, type ShowOptions, type Shown } from '../measure';
+import { figureMaker } from '../piece';
 import type { Sentence } from '../types';
 
 export interface SaidPart {
@@ -32,3 +33,12 @@ export const say = (sentence: Sentence, options: Pick<ShowOptions, 'units' | 'gr
   sayParts(sentence, options)
     .map((part) => part.text)
     .join('');
+
+/** A position along an edge: `typeset` carries a + or − for each card thickness that no ruler shows, `text` and `spoken` say it. */
+export function showPosition(mm: number, thickness: number, options: Pick<ShowOptions, 'units' | 'grid'>): Shown {
+  const { mm: shown, cards = 0 } = figureMaker(GRIDS[options.grid ?? defaultGrid(options.units)].step, thickness)(mm);
+  const [said] = sayParts([{ mm: shown, bare: true, ...(cards === 0 ? {} : { cards }) }], options);
+  const { typeset } = show(shown, { ...options, bare: true });
+  const { text, spoken } = said as SaidPart;
+  return { text, spoken, typeset: typeset + (cards > 0 ? '+' : '−').repeat(Math.abs(cards)) };
+}
