@@ -1,3 +1,4 @@
+export * from './number-words';
 export * from './random';
 export * from './read';
 export * from './round';

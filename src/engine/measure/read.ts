@@ -1,4 +1,5 @@
 import type { Fault, Result, Unit } from '../types';
+import { SMALL_NUMBERS } from './number-words';
 import { MM_PER } from './round';
 import { snap } from './tolerance';
 
@@ -51,28 +52,6 @@ const VULGAR: Readonly<Record<string, string>> = {
   '⅝': '5/8',
   '⅞': '7/8',
 };
-const SMALL = [
-  'zero',
-  'one',
-  'two',
-  'three',
-  'four',
-  'five',
-  'six',
-  'seven',
-  'eight',
-  'nine',
-  'ten',
-  'eleven',
-  'twelve',
-  'thirteen',
-  'fourteen',
-  'fifteen',
-  'sixteen',
-  'seventeen',
-  'eighteen',
-  'nineteen',
-];
 const TENS = ['', '', 'twenty', 'thirty', 'forty', 'fifty', 'sixty', 'seventy', 'eighty', 'ninety'];
 const PARTS: Readonly<Record<string, number>> = {
   half: 2,
@@ -219,7 +198,7 @@ function wholeNumber(words: readonly string[]): number | null {
   let total = 0;
   let seen = 0;
   for (const word of words) {
-    const small = SMALL.indexOf(word);
+    const small = SMALL_NUMBERS.indexOf(word);
     const ten = TENS.indexOf(word);
     if (word === 'hundred' && seen === 1 && total > 0 && total < 10) total *= 100;
     else if (word === 'a' && seen === 0 && words[1] === 'hundred') total = 1;

@@ -1,4 +1,4 @@
-import { coincident, isZero, same, snap } from '../measure';
+import { inWords, coincident, isZero, same, snap } from '../measure';
 import { areaOf, distance } from '../net';
 import type { Arc, Net, PieceDef, Point, Sentence, SentenceFigure, Side } from '../types';
 import { hangs, type Cell } from './cells';
@@ -48,22 +48,6 @@ const gridWords = (options: GridWords): Sentence[] => [
 ];
 
 type Part = Sentence[number];
-const COUNTS = [
-  'no',
-  'one',
-  'two',
-  'three',
-  'four',
-  'five',
-  'six',
-  'seven',
-  'eight',
-  'nine',
-  'ten',
-  'eleven',
-  'twelve',
-];
-const counted = (n: number): string => COUNTS[n] ?? `${n}`;
 
 /** `a, b and c` out of parts. */
 function listed(items: readonly (readonly Part[])[]): Part[] {
@@ -166,7 +150,7 @@ function cuttingAway({ net, grid }: GridWords): Sentence[] {
     const which =
       cornerCells.length === 4
         ? 'the four corner '
-        : `the ${cornerCells.length === 1 ? '' : `${counted(cornerCells.length)} `}corner `;
+        : `the ${cornerCells.length === 1 ? '' : `${inWords(cornerCells.length)} `}corner `;
     const places =
       cornerCells.length === 4
         ? ''
@@ -206,7 +190,7 @@ function tabsInWords({ grid, net, figure }: GridWords): Sentence[] {
     const score = hinge === 'top' || hinge === 'bottom' ? 'left-to-right edge' : 'top-to-bottom edge';
     const size = score === 'left-to-right edge' ? grid.rows[first.row] : grid.columns[first.column];
     sentences.push([
-      `${slit.length === 1 ? 'Slit the corner' : `Slit ${counted(slit.length)} corners`} from the ${score}, along the score, `,
+      `${slit.length === 1 ? 'Slit the corner' : `Slit ${inWords(slit.length)} corners`} from the ${score}, along the score, `,
       figure(size as number),
       ` deep, to the crossing: ${slit.length === 1 ? 'it becomes a tab' : 'they become tabs'}.`,
     ]);
@@ -240,7 +224,7 @@ function tabsInWords({ grid, net, figure }: GridWords): Sentence[] {
           ? 'the tab'
           : 'all tabs'
         : cells.length > 2
-          ? `the ${counted(cells.length)} tabs`
+          ? `the ${inWords(cells.length)} tabs`
           : listed(cells.map((cell) => [`the tab “${cell.name}”`])).join('');
     sentences.push([`Taper ${which} `, ...says, '.']);
   }
@@ -249,7 +233,7 @@ function tabsInWords({ grid, net, figure }: GridWords): Sentence[] {
     const [root, , tip] = net.panels.find((panel) => panel.name === `${cell.name} 2`)?.loop ?? [];
     if (shape && shape.teeth > 1 && root && tip)
       sentences.push([
-        `Cut the tab “${cell.name}” into ${counted(Math.round(shape.teeth))} teeth, each `,
+        `Cut the tab “${cell.name}” into ${inWords(Math.round(shape.teeth))} teeth, each `,
         figure(distance(root.from, root.to)),
         ' wide at the score and ',
         figure(distance(tip.from, tip.to)),
