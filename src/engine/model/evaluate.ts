@@ -1,4 +1,4 @@
-import { diagnose, kindName, type Formula, type Values } from '../formula';
+import { LENGTH, diagnose, kindName, sameKind, type Formula, type Values } from '../formula';
 import { GRIDS, decimal, atLeast, isZero, moreThan, roundTo, same, showValue, snap } from '../measure';
 import { perimeterOf } from '../net';
 import { keyOf } from '../pattern/names';
@@ -16,7 +16,7 @@ import type {
   Unit,
 } from '../types';
 import { buildPiece } from './build';
-import { tracksOf, type CompiledFit, type CompiledMeasure, type CompiledPiece, type Model } from './model';
+import { formulasOf, tracksOf, type CompiledFit, type CompiledMeasure, type CompiledPiece, type Model } from './model';
 import { answerTo, isInUse, workOut, type BothValues } from './values';
 
 /** Values behind figures that were worked out, for live measures; figures made elsewhere have none. */
@@ -192,10 +192,7 @@ function piecesOf(model: Model, { exact, cut }: BothValues, sizing: Sizing, prob
     if (!built.ok) {
       problems.push({
         code: 'piece fails',
-        measure: firstAskedOf(
-          model,
-          tracksOf(piece).map((track) => track.size),
-        ),
+        measure: firstAskedOf(model, formulasOf(piece.shape)),
         sentence: `The ${piece.def.name.toLowerCase()} cannot be cut at this size: ${built.reason}.`,
         nearest: null,
       });
@@ -269,15 +266,29 @@ export function scoresOf(net: Net): PieceFigure['scores'] {
   return { across: sorted(upright), along: sorted(level) };
 }
 
-/** The largest difference that cutting to the grid makes to any column or row. */
+/**
+ * The largest difference that cutting to the grid makes to any column or row; to any length that a piece without columns and
+ * rows is drawn from.
+ */
 function departureOf(model: Model, { exact, cut }: BothValues): Figures['departure'] {
   let worst = { mm: 0, where: '' };
+  const compare = (before: number, after: number, where: string): void => {
+    const mm = snap(after - before);
+    if (Math.abs(mm) > Math.abs(worst.mm)) worst = { mm, where };
+  };
   for (const piece of model.pieces) {
     if (!isInUse(piece, cut)) continue;
+    if (piece.shape.builder !== 'grid') {
+      const used = new Set(formulasOf(piece.shape).flatMap((formula) => formula.uses));
+      for (const { def, slot, kind } of model.measures) {
+        if (!used.has(keyOf(def.name)) || !sameKind(kind, LENGTH)) continue;
+        compare(exact[slot] as number, cut[slot] as number, `${piece.def.name}, ${def.name}`);
+      }
+      continue;
+    }
     for (const track of tracksOf(piece)) {
       if (!isInUse(track, cut) || !isInUse(track, exact)) continue;
-      const mm = snap(track.size.work(cut) - track.size.work(exact));
-      if (Math.abs(mm) > Math.abs(worst.mm)) worst = { mm, where: `${piece.def.name}, ${track.name}` };
+      compare(track.size.work(exact), track.size.work(cut), `${piece.def.name}, ${track.name}`);
     }
   }
   return worst;

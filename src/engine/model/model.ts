@@ -172,3 +172,15 @@ export interface CompiledPlacement extends Conditional {
   readonly def: Placement;
   readonly at: readonly [Formula, Formula, Formula];
 }
+
+/** Every formula of a shape, wherever it stands in it. */
+export function formulasOf(shape: CompiledShape): readonly Formula[] {
+  const found: Formula[] = [];
+  const collect = (value: unknown): void => {
+    if (typeof value !== 'object' || value === null) return;
+    if ('work' in value && 'uses' in value) found.push(value as Formula);
+    else for (const part of Object.values(value)) collect(part);
+  };
+  collect(shape);
+  return found;
+}
