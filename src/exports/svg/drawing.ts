@@ -1,5 +1,6 @@
 import type { Drawing, Role, Shape } from '@/engine';
 import { esc } from '../escape';
+import { LIGHT_THEME, paintOf, type Theme } from '../line-styles';
 
 const className = (role: Role): string => `dr-${role.replace(' ', '-')}`;
 const round = (value: number): number => Math.round(value * 100) / 100;
@@ -24,31 +25,6 @@ function element(shape: Shape, paint = ''): string {
   return `<text class="${className(shape.role)}" x="${round(shape.x)}" y="${round(shape.y)}" text-anchor="${shape.anchor}"${turn}${of}${paint}>${esc(shape.text)}</text>`;
 }
 
-/** Colours for a picture that stands alone, without a style sheet. */
-export interface Theme {
-  readonly ink: string;
-  readonly paper: string;
-  readonly line: string;
-  readonly valley: string;
-  readonly mountain: string;
-  readonly accent: string;
-  readonly font: string;
-  /** Lightest and darkest of the card, and of the pages. */
-  readonly card: readonly [string, string];
-  readonly pages: readonly [string, string];
-}
-export const LIGHT_THEME: Theme = {
-  ink: '#231c2b',
-  paper: '#ffffff',
-  line: '#cfddd6',
-  valley: '#1b7155',
-  mountain: '#a65a00',
-  accent: '#6d2e5b',
-  font: 'Figtree',
-  card: ['#7d3a69', '#43193a'],
-  pages: ['#fbf4e6', '#cdbf9f'],
-};
-
 /** The same drawing as a file of its own, every look written out (pictures for mail, social cards, uploads). */
 export function drawingSvgStandalone(
   drawing: Drawing,
@@ -59,51 +35,22 @@ export function drawingSvgStandalone(
     options.background === undefined
       ? ''
       : `<rect width="${round(drawing.width)}" height="${round(drawing.height)}" fill="${options.background}"/>`;
-  return `<svg xmlns="http://www.w3.org/2000/svg" viewBox="0 0 ${round(drawing.width)} ${round(drawing.height)}" width="${round(drawing.width)}" height="${round(drawing.height)}">${ground}${drawing.shapes.map((shape) => element(shape, paintOf(shape, theme))).join('')}</svg>`;
+  return `<svg xmlns="http://www.w3.org/2000/svg" viewBox="0 0 ${round(drawing.width)} ${round(drawing.height)}" width="${round(drawing.width)}" height="${round(drawing.height)}">${ground}${drawing.shapes.map((shape) => element(shape, attributesOf(shape, theme))).join('')}</svg>`;
 }
 
-function paintOf(shape: Shape, theme: Theme): string {
-  const stroke = (colour: string, width: number, more = '') =>
-    ` fill="none" stroke="${colour}" stroke-width="${width}" stroke-linejoin="round"${more}`;
-  switch (shape.role) {
-    case 'cut':
-      return stroke(theme.ink, 1.8);
-    case 'valley':
-      return stroke(theme.valley, 1.6, ' stroke-dasharray="8 5"');
-    case 'mountain':
-      return stroke(theme.mountain, 1.6, ' stroke-dasharray="10 4 2 4"');
-    case 'slit':
-      return stroke(theme.ink, 1.2);
-    case 'glue':
-      return ` fill="${theme.line}" fill-opacity="0.55"`;
-    case 'panel':
-      return ` fill="${theme.paper}"`;
-    case 'away':
-      return stroke(theme.line, 1);
-    case 'hidden':
-      return stroke(theme.ink, 1, ' stroke-dasharray="1.5 3"');
-    case 'dimension':
-    case 'extension':
-    case 'ruler':
-      return stroke(theme.ink, 0.8, ' stroke-opacity="0.6"');
-    case 'origin':
-      return ` fill="${theme.accent}"`;
-    case 'figure':
-    case 'label':
-      return ` fill="${theme.ink}" font-family="${theme.font}" font-size="13" font-weight="600"`;
-    case 'face': {
-      const tone = toneColour(shape.type === 'path' ? (shape.tone ?? 'tone-0') : 'tone-0', theme);
-      return ` fill="${tone}" stroke="${tone}" stroke-width="0.6"`;
-    }
-    case 'face edge':
-      return stroke(theme.ink, 1);
-  }
-}
-function toneColour(tone: string, theme: Theme): string {
-  const [name, step] = tone.split('-');
-  const [light, dark] = name === 'pages' ? theme.pages : theme.card;
-  const share = Number(step) / 7;
-  const channel = (at: number) =>
-    Math.round(parseInt(light.slice(at, at + 2), 16) * (1 - share) + parseInt(dark.slice(at, at + 2), 16) * share);
-  return `#${[1, 3, 5].map((at) => channel(at).toString(16).padStart(2, '0')).join('')}`;
+function attributesOf(shape: Shape, theme: Theme): string {
+  const paint = paintOf(shape.role, theme, shape.type === 'path' ? shape.tone : undefined);
+  const attributes: readonly (readonly [string, string | number | undefined])[] = [
+    ['fill', paint.fill ?? 'none'],
+    ['fill-opacity', paint.fillOpacity],
+    ['stroke', paint.stroke],
+    ['stroke-width', paint.strokeWidth],
+    ['stroke-opacity', paint.strokeOpacity],
+    ['stroke-dasharray', paint.dash?.join(' ')],
+    ['stroke-linejoin', paint.stroke === undefined ? undefined : 'round'],
+    ['font-family', paint.text ? theme.font : undefined],
+    ['font-size', paint.text?.size],
+    ['font-weight', paint.text?.weight],
+  ];
+  return attributes.map(([name, value]) => (value === undefined ? '' : ` ${name}="${value}"`)).join('');
 }

@@ -1,7 +1,8 @@
 import { rulerTicks } from '@/components/ruler-ticks';
 import { drawFolded, drawPiece, type Drawing, type Figures, type Model } from '@/engine';
 import { esc } from '@/exports/escape';
-import { drawingSvgStandalone, LIGHT_THEME, type Theme } from '@/exports/svg/drawing';
+import { LIGHT_THEME, type Theme } from '@/exports/line-styles';
+import { drawingSvgStandalone } from '@/exports/svg/drawing';
 
 /** Drawing units across; a picture is rendered larger. */
 const WIDTH = 900;
