@@ -90,9 +90,16 @@ async function drawPictures(
   demo: DemoProject,
   { pattern, projectId, ownerId, at }: Surroundings,
 ): Promise<(name: string) => StoredPicture> {
+  const build = builderOf(pattern, demo);
+  const drawn = await Promise.all(
+    Object.entries(demo.pictures).map(async ([name, { alt, scene }]) => ({
+      name,
+      alt,
+      bytes: await renderPicture(pictureSvg(scene(build)), { width: PICTURE_WIDTH }),
+    })),
+  );
   const stored = new Map<string, StoredPicture>();
-  for (const [name, { alt, scene }] of Object.entries(demo.pictures)) {
-    const bytes = await renderPicture(pictureSvg(scene(builderOf(pattern, demo))), { width: PICTURE_WIDTH });
+  for (const { name, alt, bytes } of drawn) {
     const upload = await storeUpload({ ownerId, projectId, bytes });
     if (!upload.ok) throw new Error(`${demo.title}, picture ${name}: ${upload.faults.map(explain).join(' ')}`);
     const { id, width, height } = upload.value;
