@@ -1,9 +1,9 @@
 import { show, decimal } from '../measure';
 import type { GridId, Unit } from '../types';
-import { compileFormula, type Formula, type Scope, type Values } from './compile';
+import { CANNOT } from './cannot';
 import { LENGTH, sameKind } from './kind';
-import { CANNOT } from './messages';
-import type { Node } from './syntax';
+import type { Formula, Node, Scope, Values } from './syntax';
+import { workOf } from './work';
 
 /**
  * Why a formula has no answer at these values, as the end of a sentence: "a line of 5 in does not fit across a circle of
@@ -15,21 +15,17 @@ export function diagnose(
   values: Values,
   options: { units: Unit; grid: GridId },
 ): string {
-  return failing(formula.node, formula.text) ?? CANNOT.other();
+  return failing(formula.node) ?? CANNOT.other();
 
-  function failing(node: Node, text: string): string | null {
+  function failing(node: Node): string | null {
     for (const child of childrenAtWork(node)) {
-      const inner = failing(child, text);
+      const inner = failing(child);
       if (inner !== null) return inner;
     }
     return Number.isFinite(valueOf(node)) ? null : reason(node);
   }
-  function part(node: Node) {
-    const compiled = compileFormula(formula.text.slice(node.span.from, node.span.to), scope, '');
-    return compiled.ok ? compiled.value : null;
-  }
   function valueOf(node: Node): number {
-    return part(node)?.work(values) ?? NaN;
+    return workOf(node, scope)(values);
   }
   /** The branch of an `if` that is not taken cannot be at fault. */
   function childrenAtWork(node: Node): readonly Node[] {
@@ -51,8 +47,26 @@ export function diagnose(
   function say(node: Node | undefined, times = 1): string {
     if (!node) return '?';
     const value = valueOf(node) * times;
-    const kind = part(node)?.kind;
-    return kind && sameKind(kind, LENGTH) ? show(value, options).text : decimal(value, 3);
+    return isLength(node) ? show(value, options).text : decimal(value, 3);
+  }
+  /** Enough to say a value with its unit: the formula has been checked, so what it adds or compares is of one kind. */
+  function isLength(node: Node): boolean {
+    switch (node.type) {
+      case 'number':
+        return node.unit !== null && node.unit !== '°';
+      case 'name':
+        return sameKind(scope.kind(node.name), LENGTH);
+      case 'unary':
+        return isLength(node.of);
+      case 'arithmetic':
+        return node.sign === '*' ? isLength(node.left) !== isLength(node.right) : isLength(node.left);
+      case 'if':
+        return isLength(node.then);
+      case 'call':
+        return node.name === 'arc angle' ? false : node.args.some(isLength);
+      default:
+        return false;
+    }
   }
   function reason(node: Node): string {
     if (node.type === 'name') return `“${node.name}” has no value`;

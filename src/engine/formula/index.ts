@@ -1,8 +1,9 @@
-export * from './compile';
-export * from './diagnose';
-export { FUNCTIONS, FUNCTION_NAMES } from './functions';
+export { codeOf, nodeOf } from './code';
+export { compileFormula } from './compile';
+export { diagnose } from './diagnose';
 export * from './kind';
 export { explain, explainAt } from './messages';
 export { nearestName } from './nearest';
-export type { Names } from './parse';
-export type { Node } from './syntax';
+export { FUNCTION_NAMES } from './signatures';
+export type { Formula, Names, Node, Scope, Values, Work } from './syntax';
+export { workOf } from './work';

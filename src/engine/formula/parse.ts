@@ -1,18 +1,10 @@
 import type { Fault, Result } from '../types';
-import { FUNCTION_NAMES } from './functions';
 import { SAYS } from './messages';
 import { nearestName } from './nearest';
-import { KEYWORDS, type Arithmetic, type Comparison, type Node, type Span } from './syntax';
+import { FUNCTION_NAMES } from './signatures';
+import { KEYWORDS, type Arithmetic, type Comparison, type Names, type Node, type Span } from './syntax';
 
-/** The names that a formula may use. Names may have spaces; they are compared in lower case. */
-export interface Names {
-  readonly has: (name: string) => boolean;
-  readonly all: () => Iterable<string>;
-  /** Options of a choice; undefined when the name is not a choice. */
-  readonly options: (name: string) => readonly string[] | undefined;
-}
-
-export const LONGEST_FORMULA = 600;
+const LONGEST_FORMULA = 600;
 const DEEPEST = 40;
 const MOST_NODES = 400;
 

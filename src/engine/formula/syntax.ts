@@ -1,3 +1,5 @@
+import type { Kind } from './kind';
+
 /** What a formula is once read. Every node knows which characters it came from. */
 export interface Span {
   readonly from: number;
@@ -24,3 +26,27 @@ export type Node = { readonly span: Span } & (
   | { readonly type: 'call'; readonly name: string; readonly args: readonly Node[]; readonly nameSpan: Span }
 );
 export const KEYWORDS: ReadonlySet<string> = new Set(['if', 'then', 'else', 'and', 'or', 'not', 'is']);
+
+/** The names that a formula may use. Names may have spaces; they are compared in lower case. */
+export interface Names {
+  readonly has: (name: string) => boolean;
+  readonly all: () => Iterable<string>;
+  /** Options of a choice; undefined when the name is not a choice. */
+  readonly options: (name: string) => readonly string[] | undefined;
+}
+/** What the names in a formula stand for. */
+export interface Scope extends Names {
+  readonly slot: (name: string) => number;
+  readonly kind: (name: string) => Kind;
+}
+
+/** Where values live while a formula works: one number a name. */
+export type Values = Float64Array;
+export type Work = (values: Values) => number;
+export interface Formula {
+  readonly node: Node;
+  readonly kind: Kind;
+  readonly work: Work;
+  /** Names that the formula reads, without repeats. */
+  readonly uses: readonly string[];
+}

@@ -70,11 +70,13 @@ export function assemble(panels: readonly LoosePanel[], jointOf: (a: string, b: 
   };
 }
 
-/** Points nearer than a hundredth of a micrometre share a key, but for those that straddle a rounding edge: hence the snap first. */
-const keyOf = (point: Point): string => `${Math.round(snap(point.x) * 1e3)},${Math.round(snap(point.y) * 1e3)}`;
+/** Whole micrometres: points nearer than that share a place, but for those that straddle a rounding edge, hence the snap first. */
+const micrometres = (mm: number): number => Math.round(snap(mm) * 1e3);
+/** Both coordinates in one number, exact up to 30 m either way. */
+const keyOf = (point: Point): number => micrometres(point.x) * 2 ** 26 + micrometres(point.y);
 
-function byStart(edges: readonly Edge[]): ReadonlyMap<string, Edge[]> {
-  const map = new Map<string, Edge[]>();
+function byStart(edges: readonly Edge[]): ReadonlyMap<number, Edge[]> {
+  const map = new Map<number, Edge[]>();
   for (const edge of edges) {
     const key = keyOf(edge.curve.from);
     const there = map.get(key);
@@ -92,16 +94,15 @@ function isTwin(a: Curve, b: Curve): boolean {
 /** Straight upright and level edges are cut at every corner of another panel that lies on them. */
 function splitAtVertices(edges: readonly Edge[]): Edge[] {
   // Corners by the line they lie on, so that an edge looks only along its own line.
-  const [byX, byY] = [new Map<number, Set<number>>(), new Map<number, Set<number>>()];
-  const lineOf = (at: number): number => Math.round(snap(at) * 1e3);
-  const add = (map: Map<number, Set<number>>, line: number, at: number): void => {
+  const [byX, byY] = [new Map<number, number[]>(), new Map<number, number[]>()];
+  const add = (map: Map<number, number[]>, line: number, at: number): void => {
     const known = map.get(line);
-    if (known) known.add(at);
-    else map.set(line, new Set([at]));
+    if (known) known.push(at);
+    else map.set(line, [at]);
   };
   for (const { curve } of edges) {
-    add(byX, lineOf(curve.from.x), curve.from.y);
-    add(byY, lineOf(curve.from.y), curve.from.x);
+    add(byX, micrometres(curve.from.x), curve.from.y);
+    add(byY, micrometres(curve.from.y), curve.from.x);
   }
   return edges.flatMap((edge) => {
     const { from, to } = edge.curve;
@@ -109,12 +110,12 @@ function splitAtVertices(edges: readonly Edge[]): Edge[] {
     if (edge.curve.type !== 'line' || (!upright && !coincident(from.y, to.y))) return [edge];
     const [start, end] = upright ? [from.y, to.y] : [from.x, to.x];
     const [low, high] = [Math.min(start, end) + COINCIDENT, Math.max(start, end) - COINCIDENT];
-    const corners = (upright ? byX.get(lineOf(from.x)) : byY.get(lineOf(from.y))) ?? [];
-    const cuts = [...corners]
-      .filter((value) => value > low && value < high)
+    const corners = (upright ? byX.get(micrometres(from.x)) : byY.get(micrometres(from.y))) ?? [];
+    const between = corners.filter((value) => value > low && value < high);
+    if (between.length === 0) return [edge];
+    const cuts = between
       .sort((a, b) => (start < end ? a - b : b - a))
       .filter((value, index, all) => index === 0 || !coincident(value, all[index - 1] as number));
-    if (cuts.length === 0) return [edge];
     const stops = [from, ...cuts.map((value) => (upright ? { x: from.x, y: value } : { x: value, y: from.y })), to];
     return stops
       .slice(1)
@@ -135,9 +136,13 @@ function chain(edges: readonly Edge[]): Loop[] {
       used.add(edge);
       loop.push(edge.curve);
       const last: Curve = edge.curve;
-      edge = (from.get(keyOf(last.to)) ?? [])
-        .filter((next) => !used.has(next))
-        .sort((a, b) => turn(last, b.curve) - turn(last, a.curve))[0];
+      edge = undefined;
+      let most = -Infinity;
+      for (const next of from.get(keyOf(last.to)) ?? []) {
+        if (used.has(next)) continue;
+        const right = turn(last, next.curve);
+        if (right > most) [edge, most] = [next, right];
+      }
     }
     loops.push(straighten(loop));
   }
