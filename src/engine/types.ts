@@ -102,14 +102,15 @@ export interface FitDef {
   readonly advice?: boolean;
 }
 
-export type PieceDef = GridPieceDef | FanPieceDef | DiscPieceDef | SectorPieceDef | OutlinePieceDef;
+export type PieceDef = GridPieceDef | FanPieceDef | DiscPieceDef | SectorPieceDef | OutlinePieceDef | LayerPieceDef;
+export type Look = 'card' | 'pages' | 'paper';
 interface PieceBase {
   readonly name: string;
   readonly count?: string;
   readonly stock: 'card' | 'patterned paper' | 'greyboard';
   readonly when?: string;
-  /** Colour role in the folded picture. Usual: card. */
-  readonly look?: 'card' | 'pages';
+  /** Colour role in the folded picture. Usual: card; paper for a layer. */
+  readonly look?: Look;
   /** Words for the maker that geometry cannot know, said after the sentences from geometry. */
   readonly remarks?: readonly string[];
 }
@@ -217,6 +218,21 @@ export interface OutlinePanelDef {
   readonly bent?: string;
   readonly when?: string;
 }
+/** A flat sheet glued on the outside of a face of another piece: the face's outline, smaller by a margin all round. */
+export interface LayerPieceDef extends PieceBase {
+  readonly builder: 'layer';
+  /** The piece that it is glued to; not itself a layer. */
+  readonly of: string;
+  /**
+   * Panels of that piece that make one face, such as a floor and the cap that it runs out into. One that is not there at a
+   * sizing is left out; with none there the layer is not made. The first flap of a fan stands for all of them.
+   */
+  readonly panels: readonly string[];
+  /** Further faces of the same shape that copies go on. */
+  readonly also?: readonly (readonly string[])[];
+  /** From every edge of the face and from every hole in it. */
+  readonly margin: string;
+}
 /** A round hole; position of its middle from the cell's left and top. */
 export interface HoleDef {
   readonly cell: string;
@@ -320,7 +336,9 @@ export interface Placement {
   readonly across: Axis;
   readonly along: Axis;
   readonly when?: string;
-  readonly look?: 'card' | 'pages';
+  readonly look?: Look;
+  /** The face that the flat drawing shows is the outside here: a piece with two like faces, used the other way up. */
+  readonly over?: boolean;
 }
 export type Axis = '+x' | '-x' | '+y' | '-y' | '+z' | '-z';
 
@@ -448,6 +466,14 @@ export interface PieceFigure {
   readonly scores: { readonly across: readonly number[]; readonly along: readonly number[] };
   /** A fan's side that lies level at the foot, and how far the flap on it stands out. */
   readonly fan?: { readonly side: Line; readonly height: number };
+  /** A layer: the piece it is glued to and the faces, by their panels, each with room round it. */
+  readonly layer?: {
+    readonly of: string;
+    readonly faces: readonly (readonly string[])[];
+    readonly margin: number;
+    /** Where the corner of its blank lies on the flat piece, on the first face. */
+    readonly at: Point;
+  };
   /** Card thickness at this sizing; 0 when the pattern has none. */
   readonly thickness: number;
   readonly area: number;

@@ -3,6 +3,7 @@ import { isInUse } from '../model/values';
 import { valuesBehind, type Model } from '../model';
 import { areaOf } from '../net';
 import { keyOf } from '../pattern/names';
+import { layOn } from '../piece';
 import {
   backToFront,
   dot,
@@ -13,9 +14,10 @@ import {
   vector,
   type Face,
   type FoldedPanel,
+  type Sheet,
   type Vector,
 } from '../space';
-import type { Drawing, Figures, Net, Shape } from '../types';
+import type { Drawing, Figures, Look, Net, PieceFigure, Shape } from '../types';
 import { n } from './path';
 
 export interface FoldedDrawingOptions {
@@ -30,16 +32,19 @@ export interface FoldedDrawingOptions {
   /** Drawing units for a millimetre; usual: as large as it fits. */
   readonly scale?: number;
 }
-interface Look {
-  readonly look: 'card' | 'pages';
+interface Seen {
+  readonly look: Look;
   readonly inside: Vector;
 }
 const LIGHT = unit(vector(-0.5, -0.55, 1.1));
 const TONES = 7;
+const TONE: Readonly<Record<Look, string>> = { card: 'tone', pages: 'pages', paper: 'paper' };
 /** How far a tab is drawn inside what it is glued to: more than cutting to a grid can push it out. */
 const TAB_INSET = 1;
 /** How far a face that is folded back stands off. */
 const DOUBLED_LIFT = 0.5;
+/** How far a layer is drawn outside the card that it is glued to. */
+const LAYER_LIFT = 0.3;
 
 /** The folded box in parallel projection, hidden faces behind others. Faces carry a tone by how the light falls on them. */
 export function drawFolded(model: Model, figures: Figures, options: FoldedDrawingOptions): Drawing {
@@ -66,7 +71,7 @@ export function drawFolded(model: Model, figures: Figures, options: FoldedDrawin
   const shapes = backToFront(faces, view.towards).flatMap((face): Shape[] => {
     const outward = dot(face.data.inside, view.towards) > 0 ? face.data.inside : times(face.data.inside, -1);
     const light = Math.max(0, dot(view.lit(outward), LIGHT));
-    const tone = `${face.data.look === 'pages' ? 'pages' : 'tone'}-${Math.round((1 - light) * TONES)}`;
+    const tone = `${TONE[face.data.look]}-${Math.round((1 - light) * TONES)}`;
     const edges = face.points.flatMap((point, index) =>
       face.edges[index] ? [`M${at(point)}L${at(face.points[(index + 1) % face.points.length] as Vector)}`] : [],
     );
@@ -114,7 +119,7 @@ function viewOf(turn: number, tilt: number) {
 }
 
 /** Every placed piece folded; tabs are moved a hair inwards, so that what they are glued to hides them or is hidden. */
-function facesOf(model: Model, figures: Figures, share: number): Face<Look>[] {
+function facesOf(model: Model, figures: Figures, share: number): Face<Seen>[] {
   const values = valuesBehind(figures)?.cut;
   if (!values) return [];
   return model.placements.flatMap(({ def, at, when }) => {
@@ -126,6 +131,7 @@ function facesOf(model: Model, figures: Figures, share: number): Face<Look>[] {
     // Walls that meet in a point hide their tabs, and leave them no room at the point.
     const pointed = share === 1 && made?.builder === 'fan' && made.flap.shape === 'triangle';
     const [x, y, z] = at.map((formula) => formula.work(values)) as [number, number, number];
+    const sheets = sheetsOn(piece, model, figures);
     const folded = foldNet(piece.net, {
       root: keyOf(def.root),
       at: vector(x, y, z),
@@ -134,18 +140,36 @@ function facesOf(model: Model, figures: Figures, share: number): Face<Look>[] {
       share,
       asShown: true,
       anchor: made?.builder === 'fan' || made?.builder === 'disc' ? 'middle' : 'corner',
+      sheets,
     });
     const lifts = doubled(piece.net, folded, share);
     return folded.flatMap((panel) => {
       // Teeth are glued out of sight, where narrow faces would only fight with the curve they stand on.
       if (panel.tooth || (pointed && panel.role === 'tab')) return [];
-      const inset = panel.role === 'tab' ? TAB_INSET : 0;
-      const shift = lifts.get(panel.name) ?? times(panel.inside, inset);
+      const sheet = panel.sheet === undefined ? undefined : sheets[panel.sheet];
+      const lift = lifts.get(panel.name) ?? times(panel.inside, panel.role === 'tab' ? TAB_INSET : 0);
+      const shift = sheet ? plus(lift, times(panel.inside, def.over ? LAYER_LIFT : -LAYER_LIFT)) : lift;
       return {
         points: panel.points.map((point) => plus(point, shift)),
         edges: panel.edges,
-        data: { look, inside: panel.inside },
+        data: { look: sheet?.look ?? look, inside: panel.inside },
       };
+    });
+  });
+}
+
+/** The layers in use, where they lie on a flat piece. */
+function sheetsOn(
+  { name, net }: PieceFigure,
+  { pattern }: Model,
+  { pieces }: Figures,
+): readonly (Sheet & { readonly look: Look })[] {
+  return pieces.flatMap(({ name: own, layer }) => {
+    if (!layer || layer.of !== name) return [];
+    const look = pattern.pieces.find((piece) => piece.name === own)?.look ?? 'paper';
+    return layer.faces.flatMap((face) => {
+      const laid = layOn(net, face, layer.margin);
+      return 'reason' in laid ? [] : [{ face, look, ...laid }];
     });
   });
 }

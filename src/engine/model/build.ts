@@ -4,14 +4,17 @@ import {
   buildDisc,
   buildFan,
   buildGrid,
+  buildLayer,
   buildOutline,
   buildSector,
+  facesOf,
   type Built,
   type EndShape,
   type GridPiece,
   type TabShape,
 } from '../piece';
-import type { Side } from '../types';
+import { keyOf } from '../pattern/names';
+import type { Net, PieceFigure, Side } from '../types';
 import { CUT_GRID } from './compile';
 import type { CompiledGrid, CompiledLine, CompiledPiece, Conditional, Model, Pair } from './model';
 import { isInUse } from './values';
@@ -20,10 +23,19 @@ import { isInUse } from './values';
 export interface BuiltPiece {
   readonly built: Built;
   readonly grid: GridPiece | null;
+  readonly layer?: PieceFigure['layer'];
 }
 
-/** Works every formula of a piece out and builds its net. */
-export function buildPiece(model: Model, piece: CompiledPiece, values: Values): BuiltPiece {
+/**
+ * Works every formula of a piece out and builds its net; `hosts` are the nets built before, by name. Null for a layer of what
+ * is not there at this sizing.
+ */
+export function buildPiece(
+  model: Model,
+  piece: CompiledPiece,
+  values: Values,
+  hosts: ReadonlyMap<string, Net>,
+): BuiltPiece | null {
   const { def, shape } = piece;
   const step = values[model.scope.slot(CUT_GRID)] as number;
   const at = (formula: Formula) => formula.work(values);
@@ -101,6 +113,16 @@ export function buildPiece(model: Model, piece: CompiledPiece, values: Values): 
         step,
       };
       return { grid: null, built: buildOutline(outline) };
+    }
+    case 'layer': {
+      const host = hosts.get(shape.of);
+      const hostDef = model.pattern.pieces.find(({ name }) => keyOf(name) === shape.of);
+      const faces = host && hostDef ? facesOf(host, hostDef, shape.faces) : [];
+      const [face] = faces;
+      if (!host || !hostDef || !face) return null;
+      const margin = at(shape.margin);
+      const built = buildLayer({ name: def.name, host, face, margin, step });
+      return { grid: null, built, ...(built.ok ? { layer: { of: hostDef.name, faces, margin, at: built.at } } : {}) };
     }
   }
 }

@@ -1,11 +1,12 @@
 import { ANGLE, LENGTH, TRUTH, WHOLE, nearestName, sayKind, type Formula, type Kind } from '../formula';
 import { SAYS } from '../pattern/messages';
 import { keyOf } from '../pattern/names';
-import { SIDES, readCell, readStop, type Cell } from '../piece';
+import { SIDES, panelNames, readCell, readStop, type Cell } from '../piece';
 import type {
   FanPieceDef,
   DiscPieceDef,
   GridPieceDef,
+  LayerPieceDef,
   LineDef,
   OutlinePieceDef,
   PieceDef,
@@ -19,6 +20,8 @@ import type { CompiledEnd, CompiledGrid, CompiledLine, CompiledShape, CompiledTa
 /** What compiling a piece needs from the compiler of its pattern. Faults are gathered there; a formula with faults is missing. */
 export interface Tools {
   readonly formula: (text: string, wanted: Kind | undefined, where: string) => Formula | undefined;
+  /** Every piece of the pattern, for one that hangs on another. */
+  readonly pieces: readonly PieceDef[];
   readonly complain: (code: string, where: string, says: readonly string[]) => void;
 }
 
@@ -36,6 +39,8 @@ export function compileShape(def: PieceDef, where: string, tools: Tools): Compil
       return shape.sector(def);
     case 'outline':
       return shape.outline(def);
+    case 'layer':
+      return shape.layer(def);
   }
 }
 
@@ -311,5 +316,26 @@ class ShapeCompiler {
       lines: this.lines(def.lines, panels),
       slots: this.slots(def.slots, panels),
     };
+  }
+  layer(def: LayerPieceDef): CompiledShape {
+    const hosts = this.tools.pieces.filter((piece) => piece.builder !== 'layer');
+    const host = hosts.find((piece) => keyOf(piece.name) === keyOf(def.of));
+    if (!host) {
+      const names = hosts.map((piece) => piece.name);
+      this.tools.complain('no piece', `${this.where}, of`, SAYS.noPiece(def.of, nearestName(def.of, names)));
+    }
+    const known = new Set(host ? panelNames(host) : []);
+    const faces = [def.panels, ...(def.also ?? [])].map((face) =>
+      face.map((name) => {
+        if (host && !known.has(keyOf(name)))
+          this.tools.complain(
+            'no panel',
+            `${this.where}, panels`,
+            SAYS.noPanel(name, host.name, nearestName(name, known)),
+          );
+        return keyOf(name);
+      }),
+    );
+    return { builder: 'layer', of: keyOf(def.of), faces, margin: this.length(def.margin, 'margin') };
   }
 }

@@ -50,7 +50,10 @@ class Compiler {
       const when = this.optional(def.when, TRUTH, `choice “${def.name}”, when`);
       return { def, slot: this.entries.get(keyOf(def.name))?.slot ?? -1, ...(when ? { when } : {}) };
     });
-    const pieces = this.pattern.pieces.flatMap((def) => this.piece(def) ?? []);
+    // A layer needs the net of the piece that it is glued to: layers come last, however they are written.
+    const isLayer = (def: PieceDef) => Number(def.builder === 'layer');
+    const layersLast = [...this.pattern.pieces].sort((a, b) => isLayer(a) - isLayer(b));
+    const pieces = layersLast.flatMap((def) => this.piece(def) ?? []);
     const fits = this.pattern.fits.flatMap((def) => this.fit(def) ?? []);
     const size = (place: string) => (def: { name: string; formula: string }) => {
       const formula = this.formula(def.formula, LENGTH, `${place} “${def.name}”`);
@@ -189,6 +192,7 @@ class Compiler {
     const when = this.optional(def.when, TRUTH, `${where}, when`);
     const shape = compileShape(def, where, {
       formula: (text, wanted, place) => this.formula(text, wanted, place, false),
+      pieces: this.pattern.pieces,
       complain: (code, place, says) => this.complain(code, place, says),
     });
     if (this.faults.length > before || !count) return undefined;

@@ -185,10 +185,13 @@ function askedBehind(model: Model, measure: CompiledMeasure): string | null {
 function piecesOf(model: Model, { exact, cut }: BothValues, sizing: Sizing, problems: SizingProblem[]): PieceFigure[] {
   const thickness = thicknessOf(model, cut);
   const figure = figureMaker(GRIDS[sizing.grid].step, thickness);
+  const nets = new Map<string, Net>();
   return model.pieces.flatMap((piece) => {
     const count = Math.round(piece.count.work(cut));
     if (!isInUse(piece, cut) || count < 1) return [];
-    const { grid, built } = buildPiece(model, piece, cut);
+    const made = buildPiece(model, piece, cut, nets);
+    if (!made) return [];
+    const { grid, built, layer } = made;
     if (!built.ok) {
       problems.push({
         code: 'piece fails',
@@ -199,6 +202,7 @@ function piecesOf(model: Model, { exact, cut }: BothValues, sizing: Sizing, prob
       return [];
     }
     const { net } = built;
+    nets.set(keyOf(piece.def.name), net);
     const [area, perimeter] = [
       areaOfNet(net),
       perimeterOf(net.outline) + net.holes.reduce((sum, hole) => sum + perimeterOf(hole), 0),
@@ -222,12 +226,13 @@ function piecesOf(model: Model, { exact, cut }: BothValues, sizing: Sizing, prob
         along: net.along,
         scores,
         ...(fan && fan.side.type === 'line' ? { fan: { side: fan.side, height: fan.height } } : {}),
+        ...(layer ? { layer } : {}),
         thickness,
         area,
         perimeter,
         // Worked out when first asked for: a sweep over a thousand sizings reads none.
         get instructions() {
-          words ??= makingOf({ net, grid, def: piece.def, scores, figure });
+          words ??= makingOf({ net, grid, def: piece.def, scores, figure, ...(layer ? { layer, count } : {}) });
           return words;
         },
       },

@@ -142,7 +142,20 @@ export interface CompiledOutline {
   readonly lines: readonly CompiledLine[];
   readonly slots: CompiledGrid['slots'];
 }
-export type CompiledShape = CompiledGrid | CompiledFan | CompiledDisc | CompiledSector | CompiledOutline;
+export interface CompiledLayer {
+  readonly builder: 'layer';
+  readonly of: string;
+  /** The face that it is cut for, then others of the same shape. */
+  readonly faces: readonly (readonly string[])[];
+  readonly margin: Formula;
+}
+export type CompiledShape =
+  | CompiledGrid
+  | CompiledFan
+  | CompiledDisc
+  | CompiledSector
+  | CompiledOutline
+  | CompiledLayer;
 
 export interface CompiledPiece extends Conditional {
   readonly def: PieceDef;

@@ -34,3 +34,12 @@ export function crossingOf(a: Point, b: Point, c: Point, d: Point): Point | null
   const t = a1 / (a1 - b1);
   return { x: a.x + (b.x - a.x) * t, y: a.y + (b.y - a.y) * t };
 }
+
+/** Whether a point lies within the polygon of these corners. */
+export function encloses(corners: readonly Point[], point: Point): boolean {
+  return corners.reduce((inside, a, index) => {
+    const b = corners[(index + 1) % corners.length] as Point;
+    const crosses = a.y > point.y !== b.y > point.y && point.x < ((b.x - a.x) * (point.y - a.y)) / (b.y - a.y) + a.x;
+    return crosses ? !inside : inside;
+  }, false);
+}

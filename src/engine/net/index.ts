@@ -1,3 +1,4 @@
 export * from './assemble';
 export * from './crossing';
 export * from './curve';
+export * from './inset';

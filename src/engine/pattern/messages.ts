@@ -54,6 +54,11 @@ export const SAYS = {
     'the name of a piece',
     nearest === null ? 'Check the names of the pieces.' : `The nearest name is “${nearest}”.`,
   ],
+  noPanel: (name: string, piece: string, nearest: string | null) => [
+    `no panel of “${piece}” is called “${name}”`,
+    'the name of one of its panels',
+    nearest === null ? 'Check the names of its panels.' : `The nearest name is “${nearest}”.`,
+  ],
   noMeasure: (name: string, nearest: string | null) => [
     `no measure is called “${name}”`,
     'the name of a measure',

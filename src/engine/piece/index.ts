@@ -4,6 +4,7 @@ export * from './fan';
 export * from './figure';
 export * from './finish';
 export * from './grid';
+export * from './layer';
 export * from './outline';
 export * from './sector';
 export { fanSizes } from './shape-words';

@@ -1,6 +1,6 @@
 import { decimal } from '../measure';
 import { boundsOf, distance, lengthOf, pointAt } from '../net';
-import type { Arc, Curve, FanPieceDef, Net, Panel, Point, Sentence } from '../types';
+import type { Arc, Curve, FanPieceDef, Loop, Net, Panel, Point, Sentence } from '../types';
 import type { WordsOptions } from './words';
 
 /** The making of a piece that is not a grid, in words. */
@@ -15,6 +15,7 @@ export function shapeWords(options: WordsOptions): Sentence[] {
     case 'outline':
       return outline(options);
     case 'grid':
+    case 'layer':
       return [];
   }
 }
@@ -152,10 +153,10 @@ function sector({ net, def, figure }: WordsOptions): Sentence[] {
   ];
 }
 
-/** Corners of the outline in order, each by how far it lies from the left and from the top edge. */
-function outline({ net, figure }: WordsOptions): Sentence[] {
-  const corners = net.outline.flatMap((curve, index): Sentence => {
-    const end = index === net.outline.length - 1 ? '.' : ';';
+/** Corners of a loop in order, each by how far it lies from the left and from the top edge. */
+export function cornersOf(loop: Loop, figure: WordsOptions['figure']): Sentence {
+  return loop.flatMap((curve, index): Sentence => {
+    const end = index === loop.length - 1 ? '.' : ';';
     return [
       figure(curve.from.x, true),
       ' across, ',
@@ -163,6 +164,9 @@ function outline({ net, figure }: WordsOptions): Sentence[] {
       ...(curve.type === 'arc' ? [' down (then ', ...bow(curve, figure), `)${end} `] : [` down${end} `]),
     ];
   });
+}
+function outline({ net, figure }: WordsOptions): Sentence[] {
+  const corners = cornersOf(net.outline, figure);
   return [
     ['Mark the corners, each from the left and from the top edge: ', ...corners, 'Join them in this order and cut.'],
     ...net.folds

@@ -1,7 +1,8 @@
 import { inWords, coincident, isZero, same, snap } from '../measure';
 import { areaOf, distance } from '../net';
-import type { Arc, Net, PieceDef, Point, Sentence, SentenceFigure, Side } from '../types';
+import type { Arc, Net, PieceDef, PieceFigure, Point, Sentence, SentenceFigure, Side } from '../types';
 import { hangs, type Cell } from './cells';
+import { layerWords } from './layer-words';
 import { shapeWords } from './shape-words';
 import type { GridPiece } from './grid';
 
@@ -10,6 +11,9 @@ export interface WordsOptions {
   /** The worked-out grid; null for pieces of the other builders. */
   readonly grid: GridPiece | null;
   readonly def: PieceDef;
+  /** A layer's faces and margin, and how many are cut. */
+  readonly layer?: PieceFigure['layer'];
+  readonly count?: number;
   /** Positions of scores from the left and from the top edge. */
   readonly scores: { readonly across: readonly number[]; readonly along: readonly number[] };
   /** Splits a position into what a ruler shows and card thicknesses. */
@@ -29,6 +33,7 @@ export function makingOf(options: WordsOptions): readonly Sentence[] {
   return [
     blank(options),
     ...(grid ? gridWords({ ...options, grid }) : shapeWords(options)),
+    ...layerWords(options),
     ...folding(options),
     ...(def.remarks ?? []).map((remark) => [remark]),
   ];
@@ -57,8 +62,9 @@ function listed(items: readonly (readonly Part[])[]): Part[] {
   ]);
 }
 
-function blank({ net, figure }: WordsOptions): Sentence {
-  return ['Cut ', figure(net.across, true), ' × ', figure(net.along), '.'];
+function blank({ net, def, figure }: WordsOptions): Sentence {
+  const from = def.builder === 'layer' ? ` from ${def.stock}.` : '.';
+  return ['Cut ', figure(net.across, true), ' × ', figure(net.along), from];
 }
 
 function scoring({ net, scores, figure }: WordsOptions): Sentence[] {

@@ -1,4 +1,4 @@
-import { pointAt, sweepOf } from '../net';
+import { encloses, pointAt, sweepOf } from '../net';
 import type { Axis, Curve, Loop, Net, Panel, Point } from '../types';
 import { bentStrips, bentTurn, creaseSeams, edgeTurn } from './bent';
 import { cross, dot, minus, plus, times, turned, unit, vector, type Vector } from './vector';
@@ -17,6 +17,8 @@ export interface FoldedPanel {
   readonly inside: Vector;
   /** For each edge from point i to i + 1: a real edge of the card, not a seam inside a rolled or continued panel. */
   readonly edges: readonly boolean[];
+  /** Index of the sheet that this is part of; it is glued on the panel of this name. */
+  readonly sheet?: number;
 }
 export interface FoldOptions {
   readonly root: string;
@@ -29,6 +31,14 @@ export interface FoldOptions {
   readonly share?: number;
   /** Folds that the picture shows open turn only so far. */
   readonly asShown?: boolean;
+  /** Sheets glued on faces, where they lie on the flat; they follow the panels after them in what is given back. */
+  readonly sheets?: readonly Sheet[];
+}
+/** A flat sheet glued on the panels of one face. */
+export interface Sheet {
+  readonly face: readonly string[];
+  readonly outline: Loop;
+  readonly holes: readonly Loop[];
 }
 
 const AXES: Readonly<Record<Axis, Vector>> = {
@@ -80,21 +90,66 @@ export function foldNet(net: Net, options: FoldOptions): readonly FoldedPanel[] 
       queue.push(other);
     }
   }
-  return facets.flatMap((facet, index) => {
+  const inSpace = (facet: Facet, index: number): FoldedPanel[] => {
     const frame = frames.get(index);
-    return frame
-      ? [
-          {
-            name: facet.of.name,
-            role: facet.of.role,
-            tooth: facet.of.tooth ?? false,
-            points: facet.points.map((point) => place(frame, point)),
-            inside: insideOf(frame),
-            edges: facet.edges,
-          },
-        ]
-      : [];
-  });
+    if (!frame) return [];
+    return [
+      {
+        name: facet.of.name,
+        role: facet.of.role,
+        tooth: facet.of.tooth ?? false,
+        points: facet.points.map((point) => place(frame, point)),
+        inside: insideOf(frame),
+        edges: facet.edges,
+      },
+    ];
+  };
+  const laid = (options.sheets ?? []).flatMap((one, sheet) =>
+    facetsOfSheet(one, facets).flatMap(({ facet, on }) => inSpace(facet, on).map((part) => ({ ...part, sheet }))),
+  );
+  return [...facets.flatMap(inSpace), ...laid];
+}
+
+/** A sheet whole on a flat face; strip by strip where the card under it is rolled or bent. */
+function facetsOfSheet(
+  { face, outline, holes }: Sheet,
+  facets: readonly Facet[],
+): readonly { readonly facet: Facet; readonly on: number }[] {
+  const under = facets.flatMap((facet, on) => (face.includes(facet.of.name.toLowerCase()) ? [{ facet, on }] : []));
+  const whole = (of: Panel) => pierced(flatFacet({ ...of, loop: outline }, []), holes);
+  const flat = under.find(({ facet: { of } }) => !of.roll && !of.cone && !of.bent);
+  if (flat) return [{ facet: whole(flat.facet.of), on: flat.on }];
+  return under.map(({ facet, on }) => ({ facet: within(flatFacet({ ...facet.of, loop: outline }, []), facet), on }));
+}
+
+/** The part of a facet that lies in a strip, which bulges nowhere inwards; where it is cut it has no edge of its own. */
+function within(facet: Facet, strip: Facet): Facet {
+  const inner = middleOf(strip.points);
+  return strip.points.reduce((kept, from, index) => {
+    const to = strip.points[(index + 1) % strip.points.length] as Point;
+    const side = ({ x, y }: Point) => (to.x - from.x) * (y - from.y) - (to.y - from.y) * (x - from.x);
+    const sign = Math.sign(side(inner));
+    const points: Point[] = [];
+    const edges: boolean[] = [];
+    kept.points.forEach((point, at) => {
+      const next = kept.points[(at + 1) % kept.points.length] as Point;
+      const [here, there] = [side(point) * sign, side(next) * sign];
+      const cut = here / (here - there);
+      const crossing = { x: point.x + (next.x - point.x) * cut, y: point.y + (next.y - point.y) * cut };
+      if (here >= 0) {
+        points.push(point);
+        edges.push(kept.edges[at] as boolean);
+        if (there < 0) {
+          points.push(crossing);
+          edges.push(false);
+        }
+      } else if (there > 0) {
+        points.push(crossing);
+        edges.push(kept.edges[at] as boolean);
+      }
+    });
+    return { ...kept, points, edges };
+  }, facet);
 }
 
 /** A rolled root is placed by its chord: its first strip leans back by half the whole turn. */
@@ -341,13 +396,6 @@ function pierced(facet: Facet, holes: readonly Loop[]): Facet {
     edges.push(false, ...rim.map(() => true), false);
   }
   return { ...facet, points, edges };
-}
-function encloses(corners: readonly Point[], point: Point): boolean {
-  return corners.reduce((inside, a, index) => {
-    const b = corners[(index + 1) % corners.length] as Point;
-    const crosses = a.y > point.y !== b.y > point.y && point.x < ((b.x - a.x) * (point.y - a.y)) / (b.y - a.y) + a.x;
-    return crosses ? !inside : inside;
-  }, false);
 }
 const near = (a: Point, b: Point): boolean => Math.hypot(a.x - b.x, a.y - b.y) < 1e-3;
 const isSame = (a: Curve, b: Curve): boolean =>

@@ -12,7 +12,7 @@ const words = z.string().max(1000, 'A sentence has at most 1000 characters.');
 const when = formula.optional();
 const side = z.enum(['top', 'right', 'bottom', 'left']);
 const axis = z.enum(['+x', '-x', '+y', '-y', '+z', '-z']);
-const look = z.enum(['card', 'pages']).optional();
+const look = z.enum(['card', 'pages', 'paper']).optional();
 const list = <T extends z.ZodTypeAny>(item: T) => z.array(item).max(200, 'At most 200 of these.');
 
 const measure = z.strictObject({
@@ -164,7 +164,15 @@ const outline = z.strictObject({
   slots,
   edges: list(z.strictObject({ name, panel: name, from: name, to: name })).optional(),
 });
-const piece = z.discriminatedUnion('builder', [grid, fan, disc, sector, outline]);
+const layer = z.strictObject({
+  ...base,
+  builder: z.literal('layer'),
+  of: name,
+  panels: list(name),
+  also: list(list(name)).optional(),
+  margin: formula,
+});
+const piece = z.discriminatedUnion('builder', [grid, fan, disc, sector, outline, layer]);
 const size = list(z.strictObject({ name, formula }));
 
 export const patternSchema: z.ZodType<Pattern> = z.strictObject({
@@ -189,6 +197,7 @@ export const patternSchema: z.ZodType<Pattern> = z.strictObject({
       along: axis,
       when,
       look,
+      over: z.boolean().optional(),
     }),
   ),
 });
