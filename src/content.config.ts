@@ -3,7 +3,7 @@ import { defineCollection, z } from 'astro:content';
 
 /** Guides for the work itself: scoring, cutting, gluing, choosing card. One MDX file each. */
 const handbook = defineCollection({
-  loader: glob({ base: './content/handbook', pattern: '**/*.mdx' }),
+  loader: glob({ base: './content/handbook', pattern: '*.mdx' }),
   schema: z.object({
     /** As a reader would ask for it: "Reading a measurement sheet". */
     title: z.string().min(3).max(60),
@@ -20,4 +20,17 @@ const handbook = defineCollection({
   }),
 });
 
-export const collections = { handbook };
+/** What a box is, how it works and what limits it: one MDX file for each pattern, named by the pattern's slug. */
+const boxes = defineCollection({
+  loader: glob({ base: './content/handbook/boxes', pattern: '*.mdx' }),
+  schema: z.strictObject({
+    /** One sentence for the head of the page, search engines and links: what the box is and what it is good for. */
+    description: z.string().min(20).max(180),
+    /** Asked measures that the form beside the entry puts to the reader. */
+    ask: z.array(z.string()).min(1).max(6),
+    /** Choices that the form offers. */
+    choose: z.array(z.string()).max(5).default([]),
+  }),
+});
+
+export const collections = { handbook, boxes };

@@ -10,7 +10,8 @@ const MOST = 50_000;
 
 export const GET: APIRoute = async ({ request }) => {
   const guides = (await getCollection('handbook')).map(({ id }) => ({ path: `/handbook/${id}` }));
-  const projects = listPublished({ limit: MOST - guides.length - 4 }).map(({ slug, publishedAt }) => ({
+  const boxes = (await getCollection('boxes')).map(({ id }) => ({ path: `/handbook/boxes/${id}` }));
+  const projects = listPublished({ limit: MOST - guides.length - boxes.length - 4 }).map(({ slug, publishedAt }) => ({
     path: `/projects/${slug}`,
     changed: publishedAt,
   }));
@@ -20,6 +21,7 @@ export const GET: APIRoute = async ({ request }) => {
     { path: '/handbook' },
     { path: '/subscribe' },
     ...guides,
+    ...boxes,
     ...projects,
   ];
   const xml = sitemap(config.siteUrl, places);

@@ -11,6 +11,15 @@ export interface LiveText {
   readonly bare: boolean;
 }
 
+/** A sentence of a pattern, such as `Score at [[tab]]`, as its words and its formulas in turn; nothing empty. */
+export function liveParts(sentence: string): readonly SentencePart[] {
+  return sentence.split(/\[\[(.+?)\]\]/gu).flatMap((part, i): SentencePart[] => {
+    if (part === '') return [];
+    return [i % 2 === 1 ? { formula: part.trim() } : { text: part }];
+  });
+}
+type SentencePart = { readonly text: string } | { readonly formula: string };
+
 const known = new WeakMap<Model, Map<string, Result<LiveMeasure>>>();
 
 /** A formula of the text, compiled once for each pattern, however often it stands there. */

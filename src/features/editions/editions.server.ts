@@ -39,6 +39,8 @@ export interface PublishedFilter {
   readonly query?: string;
   /** Kinds of box (`Pattern.group`); none means every kind. */
   readonly groups?: readonly string[];
+  /** Slug of the pattern that the project began from. */
+  readonly pattern?: string;
 }
 export interface PublishedPage extends PublishedFilter {
   readonly limit: number;
@@ -117,12 +119,13 @@ function isNewest(): SQL {
   return sql`${editions.n} = (select max(${later.n}) from ${editions} as ${later} where ${later.projectId} = ${editions.projectId})`;
 }
 
-function matches({ query = '', groups = [] }: PublishedFilter): SQL | undefined {
+function matches({ query = '', groups = [], pattern }: PublishedFilter): SQL | undefined {
   const words = query.trim().split(/\s+/u).filter(Boolean).slice(0, 12);
   return and(
     isNull(projects.deletedAt),
     isNewest(),
     groups.length > 0 ? inArray(group, [...groups]) : undefined,
+    pattern === undefined ? undefined : eq(sql`json_extract(${editions.pattern}, '$.slug')`, pattern),
     ...words.map((word) => {
       const like = `%${word.replaceAll(/[\\%_]/gu, '\\$&')}%`;
       return or(

@@ -4,6 +4,7 @@ import { FROM, parameterName } from '@/features/sizing/sizing-form';
 import { writeSizing } from '@/features/sizing/sizing-link';
 import { drawnAt, workExample, type Example } from './example';
 import { changesWords, closesHtml, liveInside, pieceSvg, troublesHtml, wordsHtml } from './example-html';
+import { isExamplePart, partHtml } from './example-parts';
 
 /**
  * In the browser: gives the function that answers a change in the form. It works the box out again and puts new figures,
@@ -17,9 +18,8 @@ export function followExample(form: HTMLFormElement): (changed: EventTarget | nu
   return (changed) => {
     if (changed instanceof HTMLInputElement && changed.type === 'range') takeFromSlider(form, changed, example);
     const next = workExample(model, parametersOf(form), example.figures.sizing);
-    const regrouped = next.asked.units !== example.asked.units || next.asked.grid !== example.asked.grid;
-    if (regrouped) redrawFields(form, next);
-    else moveSliders(form, next, changed);
+    redrawFields(form, next, changed);
+    if (next.asked.units !== example.asked.units) redrawGrids(form, next);
     putFigures(slug, form, next);
     example = next;
     history.replaceState(null, '', `${location.pathname}${addressOf(next)}${location.hash}`);
@@ -56,23 +56,30 @@ function takeFromSlider(form: HTMLFormElement, slider: HTMLInputElement, example
 const field = (form: HTMLFormElement, measure: string) =>
   form.querySelector<HTMLInputElement>(`input[name="${CSS.escape(parameterName(measure))}"]`);
 
-/** Another unit or grid: fields, ranges and the size that bare numbers start from are written anew. */
-function redrawFields(form: HTMLFormElement, example: Example): void {
+/**
+ * Fields, their ranges and the size that they are read from are written anew: usual values and ranges follow other
+ * measures. What is being typed, and what does not read, stays as it is.
+ */
+function redrawFields(form: HTMLFormElement, example: Example, changed: EventTarget | null): void {
   const from = form.elements.namedItem(FROM);
   if (from instanceof HTMLInputElement) from.value = drawnAt(example);
   for (const one of example.panel.fields) {
     const input = field(form, one.name);
     if (!input) continue;
-    input.value = one.text;
+    if (input !== changed && example.typed[one.name] === undefined) input.value = one.text;
+    const place = input.closest<HTMLElement>('[data-field]');
+    if (place) place.hidden = !one.inUse;
     const suffix = form.querySelector(`[data-suffix="${CSS.escape(one.name)}"]`);
     if (suffix) suffix.textContent = one.suffix;
     const range = form.querySelector(`[data-range="${CSS.escape(one.name)}"]`);
     if (range) range.textContent = one.range;
   }
-  const { grids, grid } = example.panel;
+  moveSliders(form, example, changed);
+}
+
+function redrawGrids(form: HTMLFormElement, { panel: { grids, grid } }: Example): void {
   const options = grids.map((id) => new Option(GRIDS[id].says, id, false, id === grid));
   form.querySelector('select[data-grids]')?.replaceChildren(...options);
-  moveSliders(form, example, null);
 }
 
 function moveSliders(form: HTMLFormElement, { panel }: Example, changed: EventTarget | null): void {
@@ -88,9 +95,10 @@ function putFigures(slug: string, form: HTMLFormElement, example: Example): void
   let figures = 0;
   let drawings = 0;
   for (const element of document.querySelectorAll<HTMLElement>(`[data-example-part="${CSS.escape(slug)}"]`)) {
-    const { live, piece, words, wide, narrow } = element.dataset;
+    const { live, piece, words, part, wide, narrow } = element.dataset;
     if (live !== undefined) figures += putFigure(element, liveInside(example, live, 'bare' in element.dataset));
     if (words !== undefined) figures += putWords(element, wordsHtml(example, words));
+    if (part !== undefined && isExamplePart(part)) figures += putWords(element, partHtml(example, part));
     if (piece !== undefined) {
       drawings += putHtml(element, pieceSvg(example, piece, { wide: Number(wide), narrow: Number(narrow) }));
     }

@@ -1,5 +1,6 @@
 import type { Pattern } from '@/engine';
 import { WRITE_UP_VERSION, type BlockNode, type InlineNode, type WriteUp } from '@/writeup/document';
+import { liveParts } from '@/writeup/live';
 
 /** The write-up that a new project begins with: materials and cut list, then the pattern's order of making, a step a sentence. */
 export function firstWriteUp(pattern: Pick<Pattern, 'pieces' | 'order'>): WriteUp {
@@ -47,12 +48,9 @@ const names = (sentence: string, piece: string): boolean =>
     sentence,
   );
 
-/** `Score at [[tab]]` is text and a live measure. */
-function inline(sentence: string): InlineNode[] {
-  return sentence.split(/\[\[(.+?)\]\]/gu).flatMap((part, i): InlineNode[] => {
-    if (part === '') return [];
-    return [
-      i % 2 === 1 ? { type: 'measure', attrs: { formula: part.trim(), bare: false } } : { type: 'text', text: part },
-    ];
-  });
-}
+const inline = (sentence: string): InlineNode[] =>
+  liveParts(sentence).map((part) =>
+    'formula' in part
+      ? { type: 'measure', attrs: { formula: part.formula, bare: false } }
+      : { type: 'text', text: part.text },
+  );

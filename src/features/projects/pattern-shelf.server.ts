@@ -7,6 +7,7 @@ export interface ShelfPattern {
   readonly slug: string;
   readonly name: string;
   readonly summary: string;
+  readonly group: string;
   /** "inside length, inside width, inside height" */
   readonly asks: string;
   /** Folded, as SVG. */
@@ -27,6 +28,7 @@ export function patternShelf(): readonly ShelfPattern[] {
         slug: pattern.slug,
         name: pattern.name,
         summary: pattern.summary,
+        group: pattern.group,
         asks: pattern.measures
           .filter((measure) => measure.ask && !measure.ask.finer)
           .map((measure) => measure.name)

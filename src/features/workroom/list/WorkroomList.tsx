@@ -14,6 +14,8 @@ export interface WorkroomListProps {
   readonly patterns: readonly ShelfPattern[];
   /** Shows whose project it is, for those who see everybody's. */
   readonly withAuthors: boolean;
+  /** Slug of a pattern to begin a project from at once: `/workroom?pattern=tray`. */
+  readonly begin: string | null;
   /** When the page was made, in milliseconds: what "today" is until the browser says its own. */
   readonly now: number;
 }
@@ -32,7 +34,7 @@ async function fetchList(path: string): Promise<ProjectList> {
 }
 
 /** The author's projects: found, filtered, begun, copied, deleted and brought back. */
-export function WorkroomList({ list, patterns, withAuthors, now }: WorkroomListProps) {
+export function WorkroomList({ list, patterns, withAuthors, begin, now }: WorkroomListProps) {
   const {
     data = list,
     error,
@@ -40,7 +42,9 @@ export function WorkroomList({ list, patterns, withAuthors, now }: WorkroomListP
   } = useSWR<ProjectList, Error>('/api/projects', fetchList, { fallbackData: list, revalidateOnMount: false });
   const [query, setQuery] = useState('');
   const [filter, setFilter] = useState<Filter>('all');
-  const [begun, setBegun] = useState<string | true | null>(null);
+  const [begun, setBegun] = useState<string | true | null>(() =>
+    patterns.some(({ slug }) => slug === begin) ? begin : null,
+  );
   const [deleted, setDeleted] = useState<Deleted | null>(null);
   const [trouble, setTrouble] = useState<string | null>(null);
   const find = useSlashKey();

@@ -1,0 +1,56 @@
+import { drawFolded } from '@/engine';
+import { esc } from '@/exports/escape';
+import { drawingSvg } from '@/exports/svg/drawing';
+import { sizesTogether } from '@/features/sizing/facts';
+import { panelFor } from '@/features/sizing/panel';
+import { liveParts } from '@/writeup/live';
+import { renderMeasure, renderPieceCard } from '@/writeup/render-figures';
+import type { Example } from './example';
+import { closesHtml } from './example-html';
+
+/** Whole parts of a page about one box, which follow its size and its choices; HTML for the server and the browser alike. */
+const PARTS = { folded, pieces, ranges, order } as const;
+
+export type ExamplePartName = keyof typeof PARTS;
+export const isExamplePart = (name: string): name is ExamplePartName => Object.hasOwn(PARTS, name);
+export const partHtml = (example: Example, name: ExamplePartName): string => PARTS[name](example);
+
+/** The box folded, its outside and whether it closes. */
+function folded(example: Example): string {
+  const { model, figures } = example;
+  const picture = drawingSvg(drawFolded(model, figures, { width: 300, height: 230 }), { class: 'folded' });
+  const outside = figures.finished.outside.map(({ name }) => name).join(', ');
+  return (
+    `<div class="box-folded">${picture}</div>` +
+    `<p>Outside ${esc(sizesTogether(figures.finished.outside, figures.sizing))} <span class="soft">(${esc(outside)})</span></p>` +
+    `<p class="box-closes">${closesHtml(example)}</p>`
+  );
+}
+
+/** Every piece that the box has with these choices: its card with drawing and making instructions. */
+function pieces({ figures }: Example): string {
+  return figures.pieces.map(({ name }) => renderPieceCard(figures, name)).join('');
+}
+
+/** Each asked measure, and how far it may go while the others stay. */
+function ranges({ model, figures }: Example): string {
+  const rows = panelFor(model, figures)
+    .fields.filter(({ inUse }) => inUse)
+    .map(
+      ({ name, range }) =>
+        `<tr><th scope="row">${esc(name)}</th><td class="figures">${renderMeasure({ model, figures }, { formula: name, bare: false })}</td><td class="figures">${esc(range)}</td></tr>`,
+    );
+  return `<table class="table"><thead><tr><th scope="col">measure</th><th scope="col" class="figures">now</th><th scope="col" class="figures">may be</th></tr></thead><tbody>${rows.join('')}</tbody></table>`;
+}
+
+/** The pattern's order of making, its figures on tabs. */
+function order({ model, figures }: Example): string {
+  const steps = model.pattern.order.map((sentence) =>
+    liveParts(sentence)
+      .map((part) =>
+        'formula' in part ? renderMeasure({ model, figures }, { formula: part.formula, bare: false }) : esc(part.text),
+      )
+      .join(''),
+  );
+  return `<ol>${steps.map((step) => `<li>${step}</li>`).join('')}</ol>`;
+}
