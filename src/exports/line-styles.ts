@@ -9,9 +9,10 @@ export interface Theme {
   readonly mountain: string;
   readonly accent: string;
   readonly font: string;
-  /** Lightest and darkest of the card, and of the pages. */
+  /** Lightest and darkest of the card, of the pages, and of layers of paper. */
   readonly card: readonly [string, string];
   readonly pages: readonly [string, string];
+  readonly layer: readonly [string, string];
 }
 export const LIGHT_THEME: Theme = {
   ink: '#231c2b',
@@ -23,6 +24,7 @@ export const LIGHT_THEME: Theme = {
   font: 'Figtree',
   card: ['#7d3a69', '#43193a'],
   pages: ['#fbf4e6', '#cdbf9f'],
+  layer: ['#c2d6ca', '#7f9b8b'],
 };
 /** Black on white: lines are told apart by their pattern alone. */
 export const PRINT_THEME: Theme = {
@@ -35,6 +37,7 @@ export const PRINT_THEME: Theme = {
   font: 'Figtree',
   card: ['#ffffff', '#c4c4c4'],
   pages: ['#ffffff', '#e2e2e2'],
+  layer: ['#ffffff', '#d3d3d3'],
 };
 
 /** How a shape is painted; widths and dashes in drawing units, opacities from 0 to 1. */
@@ -95,7 +98,7 @@ export function paintOf(role: Role, theme: Theme, tone = 'tone-0'): Paint {
 
 function toneColour(tone: string, theme: Theme): string {
   const [name, step] = tone.split('-');
-  const [light, dark] = name === 'pages' ? theme.pages : theme.card;
+  const [light, dark] = { pages: theme.pages, paper: theme.layer }[name ?? ''] ?? theme.card;
   const share = Number(step) / TONES;
   const channel = (at: number) =>
     Math.round(parseInt(light.slice(at, at + 2), 16) * (1 - share) + parseInt(dark.slice(at, at + 2), 16) * share);
