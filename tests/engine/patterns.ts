@@ -1,6 +1,17 @@
 import { readFileSync, readdirSync } from 'node:fs';
 import { join } from 'node:path';
-import { GRID_IDS, GRIDS, evaluate, snap, type Figures, type Model, type Sizing } from '@/engine';
+import {
+  GRID_IDS,
+  GRIDS,
+  evaluate,
+  keyOf,
+  snap,
+  type Figures,
+  type MeasureDef,
+  type Model,
+  type Sizing,
+} from '@/engine';
+import { workOut } from '@/engine/model/values';
 import { loadPattern } from '@/features/patterns/load-pattern';
 
 const folder = join(import.meta.dirname, '../../content/patterns');
@@ -31,23 +42,49 @@ export function seeded(seed: number): () => number {
     return state / 2 ** 32;
   };
 }
-/** Sizings spread over the asked range and over choices and grids; one in five answers lies on an end of its range. */
-export function* sizingsOf(model: Model, count: number, seed: number): Generator<Sizing> {
+/**
+ * Sizings spread over the asked range and over choices and grids; one answer in five lies on an end of its range. The finer
+ * points keep their usual values unless `finer` says otherwise: without play, say, a lid may rub, and that is no fault.
+ */
+export function* sizingsOf(
+  model: Model,
+  count: number,
+  seed: number,
+  { finer = false }: { readonly finer?: boolean } = {},
+): Generator<Sizing> {
   const random = seeded(seed);
-  const { measures, choices } = model.pattern;
+  const asked = model.measures.filter(({ def }) => def.ask && (finer || !def.ask.finer));
   for (let index = 0; index < count; index += 1) {
     const grid = GRID_IDS[index % GRID_IDS.length] as Sizing['grid'];
-    const chosen = Object.fromEntries(
-      choices.map(({ name, options }) => [name, options[Math.floor(random() * options.length)] as string]),
+    const choices = Object.fromEntries(
+      model.pattern.choices.map(({ name, options }) => [
+        keyOf(name),
+        options[Math.floor(random() * options.length)] as string,
+      ]),
     );
-    let sizing: Sizing = { values: {}, choices: chosen, units: GRIDS[grid].unit, grid };
-    for (const { name } of measures.filter(({ ask }) => ask && !ask.finer)) {
-      const { from = 0, to = 0, kind } = evaluate(model, sizing).measures.find((one) => one.name === name) ?? {};
+    const shares = asked.map(() => {
       const at = random();
-      const between = at < 0.1 ? from : at > 0.9 ? to : from + (to - from) * random();
-      const value = kind === 'whole number' ? Math.round(between) : between;
-      sizing = { ...sizing, values: { ...sizing.values, [name]: snap(value) } };
+      return at < 0.1 ? 0 : at > 0.9 ? 1 : random();
+    });
+    let sizing: Sizing = { values: {}, choices, units: GRIDS[grid].unit, grid };
+    // A range may hang on answers that come later: answer again until nothing moves.
+    for (let round = 0; round < 3; round += 1) {
+      const before = sizing.values;
+      asked.forEach(({ def, when, from, to }, place) => {
+        const { exact, cut } = workOut(model, sizing);
+        if (!from || !to || (when && when.work(cut) === 0)) return;
+        const value = answerAt(def, from.work(exact), to.work(exact), shares[place] as number);
+        sizing = { ...sizing, values: { ...sizing.values, [keyOf(def.name)]: value } };
+      });
+      if (Object.keys(sizing.values).every((name) => sizing.values[name] === before[name])) break;
     }
     yield sizing;
   }
+}
+/** The ends of a range as they are; between them what a person could type: micrometres, or a caliper's hundredths. */
+function answerAt({ name, kind }: MeasureDef, from: number, to: number, share: number): number {
+  const value = from + (to - from) * share;
+  if (kind === 'whole number') return Math.round(value);
+  const parts = name === 'card thickness' ? 100 : 1000;
+  return snap(share === 0 || share === 1 ? value : Math.min(to, Math.max(from, Math.round(value * parts) / parts)));
 }
