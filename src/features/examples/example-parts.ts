@@ -27,9 +27,13 @@ function folded(example: Example): string {
   );
 }
 
+/** Width in pixels of a drawing where cards stand side by side. */
+const BESIDE = 300;
+
 /** Every piece that the box has with these choices: its card with drawing and making instructions. */
 function pieces({ figures }: Example): string {
-  return figures.pieces.map(({ name }) => renderPieceCard(figures, name)).join('');
+  const width = figures.pieces.length > 1 ? BESIDE : undefined;
+  return `<div class="piece-cards">${figures.pieces.map(({ name }) => renderPieceCard(figures, name, width)).join('')}</div>`;
 }
 
 /** Each asked measure, and how far it may go while the others stay. */
