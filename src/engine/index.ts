@@ -9,6 +9,16 @@ export * from './measure';
 export { areaOf, boundsOf, lengthOf, perimeterOf, pointsOf } from './net';
 export { isName, keyOf } from './pattern/names';
 export {
+  cleanName,
+  nameFault,
+  renamedBack,
+  renameInFormula,
+  renameInPattern,
+  renameInSizing,
+  type Rename,
+} from './pattern/rename';
+export { formulasOfPattern, formulasOfPiece } from './pattern/texts';
+export {
   around,
   compileLive,
   compilePattern,

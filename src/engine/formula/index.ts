@@ -4,6 +4,7 @@ export { diagnose } from './diagnose';
 export * from './kind';
 export { explain, explainAt } from './messages';
 export { nearestName } from './nearest';
+export { namesAt } from './parse';
 export { FUNCTION_NAMES } from './signatures';
 export type { Formula, Names, Node, Scope, Values, Work } from './syntax';
 export { workOf } from './work';

@@ -33,6 +33,42 @@ class Unreadable extends Error {
  * Names are matched longest first, so `inside width` wins over `inside`. Gives the first fault with the characters it concerns.
  */
 export function parseFormula(text: string, names: Names, where: string): Result<Node> {
+  return reading(text, where, () => new Parser(tokenize(text), text, names).whole());
+}
+
+/** A name as it stands in a formula: `name` as names are compared, the span as written. */
+export interface NameAt extends Span {
+  readonly name: string;
+  /** The choice that is asked about, when this is one of its options. */
+  readonly optionOf?: string;
+}
+
+/**
+ * Every name in a formula, in order: measures, choices, pieces' sizes, and options behind their choice. Names need not be
+ * known and the formula need not make sense, so this also serves one that does not read yet; only a mark that means nothing
+ * is a fault, since nothing can be told behind it.
+ */
+export function namesAt(text: string, where: string): Result<readonly NameAt[]> {
+  return reading(text, where, () => {
+    const tokens = tokenize(text);
+    return tokens.flatMap((token, at): NameAt[] => {
+      if (token.type !== 'words') return [];
+      const { from, to } = token;
+      const name = wordsOf(token);
+      const next = tokens[at + 1];
+      if (next?.type === 'sign' && next.sign === '(' && FUNCTION_NAMES.has(name)) return [];
+      const is = at - (isWord(tokens[at - 1], 'not') ? 2 : 1);
+      const choice = tokens[is - 1];
+      return isWord(tokens[is], 'is') && choice?.type === 'words'
+        ? [{ name, from, to, optionOf: wordsOf(choice) }]
+        : [{ name, from, to }];
+    });
+  });
+}
+const wordsOf = (token: Token & { type: 'words' }): string => token.words.map((word) => word.text).join(' ');
+const isWord = (token: Token | undefined, word: string): boolean => token?.type === 'keyword' && token.word === word;
+
+function reading<T>(text: string, where: string, read: () => T): Result<T> {
   try {
     if (text.length > LONGEST_FORMULA) {
       throw new Unreadable('too long', SAYS.tooLong(text.length, LONGEST_FORMULA), {
@@ -40,7 +76,7 @@ export function parseFormula(text: string, names: Names, where: string): Result<
         to: text.length,
       });
     }
-    return { ok: true, value: new Parser(tokenize(text), text, names).whole() };
+    return { ok: true, value: read() };
   } catch (error) {
     if (!(error instanceof Unreadable)) throw error;
     const [found = '', expected = '', hint = ''] = error.says;

@@ -77,3 +77,38 @@ export const SAYS = {
     'Use it in a fit or in the text.',
   ],
 } satisfies Record<string, (...args: never[]) => readonly string[]>;
+
+/** What renaming refuses, said to the person who types the new name. */
+export const RENAMING = {
+  badName: (name: string) => [
+    name === '' ? 'the new name is empty' : `“${name}” cannot be a name`,
+    'letters, digits and single spaces, beginning with a letter, 60 characters at most',
+    'A name is made of letters, digits and single spaces, and begins with a letter; it has 60 characters at most.',
+  ],
+  reserved: (name: string, word: string) => [
+    `“${name}” holds “${word}”, a word that formulas use`,
+    `a name without the word “${word}”`,
+    `Leave “${word}” out, or choose another word.`,
+  ],
+  functionName: (name: string) => [
+    `“${name}” is the name of a function`,
+    'a name of its own',
+    `Say more, such as “own ${name}”.`,
+  ],
+  given: (name: string) => [`“${name}” has a meaning in every formula`, 'a name of its own', 'Choose another word.'],
+  cardThickness: () => [
+    'drawings know how thick the card is by the measure “card thickness”',
+    'another measure, and another name',
+    'That name stays with the measure that has it.',
+  ],
+  taken: (what: string, name: string) => [
+    `there is a ${what} called “${name}” already`,
+    'a name that is not taken',
+    'Choose another, or rename that one first.',
+  ],
+  unknown: (what: string, name: string, nearest: string | null) => [
+    `no ${what} is called “${name}”`,
+    `the name of a ${what}`,
+    nearest === null ? 'Check its name.' : `The nearest name is “${nearest}”.`,
+  ],
+} satisfies Record<string, (...args: never[]) => readonly string[]>;

@@ -3,6 +3,10 @@ import type { PieceDef } from '../types';
 
 const NAME = /^\p{L}[\p{L}\p{N}]*(?: [\p{L}\p{N}]+)*$/u;
 const WORDS_OF_FORMULAS = ['if', 'then', 'else', 'and', 'or', 'not', 'is'];
+/** The measure by which figures and drawings know how thick the card is. */
+export const CARD_THICKNESS = 'card thickness';
+/** What every formula may use without a measure of that name. */
+const GIVEN: ReadonlySet<string> = new Set(['pi', 'cut grid']);
 
 /** How names are compared: lower case, single spaces. */
 export const keyOf = (name: string): string => name.trim().toLowerCase().replace(/\s+/g, ' ');
@@ -12,6 +16,7 @@ export const reservedWordIn = (name: string): string | undefined =>
     .split(' ')
     .find((word) => WORDS_OF_FORMULAS.includes(word));
 export const isFunctionName = (name: string): boolean => FUNCTION_NAMES.has(keyOf(name));
+export const isGiven = (name: string): boolean => GIVEN.has(keyOf(name));
 
 /** Names that a grid piece offers to formulas before it is drawn: sums of its columns and rows, and each of them. */
 export function sizeNames(piece: PieceDef): readonly string[] {
