@@ -173,11 +173,14 @@ function* misrounded({ model, sizing, cut }: Judged): Generator<string> {
   }
 }
 
+/** Measures added and taken away, and nothing else. */
+const isPlainSum = (text: string): boolean => /^[a-z ]+( [+-] [a-z ]+)*$/.test(text);
 /** Positions are running sums; what is made of rounded measures only is a whole number of steps. */
 function* offTheRuler(judged: Judged, piece: CompiledPiece, names: ReadonlySet<string>): Generator<string> {
   const { shape, def } = piece;
   const figure = judged.figures.pieces.find(({ name }) => name === def.name);
-  if (shape.builder !== 'grid' || !figure) return;
+  if (shape.builder !== 'grid' || def.builder !== 'grid' || !figure) return;
+  const texts = new Map([...def.columns, ...def.rows].map(({ name, size }) => [name, size]));
   const { step } = GRIDS[judged.sizing.grid];
   for (const [way, list, edges, scores, total] of [
     ['across', shape.columns, figure.net.columns, figure.scores.across, figure.across],
@@ -193,8 +196,7 @@ function* offTheRuler(judged: Judged, piece: CompiledPiece, names: ReadonlySet<s
     for (const score of scores)
       if (!sums.some((sum) => Math.abs(sum - score) < NOTHING)) yield `${def.name} ${way}: a score at ${score}`;
     const rounded = made.map(
-      ({ track: { size } }) =>
-        /^[a-z ]+( [+-] [a-z ]+)*$/.test(size.text) && size.uses.every((name) => names.has(name)),
+      ({ track: { name, size } }) => isPlainSum(texts.get(name) ?? '') && size.uses.every((name) => names.has(name)),
     );
     const off = made.find(({ size }, index) => rounded[index] && !onGrid(size, step));
     if (off) yield `${def.name}, ${off.track.name} is ${off.size}`;
