@@ -37,7 +37,17 @@ import { collectUses } from '@/writeup/uses';
 
 const NOW = Date.UTC(2031, 4, 20, 12);
 const DAY = 24 * 60 * 60_000;
-const SLUGS = ['seed-keepers-book-box', 'swap-day-box', 'packet-sleeve-with-a-drawer'];
+const SLUGS = [
+  'seed-keepers-book-box',
+  'swap-day-box',
+  'packet-sleeve-with-a-drawer',
+  'pillow-for-a-handful-of-beans',
+  'twine-drum',
+  'honeycomb-box',
+  'chest-for-four-seasons',
+  'bulb-carton-with-a-roof',
+  'frame-for-a-pressed-flower',
+];
 
 // Filled once: drawing and encoding its pictures takes seconds.
 let database: ReturnType<typeof openDatabase>;
@@ -57,7 +67,8 @@ function published(slug: string, n?: number): Edition {
   if (!edition) throw new Error(`${slug} is not published`);
   return edition;
 }
-const all = () => [...SLUGS.map((slug) => published(slug)), published('swap-day-box', 1)];
+const CORRECTED = ['swap-day-box', 'chest-for-four-seasons'];
+const all = () => [...SLUGS.map((slug) => published(slug)), ...CORRECTED.map((slug) => published(slug, 1))];
 const each = (check: (edition: Edition) => void) => all().forEach(check);
 
 function modelOf(pattern: Pattern): Model {
@@ -75,16 +86,16 @@ describe('what the demo holds', () => {
       expect(await passwordFits(person?.passwordHash, password), email).toBe(true);
     }
   });
-  it('has three published projects in four editions, and a draft', () => {
+  it('has nine published projects in eleven editions, and a draft', () => {
     const rows = db.select().from(projects).all();
-    expect(rows).toHaveLength(4);
+    expect(rows).toHaveLength(10);
     expect(
       rows
         .filter(({ publishedRevision }) => publishedRevision !== null)
         .map(({ slug }) => slug)
         .sort(),
     ).toEqual([...SLUGS].sort());
-    expect(db.select().from(editions).all()).toHaveLength(4);
+    expect(db.select().from(editions).all()).toHaveLength(11);
   });
   it('is marked as the demo', () => {
     expect(
@@ -104,7 +115,7 @@ describe('what the demo holds', () => {
   });
   it('spreads its editions over the weeks before', () => {
     const days = all().map(({ publishedAt }) => (NOW - publishedAt.getTime()) / DAY);
-    expect(days).toEqual([4, 9, 38, 24]);
+    expect(days).toEqual([4, 9, 38, 54, 46, 41, 15, 27, 12, 24, 32]);
   });
   it('says what edition 2 of the swap-day box corrected', () => {
     expect(published('swap-day-box').n).toBe(2);
@@ -115,6 +126,20 @@ describe('what the demo holds', () => {
         .map(({ formula }) => formula);
     expect(formulas(1).slice(0, 3)).toEqual(['lid.across', 'lid.along', 'inside height']);
     expect(formulas(2).slice(0, 3)).toEqual(['lid.across', 'lid.along', 'lid height']);
+  });
+});
+
+describe('the correction of the chest', () => {
+  it('gives the shelves legs as tall as a drawer’s place, in the step that its note names', () => {
+    const edition = published('chest-for-four-seasons');
+    expect(edition.n).toBe(2);
+    expect(edition.correctionNote).toMatch(/^Step 8 told you to score the shelves’ legs/);
+    const formulas = (n: number) =>
+      collectUses(published(edition.slug, n).writeUp.doc)
+        .formulas.filter(({ step }) => step === 8)
+        .map(({ formula }) => formula);
+    expect(formulas(1)[3]).toBe('drawer outside height');
+    expect(formulas(2)[3]).toBe('cell height');
   });
 });
 
@@ -206,6 +231,16 @@ describe('the write-ups', () => {
       for (const figures of figuresAtAll(model, sizing)) {
         const said = `${title} ${JSON.stringify(figures.sizing.choices)} ${JSON.stringify(figures.sizing.values)}`;
         for (const formula of formulas) expect(valueOf(model, formula, figures), `${formula}: ${said}`).not.toBeNull();
+      }
+    });
+  });
+  it('make boxes whose parts fit, at the author’s size, a quarter larger, a fifth smaller, in inches and millimetres', () => {
+    each(({ title, pattern, sizing }) => {
+      const model = modelOf(pattern);
+      for (const figures of [1, 1.25, 0.8].flatMap((times) => resized(model, sizing, times))) {
+        const failing = figures.fits.filter(({ holds, advice }) => !holds && !advice).map(({ name }) => name);
+        const said = `${title} ${figures.sizing.units} ${JSON.stringify(figures.sizing.values)}`;
+        expect([failing, figures.problems], said).toEqual([[], []]);
       }
     });
   });
@@ -313,6 +348,21 @@ function valueOf(model: Model, formula: string, figures: Figures): number | null
   const live = compileLive(model, formula);
   if (!live.ok) throw new Error(`${formula} does not read`);
   return live.value.value(figures)?.cut ?? null;
+}
+
+/** Every length that is asked first, this many times as large; the finer points stay. */
+function resized(model: Model, sizing: Sizing, times: number): Figures[] {
+  const usual = evaluate(model, sizing);
+  const asked = model.pattern.measures.flatMap(({ name, ask }) => (ask && !ask.finer ? [name] : []));
+  const values = Object.fromEntries(
+    usual.measures
+      .filter(({ name, kind }) => kind === 'length' && asked.includes(name) && name in sizing.values)
+      .map(({ name, exact }) => [name, exact * times]),
+  );
+  return [
+    evaluate(model, { ...sizing, values: { ...sizing.values, ...values } }),
+    evaluate(model, { ...sizing, values: { ...sizing.values, ...values }, units: 'mm', grid: '1mm' }),
+  ];
 }
 
 /** At the author's size, a third larger and a fifth smaller, in inches and millimetres, with every choice. */

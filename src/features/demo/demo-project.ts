@@ -26,6 +26,8 @@ export interface DemoProject {
   readonly pattern: string;
   /** Asked values that differ from the pattern's usual ones, millimetres. */
   readonly values?: Readonly<Record<string, number>>;
+  /** Options that differ from the pattern's usual ones. */
+  readonly choices?: Readonly<Record<string, string>>;
   readonly createdDaysAgo: number;
   /** Days since it was last saved, for a draft. */
   readonly savedDaysAgo?: number;

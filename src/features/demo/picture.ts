@@ -20,6 +20,9 @@ export const CARDS = {
   plum: ['#7d3a69', '#43193a'],
   green: ['#3f9c7c', '#174a39'],
   kraft: ['#dba65f', '#8a5c20'],
+  clay: ['#cf7a5b', '#7c3a26'],
+  honey: ['#e8bd4f', '#8f6a14'],
+  dusk: ['#6f93b8', '#2c4763'],
 } as const satisfies Readonly<Record<string, Theme['card']>>;
 
 /** A model and its figures, which may be of a pattern changed for the picture's sake. */

@@ -1,7 +1,7 @@
 import { eq } from 'drizzle-orm';
 import { db } from '@/db/client.server';
 import { projects, uploads } from '@/db/schema';
-import { compilePattern, evaluate, explain, usualSizing, type Pattern } from '@/engine';
+import { compilePattern, evaluate, explain, usualSizing, type Pattern, type Sizing } from '@/engine';
 import { publishEdition } from '@/features/editions/publish.server';
 import { getPattern } from '@/features/patterns/patterns.server';
 import { renderPicture } from '@/features/pictures/render-picture.server';
@@ -65,14 +65,14 @@ function save(
 ): number {
   const open = openProject(id, author);
   if (!open) throw new Error(`${demo.title} cannot be opened.`);
-  const { title, summary, minutes, values = {} } = demo;
+  const { title, summary, minutes } = demo;
   const state: ProjectState = {
     ...open.state,
     ...parts,
     title,
     summary,
     minutes,
-    sizing: { ...open.state.sizing, values: { ...open.state.sizing.values, ...values } },
+    sizing: sizingOf(open.state.sizing, demo),
   };
   const saved = saveProject(id, author, { state, revision: open.revision });
   if (!saved.ok) throw new Error(`${title} could not be saved: ${saved.code}.`);
@@ -114,14 +114,19 @@ async function drawPictures(
 }
 
 /** The project's box at its author's size, of a pattern that the picture may have changed. */
-export function builderOf(pattern: Pattern, { values = {} }: Pick<DemoProject, 'values'>): Build {
+export function builderOf(pattern: Pattern, demo: Pick<DemoProject, 'values' | 'choices'>): Build {
   return (change = (same) => same) => {
     const compiled = compilePattern(change(pattern));
     if (!compiled.ok) throw new Error(compiled.faults.map(explain).join('\n'));
-    const sizing = usualSizing(compiled.value);
     return {
       model: compiled.value,
-      figures: evaluate(compiled.value, { ...sizing, values: { ...sizing.values, ...values } }),
+      figures: evaluate(compiled.value, sizingOf(usualSizing(compiled.value), demo)),
     };
   };
 }
+
+const sizingOf = (usual: Sizing, { values, choices }: Pick<DemoProject, 'values' | 'choices'>): Sizing => ({
+  ...usual,
+  values: { ...usual.values, ...values },
+  choices: { ...usual.choices, ...choices },
+});
