@@ -488,6 +488,8 @@ export interface SentenceFigure {
   readonly bare?: boolean;
   /** Card thicknesses to add to `mm`: said in words, since no ruler shows them. */
   readonly cards?: number;
+  /** Written as a + or − for each of them, as on the drawing; an earlier sentence says what that means. */
+  readonly signed?: boolean;
 }
 export interface FitFigure {
   readonly name: string;

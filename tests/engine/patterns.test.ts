@@ -149,7 +149,7 @@ describe('sleeve-drawer', () => {
     const figures = figuresOf(modelOf('sleeve-drawer'));
     const score = pieceOf(figures, 'Sleeve').instructions[1];
     expect(say(score ?? [], { units: 'in', grid: '1/16in' })).toBe(
-      'Along the 11 1/2 in side score at 1/2, 4 5/8, 6 and 10 1/8 and a card’s thickness.',
+      'Along the 11 1/2 in side score at 1/2, 4 5/8, 6 and 10 1/8 plus a card’s thickness.',
     );
   });
 });

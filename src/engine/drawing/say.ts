@@ -20,15 +20,34 @@ const CARDS: Readonly<Record<number, string>> = {
 export function sayParts(sentence: Sentence, options: Pick<ShowOptions, 'units' | 'grid'>): readonly SaidPart[] {
   return sentence.map((part) => {
     if (typeof part === 'string') return { text: part, typeset: part, spoken: part, figure: false };
-    const shown = show(part.mm, { ...options, ...(part.bare ? { bare: true } : {}) });
+    const { mm, bare = false, cards = 0, signed = false } = part;
+    const shown = show(mm, { ...options, bare });
     // Nothing and a card's thickness is a card's thickness.
-    const bare = isZero(part.mm) ? CARDS[part.cards ?? 0] : undefined;
-    if (bare) return { text: bare, typeset: bare, spoken: bare, figure: true };
-    const cards =
-      part.cards === undefined ? '' : `${part.cards > 0 ? ' and ' : ' less '}${CARDS[Math.abs(part.cards)] ?? ''}`;
-    return { text: shown.text + cards, typeset: shown.typeset + cards, spoken: shown.spoken + cards, figure: true };
+    const alone = isZero(mm) ? CARDS[cards] : undefined;
+    const spoken = alone ?? shown.spoken + cardsInWords(cards);
+    if (signed) {
+      const number = show(mm, { ...options, bare: true });
+      const sign = signs(cards);
+      return {
+        text: number.text + sign + shown.text.slice(number.text.length),
+        typeset: number.typeset + sign + shown.typeset.slice(number.typeset.length),
+        spoken,
+        figure: true,
+      };
+    }
+    if (alone) return { text: alone, typeset: alone, spoken, figure: true };
+    return {
+      text: shown.text + cardsInWords(cards),
+      typeset: shown.typeset + cardsInWords(cards),
+      spoken,
+      figure: true,
+    };
   });
 }
+const cardsInWords = (cards: number): string =>
+  cards === 0 ? '' : `${cards > 0 ? ' plus ' : ' less '}${CARDS[Math.abs(cards)] ?? ''}`;
+/** A sign for each card thickness that no ruler shows. */
+const signs = (cards: number): string => (cards > 0 ? '+' : '−').repeat(Math.abs(cards));
 export const say = (sentence: Sentence, options: Pick<ShowOptions, 'units' | 'grid'>): string =>
   sayParts(sentence, options)
     .map((part) => part.text)
@@ -40,5 +59,5 @@ export function showPosition(mm: number, thickness: number, options: Pick<ShowOp
   const [said] = sayParts([{ mm: shown, bare: true, ...(cards === 0 ? {} : { cards }) }], options);
   const { typeset } = show(shown, { ...options, bare: true });
   const { text, spoken } = said as SaidPart;
-  return { text, spoken, typeset: typeset + (cards > 0 ? '+' : '−').repeat(Math.abs(cards)) };
+  return { text, spoken, typeset: typeset + signs(cards) };
 }

@@ -7,5 +7,6 @@ export * from './grid';
 export * from './layer';
 export * from './outline';
 export * from './sector';
+export { seamsOf } from './grid-words';
 export { fanSizes } from './shape-words';
 export * from './words';

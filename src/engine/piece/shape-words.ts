@@ -1,6 +1,8 @@
 import { decimal } from '../measure';
-import { boundsOf, distance, lengthOf, pointAt } from '../net';
-import type { Arc, Curve, FanPieceDef, Loop, Net, Panel, Point, Sentence } from '../types';
+import { distance, lengthOf, pointAt } from '../net';
+import type { Curve, FanPieceDef, Loop, Net, Panel, Point, Sentence } from '../types';
+import { cuttingOut } from './cut-words';
+import { bowOf, holes, scoring, slits, type Said } from './line-words';
 import type { WordsOptions } from './words';
 
 /** The making of a piece that is not a grid, in words. */
@@ -13,7 +15,7 @@ export function shapeWords(options: WordsOptions): Sentence[] {
     case 'sector':
       return sector(options);
     case 'outline':
-      return outline(options);
+      return [...scoring(options), ...cuttingOut(options), ...slits(options), ...holes(options)];
     case 'grid':
     case 'layer':
       return [];
@@ -141,83 +143,48 @@ function sector({ net, def, figure }: WordsOptions): Sentence[] {
     (a, b) => b - a,
   );
   const [outer = 0, inner] = radii;
+  const seam = net.panels.find((one) => one.role === 'tab');
+  const { apex, angle } = body?.cone ?? { apex: { x: 0, y: 0 }, angle: 0 };
+  const tab = seam && tabSizes(seam);
   return [
     [
       'From one point draw an arc of ',
       figure(outer),
       ' radius',
       ...(inner === undefined ? [] : [' and one of ', figure(inner), ' radius']),
-      ` over ${degrees(body?.cone?.angle ?? 0)}, and join their ends by straight lines.`,
+      ` over ${degrees(angle)}, which is `,
+      figure(2 * outer * Math.sin((angle * Math.PI) / 360)),
+      ' straight across the outer one, and join their ends by straight lines.',
     ],
-    ['Along one straight edge leaves a seam tab; taper it as drawn. Roll the piece, do not fold it.'],
+    [
+      'That point lies ',
+      figure(apex.x),
+      ' from the left edge and ',
+      figure(Math.abs(apex.y)),
+      ` ${apex.y < 0 ? 'above' : 'below'} the top one; the piece hangs straight down from it.`,
+    ],
+    ...(tab
+      ? [
+          [
+            'Outside the left straight edge draw a glue tab ',
+            figure(tab.width),
+            ` wide; its ends stand at ${degrees(tab.low)} to that edge at the outer arc and ${degrees(tab.high)} at the ${inner === undefined ? 'point' : 'inner one'}.`,
+          ],
+        ]
+      : []),
+    ['Cut it out. Roll the piece, do not fold it.'],
   ];
 }
 
 /** Corners of a loop in order, each by how far it lies from the left and from the top edge. */
-export function cornersOf(loop: Loop, figure: WordsOptions['figure']): Sentence {
+export function cornersOf(loop: Loop, figure: Said['figure']): Sentence {
   return loop.flatMap((curve, index): Sentence => {
     const end = index === loop.length - 1 ? '.' : ';';
     return [
       figure(curve.from.x, true),
       ' across, ',
       figure(curve.from.y, true),
-      ...(curve.type === 'arc' ? [' down (then ', ...bow(curve, figure), `)${end} `] : [` down${end} `]),
+      ...(curve.type === 'arc' ? [' down (then ', ...bowOf({ figure }, curve), `)${end} `] : [` down${end} `]),
     ];
   });
-}
-function outline({ net, figure }: WordsOptions): Sentence[] {
-  const corners = cornersOf(net.outline, figure);
-  return [
-    ['Mark the corners, each from the left and from the top edge: ', ...corners, 'Join them in this order and cut.'],
-    ...net.folds
-      .filter((fold) => fold.angle !== 0)
-      .map((fold): Sentence => {
-        const [from, to] = [pointAt(fold.curve, 0), pointAt(fold.curve, 1)];
-        return [
-          `Score a ${fold.kind} fold from `,
-          figure(from.x, true),
-          ' across, ',
-          figure(from.y, true),
-          ' down, to ',
-          figure(to.x, true),
-          ' across, ',
-          figure(to.y, true),
-          ...(fold.curve.type === 'arc' ? [' down, ', ...bow(fold.curve, figure), '.'] : [' down.']),
-        ];
-      }),
-    ...net.slits.map(
-      ({ from, to }): Sentence => [
-        'Slit from ',
-        figure(from.x, true),
-        ' across, ',
-        figure(from.y, true),
-        ' down, to ',
-        figure(to.x, true),
-        ' across, ',
-        figure(to.y, true),
-        ' down.',
-      ],
-    ),
-    ...net.holes.map((hole): Sentence => {
-      const { left, top, right, bottom } = boundsOf(hole);
-      return [
-        'Cut out a window ',
-        figure(right - left, true),
-        ' × ',
-        figure(bottom - top),
-        ', its top left corner ',
-        figure(left, true),
-        ' across, ',
-        figure(top, true),
-        ' down.',
-      ];
-    }),
-  ];
-}
-/** An arc by its radius and the way its middle stands out from the straight line between its ends. */
-function bow(arc: Arc, figure: WordsOptions['figure']): Sentence {
-  const middle = pointAt(arc, 0.5);
-  const [x, y] = [middle.x - (arc.from.x + arc.to.x) / 2, middle.y - (arc.from.y + arc.to.y) / 2];
-  const way = Math.abs(y) >= Math.abs(x) ? (y < 0 ? 'up' : 'down') : x < 0 ? 'to the left' : 'to the right';
-  return ['an arc of ', figure(arc.radius), ` radius, bowed ${way}`];
 }

@@ -74,9 +74,9 @@ describe('drum-box', () => {
       'Cut 328 × 93 mm.',
       'Along the 93 mm side score at 81.',
       'Along the 328 mm side draw a pencil line at 316; do not score it.',
-      'Cut away the corner square at the bottom right, along the scores.',
-      'Taper the tab “seam” at both ends by 15°.',
-      'Cut the tab “foot” into 50 teeth, each 6.3 mm wide at the score and 4.8 mm at the tip: a narrow V between each two, down to the score.',
+      'Cut away the corner square at the bottom right, along the lines.',
+      'Taper the tab at the right at both ends by 15°.',
+      'Cut the tab at the bottom into 50 teeth, each 6.3 mm wide at the score and 4.8 mm at the tip: a narrow V between each two, down to the score.',
       'Fold every score towards you and burnish it.',
     ]);
   });

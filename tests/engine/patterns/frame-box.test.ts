@@ -72,9 +72,8 @@ describe('the flat frame', () => {
   });
   it('says the window in words', () => {
     const lines = pieceOf(worked(0, 0), 'Frame').instructions.map((line) => say(line, METRIC));
-    expect(lines).toContain(
-      'In “front” cut a window 90 × 140 mm, its middle 75 mm from the left of that panel and 100 mm from its top.',
-    );
+    // In the middle of 324 × 374: (324 − 90) / 2 and (374 − 140) / 2.
+    expect(lines).toContain('Cut out a window 90 × 140 mm, its top left corner 117 across, 117 down.');
   });
 });
 

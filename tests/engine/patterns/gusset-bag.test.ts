@@ -58,10 +58,8 @@ describe('the flat bag', () => {
   });
   it('says every crease of the gusset', () => {
     const lines = pieceOf(bag('block folded'), 'Bag').instructions.map((line) => say(line, METRIC));
-    // The folds meet in the middle, 40 mm above the base line.
-    expect(lines).toContain(
-      'In “first gusset” score a mountain fold from 40 across and 160 down to 0 across and 200 down.',
-    );
+    // The base line lies 30 + 200 down; the folds meet in the middle of the gusset, 40 mm above it.
+    expect(lines.join(' ')).toContain('242 across, 230 down, to 202 across, 190 down, on to 162 across, 230 down');
   });
   it('takes no holes when none are wanted', () => {
     expect(pieceOf(bag('glued', {}, 'none'), 'Bag').net.holes).toHaveLength(0);

@@ -76,10 +76,12 @@ describe('pillow-box', () => {
     expect(arcs.map((arc) => arc.radius)).toEqual(arcs.map(() => inch(4.25)));
     expect(arcs).toHaveLength(8);
     const words = piece.instructions.map((one) => say(one, { units: 'in', grid: '1/16in' }));
-    expect(words).toContain(
-      'Score a valley fold from 0 across, 1/2 down, to 4 across, 1/2 down, an arc of 4 1/4 in radius, bowed down.',
+    expect(words.join(' ')).toContain(
+      'Score from 0 across, 1/2 down, to 4 across, 1/2 down, an arc of 4 1/4 in radius, bowed down;',
     );
-    expect(words.join(' ')).toContain('0 across, 1/2 down (then an arc of 4 1/4 in radius, bowed up)');
+    expect(words.join(' ')).toContain(
+      'From the left edge at 1/2 cut to 4 across, 1/2 down, an arc of 4 1/4 in radius, bowed up;',
+    );
   });
 
   it.each([

@@ -40,7 +40,7 @@ describe('tuck-carton', () => {
     expect(instructions.slice(0, 3).map((sentence) => say(sentence, { units: 'in', grid: '1/16in' }))).toEqual([
       'Cut 10 1/2 × 9 in.',
       'Along the 10 1/2 in side score at 1/2, 3 1/2, 5 1/2 and 8 1/2.',
-      'Turn; along the 9 in side score at 1/2, 2 1/2, 6 1/2 and 8 1/2.',
+      'Turn; along the 9 in side score at 1/2 and 2 1/2 in from each end.',
     ]);
   });
   it('is 8 1/2 in along with a glued bottom (derived: no second tongue)', () => {
