@@ -30,7 +30,18 @@ export {
   type Solved,
   type Sweep,
 } from './model';
-export { cutsInWords, planSheets, stockOf, STOCKS, type SheetPlan, type Stock, type StockId } from './sheet';
+export {
+  cutsInWords,
+  helpWithTooLarge,
+  planning,
+  planSheets,
+  stockOf,
+  STOCKS,
+  type PlanOptions,
+  type SheetPlan,
+  type Stock,
+  type StockId,
+} from './sheet';
 export {
   drawFolded,
   drawPiece,

@@ -117,7 +117,7 @@ describe('planSheets', () => {
   it('says the cuts in order, measured from the edge in the hand', () => {
     const plan = planSheets({ pieces: [blank('Base', inch(8), inch(12))] }, { stock: '12x12in' });
     expect(cutsInWords(plan, 0).map((sentence) => say(sentence, { units: 'in', grid: '1/16in' }))).toEqual([
-      '1. Trim at 8 in: that is the Base; left over: offcut A.',
+      '1. Trim at 8 in from the left: that is the Base; left over: offcut A, 4 × 12.',
     ]);
   });
 });

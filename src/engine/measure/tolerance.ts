@@ -14,6 +14,9 @@ export function snap(x: number): number {
   // Dividing by the whole number 10^6 is correctly rounded; multiplying by 1e-6 would bring noise back.
   return Number.isFinite(x) ? Math.round(x * 1e6) / 1e6 + 0 : x;
 }
+/** Whole nanometres, for searches that compare sums exactly: a metre is 10⁹, far below what a double holds exactly. */
+export const toNanometres = (mm: number): number => Math.round(mm * 1e6);
+export const fromNanometres = (whole: number): number => whole / 1e6;
 /** Equal to the nanometre. */
 export const same = (a: number, b: number): boolean => Math.abs(a - b) <= NANOMETRE / 2 + NANOMETRE * 1e-3;
 /** `a` is at least `b`, give or take a nanometre. */

@@ -1,3 +1,6 @@
+export type { Cut, Freed, Offcut, Part } from './cuts';
+export { foldsRun, type Folds } from './grain';
 export * from './plan';
 export * from './stock';
+export type { TooLarge } from './too-large';
 export * from './words';

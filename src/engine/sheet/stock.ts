@@ -4,6 +4,8 @@ export interface Stock {
   readonly name: string;
   readonly across: number;
   readonly along: number;
+  /** How the grain runs; usual: along. */
+  readonly grain?: 'across' | 'along';
 }
 export type StockId = '12x12in' | 'letter' | 'a4' | 'a3' | '8x8in' | '6x6in' | '30x30cm';
 const stock = (id: StockId, name: string, across: number, along: number): Stock & { readonly id: StockId } => ({

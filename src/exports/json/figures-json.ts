@@ -1,4 +1,14 @@
-import { cutsInWords, planSheets, say, showValue, type Figures, type Model, type Sizing, type Stock } from '@/engine';
+import {
+  cutsInWords,
+  helpWithTooLarge,
+  planSheets,
+  say,
+  showValue,
+  type Figures,
+  type Model,
+  type Sizing,
+  type Stock,
+} from '@/engine';
 
 export interface FiguresJsonOptions {
   readonly stock: Stock;
@@ -40,7 +50,16 @@ export function figuresJson(model: Model, figures: Figures, { stock, copies }: F
         offcuts: sheet.offcuts,
         cuts: cutsInWords(plan, index).map((sentence) => say(sentence, sizing)),
       })),
-      ...(plan.tooLarge.length > 0 ? { tooLarge: plan.tooLarge } : {}),
+      ...(plan.tooLarge.length > 0
+        ? {
+            tooLarge: plan.tooLarge.map((large) => ({
+              name: large.name,
+              across: large.across,
+              along: large.along,
+              hint: say(helpWithTooLarge(large), sizing),
+            })),
+          }
+        : {}),
     },
     departure: figures.departure,
     problems: figures.problems.map(({ code, measure, sentence, nearest }) => ({ code, measure, sentence, nearest })),

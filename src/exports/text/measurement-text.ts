@@ -1,4 +1,14 @@
-import { cutsInWords, planSheets, say, show, showValue, type Figures, type Model, type Stock } from '@/engine';
+import {
+  cutsInWords,
+  helpWithTooLarge,
+  planSheets,
+  say,
+  show,
+  showValue,
+  type Figures,
+  type Model,
+  type Stock,
+} from '@/engine';
 
 /** The measurement sheet as plain text, for a terminal or a letter: sizes, cut list, making, fits, sheets, departure. */
 export function measurementText(
@@ -44,8 +54,8 @@ export function measurementText(
       ...cutsInWords(plan, index).map((sentence) => `    ${say(sentence, sizing)}`),
     ]),
     ...plan.tooLarge.map(
-      ({ name, across, along, hint }) =>
-        `  ${name}, ${bare(across)} × ${length(along)}, is larger than the sheet. ${hint}`,
+      (large) =>
+        `  ${large.name}, ${bare(large.across)} × ${length(large.along)}, is larger than the sheet. ${say(helpWithTooLarge(large), sizing)}`,
     ),
     '',
     figures.departure.mm === 0

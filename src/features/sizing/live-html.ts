@@ -1,4 +1,4 @@
-import { GRIDS, show, type Figures, type Model, type SheetPlan, type Sizing } from '@/engine';
+import { GRIDS, helpWithTooLarge, say, show, type Figures, type Model, type SheetPlan, type Sizing } from '@/engine';
 import { esc } from '@/exports/escape';
 import { cutWords, gapWords, insideWords, pieceCount, piecesWords, sheetsWords, timeWords } from './facts';
 import type { Panel } from './panel';
@@ -57,13 +57,13 @@ export function fitsHtml(figures: Figures, plan: SheetPlan): string {
     const words = fit.holds ? '' : `<span class="fit-why">${esc(fit.otherwise)}</span>`;
     return item(state, fit.name, gapWords(fit, figures.sizing), words);
   });
-  const large = plan.tooLarge.length > 0;
+  const large = plan.tooLarge[0];
   const sheets = large
     ? item(
         'fails',
         `Too large for ${plan.stock.name}`,
         plan.tooLarge.map(({ name }) => name).join(', '),
-        `<span class="fit-why">${esc(plan.tooLarge[0]?.hint ?? '')}</span>`,
+        `<span class="fit-why">${esc(say(helpWithTooLarge(large), figures.sizing))}</span>`,
       )
     : item('holds', `All pieces fit ${plan.stock.name}`, `${plan.used} ${plan.used === 1 ? 'sheet' : 'sheets'}`, '');
   return [...fits, sheets].join('');
