@@ -57,8 +57,12 @@ describe('editing a pattern', () => {
   });
   it.each([
     ['', 'Give the measure a name, such as “rib height”.'],
-    ['2 ribs', 'A name is made of letters, digits and spaces, and begins with a letter.'],
-    ['Blank  Width', 'There is a measure or choice called “Blank Width” already.'],
+    [
+      '2 ribs',
+      '“2 ribs” cannot be a name. A name is made of letters, digits and single spaces, and begins with a letter; it has 60 characters at most.',
+    ],
+    ['more or less', '“more or less” holds “or”, a word that formulas use. Leave “or” out, or choose another word.'],
+    ['Blank  Width', 'There is a measure called “blank width” already. Choose another, or rename that one first.'],
     ['rib height', null],
   ])('of the name “%s” says %s', (name, sentence) => expect(nameTrouble(FOLDER, name)).toBe(sentence));
 });

@@ -3,6 +3,7 @@ import { changeMeasure } from '@/features/projects/pattern-edits';
 import type { OpenProject } from '@/features/projects/project';
 import { createDeskStore, type DeskStore } from '@/features/workroom/desk/desk-store';
 import { cureFor } from '@/features/workroom/desk/cures';
+import { collectUses } from '@/writeup/uses';
 import { AUTHORS_SIZE, FOLDER, ONE_STEP, writeUpOf } from '../server/published-project';
 
 const project: OpenProject = {
@@ -29,6 +30,8 @@ beforeEach(() => {
 const type = (formula: string) =>
   store.editPattern('blank width.formula', (pattern) => changeMeasure(pattern, 'blank width', { formula }));
 const cut = (name: string) => store.$live.get()?.figures.measures.find((figure) => figure.name === name)?.cut;
+
+const formulas = () => collectUses(store.$writeUp.get().doc).formulas.map(({ formula }) => formula);
 
 describe('the desk', () => {
   it('works figures out at the author’s size', () => {
@@ -81,5 +84,40 @@ describe('the desk', () => {
     expect(store.$litNames.get()).toEqual(['inside width', 'blank width']);
     store.select(null);
     expect(store.$litNames.get()).toEqual([]);
+  });
+  it('renames a measure in pattern, size and write-up at once, and takes all three back with one undo', () => {
+    store.editSizing(null, (sizing) => ({ ...sizing, values: { 'inside width': 127 } }));
+    store.select('blank width');
+    const before = store.$state.get();
+    // Columns and sizes read the inside width alone; the step says the blank width.
+    expect(store.rename({ what: 'measure', from: 'blank width', to: ' sheet  width ' })).toEqual({
+      ok: true,
+      value: { formulas: 0, fits: 0, steps: 1, others: 0 },
+    });
+    expect(formulas()).toEqual(['sheet width']);
+    expect([cut('blank width'), store.$selected.get()]).toEqual([undefined, 'sheet width']);
+    expect(cut('sheet width')).toBeCloseTo(254, 6);
+    store.rename({ what: 'measure', from: 'inside width', to: 'clear width' });
+    expect(store.$draft.get().sizing.values).toEqual({ 'clear width': 127 });
+    store.undo();
+    store.undo();
+    expect(store.$state.get()).toEqual(before);
+    expect([store.$renamed.get(), store.$selected.get()]).toEqual([before.writeUp, 'blank width']);
+    store.redo();
+    expect(formulas()).toEqual(['sheet width']);
+    expect(store.$draft.get().pattern.measures[2]?.name).toBe('sheet width');
+  });
+  it('keeps what was written after a renaming that is undone', () => {
+    store.rename({ what: 'measure', from: 'blank width', to: 'sheet' });
+    store.setWriteUp(writeUpOf(...store.$writeUp.get().doc.content, { type: 'cutList' }));
+    store.undo();
+    expect(formulas()).toEqual(['blank width']);
+    expect(store.$writeUp.get().doc.content.at(-1)).toEqual({ type: 'cutList' });
+  });
+  it('changes nothing when a name is refused', () => {
+    const before = store.$state.get();
+    const refused = store.rename({ what: 'measure', from: 'blank width', to: 'Inside height' });
+    expect(refused).toMatchObject({ ok: false, faults: [{ code: 'rename taken' }] });
+    expect([store.$state.get(), store.$history.get().past]).toEqual([before, []]);
   });
 });

@@ -1,5 +1,5 @@
-import type { Pattern } from '@/engine';
-import { formulasOfMeasure, formulasOfPiece, namesIn, namesOf } from './formula-names';
+import { formulasOfPiece, type Pattern } from '@/engine';
+import { formulasOfMeasure, namesIn, namesOf } from './formula-names';
 
 export interface Lit {
   /** The measure or choice that was selected. */

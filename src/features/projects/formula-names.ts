@@ -1,4 +1,4 @@
-import { keyOf, type Pattern, type PieceDef } from '@/engine';
+import { keyOf, type Pattern } from '@/engine';
 
 export interface NameSpan {
   readonly name: string;
@@ -44,44 +44,6 @@ function finder(names: readonly string[]): Finder {
   if (finders.size > 50) finders.clear();
   finders.set(key, made);
   return made;
-}
-
-/** Fields of a piece that are names, words or kinds and not formulas. */
-const NOT_FORMULAS: ReadonlySet<string> = new Set([
-  'name',
-  'stock',
-  'builder',
-  'look',
-  'remarks',
-  'cells',
-  'cell',
-  'is',
-  'between',
-  'corner',
-  'centre',
-  'disc',
-  'body',
-  'role',
-  'panel',
-  'edges',
-]);
-const SIDES: ReadonlySet<string> = new Set(['top', 'right', 'bottom', 'left', 'rectangle', 'triangle']);
-
-/** Every formula of a piece, whatever its builder: sizes, counts, conditions, angles, radii, places of points. */
-export function formulasOfPiece(piece: PieceDef): readonly string[] {
-  const found: string[] = [];
-  const collect = (value: unknown, key: string): void => {
-    if (NOT_FORMULAS.has(key)) return;
-    if (typeof value === 'string') {
-      // A loop names points; only the radius of a bowed edge is a formula there.
-      const formula = key === 'loop' ? (/ bowed (?:out|in) by (.+)$/u.exec(value)?.[1] ?? '') : value;
-      if (formula !== '' && !SIDES.has(formula)) found.push(formula);
-    } else if (Array.isArray(value)) for (const item of value) collect(item, key);
-    else if (typeof value === 'object' && value !== null)
-      for (const [name, item] of Object.entries(value)) collect(item, name);
-  };
-  for (const [key, value] of Object.entries(piece)) collect(value, key);
-  return found;
 }
 
 /** Names that a formula may use: measures and choices. */

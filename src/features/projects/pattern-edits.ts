@@ -1,5 +1,14 @@
-import type { Ask, ChoiceDef, MeasureDef, Pattern, Track } from '@/engine';
-import { formulasOfMeasure, formulasOfPiece, namesIn } from './formula-names';
+import {
+  explain,
+  formulasOfPiece,
+  nameFault,
+  type Ask,
+  type ChoiceDef,
+  type MeasureDef,
+  type Pattern,
+  type Track,
+} from '@/engine';
+import { formulasOfMeasure, namesIn } from './formula-names';
 
 /** Each of these gives a new pattern and leaves the old one as it was. */
 
@@ -55,25 +64,21 @@ export function turnOver(pattern: Pattern, name: string): Pattern {
       if (ask) return { ...rest, formula: ask.usual };
       return {
         ...rest,
-        ask: { question: `How much is the ${name}?`, usual: formula ?? '', from: '0 in', to: '12 in' },
+        ask: { question: questionFor(name), usual: formula ?? '', from: '0 in', to: '12 in' },
       };
     }),
   };
 }
 
-/** Why a measure cannot be called this; null when it can. */
+/** What the reader is asked until the author puts it better. */
+export const questionFor = (name: string): string => `How much is the ${name}?`;
+
+/** Why a new measure cannot be called this; null when it can. */
 export function nameTrouble(pattern: Pattern, name: string): string | null {
-  const clean = cleanName(name);
-  if (clean === '') return 'Give the measure a name, such as “rib height”.';
-  if (!/^\p{L}[\p{L}\p{N} ]*$/u.test(clean))
-    return 'A name is made of letters, digits and spaces, and begins with a letter.';
-  if (clean.length > 40) return 'A name has at most 40 characters.';
-  const taken = [...pattern.measures, ...pattern.choices].some(
-    (item) => item.name.toLowerCase() === clean.toLowerCase(),
-  );
-  return taken ? `There is a measure or choice called “${clean}” already.` : null;
+  if (name.trim() === '') return 'Give the measure a name, such as “rib height”.';
+  const fault = nameFault(pattern, { what: 'measure', from: '', to: name });
+  return fault && explain(fault);
 }
-export const cleanName = (name: string): string => name.trim().replace(/\s+/gu, ' ');
 
 /** What would stop reading if the measure were taken out, in words: `measure “arc”`, `piece “Floor”`, `fit “lid goes on”`. */
 export function usersOf(pattern: Pattern, name: string): readonly string[] {

@@ -21,7 +21,7 @@ import { pictureSender } from './send-picture';
 import { markTools, partTools, toolState } from './tools';
 import { shortcut } from './shortcuts';
 import { Toolbar } from './Toolbar';
-import { insertPart, linkAt, putMeasure, setLink } from './writing';
+import { insertPart, linkAt, putMeasure, setLink, takeNames } from './writing';
 
 export interface WriteUpEditorProps {
   /** Read once; give the component a new `key` to begin with another. */
@@ -30,6 +30,8 @@ export interface WriteUpEditorProps {
   readonly figures: FiguresStore;
   /** Names of the measures that are lit, the picked one first. */
   readonly lit: ReadableAtom<readonly string[]>;
+  /** The write-up each time that names in it were changed outside the editor, which takes them over. */
+  readonly renamed: ReadableAtom<WriteUp | null>;
   /** Where photos go. */
   readonly uploads: { readonly projectId: string };
   /** After every change of the document, never for a change of the figures. */
@@ -50,7 +52,15 @@ type Opened =
   | { readonly type: 'link'; readonly href: string };
 
 /** The write-up's editor: text, steps, live measures, pieces and photos, all by keyboard. */
-export function WriteUpEditor({ initial, figures, lit, uploads, onChange, onSelectMeasure }: WriteUpEditorProps) {
+export function WriteUpEditor({
+  initial,
+  figures,
+  lit,
+  renamed,
+  uploads,
+  onChange,
+  onSelectMeasure,
+}: WriteUpEditorProps) {
   const frame = useRef<HTMLDivElement>(null);
   const chooser = useRef<HTMLInputElement>(null);
   const [opened, setOpened] = useState<Opened | null>(null);
@@ -124,6 +134,11 @@ export function WriteUpEditor({ initial, figures, lit, uploads, onChange, onSele
       );
     },
   });
+
+  useEffect(
+    () => renamed.listen((writeUp) => writeUp && editing.current && takeNames(editing.current, writeUp.doc)),
+    [renamed],
+  );
 
   const followed = useEditorState({ editor, selector: ({ editor: now }) => (now ? toolState(now) : null) });
   // Nothing has happened in a new editor yet that would have told the hook.

@@ -1,6 +1,7 @@
 import { getMarkRange, type Editor } from '@tiptap/core';
 import { closeHistory } from '@tiptap/pm/history';
 import { TextSelection } from '@tiptap/pm/state';
+import type { DocNode } from '../document';
 import type { LiveText } from '../live';
 import { insertBlock } from './insert-block';
 
@@ -60,4 +61,19 @@ export function setLink(editor: Editor, href: string | null): void {
     if (href !== null) tr.addMark(range.from, range.to, type.create({ href }));
   }
   view.dispatch(tr.scrollIntoView());
+}
+
+/**
+ * Takes over the names of a document of the same parts: what live measures and piece cards speak of. No step of undo, since
+ * the names are not the editor's to take back.
+ */
+export function takeNames(editor: Editor, renamed: DocNode): void {
+  const { state, view } = editor;
+  const { tr } = state;
+  state.schema.nodeFromJSON(renamed).descendants((node, pos) => {
+    if (!node.isAtom || node.isText || state.doc.nodeAt(pos)?.type !== node.type) return;
+    for (const [name, value] of Object.entries(node.attrs))
+      if (state.doc.nodeAt(pos)?.attrs[name] !== value) tr.setNodeAttribute(pos, name, value);
+  });
+  if (tr.docChanged) view.dispatch(tr.setMeta('addToHistory', false));
 }

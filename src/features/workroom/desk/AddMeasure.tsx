@@ -1,7 +1,7 @@
 import { useState, type FormEvent } from 'react';
 import { Icon } from '@/components/Icon';
-import type { Pattern } from '@/engine';
-import { addMeasure, cleanName, nameTrouble } from '@/features/projects/pattern-edits';
+import { cleanName, type Pattern } from '@/engine';
+import { addMeasure, nameTrouble, questionFor } from '@/features/projects/pattern-edits';
 import type { DeskStore } from './desk-store';
 
 /** A new measure by name, asked of the reader or worked out. */
@@ -19,7 +19,7 @@ export function AddMeasure({ store, pattern }: { readonly store: DeskStore; read
       addMeasure(
         now,
         asked
-          ? { name: clean, ask: { question: `How much is the ${clean}?`, usual: '1 in', from: '0 in', to: '12 in' } }
+          ? { name: clean, ask: { question: questionFor(clean), usual: '1 in', from: '0 in', to: '12 in' } }
           : { name: clean, formula: '1 in' },
       ),
     );

@@ -1,6 +1,7 @@
 import { Segmented } from '@/components/Segmented';
 import { changeChoice } from '@/features/projects/pattern-edits';
 import type { Lit } from '@/features/projects/followers';
+import { chosenOption, withChoice } from '@/features/sizing/sizing-values';
 import type { DeskStore, Draft } from './desk-store';
 
 /** The pattern's choices: which option readers see first, and which is usual. */
@@ -20,7 +21,7 @@ export function Choices({
       <h3>Choices</h3>
       <div className="choices">
         {pattern.choices.map((choice) => {
-          const shown = sizing.choices[choice.name] ?? choice.usual;
+          const shown = chosenOption(sizing, choice);
           const selected = lit?.selected === choice.name;
           return (
             <div key={choice.name} className={selected ? 'choice selected' : 'choice'}>
@@ -38,9 +39,7 @@ export function Choices({
                 quietLegend
                 options={choice.options.map((option) => ({ value: option, label: option }))}
                 value={shown}
-                onChange={(option) =>
-                  store.editSizing(null, (now) => ({ ...now, choices: { ...now.choices, [choice.name]: option } }))
-                }
+                onChange={(option) => store.editSizing(null, (now) => withChoice(now, choice.name, option))}
               />
               {shown === choice.usual ? (
                 <span className="small soft">usual</span>

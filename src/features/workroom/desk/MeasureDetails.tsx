@@ -22,7 +22,8 @@ export function MeasureDetails({
   lit,
   sizing,
   own,
-}: MeasureRowProps & { readonly own: readonly Fault[] }) {
+  onRename,
+}: MeasureRowProps & { readonly own: readonly Fault[]; readonly onRename: () => void }) {
   const { name, ask } = measure;
   return (
     <div className="measure-details">
@@ -39,6 +40,9 @@ export function MeasureDetails({
             <span>Among the finer points</span>
           </label>
         ) : null}
+        <button type="button" className="text-button small" onClick={onRename}>
+          Rename it
+        </button>
         <button
           type="button"
           className="text-button small"

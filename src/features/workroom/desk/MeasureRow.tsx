@@ -8,6 +8,8 @@ import { FaultWords } from './FaultWords';
 import { cutText, exactText } from './figure-text';
 import { FormulaField } from './FormulaField';
 import { MeasureDetails } from './MeasureDetails';
+import { NameField, RenameWords } from './RenameMeasure';
+import { useRenaming } from './use-renaming';
 
 export interface MeasureRowProps {
   readonly store: DeskStore;
@@ -18,6 +20,9 @@ export interface MeasureRowProps {
   readonly lit: Lit | null;
   readonly stale: boolean;
   readonly sizing: Sizing;
+  /** How many places followed its new name, while nothing else has changed since. */
+  readonly renamed: string | null;
+  readonly onRenamed: (name: string, words: string) => void;
 }
 const ROUNDINGS: readonly Rounding[] = ['nearest', 'up', 'down', 'exact'];
 
@@ -25,7 +30,9 @@ const ROUNDINGS: readonly Rounding[] = ['nearest', 'up', 'down', 'exact'];
 export function MeasureRow(props: MeasureRowProps) {
   const { store, measure, names, faults, figure, lit, stale, sizing } = props;
   const errorId = useId();
+  const renameId = useId();
   const { name } = measure;
+  const renaming = useRenaming(store, name, props.onRenamed);
   const selected = lit?.selected === name;
   const follows = lit !== null && !selected && lit.names.has(name);
   const own = faults.filter((fault) => fieldOfFault(fault, name) !== null);
@@ -44,15 +51,26 @@ export function MeasureRow(props: MeasureRowProps) {
     <>
       <tr className={className} data-lit={follows ? '' : undefined} data-measure={name}>
         <th scope="row">
-          <button
-            type="button"
-            className="measure-name"
-            aria-pressed={selected}
-            data-place={`name:${name}`}
-            onClick={() => store.select(selected ? null : name)}
-          >
-            {name}
-          </button>
+          {renaming.typed === null ? (
+            <button
+              type="button"
+              className="measure-name"
+              aria-pressed={selected}
+              aria-keyshortcuts="F2"
+              title="F2 renames it"
+              data-place={`name:${name}`}
+              onClick={() => store.select(selected ? null : name)}
+              onKeyDown={(event) => {
+                if (event.key !== 'F2') return;
+                event.preventDefault();
+                renaming.begin();
+              }}
+            >
+              {name}
+            </button>
+          ) : (
+            <NameField name={name} renaming={renaming} describedBy={renameId} />
+          )}
         </th>
         <td>
           {measure.ask ? (
@@ -103,6 +121,22 @@ export function MeasureRow(props: MeasureRowProps) {
           </select>
         </td>
       </tr>
+      {renaming.typed === null && props.renamed === null ? null : (
+        <tr className={selected ? 'measure-naming selected' : 'measure-naming'}>
+          <td colSpan={5}>
+            {renaming.typed === null ? (
+              <p className="fault-cure">
+                <b>{props.renamed}</b>
+                <button type="button" className="text-button small" onClick={store.undo}>
+                  Undo
+                </button>
+              </p>
+            ) : (
+              <RenameWords id={renameId} renaming={renaming} />
+            )}
+          </td>
+        </tr>
+      )}
       {inFormula.length > 0 ? (
         <tr className="row-fault">
           <td />
@@ -120,7 +154,7 @@ export function MeasureRow(props: MeasureRowProps) {
       {selected || (measure.ask && own.length > 0) ? (
         <tr className={selected ? 'measure-more selected' : 'measure-more'}>
           <td colSpan={5}>
-            <MeasureDetails {...props} own={own} />
+            <MeasureDetails {...props} own={own} onRename={renaming.begin} />
           </td>
         </tr>
       ) : null}

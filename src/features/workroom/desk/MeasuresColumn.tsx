@@ -7,7 +7,7 @@ import { fieldOfFault } from '@/features/projects/proof-place';
 import { AddMeasure } from './AddMeasure';
 import { Choices } from './Choices';
 import { ColumnHead } from './ColumnHead';
-import type { DeskStore } from './desk-store';
+import type { DeskStore, Draft } from './desk-store';
 import { cutText } from './figure-text';
 import { FitList } from './FitList';
 import { MeasureRow } from './MeasureRow';
@@ -22,6 +22,10 @@ export function MeasuresColumn({ store }: { readonly store: DeskStore }) {
   const faults = work.compiled.ok ? [] : work.compiled.faults;
   const figures = new Map(work.live?.figures.measures.map((figure) => [figure.name, figure]));
   const follow = lit === null ? '' : lit.followers.length === 1 ? '1 follows it' : `${lit.followers.length} follow it`;
+  const [said, setSaid] = useState<{ readonly name: string; readonly words: string; readonly draft: Draft } | null>(
+    null,
+  );
+  const renamed = said?.draft === draft ? said : null;
   const rows = (measures: readonly MeasureDef[]) =>
     measures.map((measure) => (
       <MeasureRow
@@ -34,6 +38,8 @@ export function MeasuresColumn({ store }: { readonly store: DeskStore }) {
         lit={lit}
         stale={work.stale}
         sizing={draft.sizing}
+        renamed={renamed?.name === measure.name ? renamed.words : null}
+        onRenamed={(name, words) => setSaid({ name, words, draft: store.$draft.get() })}
       />
     ));
   const finer = draft.pattern.measures.filter((measure) => measure.ask?.finer);
@@ -91,6 +97,9 @@ export function MeasuresColumn({ store }: { readonly store: DeskStore }) {
             {rows(draft.pattern.measures.filter((measure) => !measure.ask))}
           </tbody>
         </table>
+        <p className="visually-hidden" role="status">
+          {renamed?.words}
+        </p>
         <AddMeasure store={store} pattern={draft.pattern} />
         <Choices store={store} draft={draft} lit={lit} />
         <FitList work={work} draft={draft} lit={lit} names={names} />

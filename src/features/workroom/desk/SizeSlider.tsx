@@ -1,6 +1,7 @@
 import { useEffect, useState } from 'react';
 import { rulerTicks } from '@/components/ruler-ticks';
 import { explain, GRIDS, readValue, type MeasureFigure, type Sizing } from '@/engine';
+import { withValue } from '@/features/sizing/sizing-values';
 import type { DeskStore } from './desk-store';
 import { typedText } from './figure-text';
 
@@ -21,8 +22,7 @@ export function SizeSlider({ store, figure, sizing }: SizeSliderProps) {
     setFault(null);
   }, [shown]);
 
-  const set = (value: number, field: string | null) =>
-    store.editSizing(field, (now) => ({ ...now, values: { ...now.values, [name]: value } }));
+  const set = (value: number, field: string | null) => store.editSizing(field, (now) => withValue(now, name, value));
   const commit = () => {
     if (typed.trim() === shown) return;
     const read = readValue(figure, typed, { units: figure.unit ?? sizing.units });
@@ -77,7 +77,7 @@ export function SizeSlider({ store, figure, sizing }: SizeSliderProps) {
         <button
           type="button"
           className="text-button small"
-          onClick={() => store.editSizing(null, (now) => ({ ...now, values: without(now.values, name) }))}
+          onClick={() => store.editSizing(null, (now) => withValue(now, name, null))}
         >
           Back to usual
         </button>
@@ -95,9 +95,6 @@ const onStep = (
   value: number,
   { step, from, to }: { readonly step: number; readonly from: number; readonly to: number },
 ): number => Math.min(to, Math.max(from, Number((Math.round(value / step) * step).toFixed(6))));
-
-const without = (values: Readonly<Record<string, number>>, name: string): Record<string, number> =>
-  Object.fromEntries(Object.entries(values).filter(([key]) => key !== name));
 
 const RULER = { width: 280, inset: 12 } as const;
 

@@ -30,6 +30,7 @@ export function WriteUpColumn({ store, projectId }: { readonly store: DeskStore;
         initial={store.$writeUp.get()}
         figures={store.$live}
         lit={store.$litNames}
+        renamed={store.$renamed}
         uploads={{ projectId }}
         onChange={store.setWriteUp}
         onSelectMeasure={(name) => {

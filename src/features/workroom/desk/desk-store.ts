@@ -1,11 +1,24 @@
 import { atom, computed, type ReadableAtom } from 'nanostores';
-import { compilePattern, evaluate, type Model, type Pattern, type Result, type Sizing } from '@/engine';
+import {
+  cleanName,
+  compilePattern,
+  evaluate,
+  keyOf,
+  renamedBack,
+  type Model,
+  type Pattern,
+  type Rename,
+  type Result,
+  type Sizing,
+} from '@/engine';
 import { litBy, type Lit } from '@/features/projects/followers';
 import { begin, edit, redo, settle, undo, type History } from '@/features/projects/history';
 import type { OpenProject, ProjectState } from '@/features/projects/project';
 import { proofList, type ProofItem } from '@/features/projects/proof';
+import { renameInProject, type RenamedPlaces } from '@/features/projects/rename';
 import type { WriteUp } from '@/writeup/document';
 import type { LiveFigures } from '@/writeup/live';
+import { renameInWriteUp } from '@/writeup/rename';
 
 /** Everything but the write-up, which has an undo of its own. */
 export type Draft = Omit<ProjectState, 'writeUp'>;
@@ -33,10 +46,14 @@ export interface DeskStore {
   readonly $litNames: ReadableAtom<readonly string[]>;
   /** Raised when the whole state was replaced and the editor must begin anew. */
   readonly $generation: ReadableAtom<number>;
+  /** The write-up after names in it were last changed from outside the editor, which takes them over. */
+  readonly $renamed: ReadableAtom<WriteUp | null>;
   /** Edits of one `field` in a row are one step back. */
   edit(field: string | null, change: (draft: Draft) => Draft): void;
   editPattern(field: string | null, change: (pattern: Pattern) => Pattern): void;
   editSizing(field: string | null, change: (sizing: Sizing) => Sizing): void;
+  /** Renames in the pattern, the author's size and the write-up at once; undone and done again in all three too. */
+  rename(rename: Rename): Result<RenamedPlaces>;
   settle(): void;
   undo(): void;
   redo(): void;
@@ -60,6 +77,9 @@ export function createDeskStore(project: OpenProject): DeskStore {
   const $writeUp = atom(project.state.writeUp);
   const $selected = atom<string | null>(null);
   const $generation = atom(0);
+  const $renamed = atom<WriteUp | null>(null);
+  /** The drafts that a rename made, each with the one that it was made from. */
+  const renames = new WeakMap<Draft, { readonly before: Draft; readonly rename: Rename }>();
   const $draft = computed($history, (history) => history.present);
   const $state = computed([$draft, $writeUp], (draft, writeUp): ProjectState => ({ ...draft, writeUp }));
 
@@ -77,6 +97,26 @@ export function createDeskStore(project: OpenProject): DeskStore {
 
   const $litNames = computed($lit, (lit): readonly string[] => (lit === null ? [] : [lit.selected, ...lit.followers]));
 
+  const takeNames = (writeUp: WriteUp, { what, from, to }: Rename) => {
+    const selected = $selected.get();
+    if ((what === 'measure' || what === 'choice') && selected !== null && keyOf(selected) === keyOf(from))
+      $selected.set(to);
+    $writeUp.set(writeUp);
+    $renamed.set(writeUp);
+  };
+  /** Undo and redo leave the write-up alone, except that its names go with the pattern's. */
+  const step = (move: (history: History<Draft>) => History<Draft>) => {
+    const was = $draft.get();
+    $history.set(move($history.get()));
+    const now = $draft.get();
+    const [back, forth] = [renames.get(was), renames.get(now)];
+    const rename = back?.before === now ? renamedBack(back.rename) : forth?.before === was ? forth.rename : undefined;
+    if (rename === undefined) return;
+    const writeUp = $writeUp.get();
+    const doc = renameInWriteUp(writeUp.doc, rename);
+    takeNames(doc.ok ? { ...writeUp, doc: doc.value } : writeUp, rename);
+  };
+
   const store: DeskStore = {
     $history,
     $draft,
@@ -89,12 +129,24 @@ export function createDeskStore(project: OpenProject): DeskStore {
     $lit,
     $litNames,
     $generation,
+    $renamed,
     edit: (field, change) => $history.set(edit($history.get(), change($history.get().present), field)),
     editPattern: (field, change) => store.edit(field, (draft) => ({ ...draft, pattern: change(draft.pattern) })),
     editSizing: (field, change) => store.edit(field, (draft) => ({ ...draft, sizing: change(draft.sizing) })),
+    rename(given) {
+      const rename = { ...given, to: cleanName(given.to) };
+      const renamed = renameInProject($state.get(), rename);
+      if (!renamed.ok) return renamed;
+      const { state, places } = renamed.value;
+      const [before, after] = [$draft.get(), draftOf(state)];
+      renames.set(after, { before, rename });
+      $history.set(edit($history.get(), after));
+      takeNames(state.writeUp, rename);
+      return { ok: true, value: places };
+    },
     settle: () => $history.set(settle($history.get())),
-    undo: () => $history.set(undo($history.get())),
-    redo: () => $history.set(redo($history.get())),
+    undo: () => step(undo),
+    redo: () => step(redo),
     setWriteUp: (writeUp) => $writeUp.set(writeUp),
     replace(state) {
       $history.set(edit($history.get(), draftOf(state)));

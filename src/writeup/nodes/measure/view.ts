@@ -1,4 +1,5 @@
 import type { NodeViewRenderer } from '@tiptap/core';
+import { keyOf } from '@/engine';
 import type { EditingDesk } from '../../editor/editing-desk';
 import { readLive, showLive, type LiveText } from '../../live';
 import { NOT_WORKED_OUT } from '../../render-figures';
@@ -77,7 +78,9 @@ export function measureView(desk: EditingDesk): NodeViewRenderer {
 export function usesOf(desk: Pick<EditingDesk, 'figures'>, formula: string): readonly string[] {
   const live = desk.figures.get();
   const read = live && readLive(live.model, formula);
-  return read?.ok ? read.value.uses : [];
+  if (!read?.ok) return [];
+  const called = new Map(live?.model.pattern.measures.map(({ name }) => [keyOf(name), name]));
+  return read.value.uses.map((name) => called.get(name) ?? name);
 }
 
 function unknownMark(): HTMLElement {
