@@ -24,6 +24,7 @@ export {
   compilePattern,
   evaluate,
   largest,
+  orderOf,
   sweep,
   type LiveMeasure,
   type Model,

@@ -41,11 +41,21 @@ export interface Pattern {
   /** Inside and outside sizes of the finished box, in the order a person says them. */
   readonly finished: { readonly inside: readonly NamedFormula[]; readonly outside: readonly NamedFormula[] };
   /** The order of making, in plain words; `[[formula]]` inside becomes a live measure. */
-  readonly order: readonly string[];
+  readonly order: readonly OrderLine[];
+  readonly materials?: readonly MaterialDef[];
   /** Degrees that the folded picture is turned about the upright axis; usual −35, which shows the front and the right. */
   readonly turn?: number;
   /** Where each piece stands in space in the folded picture. */
   readonly assembly: readonly Placement[];
+}
+/** A sentence of the order of making, or one that is said only when a condition holds. */
+export type OrderLine = string | { readonly says: string; readonly when: string };
+/** What it takes besides card, paper and glue: a length of ribbon, a number of knobs. */
+export interface MaterialDef {
+  readonly name: string;
+  /** A length, an area or a number. */
+  readonly formula: string;
+  readonly when?: string;
 }
 export interface NamedFormula {
   readonly name: string;
@@ -429,10 +439,22 @@ export interface Figures {
   readonly pieces: readonly PieceFigure[];
   readonly fits: readonly FitFigure[];
   readonly finished: { readonly inside: readonly SizeFigure[]; readonly outside: readonly SizeFigure[] };
+  /** What making it takes. */
+  readonly materials: Materials;
   /** The largest difference that cutting to the grid makes, and where. */
   readonly departure: { readonly mm: number; readonly where: string };
   /** What keeps this sizing from being made; empty when it can be. */
   readonly problems: readonly SizingProblem[];
+}
+export interface Materials {
+  /** For each stock in use, what its pieces come to once cut, all counted, in square millimetres. */
+  readonly stocks: readonly { readonly stock: PieceDef['stock']; readonly area: number }[];
+  /** Millimetres of glue or double-sided tape: the folds that glued tabs hang on, all counted. */
+  readonly seams: number;
+  /** Glued all over: layers, in square millimetres. */
+  readonly glued: number;
+  /** What the pattern names besides; as cut. */
+  readonly extras: readonly { readonly name: string; readonly kind: KindName; readonly value: number }[];
 }
 export interface MeasureFigure {
   readonly name: string;

@@ -5,17 +5,27 @@ import {
   TRUTH,
   WHOLE,
   compileFormula,
+  kindName,
   kindOf,
   nearestName,
+  sayKind,
   type Formula,
   type Kind,
   type Scope,
 } from '../formula';
 import { SAYS } from '../pattern/messages';
 import { drawnNames, isFunctionName, isName, keyOf, reservedWordIn, sizeNames } from '../pattern/names';
-import type { Fault, Pattern, PieceDef, Result } from '../types';
+import type { Fault, MaterialDef, Pattern, PieceDef, Result } from '../types';
 import { compileShape } from './compile-shape';
-import type { CompiledFit, CompiledMeasure, CompiledPiece, CompiledTrack, CompiledValue, Model } from './model';
+import type {
+  CompiledFit,
+  CompiledMaterial,
+  CompiledMeasure,
+  CompiledPiece,
+  CompiledTrack,
+  CompiledValue,
+  Model,
+} from './model';
 
 /** One step of the reader's cut grid; nothing in the exact evaluation. Always there, for tolerances. */
 export const CUT_GRID = 'cut grid';
@@ -63,6 +73,12 @@ class Compiler {
       inside: this.pattern.finished.inside.flatMap(size('finished inside')),
       outside: this.pattern.finished.outside.flatMap(size('finished outside')),
     };
+    const order = this.pattern.order.map((line, index) => {
+      if (typeof line === 'string') return { says: line };
+      const when = this.condition(line.when, `order ${index + 1}, when`);
+      return { says: line.says, ...(when ? { when } : {}) };
+    });
+    const materials = (this.pattern.materials ?? []).flatMap((def) => this.material(def) ?? []);
     const placements = this.pattern.assembly.flatMap((def, index) => this.placement(def, index) ?? []);
     const worked = this.order(measures, pieces);
     if (this.faults.length > 0) return { ok: false, faults: this.faults };
@@ -78,6 +94,8 @@ class Compiler {
         pieces,
         fits,
         finished,
+        order,
+        materials,
         placements,
       },
     };
@@ -160,6 +178,10 @@ class Compiler {
     this.faults.push(...compiled.faults);
     return undefined;
   }
+  /** A condition on what is known once the pieces are drawn. */
+  private condition(text: string | undefined, where: string): Formula | undefined {
+    return text === undefined ? undefined : this.formula(text, TRUTH, where);
+  }
   private optional(text: string | undefined, wanted: Kind, where: string): Formula | undefined {
     return text === undefined ? undefined : this.formula(text, wanted, where, false);
   }
@@ -215,6 +237,18 @@ class Compiler {
         this.complain('no measure', where, SAYS.noMeasure(name, nearestName(name, measures)));
     }
     return left && right && { def, left, right, ...(tolerance ? { tolerance } : {}), ...(when ? { when } : {}) };
+  }
+  private material(def: MaterialDef): CompiledMaterial | undefined {
+    const where = `material “${def.name}”`;
+    const formula = this.formula(def.formula, undefined, where);
+    const when = this.condition(def.when, `${where}, when`);
+    const kind = formula ? kindName(formula.kind) : null;
+    if (!formula) return undefined;
+    if (kind !== 'length' && kind !== 'area' && kind !== 'number' && kind !== 'whole number') {
+      this.complain('bad material', where, SAYS.badMaterial(sayKind(formula.kind)));
+      return undefined;
+    }
+    return { def, kind, formula, ...(when ? { when } : {}) };
   }
   private placement(def: Pattern['assembly'][number], index: number) {
     const where = `assembly ${index + 1}`;

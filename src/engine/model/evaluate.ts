@@ -16,6 +16,7 @@ import type {
   Unit,
 } from '../types';
 import { buildPiece } from './build';
+import { materialsOf } from './materials';
 import { formulasOf, tracksOf, type CompiledFit, type CompiledMeasure, type CompiledPiece, type Model } from './model';
 import { answerTo, isInUse, workOut, type BothValues } from './values';
 
@@ -73,6 +74,7 @@ export function judge(model: Model, sizing: Sizing): { figures: Figures; values:
   }
   const sizes = (list: Model['finished']['inside']) =>
     list.map(({ def, formula }) => ({ name: def.name, mm: snap(formula.work(values.cut)) }));
+  let materials: Figures['materials'] | undefined;
   return {
     figures: {
       sizing,
@@ -80,6 +82,11 @@ export function judge(model: Model, sizing: Sizing): { figures: Figures; values:
       pieces,
       fits,
       finished: { inside: sizes(model.finished.inside), outside: sizes(model.finished.outside) },
+      // Worked out when first asked for, as the instructions are.
+      get materials() {
+        materials ??= materialsOf(model, pieces, values.cut);
+        return materials;
+      },
       departure: departureOf(model, values),
       problems,
     },

@@ -4,3 +4,4 @@ export * from './live';
 export type * from './model';
 export * from './solve';
 export * from './sweep';
+export * from './order';

@@ -1,6 +1,17 @@
 import type { Formula, Kind, Scope } from '../formula';
 import type { Cell } from '../piece';
-import type { ChoiceDef, FitDef, MeasureDef, NamedFormula, Pattern, PieceDef, Placement, Side } from '../types';
+import type {
+  ChoiceDef,
+  FitDef,
+  KindName,
+  MaterialDef,
+  MeasureDef,
+  NamedFormula,
+  Pattern,
+  PieceDef,
+  Placement,
+  Side,
+} from '../types';
 
 /** A pattern whose every formula is checked and compiled. Made by `compilePattern`, read by `evaluate`. */
 export interface Model {
@@ -15,6 +26,8 @@ export interface Model {
   readonly pieces: readonly CompiledPiece[];
   readonly fits: readonly CompiledFit[];
   readonly finished: { readonly inside: readonly CompiledSize[]; readonly outside: readonly CompiledSize[] };
+  readonly order: readonly CompiledLineOfOrder[];
+  readonly materials: readonly CompiledMaterial[];
   readonly placements: readonly CompiledPlacement[];
 }
 /** Something with a slot: a measure, or the size of a piece's column or row. */
@@ -179,6 +192,14 @@ export interface CompiledFit extends Conditional {
 }
 export interface CompiledSize {
   readonly def: NamedFormula;
+  readonly formula: Formula;
+}
+export interface CompiledLineOfOrder extends Conditional {
+  readonly says: string;
+}
+export interface CompiledMaterial extends Conditional {
+  readonly def: MaterialDef;
+  readonly kind: KindName;
   readonly formula: Formula;
 }
 export interface CompiledPlacement extends Conditional {

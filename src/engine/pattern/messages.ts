@@ -70,6 +70,11 @@ export const SAYS = {
     'a length or an angle',
     'Say how far in, such as 1/8 in, or how far off square, such as 45°.',
   ],
+  badMaterial: (found: string) => [
+    `this is ${found}`,
+    'a length, an area or a number',
+    'Say how long a ribbon is, or how many knobs it takes.',
+  ],
   tooMany: (what: string, has: number, most: number) => [`${has} ${what}`, `at most ${most}`, 'Split the pattern.'],
   late: (name: string) => [
     `“${name}” is only known once the pieces are drawn`,

@@ -3,8 +3,10 @@ import type {
   FitDef,
   GridPieceDef,
   LineDef,
+  MaterialDef,
   MeasureDef,
   NamedFormula,
+  OrderLine,
   Pattern,
   PieceDef,
   Placement,
@@ -67,6 +69,8 @@ const FIT: Roles<FitDef> = {
   advice: 'words',
 };
 const SIZE: Roles<NamedFormula> = { name: 'words', formula: 'formula' };
+const ORDER_LINE: Roles<Exclude<OrderLine, string>> = { says: 'prose', when: 'formula' };
+const MATERIAL: Roles<MaterialDef> = { name: 'words', formula: 'formula', when: 'formula' };
 const PLACEMENT: Roles<Placement> = {
   piece: 'piece',
   root: 'cell',
@@ -210,7 +214,14 @@ export function mapTexts(pattern: Pattern, change: Change): Pattern {
     ),
     fits: list(pattern.fits, FIT, named('fit')),
     finished,
-    order: list(pattern.order, 'prose', (_, index) => `order ${index + 1}`),
+    order: keep(
+      pattern.order,
+      pattern.order.map((line, index) => {
+        const roles: RoleTree = typeof line === 'string' ? 'prose' : ORDER_LINE;
+        return mapPart(line, roles, { owner: '', where: `order ${index + 1}`, change });
+      }),
+    ),
+    ...(pattern.materials ? { materials: list(pattern.materials, MATERIAL, named('material')) } : {}),
     assembly: list(pattern.assembly, PLACEMENT, (_, index) => `assembly ${index + 1}`),
   };
 }

@@ -1,4 +1,4 @@
-import { drawFolded } from '@/engine';
+import { drawFolded, orderOf } from '@/engine';
 import { esc } from '@/exports/escape';
 import { drawingSvg } from '@/exports/svg/drawing';
 import { sizesTogether } from '@/features/sizing/facts';
@@ -49,7 +49,7 @@ function ranges({ model, figures }: Example): string {
 
 /** The pattern's order of making, its figures on tabs. */
 function order({ model, figures }: Example): string {
-  const steps = model.pattern.order.map((sentence) =>
+  const steps = orderOf(model, figures).map((sentence) =>
     liveParts(sentence)
       .map((part) =>
         'formula' in part ? renderMeasure({ model, figures }, { formula: part.formula, bare: false }) : esc(part.text),

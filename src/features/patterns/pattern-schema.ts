@@ -186,7 +186,8 @@ export const patternSchema: z.ZodType<Pattern> = z.strictObject({
   pieces: list(piece),
   fits: list(fit),
   finished: z.strictObject({ inside: size, outside: size }),
-  order: list(words),
+  order: list(z.union([words, z.strictObject({ says: words, when: formula })])),
+  materials: list(z.strictObject({ name, formula, when })).optional(),
   turn: z.number().finite().optional(),
   assembly: list(
     z.strictObject({

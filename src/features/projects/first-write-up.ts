@@ -5,7 +5,9 @@ import { liveParts } from '@/writeup/live';
 /** The write-up that a new project begins with: materials and cut list, then the pattern's order of making, a step a sentence. */
 export function firstWriteUp(pattern: Pick<Pattern, 'pieces' | 'order'>): WriteUp {
   const shown = new Set<string>();
-  const steps = pattern.order.map((sentence): BlockNode => {
+  const steps = pattern.order.map((line): BlockNode => {
+    // Readers choose for themselves: what only some of them need is there for all, and says so.
+    const sentence = typeof line === 'string' ? line : line.says;
     const cards = pattern.pieces.filter((piece) => !shown.has(piece.name) && names(sentence, piece.name));
     cards.forEach((piece) => shown.add(piece.name));
     return {
@@ -28,7 +30,7 @@ export function firstWriteUp(pattern: Pick<Pattern, 'pieces' | 'order'>): WriteU
           content: [
             {
               type: 'bulletList',
-              content: stocks.map((stock) => ({ type: 'listItem', content: [line(capital(stock))] })),
+              content: stocks.map((stock) => ({ type: 'listItem', content: [paragraph(capital(stock))] })),
             },
           ],
         },
@@ -41,7 +43,7 @@ export function firstWriteUp(pattern: Pick<Pattern, 'pieces' | 'order'>): WriteU
   };
 }
 
-const line = (text: string): BlockNode => ({ type: 'paragraph', content: [{ type: 'text', text }] });
+const paragraph = (text: string): BlockNode => ({ type: 'paragraph', content: [{ type: 'text', text }] });
 const capital = (text: string): string => text.charAt(0).toUpperCase() + text.slice(1);
 const names = (sentence: string, piece: string): boolean =>
   new RegExp(`(?<![\\p{L}\\p{N}])${piece.replace(/[.*+?^${}()|[\]\\]/gu, '\\$&')}(?![\\p{L}\\p{N}])`, 'iu').test(
