@@ -130,7 +130,9 @@ function putFigure(element: HTMLElement, html: string): 0 | 1 {
 /** New words; the figures in them that differ from those in the same place before are marked and counted. */
 function putWords(element: HTMLElement, html: string): number {
   const before = [...element.querySelectorAll('.measure')].map((figure) => figure.textContent);
+  const unfolded = [...element.querySelectorAll('details')].map(({ open }) => open);
   element.innerHTML = html;
+  element.querySelectorAll('details').forEach((details, index) => (details.open = unfolded[index] ?? false));
   const after = [...element.querySelectorAll<HTMLElement>('.measure')];
   const changed = after.filter((figure, index) => figure.textContent !== before[index]);
   changed.forEach(mark);
