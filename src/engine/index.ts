@@ -26,6 +26,8 @@ export {
   largest,
   orderOf,
   sweep,
+  workExact,
+  workOut,
   type LiveMeasure,
   type Model,
   type Solved,

@@ -9,6 +9,7 @@ import {
   kindOf,
   nearestName,
   sayKind,
+  sameKind,
   type Formula,
   type Kind,
   type Scope,
@@ -17,19 +18,22 @@ import { SAYS } from '../pattern/messages';
 import { drawnNames, isFunctionName, isName, keyOf, reservedWordIn, sizeNames } from '../pattern/names';
 import type { Fault, MaterialDef, Pattern, PieceDef, Result } from '../types';
 import { compileShape } from './compile-shape';
-import type {
-  CompiledFit,
-  CompiledMaterial,
-  CompiledMeasure,
-  CompiledPiece,
-  CompiledTrack,
-  CompiledValue,
-  Model,
+import {
+  CARD_THICKNESS,
+  CUT_GRID,
+  formulasOf,
+  sizesOf,
+  sizeStep,
+  stepOf,
+  type CompiledFit,
+  type CompiledMaterial,
+  type CompiledMeasure,
+  type CompiledPiece,
+  type Model,
+  type Step,
 } from './model';
 
-/** One step of the reader's cut grid; nothing in the exact evaluation. Always there, for tolerances. */
-export const CUT_GRID = 'cut grid';
-const MOST = { measures: 200, choices: 20, pieces: 30, cells: 400, fits: 60 };
+const MOST = { measures: 300, choices: 20, pieces: 30, cells: 400, fits: 60 };
 
 /**
  * Checks a pattern and compiles its formulas. All faults are reported at once, each with its place and what to try; with any
@@ -49,6 +53,7 @@ interface Entry {
 class Compiler {
   private readonly faults: Fault[] = [];
   private readonly entries = new Map<string, Entry>();
+  private readonly readsOf = new Map<string, readonly number[]>();
 
   constructor(private readonly pattern: Pattern) {}
 
@@ -80,7 +85,7 @@ class Compiler {
     });
     const materials = (this.pattern.materials ?? []).flatMap((def) => this.material(def) ?? []);
     const placements = this.pattern.assembly.flatMap((def, index) => this.placement(def, index) ?? []);
-    const worked = this.order(measures, pieces);
+    const steps = this.order(measures, pieces);
     if (this.faults.length > 0) return { ok: false, faults: this.faults };
     return {
       ok: true,
@@ -88,7 +93,7 @@ class Compiler {
         pattern: this.pattern,
         scope: this.scope(true),
         slots: this.entries.size,
-        worked,
+        steps,
         measures,
         choices,
         pieces,
@@ -195,16 +200,24 @@ class Compiler {
       this.complain('neither', where, SAYS.neither());
       return undefined;
     }
-    const slot = this.entries.get(keyOf(def.name))?.slot ?? -1;
+    const key = keyOf(def.name);
+    const base = {
+      def,
+      key,
+      slot: this.entries.get(key)?.slot ?? -1,
+      kind,
+      says: def.kind ?? 'length',
+      rounds: def.rounds ?? (sameKind(kind, LENGTH) ? 'nearest' : 'exact'),
+    } as const;
     if (!def.ask) {
       const formula = this.formula(def.formula ?? '', kind, where, false);
-      return formula && { def, slot, kind, formula };
+      return formula && { ...base, formula };
     }
     const formula = this.formula(def.ask.usual, kind, `${where}, usual value`, false);
     const from = this.formula(def.ask.from, kind, `${where}, smallest`, false);
     const to = this.formula(def.ask.to, kind, `${where}, largest`, false);
     const when = this.optional(def.ask.when, TRUTH, `${where}, when`);
-    return formula && from && to && { def, slot, kind, formula, from, to, ...(when ? { when } : {}) };
+    return formula && from && to && { ...base, formula, from, to, ...(when ? { when } : {}) };
   }
 
   private piece(def: PieceDef): CompiledPiece | undefined {
@@ -218,7 +231,17 @@ class Compiler {
       complain: (code, place, says) => this.complain(code, place, says),
     });
     if (this.faults.length > before || !count) return undefined;
-    return { def, count, shape, drawn: this.drawn(def), ...(when ? { when } : {}) };
+    const reads = this.reads(def, [count, ...(when ? [when] : []), ...formulasOf(shape)]);
+    return { def, count, shape, reads, drawn: this.drawn(def), ...(when ? { when } : {}) };
+  }
+  /** Besides its own formulas a piece reads the grid and the card; a layer is made from the piece that it is glued to. */
+  private reads(def: PieceDef, formulas: readonly Formula[]): readonly number[] {
+    const names = new Set([CUT_GRID, CARD_THICKNESS, ...formulas.flatMap(({ uses }) => uses)]);
+    const own = [...names].flatMap((name) => this.entries.get(name)?.slot ?? []);
+    const host = def.builder === 'layer' ? (this.readsOf.get(keyOf(def.of)) ?? []) : [];
+    const reads = [...new Set([...own, ...host])];
+    this.readsOf.set(keyOf(def.name), reads);
+    return reads;
   }
   private drawn(def: PieceDef): CompiledPiece['drawn'] {
     return drawnNames(def).map(({ name, of }) => ({ slot: this.entries.get(name)?.slot ?? -1, of }));
@@ -266,11 +289,11 @@ class Compiler {
   // ── Order ──────────────────────────────────────────────────────────────────────────────────────────────────────────
 
   /** Measures and sizes in an order in which each needs only earlier ones; circles are reported as the chain of names. */
-  private order(measures: readonly CompiledMeasure[], pieces: readonly CompiledPiece[]): CompiledValue[] {
-    const values = new Map<string, { readonly value: CompiledValue; readonly needs: ReadonlySet<string> }>();
+  private order(measures: readonly CompiledMeasure[], pieces: readonly CompiledPiece[]): Step[] {
+    const values = new Map<string, { readonly step: Step; readonly needs: ReadonlySet<string> }>();
     for (const measure of measures) {
       values.set(keyOf(measure.def.name), {
-        value: { type: 'measure', slot: measure.slot, measure },
+        step: stepOf(measure),
         needs: new Set(measure.formula.uses),
       });
     }
@@ -279,11 +302,11 @@ class Compiler {
         const slot = this.entries.get(name)?.slot;
         if (slot === undefined || values.has(name)) continue;
         values.set(name, {
-          value: { type: 'size', slot, name, parts },
+          step: sizeStep(slot, parts),
           needs: new Set(parts.flatMap((part) => [...part.size.uses, ...(part.when?.uses ?? [])])),
         });
       }
-    const order: CompiledValue[] = [];
+    const order: Step[] = [];
     const state = new Map<string, 'open' | 'done'>();
     const visit = (name: string, chain: readonly string[]): void => {
       const entry = values.get(name);
@@ -296,22 +319,9 @@ class Compiler {
       state.set(name, 'open');
       for (const need of entry.needs) visit(need, [...chain, name]);
       state.set(name, 'done');
-      order.push(entry.value);
+      order.push(entry.step);
     };
     for (const name of values.keys()) visit(name, []);
     return order;
   }
-}
-
-/** What a grid's columns and rows add up to, by the names that formulas use. */
-function sizesOf(piece: CompiledPiece): { readonly name: string; readonly parts: readonly CompiledTrack[] }[] {
-  if (piece.shape.builder !== 'grid') return [];
-  const { columns, rows } = piece.shape;
-  const stem = keyOf(piece.def.name);
-  const tracks = [...columns, ...rows];
-  const single = [...new Set(tracks.map((track) => keyOf(track.name)))].map((name) => ({
-    name: `${stem}.${name}`,
-    parts: tracks.filter((track) => keyOf(track.name) === name),
-  }));
-  return [{ name: `${stem}.across`, parts: columns }, { name: `${stem}.along`, parts: rows }, ...single];
 }

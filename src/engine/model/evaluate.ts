@@ -1,23 +1,10 @@
-import { LENGTH, diagnose, kindName, sameKind, type Formula, type Values } from '../formula';
-import { GRIDS, decimal, atLeast, isZero, moreThan, roundTo, same, showValue, snap } from '../measure';
-import { perimeterOf } from '../net';
+import { LENGTH, diagnose, sameKind, type Formula } from '../formula';
+import { GRIDS, decimal, atLeast, moreThan, roundTo, same, showValue, snap } from '../measure';
 import { keyOf } from '../pattern/names';
-import { areaOfNet, fanSizes, figureMaker, makingOf } from '../piece';
-import type {
-  Figures,
-  FitFigure,
-  KindName,
-  MeasureFigure,
-  Net,
-  PieceFigure,
-  Sentence,
-  Sizing,
-  SizingProblem,
-  Unit,
-} from '../types';
-import { buildPiece } from './build';
+import type { Figures, FitFigure, MeasureFigure, Sizing, SizingProblem, Unit } from '../types';
 import { materialsOf } from './materials';
-import { formulasOf, tracksOf, type CompiledFit, type CompiledMeasure, type CompiledPiece, type Model } from './model';
+import { formulasOf, tracksOf, type CompiledFit, type CompiledMeasure, type Model } from './model';
+import { piecesOf } from './pieces';
 import { answerTo, isInUse, workOut, type BothValues } from './values';
 
 /** Values behind figures that were worked out, for live measures; figures made elsewhere have none. */
@@ -58,9 +45,16 @@ export function judge(model: Model, sizing: Sizing): { figures: Figures; values:
     const problem = valueProblem(model, measure, sizing, values);
     if (problem) problems.push(problem);
   }
-  const pieces = problems.some((problem) => problem.code === 'cannot be worked out')
-    ? []
-    : piecesOf(model, values, sizing, problems);
+  const { pieces, uncut } = problems.some((problem) => problem.code === 'cannot be worked out')
+    ? { pieces: [], uncut: [] }
+    : piecesOf(model, values, sizing);
+  for (const { piece, reason } of uncut)
+    problems.push({
+      code: 'piece fails',
+      measure: firstAskedOf(model, formulasOf(piece.shape)),
+      sentence: `The ${piece.def.name.toLowerCase()} cannot be cut at this size: ${reason}.`,
+      nearest: null,
+    });
   const fits =
     pieces.length === 0 ? [] : model.fits.flatMap((fit) => (isInUse(fit, values.cut) ? [fitFigure(fit, values)] : []));
   for (const fit of fits) {
@@ -97,25 +91,26 @@ export function judge(model: Model, sizing: Sizing): { figures: Figures; values:
 // ── Measures ─────────────────────────────────────────────────────────────────────────────────────────────────────────
 
 function measureFigure(measure: CompiledMeasure, sizing: Sizing, { exact, cut }: BothValues): MeasureFigure {
-  const answer = answerTo(measure, sizing);
-  const asked =
-    measure.from && measure.to
-      ? {
-          from: measure.from.work(exact),
-          to: measure.to.work(exact),
-          usual: measure.formula.work(exact),
-          set: answer !== undefined,
-        }
-      : {};
-  return {
-    name: measure.def.name,
-    kind: measure.def.kind ?? (kindName(measure.kind) as KindName),
-    asked: measure.def.ask !== undefined,
-    exact: snap(exact[measure.slot] as number),
-    cut: snap(cut[measure.slot] as number),
+  const { def, slot, says, from, to } = measure;
+  const asked = from !== undefined && to !== undefined;
+  const figure = {
+    name: def.name,
+    kind: says,
+    asked,
+    exact: snap(exact[slot] as number),
+    // Already snapped when it was rounded.
+    cut: cut[slot] as number,
     inUse: isInUse(measure, cut),
-    ...(measure.def.unit ? { unit: measure.def.unit } : {}),
-    ...asked,
+  };
+  const unit = def.unit ? { unit: def.unit } : null;
+  if (!asked) return unit ? { ...figure, ...unit } : figure;
+  return {
+    ...figure,
+    ...unit,
+    from: from.work(exact),
+    to: to.work(exact),
+    usual: measure.formula.work(exact),
+    set: answerTo(measure, sizing) !== undefined,
   };
 }
 
@@ -187,96 +182,12 @@ function askedBehind(model: Model, measure: CompiledMeasure): string | null {
   return null;
 }
 
-// ── Pieces ───────────────────────────────────────────────────────────────────────────────────────────────────────────
-
-function piecesOf(model: Model, { exact, cut }: BothValues, sizing: Sizing, problems: SizingProblem[]): PieceFigure[] {
-  const thickness = thicknessOf(model, cut);
-  const figure = figureMaker(GRIDS[sizing.grid].step, thickness);
-  const nets = new Map<string, Net>();
-  return model.pieces.flatMap((piece) => {
-    const count = Math.round(piece.count.work(cut));
-    if (!isInUse(piece, cut) || count < 1) return [];
-    const made = buildPiece(model, piece, cut, nets);
-    if (!made) return [];
-    const { grid, built, layer } = made;
-    if (!built.ok) {
-      problems.push({
-        code: 'piece fails',
-        measure: firstAskedOf(model, formulasOf(piece.shape)),
-        sentence: `The ${piece.def.name.toLowerCase()} cannot be cut at this size: ${built.reason}.`,
-        nearest: null,
-      });
-      return [];
-    }
-    const { net } = built;
-    nets.set(keyOf(piece.def.name), net);
-    const [area, perimeter] = [
-      areaOfNet(net),
-      perimeterOf(net.outline) + net.holes.reduce((sum, hole) => sum + perimeterOf(hole), 0),
-    ];
-    for (const { slot, of } of piece.drawn) {
-      const value = drawnValue(of, net, area, perimeter);
-      cut[slot] = value;
-      exact[slot] = value;
-    }
-    // Running positions are read from an edge of the blank: only a grid's scores lie square to it.
-    const scores = grid ? scoresOf(net) : { across: [], along: [] };
-    let words: readonly Sentence[] | undefined;
-    const fan = piece.def.builder === 'fan' ? fanSizes(net, piece.def) : null;
-    return [
-      {
-        name: piece.def.name,
-        count,
-        stock: piece.def.stock,
-        net,
-        across: net.across,
-        along: net.along,
-        scores,
-        ...(fan && fan.side.type === 'line' ? { fan: { side: fan.side, height: fan.height } } : {}),
-        ...(layer ? { layer } : {}),
-        thickness,
-        area,
-        perimeter,
-        // Worked out when first asked for: a sweep over a thousand sizings reads none.
-        get instructions() {
-          words ??= makingOf({ net, grid, def: piece.def, scores, figure, ...(layer ? { layer, count } : {}) });
-          return words;
-        },
-      },
-    ];
-  });
-}
-
 const firstAskedOf = (model: Model, formulas: readonly Formula[]): string =>
   model.measures.find(
     (measure) => measure.def.ask && formulas.some((formula) => formula.uses.includes(keyOf(measure.def.name))),
   )?.def.name ??
   model.measures[0]?.def.name ??
   '';
-
-function thicknessOf(model: Model, values: Values): number {
-  const value = model.scope.has('card thickness') ? (values[model.scope.slot('card thickness')] as number) : 0;
-  return Number.isFinite(value) ? value : 0;
-}
-
-function drawnValue(of: CompiledPiece['drawn'][number]['of'], net: Net, area: number, perimeter: number): number {
-  if (typeof of === 'object') return net.edges[of.edge] ?? NaN;
-  return { area, perimeter, across: net.across, along: net.along }[of];
-}
-
-/** Positions of straight score lines from the left and from the top edge, each once. */
-export function scoresOf(net: Net): PieceFigure['scores'] {
-  const upright: number[] = [];
-  const level: number[] = [];
-  for (const { curve, angle } of net.folds) {
-    if (curve.type !== 'line' || isZero(angle)) continue;
-    if (same(curve.from.x, curve.to.x)) upright.push(snap(curve.from.x));
-    else if (same(curve.from.y, curve.to.y)) level.push(snap(curve.from.y));
-  }
-  const sorted = (list: number[]) =>
-    list.sort((a, b) => a - b).filter((value, index, all) => index === 0 || !same(value, all[index - 1] as number));
-  return { across: sorted(upright), along: sorted(level) };
-}
 
 /**
  * The largest difference that cutting to the grid makes to any column or row; to any length that a piece without columns and

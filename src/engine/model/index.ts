@@ -4,4 +4,5 @@ export * from './live';
 export type * from './model';
 export * from './solve';
 export * from './sweep';
+export { workExact, workOut } from './values';
 export * from './order';

@@ -1,4 +1,5 @@
-import type { Formula, Kind, Scope } from '../formula';
+import { keyOf } from '../pattern/names';
+import type { Formula, Kind, Scope, Work } from '../formula';
 import type { Cell } from '../piece';
 import type {
   ChoiceDef,
@@ -10,8 +11,13 @@ import type {
   Pattern,
   PieceDef,
   Placement,
+  Rounding,
   Side,
 } from '../types';
+
+/** One step of the reader's cut grid; nothing in the exact evaluation. Always there, for tolerances. */
+export const CUT_GRID = 'cut grid';
+export const CARD_THICKNESS = 'card thickness';
 
 /** A pattern whose every formula is checked and compiled. Made by `compilePattern`, read by `evaluate`. */
 export interface Model {
@@ -19,8 +25,8 @@ export interface Model {
   /** Names of formulas that live in the text: measures and sizes, and what is known once pieces are drawn. */
   readonly scope: Scope;
   readonly slots: number;
-  /** In an order in which each needs only those before it. */
-  readonly worked: readonly CompiledValue[];
+  /** What is worked out, in an order in which each step needs only those before it. */
+  readonly steps: readonly Step[];
   readonly measures: readonly CompiledMeasure[];
   readonly choices: readonly CompiledChoice[];
   readonly pieces: readonly CompiledPiece[];
@@ -30,14 +36,22 @@ export interface Model {
   readonly materials: readonly CompiledMaterial[];
   readonly placements: readonly CompiledPlacement[];
 }
-/** Something with a slot: a measure, or the size of a piece's column or row. */
-export type CompiledValue =
-  | { readonly type: 'measure'; readonly slot: number; readonly measure: CompiledMeasure }
-  | { readonly type: 'size'; readonly slot: number; readonly name: string; readonly parts: readonly CompiledTrack[] };
+/** A measure, or the size of a piece's column or row; all of one shape, for they are run more often than anything else. */
+export interface Step {
+  readonly slot: number;
+  /** Where a reader's answer stands in a sizing; null for what is worked out. */
+  readonly asked: string | null;
+  readonly work: Work;
+  readonly rounds: Rounding;
+}
 export interface CompiledMeasure {
   readonly def: MeasureDef;
+  /** The name as formulas and sizings write it. */
+  readonly key: string;
   readonly slot: number;
   readonly kind: Kind;
+  readonly says: KindName;
+  readonly rounds: Rounding;
   /** The formula of a worked measure, the usual value of an asked one. */
   readonly formula: Formula;
   readonly from?: Formula;
@@ -174,12 +188,43 @@ export interface CompiledPiece extends Conditional {
   readonly def: PieceDef;
   readonly count: Formula;
   readonly shape: CompiledShape;
+  /** Slots of all that the piece is made from: at the same values it is the same piece. */
+  readonly reads: readonly number[];
   /** Slots of what is known once the piece is drawn. */
   readonly drawn: readonly {
     readonly slot: number;
     readonly of: 'area' | 'perimeter' | 'across' | 'along' | { readonly edge: string };
   }[];
 }
+/** What is rounded as soon as it is known; an asked measure is the reader's answer, or its usual value. */
+export const stepOf = ({ slot, key, def, formula, rounds }: CompiledMeasure): Step => ({
+  slot,
+  asked: def.ask ? key : null,
+  work: formula.work,
+  rounds,
+});
+/** A column or row that is not in use has no size. */
+export function sizeStep(slot: number, parts: readonly CompiledTrack[]): Step {
+  const work: Work = (values) => {
+    let sum = 0;
+    for (const { size, when } of parts) if (when === undefined || when.work(values) !== 0) sum += size.work(values);
+    return sum;
+  };
+  return { slot, asked: null, work, rounds: 'exact' };
+}
+/** What a grid's columns and rows add up to, by the names that formulas use. */
+export function sizesOf(piece: CompiledPiece): { readonly name: string; readonly parts: readonly CompiledTrack[] }[] {
+  if (piece.shape.builder !== 'grid') return [];
+  const { columns, rows } = piece.shape;
+  const stem = keyOf(piece.def.name);
+  const tracks = [...columns, ...rows];
+  const single = [...new Set(tracks.map((track) => keyOf(track.name)))].map((name) => ({
+    name: `${stem}.${name}`,
+    parts: tracks.filter((track) => keyOf(track.name) === name),
+  }));
+  return [{ name: `${stem}.across`, parts: columns }, { name: `${stem}.along`, parts: rows }, ...single];
+}
+
 /** Columns and rows, for pieces that have them. */
 export const tracksOf = ({ shape }: CompiledPiece): readonly CompiledTrack[] =>
   shape.builder === 'grid' ? [...shape.columns, ...shape.rows] : [];

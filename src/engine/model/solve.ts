@@ -3,7 +3,7 @@ import { keyOf } from '../pattern/names';
 import type { Sizing } from '../types';
 import { judge } from './evaluate';
 import type { CompiledMeasure, Model } from './model';
-import { workOut } from './values';
+import { workExact } from './values';
 
 /** An answer to "make it so that …", or why there is none. */
 export type Solved = { readonly ok: true; readonly sizing: Sizing } | { readonly ok: false; readonly reason: string };
@@ -47,7 +47,7 @@ export function largest(model: Model, base: Sizing, fits: (sizing: Sizing) => bo
   const inside = insideMeasures(model);
   if (inside.length === 0)
     return { ok: false, reason: 'the inside of this box is not asked for directly, so it cannot be grown' };
-  const { exact } = workOut(model, base);
+  const exact = workExact(model, base);
   const { step } = GRIDS[base.grid];
   const now = inside.map((measure) => exact[measure.slot] as number);
   const at = (growth: number): Sizing => ({

@@ -202,36 +202,33 @@ export function join(tree: Tree, node: number, code: number, blanks: Blanks): vo
   if (tree.nodes + 4 > tree.leaf.length) grow(tree);
   const { nodes, leaf, span, axis } = tree;
   tree.area += blanks.area[code >> 1] as number;
-  const write = (at: number, what: number, wide: number) => {
-    leaf[at] = what;
-    span[at] = wide;
-  };
-  if (nodes === 0) {
-    tree.nodes = 1;
-    write(0, code, 1);
-  } else if (node === nodes) {
-    const way = axis[node] as number;
-    open(tree, 0, 2);
-    write(0, -1, nodes + 2);
-    axis[0] = way;
-    write(1, code, 1);
+  let at = node;
+  if (nodes === 0) tree.nodes = 1;
+  else if (node < nodes && (leaf[node] as number) < 0) {
+    widenAbove(tree, node, 1);
+    at = node + 1;
+    open(tree, at, 1);
+    span[node] = (span[node] as number) + 1;
   } else {
-    const inner = (leaf[node] as number) < 0;
-    for (let above = 0; above < node; above += 1)
-      if (above + (span[above] as number) > node) span[above] = (span[above] as number) + (inner ? 1 : 2);
-    if (inner) {
-      open(tree, node + 1, 1);
-      span[node] = (span[node] as number) + 1;
-      write(node + 1, code, 1);
-    } else {
-      const way = axis[node] as number;
-      open(tree, node, 2);
-      write(node, -1, 3);
-      axis[node] = way;
-      write(node + 1, code, 1);
-    }
+    // A new inner node takes the place of this one, and holds it beside the blank.
+    const held = node === nodes ? 0 : node;
+    const way = axis[node] as number;
+    widenAbove(tree, held, 2);
+    const under = span[held] as number;
+    open(tree, held, 2);
+    leaf[held] = -1;
+    span[held] = under + 2;
+    axis[held] = way;
+    at = held + 1;
   }
+  leaf[at] = code;
+  span[at] = 1;
   measureTree(tree, blanks);
+}
+/** Lets every node that holds this one hold so many more. */
+function widenAbove({ span }: Tree, node: number, by: number): void {
+  for (let above = 0; above < node; above += 1)
+    if (above + (span[above] as number) > node) span[above] = (span[above] as number) + by;
 }
 
 /** Takes a node and all under it away; blanks go to `out`. The tree must be measured again before it is read. */
@@ -261,8 +258,7 @@ export function take(tree: Tree, node: number, blanks: Blanks, out: number[]): v
   // A node that holds one node only is that node; set as the node above sets its own, it melts into it.
   if ((span[parent + 1] as number) + 1 !== span[parent]) return;
   const melts = over >= 0 && (leaf[parent + 1] as number) < 0 ? 2 : 1;
-  for (let above = 0; above < parent; above += 1)
-    if (above + (span[above] as number) > parent) span[above] = (span[above] as number) - melts;
+  widenAbove(tree, parent, -melts);
   open(tree, parent + melts, -melts);
 }
 
