@@ -1,6 +1,7 @@
 /**
  * The measurement sheet on the command line:
  *   npm run --silent sheet -- book-box --set 'inside depth=2 in' --choose spine=curved --units in --grid 1/16in --format json
+ *   npm run --silent sheet -- book-box --format pdf --paper a4 --out sheet.pdf
  *   npm run --silent sheet -- --list [--format json]
  * Exit code 0; 1 when the sizing is out of range or a fit fails (the sheet is printed all the same); 2 for a bad argument.
  */
@@ -15,6 +16,7 @@ import {
   explain,
   keyOf,
   nearestName,
+  planSheets,
   readValue,
   stockOf,
   usualSizing,
@@ -24,12 +26,16 @@ import {
   type Unit,
 } from '@/engine';
 import { figuresJson } from '@/exports/json/figures-json';
+import type { PaperId } from '@/exports/paper';
+import { measurementPdf } from '@/exports/pdf/measurement-sheet.server';
 import { measurementText } from '@/exports/text/measurement-text';
+import { patternSheet } from '@/features/editions/paper/sheet-content';
 import { PatternFileError } from '@/features/patterns/load-pattern';
 import { getPatternModel, listPatterns } from '@/features/patterns/patterns.server';
 
 class BadArgument extends Error {}
-const FORMATS = ['text', 'json'] as const;
+const FORMATS = ['text', 'json', 'pdf'] as const;
+const PAPERS: readonly PaperId[] = ['a4', 'letter'];
 
 const oneOf = <T extends string>(what: string, typed: string, allowed: readonly T[]): T => {
   const found = allowed.find((one) => one === typed.toLowerCase().replace(/\s+/g, ''));
@@ -49,6 +55,7 @@ function readArguments() {
         stock: { type: 'string', default: '12x12in' },
         copies: { type: 'string', default: '1' },
         format: { type: 'string', default: 'text' },
+        paper: { type: 'string' },
         out: { type: 'string' },
         list: { type: 'boolean', default: false },
       },
@@ -110,19 +117,19 @@ function readSizing(model: Model, values: ReturnType<typeof readArguments>['valu
   return { ...sizing, values: set, choices: chosen };
 }
 
-function put(text: string, out: string | undefined): void {
+function put(content: string | Uint8Array, out: string | undefined): void {
   if (out === undefined) {
-    process.stdout.write(text);
+    process.stdout.write(content);
     return;
   }
   try {
-    writeFileSync(out, text);
+    writeFileSync(out, content);
   } catch (error) {
     throw new BadArgument(`“${out}” cannot be written: ${error instanceof Error ? error.message : String(error)}.`);
   }
 }
 
-function run(): number {
+async function run(): Promise<number> {
   const { values, positionals } = readArguments();
   const format = oneOf('The format', values.format, FORMATS);
   const patterns = listPatterns();
@@ -156,17 +163,20 @@ function run(): number {
   if (!Number.isInteger(copies) || copies < 1 || copies > 500)
     throw new BadArgument(`--copies “${values.copies}” is not a whole number from 1 to 500.`);
   const figures = evaluate(model, readSizing(model, values));
-  put(
-    format === 'json'
+  const paper = oneOf('The paper', values.paper ?? (values.units === 'in' ? 'letter' : 'a4'), PAPERS);
+  const written = (as: (typeof FORMATS)[number]): string | Promise<Uint8Array> => {
+    if (as === 'pdf')
+      return measurementPdf(patternSheet({ model, figures, plan: planSheets(figures, { stock, copies }) }), paper);
+    return as === 'json'
       ? `${JSON.stringify(figuresJson(model, figures, { stock, copies }), null, 2)}\n`
-      : measurementText(model, figures, { stock, copies }),
-    values.out,
-  );
+      : measurementText(model, figures, { stock, copies });
+  };
+  put(await written(format), values.out);
   return figures.problems.length > 0 ? 1 : 0;
 }
 
 try {
-  process.exitCode = run();
+  process.exitCode = await run();
 } catch (error) {
   if (!(error instanceof BadArgument) && !(error instanceof PatternFileError)) throw error;
   process.stderr.write(`${error.message}\n`);

@@ -3,7 +3,7 @@ import { createRequire } from 'node:module';
 import sharp from 'sharp';
 import { describe, expect, it } from 'vitest';
 import { renderPicture } from '@/features/pictures/render-picture.server';
-import { woffToTtf } from '@/features/pictures/woff-to-ttf.server';
+import { woffToTtf } from '@/exports/woff-to-ttf.server';
 
 const woff = readFileSync(
   createRequire(import.meta.url).resolve('@fontsource/figtree/files/figtree-latin-600-normal.woff'),

@@ -45,7 +45,8 @@ export function openDocument({ paper, title, author, subject, date }: DocumentOp
     bufferPages: true,
     tagged: true,
     pdfVersion: '1.7',
-    subset: 'PDF/UA',
+    // Newer than the library's types.
+    subset: 'PDF/UA' as 'PDF/A-1',
     lang: 'en-GB',
     displayTitle: true,
     info: {

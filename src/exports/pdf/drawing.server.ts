@@ -11,7 +11,9 @@ export const UNIT = 0.6;
 const LINE_WEIGHT = 0.8;
 /** Between the lines of a glue area, in drawing units. */
 const HATCH = 5;
-const DISC = 8.5;
+const DISC = 7.5;
+/** The border of a sheet's drawing: numbers of cuts that begin at the sheet's edge stand in it, the others on their line. */
+export const SHEET_BORDER = 24;
 
 export interface Pen {
   readonly doc: Doc;
@@ -30,7 +32,8 @@ export function placeDrawing(
   tagged(doc, parent, 'Figure', () => draw({ doc, type }, drawing, { x, y, scale }), { alt: drawing.alt, bbox: box });
 }
 
-function draw(pen: Pen, drawing: Drawing, { x, y, scale }: { x: number; y: number; scale: number }): void {
+/** The same without a place in the structure. */
+export function draw(pen: Pen, drawing: Drawing, { x, y, scale }: { x: number; y: number; scale: number }): void {
   const { doc } = pen;
   doc.save().translate(x, y).scale(scale);
   hatch(doc, drawing);
@@ -45,7 +48,7 @@ function draw(pen: Pen, drawing: Drawing, { x, y, scale }: { x: number; y: numbe
 }
 
 /** A path in the current scale, painted as the table of looks says. */
-export function paint(doc: Doc, path: string, { fill, stroke, strokeWidth = 1, strokeOpacity = 1, dash }: Paint): void {
+function paint(doc: Doc, path: string, { fill, stroke, strokeWidth = 1, strokeOpacity = 1, dash }: Paint): void {
   doc.path(path);
   if (stroke === undefined) {
     if (fill !== undefined) doc.fill(fill);
@@ -87,8 +90,12 @@ function letter(
     colour: fill ?? PRINT_THEME.ink,
   };
   if (shape.of === 'cut number') {
-    const middle = shape.anchor === 'middle' ? x : x - DISC * scale;
-    disc({ doc, type }, shape.text, { x: middle, y: y - 4.5 * scale, radius: DISC * scale });
+    const downwards = shape.anchor === 'middle';
+    const outside = (downwards ? shape.y : shape.x) < SHEET_BORDER;
+    const shift = outside
+      ? { x: downwards ? 0 : -DISC, y: downwards ? -DISC + 1 : -4.5 }
+      : { x: downwards ? 0 : 5, y: downwards ? 5 : -4.5 };
+    disc({ doc, type }, shape.text, { x: x + shift.x * scale, y: y + shift.y * scale, radius: DISC * scale });
     return;
   }
   const place = { x, baseline: y, anchor: shape.anchor };

@@ -22,6 +22,8 @@ interface Stretch {
 interface Word {
   readonly stretches: readonly Stretch[];
   readonly width: number;
+  /** Only a part of a word, the rest of which goes on. */
+  readonly broken?: boolean;
 }
 export interface Line {
   readonly stretches: readonly Stretch[];
@@ -69,7 +71,7 @@ export class Typesetter {
         used = after;
       }
     }
-    return lines.map((line, index) => this.#joined(line, type, index < lines.length - 1));
+    return lines.map((line, index) => this.#joined(line, type, index < lines.length - 1 && !line.at(-1)?.broken));
   }
 
   /** Draws a line with its letters standing on `baseline`, from `x` to the right or up to it (`end`) or round it (`middle`). */
@@ -173,7 +175,10 @@ export class Typesetter {
         used += one.width;
       }
     }
-    return parts.map((stretches) => asWord(stretches.reduce<Stretch[]>((all, one) => this.#append(all, one), [])));
+    return parts.map((stretches, index) => ({
+      ...asWord(stretches.reduce<Stretch[]>((all, one) => this.#append(all, one), [])),
+      broken: index < parts.length - 1,
+    }));
   }
 
   /** Words with spaces between them, neighbours of one look in one stretch; `more` leaves a space before the next line. */

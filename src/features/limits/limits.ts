@@ -13,6 +13,8 @@ export const LIMITS = {
   'use-link': { byIp: { tries: 60, seconds: HOUR }, byEmail: { tries: 20, seconds: HOUR } },
   'sign-up': { byIp: { tries: 20, seconds: HOUR }, byEmail: { tries: 4, seconds: HOUR } },
   subscribe: { byIp: { tries: 30, seconds: HOUR }, byEmail: { tries: 4, seconds: HOUR } },
+  /** PDFs that have to be made; those made before do not count. */
+  paper: { byIp: { tries: 300, seconds: 10 * MINUTE }, byEmail: { tries: 300, seconds: 10 * MINUTE } },
 } as const;
 
 export type LimitName = keyof typeof LIMITS;

@@ -3,7 +3,7 @@ import { createRequire } from 'node:module';
 import { join } from 'node:path';
 import { renderAsync } from '@resvg/resvg-js';
 import { config } from '@/config.server';
-import { underFirstName, woffToTtf } from './woff-to-ttf.server';
+import { underFirstName, woffToTtf } from '@/exports/woff-to-ttf.server';
 
 const WEIGHTS = [500, 600, 800] as const;
 const { resolve } = createRequire(join(config.root, 'package.json'));
