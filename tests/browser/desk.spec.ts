@@ -97,6 +97,51 @@ test('a size typed at the desk changes the drawing, is undone with Ctrl Z, and a
   await expect(blank).toContainText('11\u202f1\u20442 × 8\u202f1\u20442');
 });
 
+test('a measure that is renamed takes formulas, fits, pieces and the text along, and one undo brings all back', async ({
+  page,
+  id,
+}) => {
+  await page.setViewportSize({ width: 1440, height: 1000 });
+  await openDesk(page, id);
+  const live = (formula: string) => page.locator(`.ProseMirror .measure[title^="${formula}."]`);
+  const stored = async () => {
+    const project = (await (await page.request.get(`/api/projects/${id}`)).json()) as { state: object };
+    return JSON.stringify(project.state);
+  };
+  const name = (called: string) => page.getByRole('button', { name: called, exact: true });
+  await name('inside height').focus();
+  await page.keyboard.press('F2');
+  const field = page.getByLabel('New name for inside height');
+  await expect(field).toBeFocused();
+
+  await field.fill('Inside  Width');
+  await field.press('Enter');
+  await expect(page.locator('.measure-naming [role=alert]')).toHaveText(
+    'There is a measure called “inside width” already. Choose another, or rename that one first.',
+  );
+  await expect(field).toHaveAttribute('aria-invalid', 'true');
+  await field.press('Escape');
+  await expect(name('inside height')).toBeFocused();
+
+  await page.keyboard.press('F2');
+  await field.fill('wall height');
+  await field.press('Enter');
+  await expect(name('wall height')).toBeFocused();
+  // Two measures, two columns, two rows and a finished size; the fit names it as the measure to change.
+  await expect(page.locator('.measure-naming')).toContainText('Renamed in 7 formulas, 1 fit and 1 step.');
+  await expect(page.getByLabel('Formula of outside height')).toHaveValue('wall height + card thickness');
+  await expect(page.getByLabel('Size of row near side')).toHaveValue('wall height');
+  await expect(live('wall height')).toHaveCount(1);
+  await revision(page, 2);
+  expect(await stored()).not.toContain('inside height');
+
+  await page.locator('.measure-naming').getByRole('button', { name: 'Undo' }).click();
+  await expect(name('inside height')).toBeVisible();
+  await expect(live('inside height')).toHaveCount(1);
+  await revision(page, 3);
+  expect(await stored()).not.toContain('wall height');
+});
+
 test('another tab’s save is never overwritten, and both versions are kept whichever is chosen', async ({
   context,
   page: first,
