@@ -37,6 +37,8 @@ const PLACES: readonly Place[] = [
   { name: 'its measurement sheet', path: `${BOOK_BOX}/sheet`, main: true },
   { name: 'the handbook', path: '/handbook' },
   { name: 'a guide', path: '/handbook/reading-a-measurement-sheet', main: true },
+  { name: 'a box in the handbook', path: '/handbook/boxes/book-box', main: true },
+  { name: 'a box with one piece, refused', path: '/handbook/boxes/tray?inside-length=40in' },
   { name: 'subscribe', path: '/subscribe' },
   { name: 'sign-in', path: '/sign-in' },
   { name: 'sign-up', path: '/sign-up' },

@@ -224,4 +224,12 @@ describe('what readers find', () => {
       'Jar sleeve',
     ]);
   });
+
+  test('the projects of one pattern are found by its slug, whatever they are called', () => {
+    publish(addProject(author, { title: 'Tray for lists' }));
+    publish(addProject(author, { title: 'Jar sleeve', pattern: { ...FOLDER, slug: 'sleeve' } }));
+    expect(listPublished({ pattern: 'sleeve', limit: 10 }).map(({ title }) => title)).toEqual(['Jar sleeve']);
+    expect(countPublished({ pattern: 'folder' })).toBe(1);
+    expect(listPublished({ pattern: 'no-such-pattern', limit: 10 })).toEqual([]);
+  });
 });

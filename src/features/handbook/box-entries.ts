@@ -6,8 +6,6 @@ export interface BoxGroup {
   readonly boxes: readonly ShelfPattern[];
 }
 
-export const boxHref = (slug: string): string => `/handbook/boxes/${slug}`;
-
 /** The patterns that have an entry, by kind and then by name, both in the order of the alphabet. */
 export function groupBoxes(
   patterns: readonly ShelfPattern[],

@@ -2,6 +2,7 @@ import { useEffect, useRef, useState } from 'react';
 import { Dialog } from '@/components/Dialog';
 import { Field } from '@/components/Field';
 import { TITLE_LIMIT } from '@/features/projects/project';
+import { boxHref } from '@/features/handbook/box-href';
 import { call } from '../desk/project-api';
 
 /** What the shelf shows of a pattern; drawn on the server. */
@@ -35,6 +36,7 @@ export function NewProject({ patterns, open, chosen, onClose }: NewProjectProps)
     titleField.current?.focus();
   }, [open, chosen, patterns]);
 
+  const selected = patterns.find((pattern) => pattern.slug === slug);
   const make = async () => {
     if (title.trim() === '') return setError('Give the project a title. It can be changed later.');
     setBusy(true);
@@ -90,6 +92,14 @@ export function NewProject({ patterns, open, chosen, onClose }: NewProjectProps)
             ))}
           </div>
         </fieldset>
+        {selected ? (
+          <p className="small">
+            <a href={boxHref(selected.slug)} target="_blank" rel="noopener">
+              How it works: {selected.name}
+            </a>{' '}
+            <span className="soft">(opens beside this page)</span>
+          </p>
+        ) : null}
         <p className="new-deeds">
           <button type="submit" className="tab-button" disabled={busy || slug === null}>
             {busy ? 'Making it…' : 'Make the project'}

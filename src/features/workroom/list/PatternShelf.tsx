@@ -1,3 +1,4 @@
+import { boxHref } from '@/features/handbook/box-href';
 import type { ShelfPattern } from './NewProject';
 
 /** Every pattern, folded, standing on a ruled shelf. */
@@ -27,6 +28,9 @@ export function PatternShelf({
               <b>{pattern.name}</b>
               <span className="small soft">{pattern.asks}</span>
             </button>
+            <a href={boxHref(pattern.slug)}>
+              How it works<span className="visually-hidden">: {pattern.name}</span>
+            </a>
           </li>
         ))}
       </ul>
