@@ -4,9 +4,9 @@ import { drawingSvg } from '@/exports/svg/drawing';
 import { sizesTogether } from '@/features/sizing/facts';
 import { panelFor } from '@/features/sizing/panel';
 import { liveParts } from '@/writeup/live';
-import { renderMeasure, renderPieceCard } from '@/writeup/render-figures';
+import { renderMeasure } from '@/writeup/render-figures';
 import type { Example } from './example';
-import { closesHtml } from './example-html';
+import { closesHtml, pieceSvg, wordsHtml } from './example-html';
 
 /** Whole parts of a page about one box, which follow its size and its choices; HTML for the server and the browser alike. */
 const PARTS = { folded, pieces, ranges, order } as const;
@@ -30,10 +30,19 @@ function folded(example: Example): string {
 /** Width in pixels of a drawing where cards stand side by side. */
 const BESIDE = 300;
 
-/** Every piece that the box has with these choices: its card with drawing and making instructions. */
-function pieces({ figures }: Example): string {
-  const width = figures.pieces.length > 1 ? BESIDE : undefined;
-  return `<div class="piece-cards">${figures.pieces.map(({ name }) => renderPieceCard(figures, name, width)).join('')}</div>`;
+/** Every piece that the box has with these choices, drawn; how to cut and score it can be unfolded. */
+function pieces(example: Example): string {
+  const { pieces } = example.figures;
+  const widths = { wide: pieces.length > 1 ? BESIDE : 620, narrow: BESIDE };
+  const cards = pieces.map(
+    ({ name, count, stock }) =>
+      `<div class="piece-card" role="group" aria-label="${esc(name)}">` +
+      '<div class="ruled" aria-hidden="true"></div>' +
+      `<p class="piece-card-head"><b>${esc(name)}</b> <span>cut ${count} · ${esc(stock)}</span></p>` +
+      `<div class="piece-card-drawing">${pieceSvg(example, name, widths)}</div>` +
+      `<details class="piece-card-words"><summary>Cut and score it, in words</summary><p>${wordsHtml(example, name)}</p></details></div>`,
+  );
+  return `<div class="piece-cards">${cards.join('')}</div>`;
 }
 
 /** Each asked measure, and how far it may go while the others stay. */
