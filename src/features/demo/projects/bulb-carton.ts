@@ -75,7 +75,10 @@ export const bulbCarton: DemoProject = {
             'Cut the blank and mark the columns',
             'Cut one piece, [[carton.across|bare]] × [[carton.along]], the grain running along the side that measures [[carton.along]], up the walls. Lay it with the inside up.',
             'Measure from the **left** edge, every time from the same end, and rule faint lines from top to bottom at [[tab]], [[tab + width]], [[tab + width + depth]] and [[tab + 2 * width + depth]]. That makes a tab, the front, a side, the back and the other side. Score the last line on the far side of your pencil mark: the back is a card’s thickness wider than the front, because the tab lies under it.',
-            piece('Carton'),
+            show(
+              'flat',
+              'The whole carton, from the inside. Dash-dot lines fold away from you: the gables, and the strip along the ridge. The walls are [[height]] tall, the roof [[slope]] along the slope.',
+            ),
           ),
           step(
             'Mark the rows',
@@ -106,10 +109,8 @@ export const bulbCarton: DemoProject = {
           step(
             'Score everything, then cut out',
             'Score every line that you have ruled. Then cut round the outside, and slit between the flaps up to the foot of the walls. Erase the pencil now; inside a glued carton you will not get at it.',
-            show(
-              'flat',
-              'The whole carton, from the inside. Dash-dot lines fold away from you: the gables, and the strip along the ridge. The walls are [[height]] tall, the roof [[slope]] along the slope.',
-            ),
+            'If you would rather work from figures, every corner and every fold stands below, measured from the left and the top edge. It is long, and the full-size template is shorter: it says the same without a word.',
+            piece('Carton'),
           ),
           step(
             'A window | if you chose one',

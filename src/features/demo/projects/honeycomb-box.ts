@@ -72,7 +72,7 @@ export const honeycombBox: DemoProject = {
             'The figures are for card [[card thickness]] thick.',
             'White glue, a scrap to spread it with, and a few clothes pegs with narrow noses.',
             'Trimmer, or knife, metal ruler and mat; scissors; a ruler and a blunt point to score with; bone folder.',
-            'Pencil, set square, and a compass that opens to [[lid across flats / cos(180° / sides) / 2]].',
+            'Pencil, set square, and a compass that opens to a little over [[lid across flats / cos(180° / sides) / 2]].',
           ),
           caution(
             'Use knife and trimmer as their makers say: guards on, fingers behind the ruler’s edge, the blade put away between cuts. Let children draw, score and glue, and cut only with somebody beside them.',
@@ -81,9 +81,9 @@ export const honeycombBox: DemoProject = {
           heading('Draw and cut'),
           step(
             'A circle, and the floor in it',
-            'Trim the card to [[base.across|bare]] × [[base.along]]. Find the floor’s middle on the drawing, prick it lightly, and draw a circle of [[across corners / 2]] radius about it.',
+            'Trim the card to [[base.across|bare]] × [[base.along]]. The drawing in the next step says where the floor’s middle lies and what circle to draw about it. Take that radius to the hair: a compass is not bound to the marks of your trimmer.',
             'On the circle, mark a corner every [[360° / sides]] and join the marks. For six sides you need no protractor: leave the compass as it is and step it round.',
-            'Now measure two things. Every side should be [[side]], and from a side to what lies opposite should be [[ruler across]]. If the last side comes out short, the compass slipped; rub it all out. A box with one short wall never closes.',
+            'Now measure two things. All sides should be alike, and from a side to what lies opposite should be [[ruler across]]. If the last side comes out short, the compass slipped; rub it all out. A box with one short wall never closes.',
             tip(
               'The full-size template saves this step and the next. Lay it on the card, prick every corner through with a pin, and join the pricks.',
             ),
@@ -99,7 +99,7 @@ export const honeycombBox: DemoProject = {
             'Score the sides of the floor and the folds of the tabs while there is still a whole sheet to hold on to. Then cut out the star. Between two walls the card falls away as a wedge; stop exactly in the corner of the floor.',
             show(
               'flat',
-              'Base and lid, flat. Each wall of the base is [[side|bare]] × [[inside height]], and each tab [[tab width]] wide.',
+              'Base and lid, flat. The walls of the base are [[inside height]] tall, those of the lid [[lid height]]; every tab of the base is [[tab width]] wide.',
             ),
           ),
           heading('Put it together'),
@@ -125,7 +125,7 @@ export const honeycombBox: DemoProject = {
           ),
           step(
             'The lid, by the same road',
-            'A lid is a base that is a little wider and lower. Trim it to [[lid.across|bare]] × [[lid.along]], draw a circle of [[lid across flats / cos(180° / sides) / 2]] radius, and mark the corners as before. Its sides are [[lid side]] and its walls [[lid height]] tall; the tabs are [[lid tab width]] wide.',
+            'A lid is a base that is a little wider and lower. Trim it to [[lid.across|bare]] × [[lid.along]], draw the circle that stands beside the drawing, and mark the corners as before. From side to side it is [[lid across flats]] if the sides are even in number; its walls are [[lid height]] tall, and the tabs are [[lid tab width]] wide.',
             piece('Lid'),
             'The two look alike on the bench, and the difference is [[lid side - side]] a side. Write “lid” on it in pencil, inside.',
           ),
@@ -146,7 +146,7 @@ export const honeycombBox: DemoProject = {
           ),
           step(
             'A label on the lid | optional',
-            'Draw the floor once more on paper, with a circle [[1/4 in]] smaller in radius, and cut it out: [[across corners / 2 - 1/4 in]] from the middle to a corner. Glued on the lid it leaves an even border. Write what is in the mix, and the year.',
+            'Draw the floor once more on paper, with a circle [[1/4 in]] smaller in radius, and cut it out: [[inside across flats / cos(180° / sides) / 2 - 1/4 in]] from the middle to a corner. Glued on the lid it leaves an even border. Write what is in the mix, and the year.',
             caution(
               'Seed mixes are not food, and some are treated. Keep the box out of the reach of small children and of pets, and copy what the packet says on to the label.',
             ),

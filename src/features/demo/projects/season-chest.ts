@@ -13,7 +13,7 @@ const oneDrawer = (pattern: Pattern): Pattern => ({
 /** The whole write-up. Edition 1 gave the shelves legs without play; `legs` is the measure that it names. */
 const write = (show: ShowPicture, { legs, check }: { readonly legs: string; readonly check: string }): WriteUp =>
   writeUp(
-    'One drawer for each season’s sowing, and the packets move down a drawer when their time has come. It is six small jobs, none of them hard, and it forgives nothing: every drawer has to go into every place. So we make the drawers first, and let them tell us how large the chest must be.',
+    'One drawer for each season’s sowing, and when a season is over its packets go back to the top. None of the work is hard, and the chest forgives nothing: every drawer has to go into every place. So we make the drawers first, and let them tell us how large the chest must be.',
     'Ours has [[drawers]] drawers, each [[inside width]] wide, [[inside length]] from front to back and [[inside height]] tall inside. The chest around them is [[outside width]] wide, [[outside height]] tall and [[outside depth]] deep. Set your own beside this text, and look at the sheet plan before you buy card.',
     materials(
       '**Card for the drawers**, about 220 g/m² (80 lb cover): [[drawers * drawer.area]].',

@@ -87,7 +87,7 @@ export const twineDrum: DemoProject = {
           ),
           step(
             'Cut the teeth',
-            'There are [[teeth]] of them, each [[circumference / teeth]] wide at the score. Walk a pair of dividers along the line, or a strip of squared paper. If you come out a hair wrong at the end, share it among the last few.',
+            'There are [[teeth]] of them, and the notes beside the drawing say how wide one is at the score. Set a pair of dividers to that and walk along the line. If you come out with one more or one fewer, nobody will count them; they only have to be alike.',
             'Between each two, cut a narrow V from the edge up to the score and not through it. Without the V the teeth would lie on each other once they are turned in, and the bottom would sit on a hill.',
             show(
               'parts',
@@ -99,7 +99,8 @@ export const twineDrum: DemoProject = {
           ),
           step(
             'Cut two discs',
-            'Set the compass to [[bottom diameter / 2]] for the bottom, which drops inside, and to [[outer bottom diameter / 2]] for the outer bottom, which hides the teeth. The difference is the wall. A bit of tape under the point keeps it from making a hole.',
+            'The bottom drops inside and is [[bottom diameter]] across; the outer bottom hides the teeth and is [[outer bottom diameter]] across. The difference is the wall.',
+            'A compass wants half of that. Do not work it out: mark the width along the edge of a strip of paper, fold mark on mark, and open the compass from the fold to a mark. A bit of tape under its point keeps it from making a hole.',
             piece('Bottom'),
             piece('Outer bottom'),
           ),
@@ -134,7 +135,7 @@ export const twineDrum: DemoProject = {
           ),
           step(
             'Two more discs, and the hole',
-            'The lining drops inside the lid, the top lies over its teeth. Set the compass to [[lid lining diameter / 2]] and to [[top diameter / 2]].',
+            'The lining drops inside the lid, the top lies over its teeth. The lining is [[lid lining diameter]] across and the top [[top diameter]]; set the compass with the strip of paper, as before.',
             piece('Lid lining'),
             piece('Top'),
             'Punch a hole for the twine through the middle of both **now**, while they are flat. Twice as wide as the twine is about right.',
@@ -146,7 +147,7 @@ export const twineDrum: DemoProject = {
             'Roll the lid round the drum',
             ordered(
               'Wrap the drum once in thin paper. That is the air.',
-              'Roll the lid’s strip as you rolled the first, put it round the paper with its teeth up, flush with the rim, and its seam **opposite** the drum’s. Two seams over one another make a bump that no play allows for.',
+              'Roll the lid’s strip as you rolled the first, put it round the paper with its teeth up, its score level with the rim, and its seam **opposite** the drum’s. Two seams over one another make a bump that no play allows for.',
               'Glue the seam, peg it, let it dry, and slide the ring off.',
               'Turn the teeth in. Glue the lining to them from inside and the top over them from outside, hole over hole.',
             ),
