@@ -14,6 +14,8 @@ import { chosenOption } from './sizing-values';
 export interface PanelField {
   readonly name: string;
   readonly question: string;
+  /** A sentence that helps to answer it. */
+  readonly note?: string;
   readonly kind: MeasureFigure['kind'];
   /** What stands in the field: the value without its unit, as it can be typed back. */
   readonly text: string;
@@ -50,8 +52,8 @@ export function panelFor(model: Model, figures: Figures): Panel {
   const { sizing } = figures;
   return {
     fields: figures.measures.flatMap((measure) => {
-      const ask = model.pattern.measures.find(({ name }) => name === measure.name)?.ask;
-      return ask && measure.asked ? [fieldFor(measure, ask, sizing)] : [];
+      const def = model.pattern.measures.find(({ name }) => name === measure.name);
+      return def?.ask && measure.asked ? [fieldFor(measure, { ...def.ask, note: def.note }, sizing)] : [];
     }),
     choices: model.pattern.choices.map((choice) => ({
       name: choice.name,
@@ -68,7 +70,7 @@ export function panelFor(model: Model, figures: Figures): Panel {
 
 function fieldFor(
   measure: MeasureFigure,
-  ask: { readonly question: string; readonly finer?: boolean },
+  ask: { readonly question: string; readonly finer?: boolean; readonly note?: string | undefined },
   sizing: Sizing,
 ): PanelField {
   const unit = measure.unit ?? sizing.units;
@@ -79,6 +81,7 @@ function fieldFor(
   return {
     name: measure.name,
     question: ask.question,
+    ...(ask.note === undefined ? {} : { note: ask.note }),
     kind: measure.kind,
     text: fieldText(measure, sizing),
     suffix: measure.kind === 'length' ? unit : '',

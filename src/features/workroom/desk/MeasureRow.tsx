@@ -100,6 +100,7 @@ export function MeasureRow(props: MeasureRowProps) {
               onFocus={() => store.select(name)}
             />
           )}
+          {measure.note ? <p className="small soft">{measure.note}</p> : null}
         </td>
         <td className="figures soft">{figure ? exactText(figure, sizing) : '–'}</td>
         <td className={stale ? 'figures stale' : 'figures'}>
