@@ -12,7 +12,7 @@ const DAY = 24 * 60 * 60_000;
 const JOINED_DAYS_AGO = 60;
 
 /**
- * Fills an empty database with the demo: people, three projects and a draft, subscribers, one mailing that was sent. All
+ * Fills an empty database with the demo: people, nine published projects and a draft, subscribers, one mailing that was sent. All
  * of it goes through the same functions as real work, its dates spread over the weeks before `now`. It is one
  * transaction: broken off, it leaves nothing behind, and the next start fills the database whole.
  */

@@ -114,7 +114,7 @@ export const bulbCarton: DemoProject = {
           ),
           step(
             'A window | if you chose one',
-            'It sits in the middle of the front, [[if window is in the front then window width else 0 mm|bare]] × [[if window is in the front then window height else 0 mm]]. Cut it from the inside on a mat, from each corner towards the middle of the side. Behind it goes a piece of film [[1/4 in]] larger on every side, with tape or very little glue, while the card is flat.',
+            'It sits in the middle of the front, [[window width|bare]] × [[window height]]. Cut it from the inside on a mat, from each corner towards the middle of the side. Behind it goes a piece of film [[1/4 in]] larger on every side, with tape or very little glue, while the card is flat.',
             caution(
               'Use a fresh blade and several light passes. A blunt one needs force, and force is what slips in a corner.',
             ),
