@@ -1,9 +1,10 @@
 /**
- * Measurements as JSON lines, each a ratio against a peer in the same run: `npm run bench [-- engine]`.
+ * Measurements as JSON lines, each a ratio against a peer in the same run: `npm run bench [-- engine | sheets]`.
  * A time is the median of many rounds; what counts is the ratio, which a busy machine moves far less than the time.
  */
 const benches: Readonly<Record<string, () => Promise<void>>> = {
   engine: async () => (await import('./bench/engine')).engineBench(),
+  sheets: async () => (await import('./bench/sheets')).sheetsBench(),
 };
 
 const wanted = process.argv[2] ?? 'engine';
@@ -12,4 +13,7 @@ if (!bench) {
   console.error(`There is no bench called “${wanted}”. There are: ${Object.keys(benches).join(', ')}.`);
   process.exit(2);
 }
-await bench();
+bench().catch((error: unknown) => {
+  console.error(error);
+  process.exitCode = 1;
+});

@@ -1,5 +1,5 @@
 import { snap } from '../measure';
-import type { PieceDef, PieceFigure } from '../types';
+import type { Net, PieceDef, PieceFigure } from '../types';
 import { blanksOf, type Blank } from './blanks';
 import { cutsOf, type Cut, type Offcut, type Part } from './cuts';
 import { layOut } from './layout';
@@ -12,7 +12,7 @@ import { treeOf } from './tree';
 export type Material = PieceDef['stock'];
 /** What is planned of a piece: its blank, how many, what it is made of, and its folds where the grain matters. */
 export type PlannedPiece = Pick<PieceFigure, 'name' | 'count' | 'across' | 'along'> &
-  Partial<Pick<PieceFigure, 'stock' | 'net'>>;
+  Partial<Pick<PieceFigure, 'stock'>> & { readonly net?: Pick<Net, 'folds'> };
 
 export interface PlanOptions {
   /** One sold everywhere, or one's own. */
@@ -53,23 +53,21 @@ export interface SheetPlan {
   /** Pieces larger than the sheet however they lie; they are in no sheet. */
   readonly tooLarge: readonly TooLarge[];
 }
-export interface PlanProgress {
-  /** The plan so far when it became better, else null. */
-  readonly better: SheetPlan | null;
-}
+/** A stretch of planning: the plan so far when it became better, laid out when it is asked for; else null. */
+export type PlanProgress = (() => SheetPlan) | null;
 
 const TRIES = 400;
 
 /** Plans straight edge-to-edge cuts, as a trimmer makes them: fewest sheets first, then the largest offcut. */
 export function planSheets(figures: { readonly pieces: readonly PlannedPiece[] }, options: PlanOptions): SheetPlan {
-  let plan: SheetPlan | undefined;
-  for (const { better } of planning(figures, options)) plan = better ?? plan;
-  return plan as SheetPlan;
+  let newest: PlanProgress = null;
+  for (const better of planning(figures, options)) newest = better ?? newest;
+  return (newest as () => SheetPlan)();
 }
 
 /**
- * The same in short stretches of work, for a page or a worker that shows progress and may stop at any of them. The first
- * yield holds a whole plan.
+ * The same in short stretches of work, for a worker that shows progress and may stop after any of them. The first gives a
+ * whole plan.
  */
 export function* planning(
   { pieces }: { readonly pieces: readonly PlannedPiece[] },
@@ -79,12 +77,12 @@ export function* planning(
   const { seed = 1, tries = TRIES, spent = (trials: number) => trials / tries } = options;
   const runs = groups.map(({ blanks }) => packings(blanks, { seed, spent }));
   const best = runs.map((run): Packing | null => run.next().value ?? null);
-  const plan = (): SheetPlan => planOf(groups, best, pieces, options);
-  yield { better: plan() };
+  const plan = () => planOf(groups, [...best], pieces, options);
+  yield plan;
   for (const [index, run] of runs.entries()) {
     for (const found of run) {
       if (found) best[index] = found;
-      yield { better: found ? plan() : null };
+      yield found ? plan : null;
     }
   }
 }
