@@ -86,8 +86,9 @@ const inItsCase = (written: string, { from, to }: Rename): string =>
 export function renameInSizing(sizing: Sizing, rename: Rename): Sizing {
   const from = keyOf(rename.from);
   const to = keyOf(rename.to);
-  const moved = <T>(answers: Readonly<Record<string, T>>): Readonly<Record<string, T>> =>
-    Object.fromEntries(Object.entries(answers).map(([key, answer]) => [keyOf(key) === from ? to : key, answer]));
+  function moved<T>(answers: Readonly<Record<string, T>>): Readonly<Record<string, T>> {
+    return Object.fromEntries(Object.entries(answers).map(([key, answer]) => [keyOf(key) === from ? to : key, answer]));
+  }
   if (rename.what === 'measure') return { ...sizing, values: moved(sizing.values) };
   if (rename.what === 'choice') return { ...sizing, choices: moved(sizing.choices) };
   if (rename.what !== 'option') return sizing;

@@ -190,14 +190,12 @@ type Change = (text: string, at: TextAt) => string;
 
 /** The pattern with every text changed. Parts in which nothing changes stay the same objects. */
 export function mapTexts(pattern: Pattern, change: Change): Pattern {
-  const list = <T>(items: readonly T[], roles: RoleTree, label: (item: T, index: number) => string): readonly T[] =>
-    keep(
-      items,
-      items.map((item, index) => {
-        const place = label(item, index);
-        return mapPart(item, roles, { owner: ownerIn(item), where: place, change });
-      }),
+  function list<T>(items: readonly T[], roles: RoleTree, label: (item: T, index: number) => string): readonly T[] {
+    const changed = items.map((item, index) =>
+      mapPart(item, roles, { owner: ownerIn(item), where: label(item, index), change }),
     );
+    return keep(items, changed);
+  }
   const named = (kind: string) => (item: { readonly name: string }) => `${kind} “${item.name}”`;
   const { inside, outside } = pattern.finished;
   const finished = {
@@ -254,8 +252,9 @@ function mapPart<T>(part: T, roles: RoleTree, at: Omit<TextAt, 'role'> & { reado
   };
   return into(part, roles, at.where) as T;
 }
-const keep = <T>(before: readonly T[], after: readonly T[]): readonly T[] =>
-  after.some((item, index) => item !== before[index]) ? after : before;
+function keep<T>(before: readonly T[], after: readonly T[]): readonly T[] {
+  return after.some((item, index) => item !== before[index]) ? after : before;
+}
 
 /** The radius of a bowed edge, in `b bowed out by r`. */
 export const BOWED = /^(.*? bowed (?:out|in) by )(.+)$/iu;
