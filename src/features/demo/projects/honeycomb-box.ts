@@ -125,7 +125,7 @@ export const honeycombBox: DemoProject = {
           ),
           step(
             'The lid, by the same road',
-            'A lid is a base that is a little wider and lower. Trim it to [[lid.across|bare]] × [[lid.along]], draw the circle that stands beside the drawing, and mark the corners as before. From side to side it is [[lid across flats]] if the sides are even in number; its walls are [[lid height]] tall, and the tabs are [[lid tab width]] wide.',
+            'A lid is a base that is a little wider and lower. Trim it to [[lid.across|bare]] × [[lid.along]], draw the circle that is named under the drawing, and mark the corners as before. From side to side it is [[lid across flats]] if the sides are even in number; its walls are [[lid height]] tall, and the tabs are [[lid tab width]] wide.',
             piece('Lid'),
             'The two look alike on the bench, and the difference is [[lid side - side]] a side. Write “lid” on it in pencil, inside.',
           ),

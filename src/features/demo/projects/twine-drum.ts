@@ -87,7 +87,7 @@ export const twineDrum: DemoProject = {
           ),
           step(
             'Cut the teeth',
-            'There are [[teeth]] of them, and the notes beside the drawing say how wide one is at the score. Set a pair of dividers to that and walk along the line. If you come out with one more or one fewer, nobody will count them; they only have to be alike.',
+            'There are [[teeth]] of them, and the notes under the drawing say how wide one is at the score. Set a pair of dividers to that and walk along the line. If you come out with one more or one fewer, nobody will count them; they only have to be alike.',
             'Between each two, cut a narrow V from the edge up to the score and not through it. Without the V the teeth would lie on each other once they are turned in, and the bottom would sit on a hill.',
             show(
               'parts',
