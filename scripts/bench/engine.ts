@@ -12,7 +12,7 @@ import {
   type Model,
   type Pattern,
 } from '@/engine';
-import { getPatternModel } from '@/features/patterns/patterns.server';
+import { getPattern, getPatternModel } from '@/features/patterns/patterns.server';
 import { MATHJS, MATHJS_UNITS, OURS, cells, realMeasures, written, type BenchMeasure, type Language } from './formulas';
 import { median, print, report, three } from './measure';
 
@@ -80,7 +80,7 @@ export async function engineBench(): Promise<void> {
     );
 
   print({ bench: 'ten times the measures', ratio: three(growth(modelOf(chain(19)), modelOf(chain(190)))) });
-  const tray = getPatternModel('tray') as Model;
+  const tray = getPattern('tray') as Pattern;
   print({ bench: 'ten times the pieces', ratio: three(growth(piecesOf(tray, 3), piecesOf(tray, 30))) });
   print({ bench: 'engine as a reader’s page loads it, gzip', bytes: await engineBytes() });
 
@@ -139,7 +139,7 @@ function modelOf(worked: Pattern['measures'], pieces: Pattern['pieces'] = [], as
   return compiled.value;
 }
 /** A pattern with the same piece many times over, all following x. */
-function piecesOf({ pattern }: Model, count: number): Model {
+function piecesOf(pattern: Pattern, count: number): Model {
   const [piece] = pattern.pieces;
   if (!piece) throw new Error('the tray has no piece');
   const measures = pattern.measures.map(({ name, kind, ask, formula }) => ({

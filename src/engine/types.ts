@@ -352,6 +352,17 @@ export interface Placement {
 }
 export type Axis = '+x' | '-x' | '+y' | '-y' | '+z' | '-z';
 
+/** A pattern without the formulas of its pieces: what is still asked of it once it is compiled. */
+export type PatternHead = Omit<Pattern, 'pieces'> & { readonly pieces: readonly PieceHead[] };
+type Said = 'name' | 'builder' | 'stock' | 'look' | 'remarks';
+export type PieceHead =
+  | Pick<GridPieceDef, Said | 'edges'>
+  | (Pick<FanPieceDef, Said | 'centre'> & { readonly flap: Pick<FanPieceDef['flap'], 'name' | 'shape'> })
+  | Pick<DiscPieceDef, Said | 'disc'>
+  | Pick<SectorPieceDef, Said | 'body'>
+  | Pick<OutlinePieceDef, Said | 'edges'>
+  | Pick<LayerPieceDef, Said>;
+
 // ── Sizing: one reader's answers. ────────────────────────────────────────────────────────────────────────────────────
 
 export interface Sizing {

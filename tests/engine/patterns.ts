@@ -9,6 +9,7 @@ import {
   type Figures,
   type MeasureDef,
   type Model,
+  type Pattern,
   type Sizing,
 } from '@/engine';
 import { workOut } from '@/engine/model/values';
@@ -17,9 +18,10 @@ import { loadPattern } from '@/features/patterns/load-pattern';
 const folder = join(import.meta.dirname, '../../content/patterns');
 export const SLUGS = readdirSync(folder).map((name) => name.replace(/\.json$/, ''));
 
-export function modelOf(slug: string): Model {
-  return loadPattern(`content/patterns/${slug}.json`, readFileSync(join(folder, `${slug}.json`), 'utf8')).model;
-}
+const loaded = (slug: string) =>
+  loadPattern(`content/patterns/${slug}.json`, readFileSync(join(folder, `${slug}.json`), 'utf8'));
+export const modelOf = (slug: string): Model => loaded(slug).model;
+export const patternOf = (slug: string): Pattern => loaded(slug).pattern;
 export function figuresOf(
   model: Model,
   answers: Readonly<Record<string, number>> = {},

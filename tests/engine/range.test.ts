@@ -13,7 +13,7 @@ import {
 import { judge } from '@/engine/model/evaluate';
 import { tracksOf, type CompiledPiece, type CompiledTrack } from '@/engine/model/model';
 import { isInUse } from '@/engine/model/values';
-import { SLUGS, modelOf, sizingsOf } from './patterns';
+import { SLUGS, modelOf, patternOf, sizingsOf } from './patterns';
 
 /** A nanometre, and half of one more for sums of a dozen columns. */
 const NOTHING = 1.5e-6;
@@ -176,11 +176,17 @@ function* misrounded({ model, sizing, cut }: Judged): Generator<string> {
 /** Measures added and taken away, and nothing else. */
 const isPlainSum = (text: string): boolean => /^[a-z ]+( [+-] [a-z ]+)*$/.test(text);
 /** Positions are running sums; what is made of rounded measures only is a whole number of steps. */
-function* offTheRuler(judged: Judged, piece: CompiledPiece, names: ReadonlySet<string>): Generator<string> {
+function* offTheRuler(
+  judged: Judged,
+  slug: string,
+  piece: CompiledPiece,
+  names: ReadonlySet<string>,
+): Generator<string> {
   const { shape, def } = piece;
+  const written = patternOf(slug).pieces.find(({ name }) => name === def.name);
   const figure = judged.figures.pieces.find(({ name }) => name === def.name);
-  if (shape.builder !== 'grid' || def.builder !== 'grid' || !figure) return;
-  const texts = new Map([...def.columns, ...def.rows].map(({ name, size }) => [name, size]));
+  if (shape.builder !== 'grid' || written?.builder !== 'grid' || !figure) return;
+  const texts = new Map([...written.columns, ...written.rows].map(({ name, size }) => [name, size]));
   const { step } = GRIDS[judged.sizing.grid];
   for (const [way, list, edges, scores, total] of [
     ['across', shape.columns, figure.net.columns, figure.scores.across, figure.across],
@@ -228,7 +234,7 @@ function* unsound(name: string, { outline, holes, panels }: Net): Generator<stri
 function* faultsOf(judged: Judged, slug: string, names: ReadonlySet<string>, seen: Set<string>): Generator<string> {
   yield* unequal(judged, slug, seen);
   yield* misrounded(judged);
-  for (const { piece } of gridsOf(judged.model)) yield* offTheRuler(judged, piece, names);
+  for (const { piece } of gridsOf(judged.model)) yield* offTheRuler(judged, slug, piece, names);
   for (const { name, net } of judged.figures.pieces) yield* unsound(name, net);
 }
 
@@ -237,7 +243,7 @@ it('says of every pattern which edges are glued', () => {
 });
 
 it('finds a wall that is a millimetre taller than the one it is glued to', () => {
-  const { pattern } = modelOf('tray');
+  const pattern = patternOf('tray');
   const pieces = pattern.pieces.map((piece) =>
     piece.builder === 'grid'
       ? {

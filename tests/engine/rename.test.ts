@@ -14,7 +14,7 @@ import {
   type Rename,
 } from '@/engine';
 import { FOLDER } from '../server/published-project';
-import { SLUGS, modelOf, sizingsOf } from './patterns';
+import { SLUGS, modelOf, patternOf, sizingsOf } from './patterns';
 
 const tab: Rename = { what: 'measure', from: 'tab', to: 'glue flap' };
 const formula = (text: string, rename: Rename = tab) => {
@@ -138,12 +138,12 @@ describe.each(SLUGS)('%s', (slug) => {
   const sizing = [...sizingsOf(model, 1, 7)][0]!;
   const sized = { ...sizing, choices: lowered(sizing.choices), values: lowered(sizing.values) };
   const before = evaluate(model, sized);
-  const [alone, pieces, written] = [figuresAlone(before), JSON.stringify(before.pieces), JSON.stringify(model.pattern)];
+  const [alone, pieces, written] = [figuresAlone(before), JSON.stringify(before.pieces), JSON.stringify(patternOf(slug))];
 
   it('gives the same figures whatever is renamed, and is what it was when renamed back', () => {
-    for (const rename of everyRename(model.pattern)) {
+    for (const rename of everyRename(patternOf(slug))) {
       const about = JSON.stringify(rename);
-      const renamed = pattern(model.pattern, rename);
+      const renamed = pattern(patternOf(slug), rename);
       const compiled = compilePattern(renamed);
       expect(compiled.ok ? [] : compiled.faults, about).toEqual([]);
       if (!compiled.ok) continue;

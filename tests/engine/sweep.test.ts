@@ -10,7 +10,7 @@ import {
   type Pattern,
   type Sizing,
 } from '@/engine';
-import { SLUGS, inch, modelOf } from './patterns';
+import { SLUGS, inch, modelOf, patternOf } from './patterns';
 
 describe('sweep', () => {
   it.each(SLUGS)('finds nothing that fails anywhere in the range of %s', (slug) => {
@@ -22,7 +22,7 @@ describe('sweep', () => {
   });
   it('names the first failing sizing and the range that works', () => {
     const pattern: Pattern = {
-      ...modelOf('tray').pattern,
+      ...patternOf('tray'),
       fits: [
         {
           name: 'low enough',

@@ -39,3 +39,4 @@ export const WORK = {
   'arc radius': (chord, height) => (height > 0 ? (chord ** 2 + 4 * height ** 2) / (8 * height) : NaN),
 } satisfies Readonly<Record<string, (...args: number[]) => number>>;
 export type FunctionName = keyof typeof WORK;
+export const FUNCTION_NAMES: ReadonlySet<string> = new Set(Object.keys(WORK));

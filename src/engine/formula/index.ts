@@ -5,6 +5,6 @@ export * from './kind';
 export { explain, explainAt } from './messages';
 export { nearestName } from './nearest';
 export { namesAt } from './parse';
-export { FUNCTION_NAMES } from './signatures';
+export { FUNCTION_NAMES } from './functions';
 export type { Formula, Names, Node, Scope, Values, Work } from './syntax';
 export { workOf } from './work';

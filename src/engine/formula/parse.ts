@@ -1,7 +1,7 @@
 import type { Fault, Result } from '../types';
 import { SAYS } from './messages';
 import { nearestName } from './nearest';
-import { FUNCTION_NAMES } from './signatures';
+import { FUNCTION_NAMES } from './functions';
 import { KEYWORDS, type Arithmetic, type Comparison, type Names, type Node, type Span } from './syntax';
 
 const LONGEST_FORMULA = 600;

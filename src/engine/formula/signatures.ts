@@ -1,4 +1,4 @@
-import { WORK, type FunctionName } from './functions';
+import type { FunctionName } from './functions';
 import { ANGLE, LENGTH, NUMBER, WHOLE, sameKind, type Kind } from './kind';
 
 /** What went in is of the wrong kind: which argument, and what is wanted there. */
@@ -145,4 +145,3 @@ export const SIGNATURES: Readonly<Record<FunctionName, Signature>> = {
     kind: each(LENGTH, 'a length', LENGTH),
   },
 };
-export const FUNCTION_NAMES: ReadonlySet<string> = new Set(Object.keys(WORK));

@@ -91,6 +91,7 @@ class Compiler {
       ok: true,
       value: {
         pattern: this.pattern,
+        read: (text) => compileFormula(text, this.scope(true), 'live measure'),
         scope: this.scope(true),
         slots: this.entries.size,
         steps,

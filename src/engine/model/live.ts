@@ -1,4 +1,4 @@
-import { compileFormula, kindName, type Formula } from '../formula';
+import { kindName, type Formula } from '../formula';
 import { GRIDS, roundTo, snap } from '../measure';
 import { keyOf } from '../pattern/names';
 import type { Fault, Figures, KindName, Result, Unit } from '../types';
@@ -19,7 +19,7 @@ export interface LiveMeasure {
 
 /** Checks a live measure against the pattern's names. A formula that is not one bare measure is rounded to the grid as it is shown. */
 export function compileLive(model: Model, text: string): Result<LiveMeasure> {
-  const compiled = compileFormula(text, model.scope, 'live measure');
+  const compiled = model.read(text);
   if (!compiled.ok) return compiled;
   const { value: formula } = compiled;
   const kind = kindName(formula.kind);

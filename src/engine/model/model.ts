@@ -8,9 +8,10 @@ import type {
   MaterialDef,
   MeasureDef,
   NamedFormula,
-  Pattern,
-  PieceDef,
+  PatternHead,
+  PieceHead,
   Placement,
+  Result,
   Rounding,
   Side,
 } from '../types';
@@ -21,7 +22,9 @@ export const CARD_THICKNESS = 'card thickness';
 
 /** A pattern whose every formula is checked and compiled. Made by `compilePattern`, read by `evaluate`. */
 export interface Model {
-  readonly pattern: Pattern;
+  readonly pattern: PatternHead;
+  /** Reads a formula of the text; a sealed model knows those that it was sealed with. */
+  readonly read: (text: string) => Result<Formula>;
   /** Names of formulas that live in the text: measures and sizes, and what is known once pieces are drawn. */
   readonly scope: Scope;
   readonly slots: number;
@@ -185,7 +188,7 @@ export type CompiledShape =
   | CompiledLayer;
 
 export interface CompiledPiece extends Conditional {
-  readonly def: PieceDef;
+  readonly def: PieceHead;
   readonly count: Formula;
   readonly shape: CompiledShape;
   /** Slots of all that the piece is made from: at the same values it is the same piece. */

@@ -1,7 +1,7 @@
 import { atLeast, coincident, isZero } from '../measure';
 import { assemble, boundsOf, crossingOf, encloses, inset, pointsOf } from '../net';
 import { keyOf } from '../pattern/names';
-import type { Loop, Net, PieceDef, Point } from '../types';
+import type { Loop, Net, PieceDef, PieceHead, Point } from '../types';
 import { cellsOf } from './cells';
 import { finishNet, type Built } from './finish';
 
@@ -92,7 +92,7 @@ const MOST_SIDES = 24;
  * The faces that a layer goes on at this sizing, each by the panels that are there; none when the host has none of them. The
  * first flap of a fan stands for all: they are alike.
  */
-export function facesOf(host: Net, hostDef: PieceDef, faces: readonly (readonly string[])[]): readonly string[][] {
+export function facesOf(host: Net, hostDef: PieceHead, faces: readonly (readonly string[])[]): readonly string[][] {
   const there = host.panels.map(({ name }) => keyOf(name));
   const flap = hostDef.builder === 'fan' ? `${keyOf(hostDef.flap.name)} ` : null;
   return faces.flatMap((face) => {

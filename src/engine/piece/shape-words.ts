@@ -1,6 +1,6 @@
 import { decimal } from '../measure';
 import { distance, lengthOf, pointAt } from '../net';
-import type { Curve, FanPieceDef, Loop, Net, Panel, Point, Sentence } from '../types';
+import type { Curve, PieceHead, Loop, Net, Panel, Point, Sentence } from '../types';
 import { cuttingOut } from './cut-words';
 import { bowOf, holes, scoring, slits, type Said } from './line-words';
 import type { WordsOptions } from './words';
@@ -77,7 +77,7 @@ function fan({ net, def, figure }: WordsOptions): Sentence[] {
 }
 
 /** What is measured on a fan: its middle, the side that lies level at the foot, how far the flap on it stands out. */
-export function fanSizes(net: Net, def: Pick<FanPieceDef, 'centre' | 'flap'>) {
+export function fanSizes(net: Net, def: Extract<PieceHead, { builder: 'fan' }>) {
   const centre = panel(net, def.centre)?.loop ?? [];
   const flap = panel(net, `${def.flap.name} 1`)?.loop;
   const [side, out] = [centre[0], flap?.[1]];

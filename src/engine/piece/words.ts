@@ -1,5 +1,5 @@
 import { areaOf } from '../net';
-import type { PieceDef, PieceFigure, Sentence } from '../types';
+import type { PieceHead, PieceFigure, Sentence } from '../types';
 import type { GridPiece } from './grid';
 import { gridWords } from './grid-words';
 import { layerWords } from './layer-words';
@@ -9,7 +9,7 @@ import { shapeWords } from './shape-words';
 export interface WordsOptions extends Said {
   /** The worked-out grid; null for pieces of the other builders. */
   readonly grid: GridPiece | null;
-  readonly def: PieceDef;
+  readonly def: PieceHead;
   /** A layer's faces and margin, and how many are cut. */
   readonly layer?: PieceFigure['layer'];
   readonly count?: number;

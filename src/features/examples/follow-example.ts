@@ -1,4 +1,4 @@
-import { compilePattern, GRIDS, type Model, type Pattern } from '@/engine';
+import { GRIDS, openModel, type Model, type SealedFormula, type SealedModel } from '@/engine';
 import { fieldText } from '@/features/sizing/panel';
 import { FROM, parameterName } from '@/features/sizing/sizing-form';
 import { writeSizing } from '@/features/sizing/sizing-link';
@@ -26,12 +26,16 @@ export function followExample(form: HTMLFormElement): (changed: EventTarget | nu
   };
 }
 
-/** The pattern comes with the page, already checked by the server, so that it does not compile is our own fault. */
+/** The model comes with the page, sealed; formulas that stand in the text come with their places. */
 function modelIn(page: Document, slug: string): Model {
   const source = page.querySelector(`script[data-pattern="${CSS.escape(slug)}"]`)?.textContent ?? 'null';
-  const compiled = compilePattern(JSON.parse(source) as Pattern);
-  if (!compiled.ok) throw new Error(`${slug} does not compile.`);
-  return compiled.value;
+  const sealed = JSON.parse(source) as SealedModel;
+  const places = page.querySelectorAll<HTMLElement>(`[data-example-part="${CSS.escape(slug)}"][data-code]`);
+  const texts = [...places].map(({ dataset }) => [
+    dataset.live ?? '',
+    JSON.parse(dataset.code ?? 'null') as SealedFormula,
+  ]);
+  return openModel({ ...sealed, texts: { ...sealed.texts, ...Object.fromEntries(texts) } });
 }
 
 const parametersOf = (form: HTMLFormElement): URLSearchParams =>

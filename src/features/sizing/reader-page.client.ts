@@ -1,4 +1,4 @@
-import { compilePattern, drawFolded, type Model, type Pattern, type Sizing, type Stock } from '@/engine';
+import { drawFolded, openModel, type Model, type SealedModel, type Sizing, type Stock } from '@/engine';
 import { drawingSvg } from '@/exports/svg/drawing';
 import { articleFigures, markChanged } from './article-figures';
 import { factsHtml, fitsHtml, lastGoodHtml, closesWords, sizingHref, type Links } from './live-html';
@@ -10,7 +10,7 @@ import { readerView, readStock, USUAL_STOCK } from './reader-view';
 
 /** What the server puts into the page for the island. */
 export interface ProjectData {
-  readonly pattern: Pattern;
+  readonly model: SealedModel;
   readonly authors: Sizing;
   readonly asked: Sizing;
   readonly stock: string;
@@ -26,10 +26,7 @@ export function startReader(panel: HTMLElement): void {
   const source = document.getElementById('project-data')?.textContent;
   if (!page || !source) return;
   const data = JSON.parse(source) as ProjectData;
-  const compiled = compilePattern(data.pattern);
-  if (!compiled.ok) return;
-
-  const model = compiled.value;
+  const model = openModel(data.model);
   const store = createReaderStore(model, { sizing: data.asked, authors: data.authors, stock: readStock(data.stock) });
   const paint = painter(page, panel, model, data);
   let waiting = false;

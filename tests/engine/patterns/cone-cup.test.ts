@@ -3,7 +3,7 @@ import { areaOf, compilePattern, evaluate, type Figures, type Net, type Sizing }
 import { foldNet, minus, size, vector, type Vector } from '@/engine/space';
 import groups from '../../reference/check-values.json' with { type: 'json' };
 import { expectClose } from '../../setup/expect-close';
-import { figuresOf, inch, modelOf, pieceOf } from '../patterns';
+import { figuresOf, inch, modelOf, patternOf, pieceOf } from '../patterns';
 
 const model = modelOf('cone-cup');
 const METRIC = { units: 'mm', grid: '0.5mm' } as const satisfies Partial<Sizing>;
@@ -182,7 +182,7 @@ describe('rolled', () => {
 
 describe('fits', () => {
   it('find a body that does not go round, were its angle wrong', () => {
-    const { pattern } = model;
+    const pattern = patternOf('cone-cup');
     const measures = pattern.measures.map((measure) =>
       measure.name === 'sector angle' ? { ...measure, formula: '350° * (taper / slant height)' } : measure,
     );

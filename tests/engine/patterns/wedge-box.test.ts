@@ -3,7 +3,7 @@ import { areaOf, compilePattern, evaluate, type Figures, type Loop, type Sizing 
 import { foldNet, minus, size, vector, type FoldedPanel, type Vector } from '@/engine/space';
 import groups from '../../reference/check-values.json' with { type: 'json' };
 import { expectClose } from '../../setup/expect-close';
-import { figuresOf, inch, modelOf, pieceOf } from '../patterns';
+import { figuresOf, inch, modelOf, patternOf, pieceOf } from '../patterns';
 
 const model = modelOf('wedge-box');
 const METRIC = { units: 'mm', grid: '0.5mm' } as const satisfies Partial<Sizing>;
@@ -82,7 +82,7 @@ describe('closing the round', () => {
       expectClose(measure(slice({ slices }, CURVED), 'open gap').cut, 0, 1e-4, `${slices} slices`);
   });
   it('is refused by the fit, were the chord cut long', () => {
-    const { pattern } = model;
+    const pattern = patternOf('wedge-box');
     const measures = pattern.measures.map((one) => (one.name === 'chord' ? { ...one, rounds: 'up' as const } : one));
     const wrong = compilePattern({ ...pattern, measures });
     if (!wrong.ok) throw new Error('does not compile');
