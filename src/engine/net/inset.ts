@@ -1,10 +1,13 @@
 import { COINCIDENT, coincident } from '../measure';
 import type { Arc, Curve, Loop, Point } from '../types';
 import { straighten } from './assemble';
-import { distance, line, pointAt, sweepOf } from './curve';
+import { encloses } from './crossing';
+import { areaOf, distance, line, pointAt, pointsOf, sweepOf } from './curve';
 
 /** Halvings of the search for the distance at which a side vanishes: 2⁻⁵⁰ of it is far below a nanometre. */
 const HALVINGS = 50;
+/** Most sides that may go with parts that are pinched off. */
+const PINCHES = 3;
 
 /**
  * A loop with every side moved by `by` millimetres to its right, which is into the card, for outlines and holes alike.
@@ -15,14 +18,31 @@ const HALVINGS = 50;
 export function inset(loop: Loop, by: number): Loop | null {
   const ring = roundAbout(loop);
   if (ring) return movedRing(ring, by);
-  let sides = straighten(loop);
-  for (;;) {
-    const moved = movedSides(sides, by);
-    if (moved && moved.every((side) => side !== null)) return keepsAway(moved, loop, by) ? moved : null;
+  return settled(straighten(loop), { loop, by, pinches: PINCHES });
+}
+
+/** The sides moved, without those that vanish on the way. */
+function settled(sides: Loop, to: { readonly loop: Loop; readonly by: number; readonly pinches: number }): Loop | null {
+  const { loop, by, pinches } = to;
+  const moved = movedSides(sides, by);
+  const without = (gone: ReadonlySet<number>) => sides.filter((_, index) => !gone.has(index));
+  if (!moved?.every((side): side is Curve => side !== null)) {
     const gone = firstToVanish(sides, by);
-    sides = sides.filter((_, index) => !gone.has(index));
-    if (gone.size === 0 || sides.length < 2) return null;
+    return gone.size === 0 || gone.size > sides.length - 2 ? null : settled(without(gone), to);
   }
+  const near = new Set(moved.flatMap((side, index) => (keepsAway(side, loop, by) ? [] : [index])));
+  if (near.size === 0) return moved;
+  if (pinches === 0 || sides.length < 4) return null;
+  // Sides that come too near bound a part that is pinched off, such as a thin tip. Which of them go with it shows in what is left.
+  const count = sides.length;
+  const beside = [...near].flatMap((index) => [index, (index + 1) % count, (index + count - 1) % count]);
+  const left = [...new Set(beside)].map((index) =>
+    settled(without(new Set([index])), { loop, by, pinches: pinches - 1 }),
+  );
+  return left.reduce(
+    (best, one) => (one && (!best || Math.abs(areaOf(one)) > Math.abs(areaOf(best))) ? one : best),
+    null,
+  );
 }
 
 /** A loop that is one circle. */
@@ -171,17 +191,15 @@ function runsOn(side: Curve, from: Point, to: Point): boolean {
   return (turnTo(to) - turnTo(from)) * side.radius > COINCIDENT;
 }
 
-/** Whether no part of the moved loop lies nearer to the loop than it was moved. */
-function keepsAway(moved: readonly (Curve | null)[], loop: Loop, by: number): moved is Loop {
-  return moved.every((side) =>
-    side === null
-      ? false
-      : [0, 0.25, 0.5, 0.75].every((t) => {
-          const point = pointAt(side, t);
-          return loop.every((curve) => distanceTo(curve, point) > by - COINCIDENT);
-        }),
-  );
+/** Whether a moved side lies within the loop, no nearer to it than it was moved. */
+function keepsAway(side: Curve, loop: Loop, by: number): boolean {
+  return [0, 0.25, 0.5, 0.75].every((t) => {
+    const point = pointAt(side, t);
+    return loop.every((curve) => distanceTo(curve, point) > by - COINCIDENT) && (by === 0 || isRightOf(loop, point));
+  });
 }
+/** Inside an outline, outside a hole. */
+const isRightOf = (loop: Loop, point: Point): boolean => encloses(pointsOf(loop), point) === areaOf(loop) > 0;
 
 /** From a point to the nearest point of a curve, its ends included. */
 export function distanceTo(curve: Curve, point: Point): number {
