@@ -1,55 +1,11 @@
 import { evaluate as mathEvaluate } from 'mathjs';
 import { describe, expect, it } from 'vitest';
-import { compileLive, compilePattern, explain, type Fault, type Pattern } from '@/engine';
+import { compilePattern, explain, type Fault } from '@/engine';
 import groups from '../reference/check-values.json' with { type: 'json' };
 import { expectClose } from '../setup/expect-close';
+import { bare, valueOf } from './bare-pattern';
 import { figuresOf, seeded } from './patterns';
 
-/** A pattern with these measures and nothing else, all of the given kinds. */
-function bare(
-  formulas: Readonly<Record<string, string>>,
-  kinds: Readonly<Record<string, 'length' | 'number' | 'angle' | 'area' | 'whole number'>> = {},
-): Pattern {
-  const measures = [
-    {
-      name: 'inside width',
-      ask: { question: 'How wide?', usual: '6 in', from: '0 in', to: '2000 in' },
-      rounds: 'exact' as const,
-    },
-    {
-      name: 'inside depth',
-      ask: { question: 'How deep?', usual: '2 in', from: '0 in', to: '2000 in' },
-      rounds: 'exact' as const,
-    },
-    ...Object.entries(formulas).map(([name, formula]) => ({
-      name,
-      formula,
-      ...(kinds[name] ? { kind: kinds[name] } : {}),
-    })),
-  ];
-  const choices = [{ name: 'spine', question: 'Spine', options: ['curved', 'quite straight'], usual: 'curved' }];
-  return {
-    format: 1,
-    slug: 'bare',
-    name: 'Bare',
-    summary: '',
-    group: '',
-    measures,
-    choices,
-    pieces: [],
-    fits: [],
-    finished: { inside: [], outside: [] },
-    order: [],
-    assembly: [],
-  };
-}
-function valueOf(formula: string, answers: Readonly<Record<string, number>> = {}): number {
-  const model = compilePattern(bare({}));
-  if (!model.ok) throw new Error('the bare pattern compiles');
-  const live = compileLive(model.value, formula);
-  if (!live.ok) throw new Error(live.faults.map(explain).join(' '));
-  return live.value.value(figuresOf(model.value, answers))?.exact ?? NaN;
-}
 function faultsOf(formula: string): readonly Fault[] {
   const compiled = compilePattern(bare({ probe: formula }));
   return compiled.ok ? [] : compiled.faults;

@@ -1,24 +1,7 @@
-import { Polygon, arc as flattenArc, point as flattenPoint, segment as flattenSegment } from '@flatten-js/core';
-import polygonClipping from 'polygon-clipping';
 import { describe, expect, it } from 'vitest';
-import {
-  GRIDS,
-  areaOf,
-  compilePattern,
-  evaluate,
-  perimeterOf,
-  pointsOf,
-  roundTo,
-  same,
-  say,
-  snap,
-  type Curve,
-  type Loop,
-  type Net,
-  type Pattern,
-} from '@/engine';
+import { areaOf, compilePattern, say, snap, type Loop, type Pattern } from '@/engine';
 import { expectClose } from '../setup/expect-close';
-import { SLUGS, figuresOf, inch, modelOf, pieceOf, sizingsOf } from './patterns';
+import { figuresOf, inch, modelOf, pieceOf } from './patterns';
 
 describe('book-box', () => {
   const model = modelOf('book-box');
@@ -168,106 +151,5 @@ describe('the departure', () => {
     if (!compiled.ok) throw new Error(JSON.stringify(compiled.faults));
     const { departure } = figuresOf(compiled.value, {}, { units: 'mm', grid: '1mm' });
     expect(departure).toEqual({ mm: 0.4, where: 'Disc, across' });
-  });
-});
-
-/** The same loop in flatten-js, an independent geometry library. */
-function flattened(loop: Loop): Polygon {
-  const edge = (curve: Curve) =>
-    curve.type === 'line'
-      ? flattenSegment(flattenPoint(curve.from.x, curve.from.y), flattenPoint(curve.to.x, curve.to.y))
-      : flattenArc(
-          flattenPoint(curve.centre.x, curve.centre.y),
-          curve.radius,
-          Math.atan2(curve.from.y - curve.centre.y, curve.from.x - curve.centre.x),
-          Math.atan2(curve.to.y - curve.centre.y, curve.to.x - curve.centre.x),
-          curve.clockwise,
-        );
-  const polygon = new Polygon();
-  polygon.addFace(loop.map(edge));
-  return polygon;
-}
-const ring = (loop: Loop): [number, number][] => pointsOf(loop, 0.02).map(({ x, y }) => [x, y]);
-
-function expectSound(net: Net, what: string): void {
-  net.outline.forEach((curve, index) => {
-    const next = net.outline[(index + 1) % net.outline.length] as Curve;
-    expectClose(
-      Math.hypot(curve.to.x - next.from.x, curve.to.y - next.from.y),
-      0,
-      1e-4,
-      `${what}: the outline is closed`,
-    );
-  });
-  const panels = net.panels.reduce((sum, panel) => sum + areaOf(panel.loop), 0);
-  const holes = net.holes
-    .filter((hole) => areaOf(hole) < 0 && hole.length === 4)
-    .reduce((sum, hole) => sum + Math.abs(areaOf(hole)), 0);
-  expect(panels, what).toBeGreaterThan(0);
-  expectClose(areaOf(net.outline), panels, Math.max(1e-3, panels * 1e-9), `${what}: panels fill the outline`);
-  expect(holes).toBeLessThan(panels);
-}
-
-describe.each(SLUGS)('%s over its whole range', (slug) => {
-  const model = modelOf(slug);
-  const sizings = [...sizingsOf(model, 60, 41)];
-
-  it('makes sound pieces and holds every fit at 60 sizings on every grid', () => {
-    for (const sizing of sizings) {
-      const figures = evaluate(model, sizing);
-      expect(figures.problems, JSON.stringify(sizing)).toEqual([]);
-      for (const piece of figures.pieces) {
-        expectSound(piece.net, `${piece.name} at ${JSON.stringify(sizing.values)}`);
-        expect(piece.scores.across.every((at) => piece.net.columns.some((edge) => same(edge, at)))).toBe(true);
-        expect(piece.scores.along.every((at) => piece.net.rows.some((edge) => same(edge, at)))).toBe(true);
-      }
-    }
-  });
-  it('has the areas and perimeters that flatten-js finds', () => {
-    for (const sizing of sizings.slice(0, 10)) {
-      for (const piece of evaluate(model, sizing).pieces) {
-        const polygon = flattened(piece.net.outline);
-        expectClose(areaOf(piece.net.outline), Math.abs(polygon.area()), 1e-3, `${piece.name} area`);
-        const length = [...polygon.edges].reduce((sum: number, edge: { length: number }) => sum + edge.length, 0);
-        expectClose(perimeterOf(piece.net.outline), length, 1e-6 * length + 1e-6, `${piece.name} perimeter`);
-      }
-    }
-  });
-  it('has no panels that lie over one another in the flat (polygon-clipping)', () => {
-    for (const sizing of sizings.slice(0, 6)) {
-      for (const { name, net } of evaluate(model, sizing).pieces) {
-        net.panels.forEach((a, index) => {
-          for (const b of net.panels.slice(index + 1)) {
-            const common = polygonClipping.intersection([ring(a.loop)], [ring(b.loop)]);
-            const area = common.flat().reduce(
-              (sum, points) =>
-                sum +
-                Math.abs(
-                  points.reduce((twice, [x, y], i) => {
-                    const [u, v] = points[(i + 1) % points.length] as [number, number];
-                    return twice + x * v - u * y;
-                  }, 0) / 2,
-                ),
-              0,
-            );
-            expect(area, `${name}: ${a.name} and ${b.name}`).toBeLessThan(0.3);
-          }
-        });
-      }
-    }
-  });
-  it('cuts whole grid steps, but for steps of card thickness', () => {
-    for (const sizing of sizings) {
-      const { step } = GRIDS[sizing.grid];
-      const figures = evaluate(model, sizing);
-      for (const piece of figures.pieces) {
-        for (const total of [piece.across, piece.along]) {
-          const cards = [0, 1, -1, 2, -2, 3, 4].some((count) =>
-            same(roundTo(total - count * piece.thickness, step, 'nearest'), snap(total - count * piece.thickness)),
-          );
-          expect(cards, `${piece.name}: ${total} on ${sizing.grid}`).toBe(true);
-        }
-      }
-    }
   });
 });
