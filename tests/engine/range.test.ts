@@ -209,6 +209,14 @@ function* offTheRuler(
     if (rounded.every(Boolean) && !onGrid(total, step)) yield `${def.name} is ${total} ${way}, off the grid`;
   }
 }
+/** A blank is whole steps and card thicknesses wide and tall: those are counted out in the pattern, four at most. */
+function* offTheGrid({ sizing, figures }: Judged): Generator<string> {
+  const { step } = GRIDS[sizing.grid];
+  for (const { name, across, along, thickness } of figures.pieces)
+    for (const total of [across, along])
+      if (![0, 1, -1, 2, -2, 3, 4].some((cards) => onGrid(total - cards * thickness, step)))
+        yield `${name}: ${total} is off the grid`;
+}
 /** Names of measures that are rounded to the grid. */
 const roundedNames = (model: Model): ReadonlySet<string> =>
   new Set(
@@ -234,6 +242,7 @@ function* unsound(name: string, { outline, holes, panels }: Net): Generator<stri
 function* faultsOf(judged: Judged, slug: string, names: ReadonlySet<string>, seen: Set<string>): Generator<string> {
   yield* unequal(judged, slug, seen);
   yield* misrounded(judged);
+  yield* offTheGrid(judged);
   for (const { piece } of gridsOf(judged.model)) yield* offTheRuler(judged, slug, piece, names);
   for (const { name, net } of judged.figures.pieces) yield* unsound(name, net);
 }

@@ -13,10 +13,10 @@ import {
 import { SLUGS, inch, modelOf, patternOf } from './patterns';
 
 describe('sweep', () => {
-  it.each(SLUGS)('finds nothing that fails anywhere in the range of %s', (slug) => {
+  it.each(SLUGS)('finds nothing that fails at the corners and edges of the range of %s', (slug) => {
     const model = modelOf(slug);
     for (const grid of ['1/16in', '1mm'] as const) {
-      const found = sweep(model, usualSizing(model, grid === '1mm' ? 'mm' : 'in', grid), { count: 200 });
+      const found = sweep(model, usualSizing(model, grid === '1mm' ? 'mm' : 'in', grid), { count: 80 });
       expect(found.first, JSON.stringify(found.first)).toBeNull();
     }
   });
