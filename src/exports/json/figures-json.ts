@@ -61,6 +61,10 @@ export function figuresJson(model: Model, figures: Figures, { stock, copies }: F
           }
         : {}),
     },
+    materials: {
+      ...figures.materials,
+      extras: figures.materials.extras.map(({ name, kind, value }) => ({ name, kind, value: known(value) })),
+    },
     departure: figures.departure,
     problems: figures.problems.map(({ code, measure, sentence, nearest }) => ({ code, measure, sentence, nearest })),
   };

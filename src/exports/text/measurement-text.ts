@@ -9,6 +9,7 @@ import {
   type Model,
   type Stock,
 } from '@/engine';
+import { materialRows } from '@/exports/material-rows';
 
 /** The measurement sheet as plain text, for a terminal or a letter: sizes, cut list, making, fits, sheets, departure. */
 export function measurementText(
@@ -41,6 +42,9 @@ export function measurementText(
       `  ${index + 1} ${piece.name}, cut ${piece.count * options.copies}: ${bare(piece.across)} × ${length(piece.along)}`,
       ...piece.instructions.map((sentence) => `      ${say(sentence, sizing)}`),
     ]),
+    '',
+    'MATERIALS',
+    ...materialRows(figures).map(({ name, amount }) => `  ${name}  ${amount}`),
     '',
     'FITS',
     ...figures.fits.map(
