@@ -91,27 +91,30 @@ export function judge(model: Model, sizing: Sizing): { figures: Figures; values:
 // ── Measures ─────────────────────────────────────────────────────────────────────────────────────────────────────────
 
 function measureFigure(measure: CompiledMeasure, sizing: Sizing, { exact, cut }: BothValues): MeasureFigure {
-  const { def, slot, says, from, to } = measure;
-  const asked = from !== undefined && to !== undefined;
+  const { def, slot, says, from, to, formula } = measure;
+  const exactly = snap(exact[slot] as number);
+  // Already snapped when it was rounded.
+  const asCut = cut[slot] as number;
+  const inUse = isInUse(measure, cut);
+  const { name, unit } = def;
+  // Spelled out, not spread: a size makes hundreds of these.
+  if (from === undefined || to === undefined)
+    return unit
+      ? { name, kind: says, asked: false, exact: exactly, cut: asCut, inUse, unit }
+      : { name, kind: says, asked: false, exact: exactly, cut: asCut, inUse };
   const figure = {
-    name: def.name,
+    name,
     kind: says,
-    asked,
-    exact: snap(exact[slot] as number),
-    // Already snapped when it was rounded.
-    cut: cut[slot] as number,
-    inUse: isInUse(measure, cut),
-  };
-  const unit = def.unit ? { unit: def.unit } : null;
-  if (!asked) return unit ? { ...figure, ...unit } : figure;
-  return {
-    ...figure,
-    ...unit,
+    asked: true,
+    exact: exactly,
+    cut: asCut,
+    inUse,
     from: from.work(exact),
     to: to.work(exact),
-    usual: measure.formula.work(exact),
+    usual: formula.work(exact),
     set: answerTo(measure, sizing) !== undefined,
   };
+  return unit ? { ...figure, unit } : figure;
 }
 
 /** Out of its range, or without a value at this size. */

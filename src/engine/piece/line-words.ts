@@ -171,6 +171,8 @@ function harmless(net: Net, axis: Axis, at: number, spans: Ruled['spans']): bool
   const loops = [net.outline, ...net.holes];
   const meets = loops.flatMap((loop) =>
     loop.flatMap((curve) => {
+      const [before, after] = [read(curve.from) - at, read(curve.to) - at];
+      if (curve.type === 'line' && before * after > 0 && Math.min(Math.abs(before), Math.abs(after)) > 1) return [];
       const points = [curve.from, ...flatten(curve)];
       return points.slice(1).flatMap((to, index) => crossings(points[index] as Point, to, at, read, run));
     }),
