@@ -1,4 +1,4 @@
-import { esc } from '@/exports/escape';
+import { escXml } from '@/exports/escape';
 
 /** One published project as the feed tells of it. */
 export interface FeedEntry {
@@ -34,12 +34,12 @@ export function atomFeed({ siteUrl, title, entries, began }: Feed): string {
   return [
     '<?xml version="1.0" encoding="utf-8"?>',
     '<feed xmlns="http://www.w3.org/2005/Atom" xml:lang="en">',
-    `<id>${text(siteUrl)}/feed.xml</id>`,
-    `<title>${text(title)}</title>`,
+    `<id>${escXml(siteUrl)}/feed.xml</id>`,
+    `<title>${escXml(title)}</title>`,
     `<updated>${updated.toISOString()}</updated>`,
-    `<link rel="self" type="application/atom+xml" href="${text(siteUrl)}/feed.xml"/>`,
-    `<link rel="alternate" type="text/html" href="${text(siteUrl)}/projects"/>`,
-    `<author><name>${text(title)}</name></author>`,
+    `<link rel="self" type="application/atom+xml" href="${escXml(siteUrl)}/feed.xml"/>`,
+    `<link rel="alternate" type="text/html" href="${escXml(siteUrl)}/projects"/>`,
+    `<author><name>${escXml(title)}</name></author>`,
     ...entries.map((entry) => entryXml(entry, siteUrl)),
     '</feed>',
     '',
@@ -50,18 +50,15 @@ function entryXml(entry: FeedEntry, siteUrl: string): string {
   const address = `${siteUrl}/projects/${encodeURIComponent(entry.slug)}`;
   return [
     '<entry>',
-    `<id>${text(`${siteUrl}/projects/${entry.projectId}`)}</id>`,
-    `<title>${text(entry.title)}</title>`,
-    `<link rel="alternate" type="text/html" href="${text(address)}"/>`,
+    `<id>${escXml(`${siteUrl}/projects/${entry.projectId}`)}</id>`,
+    `<title>${escXml(entry.title)}</title>`,
+    `<link rel="alternate" type="text/html" href="${escXml(address)}"/>`,
     `<published>${entry.firstPublished.toISOString()}</published>`,
     `<updated>${entry.updated.toISOString()}</updated>`,
-    `<author><name>${text(entry.author)}</name></author>`,
-    `<category term="${text(entry.group)}"/>`,
-    `<summary type="text">${text(entry.correctionNote === '' ? entry.summary : `Edition ${entry.edition}: ${entry.correctionNote}`)}</summary>`,
-    `<content type="html">${text(entry.content)}</content>`,
+    `<author><name>${escXml(entry.author)}</name></author>`,
+    `<category term="${escXml(entry.group)}"/>`,
+    `<summary type="text">${escXml(entry.correctionNote === '' ? entry.summary : `Edition ${entry.edition}: ${entry.correctionNote}`)}</summary>`,
+    `<content type="html">${escXml(entry.content)}</content>`,
     '</entry>',
   ].join('\n');
 }
-
-/** XML 1.0 has no place for most control characters, not even escaped. */
-const text = (words: string): string => esc(words.replace(/[\u0000-\u0008\u000b\u000c\u000e-\u001f\ufffe\uffff]/g, ''));
