@@ -3,6 +3,7 @@ import {
   around,
   compilePattern,
   evaluate,
+  keyOf,
   largest,
   planSheets,
   sweep,
@@ -19,6 +20,16 @@ describe('sweep', () => {
       const found = sweep(model, usualSizing(model, grid === '1mm' ? 'mm' : 'in', grid), { count: 80 });
       expect(found.first, JSON.stringify(found.first)).toBeNull();
     }
+  });
+  it.each(SLUGS)('finds nothing that fails with any choice in %s, in decorative layers', (slug) => {
+    const model = modelOf(slug);
+    const usual = usualSizing(model, 'mm', '1mm');
+    for (const { name, options } of model.pattern.choices)
+      for (const option of options) {
+        const choices = { ...usual.choices, layers: 'every outer face', [keyOf(name)]: option };
+        const found = sweep(model, { ...usual, choices }, { count: 80, seed: 5 });
+        expect(found.first, JSON.stringify(found.first)).toBeNull();
+      }
   });
   it('names the first failing sizing and the range that works', () => {
     const pattern: Pattern = {
