@@ -1,7 +1,7 @@
 import { loadavg } from 'node:os';
 import { performance } from 'node:perf_hooks';
 import { packer } from 'guillotine-packer';
-import type * as MaxRects from 'maxrects-packer';
+import type * as MaxRects from 'maxrects-packer/dist/index';
 import { planSheets } from '@/engine';
 import { print } from './measure';
 import { apart, cutFree, type Placed } from './sheet-check';
@@ -106,25 +106,13 @@ function ours(budget: string, turned: boolean): Contestant {
       const figures = pieces.map((piece, index) => ({
         name: `${index}`,
         ...piece,
-        ...(turned ? {} : { net: FOLDED_ALONG }),
+        ...(turned ? {} : { foldsRun: 'along' as const }),
       }));
       const plan = planSheets({ pieces: figures }, { stock, spent, folds: turned ? 'either' : 'along the grain' });
       return plan.sheets.map(({ parts }) => parts);
     },
   };
 }
-/** All that the planner asks of a net: a fold that runs along, which holds the piece to the grain. */
-const FOLDED_ALONG = {
-  folds: [
-    {
-      curve: { type: 'line', from: { x: 0, y: 0 }, to: { x: 0, y: 1 } },
-      kind: 'valley',
-      angle: 90,
-      panels: ['one', 'other'],
-    },
-  ],
-} as const;
-
 const guillotinePacker = (turned: boolean): Contestant => ({
   name: 'guillotine-packer 1.0.2, all its strategies',
   guillotine: true,

@@ -57,7 +57,15 @@ function onBlank(net: Net, step: number): Net {
   const box = boundsOf(net.outline);
   const size = (mm: number) => (step > 0 ? roundTo(mm, step, 'up') : snap(mm));
   const [across, along] = [size(box.right - box.left), size(box.bottom - box.top)];
-  const by = { x: (across - (box.right - box.left)) / 2 - box.left, y: (along - (box.bottom - box.top)) / 2 - box.top };
+  const moved = moveNet(net, {
+    x: (across - (box.right - box.left)) / 2 - box.left,
+    y: (along - (box.bottom - box.top)) / 2 - box.top,
+  });
+  return { ...moved, across, along, columns: [0, across], rows: [0, along] };
+}
+
+/** The same card drawn elsewhere; its blank stays where it is. */
+export function moveNet(net: Net, by: Point): Net {
   const point = (at: Point): Point => ({ x: at.x + by.x, y: at.y + by.y });
   const curve = <T extends Curve>(one: T): T =>
     one.type === 'line'
@@ -66,10 +74,6 @@ function onBlank(net: Net, step: number): Net {
   const loop = (curves: Loop): Loop => curves.map(curve);
   return {
     ...net,
-    across,
-    along,
-    columns: [0, across],
-    rows: [0, along],
     outline: loop(net.outline),
     holes: net.holes.map(loop),
     panels: net.panels.map((panel) => ({

@@ -18,12 +18,17 @@ export function foldsRun({ folds }: Pick<Net, 'folds'>): 'across' | 'along' | nu
 
 /** How a piece may lie on the part of a sheet that is used; null when it fits no way that the grain allows. */
 export function lieOf(
-  piece: { readonly across: number; readonly along: number; readonly net?: Pick<Net, 'folds'> },
+  piece: {
+    readonly across: number;
+    readonly along: number;
+    readonly net?: Pick<Net, 'folds'>;
+    readonly foldsRun?: 'across' | 'along';
+  },
   { grain = 'along' }: Pick<Stock, 'grain'>,
   room: { readonly across: number; readonly along: number },
   folds: Folds,
 ): Lie | null {
-  const runs = folds === 'either' || !piece.net ? null : foldsRun(piece.net);
+  const runs = folds === 'either' ? null : (piece.foldsRun ?? (piece.net ? foldsRun(piece.net) : null));
   const asDrawn = runs === null || (runs === grain) === (folds === 'along the grain');
   const turned = runs === null || !asDrawn;
   const fits = (across: number, along: number) => atLeast(room.across, across) && atLeast(room.along, along);

@@ -1,9 +1,10 @@
 import { snap } from '../measure';
-import type { Net, PieceDef, PieceFigure } from '../types';
+import type { PieceDef, PieceFigure, Sizing } from '../types';
 import { blanksOf, type Blank } from './blanks';
 import { cutsOf, type Cut, type Offcut, type Part } from './cuts';
 import { layOut } from './layout';
 import { lieOf, type Folds } from './grain';
+import type { Joined } from './joined';
 import { packings, type Packing } from './repair';
 import { STOCKS, type Stock, type StockId } from './stock';
 import { tooLargeOf, type TooLarge } from './too-large';
@@ -12,7 +13,10 @@ import { treeOf } from './tree';
 export type Material = PieceDef['stock'];
 /** What is planned of a piece: its blank, how many, what it is made of, and its folds where the grain matters. */
 export type PlannedPiece = Pick<PieceFigure, 'name' | 'count' | 'across' | 'along'> &
-  Partial<Pick<PieceFigure, 'stock'>> & { readonly net?: Pick<Net, 'folds'> };
+  Partial<PieceFigure> & {
+    /** How its folds run, where there is no net to tell. */
+    readonly foldsRun?: 'across' | 'along';
+  };
 
 export interface PlanOptions {
   /** One sold everywhere, or one's own. */
@@ -25,6 +29,8 @@ export interface PlanOptions {
   readonly margin?: number;
   /** How folds must run; usual either way. */
   readonly folds?: Folds;
+  /** Names of pieces that are made of two, joined with a tab at a fold, should they be too large. */
+  readonly join?: readonly string[];
   /** Trials for each material; more find better plans. */
   readonly tries?: number;
   /** Another seed tries other things. The same pieces, seed and tries give the same plan. */
@@ -52,16 +58,24 @@ export interface SheetPlan {
   readonly offcut: { readonly sheet: number; readonly offcut: Offcut } | null;
   /** Pieces larger than the sheet however they lie; they are in no sheet. */
   readonly tooLarge: readonly TooLarge[];
+  /** Pieces that were too large and are made of two; the parts stand in `sheets` under their own names. */
+  readonly joined: readonly (Joined & { readonly name: string })[];
 }
 /** A stretch of planning: the plan so far when it became better, laid out when it is asked for; else null. */
 export type PlanProgress = (() => SheetPlan) | null;
 
 const TRIES = 400;
 
+/** What is planned: pieces, and the cut grid that an added tab keeps to. */
+export interface Planned {
+  readonly pieces: readonly PlannedPiece[];
+  readonly sizing?: Pick<Sizing, 'grid'>;
+}
+
 /** Plans straight edge-to-edge cuts, as a trimmer makes them: fewest sheets first, then the largest offcut. */
-export function planSheets(figures: { readonly pieces: readonly PlannedPiece[] }, options: PlanOptions): SheetPlan {
+export function planSheets(planned: Planned, options: PlanOptions): SheetPlan {
   let newest: PlanProgress = null;
-  for (const better of planning(figures, options)) newest = better ?? newest;
+  for (const better of planning(planned, options)) newest = better ?? newest;
   return (newest as () => SheetPlan)();
 }
 
@@ -69,22 +83,52 @@ export function planSheets(figures: { readonly pieces: readonly PlannedPiece[] }
  * The same in short stretches of work, for a worker that shows progress and may stop after any of them. The first gives a
  * whole plan.
  */
-export function* planning(
-  { pieces }: { readonly pieces: readonly PlannedPiece[] },
-  options: PlanOptions,
-): Generator<PlanProgress, void> {
-  const groups = groupsOf(pieces, options);
+export function* planning(planned: Planned, options: PlanOptions): Generator<PlanProgress, void> {
   const { seed = 1, tries = TRIES, spent = (trials: number) => trials / tries } = options;
+  const sorted = sortOut(planned, options);
+  const groups = groupsOf(sorted.pieces, options);
   const runs = groups.map(({ blanks }) => packings(blanks, { seed, spent }));
   const best = runs.map((run): Packing | null => run.next().value ?? null);
-  const plan = () => planOf(groups, [...best], pieces, options);
-  yield plan;
+  const plan = (): PlanProgress => {
+    const now = [...best];
+    return () => planOf(groups, now, sorted, options);
+  };
+  yield plan();
   for (const [index, run] of runs.entries()) {
     for (const found of run) {
       if (found) best[index] = found;
-      yield found ? plan : null;
+      yield found ? plan() : null;
     }
   }
+}
+
+interface Sorted extends Pick<SheetPlan, 'tooLarge' | 'joined'> {
+  /** What the sheets can hold. */
+  readonly pieces: readonly PlannedPiece[];
+}
+/** Sets apart what is too large, and puts two parts in its place where that is asked for and can be. */
+function sortOut({ pieces, sizing }: Planned, options: PlanOptions): Sorted {
+  const { margin = 0, folds = 'either', join = [] } = options;
+  const grid = sizing?.grid ?? '1/16in';
+  const large = new Map<PlannedPiece, TooLarge>();
+  for (const piece of pieces) {
+    const stock = stockFor(piece.stock ?? 'card', options);
+    if (lieOf(piece, stock, usable(stock, margin), folds) === null)
+      large.set(piece, tooLargeOf(piece, { stock, margin, folds, grid }));
+  }
+  const joinedOf = (piece: PlannedPiece): Joined | null =>
+    join.includes(piece.name) ? (large.get(piece)?.joined ?? null) : null;
+  return {
+    pieces: pieces.flatMap((piece) => (large.has(piece) ? [...(joinedOf(piece)?.parts ?? [])] : [piece])),
+    tooLarge: pieces.flatMap((piece) => {
+      const one = large.get(piece);
+      return one && !joinedOf(piece) ? [one] : [];
+    }),
+    joined: pieces.flatMap((piece) => {
+      const joined = joinedOf(piece);
+      return joined ? [{ name: piece.name, ...joined }] : [];
+    }),
+  };
 }
 
 interface Group {
@@ -127,10 +171,10 @@ function groupsOf(pieces: readonly PlannedPiece[], options: PlanOptions): Group[
 function planOf(
   groups: readonly Group[],
   best: readonly (Packing | null)[],
-  pieces: readonly PlannedPiece[],
+  { tooLarge, joined }: Sorted,
   options: PlanOptions,
 ): SheetPlan {
-  const { copies = 1, margin = 0, folds = 'either' } = options;
+  const { copies = 1, margin = 0 } = options;
   const nextName = letters();
   const sheets = groups.flatMap(({ material, stock, names, blanks }, index) =>
     (best[index]?.sheets ?? [])
@@ -156,12 +200,8 @@ function planOf(
       (most, one) => (most && areaOf(most) >= areaOf(one) ? most : one),
       null,
     ),
-    tooLarge: pieces.flatMap((piece) => {
-      const stock = stockFor(piece.stock ?? 'card', options);
-      return lieOf(piece, stock, usable(stock, margin), folds) === null
-        ? [tooLargeOf(piece, stock, margin, folds)]
-        : [];
-    }),
+    tooLarge,
+    joined,
   };
 }
 

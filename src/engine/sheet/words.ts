@@ -58,12 +58,24 @@ const size = ({
   readonly along: number;
 }): readonly [SentenceFigure, string, SentenceFigure] => [{ mm: across, bare: true }, ' × ', { mm: along, bare: true }];
 
-/** What would help with a piece that is too large: what the sheet has room for, and which sheets would hold it. */
-export function helpWithTooLarge({ room, fits }: TooLarge): Sentence {
+/** What would help with a piece that is too large: what the sheet has room for, which sheets would hold it, whether it can be joined. */
+export function helpWithTooLarge({ room, fits, joined }: TooLarge): Sentence {
   const names = fits.map(({ name }) => name);
-  const others =
-    names.length === 0
-      ? 'No sheet known here would hold it: make the box smaller, or join the piece from two parts at a fold.'
-      : `${names.length === 1 ? '' : `${names.slice(0, -1).join(', ')} or `}${names.at(-1)} would hold it.`;
-  return ['The sheet has room for ', { mm: room.across, bare: true }, ' × ', { mm: room.along }, `. ${others}`];
+  const list = names.length < 2 ? names.join() : `${names.slice(0, -1).join(', ')} or ${names.at(-1)}`;
+  const larger = names.length === 0 ? 'No sheet known here would hold it.' : `${list} would hold it.`;
+  const last = joined
+    ? ' Or make it of two parts, joined at a fold.'
+    : names.length === 0
+      ? ' Make the box smaller.'
+      : '';
+  return ['The sheet has room for ', { mm: room.across, bare: true }, ' × ', { mm: room.along }, `. ${larger}${last}`];
+}
+
+/** How the two parts of a joined piece come together. */
+export function joiningInWords({ name, tab, parts: [first, second] }: SheetPlan['joined'][number]): Sentence {
+  return [
+    `The ${name} is made of two parts. The ${first.name.toLowerCase()} has an extra tab of `,
+    { mm: tab },
+    `: fold it as the score says and glue it behind the ${second.name.toLowerCase()}, edge to edge at the fold.`,
+  ];
 }
