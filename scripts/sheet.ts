@@ -1,7 +1,7 @@
 /**
  * The measurement sheet on the command line:
  *   npm run --silent sheet -- book-box --set 'inside depth=2 in' --choose spine=curved --units in --grid 1/16in --format json
- *   npm run --silent sheet -- book-box --format pdf --paper a4 --out sheet.pdf
+ *   npm run --silent sheet -- book-box --format pdf [--templates] --paper a4 --out sheet.pdf
  *   npm run --silent sheet -- --list [--format json]
  * Exit code 0; 1 when the sizing is out of range or a fit fails (the sheet is printed all the same); 2 for a bad argument.
  */
@@ -28,6 +28,7 @@ import {
 import { figuresJson } from '@/exports/json/figures-json';
 import type { PaperId } from '@/exports/paper';
 import { measurementPdf } from '@/exports/pdf/measurement-sheet.server';
+import { templatesPdf } from '@/exports/pdf/templates-pdf.server';
 import { measurementText } from '@/exports/text/measurement-text';
 import { patternSheet } from '@/features/editions/paper/sheet-content';
 import { PatternFileError } from '@/features/patterns/load-pattern';
@@ -56,6 +57,7 @@ function readArguments() {
         copies: { type: 'string', default: '1' },
         format: { type: 'string', default: 'text' },
         paper: { type: 'string' },
+        templates: { type: 'boolean', default: false },
         out: { type: 'string' },
         list: { type: 'boolean', default: false },
       },
@@ -162,11 +164,14 @@ async function run(): Promise<number> {
   const copies = Number(values.copies);
   if (!Number.isInteger(copies) || copies < 1 || copies > 500)
     throw new BadArgument(`--copies “${values.copies}” is not a whole number from 1 to 500.`);
+  if (values.templates && format !== 'pdf') throw new BadArgument('--templates goes with --format pdf.');
   const figures = evaluate(model, readSizing(model, values));
   const paper = oneOf('The paper', values.paper ?? (values.units === 'in' ? 'letter' : 'a4'), PAPERS);
   const written = (as: (typeof FORMATS)[number]): string | Promise<Uint8Array> => {
-    if (as === 'pdf')
-      return measurementPdf(patternSheet({ model, figures, plan: planSheets(figures, { stock, copies }) }), paper);
+    if (as === 'pdf') {
+      const content = patternSheet({ model, figures, plan: planSheets(figures, { stock, copies }) });
+      return values.templates ? templatesPdf(content, paper) : measurementPdf(content, paper);
+    }
     return as === 'json'
       ? `${JSON.stringify(figuresJson(model, figures, { stock, copies }), null, 2)}\n`
       : measurementText(model, figures, { stock, copies });

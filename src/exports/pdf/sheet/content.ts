@@ -18,6 +18,8 @@ export interface SheetContent {
   /** The day the edition was published. */
   readonly date: Date;
 }
+/** What templates say of it. */
+export type TemplatesContent = Pick<SheetContent, 'title' | 'byline' | 'figures' | 'sizeWords' | 'date'>;
 export interface Fact {
   readonly term: string;
   readonly value: string;

@@ -1,6 +1,7 @@
 import { setImmediate } from 'node:timers/promises';
 import { config } from '@/config.server';
 import { measurementPdf } from '@/exports/pdf/measurement-sheet.server';
+import { templatesPdf } from '@/exports/pdf/templates-pdf.server';
 import type { PaperId } from '@/exports/paper';
 import type { ReaderPage } from '@/features/editions/reader-page.server';
 import { publicHeaders, hasTag, notModified, tagOf } from '@/features/editions/public-answer';
@@ -78,5 +79,5 @@ function make({ edition, model, view, links }: ReaderPage, kind: PaperKind, pape
   const figures = view.verdict.shown;
   const address = `${config.siteUrl}${sizingHref(links, figures.sizing)}`;
   const content = editionSheet({ model, figures, plan: view.plan }, edition, address);
-  return measurementPdf(content, paper);
+  return kind === 'sheet' ? measurementPdf(content, paper) : templatesPdf(content, paper);
 }
