@@ -1,23 +1,14 @@
 import { spawnSync } from 'node:child_process';
 import { join } from 'node:path';
 import { describe, expect, it } from 'vitest';
-import { STOCKS, evaluate, keyOf, usualSizing, type Figures, type Model, type Sizing, type Unit } from '@/engine';
+import { STOCKS, evaluate, usualSizing, type Figures, type Sizing, type Unit } from '@/engine';
 import { figuresJson } from '@/exports/json/figures-json';
 import { measurementText } from '@/exports/text/measurement-text';
-import { SLUGS, modelOf } from '../engine/patterns';
+import { SLUGS, atEnd, modelOf } from '../engine/patterns';
 
 const OPTIONS = { stock: STOCKS['12x12in'], copies: 1 };
 const root = join(import.meta.dirname, '../..');
 
-/** Every foremost measure at this end of its range, one after the other, as the answers before leave it. */
-function atEnd(model: Model, base: Sizing, end: 'from' | 'to'): Sizing {
-  return model.pattern.measures.reduce((sizing, { name, ask }) => {
-    if (!ask || ask.finer) return sizing;
-    const figure = evaluate(model, sizing).measures.find((measure) => measure.name === name);
-    const value = figure?.inUse ? figure[end] : undefined;
-    return value === undefined ? sizing : { ...sizing, values: { ...sizing.values, [keyOf(name)]: value } };
-  }, base);
-}
 const MEASURE = ['name', 'kind', 'exact', 'cut', 'shown'];
 const PIECE = ['name', 'count', 'stock', 'across', 'along', 'scores', 'area', 'perimeter', 'instructions'];
 

@@ -20,12 +20,12 @@ export function readXml(xml: string): XmlElement {
   return root;
 
   function element(): XmlElement {
-    const open = /^<([a-z]+)((?:\s+[\w:]+="[^"<]*")*)\s*(\/?)>/i.exec(xml.slice(at));
+    const open = /^<([a-z]+)((?:\s+[\w:-]+="[^"<]*")*)\s*(\/?)>/i.exec(xml.slice(at));
     if (!open) throw new Error(`No element begins at: ${xml.slice(at, at + 60)}`);
     at += open[0].length;
     const name = open[1] as string;
     const attributes = Object.fromEntries(
-      [...(open[2] ?? '').matchAll(/([\w:]+)="([^"]*)"/g)].map((pair) => [pair[1], decode(pair[2] ?? '')]),
+      [...(open[2] ?? '').matchAll(/([\w:-]+)="([^"]*)"/g)].map((pair) => [pair[1], decode(pair[2] ?? '')]),
     );
     const children: XmlElement[] = [];
     let content = '';

@@ -90,3 +90,12 @@ function answerAt({ name, kind }: MeasureDef, from: number, to: number, share: n
   const parts = name === 'card thickness' ? 100 : 1000;
   return snap(share === 0 || share === 1 ? value : Math.min(to, Math.max(from, Math.round(value * parts) / parts)));
 }
+/** Every foremost measure at this end of its range, one after the other, as the answers before leave it. */
+export function atEnd(model: Model, base: Sizing, end: 'from' | 'to'): Sizing {
+  return model.pattern.measures.reduce((sizing, { name, ask }) => {
+    if (!ask || ask.finer) return sizing;
+    const figure = evaluate(model, sizing).measures.find((measure) => measure.name === name);
+    const value = figure?.inUse ? figure[end] : undefined;
+    return value === undefined ? sizing : { ...sizing, values: { ...sizing.values, [keyOf(name)]: value } };
+  }, base);
+}
