@@ -53,6 +53,20 @@ export const accounts = sqliteTable(
   (t) => [primaryKey({ columns: [t.provider, t.providerAccountId] })],
 );
 
+/** The sheets that a reader has, in their own order; `card` is a sheet as links write it. */
+export const sheets = sqliteTable(
+  'sheet',
+  {
+    userId: text('user_id')
+      .notNull()
+      .references(() => users.id, { onDelete: 'cascade' }),
+    card: text('card').notNull(),
+    count: integer('count').notNull(),
+    place: integer('place').notNull(),
+  },
+  (t) => [primaryKey({ columns: [t.userId, t.card] })],
+);
+
 // ── Projects and editions ────────────────────────────────────────────────────────────────────────────────────────────
 
 export const projects = sqliteTable(

@@ -88,6 +88,10 @@ export const ROUTES: readonly RouteRow[] = [
   { path: '/api/account/password', method: 'PUT', who: 'reader', body: { next: 'seven damp snails' } },
   { path: '/api/account/export', method: 'GET', who: 'reader' },
 
+  { path: '/api/sheets', method: 'GET', who: 'reader' },
+  { path: '/api/sheets', method: 'PUT', who: 'reader', body: { sheets: [{ card: 'a4', count: 20 }] } },
+  { path: '/api/sheets/merge', method: 'POST', who: 'reader', body: { sheets: [{ card: 'a4', count: 20 }] } },
+
   { path: '/api/admin/people', method: 'GET', who: 'admin' },
   {
     path: '/api/admin/people/[id]',

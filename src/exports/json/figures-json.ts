@@ -6,19 +6,20 @@ import {
   showValue,
   type Figures,
   type Model,
+  type PlanOptions,
   type Sizing,
   type Stock,
 } from '@/engine';
 
-export interface FiguresJsonOptions {
+export interface FiguresJsonOptions extends Pick<PlanOptions, 'folds'> {
   readonly stock: Stock;
   readonly copies: number;
 }
 
 /** What the command line prints and `figures.json` answers: lengths in millimetres, angles in degrees, areas in mm². */
-export function figuresJson(model: Model, figures: Figures, { stock, copies }: FiguresJsonOptions) {
+export function figuresJson(model: Model, figures: Figures, options: FiguresJsonOptions) {
   const { sizing } = figures;
-  const plan = planSheets(figures, { stock, copies });
+  const plan = planSheets(figures, options);
   return {
     pattern: model.pattern.slug,
     sizing: sizingOf(figures, sizing),
@@ -42,8 +43,8 @@ export function figuresJson(model: Model, figures: Figures, { stock, copies }: F
     })),
     fits: figures.fits.map(({ name, holds, gap, advice }) => ({ name, holds, gap, ...(advice ? { advice } : {}) })),
     sheets: {
-      stock: stock.id,
-      count: copies,
+      stock: options.stock.id,
+      count: options.copies,
       used: plan.used,
       plan: plan.sheets.map((sheet, index) => ({
         parts: sheet.parts,

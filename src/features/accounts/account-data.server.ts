@@ -1,6 +1,6 @@
 import { and, eq, inArray, or, sql } from 'drizzle-orm';
 import { db, type Transaction } from '@/db/client.server';
-import { editions, letters, mailings, projects, subscribers, uploads, users } from '@/db/schema';
+import { editions, letters, mailings, projects, sheets, subscribers, uploads, users } from '@/db/schema';
 import { dropPictureFiles } from '@/features/uploads/storage.server';
 import { GONE_DOMAIN, lastAdmin, type Person, type Refused } from './people.server';
 
@@ -30,6 +30,12 @@ export function exportOwnData(person: Person) {
           leftAt: subscription.leftAt,
         }
       : null,
+    sheets: db
+      .select({ card: sheets.card, count: sheets.count })
+      .from(sheets)
+      .where(eq(sheets.userId, person.id))
+      .orderBy(sheets.place)
+      .all(),
     projects: own,
     editions:
       ids.length > 0
@@ -98,6 +104,8 @@ function removePerson(tx: Transaction, person: Person, keepName: boolean): { ok:
   const kept = publishedAmong(tx, own);
   const pictures = unusedPictures(tx, person.id, kept);
   if (pictures.length > 0) tx.delete(uploads).where(inArray(uploads.id, pictures)).run();
+  // The person's row may stay, emptied: what they have at home goes in any case.
+  tx.delete(sheets).where(eq(sheets.userId, person.id)).run();
   const drafts = own.filter((id) => !kept.includes(id));
   if (drafts.length > 0) tx.delete(projects).where(inArray(projects.id, drafts)).run();
 
