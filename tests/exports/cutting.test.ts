@@ -186,7 +186,7 @@ describe('DXF', () => {
 
   it('has a layer for each work in its own colour, and nothing on layer 0', () => {
     expect(layers).toMatchObject({ CUT: 1, SCORE: 5, DRAW: 3 });
-    expect(types.sort()).toEqual(['LINE', 'LWPOLYLINE', 'LWPOLYLINE', 'LWPOLYLINE']);
+    expect([...types].sort()).toEqual(['LINE', 'LWPOLYLINE', 'LWPOLYLINE', 'LWPOLYLINE']);
     const works = readDxf(cuttingDxf(rowLayout(pieces('gusset-bag'), { glue: true }))).lines.map(({ work }) => work);
     expect(new Set(works)).toEqual(new Set(['draw', 'valley', 'mountain', 'cut']));
   });
