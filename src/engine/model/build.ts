@@ -13,17 +13,9 @@ import {
   type GridPiece,
   type TabShape,
 } from '../piece';
-import { keyOf } from '../pattern/names';
+import { CUT_GRID, keyOf } from '../pattern/names';
 import type { Net, PieceFigure, Side } from '../types';
-import {
-  CUT_GRID,
-  type CompiledGrid,
-  type CompiledLine,
-  type CompiledPiece,
-  type Conditional,
-  type Model,
-  type Pair,
-} from './model';
+import type { CompiledGrid, CompiledLine, CompiledPiece, Conditional, Model, Pair } from './model';
 import { isInUse } from './values';
 
 /** A built piece, with the worked-out grid where there is one: its words need the cells. */

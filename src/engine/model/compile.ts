@@ -15,12 +15,19 @@ import {
   type Scope,
 } from '../formula';
 import { SAYS } from '../pattern/messages';
-import { drawnNames, isFunctionName, isName, keyOf, reservedWordIn, sizeNames } from '../pattern/names';
-import type { Fault, MaterialDef, Pattern, PieceDef, Result } from '../types';
-import { compileShape } from './compile-shape';
 import {
   CARD_THICKNESS,
   CUT_GRID,
+  drawnNames,
+  isFunctionName,
+  isName,
+  keyOf,
+  reservedWordIn,
+  sizeNames,
+} from '../pattern/names';
+import type { Fault, MaterialDef, Pattern, PieceDef, Result } from '../types';
+import { compileShape } from './compile-shape';
+import {
   formulasOf,
   sizesOf,
   sizeStep,

@@ -16,10 +16,6 @@ import type {
   Side,
 } from '../types';
 
-/** One step of the reader's cut grid; nothing in the exact evaluation. Always there, for tolerances. */
-export const CUT_GRID = 'cut grid';
-export const CARD_THICKNESS = 'card thickness';
-
 /** A pattern whose every formula is checked and compiled. Made by `compilePattern`, read by `evaluate`. */
 export interface Model {
   readonly pattern: PatternHead;

@@ -1,11 +1,11 @@
 import type { Values } from '../formula';
 import { GRIDS, isZero, same, snap } from '../measure';
 import { perimeterOf } from '../net';
-import { keyOf } from '../pattern/names';
+import { CARD_THICKNESS, keyOf } from '../pattern/names';
 import { areaOfNet, fanSizes, figureMaker, makingOf } from '../piece';
 import type { Net, PieceFigure, Sentence, Sizing } from '../types';
 import { buildPiece } from './build';
-import { CARD_THICKNESS, type CompiledPiece, type Model } from './model';
+import type { CompiledPiece, Model } from './model';
 import { isInUse, type BothValues } from './values';
 
 /** A piece that cannot be cut at this size, and why: the end of a sentence. */

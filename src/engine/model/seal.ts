@@ -89,8 +89,6 @@ export function openModel({ pattern, names, steps, lists, texts }: SealedModel):
     return Object.fromEntries(Object.entries(value).map(([key, part]) => [key, opened(part)]));
   };
   const parts = opened(lists) as Omit<Model, 'pattern' | 'read' | 'scope' | 'slots' | 'steps'>;
-  const withDefs = <T>(list: readonly T[], defs: readonly unknown[]): T[] =>
-    list.map((one, index) => ({ ...one, def: defs[index] }));
   const measures: CompiledMeasure[] = withDefs(parts.measures, pattern.measures);
   const pieces: CompiledPiece[] = withDefs(parts.pieces, pattern.pieces);
   const bySlot = new Map<number, Step>(measures.map((measure) => [measure.slot, stepOf(measure)]));
@@ -131,6 +129,11 @@ export function openModel({ pattern, names, steps, lists, texts }: SealedModel):
       return { ok: false, faults: [fault] };
     },
   };
+}
+
+/** Definitions stand in the pattern, in the order of the list. */
+function withDefs<T>(list: readonly T[], defs: readonly unknown[]): T[] {
+  return list.map((one, index) => ({ ...one, def: defs[index] }));
 }
 
 /** What is still asked of a piece's definition once it is compiled. */

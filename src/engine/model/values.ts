@@ -1,8 +1,8 @@
 import type { Values } from '../formula';
 import { GRIDS, roundTo } from '../measure';
-import { keyOf } from '../pattern/names';
+import { CUT_GRID, keyOf } from '../pattern/names';
 import type { Sizing } from '../types';
-import { CUT_GRID, type CompiledMeasure, type Conditional, type Model } from './model';
+import type { CompiledMeasure, Conditional, Model } from './model';
 
 /** Values before and after rounding to the reader's cut grid, one number a slot. */
 export interface BothValues {

@@ -5,8 +5,10 @@ const NAME = /^\p{L}[\p{L}\p{N}]*(?: [\p{L}\p{N}]+)*$/u;
 const WORDS_OF_FORMULAS = ['if', 'then', 'else', 'and', 'or', 'not', 'is'];
 /** The measure by which figures and drawings know how thick the card is. */
 export const CARD_THICKNESS = 'card thickness';
+/** One step of the reader's cut grid; nothing in the exact evaluation. Always there, for tolerances. */
+export const CUT_GRID = 'cut grid';
 /** What every formula may use without a measure of that name. */
-const GIVEN: ReadonlySet<string> = new Set(['pi', 'cut grid']);
+const GIVEN: ReadonlySet<string> = new Set(['pi', CUT_GRID]);
 
 /** How names are compared: lower case, single spaces. */
 export const keyOf = (name: string): string => name.trim().toLowerCase().replace(/\s+/g, ' ');
