@@ -21,7 +21,7 @@ import {
 } from '@/engine';
 import { isInUse, workOut } from '@/engine/model/values';
 import { expectClose } from '../setup/expect-close';
-import { SLUGS, modelOf, sizingsOf } from './patterns';
+import { SLUGS, modelOf, patternOf, sizingsOf } from './patterns';
 
 // Two independent geometry libraries: flatten-js with true arcs, polygon-clipping with many short chords.
 
@@ -139,18 +139,19 @@ describe.each(SLUGS)('%s flat, at ten sizes', (slug) => {
       const { cut } = workOut(model, sizing);
       for (const { def, shape } of model.pieces) {
         const piece = figures.pieces.find(({ name }) => name === def.name);
-        if (shape.builder !== 'grid' || def.builder !== 'grid' || !piece) continue;
+        const written = patternOf(slug).pieces.find(({ name }) => name === def.name);
+        if (shape.builder !== 'grid' || written?.builder !== 'grid' || !piece) continue;
         const { net } = piece;
         const [wide, tall] = [shape.columns, shape.rows].map((list) =>
           list.map((track) => (isInUse(track, cut) ? track.size.work(cut) : 0)),
         ) as [number[], number[]];
         const cells = (keep: (cell: string) => boolean): number =>
-          def.cells.reduce(
+          written.cells.reduce(
             (sum, row, y) => sum + row.reduce((all, cell, x) => all + (keep(cell) ? wide[x]! * tall[y]! : 0), 0),
             0,
           );
         // A tab with a shape of its own, or a tooth on an arc, may stand out of its cell over the one beside it.
-        const shaped = new Set(def.tabs?.flatMap((tab) => (tab.shape ? tab.cells : [])));
+        const shaped = new Set(written.tabs?.flatMap((tab) => (tab.shape ? tab.cells : [])));
         const blank = net.across * net.along;
         const away = net.away.reduce((sum, one) => sum + one.across * one.along, 0);
         expectClose(

@@ -1,5 +1,6 @@
 import { GRIDS, helpWithTooLarge, say, show, type Figures, type Model, type SheetPlan, type Sizing } from '@/engine';
 import { esc } from '@/exports/escape';
+import { besides } from '@/exports/material-rows';
 import { cutWords, gapWords, insideWords, pieceCount, piecesWords, sheetsWords, timeWords } from './facts';
 import type { Panel } from './panel';
 import type { Typed } from './reader-store';
@@ -43,6 +44,7 @@ export function factsHtml(figures: Figures, plan: SheetPlan, minutes: number | n
     ['Finished, outside', `${outside} ${units}`],
     ['Card', esc(sheetsWords(plan))],
     ['Pieces', esc(piecesWords(pieceCount(figures)))],
+    ...besides(figures).map(({ name, amount }): [string, string] => [esc(capital(name)), esc(amount)]),
     ['Cut to', `${esc(cut.to)}; ${esc(cut.off)}`],
   ];
   const time = timeWords(minutes);
