@@ -45,6 +45,8 @@ export default defineConfig({
         "object-src 'none'",
         "base-uri 'self'",
         "form-action 'self'",
+        // Sheets are planned beside the page.
+        "worker-src 'self'",
       ],
     },
   },

@@ -57,6 +57,8 @@ export {
   drawPiece,
   drawSheet,
   foldedExtent,
+  usualTurn,
+  USUAL_TILT,
   say,
   sayParts,
   showPosition,

@@ -40,13 +40,16 @@ export function blanksOf(blanks: readonly Blank[], sheet: { readonly across: num
  * Fewer sheets than this cannot hold the blanks: neither by area, nor because blanks whose shorter side is more than half of
  * the sheet's longer one never share a sheet.
  */
-export function fewestSheets({ count, area, across, along, sheet }: Blanks): number {
+export function fewestSheets(blanks: Blanks): number {
+  const { count, across, along, sheet } = blanks;
   const half = Math.max(sheet.across, sheet.along) / 2;
-  let [total, large] = [0, 0];
+  let large = 0;
   for (let blank = 0; blank < count; blank += 1) {
-    total += area[blank] as number;
     if (Math.min(across[blank] as number, along[blank] as number) > half) large += 1;
   }
   // Sums of areas pass the 53 bits of a double; a hair less than a whole sheet is a whole sheet.
-  return Math.max(Math.ceil((total / sheet.area) * (1 - 1e-12)), large, count > 0 ? 1 : 0);
+  return Math.max(Math.ceil(areaShare(blanks) * (1 - 1e-12)), large, count > 0 ? 1 : 0);
 }
+
+/** The area of all blanks, in sheets. */
+export const areaShare = ({ area, sheet }: Blanks): number => area.reduce((sum, one) => sum + one, 0) / sheet.area;

@@ -35,8 +35,8 @@ export interface Cut {
   readonly rest: Freed;
 }
 
-/** Narrower than this, what is left over is no use: about a quarter of an inch. */
-const SLIVER = 6.35;
+/** Narrower than this, what is left over is no use: less than a glue tab. */
+const SLIVER = 12;
 
 interface Sheet {
   readonly stock: Stock;

@@ -64,7 +64,7 @@ export interface SheetPlan {
 /** A stretch of planning: the plan so far when it became better, laid out when it is asked for; else null. */
 export type PlanProgress = (() => SheetPlan) | null;
 
-const TRIES = 400;
+const TRIES = 1000;
 
 /** What is planned: pieces, and the cut grid that an added tab keeps to. */
 export interface Planned {

@@ -1,5 +1,5 @@
 import { seeded } from '../measure';
-import { fewestSheets, type Blanks } from './blanks';
+import { areaShare, fewestSheets, type Blanks } from './blanks';
 import { largestOffcut } from './offcut';
 import { emptyTree, join, measureTree, note, shapeOf, take, takeBack, treeOf, type Tree, type TreeShape } from './tree';
 
@@ -60,7 +60,9 @@ export function* packings(blanks: Blanks, { seed, spent }: PackingBudget): Gener
     }
   }
   bench.restore(best);
-  while (spent(trials) < 1) {
+  // No offcut is larger than a sheet, nor than all that is not cut to pieces.
+  const most = Math.min(1, best.sheets.length - areaShare(blanks)) * blanks.sheet.area * (1 - 1e-12);
+  while (spent(trials) < 1 && best.offcut < most) {
     for (let trial = 0; trial < BATCH; trial += 1) bench.tryRoomier();
     trials += BATCH;
     const found = bench.roomiest();

@@ -1,10 +1,21 @@
-import { drawFolded, openModel, type Model, type SealedModel, type Sizing, type Stock } from '@/engine';
+import {
+  drawFolded,
+  openModel,
+  type Figures,
+  type Model,
+  type SealedModel,
+  type SheetPlan,
+  type Sizing,
+  type Stock,
+} from '@/engine';
 import { drawingSvg } from '@/exports/svg/drawing';
 import { articleFigures, markChanged } from './article-figures';
+import { sheetsWords } from './facts';
 import { factsHtml, fitsHtml, lastGoodHtml, closesWords, sizingHref, type Links } from './live-html';
 import { morphInto } from './morph';
 import { panelFor } from './panel';
 import { bindPanel, showPanel } from './panel-dom';
+import { createPlanClient } from './plan-client';
 import { createReaderStore, type ReaderState } from './reader-store';
 import { readerView, readStock, USUAL_STOCK } from './reader-view';
 
@@ -19,6 +30,9 @@ export interface ProjectData {
   readonly edition: number | null;
   readonly minutes: number | null;
 }
+
+/** Trials for the plan that comes with every change; better ones follow from beside the page. */
+const WHILE_SIZING = 100;
 
 /** Takes the page over from the form: from here on every change shows at once, and the address says what is shown. */
 export function startReader(panel: HTMLElement): void {
@@ -51,20 +65,25 @@ function painter(page: HTMLElement, panel: HTMLElement, model: Model, data: Proj
   const parts = (name: string) => document.querySelectorAll<HTMLElement>(`[data-${name}]`);
   const put = (name: string, html: string) => parts(name).forEach((element) => morphInto(element, html, markChanged));
   const folded = page.querySelector<HTMLElement>('[data-folded]');
+  const planner = createPlanClient();
+  const showPlan = (shown: Figures, plan: SheetPlan) => {
+    put('facts', factsHtml(shown, plan, data.minutes));
+    put('fits', fitsHtml(shown, plan));
+    put('dock-closes', `${closesWords(shown)} · ${sheetsWords(plan)}`);
+  };
 
   return (state) => {
     const { verdict, typed, stock } = state;
-    const view = readerView(model, verdict, stock);
+    const view = readerView(model, verdict, stock, WHILE_SIZING);
     const links: Links = { model, authors: data.authors, path: data.path, keep: keep(stock, data.edition) };
     const { shown } = verdict;
 
     document.documentElement.dataset.units = shown.sizing.units;
     article.show(shown);
-    put('facts', factsHtml(shown, view.plan, data.minutes));
-    put('fits', fitsHtml(shown, view.plan));
+    showPlan(shown, view.plan);
     put('closes', closesWords(shown));
     put('dock-size', view.insideWords);
-    put('dock-closes', `${closesWords(shown)} · ${view.sheetsWords}`);
+    planner.think(shown, { stock }, view.plan, (plan) => showPlan(shown, plan));
     if (folded)
       after(() =>
         morphInto(folded, drawingSvg(drawFolded(model, shown, { width: 400, height: 440 }), { class: 'folded' })),

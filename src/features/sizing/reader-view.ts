@@ -17,8 +17,9 @@ export interface ReaderView {
 /** Cardstock is mostly sold in scrapbook squares. */
 export const USUAL_STOCK: Stock = STOCKS['12x12in'];
 
-export function readerView(model: Model, verdict: Verdict, stock: Stock): ReaderView {
-  const plan = planSheets(verdict.shown, { stock });
+/** With fewer `tries` than usual the plan comes sooner; the page looks for better ones afterwards. */
+export function readerView(model: Model, verdict: Verdict, stock: Stock, tries?: number): ReaderView {
+  const plan = planSheets(verdict.shown, { stock, ...(tries === undefined ? {} : { tries }) });
   const moved = verdict.good ? onWholeSteps(model, verdict.asked, verdict.figures) : null;
   const whole = moved ? evaluate(model, moved) : null;
   return {
