@@ -59,6 +59,8 @@ export {
   foldedExtent,
   usualTurn,
   USUAL_TILT,
+  usualTurn,
+  USUAL_TILT,
   say,
   sayParts,
   showPosition,

@@ -561,7 +561,8 @@ export type Role =
   | 'figure'
   | 'label'
   | 'face'
-  | 'face edge';
+  | 'face edge'
+  | 'glass';
 export type Shape =
   | { readonly type: 'path'; readonly role: Role; readonly d: string; readonly tone?: string; readonly of?: string }
   | {

@@ -93,6 +93,8 @@ export function paintOf(role: Role, theme: Theme, tone = 'tone-0'): Paint {
     }
     case 'face edge':
       return line(theme.ink, 1);
+    case 'glass':
+      return { fill: theme.card[0], fillOpacity: 0.08 };
   }
 }
 

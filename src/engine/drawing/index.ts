@@ -1,4 +1,4 @@
 export { drawPiece, type PieceDrawingOptions } from './piece';
-export { drawFolded, foldedExtent, type FoldedDrawingOptions } from './folded';
+export { drawFolded, foldedExtent, usualTurn, USUAL_TILT, type FoldedDrawingOptions } from './folded';
 export { drawSheet } from './sheet';
 export { say, sayParts, showPosition, type SaidPart } from './say';

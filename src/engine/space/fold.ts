@@ -1,5 +1,5 @@
 import { encloses, pointAt, sweepOf } from '../net';
-import type { Axis, Curve, Loop, Net, Panel, Point } from '../types';
+import type { Axis, Curve, Fold, Loop, Net, Panel, Point } from '../types';
 import { bentStrips, bentTurn, creaseSeams, edgeTurn } from './bent';
 import { cross, dot, minus, plus, times, turned, unit, vector, type Vector } from './vector';
 
@@ -68,7 +68,16 @@ interface Link {
   readonly to: Point;
   /** Degrees, valley positive. */
   readonly turn: number;
+  /** Hems are made while everything else is still flat; tabs turn ahead of the walls that they go behind. */
+  readonly stage?: 'hem' | 'tab';
 }
+/** Share at which hems are made, where there are any. */
+const HEMMED = 1 / 3;
+/**
+ * How far tabs are ahead. Between two walls that lean by θ from flat a tab at their corner has to turn by acos(cos² θ), which
+ * for small θ is √2 θ, to lie on its wall.
+ */
+const TABS_AHEAD = 1.45;
 
 /**
  * Folds a net in space. The root panel is placed; every other panel turns about the fold it hangs on, as a tree from the
@@ -77,6 +86,12 @@ interface Link {
 export function foldNet(net: Net, options: FoldOptions): readonly FoldedPanel[] {
   const share = options.share ?? 1;
   const { facets, links } = facetsOf(net, options.asShown ?? false);
+  const hemmed = links.some(({ stage }) => stage === 'hem') ? HEMMED : 0;
+  const shareOf = ({ stage }: Link): number => {
+    if (stage === 'hem') return Math.min(1, share / hemmed);
+    const rest = Math.max(0, (share - hemmed) / (1 - hemmed));
+    return stage === 'tab' ? Math.min(1, rest * TABS_AHEAD) : rest;
+  };
   const root = facets.findIndex((facet) => facet.of.name === options.root);
   const start = facets[root];
   if (!start) return [];
@@ -86,7 +101,7 @@ export function foldNet(net: Net, options: FoldOptions): readonly FoldedPanel[] 
     for (const link of links) {
       const other = link.a === current ? link.b : link.b === current ? link.a : -1;
       if (other < 0 || frames.has(other)) continue;
-      frames.set(other, across(frames.get(current) as Frame, link, facets[other] as Facet, share));
+      frames.set(other, across(frames.get(current) as Frame, link, facets[other] as Facet, shareOf(link)));
       queue.push(other);
     }
   }
@@ -278,8 +293,19 @@ function facetsOf(net: Net, asShown: boolean): { readonly facets: readonly Facet
       (all.at(-1) as number)
     );
   };
-  const link = (curve: Curve, [a, b]: readonly [string, string], turn: number) =>
-    links.push({ a: facetAt(a, curve), b: facetAt(b, curve), from: curve.from, to: curve.to, turn });
+  const link = (curve: Curve, [a, b]: readonly [string, string], turn: number, stage?: Link['stage']) =>
+    links.push({
+      a: facetAt(a, curve),
+      b: facetAt(b, curve),
+      from: curve.from,
+      to: curve.to,
+      turn,
+      ...(stage ? { stage } : {}),
+    });
+  const hem = hemOf(net);
+  const tabs = net.panels.flatMap(({ name, role, tooth }) => (role === 'tab' && !tooth ? [name] : []));
+  const stageOf = (fold: Fold): Link['stage'] =>
+    hem.includes(fold) ? 'hem' : fold.panels.some((name) => tabs.includes(name)) ? 'tab' : undefined;
   for (const fold of net.folds) {
     const own = net.panels.filter((panel) => fold.panels.includes(panel.name));
     const bent = own.filter((panel) => panel.bent);
@@ -299,10 +325,25 @@ function facetsOf(net: Net, asShown: boolean): { readonly facets: readonly Facet
     const under = rolled && wholeTurn(rolled) > 350 && fold.angle === 0;
     const round = cone ? coneTurn(cone.angle) : under ? strip : strip / 2;
     const beyond = bent.reduce((sum, panel) => sum + edgeTurn(panel), round);
-    link(fold.curve, fold.panels, (fold.kind === 'valley' ? turn : -turn) + beyond);
+    link(fold.curve, fold.panels, (fold.kind === 'valley' ? turn : -turn) + beyond, stageOf(fold));
   }
   for (const join of net.joins) link(join.curve, join.panels, 0);
   return { facets, links };
+}
+
+/**
+ * Folds back that go on from panel to panel in one straight line. A hem has to be folded before its panels are folded against
+ * one another: at any later time card would have to stretch.
+ */
+function hemOf({ folds }: Net): readonly Fold[] {
+  const back = folds.filter(({ angle, shown, curve }) => angle === 180 && shown === undefined && curve.type === 'line');
+  const goesOn = ({ curve: a }: Fold, { curve: b }: Fold): boolean => {
+    const [across, down] = [a.to.x - a.from.x, a.to.y - a.from.y];
+    const off = ({ x, y }: Point) =>
+      Math.abs(across * (y - a.from.y) - down * (x - a.from.x)) / Math.hypot(across, down);
+    return off(b.from) < 1e-3 && off(b.to) < 1e-3 && [b.from, b.to].some((end) => near(end, a.from) || near(end, a.to));
+  };
+  return back.filter((fold) => back.some((other) => other !== fold && goesOn(fold, other)));
 }
 
 const CONE_STRIPS = 36;
