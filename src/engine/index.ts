@@ -59,8 +59,6 @@ export {
   foldedExtent,
   usualTurn,
   USUAL_TILT,
-  usualTurn,
-  USUAL_TILT,
   say,
   sayParts,
   showPosition,
