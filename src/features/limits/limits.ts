@@ -15,6 +15,10 @@ export const LIMITS = {
   subscribe: { byIp: { tries: 30, seconds: HOUR }, byEmail: { tries: 4, seconds: HOUR } },
   /** PDFs that have to be made; those made before do not count. */
   paper: { byIp: { tries: 300, seconds: 10 * MINUTE }, byEmail: { tries: 300, seconds: 10 * MINUTE } },
+  /** Files for cutting machines; asking again for one that has not changed does not count. */
+  cutting: { byIp: { tries: 300, seconds: 10 * MINUTE }, byEmail: { tries: 300, seconds: 10 * MINUTE } },
+  /** Searches for a size that browsers without scripts leave to the server. */
+  search: { byIp: { tries: 60, seconds: 10 * MINUTE }, byEmail: { tries: 60, seconds: 10 * MINUTE } },
 } as const;
 
 export type LimitName = keyof typeof LIMITS;
