@@ -1,4 +1,4 @@
-import { showValue, type Figures } from '@/engine';
+import { roundTo, showValue, type Figures } from '@/engine';
 
 export interface MaterialRow {
   readonly name: string;
@@ -17,8 +17,10 @@ export function materialRows({ materials, sizing }: Figures): readonly MaterialR
 export function besides({ materials, sizing }: Pick<Figures, 'materials' | 'sizing'>): readonly MaterialRow[] {
   const area = (mm2: number) => showValue(mm2, 'area', sizing).text;
   const { seams, glued, extras } = materials;
+  // Tape is torn off by eye: half inches or centimetres, and rather too much.
+  const tape = roundTo(seams, sizing.units === 'in' ? 12.7 : 10, 'up');
   return [
-    ...(seams > 0 ? [{ name: 'glue or tape along tabs', amount: showValue(seams, 'length', sizing).text }] : []),
+    ...(seams > 0 ? [{ name: 'glue or tape along tabs', amount: showValue(tape, 'length', sizing).text }] : []),
     ...(glued > 0 ? [{ name: 'glued all over', amount: area(glued) }] : []),
     ...extras.map(({ name, kind, value }) => ({ name, amount: showValue(value, kind, sizing).text })),
   ];
