@@ -28,6 +28,7 @@ describe('a measurement sheet', () => {
       'Scores, read from one edge',
       'Pieces',
       'From the sheets',
+      'What it takes',
       'Steps in short',
       'Mind yourself',
       'Did it print at true size?',
@@ -59,7 +60,7 @@ describe('a measurement sheet', () => {
       'Folder, folded.',
       'QR code: this size on the screen.',
       expect.stringMatching(/^Folder, 10 × 6 in/),
-      'Sheet 1 of 1, 12 × 12 in: Folder.',
+      expect.stringMatching(/^Sheet 1 of 1, 12 × 12 in: Folder/),
       'Check square, 2 in on each side.',
       'Check square, 50 mm on each side.',
     ]);

@@ -2,7 +2,7 @@ import PDFDocument from 'pdfkit';
 import { STOCKS } from '@/engine';
 import { esc } from '../escape';
 import type { PaperId } from '../paper';
-import { fontFile, SUBSETS, WEIGHTS, type Subset, type Weight } from './fonts.server';
+import { readFont, SUBSETS, WEIGHTS, type Subset, type Weight } from './fonts.server';
 
 /** Points in a millimetre. */
 export const MM = 72 / 25.4;
@@ -61,7 +61,8 @@ export function openDocument({ paper, title, author, subject, date }: DocumentOp
   askForTrueSize(doc);
   escapeMetadata(doc, { title, author, subject, date });
   for (const weight of WEIGHTS) {
-    for (const subset of SUBSETS) doc.registerFont(fontName(weight, subset), fontFile(weight, subset));
+    for (const subset of SUBSETS)
+      doc.registerFont(fontName(weight, subset), readFont(weight, subset) as unknown as PDFKit.Mixins.PDFFontSource);
   }
   const root = doc.struct('Document');
   doc.addStructure(root);

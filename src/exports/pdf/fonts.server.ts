@@ -1,6 +1,7 @@
 import { readFileSync } from 'node:fs';
 import { createRequire } from 'node:module';
 import { join } from 'node:path';
+import PDFDocument from 'pdfkit';
 import { config } from '@/config.server';
 import { woffToTtf } from '../woff-to-ttf.server';
 
@@ -10,13 +11,24 @@ export type Subset = 'latin' | 'latin-ext';
 export const WEIGHTS: readonly Weight[] = [400, 600, 800];
 export const SUBSETS: readonly Subset[] = ['latin', 'latin-ext'];
 
-const { resolve } = createRequire(join(config.root, 'package.json'));
-const read = new Map<string, Buffer>();
+/** A font as the PDF library has read it; what each document embeds of it is the document's own. */
+export interface ReadFont {
+  hasGlyphForCodePoint(mark: number): boolean;
+}
 
-/** A font file as the PDF library embeds it; read and unwrapped once, which the library would do anew for every document. */
-export function fontFile(weight: Weight, subset: Subset): Buffer {
+const { resolve } = createRequire(join(config.root, 'package.json'));
+const fonts = new Map<string, ReadFont>();
+
+/** Read once for all documents: reading six fonts takes longer than laying out a page. */
+export function readFont(weight: Weight, subset: Subset): ReadFont {
   const name = `figtree-${subset}-${weight}-normal.woff`;
-  let file = read.get(name);
-  if (!file) read.set(name, (file = woffToTtf(readFileSync(resolve(`@fontsource/figtree/files/${name}`)))));
-  return file;
+  let font = fonts.get(name);
+  if (!font) fonts.set(name, (font = parse(woffToTtf(readFileSync(resolve(`@fontsource/figtree/files/${name}`))))));
+  return font;
+}
+
+/** The library takes a font that is read already, and has no other way to read one than to begin a document. */
+function parse(file: Buffer): ReadFont {
+  const doc = new PDFDocument({ autoFirstPage: false, font: null as unknown as string }).font(file);
+  return (doc as unknown as { _font: { font: ReadFont } })._font.font;
 }

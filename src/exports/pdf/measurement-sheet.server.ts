@@ -5,7 +5,7 @@ import type { Pen } from './drawing.server';
 import { Flow, type Block } from './flow.server';
 import { BODY, HEAD, INK, SMALL, STRONG, THIN } from './look';
 import { cover } from './sheet/cover.server';
-import { cautions, check, steps } from './sheet/closing.server';
+import { cautions, check, materials, steps } from './sheet/closing.server';
 import type { SheetContent } from './sheet/content';
 import { pieces } from './sheet/pieces.server';
 import { plans } from './sheet/plans.server';
@@ -43,6 +43,7 @@ export function measurementPdf(content: SheetContent, paper: PaperId): Promise<U
   tables(pen, root, flow, content);
   pieces(pen, root, flow, content);
   plans(pen, root, flow, content);
+  materials(pen, root, flow, content);
   steps(pen, root, flow, content);
   flow.y += 16;
   flow.put(root, cautions(pen, flow.width, content.cautions), 16);

@@ -1,5 +1,5 @@
 import { fontName, type Doc } from './document.server';
-import { type Subset, type Weight } from './fonts.server';
+import { readFont, SUBSETS, type Subset, type Weight } from './fonts.server';
 
 /** Type of one run of text; sizes in points. */
 export interface Type {
@@ -43,12 +43,9 @@ const MISSING_WIDTH = 0.6;
  * a whole number and its fraction stand close, with a real space between them.
  */
 export class Typesetter {
-  readonly #has: Record<Subset, (mark: number) => boolean>;
   readonly #known = new Map<string, Word>();
 
-  constructor(private readonly doc: Doc) {
-    this.#has = { latin: glyphsOf(doc, 'latin'), 'latin-ext': glyphsOf(doc, 'latin-ext') };
-  }
+  constructor(private readonly doc: Doc) {}
 
   /** How wide it is on one line, in points. */
   width(words: Words | string, type: Type): number {
@@ -144,7 +141,7 @@ export class Typesetter {
         continue;
       }
       const code = mark.codePointAt(0) as number;
-      const own = this.#has.latin(code) ? 'latin' : this.#has['latin-ext'](code) ? 'latin-ext' : null;
+      const own = SUBSETS.find((one) => readFont(weight, one).hasGlyphForCodePoint(code)) ?? null;
       if (own !== subset) close();
       subset = own;
       open += mark;
@@ -240,11 +237,4 @@ function readable(text: string): string {
       // Controls, marks of direction, joiners, and halves of pairs.
       .replace(/[\p{Cc}\p{Cf}\p{Cs}]/gu, (mark) => (/\s/u.test(mark) ? ' ' : ''))
   );
-}
-
-function glyphsOf(doc: Doc, subset: Subset): (mark: number) => boolean {
-  doc.font(fontName(400, subset));
-  // The library offers no public question for it.
-  const { font } = (doc as unknown as { _font: { font: { hasGlyphForCodePoint(mark: number): boolean } } })._font;
-  return (mark) => font.hasGlyphForCodePoint(mark);
 }

@@ -1,3 +1,4 @@
+import { materialRows } from '../../material-rows';
 import { decoration, group, tagged, type Tag } from '../document.server';
 import type { Pen } from '../drawing.server';
 import type { Block, Flow } from '../flow.server';
@@ -19,6 +20,24 @@ export function steps(pen: Pen, parent: Tag, flow: Flow, { steps: all }: SheetCo
   });
   flow.section(parent, 'Steps in short', 'the write-up says how', blocks[0]?.height ?? 0);
   flow.columns(parent, blocks, { count: 2, gap: COLUMN_GAP, between: 5 });
+}
+
+/** What it takes besides the sheets: glue, ribbon, knobs. */
+export function materials(pen: Pen, parent: Tag, flow: Flow, { figures }: SheetContent): void {
+  const rows = materialRows(figures);
+  if (rows.length === 0) return;
+  const { doc, type } = pen;
+  const width = (flow.width - COLUMN_GAP) / 2;
+  const blocks = rows.map(({ name, amount }): Block => {
+    const lines = type.lines([`${name}: `, { text: amount, weight: 600 }], BODY, width);
+    return {
+      height: lines.length * LEADING,
+      draw: (list, { x, y }) =>
+        tagged(doc, list, 'P', () => type.paragraph(lines, BODY, { x, top: y, leading: LEADING })),
+    };
+  });
+  flow.section(parent, 'What it takes', '', LEADING);
+  flow.columns(parent, blocks, { count: 2, gap: COLUMN_GAP, between: 2 });
 }
 
 /** Where the work can hurt, in a box with a heavy edge. */

@@ -1,4 +1,4 @@
-import { show, showValue, type Figures, type Model, type SheetPlan } from '@/engine';
+import { orderOf, show, showValue, type Figures, type Model, type SheetPlan } from '@/engine';
 import type { Fact, SheetContent, StepLine } from '@/exports/pdf/sheet/content';
 import type { Edition } from '@/features/editions/editions.server';
 import { dayWords } from '@/features/editions/dates';
@@ -39,7 +39,7 @@ export function patternSheet(source: SheetSource): SheetContent {
     title: pattern.name,
     byline: [pattern.summary],
     address: null,
-    steps: source.model.pattern.order.map((sentence) => ({ title: orderText(sentence, source), mark: '' })),
+    steps: orderOf(source.model, source.figures).map((sentence) => ({ title: orderText(sentence, source), mark: '' })),
     cautions: CAUTIONS,
     date: NO_DAY,
   };
