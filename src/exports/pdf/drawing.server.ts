@@ -11,8 +11,9 @@ export const UNIT = 0.6;
 const LINE_WEIGHT = 0.8;
 /** Between the lines of a glue area, in drawing units. */
 const HATCH = 5;
-const DISC = 7.5;
-/** The border of a sheet's drawing: numbers of cuts that begin at the sheet's edge stand in it, the others on their line. */
+/** The numbers of cuts cover the circles that they stand in. */
+const DISC = 8.6;
+/** The border that a sheet's drawing leaves round it. */
 export const SHEET_BORDER = 24;
 
 export interface Pen {
@@ -90,12 +91,7 @@ function letter(
     colour: fill ?? PRINT_THEME.ink,
   };
   if (shape.of === 'cut number') {
-    const downwards = shape.anchor === 'middle';
-    const outside = (downwards ? shape.y : shape.x) < SHEET_BORDER;
-    const shift = outside
-      ? { x: downwards ? 0 : -DISC, y: downwards ? -DISC + 1 : -4.5 }
-      : { x: downwards ? 0 : 5, y: downwards ? 5 : -4.5 };
-    disc({ doc, type }, shape.text, { x: x + shift.x * scale, y: y + shift.y * scale, radius: DISC * scale });
+    disc({ doc, type }, shape.text, { x, y: y - 4.5 * scale, radius: DISC * scale });
     return;
   }
   const place = { x, baseline: y, anchor: shape.anchor };

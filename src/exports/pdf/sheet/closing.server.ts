@@ -29,7 +29,7 @@ export function materials(pen: Pen, parent: Tag, flow: Flow, { figures }: SheetC
   const { doc, type } = pen;
   const width = (flow.width - COLUMN_GAP) / 2;
   const blocks = rows.map(({ name, amount }): Block => {
-    const lines = type.lines([`${name}: `, { text: amount, weight: 600 }], BODY, width);
+    const lines = type.lines([`${name}: `, { text: typesetFractions(amount), weight: 600 }], BODY, width);
     return {
       height: lines.length * LEADING,
       draw: (list, { x, y }) =>
@@ -39,6 +39,14 @@ export function materials(pen: Pen, parent: Tag, flow: Flow, { figures }: SheetC
   flow.section(parent, 'What it takes', '', LEADING);
   flow.columns(parent, blocks, { count: 2, gap: COLUMN_GAP, between: 2 });
 }
+
+/** `26 1/2 in` with its fraction set as one. */
+const typesetFractions = (text: string): string =>
+  text.replace(
+    /(?:(\d+) )?\b(\d+)\/(\d+)/g,
+    (_, whole: string | undefined, top: string, bottom: string) =>
+      `${whole === undefined ? '' : `${whole}\u202f`}${top}\u2044${bottom}`,
+  );
 
 /** Where the work can hurt, in a box with a heavy edge. */
 export function cautions(pen: Pen, width: number, words: readonly string[]): Block {

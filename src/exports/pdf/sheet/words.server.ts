@@ -7,7 +7,7 @@ import type { Line, Words } from '../typeset.server';
 /** A sentence from geometry with its figures in bold. */
 export function wordsOf(sentence: Sentence, { units, grid }: Figures['sizing']): Words {
   return sayParts(sentence, { units, grid }).map(({ typeset, figure }) =>
-    figure ? { text: typeset, weight: 600 } : typeset,
+    figure ? { text: typeset, weight: 600 } : typeset.replaceAll(' × ', '\u00a0×\u00a0'),
   );
 }
 
