@@ -2,6 +2,7 @@
  * The measurement sheet on the command line:
  *   npm run --silent sheet -- book-box --set 'inside depth=2 in' --choose spine=curved --units in --grid 1/16in --format json
  *   npm run --silent sheet -- book-box --format pdf [--templates] --paper a4 --out sheet.pdf
+ *   npm run --silent sheet -- book-box --format svg|dxf [--glue] [--out pieces.svg]
  *   npm run --silent sheet -- --list [--format json]
  * Exit code 0; 1 when the sizing is out of range or a fit fails (the sheet is printed all the same); 2 for a bad argument.
  */
@@ -25,18 +26,40 @@ import {
   type Sizing,
   type Unit,
 } from '@/engine';
+import { rowLayout } from '@/exports/cutting/layout';
+import { cuttingDxf } from '@/exports/dxf/cutting';
 import { figuresJson } from '@/exports/json/figures-json';
 import type { PaperId } from '@/exports/paper';
 import { measurementPdf } from '@/exports/pdf/measurement-sheet.server';
 import { templatesPdf } from '@/exports/pdf/templates-pdf.server';
+import { cuttingSvg } from '@/exports/svg/cutting';
 import { measurementText } from '@/exports/text/measurement-text';
 import { patternSheet } from '@/features/editions/paper/sheet-content';
 import { PatternFileError } from '@/features/patterns/load-pattern';
 import { getPatternModel, listPatterns } from '@/features/patterns/patterns.server';
 
 class BadArgument extends Error {}
-const FORMATS = ['text', 'json', 'pdf'] as const;
+const FORMATS = ['text', 'json', 'pdf', 'svg', 'dxf'] as const;
 const PAPERS: readonly PaperId[] = ['a4', 'letter'];
+
+const HELP = `npm run --silent sheet -- <pattern> [options]
+npm run --silent sheet -- --list [--format json]
+
+  --set 'inside width=5 3/8 in'  an asked measure, as often as you like
+  --choose spine=curved          an option of a choice
+  --units in|mm|cm               usual: in
+  --grid 1/16in                  how fine you cut: ${Object.keys(GRIDS).join(', ')}
+  --stock 12x12in                the sheets it is cut from: ${Object.keys(STOCKS).join(', ')}
+  --copies 1                     how many boxes, up to 500
+  --format text                  text, json, pdf, svg or dxf; svg and dxf are for cutting machines: all pieces side by
+                                 side in millimetres, 10 mm between them
+  --glue                         with svg or dxf: glue areas too, as lines to draw
+  --paper a4|letter              with pdf
+  --templates                    with pdf: the pieces at true size instead of the sheet
+  --out FILE                     usual: standard output
+
+Ends with 0; with 1 when the size is out of range or a fit fails; with 2 for what does not read.
+`;
 
 const oneOf = <T extends string>(what: string, typed: string, allowed: readonly T[]): T => {
   const found = allowed.find((one) => one === typed.toLowerCase().replace(/\s+/g, ''));
@@ -58,8 +81,10 @@ function readArguments() {
         format: { type: 'string', default: 'text' },
         paper: { type: 'string' },
         templates: { type: 'boolean', default: false },
+        glue: { type: 'boolean', default: false },
         out: { type: 'string' },
         list: { type: 'boolean', default: false },
+        help: { type: 'boolean', default: false },
       },
     });
   } catch (error) {
@@ -133,6 +158,10 @@ function put(content: string | Uint8Array, out: string | undefined): void {
 
 async function run(): Promise<number> {
   const { values, positionals } = readArguments();
+  if (values.help) {
+    put(HELP, values.out);
+    return 0;
+  }
   const format = oneOf('The format', values.format, FORMATS);
   const patterns = listPatterns();
   if (values.list) {
@@ -165,12 +194,18 @@ async function run(): Promise<number> {
   if (!Number.isInteger(copies) || copies < 1 || copies > 500)
     throw new BadArgument(`--copies “${values.copies}” is not a whole number from 1 to 500.`);
   if (values.templates && format !== 'pdf') throw new BadArgument('--templates goes with --format pdf.');
+  if (values.glue && format !== 'svg' && format !== 'dxf')
+    throw new BadArgument('--glue goes with --format svg or --format dxf.');
   const figures = evaluate(model, readSizing(model, values));
   const paper = oneOf('The paper', values.paper ?? (values.units === 'in' ? 'letter' : 'a4'), PAPERS);
   const written = (as: (typeof FORMATS)[number]): string | Promise<Uint8Array> => {
     if (as === 'pdf') {
       const content = patternSheet({ model, figures, plan: planSheets(figures, { stock, copies }) });
       return values.templates ? templatesPdf(content, paper) : measurementPdf(content, paper);
+    }
+    if (as === 'svg' || as === 'dxf') {
+      const layout = rowLayout(figures.pieces, { copies, glue: values.glue });
+      return as === 'svg' ? cuttingSvg(layout, { title: `${model.pattern.name}: all pieces` }) : cuttingDxf(layout);
     }
     return as === 'json'
       ? `${JSON.stringify(figuresJson(model, figures, { stock, copies }), null, 2)}\n`

@@ -1,6 +1,9 @@
 import { spawnSync } from 'node:child_process';
+import { mkdtempSync, readFileSync } from 'node:fs';
+import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { describe, expect, it } from 'vitest';
+import { boundsOfRead, readDxf, readSvg } from '../exports/read-cutting';
 
 const root = join(import.meta.dirname, '../..');
 function sheet(...args: string[]) {
@@ -42,6 +45,7 @@ describe('npm run sheet', { timeout: 60_000 }, () => {
       'pieces',
       'fits',
       'sheets',
+      'materials',
       'departure',
       'problems',
     ]);
@@ -68,6 +72,8 @@ describe('npm run sheet', { timeout: 60_000 }, () => {
     ],
     [['tray', '--copies', 'many'], '--copies “many” is not a whole number from 1 to 500.\n'],
     [['tray', '--colour', 'red'], "Unknown option '--colour'\n"],
+    [['tray', '--format', 'png'], 'The format “png” is not known. It can be text, json, pdf, svg, dxf.\n'],
+    [['tray', '--glue'], '--glue goes with --format svg or --format dxf.\n'],
   ])('exits 2 with one clear line for %j', (args, line) => {
     expect(sheet(...args)).toEqual({ status: 2, stdout: '', stderr: line });
   });
@@ -91,5 +97,42 @@ describe('npm run sheet', { timeout: 60_000 }, () => {
     expect(stdout).toMatch(/1 Base, cut 2: 254 × 178 mm/);
     expect(stdout).toMatch(/holds {2}lid goes on/);
     expect(stdout).toMatch(/Sheet 1\n {4}1\. Trim at \d+ mm/);
+  });
+  it('draws every piece side by side for a cutting machine, in millimetres', () => {
+    // A tray of 8 × 5 in, 1 in tall: 10 × 7 in flat, 254 × 177.8 mm; two of them 10 mm apart are 518 mm.
+    const size = ['--set', 'inside length=8 in', '--set', 'inside width=5 in', '--set', 'inside height=1 in'];
+    const svg = sheet('tray', ...size, '--copies', '2', '--format', 'svg');
+    expect([svg.status, svg.stderr]).toEqual([0, '']);
+    const { root } = readSvg(svg.stdout);
+    expect(root.attributes).toMatchObject({ width: '518mm', height: '177.8mm', viewBox: '0 0 518 177.8' });
+    expect(root.text('title')).toBe('Tray: all pieces');
+    const out = join(mkdtempSync(join(tmpdir(), 'sheet-')), 'tray.dxf');
+    expect(sheet('tray', ...size, '--copies', '2', '--format', 'dxf', '--glue', '--out', out)).toEqual({
+      status: 0,
+      stdout: '',
+      stderr: '',
+    });
+    const { lines } = readDxf(readFileSync(out, 'utf8'));
+    expect(boundsOfRead(lines)).toEqual({ left: 0, right: 518, low: 0, high: 177.8 });
+    expect(new Set(lines.map(({ work }) => work))).toEqual(new Set(['cut', 'valley', 'draw']));
+  });
+  it('says what it takes', () => {
+    const { status, stdout } = sheet('--help');
+    expect(status).toBe(0);
+    for (const option of [
+      'set',
+      'choose',
+      'units',
+      'grid',
+      'stock',
+      'copies',
+      'format',
+      'glue',
+      'paper',
+      'templates',
+      'out',
+      'list',
+    ])
+      expect(stdout).toContain(`--${option} `);
   });
 });

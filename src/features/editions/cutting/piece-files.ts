@@ -1,5 +1,5 @@
 import type { Figures, PieceFigure } from '@/engine';
-import { outerSize } from '@/exports/cutting/layout';
+import type { outerSize } from '@/exports/cutting/layout';
 import { freeSlug } from '@/features/projects/project-slug';
 import { sizingHref, type Links } from '@/features/sizing/live-html';
 import { sizesTogether } from '@/features/sizing/facts';
