@@ -2,6 +2,7 @@ import { GRIDS, type GridId, type Model, type Sizing, type Unit } from '@/engine
 import { fieldTroubleHtml, gridsHtml, otherTroubleHtml, sizingHref, wholeStepsHtml, type Links } from './live-html';
 import { morphInto } from './morph';
 import { fieldText, type Panel, type PanelField } from './panel';
+import { PAPERS, paperHref, PDFS } from './paper';
 import { rangeRuler, rangeRulerSvg } from './range-ruler';
 import type { ReaderStore, Typed } from './reader-store';
 import { readStock, type ReaderView } from './reader-view';
@@ -126,6 +127,9 @@ export function showPanel(
   for (const choice of panel.choices) press(root, parameterName(choice.name), choice.chosen);
   const { units, grid } = panel;
   point(root, '[data-sheet-link]', sizingHref(links, verdict.shown.sizing, '/sheet'));
+  for (const { below } of PDFS)
+    for (const { id } of PAPERS)
+      point(root, `[data-paper="${below} ${id}"]`, paperHref(links, verdict.shown.sizing, below, id));
   point(root, '[data-reset]', sizingHref(links, { ...links.authors, units, grid }));
   point(root, '[data-copy-link]', sizingHref(links, verdict.asked));
 }
