@@ -1,9 +1,10 @@
-import { stockOf, STOCKS, type Model, type Sizing, type Stock } from '@/engine';
+import { STOCKS, type Model, type Sizing } from '@/engine';
 import type { FieldFault } from '@/features/http/problem';
+import { readStock as readLinked } from '@/features/sheets/stock-link';
 import type { Links } from '@/features/sizing/live-html';
 import { sizingHref } from '@/features/sizing/live-html';
 import { inUnits, type Typed } from '@/features/sizing/reader-store';
-import { readerView, readStock, USUAL_STOCK, type ReaderView } from '@/features/sizing/reader-view';
+import { keepParams, readerView, readStock, type ReaderView } from '@/features/sizing/reader-view';
 import { isSizingForm, readSizingForm } from '@/features/sizing/sizing-form';
 import { readingWords } from '@/features/sizing/reading-words';
 import { readSizing } from '@/features/sizing/sizing-link';
@@ -72,14 +73,7 @@ function readLink(model: Model, params: URLSearchParams, authors: Sizing): Readi
 }
 
 function cardFaults(card: string | null): readonly FieldFault[] {
-  if (card === null || card === '' || stockOf(card)) return [];
-  const sentence = `“${card}” is no sheet that is known here. It can be ${Object.keys(STOCKS).join(', ')}.`;
+  if (card === null || card === '' || readLinked(card)) return [];
+  const sentence = `“${card}” is no sheet that is known here. It can be ${Object.keys(STOCKS).join(', ')}, or a size such as 8.5x13in.`;
   return [{ where: 'card', sentence }];
-}
-
-function keepParams(stock: Stock, edition: string | null): string {
-  const params = new URLSearchParams();
-  if (stock !== USUAL_STOCK) params.set('card', stock.id);
-  if (edition !== null) params.set('edition', edition);
-  return params.toString();
 }

@@ -1,4 +1,6 @@
 import { GRIDS, type GridId, type Model, type Sizing, type Unit } from '@/engine';
+import type { MySheets } from '@/features/sheets/my-sheets';
+import { haveHtml, stockOptionsHtml } from '@/features/sheets/my-sheets-html';
 import { fieldTroubleHtml, gridsHtml, otherTroubleHtml, sizingHref, wholeStepsHtml, type Links } from './live-html';
 import { morphInto } from './morph';
 import { fieldText, type Panel, type PanelField } from './panel';
@@ -100,6 +102,13 @@ export function bindPanel(panel: HTMLElement, page: HTMLElement, store: ReaderSt
     void copyLink(copy, panel);
   };
   panel.addEventListener('click', takeLink);
+  panel.addEventListener('click', (event) => {
+    const dialog = panel.querySelector<HTMLDialogElement>('[data-sheets-dialog]');
+    if (!dialog || !(event.target as Element).closest('a[data-my-sheets]')) return;
+    event.preventDefault();
+    void import('@/features/sheets/my-sheets.client');
+    dialog.showModal();
+  });
   page.addEventListener('click', takeLink);
 }
 
@@ -130,8 +139,24 @@ export function showPanel(
   for (const { below } of PDFS)
     for (const { id } of PAPERS)
       point(root, `[data-paper="${below} ${id}"]`, paperHref(links, verdict.shown.sizing, below, id));
+  for (const ask of ['fit', 'largest']) point(root, `[data-ask="${ask}"]`, sizingHref(links, verdict.asked, `/${ask}`));
   point(root, '[data-reset]', sizingHref(links, { ...links.authors, units, grid }));
   point(root, '[data-copy-link]', sizingHref(links, verdict.asked));
+}
+
+/** The sheets to choose from, and whether there are enough of the chosen one. */
+export function showSheets(
+  root: HTMLElement,
+  { plan, stock }: Pick<ReaderView, 'plan' | 'stock'>,
+  sheets: MySheets,
+): void {
+  const select = root.querySelector<HTMLSelectElement>('[data-stocks]');
+  if (select) {
+    morphInto(select, stockOptionsHtml(sheets, stock));
+    select.value = stock.id;
+  }
+  const have = root.querySelector('[data-have]');
+  if (have) morphInto(have, haveHtml(plan, sheets));
 }
 
 function showField(root: HTMLElement, field: PanelField, trouble: string, unread: boolean): void {

@@ -6,18 +6,20 @@ import {
   type SealedModel,
   type SheetPlan,
   type Sizing,
-  type Stock,
 } from '@/engine';
 import { drawingSvg } from '@/exports/svg/drawing';
+import type { MySheets } from '@/features/sheets/my-sheets';
+import { hearSheets, keptSheets } from '@/features/sheets/sheet-keeper';
+import { planOn } from '@/features/sheets/stock-link';
 import { articleFigures, markChanged } from './article-figures';
 import { sheetsWords } from './facts';
 import { factsHtml, fitsHtml, lastGoodHtml, closesWords, sizingHref, type Links } from './live-html';
 import { morphInto } from './morph';
 import { panelFor } from './panel';
-import { bindPanel, showPanel } from './panel-dom';
+import { bindPanel, showPanel, showSheets } from './panel-dom';
 import { createPlanClient } from './plan-client';
-import { createReaderStore, type ReaderState } from './reader-store';
-import { readerView, readStock, USUAL_STOCK } from './reader-view';
+import { createReaderStore, type ReaderState, type ReaderStore } from './reader-store';
+import { keepParams, readerView, readStock } from './reader-view';
 
 /** What the server puts into the page for the island. */
 export interface ProjectData {
@@ -25,6 +27,8 @@ export interface ProjectData {
   readonly authors: Sizing;
   readonly asked: Sizing;
   readonly stock: string;
+  /** The reader's sheets in their account; null without one: then the browser may keep some. */
+  readonly sheets: MySheets | null;
   readonly path: string;
   /** Set when the page shows an edition that is not the newest. */
   readonly edition: number | null;
@@ -41,7 +45,12 @@ export function startReader(panel: HTMLElement): void {
   if (!page || !source) return;
   const data = JSON.parse(source) as ProjectData;
   const model = openModel(data.model);
-  const store = createReaderStore(model, { sizing: data.asked, authors: data.authors, stock: readStock(data.stock) });
+  const store = createReaderStore(model, {
+    sizing: data.asked,
+    authors: data.authors,
+    stock: readStock(data.stock),
+    sheets: data.sheets ?? keptSheets(),
+  });
   const paint = painter(page, panel, model, data);
   let waiting = false;
   let painted = store.$state.get();
@@ -56,8 +65,41 @@ export function startReader(panel: HTMLElement): void {
       painted = next;
     });
   });
+  hearSheets((sheets) => store.sheets(sheets));
+  const kept = keptSheets();
+  // The server knew the account's sheets and drew them; what this browser keeps it could not know.
+  if (data.sheets === null && kept.length > 0)
+    showSheets(panel, readerView(model, painted.verdict, painted.stock), kept);
+  const editor = panel.querySelector('[data-my-sheets]');
+  if (data.sheets !== null && kept.length > 0 && editor) editor.textContent = 'My sheets: add those this browser kept';
   bindPanel(panel, page, store, { model, authors: data.authors, path: data.path });
+  bindAsks(panel, store, data, model);
   panel.dataset.ready = '';
+}
+
+/** The two questions about a size are fetched when the first is asked. */
+function bindAsks(
+  panel: HTMLElement,
+  store: ReaderStore,
+  { model: sealed, authors, path, edition }: ProjectData,
+  model: Model,
+) {
+  const dialog = panel.querySelector<HTMLDialogElement>('[data-ask-dialog]');
+  panel.addEventListener('click', (event) => {
+    const link = (event.target as Element).closest<HTMLAnchorElement>('a[data-ask]');
+    // A browser without workers follows the link: the server answers there.
+    if (!dialog || !link || typeof Worker === 'undefined' || event.metaKey || event.ctrlKey || event.shiftKey) return;
+    event.preventDefault();
+    void import('./asks/ask-dialog.client').then(({ openAsk }) =>
+      openAsk(link.dataset.ask === 'fit' ? 'fit' : 'largest', {
+        dialog,
+        store,
+        sealed,
+        links: { model, authors, path },
+        edition,
+      }),
+    );
+  });
 }
 
 function painter(page: HTMLElement, panel: HTMLElement, model: Model, data: ProjectData): (state: ReaderState) => void {
@@ -73,9 +115,9 @@ function painter(page: HTMLElement, panel: HTMLElement, model: Model, data: Proj
   };
 
   return (state) => {
-    const { verdict, typed, stock } = state;
+    const { verdict, typed, stock, sheets } = state;
     const view = readerView(model, verdict, stock, WHILE_SIZING);
-    const links: Links = { model, authors: data.authors, path: data.path, keep: keep(stock, data.edition) };
+    const links: Links = { model, authors: data.authors, path: data.path, keep: keepParams(stock, data.edition) };
     const { shown } = verdict;
 
     document.documentElement.dataset.units = shown.sizing.units;
@@ -83,7 +125,10 @@ function painter(page: HTMLElement, panel: HTMLElement, model: Model, data: Proj
     showPlan(shown, view.plan);
     put('closes', closesWords(shown));
     put('dock-size', view.insideWords);
-    planner.think(shown, { stock }, view.plan, (plan) => showPlan(shown, plan));
+    planner.think(shown, planOn(stock), view.plan, (plan) => {
+      showPlan(shown, plan);
+      showSheets(panel, { plan, stock }, sheets);
+    });
     if (folded)
       after(() =>
         morphInto(folded, drawingSvg(drawFolded(model, shown, { width: 400, height: 440 }), { class: 'folded' })),
@@ -96,16 +141,10 @@ function painter(page: HTMLElement, panel: HTMLElement, model: Model, data: Proj
       element.hidden = stale === '';
     });
     showPanel(panel, { view, panel: panelFor(model, verdict.figures), typed, links });
+    showSheets(panel, view, sheets);
     remember(sizingHref(links, verdict.asked));
     say(panel, verdict.good ? `${view.insideWords} inside. ${closesWords(shown)}, ${view.sheetsWords}.` : '');
   };
-}
-
-function keep(stock: Stock, edition: number | null): string {
-  const params = new URLSearchParams();
-  if (stock !== USUAL_STOCK) params.set('card', stock.id);
-  if (edition !== null) params.set('edition', String(edition));
-  return params.toString();
 }
 
 /** Figures come first; the picture of the box follows in the next frame, and only the newest of them. */

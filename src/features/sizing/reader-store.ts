@@ -13,6 +13,7 @@ import {
   type Stock,
   type Unit,
 } from '@/engine';
+import type { MySheets } from '@/features/sheets/my-sheets';
 import { readingWords } from './reading-words';
 import { valueIn, withChoice, withValue } from './sizing-values';
 import { judge, type Verdict } from './verdict';
@@ -25,6 +26,8 @@ export interface ReaderState {
   readonly lastGood: Sizing;
   readonly typed: Typed;
   readonly stock: Stock;
+  /** The sheets that the reader has. */
+  readonly sheets: MySheets;
 }
 /** One reader's sizing on one page. Units and cut grid never change the size of the box. */
 export interface ReaderStore {
@@ -38,15 +41,22 @@ export interface ReaderStore {
   units(units: Unit): void;
   grid(grid: GridId): void;
   stock(stock: Stock): void;
+  sheets(sheets: MySheets): void;
   ask(sizing: Sizing): void;
 }
 
 export function createReaderStore(
   model: Model,
-  start: { readonly sizing: Sizing; readonly authors: Sizing; readonly stock: Stock },
+  start: { readonly sizing: Sizing; readonly authors: Sizing; readonly stock: Stock; readonly sheets?: MySheets },
 ): ReaderStore {
   const first = judge(model, start.sizing, start.authors, { nearest: true });
-  const $state = atom<ReaderState>({ verdict: first, lastGood: first.shown.sizing, typed: {}, stock: start.stock });
+  const $state = atom<ReaderState>({
+    verdict: first,
+    lastGood: first.shown.sizing,
+    typed: {},
+    stock: start.stock,
+    sheets: start.sheets ?? [],
+  });
 
   const ask = (sizing: Sizing, typed: Typed = {}) => {
     const before = $state.get();
@@ -89,6 +99,7 @@ export function createReaderStore(
     units: (units) => ask(inUnits(current(), units), $state.get().typed),
     grid: (grid) => ask({ ...current(), grid }, $state.get().typed),
     stock: (stock) => $state.set({ ...$state.get(), stock }),
+    sheets: (sheets) => $state.set({ ...$state.get(), sheets }),
   };
 }
 

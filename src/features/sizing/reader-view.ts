@@ -1,4 +1,5 @@
 import { evaluate, planSheets, STOCKS, type Figures, type Model, type SheetPlan, type Stock } from '@/engine';
+import { planOn, readStock as readLinked } from '@/features/sheets/stock-link';
 import { insideWords, sheetsWords } from './facts';
 import { onWholeSteps } from './reader-store';
 import type { Verdict } from './verdict';
@@ -19,7 +20,7 @@ export const USUAL_STOCK: Stock = STOCKS['12x12in'];
 
 /** With fewer `tries` than usual the plan comes sooner; the page looks for better ones afterwards. */
 export function readerView(model: Model, verdict: Verdict, stock: Stock, tries?: number): ReaderView {
-  const plan = planSheets(verdict.shown, { stock, ...(tries === undefined ? {} : { tries }) });
+  const plan = planSheets(verdict.shown, { ...planOn(stock), ...(tries === undefined ? {} : { tries }) });
   const moved = verdict.good ? onWholeSteps(model, verdict.asked, verdict.figures) : null;
   const whole = moved ? evaluate(model, moved) : null;
   return {
@@ -32,7 +33,15 @@ export function readerView(model: Model, verdict: Verdict, stock: Stock, tries?:
   };
 }
 
-/** The sheet named in a link; the usual one for a name that is not known. */
+/** The sheet that a link says; the usual one for what does not read. */
 export function readStock(text: string | null): Stock {
-  return Object.values(STOCKS).find(({ id }) => id === text) ?? USUAL_STOCK;
+  return (text === null ? null : readLinked(text)) ?? USUAL_STOCK;
+}
+
+/** What stays in every link on the page beside the sizing: the sheet, and an edition that is not the newest. */
+export function keepParams(stock: Stock, edition: number | string | null): string {
+  const params = new URLSearchParams();
+  if (stock.id !== USUAL_STOCK.id) params.set('card', stock.id);
+  if (edition !== null) params.set('edition', String(edition));
+  return params.toString();
 }

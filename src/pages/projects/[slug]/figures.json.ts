@@ -2,6 +2,7 @@ import type { APIRoute } from 'astro';
 import { figuresJson } from '@/exports/json/figures-json';
 import { hasTag, notModified, publicHeaders, tagOf } from '@/features/editions/public-answer';
 import { loadReaderPage } from '@/features/editions/reader-page.server';
+import { planOn } from '@/features/sheets/stock-link';
 import { problem, json } from '@/features/http/problem';
 
 /** Planning sheets for many boxes takes long, and anybody may ask. */
@@ -42,7 +43,7 @@ export const GET: APIRoute = ({ params, url, request }) => {
   const data = {
     project: page.edition.slug,
     edition: page.edition.n,
-    ...figuresJson(page.model, page.view.verdict.figures, { stock: page.view.stock, copies }),
+    ...figuresJson(page.model, page.view.verdict.figures, { ...planOn(page.view.stock), stock: page.view.stock, copies }),
   };
   return json(data, { headers: publicHeaders(tag) });
 };
