@@ -33,7 +33,7 @@ const PATTERN = 'drawer-chest';
 export async function pdfBench(): Promise<void> {
   const model = getPatternModel(PATTERN) as Model;
   const figures = evaluate(model, usualSizing(model));
-  const content = patternSheet({ model, figures, plan: planSheets(figures, { stock: STOCKS.letter }) });
+  const content = patternSheet({ model, figures, plan: planSheets(figures, { stock: STOCKS.letter, copies: 4 }) });
   const html = pageOf(content);
   const browser = await chromium.launch({
     executablePath: process.env.CHROMIUM ?? '/usr/bin/chromium',
