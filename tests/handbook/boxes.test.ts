@@ -129,7 +129,7 @@ describe('parts of an entry', () => {
   it('say the outside of the box and whether it closes', () => {
     // 200 mm and a card of half a millimetre at both ends; 100 mm and two cards on either side; 30 mm and the floor.
     const query = 'inside-length=200mm&inside-width=100mm&inside-height=30mm&card-thickness=0.5mm&units=mm&cut=0.5mm';
-    const words = seen(partHtml(at('tray', query), 'folded'));
+    const words = seen(partHtml(at('tray', query), 'outside'));
     expect(words).toContain('Outside 201 × 102 × 30.5\u00a0mm');
     expect(words).toContain('It closes');
   });

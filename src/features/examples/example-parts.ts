@@ -1,6 +1,5 @@
-import { drawFolded, orderOf } from '@/engine';
+import { orderOf } from '@/engine';
 import { esc } from '@/exports/escape';
-import { drawingSvg } from '@/exports/svg/drawing';
 import { sizesTogether } from '@/features/sizing/facts';
 import { panelFor } from '@/features/sizing/panel';
 import { liveParts } from '@/writeup/live';
@@ -9,20 +8,18 @@ import type { Example } from './example';
 import { closesHtml, pieceSvg, wordsHtml } from './example-html';
 
 /** Whole parts of a page about one box, which follow its size and its choices; HTML for the server and the browser alike. */
-const PARTS = { folded, pieces, ranges, order } as const;
+const PARTS = { outside, pieces, ranges, order } as const;
 
 export type ExamplePartName = keyof typeof PARTS;
 export const isExamplePart = (name: string): name is ExamplePartName => Object.hasOwn(PARTS, name);
 export const partHtml = (example: Example, name: ExamplePartName): string => PARTS[name](example);
 
-/** The box folded, its outside and whether it closes. */
-function folded(example: Example): string {
-  const { model, figures } = example;
-  const picture = drawingSvg(drawFolded(model, figures, { width: 300, height: 230 }), { class: 'folded' });
-  const outside = figures.finished.outside.map(({ name }) => name).join(', ');
+/** The box's outside and whether it closes. */
+function outside(example: Example): string {
+  const { figures } = example;
+  const names = figures.finished.outside.map(({ name }) => name).join(', ');
   return (
-    `<div class="box-folded">${picture}</div>` +
-    `<p>Outside ${esc(sizesTogether(figures.finished.outside, figures.sizing))} <span class="soft">(${esc(outside)})</span></p>` +
+    `<p>Outside ${esc(sizesTogether(figures.finished.outside, figures.sizing))} <span class="soft">(${esc(names)})</span></p>` +
     `<p class="box-closes">${closesHtml(example)}</p>`
   );
 }

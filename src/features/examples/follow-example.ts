@@ -1,3 +1,4 @@
+import { showFolded } from '@/components/folded/show';
 import { GRIDS, openModel, type Model, type SealedFormula, type SealedModel } from '@/engine';
 import { fieldText } from '@/features/sizing/panel';
 import { FROM, parameterName } from '@/features/sizing/sizing-form';
@@ -14,6 +15,7 @@ export function followExample(form: HTMLFormElement): (changed: EventTarget | nu
   const slug = form.dataset.example ?? '';
   const model = modelIn(document, slug);
   let example = workExample(model, parametersOf(form));
+  showFolded(document, model, example.figures);
 
   return (changed) => {
     if (changed instanceof HTMLInputElement && changed.type === 'range') takeFromSlider(form, changed, example);
@@ -21,6 +23,7 @@ export function followExample(form: HTMLFormElement): (changed: EventTarget | nu
     redrawFields(form, next, changed);
     if (next.asked.units !== example.asked.units) redrawGrids(form, next);
     putFigures(slug, form, next);
+    showFolded(document, model, next.figures);
     example = next;
     history.replaceState(null, '', `${location.pathname}${addressOf(next)}${location.hash}`);
   };

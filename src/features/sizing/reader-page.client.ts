@@ -1,13 +1,5 @@
-import {
-  drawFolded,
-  openModel,
-  type Figures,
-  type Model,
-  type SealedModel,
-  type SheetPlan,
-  type Sizing,
-} from '@/engine';
-import { drawingSvg } from '@/exports/svg/drawing';
+import { showFolded } from '@/components/folded/show';
+import { openModel, type Figures, type Model, type SealedModel, type SheetPlan, type Sizing } from '@/engine';
 import type { MySheets } from '@/features/sheets/my-sheets';
 import { hearSheets, keptSheets } from '@/features/sheets/sheet-keeper';
 import { planOn } from '@/features/sheets/stock-link';
@@ -52,6 +44,7 @@ export function startReader(panel: HTMLElement): void {
     sheets: data.sheets ?? keptSheets(),
   });
   const paint = painter(page, panel, model, data);
+  showFolded(page, model, store.$state.get().verdict.shown);
   let waiting = false;
   let painted = store.$state.get();
   // However many changes come in one frame, the page is brought up to date once.
@@ -106,7 +99,6 @@ function painter(page: HTMLElement, panel: HTMLElement, model: Model, data: Proj
   const article = articleFigures(page, model);
   const parts = (name: string) => document.querySelectorAll<HTMLElement>(`[data-${name}]`);
   const put = (name: string, html: string) => parts(name).forEach((element) => morphInto(element, html, markChanged));
-  const folded = page.querySelector<HTMLElement>('[data-folded]');
   const planner = createPlanClient();
   const showPlan = (shown: Figures, plan: SheetPlan) => {
     put('facts', factsHtml(shown, plan, data.minutes));
@@ -129,10 +121,7 @@ function painter(page: HTMLElement, panel: HTMLElement, model: Model, data: Proj
       showPlan(shown, plan);
       showSheets(panel, { plan, stock }, sheets);
     });
-    if (folded)
-      after(() =>
-        morphInto(folded, drawingSvg(drawFolded(model, shown, { width: 400, height: 440 }), { class: 'folded' })),
-      );
+    showFolded(page, model, shown);
 
     const stale = lastGoodHtml(verdict, typed, links);
     page.toggleAttribute('data-stale', stale !== '');
@@ -145,19 +134,6 @@ function painter(page: HTMLElement, panel: HTMLElement, model: Model, data: Proj
     remember(sizingHref(links, verdict.asked));
     say(panel, verdict.good ? `${view.insideWords} inside. ${closesWords(shown)}, ${view.sheetsWords}.` : '');
   };
-}
-
-/** Figures come first; the picture of the box follows in the next frame, and only the newest of them. */
-let following: (() => void) | null = null;
-function after(draw: () => void): void {
-  if (!following) {
-    requestAnimationFrame(() => {
-      const newest = following;
-      following = null;
-      newest?.();
-    });
-  }
-  following = draw;
 }
 
 /** Browsers refuse an address that changes with every movement of a slider. */

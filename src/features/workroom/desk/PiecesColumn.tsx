@@ -1,5 +1,5 @@
 import { useStore } from '@nanostores/react';
-import { drawFolded, drawPiece, explain, sayParts, show, type Pattern, type PieceFigure } from '@/engine';
+import { drawPiece, explain, sayParts, show, type Pattern, type PieceFigure } from '@/engine';
 import { cellSizes } from '@/features/projects/cell-sizes';
 import { namesOf } from '@/features/projects/formula-names';
 import { usesAny } from '@/features/projects/followers';
@@ -7,6 +7,7 @@ import { ColumnHead } from './ColumnHead';
 import type { LiveFigures } from '@/writeup/live';
 import type { DeskStore } from './desk-store';
 import { DrawingView } from './DrawingView';
+import { FoldedBox } from './FoldedBox';
 import { TrackFields } from './TrackFields';
 
 const THUMB = { width: 68, tallest: 30 } as const;
@@ -188,7 +189,7 @@ function WholeBox({ live, figure }: { readonly live: LiveFigures; readonly figur
             </span>
           ))}
         </p>
-        <DrawingView drawing={drawFolded(model, figures, { width: 150, height: 190 })} />
+        <FoldedBox model={model} figures={figures} />
       </div>
       <div className="words">
         <h3>Words from the geometry</h3>
