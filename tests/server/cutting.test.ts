@@ -151,11 +151,11 @@ test('pieces have addresses of plain letters, no two alike', () => {
 
 test.each([
   // 8 1/2 × 25.4 = 215.9, 6 1/2 × 25.4 = 165.1.
-  ['in', '1/16in', 215.9, '8\u202f1⁄2 × 6\u202f1⁄2\u00a0in; the file is in millimetres: 215.9 × 165.1'],
-  ['cm', '1mm', 215.9, '21.59 × 16.51\u00a0cm; the file is in millimetres: 215.9 × 165.1'],
-  ['mm', '1mm', 215.9, '215.9 × 165.1 mm; the file is in millimetres'],
+  ['in', '1/16in', 215.9, '8\u202f1⁄2 × 6\u202f1⁄2\u00a0in; the file is in millimetres: 215.9\u00a0×\u00a0165.1'],
+  ['cm', '1mm', 215.9, '21.59 × 16.51\u00a0cm; the file is in millimetres: 215.9\u00a0×\u00a0165.1'],
+  ['mm', '1mm', 215.9, '215.9\u00a0×\u00a0165.1\u00a0mm; the file is in millimetres'],
   // 216 / 25.4 = 8.504 in, between 8 1/2 and 8 33/64.
-  ['in', '1/16in', 216, 'about 8\u202f1⁄2 × 6\u202f1⁄2\u00a0in; the file is in millimetres: 216 × 165.1'],
+  ['in', '1/16in', 216, 'about 8\u202f1⁄2 × 6\u202f1⁄2\u00a0in; the file is in millimetres: 216\u00a0×\u00a0165.1'],
 ] as const)('an outer size is said in %s and as the file has it', (units, grid, across, words) => {
   expect(outerWords({ across, along: 165.1 }, { sizing: { units, grid, values: {}, choices: {} } })).toBe(words);
 });

@@ -47,8 +47,8 @@ export const readGlue = (params: URLSearchParams): boolean => params.get('glue')
 /** `8 1/2 × 6 1/2 in; the file is in millimetres: 215.9 × 165.1`: what an importer must show before anything is cut. */
 export function outerWords(size: ReturnType<typeof outerSize>, { sizing }: Pick<Figures, 'sizing'>): string {
   const sizes = [size.across, size.along];
-  const file = sizes.map((mm) => String(Math.round(mm * 100) / 100)).join(' × ');
-  if (sizing.units === 'mm') return `${file} mm; the file is in millimetres`;
+  const file = sizes.map((mm) => String(Math.round(mm * 100) / 100)).join('\u00a0×\u00a0');
+  if (sizing.units === 'mm') return `${file}\u00a0mm; the file is in millimetres`;
   const own = sizesTogether(
     sizes.map((mm) => ({ name: '', mm })),
     sizing,
