@@ -140,6 +140,8 @@ export function showPanel(
     for (const { id } of PAPERS)
       point(root, `[data-paper="${below} ${id}"]`, paperHref(links, verdict.shown.sizing, below, id));
   for (const ask of ['fit', 'largest']) point(root, `[data-ask="${ask}"]`, sizingHref(links, verdict.asked, `/${ask}`));
+  point(root, '[data-cutting-link]', `${sizingHref(links, verdict.shown.sizing, '/sheet')}#cutting`);
+  point(root, '[data-cutting-zip]', sizingHref(links, verdict.shown.sizing, '/pieces.zip'));
   point(root, '[data-reset]', sizingHref(links, { ...links.authors, units, grid }));
   point(root, '[data-copy-link]', sizingHref(links, verdict.asked));
 }
