@@ -37,6 +37,7 @@ export {
 } from './model';
 export {
   cutsInWords,
+  foldsRun,
   helpWithTooLarge,
   joinAt,
   joiningInWords,

@@ -1,5 +1,6 @@
 import { drawFolded, show } from '@/engine';
 import { drawingSvg } from '@/exports/svg/drawing';
+import { blanksOf, type CardBlank } from '@/features/sheets/card-fit';
 import { pieceCount, piecesWords, sheetsWords, shortTimeWords } from '@/features/sizing/facts';
 import type { Edition } from './editions.server';
 import { authorsFigures } from './models.server';
@@ -11,6 +12,8 @@ export interface CardFacts {
   readonly pieces: string;
   readonly sheets: string;
   readonly tooLarge: boolean;
+  /** What it takes of card, to be held against somebody's own sheets. */
+  readonly blanks: readonly CardBlank[];
   readonly time: string;
   /** The folded box, for a project without a photo. */
   readonly picture: string | null;
@@ -43,6 +46,7 @@ function workOut(edition: Edition): CardFacts {
     pieces: piecesWords(pieceCount(figures)),
     sheets: tooLarge ? `Needs more than ${plan.stock.name}` : `Takes ${sheetsWords(plan)}`,
     tooLarge,
+    blanks: blanksOf(figures.pieces),
     time: shortTimeWords(edition.minutes),
     picture: edition.hero
       ? null

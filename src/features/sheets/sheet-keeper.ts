@@ -1,8 +1,8 @@
+import { KEPT_AS } from './kept-as';
 import { readKept, type MySheets } from './my-sheets';
 
 /** Where a browser keeps its reader's sheets, and how it tells the page of them. */
 
-const KEY = 'foldwright:my-sheets';
 const CHANGED = 'foldwright:sheets-changed';
 
 type Place = Pick<Storage, 'getItem' | 'setItem' | 'removeItem'>;
@@ -10,7 +10,7 @@ type Place = Pick<Storage, 'getItem' | 'setItem' | 'removeItem'>;
 /** What this browser keeps; nothing when it keeps nothing, or lets nobody look. */
 export function keptSheets(place: () => Place = () => localStorage): MySheets {
   try {
-    return readKept(JSON.parse(place().getItem(KEY) ?? 'null'));
+    return readKept(JSON.parse(place().getItem(KEPT_AS) ?? 'null'));
   } catch {
     return [];
   }
@@ -19,8 +19,8 @@ export function keptSheets(place: () => Place = () => localStorage): MySheets {
 /** Keeps a list in this browser, and an empty one not at all. False when the browser does not let it. */
 export function keepSheets(sheets: MySheets, place: () => Place = () => localStorage): boolean {
   try {
-    if (sheets.length === 0) place().removeItem(KEY);
-    else place().setItem(KEY, JSON.stringify(sheets));
+    if (sheets.length === 0) place().removeItem(KEPT_AS);
+    else place().setItem(KEPT_AS, JSON.stringify(sheets));
     return true;
   } catch {
     return false;
