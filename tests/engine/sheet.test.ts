@@ -1,10 +1,13 @@
 import { describe, expect, it } from 'vitest';
 import {
   cutsInWords,
+  drawSheet,
   evaluate,
-  planSheets,
   planning,
+  planSheets,
   say,
+  show,
+  type Drawing,
   type PieceFigure,
   type SheetPlan,
   type Stock,
@@ -216,6 +219,33 @@ describe('words of the cuts', () => {
       );
       expect(got.map(({ name, size: [w, h] }) => `${name}: ${size(w, h)}`).sort()).toEqual(asked.sort());
     }
+  });
+});
+
+describe('drawSheet', () => {
+  const plan = planSheets(figuresOf(modelOf('book-box')), { stock: '12x12in' });
+  const drawn = (width: number) =>
+    plan.sheets.map((_, i) => drawSheet(plan, i, { width, units: 'in', grid: '1/16in' }));
+  const texts = ({ shapes }: Drawing) => shapes.flatMap((shape) => (shape.type === 'text' ? [shape] : []));
+  it.each([200, 300, 480])('numbers every cut once, inside its frame, no number on another (%i wide)', (width) => {
+    drawn(width).forEach((drawing, i) => {
+      const numbers = texts(drawing).filter(({ of }) => of === 'cut number');
+      expect(numbers.map(({ text }) => text)).toEqual(plan.sheets[i]?.cuts.map(({ n }) => `${n}`));
+      numbers.forEach((a, index) => {
+        expect(a.x > 8 && a.x < drawing.width - 8 && a.y > 8 && a.y < drawing.height - 8).toBe(true);
+        // Circles of 17 across.
+        for (const b of numbers.slice(index + 1)) expect(Math.hypot(a.x - b.x, a.y - b.y)).toBeGreaterThan(17);
+      });
+    });
+  });
+  it('labels offcuts with their letter and size, and tells both to those who hear it', () => {
+    const { sheet, offcut } = plan.offcut ?? { sheet: 0, offcut: { name: '', across: 0, along: 0 } };
+    const [drawing] = drawn(300).slice(sheet) as readonly [Drawing];
+    expect(texts(drawing).map(({ text }) => text)).toContain(`offcut ${offcut.name}`);
+    const size = [offcut.across, offcut.along].map(
+      (mm) => show(mm, { units: 'in', grid: '1/16in', bare: true }).typeset,
+    );
+    expect(drawing.alt).toContain(`${offcut.name} ${size.join(' × ')}`);
   });
 });
 

@@ -49,10 +49,13 @@ export const pieceCount = (figures: Figures): number => figures.pieces.reduce((a
 
 export const piecesWords = (n: number): string => `${n} ${n === 1 ? 'piece' : 'pieces'}`;
 
-/** `3 sheets of 12 × 12 in`; what is too large for the sheet is said first. */
-export function sheetsWords({ stock, used, tooLarge }: SheetPlan): string {
+/** `3 sheets of 12 × 12 in`, and those of other materials by their name; what is too large for the sheet is said first. */
+export function sheetsWords({ stock, used, takes, tooLarge }: SheetPlan): string {
   if (tooLarge.length > 0) return `too large for ${stock.name}: ${tooLarge.map(({ name }) => name).join(', ')}`;
-  return `${used} ${used === 1 ? 'sheet' : 'sheets'} of ${stock.name}`;
+  const count = (n: number) => `${n} ${n === 1 ? 'sheet' : 'sheets'}`;
+  if (takes.length < 2) return `${count(used)} of ${stock.name}`;
+  const each = takes.map((take) => `${count(take.used)} of ${take.material}, ${take.stock.name}`);
+  return `${each.slice(0, -1).join('; ')} and ${each.at(-1)}`;
 }
 
 /** Minutes as a person says them: `about 40 minutes`, `about two hours`, `about 1 h 15`. */
