@@ -87,8 +87,8 @@ describe('a piece joined from two', () => {
   });
   it('folds to the same box', () => {
     for (const { piece, made } of joined) {
-      const [root] = made.parts[0].net.panels as readonly [{ readonly name: string }];
-      const whole = fold(piece.net, root.name);
+      const root = made.parts[0].net.panels[0]?.name ?? '';
+      const whole = fold(piece.net, root);
       for (const part of made.parts) {
         const names = part.net.panels.map(({ name }) => name).filter((name) => !name.startsWith('joining tab'));
         const folded = fold(part.net, names[0] as string);
@@ -101,9 +101,9 @@ describe('a piece joined from two', () => {
   it('lays its tab flat on the panel that it is glued behind', () => {
     for (const { piece, made } of joined) {
       const [first, second] = made.parts;
-      const [root] = first.net.panels as readonly [{ readonly name: string }];
-      const whole = fold(piece.net, root.name);
-      for (const tab of fold(first.net, root.name).filter(({ name }) => name.startsWith('joining tab'))) {
+      const root = first.net.panels[0]?.name ?? '';
+      const whole = fold(piece.net, root);
+      for (const tab of fold(first.net, root).filter(({ name }) => name.startsWith('joining tab'))) {
         // The panel beyond whose every corner lies in the plane of the tab.
         const [a, b, c] = coordinates(tab) as [number[], number[], number[]];
         const normal = cross(minus(b, a), minus(c, a));

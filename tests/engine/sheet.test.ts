@@ -240,7 +240,7 @@ describe('drawSheet', () => {
   });
   it('labels offcuts with their letter and size, and tells both to those who hear it', () => {
     const { sheet, offcut } = plan.offcut ?? { sheet: 0, offcut: { name: '', across: 0, along: 0 } };
-    const [drawing] = drawn(300).slice(sheet) as readonly [Drawing];
+    const drawing = drawn(300)[sheet] as Drawing;
     expect(texts(drawing).map(({ text }) => text)).toContain(`offcut ${offcut.name}`);
     const size = [offcut.across, offcut.along].map(
       (mm) => show(mm, { units: 'in', grid: '1/16in', bare: true }).typeset,

@@ -119,7 +119,9 @@ function sortOut({ pieces, sizing }: Planned, options: PlanOptions): Sorted {
   const joinedOf = (piece: PlannedPiece): Joined | null =>
     join.includes(piece.name) ? (large.get(piece)?.joined ?? null) : null;
   return {
-    pieces: pieces.flatMap((piece) => (large.has(piece) ? [...(joinedOf(piece)?.parts ?? [])] : [piece])),
+    pieces: pieces.flatMap((piece): readonly PlannedPiece[] =>
+      large.has(piece) ? (joinedOf(piece)?.parts ?? []) : [piece],
+    ),
     tooLarge: pieces.flatMap((piece) => {
       const one = large.get(piece);
       return one && !joinedOf(piece) ? [one] : [];
