@@ -10,6 +10,7 @@ import {
   usualSizing,
   type Curve,
   type Figures,
+  type Loop,
   type Pattern,
   type PieceDef,
   type PieceFigure,
@@ -57,20 +58,26 @@ const read = (layout: CuttingLayout) => [
 ];
 
 const sum = (curves: readonly Curve[]): number => curves.reduce((all, curve) => all + lengthOf(curve), 0);
+const scoresOf = ({ net }: PieceFigure, kind: 'valley' | 'mountain'): readonly Curve[] => [
+  ...net.folds.filter((fold) => fold.kind === kind && fold.angle !== 0).map(({ curve }) => curve),
+  ...net.creases.filter((crease) => crease.kind === kind).map(({ curve }) => curve),
+];
 /** What the net of a piece holds, by work. */
-function expectedOf({ net }: PieceFigure) {
-  const scores = (kind: 'valley' | 'mountain') =>
-    sum([
-      ...net.folds.filter((fold) => fold.kind === kind && fold.angle !== 0).map(({ curve }) => curve),
-      ...net.creases.filter((crease) => crease.kind === kind).map(({ curve }) => curve),
-    ]);
+function expectedOf(piece: PieceFigure) {
+  const { net } = piece;
   return {
     cut: perimeterOf(net.outline) + net.holes.reduce((all, hole) => all + perimeterOf(hole), 0) + sum(net.slits),
-    valley: scores('valley'),
-    mountain: scores('mountain'),
+    valley: sum(scoresOf(piece, 'valley')),
+    mountain: sum(scoresOf(piece, 'mountain')),
     draw: net.panels.filter(({ role }) => role === 'tab').reduce((all, { loop }) => all + perimeterOf(loop), 0),
   };
 }
+/** Which way the arcs of closed lines bend: lengths alone would not tell a bump from a dent. */
+const clockwiseOf = (loops: readonly Loop[]): number =>
+  loops
+    .flat()
+    .reduce((all, curve) => all + (curve.type === 'arc' ? lengthOf(curve) * (curve.clockwise ? 1 : -1) : 0), 0);
+
 function expectLengths(lines: readonly ReadLine[], expected: ReturnType<typeof expectedOf>, what: string): void {
   for (const [work, length] of Object.entries(expected))
     expectClose(lengthOfRead(lines, work), length, CLOSE, `${what}: ${work}`);
@@ -91,8 +98,36 @@ function expectPiece(piece: PieceFigure, what: string): void {
     const cut = lines.filter(({ work }) => work === 'cut');
     expect(cut.filter(({ closed }) => closed)).toHaveLength(loops);
     expect(cut.filter(({ closed }) => !closed)).toHaveLength(piece.net.slits.length);
+    const bent = cut.filter(({ closed }) => closed).reduce((all, { clockwise }) => all + clockwise, 0);
+    expectClose(
+      bent,
+      clockwiseOf([piece.net.outline, ...piece.net.holes]),
+      CLOSE,
+      `${what} ${piece.name} ${format}, bent`,
+    );
+    expectPlaces(piece, lines, format);
     // Held by its sheet until the last line.
     expectSize(cut.slice(-1), right - left, bottom - top, `${what} ${piece.name} ${format}, last line`);
+  }
+}
+
+/** Scores lie where the net has them, seen from the top in SVG and from the foot in DXF. */
+function expectPlaces(piece: PieceFigure, lines: readonly ReadLine[], format: string): void {
+  const { left, top, bottom } = boundsOf(piece.net.outline);
+  for (const kind of ['valley', 'mountain'] as const) {
+    const scores = scoresOf(piece, kind);
+    if (scores.length === 0) continue;
+    const there = boundsOf(scores);
+    // The bounds of a loop begin every curve where the last ended; single lines have ends of their own.
+    const ends = scores.map(({ to }) => to);
+    const high = Math.min(there.top, ...ends.map(({ y }) => y));
+    const low = Math.max(there.bottom, ...ends.map(({ y }) => y));
+    const found = boundsOfRead(lines.filter(({ work }) => work === kind));
+    const what = `${piece.name} ${format}, ${kind}`;
+    expectClose(found.left, Math.min(there.left, ...ends.map(({ x }) => x)) - left, CLOSE, what);
+    expectClose(found.right, Math.max(there.right, ...ends.map(({ x }) => x)) - left, CLOSE, what);
+    expectClose(found.low, format === 'SVG' ? high - top : bottom - low, CLOSE, what);
+    expectClose(found.high, format === 'SVG' ? low - top : bottom - high, CLOSE, what);
   }
 }
 

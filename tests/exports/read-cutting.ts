@@ -7,6 +7,8 @@ export interface ReadLine {
   readonly work: string;
   readonly length: number;
   readonly closed: boolean;
+  /** Length of its arcs, those that run clockwise as seen on screen less those that run the other way. */
+  readonly clockwise: number;
   readonly points: readonly (readonly [number, number])[];
 }
 export interface Bounds {
@@ -68,6 +70,7 @@ function readPath(d: string, work: string): ReadLine {
   let at: Place = [NaN, NaN];
   let from = at;
   let length = 0;
+  let clockwise = 0;
   let closed = false;
   const points: Place[] = [];
   for (const [, command, rest = ''] of commands) {
@@ -80,13 +83,15 @@ function readPath(d: string, work: string): ReadLine {
     } else if (command === 'A') {
       const arc = svgArc(at, to, n);
       length += arc.radius * Math.abs(arc.turn);
+      // y runs down: a growing angle is clockwise.
+      clockwise += arc.radius * arc.turn;
       points.push(...quarters(arc));
     } else length += Math.hypot(to[0] - at[0], to[1] - at[1]);
     if (command === 'Z') closed = true;
     at = to;
     points.push(to);
   }
-  return { work, length, closed, points };
+  return { work, length, closed, clockwise, points };
 }
 
 /** From end points to centre: SVG 2, appendix B.2.4, for circles that are not rotated. */
@@ -122,14 +127,15 @@ export function readDxf(dxf: string): ReadDxf {
     const work = { CUT: 'cut', SCORE: score, DRAW: 'draw' }[entity.layer] ?? entity.layer;
     if (entity.type === 'LINE') {
       const [a, b] = (entity as ILineEntity).vertices.map(({ x, y }): Place => [x, y]) as [Place, Place];
-      return { work, length: Math.hypot(b[0] - a[0], b[1] - a[1]), closed: false, points: [a, b] };
+      return { work, length: Math.hypot(b[0] - a[0], b[1] - a[1]), closed: false, clockwise: 0, points: [a, b] };
     }
     if (entity.type === 'ARC') {
       const { center, radius, startAngle, endAngle } = entity as IArcEntity;
       const turn = endAngle > startAngle ? endAngle - startAngle : endAngle - startAngle + 2 * Math.PI;
       const arc: Circular = { centre: [center.x, center.y], radius, begin: startAngle, turn };
       const end = (angle: number): Place => [center.x + radius * Math.cos(angle), center.y + radius * Math.sin(angle)];
-      return { work, length: radius * turn, closed: false, points: [end(startAngle), end(endAngle), ...quarters(arc)] };
+      const points = [end(startAngle), end(endAngle), ...quarters(arc)];
+      return { work, length: radius * turn, closed: false, clockwise: -radius * turn, points };
     }
     if (entity.type === 'LWPOLYLINE') return readPolyline(entity as ILwpolylineEntity, work);
     throw new Error(`No line: ${entity.type}`);
@@ -141,6 +147,7 @@ export function readDxf(dxf: string): ReadDxf {
 function readPolyline({ vertices, shape }: ILwpolylineEntity, work: string): ReadLine {
   const points: Place[] = [];
   let length = 0;
+  let clockwise = 0;
   vertices.forEach(({ x, y, bulge }, k) => {
     const next = vertices[k + 1] ?? (shape ? vertices[0] : undefined);
     points.push([x, y]);
@@ -158,7 +165,9 @@ function readPolyline({ vertices, shape }: ILwpolylineEntity, work: string): Rea
       (y + next.y) / 2 + (apothem * (next.x - x)) / chord,
     ];
     length += radius * Math.abs(turn);
+    // y runs up: a growing angle is anticlockwise.
+    clockwise -= radius * turn;
     points.push(...quarters({ centre, radius, begin: Math.atan2(y - centre[1], x - centre[0]), turn }));
   });
-  return { work, length, closed: shape, points };
+  return { work, length, closed: shape, clockwise, points };
 }
