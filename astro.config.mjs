@@ -1,3 +1,4 @@
+import { fileURLToPath } from 'node:url';
 import mdx from '@astrojs/mdx';
 import node from '@astrojs/node';
 import react from '@astrojs/react';
@@ -53,6 +54,8 @@ export default defineConfig({
   server: { port: Number(process.env.PORT) || 4321, host: process.env.HOST || '127.0.0.1' },
   vite: {
     ...(process.env.VITE_CACHE_DIR ? { cacheDir: process.env.VITE_CACHE_DIR } : {}),
+    // Pages have this from tsconfig.json; what a worker is bundled with reads it only here.
+    resolve: { alias: { '@': fileURLToPath(new URL('./src', import.meta.url)) } },
     ssr: { external: LEFT_TO_NODE },
     server: { watch: { ignored: ['**/.data/**', '**/dist/**', '**/test-results/**'] } },
   },
