@@ -9,7 +9,7 @@ test.use({ actionTimeout: 15_000 });
 
 test('sheets kept in the browser come first in the panel, and an own size stands in the link', async ({ page }) => {
   await page.goto('/sheets');
-  await page.getByLabel('Size').selectOption('own');
+  await page.getByLabel('Size', { exact: true }).selectOption('own');
   await page.getByLabel('One side').fill('wide');
   await page.getByLabel('Other side').fill('20');
   await page.getByLabel('How many', { exact: true }).fill('4');
