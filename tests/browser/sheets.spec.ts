@@ -62,7 +62,7 @@ test('the largest from one’s sheets comes with its plan and what stops it', as
   await panelReady(page);
   await page.getByRole('link', { name: 'Largest from my sheets' }).click();
   const dialog = page.getByRole('dialog', { name: 'Largest from my sheets' });
-  await dialog.getByLabel('Sheets that it may take').fill('5');
+  await dialog.getByLabel('Sheets at most').fill('5');
   // The cover stands out by 1/4 in: 11 3/4 in inside make a cover of 12 in, the whole sheet.
   await shows(dialog.locator('.ask-sizes'), '11 3/4 in');
   await expect(dialog.locator('[data-ask-answer]')).toContainText('Cover no longer fits 12 × 12 in');
@@ -83,7 +83,7 @@ test('without JavaScript the server answers both questions', async ({ browser, b
   await shows(page.locator('.ask-sizes'), '8 1/4 in');
   await page.getByRole('link', { name: 'Leave it' }).click();
   await page.getByRole('link', { name: 'Largest from my sheets' }).click();
-  await page.getByLabel('Sheets that it may take').fill('5');
+  await page.getByLabel('Sheets at most').fill('5');
   await page.getByRole('button', { name: 'Work it out' }).click();
   await shows(page.locator('.ask-sizes'), '11 3/4 in');
   await page.getByRole('link', { name: 'Use this size' }).click();

@@ -73,7 +73,7 @@ function pileHtml(state: AskState): string {
   const have = state.sheets.find(({ card }) => card === state.stock.id)?.count ?? 1;
   return (
     `<div class="field"><label for="ask-card">Cut it from</label><select class="input" id="ask-card" name="card">${stockOptionsHtml(state.sheets, state.stock)}</select></div>` +
-    `<div class="ask-fields">${fieldHtml(COUNT, 'Sheets that it may take', state, String(have))}` +
+    `<div class="ask-fields">${fieldHtml(COUNT, 'Sheets at most', state, String(have))}` +
     fieldHtml(COPIES, 'Boxes', state, '1', '', `up to ${MOST_COPIES}`) +
     '</div><p class="hint">All inside sizes grow alike.</p>'
   );
