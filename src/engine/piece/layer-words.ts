@@ -1,19 +1,17 @@
 import { coincident, same } from '../measure';
 import { boundsOf } from '../net';
 import type { Arc, Curve, Loop, Net, PieceFigure, Sentence } from '../types';
-import { cornersOf } from './shape-words';
+import { cuttingOut } from './cut-words';
+import { holes } from './line-words';
 import type { WordsOptions } from './words';
 
 type Figure = WordsOptions['figure'];
 
 /** The making of a layer after its blank is cut: its edge, its holes, and where it is glued. Nothing for other pieces. */
-export function layerWords({ net, layer, count, figure }: WordsOptions): Sentence[] {
+export function layerWords(options: WordsOptions): Sentence[] {
+  const { layer } = options;
   if (!layer) return [];
-  return [
-    ...edgeWords(net, figure),
-    ...net.holes.map((hole) => holeWords(hole, figure)),
-    glueWords(layer, count ?? 1, figure),
-  ];
+  return [...edgeWords(options), ...holes(options), glueWords(layer, options.count ?? 1, options.figure)];
 }
 
 const isSquare = (curve: Curve): boolean =>
@@ -27,7 +25,8 @@ const isOneCircle = (loop: Loop): loop is readonly Arc[] =>
       coincident(curve.centre.y, first.centre.y),
   );
 
-function edgeWords(net: Net, figure: Figure): Sentence[] {
+function edgeWords(options: WordsOptions): Sentence[] {
+  const { net, figure } = options;
   const { outline } = net;
   if (outline.length === 4 && outline.every(isSquare)) return [];
   if (isOneCircle(outline))
@@ -44,13 +43,7 @@ function edgeWords(net: Net, figure: Figure): Sentence[] {
       return [`Round the ${which} to a radius of `, figure(radius), '.'];
     });
   }
-  return [
-    [
-      'Mark the corners, each from the left and from the top edge: ',
-      ...cornersOf(outline, figure),
-      'Join them in this order and cut.',
-    ],
-  ];
+  return cuttingOut(options);
 }
 
 /** The rounded corners of an upright rectangle that has no other; null for any other shape. */
@@ -68,36 +61,6 @@ function roundedCorners({ outline }: Net): readonly { readonly name: string; rea
     return x && y && quarter ? { name: `${y} ${x}`, radius } : null;
   });
   return corners.some((corner) => corner === null) ? null : (corners as { name: string; radius: number }[]);
-}
-
-function holeWords(hole: Loop, figure: Figure): Sentence {
-  const { left, top, right, bottom } = boundsOf(hole);
-  if (isOneCircle(hole))
-    return [
-      'Punch a hole of ',
-      figure(right - left),
-      ' diameter, its middle ',
-      figure((left + right) / 2),
-      ' from the left edge and ',
-      figure((top + bottom) / 2),
-      ' from the top.',
-    ];
-  if (hole.length === 4 && hole.every(isSquare))
-    return [
-      'Cut out an opening ',
-      figure(right - left, true),
-      ' × ',
-      figure(bottom - top),
-      ', its top left corner ',
-      figure(left, true),
-      ' across, ',
-      figure(top, true),
-      ' down.',
-    ];
-  return [
-    'Cut out the opening with these corners, each from the left and from the top edge: ',
-    ...cornersOf(hole, figure),
-  ];
 }
 
 function glueWords({ of, faces, margin }: NonNullable<PieceFigure['layer']>, count: number, figure: Figure): Sentence {

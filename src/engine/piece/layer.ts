@@ -1,9 +1,10 @@
-import { atLeast, coincident, isZero } from '../measure';
-import { assemble, boundsOf, crossingOf, encloses, inset, pointsOf } from '../net';
+import { atLeast, coincident, isZero, roundTo } from '../measure';
+import { areaOf, assemble, boundsOf, crossingOf, encloses, inset, pointsOf } from '../net';
 import { keyOf } from '../pattern/names';
 import type { Loop, Net, PieceDef, PieceHead, Point } from '../types';
 import { cellsOf } from './cells';
 import { finishNet, type Built } from './finish';
+import { polygon } from './shapes';
 
 /** A layer with its margin worked out, and the net of the piece that it is glued to. */
 export interface LayerPiece {
@@ -27,15 +28,31 @@ export type BuiltLayer = Extract<Built, { ok: false }> | (Extract<Built, { ok: t
 export function buildLayer(piece: LayerPiece): BuiltLayer {
   const laid = layOn(piece.host, piece.face, piece.margin);
   if ('reason' in laid) return { ok: false, reason: laid.reason };
+  const outline = trimmed(laid.outline, piece.step);
   const built = finishNet({
-    panels: [{ name: keyOf(piece.name), role: 'panel', loop: laid.outline }],
+    panels: [{ name: keyOf(piece.name), role: 'panel', loop: outline }],
     jointOf: () => ({ is: 'nothing' }),
     holes: laid.holes,
     step: piece.step,
   });
   if (!built.ok) return built;
-  const [there, here] = [boundsOf(laid.outline), boundsOf(built.net.outline)];
+  const [there, here] = [boundsOf(outline), boundsOf(built.net.outline)];
   return { ...built, at: { x: there.left - here.left, y: there.top - here.top } };
+}
+
+/** A plain rectangle is cut on a trimmer: down to whole steps of the grid, in the middle of the face; other shapes stay. */
+function trimmed(outline: Loop, step: number): Loop {
+  const { left, top, right, bottom } = boundsOf(outline);
+  const [across, along] = [right - left, bottom - top].map((size) => roundTo(size, step, 'down')) as [number, number];
+  const plain = outline.length === 4 && coincident(areaOf(outline), (right - left) * (bottom - top));
+  if (!plain || isZero(across) || isZero(along)) return outline;
+  const [x, y] = [(left + right - across) / 2, (top + bottom - along) / 2];
+  return polygon([
+    { x, y },
+    { x: x + across, y },
+    { x: x + across, y: y + along },
+    { x, y: y + along },
+  ]);
 }
 
 /** The edges of a layer on its host, or why there are none. */

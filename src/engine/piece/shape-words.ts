@@ -1,8 +1,8 @@
 import { decimal } from '../measure';
 import { distance, lengthOf, pointAt } from '../net';
-import type { Curve, PieceHead, Loop, Net, Panel, Point, Sentence } from '../types';
+import type { Curve, PieceHead, Net, Panel, Point, Sentence } from '../types';
 import { cuttingOut } from './cut-words';
-import { bowOf, holes, scoring, slits, type Said } from './line-words';
+import { holes, scoring, slits } from './line-words';
 import type { WordsOptions } from './words';
 
 /** The making of a piece that is not a grid, in words. */
@@ -174,17 +174,4 @@ function sector({ net, def, figure }: WordsOptions): Sentence[] {
       : []),
     ['Cut it out. Roll the piece, do not fold it.'],
   ];
-}
-
-/** Corners of a loop in order, each by how far it lies from the left and from the top edge. */
-export function cornersOf(loop: Loop, figure: Said['figure']): Sentence {
-  return loop.flatMap((curve, index): Sentence => {
-    const end = index === loop.length - 1 ? '.' : ';';
-    return [
-      figure(curve.from.x, true),
-      ' across, ',
-      figure(curve.from.y, true),
-      ...(curve.type === 'arc' ? [' down (then ', ...bowOf({ figure }, curve), `)${end} `] : [` down${end} `]),
-    ];
-  });
 }

@@ -291,6 +291,8 @@ class Reader {
       cut(card, [from, ...arcPoints(from, to, at(0) / 2, WAYS[out] as Dot)]);
       return true;
     }
+    // Where a layer is glued says nothing of its own shape.
+    if (says(/^Glue (?:one|it) to the outside of .*, # from every edge\.$/)) return true;
     if (says(/^Round the ([a-z ]+?) corners? to a radius of #\.$/)) {
       for (const [end, side] of cornersAt(word(1))) {
         const [x, y] = [side === 'left' ? 0 : card.across, end === 'top' ? 0 : card.along];
@@ -698,10 +700,8 @@ class Reader {
     const { count, wide, tip, deep } = teeth;
     const round = gap(score[0] as Dot, from) < gap(score.at(-1) as Dot, from) ? score : [...score].reverse();
     const [a, b, c] = [round[0], round[Math.floor(round.length / 2)], round.at(-1)] as [Dot, Dot, Dot];
-    const half = { x: (a.x + c.x) / 2, y: (a.y + c.y) / 2 };
-    const [chord, rise] = [gap(a, c), gap(b, half)];
-    const radius = (chord * chord) / 8 / rise + rise / 2;
-    const centre = { x: b.x + ((half.x - b.x) / rise) * radius, y: b.y + ((half.y - b.y) / rise) * radius };
+    const centre = centreThrough(a, b, c);
+    const [chord, radius] = [gap(a, c), gap(a, centre)];
     const sweep = 2 * Math.asin(chord / 2 / radius);
     if (Math.abs(2 * radius * Math.sin(sweep / count / 2) - wide) > 0.3)
       throw new Error('the teeth do not fill the arc');
@@ -733,6 +733,15 @@ function tabOutside(from: Dot, to: Dot, wide: number, low: number, high: number)
   const at = (along: number) => corner(from.x + way.x * along + way.y * wide, from.y + way.y * along - way.x * wide);
   const run = (angle: number) => wide / Math.tan((angle * Math.PI) / 180);
   return [at(run(low)), at(length - run(high))];
+}
+/** Middle of the circle through three points. */
+function centreThrough(a: Dot, b: Dot, c: Dot): Dot {
+  const square = ({ x, y }: Dot) => x * x + y * y;
+  const twice = 2 * (a.x * (b.y - c.y) + b.x * (c.y - a.y) + c.x * (a.y - b.y));
+  return {
+    x: (square(a) * (b.y - c.y) + square(b) * (c.y - a.y) + square(c) * (a.y - b.y)) / twice,
+    y: (square(a) * (c.x - b.x) + square(b) * (a.x - c.x) + square(c) * (b.x - a.x)) / twice,
+  };
 }
 const polar = (centre: Dot, radius: number, angle: number): Dot => ({
   x: centre.x + radius * Math.cos(angle),

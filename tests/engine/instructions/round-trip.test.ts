@@ -136,9 +136,13 @@ function faultOf(piece: PieceFigure, { sizing }: Figures, model: Model, sentence
       piece.thickness,
       def?.remarks ?? [],
     );
-    const off = Object.entries(differences(piece, card, def?.builder === 'disc')).filter(
-      ([, mm]) => !(mm <= tolerance),
-    );
+    const off = Object.entries(
+      differences(
+        piece,
+        card,
+        piece.net.outline.every(({ type }) => type === 'arc'),
+      ),
+    ).filter(([, mm]) => !(mm <= tolerance));
     return off.length === 0 ? null : off.map(([what, mm]) => `${what} ${mm.toFixed(2)}`).join(', ');
   } catch (error) {
     return String(error);
