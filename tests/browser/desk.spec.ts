@@ -69,7 +69,8 @@ test('selecting a measure lights what follows it in the list, the pieces and the
   await openDesk(page, id);
   await page.getByRole('button', { name: 'inside height', exact: true }).click();
   await expect(page.locator('tr[data-measure="corner tab"]')).toHaveClass(/follows/);
-  await expect(page.locator('[data-column=pieces] .lit-count')).toContainText('1 of 1 lit');
+  // The tray, and its layers, whose margin stops at a third of the height.
+  await expect(page.locator('[data-column=pieces] .lit-count')).toContainText('3 of 3 lit');
   await expect(page.locator('[data-column=pieces] .dr-panel.lit').first()).toBeVisible();
   await expect(page.locator('[data-column=write-up] .lit-count')).toContainText(/\d+ places? lit/);
   await page.getByRole('button', { name: 'inside height', exact: true }).press('Escape');
@@ -127,8 +128,9 @@ test('a measure that is renamed takes formulas, fits, pieces and the text along,
   await field.fill('wall height');
   await field.press('Enter');
   await expect(name('wall height')).toBeFocused();
-  // Two measures, two columns, two rows and a finished size; the fit names it as the measure to change.
-  await expect(page.locator('.measure-naming')).toContainText('Renamed in 7 formulas, 1 fit and 1 step.');
+  // Two measures, the usual and the largest margin of layers, two columns, two rows and a finished size; the fit names it
+  // as the measure to change.
+  await expect(page.locator('.measure-naming')).toContainText('Renamed in 9 formulas, 1 fit and 1 step.');
   await expect(page.getByLabel('Formula of outside height')).toHaveValue('wall height + card thickness');
   await expect(page.getByLabel('Size of row near side')).toHaveValue('wall height');
   await expect(live('wall height')).toHaveCount(1);
