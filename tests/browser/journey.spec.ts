@@ -232,7 +232,7 @@ test('a box goes from its pattern to the subscribers and to a reader’s own siz
   });
 
   await test.step('the measurement sheet is of the same size', async () => {
-    await reader.getByRole('link', { name: 'Measurement sheet' }).click();
+    await reader.getByRole('link', { name: 'Measurement sheet', exact: true }).click();
     await reader.waitForURL(/\/sheet\?/);
     await expect(reader.locator('.sheet-cover')).toContainText('254 tall · 200 wide · 51 deep mm');
     const row = (piece: string) => reader.locator('.sheet-table tr').filter({ hasText: piece }).first();

@@ -93,7 +93,7 @@ test('the keyboard alone changes a size and reaches the sheet', async ({ page })
   await expect(page.locator('[data-field="inside width"] input[type=range]')).toBeFocused();
   await page.keyboard.press('ArrowRight');
   await shows(cover(page), '7 13/16 × 9 1/4 in');
-  await tabTo(page.getByRole('link', { name: 'Measurement sheet' }));
+  await tabTo(page.getByRole('link', { name: 'Measurement sheet', exact: true }));
   await page.keyboard.press('Enter');
   await page.waitForURL(/\/sheet\?/);
   await shows(page.locator('.sheet-cover'), '9 tall · 7 9/16 wide · 2 1/4 deep in');
