@@ -3,8 +3,8 @@ import type { PlanNews, PlanRequest } from './plan.worker';
 
 /** How long the worker thinks for each material, in trials: about a second on a desk, two or three on a phone. */
 const TRIES = 30_000;
-/** A size that is still being changed is not worth thinking about. */
-const REST = 400;
+/** A size that is still being changed is not worth thinking about, nor worth loading the planner for. */
+const REST = 1500;
 
 /** Looks for better plans beside the page. One at a time: asking again drops what was asked before. */
 export interface PlanClient {
