@@ -2,17 +2,27 @@ import { COINCIDENT } from '../measure';
 import type { Loop, Point } from '../types';
 import { pointsOf } from './curve';
 
-/** Where a loop crosses itself, or null. Touching at a corner is no crossing; overlapping edges are. */
+/**
+ * Where a loop crosses itself, or null. Touching at a corner is no crossing; overlapping edges are. Segments are met in order
+ * from the left, each with those only that begin before it ends: a rim of teeth has hundreds.
+ */
 export function selfCrossing(loop: Loop): Point | null {
   const points = pointsOf(loop, 0.1);
   const count = points.length;
-  for (let i = 0; i < count; i += 1) {
-    const [a, b] = [points[i] as Point, points[(i + 1) % count] as Point];
-    for (let j = i + 2; j < count; j += 1) {
-      if (i === 0 && j === count - 1) continue;
-      const [c, d] = [points[j] as Point, points[(j + 1) % count] as Point];
-      if (Math.max(a.x, b.x) < Math.min(c.x, d.x) || Math.max(c.x, d.x) < Math.min(a.x, b.x)) continue;
-      if (Math.max(a.y, b.y) < Math.min(c.y, d.y) || Math.max(c.y, d.y) < Math.min(a.y, b.y)) continue;
+  const segments = points
+    .map((from, index) => {
+      const to = points[(index + 1) % count] as Point;
+      return { index, from, to, left: Math.min(from.x, to.x), right: Math.max(from.x, to.x) };
+    })
+    .sort((one, other) => one.left - other.left);
+  for (const [place, { index, from: a, to: b, right }] of segments.entries()) {
+    const [top, bottom] = [Math.min(a.y, b.y), Math.max(a.y, b.y)];
+    for (let next = place + 1; next < count; next += 1) {
+      const { index: other, from: c, to: d, left } = segments[next] as (typeof segments)[number];
+      if (left > right) break;
+      const between = Math.abs(index - other);
+      if (between === 1 || between === count - 1) continue;
+      if (Math.max(c.y, d.y) < top || Math.min(c.y, d.y) > bottom) continue;
       const crossing = crossingOf(a, b, c, d);
       if (crossing) return crossing;
     }
