@@ -138,7 +138,11 @@ describe.each(SLUGS)('%s', (slug) => {
   const sizing = [...sizingsOf(model, 1, 7)][0]!;
   const sized = { ...sizing, choices: lowered(sizing.choices), values: lowered(sizing.values) };
   const before = evaluate(model, sized);
-  const [alone, pieces, written] = [figuresAlone(before), JSON.stringify(before.pieces), JSON.stringify(patternOf(slug))];
+  const [alone, pieces, written] = [
+    figuresAlone(before),
+    JSON.stringify(before.pieces),
+    JSON.stringify(patternOf(slug)),
+  ];
 
   it('gives the same figures whatever is renamed, and is what it was when renamed back', () => {
     for (const rename of everyRename(patternOf(slug))) {

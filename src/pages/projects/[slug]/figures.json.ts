@@ -43,7 +43,11 @@ export const GET: APIRoute = ({ params, url, request }) => {
   const data = {
     project: page.edition.slug,
     edition: page.edition.n,
-    ...figuresJson(page.model, page.view.verdict.figures, { ...planOn(page.view.stock), stock: page.view.stock, copies }),
+    ...figuresJson(page.model, page.view.verdict.figures, {
+      ...planOn(page.view.stock),
+      stock: page.view.stock,
+      copies,
+    }),
   };
   return json(data, { headers: publicHeaders(tag) });
 };
