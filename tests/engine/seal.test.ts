@@ -50,6 +50,9 @@ describe('formulas of the text', () => {
     const live = compileLive(carried(model), 'inside width + 1 in');
     expect(live.ok ? null : live.faults[0]).toMatchObject({ code: 'not sealed', found: '“inside width + 1 in”' });
   });
+  it('are looked up by what was sealed and by nothing that every object has', () => {
+    expect(compileLive(carried(model), 'constructor').ok).toBe(false);
+  });
   it('are not sealed when they do not read', () => {
     expect(sealFormula(model, 'inside width +')).toBeNull();
   });

@@ -69,6 +69,7 @@ export function sealModel(model: Model, texts: Iterable<string> = []): SealedMod
 
 export function openModel({ pattern, names, steps, lists, texts }: SealedModel): Model {
   const slots = new Map(names.map(({ name }, slot) => [name, slot]));
+  const written = new Map(Object.entries(texts));
   const at = (name: string) => names[slots.get(name) ?? -1];
   const scope: Model['scope'] = {
     has: (name) => name === 'pi' || slots.has(name),
@@ -79,8 +80,8 @@ export function openModel({ pattern, names, steps, lists, texts }: SealedModel):
   };
   const formula = ({ code, kind }: SealedFormula): Formula => {
     const node = nodeOf(code, names);
-    const uses = new Set(code.match(/(?<=\$|\bisn?t? )\d+/g) ?? []);
-    return { node, kind, work: workOf(node, scope), uses: [...uses].map((slot) => names[Number(slot)]?.name ?? '') };
+    const uses = new Set([...code.matchAll(/(?:\$|\bis(?:nt)? )(\d+)/g)].map(([, slot]) => Number(slot)));
+    return { node, kind, work: workOf(node, scope), uses: [...uses].map((slot) => names[slot]?.name ?? '') };
   };
   const opened = (value: unknown): unknown => {
     if (typeof value !== 'object' || value === null) return value;
@@ -115,7 +116,7 @@ export function openModel({ pattern, names, steps, lists, texts }: SealedModel):
     materials: withDefs(parts.materials, pattern.materials ?? []),
     placements: withDefs(parts.placements, pattern.assembly),
     read: (text) => {
-      const known = texts[text];
+      const known = written.get(text);
       const slot = slots.get(keyOf(text));
       const sealed = known ?? (slot === undefined ? null : { code: `$${slot}`, kind: scope.kind(keyOf(text)) });
       if (sealed) return { ok: true, value: formula(sealed) };
