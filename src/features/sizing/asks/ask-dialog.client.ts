@@ -43,10 +43,13 @@ export function openAsk(ask: Ask, page: AskPage): void {
   let worker: Worker | null = null;
   // Whatever was listened for goes when the dialog closes.
   const open = new AbortController();
-  const stop = () => {
-    clearTimeout(waiting);
+  const endSearch = () => {
     worker?.terminate();
     worker = null;
+  };
+  const stop = () => {
+    clearTimeout(waiting);
+    endSearch();
   };
 
   const state = (faults: AskFaults = {}): AskState => ({
@@ -65,12 +68,13 @@ export function openAsk(ask: Ask, page: AskPage): void {
       '<p>Trying sizes on your sheets…</p><p class="ask-ways"><button class="btn" type="button" data-cancel>Cancel</button></p>',
     );
     worker = new Worker(new URL('./largest.worker.ts', import.meta.url), { type: 'module' });
+    // Only the search ends: what was typed meanwhile still waits for its own answer.
     worker.addEventListener('message', ({ data }: MessageEvent<Solved>) => {
-      stop();
+      endSearch();
       show(answerPile(model, data, pile));
     });
     worker.addEventListener('error', () => {
-      stop();
+      endSearch();
       morphInto(place, '<p>This browser could not finish the search. Load the page anew and try again.</p>');
     });
     worker.postMessage({ model: page.sealed, base: verdict.shown.sizing, pile } satisfies LargestRequest);
