@@ -92,10 +92,144 @@ export const projects = sqliteTable(
     /** The revision that the newest edition was made from. */
     publishedRevision: integer('published_revision'),
     deletedAt: integer('deleted_at', { mode: 'timestamp_ms' }),
+    /** Taken back from readers: its page says so with the reason, lists leave it out. */
+    withdrawnAt: integer('withdrawn_at', { mode: 'timestamp_ms' }),
+    withdrawnReason: text('withdrawn_reason').notNull().default(''),
     createdAt: createdAt(),
     updatedAt: integer('updated_at', { mode: 'timestamp_ms' }).notNull().default(now),
   },
   (t) => [index('project_author').on(t.authorId, t.updatedAt)],
+);
+
+/** What a project holds, as one document. */
+export interface KeptState {
+  readonly title: string;
+  readonly summary: string;
+  readonly minutes: number | null;
+  readonly hero: string | null;
+  readonly pattern: Pattern;
+  readonly sizing: Sizing;
+  readonly writeUp: WriteUp;
+}
+export const REVISION_KINDS = ['saved', 'merged', 'restored', 'set aside', 'published', 'scheduled'] as const;
+/** States that were saved, each under the number that the project had with it. Older ones are thinned, never all. */
+export const revisions = sqliteTable(
+  'revision',
+  {
+    projectId: text('project_id')
+      .notNull()
+      .references(() => projects.id, { onDelete: 'cascade' }),
+    n: integer('n').notNull(),
+    state: text('state', { mode: 'json' }).$type<KeptState>().notNull(),
+    /** Only `saved` and `merged` are thinned. */
+    kind: text('kind', { enum: REVISION_KINDS }).notNull().default('saved'),
+    savedBy: text('saved_by').references(() => users.id, { onDelete: 'set null' }),
+    savedAt: integer('saved_at', { mode: 'timestamp_ms' }).notNull().default(now),
+  },
+  (t) => [primaryKey({ columns: [t.projectId, t.n] })],
+);
+
+/** Others who may work on a project. An invitation waits under its address until its owner takes it. */
+export const coAuthors = sqliteTable(
+  'co_author',
+  {
+    id: text('id').primaryKey(),
+    projectId: text('project_id')
+      .notNull()
+      .references(() => projects.id, { onDelete: 'cascade' }),
+    /** The address that was invited, in the form that is compared. */
+    emailKey: text('email_key').notNull(),
+    /** Who took the invitation; null until then. */
+    userId: text('user_id').references(() => users.id, { onDelete: 'cascade' }),
+    invitedBy: text('invited_by').references(() => users.id, { onDelete: 'set null' }),
+    state: text('state', { enum: ['invited', 'accepted'] }).notNull(),
+    createdAt: createdAt(),
+    acceptedAt: integer('accepted_at', { mode: 'timestamp_ms' }),
+  },
+  (t) => [
+    uniqueIndex('co_author_address').on(t.projectId, t.emailKey),
+    index('co_author_person').on(t.userId),
+    index('co_author_invited').on(t.emailKey),
+  ],
+);
+
+/** Links by which somebody trusted reads a project before it is published. */
+export const draftLinks = sqliteTable(
+  'draft_link',
+  {
+    id: text('id').primaryKey(),
+    projectId: text('project_id')
+      .notNull()
+      .references(() => projects.id, { onDelete: 'cascade' }),
+    /** SHA-256 of what stands in the link. */
+    tokenHash: text('token_hash').notNull().unique(),
+    /** Whom it is for, in the author's words. */
+    label: text('label').notNull().default(''),
+    createdAt: createdAt(),
+    revokedAt: integer('revoked_at', { mode: 'timestamp_ms' }),
+  },
+  (t) => [index('draft_link_project').on(t.projectId)],
+);
+
+/** A revision that becomes an edition by itself when its time comes. */
+export const schedules = sqliteTable('schedule', {
+  projectId: text('project_id')
+    .primaryKey()
+    .references(() => projects.id, { onDelete: 'cascade' }),
+  revision: integer('revision').notNull(),
+  note: text('note').notNull().default(''),
+  publishAt: integer('publish_at', { mode: 'timestamp_ms' }).notNull(),
+  setBy: text('set_by')
+    .notNull()
+    .references(() => users.id, { onDelete: 'cascade' }),
+  /** Why it was not published when its time came; null while it waits. */
+  problem: text('problem'),
+  createdAt: createdAt(),
+});
+
+/** Addresses that a published project had before. */
+export const slugRedirects = sqliteTable(
+  'slug_redirect',
+  {
+    slug: text('slug').primaryKey(),
+    projectId: text('project_id')
+      .notNull()
+      .references(() => projects.id, { onDelete: 'cascade' }),
+    createdAt: createdAt(),
+  },
+  (t) => [index('slug_redirect_project').on(t.projectId)],
+);
+
+/** Text brought in to be written up: a transcript, an old article. */
+export const sourceTexts = sqliteTable(
+  'source_text',
+  {
+    id: text('id').primaryKey(),
+    projectId: text('project_id')
+      .notNull()
+      .references(() => projects.id, { onDelete: 'cascade' }),
+    name: text('name').notNull(),
+    kind: text('kind').notNull(),
+    text: text('text').notNull(),
+    createdAt: createdAt(),
+  },
+  (t) => [index('source_text_project').on(t.projectId)],
+);
+
+/** Patterns that an author keeps to begin projects from. */
+export const ownPatterns = sqliteTable(
+  'own_pattern',
+  {
+    id: text('id').primaryKey(),
+    ownerId: text('owner_id')
+      .notNull()
+      .references(() => users.id, { onDelete: 'cascade' }),
+    name: text('name').notNull(),
+    pattern: text('pattern', { mode: 'json' }).$type<Pattern>().notNull(),
+    createdAt: createdAt(),
+    updatedAt: integer('updated_at', { mode: 'timestamp_ms' }).notNull().default(now),
+  },
+  (t) => [index('own_pattern_owner').on(t.ownerId, t.name)],
 );
 
 /** A published, frozen state of a project. Rows are never changed. */
