@@ -4,7 +4,7 @@ import { sizingOf, type Model } from './model';
 import type { GridId, Sizing, Unit } from './types';
 
 export type * from './types';
-export { explain, explainAt, nearestName } from './formula';
+export { explain, explainAt, FUNCTION_NAMES, nearestName } from './formula';
 export * from './measure';
 export { areaOf, boundsOf, lengthOf, perimeterOf, pointsOf } from './net';
 export { isName, keyOf } from './pattern/names';
@@ -18,6 +18,7 @@ export {
   type Rename,
 } from './pattern/rename';
 export { formulasOfPattern, formulasOfPiece } from './pattern/texts';
+export { panelNames, readCell, type Cell } from './piece';
 export {
   around,
   compileLive,
