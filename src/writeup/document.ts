@@ -27,8 +27,18 @@ export type InlineNode = TextNode | MeasureNode | { readonly type: 'hardBreak' }
 /** A numbered step. `mark` is a few words beside the title, such as "optional". */
 export interface StepNode {
   readonly type: 'step';
-  readonly attrs: { readonly title: string; readonly mark: string };
+  readonly attrs: {
+    readonly title: string;
+    readonly mark: string;
+    /** Where the step begins in a video. Usual: null. */
+    readonly moment?: VideoMoment | null;
+  };
   readonly content: readonly BlockNode[];
+}
+/** A place in a video: whole seconds from its beginning, and its https address when there is one to go to. */
+export interface VideoMoment {
+  readonly seconds: number;
+  readonly address: string | null;
 }
 export interface ParagraphNode {
   readonly type: 'paragraph';

@@ -8,6 +8,12 @@ export function safeHref(href: string): string | null {
   return trimmed.length <= 2000 && (SCHEMES.test(trimmed) || OWN_PLACE.test(trimmed)) ? trimmed : null;
 }
 
+/** The address of a video when it may stand in a write-up, else null: https alone, since the reader leaves the page for it. */
+export function videoHref(address: string): string | null {
+  const trimmed = address.trim();
+  return trimmed.length <= 2000 && /^https:\/\/[^\s"<>\\]+$/i.test(trimmed) && URL.canParse(trimmed) ? trimmed : null;
+}
+
 /** What a person types into the link field, made whole: `example.org/card` gets https, an e-mail address mailto. Null when it cannot be a link. */
 export function readHref(typed: string): string | null {
   const text = typed.trim();

@@ -4,11 +4,13 @@ import { z } from 'zod';
 import { WRITE_UP_VERSION, type DocNode, type WriteUp } from './document';
 import { writeUpFault } from './messages';
 import { writeUpSchema } from './schema';
+import { storedForm } from './stored-form';
 
 /** Characters of all texts and attribute values together, nesting, and parts in one write-up. */
 const WRITE_UP_LIMITS = { characters: 500_000, depth: 44, parts: 5_000 } as const;
 
-const attribute = z.union([z.string(), z.number().finite(), z.boolean(), z.null()]);
+const scalar = z.union([z.string(), z.number().finite(), z.boolean(), z.null()]);
+const attribute = z.union([scalar, z.record(scalar)]);
 const mark = z.object({ type: z.string().max(40), attrs: z.record(attribute).optional() });
 interface RawNode {
   type: string;
@@ -84,15 +86,7 @@ export function readWriteUp(json: unknown): Result<WriteUp> {
       return refuse('wrong value', `A list that starts at ${String(start)} was found`);
     }
   }
-  return { ok: true, value: { version: WRITE_UP_VERSION, doc: plain(doc.toJSON() as RawNode) as unknown as DocNode } };
-}
-
-/** Attributes of the text editor's own lists that say nothing are left away, so that the stored form is the contract's. */
-function plain(part: RawNode): RawNode {
-  const { attrs, content, ...rest } = part;
-  const start = attrs?.['start'];
-  const kept = part.type === 'orderedList' ? (typeof start === 'number' && start !== 1 ? { start } : undefined) : attrs;
-  return { ...rest, ...(kept ? { attrs: kept } : {}), ...(content ? { content: content.map(plain) } : {}) };
+  return { ok: true, value: { version: WRITE_UP_VERSION, doc: storedForm(doc.toJSON() as DocNode) } };
 }
 
 function* everyNode(root: RawNode): Generator<RawNode> {

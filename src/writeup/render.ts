@@ -1,7 +1,8 @@
-import type { BlockNode, DocNode, InlineNode, MarkNode, PhotoNode, StepNode } from './document';
+import type { BlockNode, DocNode, InlineNode, MarkNode, PhotoNode, StepNode, VideoMoment } from './document';
 import { esc } from '@/exports/escape';
 import { safeHref } from './links';
 import type { LiveFigures } from './live';
+import { momentHref, momentText } from './video-moment';
 import { pictureSources, pictureUrl } from './pictures';
 import { CARD_WIDTH, renderCutList, renderMeasure, renderPieceCard } from './render-figures';
 
@@ -22,6 +23,9 @@ interface Surroundings extends RenderContext {
 
 const CAUTION_ICON =
   '<svg class="icon" viewBox="0 0 24 24" width="20" height="20" aria-hidden="true"><path d="M12 4 2.5 20h19zM12 10v5M12 17.5v.3"/></svg>';
+
+const PLAY_ICON =
+  '<svg class="icon" viewBox="0 0 24 24" width="20" height="20" aria-hidden="true"><path d="M3.5 5.5h17v13h-17zM10 9v6l5-3z"/></svg>';
 
 /**
  * The write-up as HTML for the article, complete and escaped; nothing of it needs a program to be read. Works without a
@@ -90,8 +94,18 @@ function step({ attrs, content }: StepNode, around: Surroundings): string {
       : `<h${level} class="step-title" id="${id}-title"><span class="visually-hidden">Step ${n}${title === '' ? '' : ': '}</span>${esc(title)}${mark}</h${level}>`;
   return (
     `<section class="step" id="${id}" aria-labelledby="${id}-title"><div class="step-number" aria-hidden="true">${n}</div>` +
-    `<div class="step-body">${heading}${blocks(content, { ...around, above: level })}</div></section>`
+    `<div class="step-body">${heading}${momentLine(attrs.moment)}${blocks(content, { ...around, above: level })}</div></section>`
   );
+}
+
+/** A link out, and never a player: nothing is asked of another site before the reader follows it. */
+function momentLine(moment: VideoMoment | null | undefined): string {
+  if (!moment) return '';
+  const href = momentHref(moment);
+  const words = `${PLAY_ICON} ${href === null ? 'In the video from' : 'Watch this step from'} ${momentText(moment.seconds)}`;
+  if (href === null) return `<p class="step-moment">${words}</p>`;
+  const host = new URL(href).hostname.replace(/^www\./, '');
+  return `<p class="step-moment"><a href="${esc(href)}" rel="noopener noreferrer">${words}</a> <span class="soft">${esc(host)}</span></p>`;
 }
 
 function photo({ attrs, content }: PhotoNode, around: Surroundings): string {

@@ -46,6 +46,33 @@ describe('a write-up that is taken', () => {
     });
   });
 
+  it('keeps where a step begins in a video, with an https address or without; a step without one is stored as before', () => {
+    const step = (moment: unknown) => ({
+      type: 'step',
+      attrs: { title: 'A', mark: '', moment },
+      content: [{ type: 'paragraph' }],
+    });
+    const read = (moment: unknown) => {
+      const taken = readWriteUp(doc(step(moment)));
+      return taken.ok ? taken.value.doc.content[0] : taken.faults[0]?.code;
+    };
+    const here = { seconds: 252, address: 'https://video.example/watch?v=1' };
+    expect(read(here)).toEqual(step(here));
+    expect(read({ seconds: 0, address: null })).toEqual(step({ seconds: 0, address: null }));
+    expect(read(null)).toEqual({ ...step(null), attrs: { title: 'A', mark: '' } });
+    for (const wrong of [
+      { seconds: -1, address: null },
+      { seconds: 1.5, address: null },
+      { seconds: 86_400, address: null },
+      { seconds: 1 },
+      { seconds: 1, address: 'http://video.example' },
+      { seconds: 1, address: 'javascript:alert(1)' },
+      { seconds: 1, address: null, autoplay: true },
+      'https://video.example',
+    ])
+      expect(read(wrong)).toBe('wrong value');
+  });
+
   it('takes lists as the editor gives them, and keeps their start only when it says something', () => {
     const list = (start: number) => ({
       type: 'orderedList',
@@ -98,8 +125,8 @@ describe('a write-up that is refused', () => {
     ['another version', { version: 2, doc: { type: 'doc', content: [] } }],
     ['a paragraph as the whole', { version: 1, doc: { type: 'paragraph' } }],
     [
-      'attributes that are objects',
-      doc({ type: 'step', attrs: { title: { html: '<b>' } }, content: [{ type: 'paragraph' }] }),
+      'attributes that are objects of objects',
+      doc({ type: 'step', attrs: { moment: { seconds: {} } }, content: [{ type: 'paragraph' }] }),
     ],
   ])('is %s', (_, json) => {
     expect(code(json)).toBe('not a write-up');

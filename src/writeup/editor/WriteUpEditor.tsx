@@ -8,6 +8,7 @@ import { WRITE_UP_VERSION, type DocNode, type WriteUp } from '../document';
 import type { FiguresStore } from '../figures-store';
 import type { LiveText } from '../live';
 import { usesOf } from '../nodes/measure/view';
+import { storedForm } from '../stored-form';
 import { collectUses } from '../uses';
 import type { EditingDesk } from './editing-desk';
 import { editorExtensions } from './extensions';
@@ -114,7 +115,7 @@ export function WriteUpEditor({
     },
     onUpdate: ({ editor: changed }) => {
       if (changed.isEditable)
-        told.current.onChange({ version: WRITE_UP_VERSION, doc: changed.getJSON() as unknown as DocNode });
+        told.current.onChange({ version: WRITE_UP_VERSION, doc: storedForm(changed.getJSON() as DocNode) });
     },
     onSelectionUpdate: ({ editor: { state } }) => {
       const { selection } = state;

@@ -1,3 +1,6 @@
+import type { VideoMoment } from '../document';
+import { videoHref } from '../links';
+
 /** Checks on attribute values, for ProseMirror's `check()`: each throws a plain sentence when the value is not one that we store. */
 
 /** A text of at most `most` characters. */
@@ -9,6 +12,34 @@ export const textUpTo = (most: number) => (value: unknown) => {
 export const yesNo = (value: unknown) => {
   if (typeof value !== 'boolean') throw new RangeError('yes or no is wanted');
 };
+
+/** Nothing, or a place in a video of less than a day. */
+export const videoMoment = (value: unknown) => {
+  if (value !== null && !isMoment(value))
+    throw new RangeError('a moment is whole seconds from 0 to 86399, with an https address or none');
+};
+export const isMoment = (value: unknown): value is VideoMoment => {
+  if (typeof value !== 'object' || value === null) return false;
+  const { seconds, address, ...others } = value as Partial<VideoMoment>;
+  return (
+    typeof seconds === 'number' &&
+    Number.isInteger(seconds) &&
+    seconds >= 0 &&
+    seconds < 86_400 &&
+    (address === null || (typeof address === 'string' && videoHref(address) === address)) &&
+    Object.keys(others).length === 0
+  );
+};
+
+/** What an attribute of pasted HTML holds as JSON, when it is what is wanted; else null. */
+export function readJson<T>(text: string | null, wanted: (value: unknown) => value is T): T | null {
+  try {
+    const value: unknown = text === null ? null : JSON.parse(text);
+    return wanted(value) ? value : null;
+  } catch {
+    return null;
+  }
+}
 
 /** A whole number of pixels. */
 export const pixels = (value: unknown) => {

@@ -1,5 +1,5 @@
 import { Node } from '@tiptap/core';
-import { textUpTo } from '../attributes';
+import { isMoment, readJson, textUpTo, videoMoment } from '../attributes';
 
 /** A numbered step; the number follows from its place. */
 export const Step = Node.create({
@@ -22,6 +22,12 @@ export const Step = Node.create({
         validate: textUpTo(60),
         parseHTML: (element) => element.getAttribute('data-mark') ?? '',
         renderHTML: ({ mark }) => ({ 'data-mark': String(mark) }),
+      },
+      moment: {
+        default: null,
+        validate: videoMoment,
+        parseHTML: (element) => readJson(element.getAttribute('data-moment'), isMoment),
+        renderHTML: ({ moment }) => (moment === null ? {} : { 'data-moment': JSON.stringify(moment) }),
       },
     };
   },
