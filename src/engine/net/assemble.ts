@@ -27,9 +27,16 @@ export interface Assembled {
   readonly parts: number;
 }
 
+/** A side of a panel. Where it begins and ends is a number too, so that sides that meet are found at once. */
 interface Edge {
   readonly panel: number;
   readonly curve: Curve;
+  readonly start: number;
+  readonly end: number;
+  /** The side of another panel that it lies on. */
+  twin: Edge | null;
+  /** Whether it is in a loop of the outline already. */
+  walked: boolean;
 }
 
 /**
@@ -37,116 +44,183 @@ interface Edge {
  * is left is the outline and its holes. Shared edges need not have the same ends: they are split where they overlap.
  */
 export function assemble(panels: readonly LoosePanel[], jointOf: (a: string, b: string) => Joint): Assembled {
-  const edges = splitAtVertices(panels.flatMap((panel, index) => panel.loop.map((curve) => ({ panel: index, curve }))));
-  const open = byStart(edges);
+  const whole = panels.flatMap(edgesOf);
+  pair(whole, byStart(whole));
+  // Most sides have the very same ends as their twin: only those that have not are looked at for corners on them.
+  const edges = splitAtCorners(whole);
+  const starts = byStart(edges);
+  if (edges.length > whole.length) pair(edges, starts);
   const folds: Fold[] = [];
   const joins: { curve: Curve; panels: [string, string] }[] = [];
   const slits: Line[] = [];
-  const matched = new Set<Edge>();
+  const met = new Set<Edge>();
   for (const edge of edges) {
-    if (matched.has(edge)) continue;
-    const twin = (open.get(keyOf(edge.curve.to)) ?? []).find(
-      (other) => !matched.has(other) && other.panel !== edge.panel && isTwin(edge.curve, other.curve),
-    );
-    if (!twin) continue;
-    matched.add(edge).add(twin);
-    const names: [string, string] = [(panels[edge.panel] as LoosePanel).name, (panels[twin.panel] as LoosePanel).name];
+    if (edge.twin === null || met.has(edge.twin)) continue;
+    met.add(edge);
+    const { curve } = edge;
+    const names: [string, string] = [nameOf(panels, edge), nameOf(panels, edge.twin)];
     const joint = jointOf(...names);
     if (joint.is === 'fold') {
       const { kind, angle, shown } = joint;
-      folds.push({ curve: edge.curve, kind, angle, ...(shown === undefined ? {} : { shown }), panels: names });
-    } else if (joint.is === 'nothing') joins.push({ curve: edge.curve, panels: names });
-    else slits.push(line(edge.curve.from, edge.curve.to));
+      folds.push(
+        shown === undefined ? { curve, kind, angle, panels: names } : { curve, kind, angle, shown, panels: names },
+      );
+    } else if (joint.is === 'nothing') joins.push({ curve, panels: names });
+    else slits.push(line(curve.from, curve.to));
   }
-  const loops = chain(edges.filter((edge) => !matched.has(edge)));
-  const outer = loops.filter((loop) => areaOf(loop) > 0).sort((a, b) => areaOf(b) - areaOf(a));
+  const loops = chain(edges, starts).map((loop) => ({ loop, area: areaOf(loop) }));
+  const outer = loops.filter(({ area }) => area > 0).sort((a, b) => b.area - a.area);
   return {
-    outline: outer[0] ?? [],
-    holes: loops.filter((loop) => areaOf(loop) <= 0),
+    outline: outer[0]?.loop ?? [],
+    holes: loops.flatMap(({ loop, area }) => (area > 0 ? [] : [loop])),
     folds: mergeFolds(folds),
     joins,
     slits: mergeLines(slits),
     parts: outer.length,
   };
 }
+const nameOf = (panels: readonly LoosePanel[], { panel }: Edge): string => (panels[panel] as LoosePanel).name;
 
 /** Whole micrometres: points nearer than that share a place, but for those that straddle a rounding edge, hence the snap first. */
 const micrometres = (mm: number): number => Math.round(snap(mm) * 1e3);
 /** Both coordinates in one number, exact up to 30 m either way. */
-const keyOf = (point: Point): number => micrometres(point.x) * 2 ** 26 + micrometres(point.y);
+const placeOf = (point: Point): number => micrometres(point.x) * 2 ** 26 + micrometres(point.y);
 
-function byStart(edges: readonly Edge[]): ReadonlyMap<number, Edge[]> {
+function edgesOf({ loop }: LoosePanel, panel: number): Edge[] {
+  const starts = loop.map(({ from }) => placeOf(from));
+  return loop.map((curve, index) => ({
+    panel,
+    curve,
+    start: starts[index] as number,
+    end: starts[index + 1] ?? (starts[0] as number),
+    twin: null,
+    walked: false,
+  }));
+}
+
+function byStart(edges: readonly Edge[]): ReadonlyMap<number, readonly Edge[]> {
   const map = new Map<number, Edge[]>();
   for (const edge of edges) {
-    const key = keyOf(edge.curve.from);
-    const there = map.get(key);
+    if (edge.twin !== null) continue;
+    const there = map.get(edge.start);
     if (there) there.push(edge);
-    else map.set(key, [edge]);
+    else map.set(edge.start, [edge]);
   }
   return map;
 }
 
+/** Gives every edge that lies on one of another panel its twin. */
+function pair(edges: readonly Edge[], starts: ReadonlyMap<number, readonly Edge[]>): void {
+  for (const edge of edges) {
+    if (edge.twin !== null) continue;
+    for (const other of starts.get(edge.end) ?? []) {
+      if (other.twin !== null || other.panel === edge.panel || !isTwin(edge.curve, other.curve)) continue;
+      edge.twin = other;
+      other.twin = edge;
+      break;
+    }
+  }
+}
 function isTwin(a: Curve, b: Curve): boolean {
   if (!samePoint(a.from, b.to) || !samePoint(a.to, b.from) || a.type !== b.type) return false;
   return a.type === 'line' || (b.type === 'arc' && samePoint(a.centre, b.centre) && a.clockwise !== b.clockwise);
 }
 
-/** Straight upright and level edges are cut at every corner of another panel that lies on them. */
-function splitAtVertices(edges: readonly Edge[]): Edge[] {
-  // Corners by the line they lie on, so that an edge looks only along its own line.
-  const [byX, byY] = [new Map<number, number[]>(), new Map<number, number[]>()];
-  const add = (map: Map<number, number[]>, line: number, at: number): void => {
-    const known = map.get(line);
+/** Corners along the upright or level lines on which they lie, in order once they are asked for. */
+class Corners {
+  private readonly lines = new Map<number, number[]>();
+  private readonly sorted = new Set<number>();
+
+  add(across: number, at: number): void {
+    const known = this.lines.get(across);
     if (known) known.push(at);
-    else map.set(line, [at]);
-  };
-  for (const { curve } of edges) {
-    add(byX, micrometres(curve.from.x), curve.from.y);
-    add(byY, micrometres(curve.from.y), curve.from.x);
+    else this.lines.set(across, [at]);
   }
-  return edges.flatMap((edge) => {
-    const { from, to } = edge.curve;
-    const upright = coincident(from.x, to.x);
-    if (edge.curve.type !== 'line' || (!upright && !coincident(from.y, to.y))) return [edge];
-    const [start, end] = upright ? [from.y, to.y] : [from.x, to.x];
-    const [low, high] = [Math.min(start, end) + COINCIDENT, Math.max(start, end) - COINCIDENT];
-    const corners = (upright ? byX.get(micrometres(from.x)) : byY.get(micrometres(from.y))) ?? [];
-    const between = corners.filter((value) => value > low && value < high);
-    if (between.length === 0) return [edge];
-    const cuts = between
-      .sort((a, b) => (start < end ? a - b : b - a))
-      .filter((value, index, all) => index === 0 || !coincident(value, all[index - 1] as number));
-    const stops = [from, ...cuts.map((value) => (upright ? { x: from.x, y: value } : { x: value, y: from.y })), to];
-    return stops
-      .slice(1)
-      .map((stop, index) => ({ panel: edge.panel, curve: partOf(edge.curve, stops[index] as Point, stop) }));
-  });
+  /** Places between two others on a line, each once, in order. */
+  between(across: number, low: number, high: number): readonly number[] {
+    const places = this.lines.get(across);
+    if (!places) return [];
+    if (!this.sorted.has(across)) {
+      places.sort((a, b) => a - b);
+      this.sorted.add(across);
+    }
+    const found: number[] = [];
+    for (let index = after(places, low + COINCIDENT); index < places.length; index += 1) {
+      const place = places[index] as number;
+      if (place >= high - COINCIDENT) break;
+      if (found.length === 0 || !coincident(place, found.at(-1) as number)) found.push(place);
+    }
+    return found;
+  }
+}
+/** Index of the first of the ordered places that is larger. */
+function after(places: readonly number[], value: number): number {
+  let [low, high] = [0, places.length];
+  while (low < high) {
+    const middle = (low + high) >> 1;
+    if ((places[middle] as number) > value) high = middle;
+    else low = middle + 1;
+  }
+  return low;
 }
 
-/** Loose edges to closed loops. Where several go on from a corner, the one that turns most to the right keeps loops apart. */
-function chain(edges: readonly Edge[]): Loop[] {
-  const from = byStart(edges);
-  const used = new Set<Edge>();
+/** Straight upright and level edges without a twin are cut at every corner of another panel that lies on them. */
+function splitAtCorners(edges: readonly Edge[]): readonly Edge[] {
+  const [onUpright, onLevel] = [new Corners(), new Corners()];
+  for (const { curve } of edges) {
+    onUpright.add(micrometres(curve.from.x), curve.from.y);
+    onLevel.add(micrometres(curve.from.y), curve.from.x);
+  }
+  return edges.flatMap((edge): Edge | Edge[] => {
+    const { from, to } = edge.curve;
+    const upright = coincident(from.x, to.x);
+    if (edge.twin !== null || edge.curve.type !== 'line' || (!upright && !coincident(from.y, to.y))) return edge;
+    const [start, end] = upright ? [from.y, to.y] : [from.x, to.x];
+    const [low, high] = start < end ? [start, end] : [end, start];
+    const cuts = upright
+      ? onUpright.between(micrometres(from.x), low, high)
+      : onLevel.between(micrometres(from.y), low, high);
+    if (cuts.length === 0) return edge;
+    const places = start < end ? cuts : [...cuts].reverse();
+    const stops = [from, ...places.map((at) => (upright ? { x: from.x, y: at } : { x: at, y: from.y })), to];
+    return edgesBetween(edge, stops);
+  });
+}
+function edgesBetween(edge: Edge, stops: readonly Point[]): Edge[] {
+  const places = [edge.start, ...stops.slice(1, -1).map(placeOf), edge.end];
+  return stops.slice(1).map((stop, index) => ({
+    ...edge,
+    curve: partOf(edge.curve, stops[index] as Point, stop),
+    start: places[index] as number,
+    end: places[index + 1] as number,
+  }));
+}
+
+/** Edges without a twin to closed loops. Where several go on from a corner, the one that turns most to the right keeps loops apart. */
+function chain(edges: readonly Edge[], starts: ReadonlyMap<number, readonly Edge[]>): Loop[] {
+  const isFree = (edge: Edge): boolean => edge.twin === null && !edge.walked;
   const loops: Loop[] = [];
   for (const first of edges) {
-    if (used.has(first)) continue;
+    if (!isFree(first)) continue;
     const loop: Curve[] = [];
     let edge: Edge | undefined = first;
-    while (edge && !used.has(edge)) {
-      used.add(edge);
+    while (edge) {
+      edge.walked = true;
       loop.push(edge.curve);
-      const last: Curve = edge.curve;
-      edge = undefined;
-      let most = -Infinity;
-      for (const next of from.get(keyOf(last.to)) ?? []) {
-        if (used.has(next)) continue;
-        const right = turn(last, next.curve);
-        if (right > most) [edge, most] = [next, right];
-      }
+      const next: readonly Edge[] = (starts.get(edge.end) ?? []).filter(isFree);
+      edge = next.length < 2 ? next[0] : mostRight(edge.curve, next);
     }
     loops.push(straighten(loop));
   }
   return loops;
+}
+function mostRight(last: Curve, edges: readonly Edge[]): Edge | undefined {
+  let [found, most]: [Edge | undefined, number] = [undefined, -Infinity];
+  for (const edge of edges) {
+    const right = turn(last, edge.curve);
+    if (right > most) [found, most] = [edge, right];
+  }
+  return found;
 }
 
 function turn(a: Curve, b: Curve): number {
@@ -185,22 +259,26 @@ function continues(a: Curve, b: Curve): boolean {
 /** One fold between two panels stays one fold, however its edge was split. */
 function mergeFolds(folds: readonly Fold[]): Fold[] {
   const result: Fold[] = [];
+  const between = new Map<string, number[]>();
   for (const fold of folds) {
-    const index = result.findIndex(
-      (other) =>
-        other.panels[0] === fold.panels[0] &&
-        other.panels[1] === fold.panels[1] &&
-        (continues(other.curve, fold.curve) || continues(fold.curve, other.curve)),
-    );
-    const before = result[index];
-    if (!before) result.push(fold);
-    else
-      result[index] = {
-        ...before,
-        curve: continues(before.curve, fold.curve)
-          ? partOf(before.curve, before.curve.from, fold.curve.to)
-          : partOf(before.curve, fold.curve.from, before.curve.to),
-      };
+    const panels = fold.panels.join('|');
+    const places = between.get(panels) ?? [];
+    const index = places.find((place) => {
+      const { curve } = result[place] as Fold;
+      return continues(curve, fold.curve) || continues(fold.curve, curve);
+    });
+    if (index === undefined) {
+      between.set(panels, [...places, result.length]);
+      result.push(fold);
+      continue;
+    }
+    const before = result[index] as Fold;
+    result[index] = {
+      ...before,
+      curve: continues(before.curve, fold.curve)
+        ? partOf(before.curve, before.curve.from, fold.curve.to)
+        : partOf(before.curve, fold.curve.from, before.curve.to),
+    };
   }
   return result;
 }

@@ -86,13 +86,28 @@ export interface Box {
 }
 /** The smallest upright rectangle round a loop, arcs included. */
 export function boundsOf(loop: Loop): Box {
-  const points = loop.flatMap((curve) => [curve.from, ...(curve.type === 'arc' ? extremesOf(curve) : [])]);
-  const [xs, ys] = [points.map((point) => point.x), points.map((point) => point.y)];
-  return { left: Math.min(...xs), top: Math.min(...ys), right: Math.max(...xs), bottom: Math.max(...ys) };
+  let [left, top, right, bottom] = [Infinity, Infinity, -Infinity, -Infinity];
+  const take = ({ x, y }: Point): void => {
+    if (x < left) left = x;
+    if (x > right) right = x;
+    if (y < top) top = y;
+    if (y > bottom) bottom = y;
+  };
+  for (const curve of loop) {
+    take(curve.from);
+    if (curve.type === 'arc') extremesOf(curve).forEach(take);
+  }
+  return { left, top, right, bottom };
 }
+const NONE: readonly Point[] = [];
 /** Points of the arc furthest left, right, up and down, where it passes them. */
 function extremesOf(arc: Arc): readonly Point[] {
-  const start = Math.atan2(arc.from.y - arc.centre.y, arc.from.x - arc.centre.x);
+  const { from, to, centre, radius } = arc;
+  // Less than a quarter of the circle, within one quarter of it: most teeth.
+  const quarterOf = ({ x, y }: Point): number => (x > centre.x ? 2 : 0) + (y > centre.y ? 1 : 0);
+  const short = (from.x - to.x) ** 2 + (from.y - to.y) ** 2 < radius * radius;
+  if (short && quarterOf(from) === quarterOf(to) && sweepOf(arc) < Math.PI) return NONE;
+  const start = Math.atan2(from.y - centre.y, from.x - centre.x);
   const sweep = sweepOf(arc);
   return [0, 1, 2, 3].flatMap((quarter) => {
     const turn = ((arc.clockwise ? 1 : -1) * (quarter * (Math.PI / 2) - start)) % (2 * Math.PI);

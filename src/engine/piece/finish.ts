@@ -29,61 +29,68 @@ export interface LoosePiece {
 }
 
 /** Joins the panels of a piece and checks the whole: one part, closed, not crossing itself. */
-export function finishNet(piece: LoosePiece): Built {
+export function finishNet(loose: LoosePiece): Built {
+  const piece = loose.blank ? loose : onBlank(loose);
   const assembled = assemble(piece.panels, piece.jointOf);
   if (assembled.outline.length === 0) return nonsense('nothing is left of it');
   if (assembled.parts > 1) return nonsense(`it falls apart into ${assembled.parts} parts`);
   if (selfCrossing(assembled.outline)) return nonsense('its outline crosses itself');
+  const { holes = [], creases = [], edges = {}, blank = NO_BLANK } = piece;
   const net: Net = {
     outline: assembled.outline,
-    holes: [...assembled.holes, ...(piece.holes ?? [])],
+    holes: [...assembled.holes, ...holes],
     panels: piece.panels,
     folds: assembled.folds,
-    creases: piece.creases ?? [],
+    creases,
     joins: assembled.joins,
     slits: assembled.slits,
-    away: [],
-    across: 0,
-    along: 0,
-    edges: piece.edges ?? {},
-    columns: [],
-    rows: [],
+    edges,
+    ...blank,
   };
-  return { ok: true, net: piece.blank ? { ...net, ...piece.blank } : onBlank(net, piece.step) };
+  return { ok: true, net };
 }
+const NO_BLANK = { away: [], across: 0, along: 0, columns: [], rows: [] };
 
-/** Moves a net into the smallest blank of whole grid steps that holds it, in the middle of what is over. */
-function onBlank(net: Net, step: number): Net {
-  const box = boundsOf(net.outline);
-  const size = (mm: number) => (step > 0 ? roundTo(mm, step, 'up') : snap(mm));
-  const [across, along] = [size(box.right - box.left), size(box.bottom - box.top)];
-  const moved = moveNet(net, {
-    x: (across - (box.right - box.left)) / 2 - box.left,
-    y: (along - (box.bottom - box.top)) / 2 - box.top,
-  });
-  return { ...moved, across, along, columns: [0, across], rows: [0, along] };
+/** Puts a piece on the smallest blank of whole grid steps that holds its panels, in the middle of what is over. */
+function onBlank(piece: LoosePiece): LoosePiece {
+  const { left, top, right, bottom } = boundsOf(piece.panels.flatMap(({ loop }) => loop));
+  const size = (mm: number) => (piece.step > 0 ? roundTo(mm, piece.step, 'up') : snap(mm));
+  const [across, along] = [size(right - left), size(bottom - top)];
+  const mover = moverBy({ x: (across - (right - left)) / 2 - left, y: (along - (bottom - top)) / 2 - top });
+  return {
+    ...piece,
+    panels: piece.panels.map(mover.panel),
+    holes: (piece.holes ?? []).map(mover.loop),
+    creases: (piece.creases ?? []).map((crease) => ({ ...crease, curve: mover.curve(crease.curve) })),
+    blank: { away: [], across, along, columns: [0, across], rows: [0, along] },
+  };
 }
 
 /** The same card drawn elsewhere; its blank stays where it is. */
 export function moveNet(net: Net, by: Point): Net {
+  const { curve, loop, panel } = moverBy(by);
+  return {
+    ...net,
+    outline: loop(net.outline),
+    holes: net.holes.map(loop),
+    panels: net.panels.map(panel),
+    folds: net.folds.map((fold) => ({ ...fold, curve: curve(fold.curve) })),
+    creases: net.creases.map((crease) => ({ ...crease, curve: curve(crease.curve) })),
+    joins: net.joins.map((join) => ({ ...join, curve: curve(join.curve) })),
+    slits: net.slits.map(curve),
+  };
+}
+function moverBy(by: Point) {
   const point = (at: Point): Point => ({ x: at.x + by.x, y: at.y + by.y });
   const curve = <T extends Curve>(one: T): T =>
     one.type === 'line'
       ? { ...one, from: point(one.from), to: point(one.to) }
       : { ...one, from: point(one.from), to: point(one.to), centre: point(one.centre) };
   const loop = (curves: Loop): Loop => curves.map(curve);
-  return {
-    ...net,
-    outline: loop(net.outline),
-    holes: net.holes.map(loop),
-    panels: net.panels.map((panel) => ({
-      ...panel,
-      loop: loop(panel.loop),
-      ...(panel.cone ? { cone: { ...panel.cone, apex: point(panel.cone.apex) } } : {}),
-    })),
-    folds: net.folds.map((fold) => ({ ...fold, curve: curve(fold.curve) })),
-    creases: net.creases.map((crease) => ({ ...crease, curve: curve(crease.curve) })),
-    joins: net.joins.map((join) => ({ ...join, curve: curve(join.curve) })),
-    slits: net.slits.map(curve),
-  };
+  const panel = <T extends LoosePanel>(one: T): T => ({
+    ...one,
+    loop: loop(one.loop),
+    ...(one.cone ? { cone: { ...one.cone, apex: point(one.cone.apex) } } : {}),
+  });
+  return { curve, loop, panel };
 }
