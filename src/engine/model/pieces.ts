@@ -89,6 +89,7 @@ function pieceOf(
   const scores = grid ? scoresOf(net) : { across: [], along: [] };
   const thickness = thicknessOf(model, values);
   const fan = def.builder === 'fan' ? fanSizes(net, def) : null;
+  let [area, perimeter]: [number?, number?] = [];
   let words: readonly Sentence[] | undefined;
   return {
     name: def.name,
@@ -101,9 +102,13 @@ function pieceOf(
     ...(fan && fan.side.type === 'line' ? { fan: { side: fan.side, height: fan.height } } : {}),
     ...(layer ? { layer } : {}),
     thickness,
-    area: areaOfNet(net),
-    perimeter: perimeterOf(net.outline) + net.holes.reduce((sum, hole) => sum + perimeterOf(hole), 0),
     // Worked out when first asked for: a sweep over a thousand sizings reads none.
+    get area() {
+      return (area ??= areaOfNet(net));
+    },
+    get perimeter() {
+      return (perimeter ??= perimeterOf(net.outline) + net.holes.reduce((sum, hole) => sum + perimeterOf(hole), 0));
+    },
     get instructions() {
       const figure = figureMaker(GRIDS[sizing.grid].step, thickness);
       words ??= makingOf({ net, grid, def, scores, figure, ...(layer ? { layer, count } : {}) });

@@ -126,25 +126,25 @@ function isTwin(a: Curve, b: Curve): boolean {
   return a.type === 'line' || (b.type === 'arc' && samePoint(a.centre, b.centre) && a.clockwise !== b.clockwise);
 }
 
-/** Corners along the upright or level lines on which they lie, in order once they are asked for. */
+/** Corners along the upright or the level lines that are asked about, in order once they are asked for. */
 class Corners {
-  private readonly lines = new Map<number, number[]>();
-  private readonly sorted = new Set<number>();
+  private readonly lines = new Map<number, { readonly places: number[]; sorted: boolean }>();
 
-  add(across: number, at: number): void {
-    const known = this.lines.get(across);
-    if (known) known.push(at);
-    else this.lines.set(across, [at]);
+  /** Only corners on lines that were named are kept. */
+  name(line: number): void {
+    if (!this.lines.has(line)) this.lines.set(line, { places: [], sorted: false });
+  }
+  add(line: number, at: number): void {
+    this.lines.get(line)?.places.push(at);
   }
   /** Places between two others on a line, each once, in order. */
-  between(across: number, low: number, high: number): readonly number[] {
-    const places = this.lines.get(across);
-    if (!places) return [];
-    if (!this.sorted.has(across)) {
-      places.sort((a, b) => a - b);
-      this.sorted.add(across);
-    }
+  between(line: number, low: number, high: number): readonly number[] {
+    const known = this.lines.get(line);
+    if (!known) return [];
+    if (!known.sorted) known.places.sort((a, b) => a - b);
+    known.sorted = true;
     const found: number[] = [];
+    const { places } = known;
     for (let index = after(places, low + COINCIDENT); index < places.length; index += 1) {
       const place = places[index] as number;
       if (place >= high - COINCIDENT) break;
@@ -167,24 +167,34 @@ function after(places: readonly number[], value: number): number {
 /** Straight upright and level edges without a twin are cut at every corner of another panel that lies on them. */
 function splitAtCorners(edges: readonly Edge[]): readonly Edge[] {
   const [onUpright, onLevel] = [new Corners(), new Corners()];
+  for (const { twin, curve } of edges) {
+    if (twin !== null || curve.type !== 'line') continue;
+    if (coincident(curve.from.x, curve.to.x)) onUpright.name(micrometres(curve.from.x));
+    else if (coincident(curve.from.y, curve.to.y)) onLevel.name(micrometres(curve.from.y));
+  }
   for (const { curve } of edges) {
     onUpright.add(micrometres(curve.from.x), curve.from.y);
     onLevel.add(micrometres(curve.from.y), curve.from.x);
   }
-  return edges.flatMap((edge): Edge | Edge[] => {
+  const split: Edge[] = [];
+  for (const edge of edges) {
     const { from, to } = edge.curve;
     const upright = coincident(from.x, to.x);
-    if (edge.twin !== null || edge.curve.type !== 'line' || (!upright && !coincident(from.y, to.y))) return edge;
+    const splits = edge.twin === null && edge.curve.type === 'line' && (upright || coincident(from.y, to.y));
     const [start, end] = upright ? [from.y, to.y] : [from.x, to.x];
-    const [low, high] = start < end ? [start, end] : [end, start];
-    const cuts = upright
-      ? onUpright.between(micrometres(from.x), low, high)
-      : onLevel.between(micrometres(from.y), low, high);
-    if (cuts.length === 0) return edge;
+    const corners = upright ? onUpright : onLevel;
+    const cuts = splits
+      ? corners.between(micrometres(upright ? from.x : from.y), Math.min(start, end), Math.max(start, end))
+      : [];
+    if (cuts.length === 0) {
+      split.push(edge);
+      continue;
+    }
     const places = start < end ? cuts : [...cuts].reverse();
-    const stops = [from, ...places.map((at) => (upright ? { x: from.x, y: at } : { x: at, y: from.y })), to];
-    return edgesBetween(edge, stops);
-  });
+    const stops = places.map((at) => (upright ? { x: from.x, y: at } : { x: at, y: from.y }));
+    split.push(...edgesBetween(edge, [from, ...stops, to]));
+  }
+  return split;
 }
 function edgesBetween(edge: Edge, stops: readonly Point[]): Edge[] {
   const places = [edge.start, ...stops.slice(1, -1).map(placeOf), edge.end];

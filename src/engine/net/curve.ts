@@ -49,19 +49,22 @@ export function reversed(curve: Curve): Curve {
 export const partOf = (curve: Curve, from: Point, to: Point): Curve => ({ ...curve, from, to });
 
 /** Straight chords that stay within `tolerance` of the curve; the first point is left out. */
-export function flatten(curve: Curve, tolerance = 0.05): readonly Point[] {
-  if (curve.type === 'line') return [curve.to];
-  const sweep = sweepOf(curve);
-  // A chord over angle a leaves the circle by r (1 − cos(a / 2)).
-  const step = 2 * Math.acos(Math.max(-1, 1 - tolerance / curve.radius));
-  const count = Math.max(2, Math.ceil(sweep / Math.max(step, 1e-3)));
-  return Array.from({ length: count }, (_, index) =>
-    index === count - 1 ? curve.to : pointAt(curve, (index + 1) / count),
-  );
-}
+export const flatten = (curve: Curve, tolerance?: number): readonly Point[] => pointsOf([curve], tolerance);
 
-export const pointsOf = (loop: Loop, tolerance?: number): readonly Point[] =>
-  loop.flatMap((curve) => flatten(curve, tolerance));
+/** The corners of a loop with its arcs flattened. */
+export function pointsOf(loop: Loop, tolerance = 0.05): readonly Point[] {
+  const points: Point[] = [];
+  for (const curve of loop) {
+    if (curve.type === 'arc') {
+      // A chord over angle a leaves the circle by r (1 − cos(a / 2)).
+      const step = 2 * Math.acos(Math.max(-1, 1 - tolerance / curve.radius));
+      const count = Math.max(2, Math.ceil(sweepOf(curve) / Math.max(step, 1e-3)));
+      for (let index = 1; index < count; index += 1) points.push(pointAt(curve, index / count));
+    }
+    points.push(curve.to);
+  }
+  return points;
+}
 
 /**
  * Area enclosed, positive when the loop runs clockwise on screen. Exact: the polygon of the curves' ends plus the circular

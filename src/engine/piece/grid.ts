@@ -346,6 +346,8 @@ class GridBuilder {
     const teeth = Math.max(1, Math.round(shape.teeth));
     const pitch = (to - from) / teeth;
     const give = teeth > 1 ? depth * Math.tan((shape.toothAngle * Math.PI) / 180) : 0;
+    const sides = [side, lastSide, OPPOSITE[side], firstSide];
+    let root = place(from, 0);
     for (let tooth = 0; tooth < teeth; tooth += 1) {
       const [a, b] = [from + pitch * tooth, tooth === teeth - 1 ? to : from + pitch * (tooth + 1)];
       let left = a + (tooth === 0 ? Math.max(inset(first), give) : give);
@@ -353,14 +355,13 @@ class GridBuilder {
       if (teeth === 1 && moreThan(left, right)) [left, right] = meet(a, b, inset(first), inset(last));
       if (moreThan(left, right)) return `the teeth of “${cell.name}” come to nothing`;
       const tip = teeth === 1 && isZero(right - left) ? depth * ((b - a) / (inset(first) + inset(last))) : depth;
-      const corners = [place(a, 0), place(b, 0), place(right, tip), place(left, tip)].filter(
-        (point, index, all) =>
-          index === 0 ||
-          Math.hypot(point.x - (all[index - 1] as Point).x, point.y - (all[index - 1] as Point).y) > 1e-5,
+      const start = root;
+      root = place(b, 0);
+      const corners = [start, root, place(right, tip), place(left, tip)].filter(
+        (point, index, all) => index === 0 || distance(point, all[index - 1] as Point) > 1e-5,
       );
-      const tags: readonly (Side | 'inner')[] = [side, lastSide, OPPOSITE[side], firstSide];
       const outlined = corners.map((point, index) => ({
-        side: tags[index] ?? 'inner',
+        side: sides[index] as Side,
         curve: line(point, corners[(index + 1) % corners.length] as Point),
       }));
       const rounded = shape.round > 0 && teeth === 1 ? roundTip(outlined, shape.round) : outlined;
@@ -453,11 +454,11 @@ class GridBuilder {
   private joint(a: string, b: string): Joint {
     const [cellA, cellB] = [this.cellOfPanel.get(a) as Cell, this.cellOfPanel.get(b) as Cell];
     const hinged = this.hinges.get(a) === cellB.name || this.hinges.get(b) === cellA.name;
+    const parting = this.partings.size > 0 ? this.partings.get(pairOf(a, b)) : undefined;
+    if (parting) return parting;
     const said = this.piece.lines.find(
       ({ between: [p, q] }) => (p === cellA.name && q === cellB.name) || (p === cellB.name && q === cellA.name),
     );
-    const parting = this.partings.get(pairOf(a, b));
-    if (parting) return parting;
     if (said) return jointAsSaid(said);
     if (cellA.kind === 'panel' && cellB.kind === 'panel') return { is: 'fold', kind: 'valley', angle: 90 };
     if (!hinged) return { is: 'slit' };
