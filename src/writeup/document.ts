@@ -22,7 +22,11 @@ export type BlockNode =
   | PhotoNode
   | NoteNode
   | MaterialsNode;
-export type InlineNode = TextNode | MeasureNode | { readonly type: 'hardBreak' };
+export type InlineNode =
+  | TextNode
+  | MeasureNode
+  | StepRefNode
+  | { readonly type: 'hardBreak'; readonly marks?: readonly MarkNode[] };
 
 /** A numbered step. `mark` is a few words beside the title, such as "optional". */
 export interface StepNode {
@@ -32,6 +36,12 @@ export interface StepNode {
     readonly mark: string;
     /** Where the step begins in a video. Usual: null. */
     readonly moment?: VideoMoment | null;
+    /** A formula that is yes or no: the step is there, and counted, only when it holds. Usual: empty, always. */
+    readonly when?: string;
+    /** May be skipped. Usual: false. */
+    readonly optional?: boolean;
+    /** What references speak of; no two steps have the same. Usual: empty, as long as nothing refers to it. */
+    readonly key?: string;
   };
   readonly content: readonly BlockNode[];
 }
@@ -59,6 +69,12 @@ export interface ListNode {
 export interface MeasureNode {
   readonly type: 'measure';
   readonly attrs: { readonly formula: string; readonly bare: boolean };
+  readonly marks?: readonly MarkNode[];
+}
+/** “step 4”, counted anew wherever it is read: `key` is that of the step. */
+export interface StepRefNode {
+  readonly type: 'stepRef';
+  readonly attrs: { readonly key: string };
   readonly marks?: readonly MarkNode[];
 }
 /** A piece's drawing with its cut and score sentences. */
@@ -91,4 +107,6 @@ export interface TextNode {
 export type MarkNode =
   | { readonly type: 'bold' }
   | { readonly type: 'italic' }
+  /** A phrase that is said only when a formula, which is yes or no, holds. */
+  | { readonly type: 'onlyWhen'; readonly attrs: { readonly when: string } }
   | { readonly type: 'link'; readonly attrs: { readonly href: string } };

@@ -1,8 +1,8 @@
 import { keyOf, renameInFormula, type Fault, type Rename, type Result } from '@/engine';
-import type { BlockNode, DocNode, InlineNode } from './document';
+import type { BlockNode, DocNode, InlineNode, MarkNode, StepNode } from './document';
 
 /**
- * The write-up with a name of its pattern changed: in live measures, wherever they stand, and on piece cards. The words
+ * The write-up with a name of its pattern changed: in live measures and conditions, wherever they stand, and on piece cards. The words
  * stay as they were written. Parts in which nothing changes stay the same objects. Refused while a live measure holds a mark
  * that means nothing, with its place.
  */
@@ -11,14 +11,29 @@ export function renameInWriteUp(doc: DocNode, rename: Rename): Result<DocNode> {
   let steps = 0;
   let where = '';
 
-  const inline = (node: InlineNode): InlineNode => {
-    if (node.type !== 'measure') return node;
-    const { formula } = node.attrs;
-    const renamed = renameInFormula(formula, rename, where);
+  const formula = (text: string): string => {
+    const renamed = renameInFormula(text, rename, where);
     if (!renamed.ok) faults.push(...renamed.faults);
-    return renamed.ok && renamed.value !== formula
-      ? { ...node, attrs: { ...node.attrs, formula: renamed.value } }
-      : node;
+    return renamed.ok ? renamed.value : text;
+  };
+  const mark = (one: MarkNode): MarkNode => {
+    if (one.type !== 'onlyWhen') return one;
+    const when = formula(one.attrs.when);
+    return when === one.attrs.when ? one : { ...one, attrs: { when } };
+  };
+  const marked = <T extends InlineNode>(node: T): T => {
+    if (!('marks' in node) || node.marks === undefined) return node;
+    const marks = node.marks.map(mark);
+    return marks.some((one, index) => one !== node.marks?.[index]) ? { ...node, marks } : node;
+  };
+  const inline = (node: InlineNode): InlineNode => {
+    if (node.type !== 'measure') return marked(node);
+    const renamed = formula(node.attrs.formula);
+    return marked(renamed === node.attrs.formula ? node : { ...node, attrs: { ...node.attrs, formula: renamed } });
+  };
+  const step = (node: StepNode): StepNode => {
+    const when = node.attrs.when ? formula(node.attrs.when) : node.attrs.when;
+    return when === node.attrs.when ? node : { ...node, attrs: { ...node.attrs, when } };
   };
   const block = (node: BlockNode): BlockNode => {
     switch (node.type) {
@@ -33,6 +48,7 @@ export function renameInWriteUp(doc: DocNode, rename: Rename): Result<DocNode> {
           node.content.map((item) => withContent(item, item.content.map(block))),
         );
       case 'step':
+        return withContent(step(node), node.content.map(block));
       case 'materials':
       case 'tip':
       case 'caution':

@@ -51,6 +51,14 @@ function figure({ typeset, spoken }: Shown): string {
   return `<span class="figure" aria-hidden="true">${esc(typeset)}</span><span class="visually-hidden spoken">${esc(spoken)}</span>`;
 }
 
+// ── Steps ────────────────────────────────────────────────────────────────────────────────────────────────────────────
+
+/** What stands in a reference to a step: `step 4`; one that does not apply has no number. */
+export const stepRefInside = (word: string, number: number | null): string =>
+  number === null
+    ? `a ${word.toLowerCase()} that your box does without`
+    : `${word}\u00a0<span data-number>${number}</span>`;
+
 // ── Piece cards ──────────────────────────────────────────────────────────────────────────────────────────────────────
 
 /** The card of a piece: name, how many of what, the drawing with its dimensions, and how to cut and score it in words. */

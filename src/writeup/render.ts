@@ -1,10 +1,11 @@
 import type { BlockNode, DocNode, InlineNode, MarkNode, PhotoNode, StepNode, VideoMoment } from './document';
+import { holds, numberSteps, whenOf, type NumberedStep } from './condition';
 import { esc } from '@/exports/escape';
 import { safeHref } from './links';
 import type { LiveFigures } from './live';
 import { momentHref, momentText } from './video-moment';
 import { pictureSources, pictureUrl } from './pictures';
-import { CARD_WIDTH, renderCutList, renderMeasure, renderPieceCard } from './render-figures';
+import { CARD_WIDTH, renderCutList, renderMeasure, renderPieceCard, stepRefInside } from './render-figures';
 
 export interface RenderContext extends LiveFigures {
   /** Pixels that pieces are drawn in. */
@@ -18,7 +19,7 @@ interface Surroundings extends RenderContext {
   readonly ids: Set<string>;
   /** Headings of this level and above are spoken for by what stands round the node. */
   readonly above: 1 | 2 | 3;
-  readonly counted: { steps: number };
+  readonly steps: readonly NumberedStep[];
 }
 
 const CAUTION_ICON =
@@ -29,10 +30,11 @@ const PLAY_ICON =
 
 /**
  * The write-up as HTML for the article, complete and escaped; nothing of it needs a program to be read. Works without a
- * DOM and without the editor, so the browser may call it too. Empty paragraphs and headings are left away.
+ * DOM and without the editor, so the browser may call it too. Empty paragraphs and headings are left away; steps and
+ * phrases that do not apply are there and hidden, since another size may need them.
  */
 export function renderWriteUp(doc: DocNode, context: RenderContext): string {
-  const around = { ...context, ids: new Set<string>(), counted: { steps: 0 } };
+  const around = { ...context, ids: new Set<string>(), steps: numberSteps(doc, context) };
   let above: 1 | 2 = 1;
   return doc.content
     .map((node) => {
@@ -50,8 +52,9 @@ function block(node: BlockNode, around: Surroundings): string {
     case 'step':
       return step(node, around);
     case 'paragraph': {
-      const text = inlines(node.content, around);
-      return text === '' ? '' : `<p>${text}</p>`;
+      const when = commonWhen(node);
+      const text = inlines(node.content, around, when);
+      return text === '' ? '' : `<p${conditionOf(when, around)}>${text}</p>`;
     }
     case 'heading': {
       const text = inlines(node.content, around);
@@ -61,7 +64,7 @@ function block(node: BlockNode, around: Surroundings): string {
     }
     case 'bulletList':
     case 'orderedList': {
-      const items = node.content.map((item) => `<li>${blocks(item.content, around)}</li>`).join('');
+      const items = node.content.map((item) => listItem(item.content, around)).join('');
       const start = node.attrs && node.attrs.start !== 1 ? ` start="${Math.trunc(node.attrs.start)}"` : '';
       return node.type === 'bulletList' ? `<ul>${items}</ul>` : `<ol${start}>${items}</ol>`;
     }
@@ -82,20 +85,40 @@ function block(node: BlockNode, around: Surroundings): string {
   }
 }
 
-function step({ attrs, content }: StepNode, around: Surroundings): string {
-  const n = (around.counted.steps += 1);
+/** An item that is one phrase under a condition goes with it, bullet and all. */
+function listItem(content: readonly BlockNode[], around: Surroundings): string {
+  const when = content.length === 1 && content[0] ? commonWhen(content[0]) : '';
+  return `<li${conditionOf(when, around)}>${blocks(content, around)}</li>`;
+}
+
+function step(node: StepNode, around: Surroundings): string {
+  const { attrs, content } = node;
+  const { place, number } = around.steps.find((one) => one.step === node) ?? { place: 0, number: null };
   const level = (around.above + 1) as 2 | 3;
-  const id = `step-${n}`;
+  const id = `step-${place}`;
   const title = attrs.title.trim();
-  const mark = attrs.mark.trim() === '' ? '' : ` <span class="step-mark">${esc(attrs.mark.trim())}</span>`;
+  const marks = [...(attrs.optional ? ['optional'] : []), attrs.mark.trim()].filter((words) => words !== '');
+  const marked = marks.map((words) => ` <span class="step-mark">${esc(words)}</span>`).join('');
+  const counted = `Step <span data-number>${number ?? ''}</span>`;
   const heading =
-    title === '' && mark === ''
-      ? `<h${level} class="step-title visually-hidden" id="${id}-title">Step ${n}</h${level}>`
-      : `<h${level} class="step-title" id="${id}-title"><span class="visually-hidden">Step ${n}${title === '' ? '' : ': '}</span>${esc(title)}${mark}</h${level}>`;
+    title === '' && marked === ''
+      ? `<h${level} class="step-title visually-hidden" id="${id}-title">${counted}</h${level}>`
+      : `<h${level} class="step-title" id="${id}-title"><span class="visually-hidden">${counted}${title === '' ? '' : ': '}</span>${esc(title)}${marked}</h${level}>`;
   return (
-    `<section class="step" id="${id}" aria-labelledby="${id}-title"><div class="step-number" aria-hidden="true">${n}</div>` +
+    `<section class="step" id="${id}" aria-labelledby="${id}-title"${conditionOf(attrs.when, around)}><div class="step-number" data-number aria-hidden="true">${number ?? ''}</div>` +
     `<div class="step-body">${heading}${momentLine(attrs.moment)}${blocks(content, { ...around, above: level })}</div></section>`
   );
+}
+
+/** What hides an element while its condition does not hold: the page takes it from there. */
+const conditionOf = (when: string | undefined, around: Surroundings): string =>
+  when ? ` data-when="${esc(when)}"${holds(around, when) ? '' : ' hidden'}` : '';
+
+/** The condition that all of a paragraph stands under, so that nothing of it is left when it does not hold. */
+function commonWhen(node: BlockNode): string {
+  const [first, ...rest] = node.type === 'paragraph' ? (node.content ?? []) : [];
+  const when = first ? whenOf(first) : '';
+  return rest.every((other) => whenOf(other) === when) ? when : '';
 }
 
 /** A link out, and never a player: nothing is asked of another site before the reader follows it. */
@@ -118,15 +141,34 @@ function photo({ attrs, content }: PhotoNode, around: Surroundings): string {
   );
 }
 
-const inlines = (content: readonly InlineNode[] | undefined, around: Surroundings): string =>
-  (content ?? []).map((node) => inline(node, around)).join('');
+/** Phrases under one condition are one element; what stands under the condition `given` has it said already. */
+function inlines(content: readonly InlineNode[] | undefined, around: Surroundings, given = ''): string {
+  let html = '';
+  let phrase = { when: given, inside: '' };
+  const close = () => {
+    const { when, inside } = phrase;
+    html += when === given || inside === '' ? inside : `<span${conditionOf(when, around)}>${inside}</span>`;
+  };
+  content?.forEach((node, index) => {
+    const when = whenOf(node) || given;
+    if (when !== phrase.when) {
+      close();
+      phrase = { when, inside: '' };
+    }
+    phrase.inside += inline(node, around, content[index - 1]);
+  });
+  close();
+  return html;
+}
 
-function inline(node: InlineNode, around: Surroundings): string {
+function inline(node: InlineNode, around: Surroundings, before: InlineNode | undefined): string {
   switch (node.type) {
     case 'text':
       return marked(esc(node.text), node.marks);
     case 'measure':
       return marked(renderMeasure(around, node.attrs), node.marks);
+    case 'stepRef':
+      return marked(stepRef(node.attrs.key, around, beginsSentence(before)), node.marks);
     case 'hardBreak':
       return '<br>';
     default:
@@ -134,8 +176,18 @@ function inline(node: InlineNode, around: Surroundings): string {
   }
 }
 
-/** Italic inside bold inside a link, whatever order they are stored in. */
-const OUTSIDE_IN: readonly MarkNode['type'][] = ['italic', 'bold', 'link'];
+const beginsSentence = (before: InlineNode | undefined): boolean =>
+  before === undefined || before.type === 'hardBreak' || (before.type === 'text' && /[.!?:]\s+$/u.test(before.text));
+
+function stepRef(key: string, { steps }: Surroundings, capital: boolean): string {
+  const found = steps.find(({ step: { attrs } }) => key !== '' && attrs.key === key);
+  if (!found) return '<span class="unknown">a step that is gone</span>';
+  const word = capital ? 'Step' : 'step';
+  return `<a class="step-ref" href="#step-${found.place}" data-step-ref="${word}">${stepRefInside(word, found.number)}</a>`;
+}
+
+/** Italic inside bold inside a link, whatever order they are stored in; conditions are whole phrases round them. */
+const OUTSIDE_IN: readonly MarkNode['type'][] = ['italic', 'bold', 'link', 'onlyWhen'];
 
 const marked = (html: string, marks: readonly MarkNode[] = []): string =>
   [...marks]
@@ -152,6 +204,8 @@ function wrap(html: string, mark: MarkNode): string {
       const href = safeHref(mark.attrs.href);
       return href === null ? html : `<a href="${esc(href)}" rel="noopener">${html}</a>`;
     }
+    case 'onlyWhen':
+      return html;
     default:
       return mark satisfies never;
   }

@@ -2,12 +2,14 @@ import { getSchema, Node, type Extensions } from '@tiptap/core';
 import type { Schema } from '@tiptap/pm/model';
 import { StarterKit } from '@tiptap/starter-kit';
 import { Link } from './marks/link/schema';
+import { OnlyWhen } from './marks/only-when/schema';
 import { Caution } from './nodes/caution/schema';
 import { CutList } from './nodes/cut-list/schema';
 import { Materials } from './nodes/materials/schema';
 import { Measure } from './nodes/measure/schema';
 import { Photo } from './nodes/photo/schema';
 import { PieceCard } from './nodes/piece-card/schema';
+import { StepRef } from './nodes/step-ref/schema';
 import { Step } from './nodes/step/schema';
 import { Tip } from './nodes/tip/schema';
 
@@ -34,6 +36,7 @@ export const ownNodes: Extensions = [
   WholeWriteUp,
   Step,
   Measure,
+  StepRef,
   PieceCard,
   CutList,
   Photo,
@@ -41,6 +44,7 @@ export const ownNodes: Extensions = [
   Caution,
   Materials,
   Link,
+  OnlyWhen,
 ];
 
 let schema: Schema | undefined;

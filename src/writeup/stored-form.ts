@@ -8,7 +8,7 @@ interface AnyNode {
 
 /** Attributes that are left away while they hold their usual value: those that a part did not have from the first day. */
 const USUAL: Readonly<Record<string, Readonly<Record<string, unknown>>>> = {
-  step: { moment: null },
+  step: { moment: null, when: '', optional: false, key: '' },
   // The text editor's own; `type` is the kind of numbering, of which there is one.
   orderedList: { start: 1, type: null },
 };

@@ -1,3 +1,4 @@
+import { whenOf } from './condition';
 import type { BlockNode, DocNode, InlineNode } from './document';
 
 /** Where something stands: the step (from 1) it is in, or null before, between and after the steps. */
@@ -8,6 +9,10 @@ export interface Place {
 export interface Uses {
   /** Live measures, as written. */
   readonly formulas: readonly (Place & { readonly formula: string })[];
+  /** What steps and phrases depend on, as written; a phrase that is marked up inside counts once. */
+  readonly conditions: readonly (Place & { readonly when: string })[];
+  /** Steps that the text speaks of by number; `found` when there is one of that key. */
+  readonly references: readonly (Place & { readonly key: string; readonly found: boolean })[];
   readonly pieces: readonly (Place & { readonly piece: string })[];
   readonly photos: readonly (Place & { readonly upload: string; readonly alt: string })[];
   readonly cutLists: readonly Place[];
@@ -19,6 +24,9 @@ export interface Uses {
 /** Everything in the write-up that points outside it: for the proof list, for publishing, for lighting up what belongs together. */
 export function collectUses(doc: DocNode): Uses {
   const formulas: (Place & { formula: string })[] = [];
+  const conditions: (Place & { when: string })[] = [];
+  const references: (Place & { key: string; found: boolean })[] = [];
+  const keys = new Set(doc.content.flatMap((node) => (node.type === 'step' && node.attrs.key ? [node.attrs.key] : [])));
   const pieces: (Place & { piece: string })[] = [];
   const photos: (Place & { upload: string; alt: string })[] = [];
   const cutLists: Place[] = [];
@@ -26,7 +34,14 @@ export function collectUses(doc: DocNode): Uses {
   let steps = 0;
 
   const inline = (content: readonly InlineNode[] | undefined, step: number | null) => {
-    for (const node of content ?? []) if (node.type === 'measure') formulas.push({ step, formula: node.attrs.formula });
+    let before = '';
+    for (const node of content ?? []) {
+      const when = whenOf(node);
+      if (when !== '' && when !== before) conditions.push({ step, when });
+      before = when;
+      if (node.type === 'measure') formulas.push({ step, formula: node.attrs.formula });
+      if (node.type === 'stepRef') references.push({ step, key: node.attrs.key, found: keys.has(node.attrs.key) });
+    }
   };
   const blocks = (content: readonly BlockNode[], step: number | null) => {
     for (const node of content) block(node, step);
@@ -35,6 +50,7 @@ export function collectUses(doc: DocNode): Uses {
     switch (node.type) {
       case 'step':
         steps += 1;
+        if (node.attrs.when) conditions.push({ step: steps, when: node.attrs.when });
         return blocks(node.content, steps);
       case 'paragraph':
       case 'heading':
@@ -60,5 +76,11 @@ export function collectUses(doc: DocNode): Uses {
     }
   };
   blocks(doc.content, null);
-  return { formulas, pieces, photos, cutLists, materials, steps };
+  return { formulas, conditions, references, pieces, photos, cutLists, materials, steps };
+}
+
+/** Every formula that a page of the write-up works out, conditions among them, for a model that is sealed for it. */
+export function formulasToSeal(doc: DocNode): readonly string[] {
+  const { formulas, conditions } = collectUses(doc);
+  return [...new Set([...formulas.map(({ formula }) => formula), ...conditions.map(({ when }) => when)])];
 }

@@ -16,7 +16,7 @@ const measure = (formula: string) => ({ type: 'measure', attrs: { formula, bare:
 const line = (...formulas: string[]): BlockNode => ({ type: 'paragraph', content: formulas.map(measure) });
 
 describe('renaming in a write-up', () => {
-  it('changes live measures in the text and under photos, and nothing else', () => {
+  it('changes live measures in the text and under photos and conditions, and nothing else', () => {
     const after = renamed(sampleDoc, tab);
     expect(collectUses(after).formulas.map(({ formula }) => formula)).toEqual([
       'inside width + 2 * glue flap',
@@ -24,8 +24,35 @@ describe('renaming in a write-up', () => {
       'glue flap',
     ]);
     expect(after.content.slice(0, 3)).toEqual(sampleDoc.content.slice(0, 3));
+    expect(collectUses(after).conditions.map(({ when }) => when)).toEqual(['glue flap > 1/4 in', 'glue flap > 1/2 in']);
     expect(JSON.stringify(after).replaceAll('glue flap', 'tab')).toBe(JSON.stringify(sampleDoc));
     expect(readWriteUp({ version: 1, doc: after })).toEqual({ ok: true, value: { version: 1, doc: after } });
+  });
+  it('changes conditions of steps and phrases, a choice and its options among them', () => {
+    const phrase = (when: string) =>
+      ({ type: 'text', text: 'x', marks: [{ type: 'onlyWhen', attrs: { when } }] }) as const;
+    const conditional: DocNode = {
+      type: 'doc',
+      content: [
+        {
+          type: 'step',
+          attrs: { title: '', mark: '', when: 'lid is flip' },
+          content: [{ type: 'paragraph', content: [phrase('tab > 1 in'), phrase('lid is flip and tab < 1 in')] }],
+        },
+      ],
+    };
+    const whens = (rename: Rename) => collectUses(renamed(conditional, rename)).conditions.map(({ when }) => when);
+    expect(whens(tab)).toEqual(['lid is flip', 'glue flap > 1 in', 'lid is flip and glue flap < 1 in']);
+    expect(whens({ what: 'choice', from: 'lid', to: 'top' })).toEqual([
+      'top is flip',
+      'tab > 1 in',
+      'top is flip and tab < 1 in',
+    ]);
+    expect(whens({ what: 'option', choice: 'lid', from: 'flip', to: 'hinged' })).toEqual([
+      'lid is hinged',
+      'tab > 1 in',
+      'lid is hinged and tab < 1 in',
+    ]);
   });
   it('reaches every block that holds text', () => {
     const item = (block: BlockNode) => ({ type: 'listItem', content: [block] }) as const;

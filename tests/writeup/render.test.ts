@@ -107,13 +107,15 @@ describe('a step', () => {
       step('', '', paragraph(text('Fold.'))),
     );
     expect(html).toContain(
-      '<section class="step" id="step-1" aria-labelledby="step-1-title"><div class="step-number" aria-hidden="true">1</div>',
+      '<section class="step" id="step-1" aria-labelledby="step-1-title"><div class="step-number" data-number aria-hidden="true">1</div>',
     );
     expect(html).toContain(
-      '<h2 class="step-title" id="step-1-title"><span class="visually-hidden">Step 1: </span>The strip <span class="step-mark">optional</span></h2><p>Cut.</p>',
+      '<h2 class="step-title" id="step-1-title"><span class="visually-hidden">Step <span data-number>1</span>: </span>The strip <span class="step-mark">optional</span></h2><p>Cut.</p>',
     );
     expect(html).toContain('<section class="step" id="step-2"');
-    expect(html).toContain('<h2 class="step-title visually-hidden" id="step-2-title">Step 2</h2><p>Fold.</p>');
+    expect(html).toContain(
+      '<h2 class="step-title visually-hidden" id="step-2-title">Step <span data-number>2</span></h2><p>Fold.</p>',
+    );
   });
 
   it('stands one level below the heading over it, and headings in it one below that', () => {
@@ -233,6 +235,7 @@ describe('parity with the schema', () => {
       text: 'Burnish.',
       step: 'id="step-1"',
       measure: 'data-live=',
+      stepRef: '<a class="step-ref" href="#step-2"',
       pieceCard: 'data-piece=',
       cutList: 'data-cut-list',
       photo: '<figure class="photo">',
@@ -241,6 +244,7 @@ describe('parity with the schema', () => {
       materials: 'class="materials"',
       bold: '<strong>',
       italic: '<em>',
+      onlyWhen: '<span data-when="tab &gt; 1/2 in" hidden> twice</span>',
       link: '<a href="https://quilletlane.example/card" rel="noopener"><em>which card</em></a>',
     };
     const { nodes, marks } = writeUpSchema();

@@ -54,6 +54,28 @@ export const sampleDoc: DocNode = {
         { type: 'caution', content: [{ type: 'paragraph', content: [{ type: 'text', text: 'Mind the blade.' }] }] },
       ],
     },
+    {
+      type: 'step',
+      attrs: {
+        title: 'The ends',
+        mark: '',
+        moment: { seconds: 252, address: 'https://video.example/1' },
+        when: 'tab > 1/4 in',
+        optional: true,
+        key: 'ends',
+      },
+      content: [
+        {
+          type: 'paragraph',
+          content: [
+            { type: 'text', text: 'Fold them' },
+            { type: 'text', marks: [{ type: 'onlyWhen', attrs: { when: 'tab > 1/2 in' } }], text: ' twice' },
+            { type: 'text', text: ', as in ' },
+            { type: 'stepRef', attrs: { key: 'ends' } },
+          ],
+        },
+      ],
+    },
   ],
 };
 export const sample: WriteUp = { version: 1, doc: sampleDoc };

@@ -23,10 +23,11 @@ describe('the schema', () => {
       'photo',
       'pieceCard',
       'step',
+      'stepRef',
       'text',
       'tip',
     ]);
-    expect(Object.keys(marks).sort()).toEqual(['bold', 'italic', 'link']);
+    expect(Object.keys(marks).sort()).toEqual(['bold', 'italic', 'link', 'onlyWhen']);
   });
 
   it('gives back what it was given', () => {
@@ -51,11 +52,16 @@ describe('what a write-up uses', () => {
         { step: 1, formula: 'tab' },
         { step: 1, formula: 'tab' },
       ],
+      conditions: [
+        { step: 2, when: 'tab > 1/4 in' },
+        { step: 2, when: 'tab > 1/2 in' },
+      ],
+      references: [{ step: 2, key: 'ends', found: true }],
       pieces: [{ step: 1, piece: 'Strip' }],
       photos: [{ step: 1, upload: 'a1b2c3', alt: 'A strip' }],
       cutLists: [{ step: null }],
       materials: [{ step: null }],
-      steps: 1,
+      steps: 2,
     });
   });
 });

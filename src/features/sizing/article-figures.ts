@@ -1,5 +1,6 @@
 import type { Figures, Model } from '@/engine';
-import { cutListInside, measureInside, pieceCardInside } from '@/writeup/render-figures';
+import { holds } from '@/writeup/condition';
+import { cutListInside, measureInside, pieceCardInside, stepRefInside } from '@/writeup/render-figures';
 import { morphInto } from './morph';
 
 /** Keeps an article's live measures, piece cards and cut lists at a sizing. */
@@ -27,9 +28,11 @@ export function articleFigures(root: ParentNode, model: Model): ArticleFigures {
     html: '',
   }));
   const lists = [...root.querySelectorAll<HTMLElement>('[data-cut-list]')];
+  const apply = conditions(root, model);
 
   return {
     show(figures) {
+      apply(figures);
       const inside = new Map<string, string>();
       for (const span of spans) {
         const key = `${span.text.bare ? 'bare ' : ''}${span.text.formula}`;
@@ -54,9 +57,41 @@ export function articleFigures(root: ParentNode, model: Model): ArticleFigures {
   };
 }
 
+/** Shows and hides steps and phrases by their conditions, and counts the steps anew where that changes anything. */
+function conditions(root: ParentNode, model: Model): (figures: Figures) => void {
+  const parts = [...root.querySelectorAll<HTMLElement>('[data-when]')];
+  const steps = [...root.querySelectorAll<HTMLElement>('.step')];
+  const references = [...root.querySelectorAll<HTMLAnchorElement>('[data-step-ref]')];
+  return (figures) => {
+    let counted = false;
+    for (const part of parts) {
+      const hidden = !holds({ model, figures }, part.dataset.when);
+      if (hidden === part.hidden) continue;
+      part.hidden = hidden;
+      counted ||= part.matches('.step');
+      if (!hidden && part.matches('span')) markChanged(part);
+    }
+    if (!counted) return;
+    let number = 0;
+    for (const step of steps) {
+      if (!step.hidden) number += 1;
+      for (const place of step.querySelectorAll(':scope > [data-number], .step-title [data-number]'))
+        place.textContent = step.hidden ? '' : String(number);
+    }
+    for (const reference of references) {
+      const target = steps.find((step) => `#${step.id}` === reference.hash);
+      const n = Number(target?.querySelector('[data-number]')?.textContent) || null;
+      const html = stepRefInside(reference.dataset.stepRef ?? '', n);
+      if (reference.innerHTML === html) continue;
+      reference.innerHTML = html;
+      markChanged(reference);
+    }
+  };
+}
+
 /** Tints what just changed and lets it fade; a second change begins anew. */
 export function markChanged(element: Element): void {
-  const figure = element.closest('.measure, .dr-figure, td, em, dd') ?? element;
+  const figure = element.closest('.measure, .dr-figure, td, em, dd, span[data-when], [data-step-ref]') ?? element;
   clearTimeout(fading.get(figure));
   figure.classList.add(MARK);
   fading.set(

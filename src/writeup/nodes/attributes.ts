@@ -9,6 +9,15 @@ export const textUpTo = (most: number) => (value: unknown) => {
   if (value.length > most) throw new RangeError(`at most ${most} characters are kept`);
 };
 
+/** The longest condition that is kept. */
+export const CONDITION_LENGTH = 300;
+
+/** What references call a step by, or nothing. */
+export const stepKey = (value: unknown) => {
+  if (typeof value !== 'string' || !/^[a-z\d]{0,12}$/.test(value))
+    throw new RangeError('at most 12 small letters and digits are wanted');
+};
+
 export const yesNo = (value: unknown) => {
   if (typeof value !== 'boolean') throw new RangeError('yes or no is wanted');
 };

@@ -5,6 +5,7 @@ import { dayWords } from '@/features/editions/dates';
 import { cutWords, departureSize, insideWords, sheetsWords, sizesTogether, timeWords } from '@/features/sizing/facts';
 import { panelFor } from '@/features/sizing/panel';
 import type { BlockNode, InlineNode, WriteUp } from '@/writeup/document';
+import { holds, inlinesShown, numberSteps } from '@/writeup/condition';
 import { liveParts, showLive, type LiveFigures } from '@/writeup/live';
 import { CAUTIONS } from '../sheet/cautions';
 
@@ -90,10 +91,11 @@ function factsOf({ model, figures, plan }: SheetSource, minutes: number | null):
 
 /** The write-up's steps by title; one without a title goes by its first words. */
 function stepsOf({ doc }: WriteUp, live: LiveFigures): readonly StepLine[] {
-  return doc.content.flatMap((node): StepLine[] => {
-    if (node.type !== 'step') return [];
-    const title = node.attrs.title.trim() || firstSentence(textOf(node.content, live));
-    return title === '' ? [] : [{ title, mark: node.attrs.mark.trim() }];
+  return numberSteps(doc, live).flatMap(({ step: { attrs, content }, number }): StepLine[] => {
+    if (number === null) return [];
+    const title = attrs.title.trim() || firstSentence(textOf(content, live));
+    const mark = [attrs.optional ? 'optional' : '', attrs.mark.trim()].filter((words) => words !== '').join(', ');
+    return title === '' ? [] : [{ title, mark }];
   });
 }
 
@@ -105,7 +107,7 @@ function cautionsOf({ doc }: WriteUp, live: LiveFigures): readonly string[] {
   const visit = (nodes: readonly BlockNode[]): void =>
     nodes.forEach((node) => {
       if (node.type === 'caution') all.push(textOf(node.content, live));
-      else if (node.type === 'step') visit(node.content);
+      else if (node.type === 'step' && holds(live, node.attrs.when)) visit(node.content);
     });
   visit(doc.content);
   return all.filter((text) => text !== '');
@@ -126,7 +128,7 @@ function textOf(nodes: readonly BlockNode[], live: LiveFigures): string {
 }
 
 function inlineText(nodes: readonly InlineNode[], live: LiveFigures): string {
-  return nodes
+  return inlinesShown(nodes, live)
     .map((node) => {
       if (node.type === 'text') return node.text;
       return node.type === 'measure' ? (showLive(live, node.attrs)?.typeset ?? node.attrs.formula) : ' ';

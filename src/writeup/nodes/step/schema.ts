@@ -1,5 +1,5 @@
 import { Node } from '@tiptap/core';
-import { isMoment, readJson, textUpTo, videoMoment } from '../attributes';
+import { CONDITION_LENGTH, isMoment, readJson, stepKey, textUpTo, videoMoment, yesNo } from '../attributes';
 
 /** A numbered step; the number follows from its place. */
 export const Step = Node.create({
@@ -28,6 +28,24 @@ export const Step = Node.create({
         validate: videoMoment,
         parseHTML: (element) => readJson(element.getAttribute('data-moment'), isMoment),
         renderHTML: ({ moment }) => (moment === null ? {} : { 'data-moment': JSON.stringify(moment) }),
+      },
+      when: {
+        default: '',
+        validate: textUpTo(CONDITION_LENGTH),
+        parseHTML: (element) => element.getAttribute('data-when') ?? '',
+        renderHTML: ({ when }) => (when === '' ? {} : { 'data-when': String(when) }),
+      },
+      optional: {
+        default: false,
+        validate: yesNo,
+        parseHTML: (element) => element.hasAttribute('data-optional'),
+        renderHTML: ({ optional }) => (optional ? { 'data-optional': '' } : {}),
+      },
+      key: {
+        default: '',
+        validate: stepKey,
+        parseHTML: (element) => element.getAttribute('data-key') ?? '',
+        renderHTML: ({ key }) => (key === '' ? {} : { 'data-key': String(key) }),
       },
     };
   },
