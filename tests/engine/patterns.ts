@@ -18,8 +18,14 @@ import { loadPattern } from '@/features/patterns/load-pattern';
 const folder = join(import.meta.dirname, '../../content/patterns');
 export const SLUGS = readdirSync(folder).map((name) => name.replace(/\.json$/, ''));
 
-const loaded = (slug: string) =>
-  loadPattern(`content/patterns/${slug}.json`, readFileSync(join(folder, `${slug}.json`), 'utf8'));
+const known = new Map<string, ReturnType<typeof loadPattern>>();
+/** Read and compiled once: a test may ask at thousands of sizes. */
+function loaded(slug: string): ReturnType<typeof loadPattern> {
+  const pattern =
+    known.get(slug) ?? loadPattern(`content/patterns/${slug}.json`, readFileSync(join(folder, `${slug}.json`), 'utf8'));
+  known.set(slug, pattern);
+  return pattern;
+}
 export const modelOf = (slug: string): Model => loaded(slug).model;
 export const patternOf = (slug: string): Pattern => loaded(slug).pattern;
 export function figuresOf(
