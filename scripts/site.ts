@@ -7,6 +7,7 @@ import { closeDatabase, sqlite } from '@/db/client.server';
 import { migrateDatabase } from '@/db/migrate.server';
 import { DEMO_PEOPLE } from '@/features/demo/people';
 import { seedDemo } from '@/features/demo/seed.server';
+import { startScheduler } from '@/features/editions/schedule.server';
 import { frontDoor } from '@/features/http/front-door.server';
 import { serve } from '@/features/http/serve.server';
 import { startLocalMailServer } from '@/features/mailing/local-mail-server.server';
@@ -17,7 +18,7 @@ interface Stoppable {
   stop(): Promise<void>;
 }
 
-/** The database brought up to date and filled, and the mail going out: all but the pages. */
+/** The database brought up to date and filled, the mail and planned editions going out: all but the pages. */
 export async function startServices(): Promise<Stoppable> {
   const { applied, backup } = migrateDatabase();
   if (backup) console.log(`Brought the data up to date in ${applied} steps; the copy made before: ${backup}`);
@@ -30,9 +31,11 @@ export async function startServices(): Promise<Stoppable> {
     ? { url: config.smtpUrl, stop: async () => {} }
     : await startLocalMailServer({ port: config.localMailPort, dir: join(config.dataDir, 'mail') });
   const worker = startMailWorker({ smtpUrl: mailServer.url });
+  const scheduler = startScheduler();
 
   return {
     async stop() {
+      scheduler.stop();
       await worker.stop();
       await mailServer.stop();
       closeDatabase();

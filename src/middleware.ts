@@ -5,6 +5,7 @@ import { accessTo, includesRole, type Access } from '@/features/accounts/access'
 import { isAtThisMachine, notForThisRole, signInFirst } from '@/features/accounts/guard.server';
 import { returnPath } from '@/features/accounts/return-path';
 import { readSession } from '@/features/accounts/session.server';
+import { insteadOf } from '@/features/editions/withdrawal.server';
 import { isFromHere } from '@/features/http/origin';
 import { problem } from '@/features/http/problem';
 
@@ -27,7 +28,10 @@ export const onRequest: MiddlewareHandler = async (context, next) => {
 
   // The error pages stand at the address that failed.
   if (/^\/(404|500)$/.test(context.routePattern)) return finish(context, await next());
-  return finish(context, (await refusal(context, accessTo(url.pathname))) ?? (await next()));
+  return finish(
+    context,
+    (await refusal(context, accessTo(url.pathname))) ?? (await elsewhere(context)) ?? (await next()),
+  );
 };
 
 const isApi = ({ url }: APIContext): boolean => url.pathname === '/api' || url.pathname.startsWith('/api/');
@@ -42,6 +46,15 @@ async function refusal(context: APIContext, access: Access | null): Promise<Resp
   if (user) return context.rewrite('/sign-in/refused');
   const to = returnPath(context.url.pathname + context.url.search);
   return new Response(null, { status: 303, headers: { location: `/sign-in?${new URLSearchParams({ to })}` } });
+}
+
+/** Projects that moved or were withdrawn, whichever of their addresses is asked for. */
+async function elsewhere({ url, rewrite }: APIContext): Promise<Response | null> {
+  const instead = insteadOf(url);
+  if (instead === null) return null;
+  return 'moved' in instead
+    ? new Response(null, { status: 301, headers: { location: instead.moved, 'cache-control': 'no-cache' } })
+    : rewrite(instead.shown);
 }
 
 /** Without a body Astro shows the site's own page for it. */

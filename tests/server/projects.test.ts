@@ -5,6 +5,7 @@ import { editions, projects } from '@/db/schema';
 import type { OpenProject, ProjectList, ProjectState } from '@/features/projects/project';
 import { setRole } from '@/features/accounts/people.server';
 import type { Person } from '@/features/accounts/people.server';
+import { insteadOf } from '@/features/editions/withdrawal.server';
 import { testDatabase } from '../setup/test-database';
 import { call, cast, type Call, type Cast, type Method } from './harness';
 import { addPerson, addProject, addUpload, FOLDER, writeUpOf } from './published-project';
@@ -38,7 +39,7 @@ describe('saving a project', () => {
   it('raises the revision and names it in ETag', async () => {
     const answer = await save(await change({ title: 'List folder' }), 1);
     expect([answer.status, answer.headers.get('etag')]).toEqual([200, '"2"']);
-    expect(await answer.json()).toMatchObject({ revision: 2, kept: null });
+    expect(await answer.json()).toMatchObject({ revision: 2 });
     expect(stored()).toMatchObject({ title: 'List folder', revision: 2 });
   });
   it('gives back what was saved', async () => {
@@ -73,23 +74,6 @@ describe('saving a project', () => {
   it.each([null, '*', '1', '"one"'])('asks which revision is meant when If-Match is %s', async (header) => {
     const answer = await save(await change({}), null, header === null ? {} : { headers: { 'if-match': header } });
     expect([answer.status, ((await answer.json()) as { code: string }).code]).toEqual([428, 'revision-missing']);
-  });
-  it('puts the other version into a draft of its own when mine is kept', async () => {
-    await save(await change({ title: 'Folder', summary: 'theirs' }), 1);
-    const answer = await save(await change({ title: 'Folder', summary: 'mine' }), 2, { query: '?keep=other' });
-    const { revision, kept } = (await answer.json()) as { revision: number; kept: { id: string; title: string } };
-    expect([revision, kept.title]).toEqual([3, 'Folder (from the other tab)']);
-    expect(stored()).toMatchObject({ summary: 'mine', revision: 3 });
-    expect(stored(kept.id)).toMatchObject({
-      summary: 'theirs',
-      authorId: ines.id,
-      revision: 1,
-      publishedRevision: null,
-    });
-  });
-  it('keeps no second version when the save itself is refused', async () => {
-    expect((await save(await change({}), 9, { query: '?keep=other' })).status).toBe(412);
-    expect(db.select().from(projects).all()).toHaveLength(1);
   });
   it('takes formulas that do not read, as they were typed', async () => {
     const measures = FOLDER.measures.map((measure) =>
@@ -148,6 +132,20 @@ describe('somebody else’s project', () => {
     ['POST', '/duplicate', {}],
     ['POST', '/publish', { revision: 1 }],
     ['PUT', '/address', { slug: 'taken-over' }],
+    ['POST', '/merge', { state: {} }],
+    ['GET', '/revisions', undefined],
+    ['GET', '/revisions/1', undefined],
+    ['POST', '/revisions/1/restore', undefined],
+    ['GET', '/people', undefined],
+    ['POST', '/people', { email: 'odo@quilletlane.example' }],
+    ['DELETE', '/people/anybody', undefined],
+    ['POST', '/links', { label: '' }],
+    ['DELETE', '/links/any', undefined],
+    ['GET', '/schedule', undefined],
+    ['PUT', '/schedule', { revision: 1, publishAt: 1 }],
+    ['DELETE', '/schedule', undefined],
+    ['PUT', '/withdrawal', { reason: 'x' }],
+    ['DELETE', '/withdrawal', undefined],
   ])('is not there for another author: %s %s', async (method, path, body) => {
     setRole(people.reader.id, 'author');
     const answer = await ask(method, path, {
@@ -267,9 +265,32 @@ describe('the address', () => {
   it.each(['No', 'ab', 'two  words', '-edge', 'double--hyphen', 'a/b'])('is not “%s”', async (slug) =>
     expect(await move(slug)).toEqual([422, 'seed-list-folder']),
   );
-  it('of a published project stays', async () => {
-    expect((await ask('POST', '/publish', { body: { revision: 1 } })).status).toBe(201);
-    expect(await move('list-folder')).toEqual([409, 'seed-list-folder']);
+  it('of a published project leads on to the new one, with what follows it and its query', async () => {
+    await ask('POST', '/publish', { body: { revision: 1 } });
+    expect(await move('list-folder')).toEqual([200, 'list-folder']);
+    expect(await move('folder-for-lists')).toEqual([200, 'folder-for-lists']);
+    const at = (address: string) => insteadOf(new URL(address, 'http://localhost'));
+    expect(at('/projects/seed-list-folder')).toEqual({ moved: '/projects/folder-for-lists' });
+    expect(at('/projects/list-folder/sheet.pdf?inside-width=5in&paper=a4')).toEqual({
+      moved: '/projects/folder-for-lists/sheet.pdf?inside-width=5in&paper=a4',
+    });
+    expect(at('/projects/folder-for-lists')).toBeNull();
+  });
+  it('that a published project had stays its own, and it may go back there', async () => {
+    await ask('POST', '/publish', { body: { revision: 1 } });
+    await move('list-folder');
+    const other = addProject(ines.id, { slug: 'other' });
+    const taken = await call('PUT', `/api/projects/${other}/address`, { as: ines, body: { slug: 'seed-list-folder' } });
+    expect(taken.status).toBe(409);
+    expect(await move('seed-list-folder')).toEqual([200, 'seed-list-folder']);
+    expect(insteadOf(new URL('http://localhost/projects/seed-list-folder'))).toBeNull();
+    expect(insteadOf(new URL('http://localhost/projects/list-folder'))).toEqual({
+      moved: '/projects/seed-list-folder',
+    });
+  });
+  it('of a draft is nobody’s any more once it is changed', async () => {
+    await move('list-folder');
+    expect(insteadOf(new URL('http://localhost/projects/seed-list-folder'))).toBeNull();
   });
 });
 

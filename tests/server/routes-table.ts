@@ -47,6 +47,9 @@ function draft({ author }: Cast): { id: string } {
   return { id: 'draft' };
 }
 
+/** The same with further parameters, such as the number of a revision. */
+const inDraft = (more: Record<string, string>) => (people: Cast) => ({ ...draft(people), ...more });
+
 /** A mailing about the author's first edition. Its box has no pattern: what would draw it is tried elsewhere. */
 function mailing(people: Cast): { id: string } {
   const { id: projectId } = draft(people);
@@ -118,7 +121,64 @@ export const ROUTES: readonly RouteRow[] = [
   { path: '/api/projects/[id]', method: 'DELETE', who: 'author', prepare: draft },
   { path: '/api/projects/[id]/address', method: 'PUT', who: 'author', prepare: draft, body: { slug: 'seed-box' } },
   { path: '/api/projects/[id]/duplicate', method: 'POST', who: 'author', prepare: draft, body: {} },
+  {
+    path: '/api/projects/[id]/merge',
+    method: 'POST',
+    who: 'author',
+    prepare: draft,
+    headers: { 'if-match': '"1"' },
+    body: { state: {} },
+  },
+  { path: '/api/projects/[id]/revisions', method: 'GET', who: 'author', prepare: draft },
+  { path: '/api/projects/[id]/revisions/[n]', method: 'GET', who: 'author', prepare: inDraft({ n: '1' }) },
+  {
+    path: '/api/projects/[id]/revisions/[n]/restore',
+    method: 'POST',
+    who: 'author',
+    prepare: inDraft({ n: '1' }),
+    headers: { 'if-match': '"1"' },
+  },
+  { path: '/api/projects/[id]/people', method: 'GET', who: 'author', prepare: draft },
+  {
+    path: '/api/projects/[id]/people',
+    method: 'POST',
+    who: 'author',
+    prepare: draft,
+    body: { email: 'odo@quilletlane.example' },
+  },
+  {
+    path: '/api/projects/[id]/people/[person]',
+    method: 'DELETE',
+    who: 'author',
+    prepare: inDraft({ person: 'nobody' }),
+  },
+  { path: '/api/projects/[id]/links', method: 'POST', who: 'author', prepare: draft, body: { label: 'For Odo' } },
+  { path: '/api/projects/[id]/links/[link]', method: 'DELETE', who: 'author', prepare: inDraft({ link: 'none' }) },
+  {
+    path: '/api/invitations/[id]',
+    method: 'POST',
+    who: 'author',
+    prepare: () => ({ id: 'no-such-invitation' }),
+    body: { accept: true },
+  },
   { path: '/api/projects/[id]/publish', method: 'POST', who: 'author', prepare: draft, body: { revision: 99 } },
+  { path: '/api/projects/[id]/schedule', method: 'GET', who: 'author', prepare: draft },
+  {
+    path: '/api/projects/[id]/schedule',
+    method: 'PUT',
+    who: 'author',
+    prepare: draft,
+    body: { revision: 99, publishAt: 1 },
+  },
+  { path: '/api/projects/[id]/schedule', method: 'DELETE', who: 'author', prepare: draft },
+  {
+    path: '/api/projects/[id]/withdrawal',
+    method: 'PUT',
+    who: 'author',
+    prepare: draft,
+    body: { reason: 'A figure is wrong.' },
+  },
+  { path: '/api/projects/[id]/withdrawal', method: 'DELETE', who: 'author', prepare: draft },
   { path: '/api/projects/[id]/restore', method: 'POST', who: 'author', prepare: draft },
 
   { path: '/api/mailings/[id]', method: 'GET', who: 'author', prepare: noMailing },

@@ -13,8 +13,8 @@ import { servePicture } from '@/features/uploads/serve-picture.server';
 import { storeUpload } from '@/features/uploads/uploads.server';
 import { testDatabase } from '../setup/test-database';
 
-const INES = { id: 'ines', role: 'author' };
-const WENNA = { id: 'wenna', role: 'author' };
+const INES = { id: 'ines', role: 'author' } as const;
+const WENNA = { id: 'wenna', role: 'author' } as const;
 
 beforeEach(() => {
   testDatabase();

@@ -12,6 +12,7 @@ const project: OpenProject = {
   revision: 3,
   updatedAt: 0,
   author: { id: 'ines', name: 'Ines Thornbury' },
+  standing: 'owner',
   stage: { stage: 'draft' },
   state: {
     title: 'Folder',

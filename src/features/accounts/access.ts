@@ -16,6 +16,8 @@ export type Access = 'all' | Role | 'this machine';
 const TABLE: Readonly<Record<string, Access>> = {
   '/': 'all',
   '/projects/*': 'all',
+  '/draft/*': 'all',
+  '/withdrawn/*': 'all',
   '/handbook/*': 'all',
   '/sheets': 'all',
   '/subscribe/*': 'all',
@@ -38,6 +40,7 @@ const TABLE: Readonly<Record<string, Access>> = {
   '/api/account/*': 'reader',
   '/api/sheets/*': 'reader',
   '/api/projects/*': 'author',
+  '/api/invitations/*': 'author',
   '/api/uploads/*': 'author',
   '/api/mailings/*': 'author',
   '/api/admin/*': 'admin',

@@ -76,6 +76,45 @@ export function invitationLetter({
   );
 }
 
+/** To an author whom another asks to work on a project together. */
+export function coAuthorLetter({
+  address,
+  invitedBy,
+  title,
+}: {
+  address: string;
+  invitedBy: string;
+  title: string;
+}): AccountLetter {
+  return letter(
+    'You are invited to work on a project',
+    `${invitedBy} invites you to work on “${title}” at Foldwright. You could change and publish it; deleting it and telling subscribers stay with its owner.`,
+    'The invitation waits in your workroom, where you can accept or decline it:',
+    address,
+    'If you do not want to, do nothing.',
+  );
+}
+
+/** To whoever planned an edition: it is out, or why it is not. */
+export function scheduleLetter({
+  address,
+  title,
+  problem,
+}: {
+  address: string;
+  title: string;
+  problem: string | null;
+}): AccountLetter {
+  return problem === null
+    ? letter(`“${title}” is out`, `The edition of “${title}” that you planned is out. Readers find it here:`, address)
+    : letter(
+        `“${title}” did not come out`,
+        `The time that you planned for “${title}” has come, and it could not be published: ${problem}`,
+        'Nothing was changed. Look at it on the desk and publish it from there:',
+        address,
+      );
+}
+
 export function passwordChangedLetter({ signIn }: { signIn: string }): AccountLetter {
   return letter(
     'Your Foldwright password was changed',

@@ -49,10 +49,20 @@ export interface PublishedPage extends PublishedFilter {
   readonly order?: 'newest' | 'title';
 }
 
-/** The newest edition of a published project, or edition `n`; null when there is none or the project was deleted. */
-export function getEdition(slug: string, n?: number): Edition | null {
+/**
+ * The newest edition of a published project, or edition `n`; null when there is none or the project was deleted or withdrawn.
+ * `withdrawn` also finds what was withdrawn: for its author, who may still look after its mailings.
+ */
+export function getEdition(slug: string, n?: number, { withdrawn = false } = {}): Edition | null {
   const row = select()
-    .where(and(eq(projects.slug, slug), isNull(projects.deletedAt), n === undefined ? isNewest() : eq(editions.n, n)))
+    .where(
+      and(
+        eq(projects.slug, slug),
+        isNull(projects.deletedAt),
+        withdrawn ? undefined : isNull(projects.withdrawnAt),
+        n === undefined ? isNewest() : eq(editions.n, n),
+      ),
+    )
     .get();
   return row ? toEdition(row) : null;
 }
@@ -123,6 +133,7 @@ function matches({ query = '', groups = [], pattern }: PublishedFilter): SQL | u
   const words = query.trim().split(/\s+/u).filter(Boolean).slice(0, 12);
   return and(
     isNull(projects.deletedAt),
+    isNull(projects.withdrawnAt),
     isNewest(),
     groups.length > 0 ? inArray(group, [...groups]) : undefined,
     pattern === undefined ? undefined : eq(sql`json_extract(${editions.pattern}, '$.slug')`, pattern),

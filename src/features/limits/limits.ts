@@ -13,6 +13,10 @@ export const LIMITS = {
   'use-link': { byIp: { tries: 60, seconds: HOUR }, byEmail: { tries: 20, seconds: HOUR } },
   'sign-up': { byIp: { tries: 20, seconds: HOUR }, byEmail: { tries: 4, seconds: HOUR } },
   subscribe: { byIp: { tries: 30, seconds: HOUR }, byEmail: { tries: 4, seconds: HOUR } },
+  /** Invitations to work on a project. */
+  'co-author': { byIp: { tries: 40, seconds: HOUR }, byEmail: { tries: 40, seconds: HOUR } },
+  /** Pages behind links to drafts, whether the link works or not. */
+  draft: { byIp: { tries: 300, seconds: 10 * MINUTE }, byEmail: { tries: 300, seconds: 10 * MINUTE } },
   /** PDFs that have to be made; those made before do not count. */
   paper: { byIp: { tries: 300, seconds: 10 * MINUTE }, byEmail: { tries: 300, seconds: 10 * MINUTE } },
   /** Files for cutting machines; asking again for one that has not changed does not count. */

@@ -35,7 +35,8 @@ export interface OpenMailing {
  */
 export function mailingOfNewest(projectId: string, asker: Asker): OpenMailing | 'unpublished' | null {
   const project = openProject(projectId, asker);
-  if (!project) return null;
+  // A letter goes out in the owner's name and is answered to the owner.
+  if (!project || project.standing === 'co-author') return null;
   const edition = getEdition(project.slug);
   if (!edition) return 'unpublished';
   db.insert(mailings)
@@ -65,8 +66,10 @@ const firstWords = ({ n, title, summary }: Edition) => ({
 /** A mailing that the asker may see and change; null for all others, also when it does not exist. */
 export function openMailing(id: string, asker: Asker): OpenMailing | null {
   const row = db.select().from(mailings).where(eq(mailings.id, id)).get();
-  const project = row && openProject(row.projectId, asker);
-  const edition = project && getEdition(project.slug, row.edition);
+  if (!row) return null;
+  const project = openProject(row.projectId, asker);
+  if (!project || project.standing === 'co-author') return null;
+  const edition = getEdition(project.slug, row.edition, { withdrawn: true });
   return edition ? { row, edition } : null;
 }
 
@@ -202,6 +205,8 @@ export async function beginSending(mailing: OpenMailing, revision: number, now =
       'changed-meanwhile',
       'It was changed from another place meanwhile. Look at it once more, then send.',
     );
+  if (!getEdition(edition.slug))
+    return refuse(409, 'withdrawn', 'The project is withdrawn: put it back before you tell of it.');
   if (edition.n !== edition.newest)
     return refuse(409, 'newer-edition', `Edition ${edition.newest} is out: tell of that one.`);
   const [missing] = missingIn(row);

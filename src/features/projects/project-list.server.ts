@@ -1,4 +1,4 @@
-import { and, desc, eq, isNull, sql } from 'drizzle-orm';
+import { desc, eq, sql } from 'drizzle-orm';
 import { db } from '@/db/client.server';
 import { editions, projects, users } from '@/db/schema';
 import {
@@ -16,7 +16,7 @@ import {
 import { drawingSvg } from '@/exports/svg/drawing';
 import type { ProjectList, ProjectSummary } from './project';
 import { differenceWords, stageOf } from './project-stage';
-import type { Asker } from './projects.server';
+import { workedOnBy, type Asker } from './project-access.server';
 import { blocking, proofList } from './proof';
 
 const MM_AN_INCH = 25.4;
@@ -31,7 +31,7 @@ interface Pictured {
   readonly pieces: readonly PieceFigure[];
 }
 
-/** The asker's projects, last touched first; an admin's list holds everybody's. All flat pictures share one scale. */
+/** The projects that the asker works on, last touched first; an admin's list holds everybody's. All flat pictures share one scale. */
 export function listProjects(asker: Asker): ProjectList {
   const pictured = rowsFor(asker).map(picture);
   const pixelsAnInch = commonScale(pictured.flatMap(({ pieces }) => pieces));
@@ -39,7 +39,6 @@ export function listProjects(asker: Asker): ProjectList {
 }
 
 function rowsFor(asker: Asker) {
-  if (asker.role === 'reader') return [];
   return db
     .select({
       project: projects,
@@ -48,7 +47,7 @@ function rowsFor(asker: Asker) {
     })
     .from(projects)
     .innerJoin(users, eq(projects.authorId, users.id))
-    .where(and(isNull(projects.deletedAt), asker.role === 'admin' ? undefined : eq(projects.authorId, asker.id)))
+    .where(workedOnBy(asker))
     .orderBy(desc(projects.updatedAt), projects.id)
     .all();
 }

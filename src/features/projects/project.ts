@@ -18,6 +18,9 @@ export interface ProjectState {
   readonly writeUp: WriteUp;
 }
 
+/** What somebody is to a project: co-authors may change and publish it, the rest is the owner's. */
+export type Standing = 'owner' | 'co-author' | 'admin';
+
 /** A project as the desk opens it. */
 export interface OpenProject {
   readonly id: string;
@@ -26,6 +29,8 @@ export interface OpenProject {
   /** Milliseconds since 1970, UTC. */
   readonly updatedAt: number;
   readonly author: { readonly id: string; readonly name: string };
+  /** Of whoever opened it. */
+  readonly standing: Standing;
   readonly stage: Stage;
   readonly state: ProjectState;
 }

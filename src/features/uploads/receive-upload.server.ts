@@ -1,7 +1,5 @@
-import { and, eq, isNull } from 'drizzle-orm';
-import { db } from '@/db/client.server';
-import { projects } from '@/db/schema';
 import { json, problem, readBytes } from '@/features/http/problem';
+import { mayWorkOn, type Asker } from '@/features/projects/project-access.server';
 import { PICTURE_LIMITS } from './limits';
 import { explainPictureFault, pictureFaults } from './messages';
 import { storeUpload } from './uploads.server';
@@ -15,7 +13,7 @@ const STATUS: Record<string, number> = { 'too-large': 413, 'wrong-kind': 415, 'p
  * One picture as multipart form data: `project` (its id) and `picture` (the file). Gives 201 with `{ id, width, height }`,
  * or a problem document that says what is wrong with the picture. Bytes are counted as they arrive.
  */
-export async function receiveUpload(request: Request, user: { id: string; role: string }): Promise<Response> {
+export async function receiveUpload(request: Request, user: Asker): Promise<Response> {
   const type = request.headers.get('content-type') ?? '';
   if (!/^multipart\/form-data\s*;/i.test(type)) {
     return problem(415, 'Not a form with a picture', {
@@ -45,7 +43,7 @@ export async function receiveUpload(request: Request, user: { id: string; role: 
       code: 'does-not-fit',
     });
   }
-  if (!mayAddTo(projectId, user)) {
+  if (!mayWorkOn(projectId, user)) {
     return problem(404, 'No such project', { detail: 'There is no such project among yours.', code: 'not-found' });
   }
   const stored = await storeUpload({ ownerId: user.id, projectId, bytes: new Uint8Array(await picture.arrayBuffer()) });
@@ -55,15 +53,4 @@ export async function receiveUpload(request: Request, user: { id: string; role: 
     detail: explainPictureFault(fault),
     code: fault.code,
   });
-}
-
-function mayAddTo(projectId: string, user: { id: string; role: string }): boolean {
-  const mine = user.role === 'admin' ? undefined : eq(projects.authorId, user.id);
-  return (
-    db
-      .select({ id: projects.id })
-      .from(projects)
-      .where(and(eq(projects.id, projectId), isNull(projects.deletedAt), mine))
-      .get() !== undefined
-  );
 }

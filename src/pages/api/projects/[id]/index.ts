@@ -1,7 +1,13 @@
 import type { APIRoute } from 'astro';
 import { requireRole } from '@/features/accounts/guard.server';
-import { json, problem, readJson } from '@/features/http/problem';
-import { changedMeanwhile, noSuchProject, revisionMissing, versionHeaders } from '@/features/projects/answers.server';
+import { json, readJson } from '@/features/http/problem';
+import {
+  noSuchProject,
+  ownersDeed,
+  revisionMissing,
+  savedAnswer,
+  versionHeaders,
+} from '@/features/projects/answers.server';
 import { projectStateSchema, STATE_BYTES } from '@/features/projects/project-input';
 import { deleteProject, openProject, saveProject } from '@/features/projects/projects.server';
 import { revisionIn } from '@/features/projects/revision';
@@ -16,7 +22,7 @@ export const GET: APIRoute = (context) => {
 
 /**
  * Saves the whole state over the revision named in If-Match and answers the new one in ETag. 412 when another save came
- * between, with that version in ETag and Last-Modified. `?keep=other` first puts what stands there into a new draft.
+ * between, with that version in ETag and Last-Modified.
  */
 export const PUT: APIRoute = async (context) => {
   const user = requireRole(context, 'author');
@@ -28,18 +34,7 @@ export const PUT: APIRoute = async (context) => {
   const read = await readJson(context.request, projectStateSchema, { maxBytes: STATE_BYTES });
   if (!read.ok) return read.response;
 
-  const keepOther = context.url.searchParams.get('keep') === 'other';
-  const saved = saveProject(id, user, { state: read.value, revision, keepOther });
-  if (saved.ok) {
-    const { revision: now, updatedAt, kept } = saved;
-    return json({ revision: now, updatedAt, kept }, { headers: versionHeaders(saved) });
-  }
-  if (saved.code === 'changed meanwhile') return changedMeanwhile(saved);
-  if (saved.code === 'not found') return noSuchProject();
-  return problem(422, 'No such picture', {
-    detail: 'The first picture is none of yours. Choose another, or put it in again.',
-    code: 'no-such-picture',
-  });
+  return savedAnswer(saveProject(id, user, { state: read.value, revision }));
 };
 
 /** Takes the project out of the workroom and off the site; `…/restore` brings it back. */
@@ -47,5 +42,6 @@ export const DELETE: APIRoute = (context) => {
   const user = requireRole(context, 'author');
   if (user instanceof Response) return user;
   const id = context.params.id ?? '';
-  return deleteProject(id, user) ? json({ restore: `/api/projects/${id}/restore` }) : noSuchProject();
+  if (!openProject(id, user)) return noSuchProject();
+  return deleteProject(id, user) ? json({ restore: `/api/projects/${id}/restore` }) : ownersDeed();
 };

@@ -2,8 +2,8 @@ import type { APIRoute } from 'astro';
 import { z } from 'zod';
 import { requireRole } from '@/features/accounts/guard.server';
 import { NOTE_LIMIT, publishEdition } from '@/features/editions/publish.server';
-import { json, problem, readJson } from '@/features/http/problem';
-import { changedMeanwhile, noSuchProject } from '@/features/projects/answers.server';
+import { json, readJson } from '@/features/http/problem';
+import { noSuchProject, publishRefused } from '@/features/projects/answers.server';
 import { openProject } from '@/features/projects/projects.server';
 
 const wish = z.object({
@@ -22,17 +22,7 @@ export const POST: APIRoute = async (context) => {
 
   const published = publishEdition(id, { by: user.id, ...read.value });
   if (published.ok) return json({ n: published.edition.n, slug: published.edition.slug }, { status: 201 });
-  const { refusal, sentence } = published;
-  if (refusal.code === 'not found') return noSuchProject();
-  if (refusal.code === 'changed meanwhile') {
-    return changedMeanwhile(openProject(id, user) ?? { revision: refusal.revision, updatedAt: Date.now() });
-  }
-  return problem(422, 'Not published', {
-    detail: sentence,
-    code: refusal.code.replaceAll(' ', '-'),
-    errors:
-      refusal.code === 'proof blocks'
-        ? refusal.items.map((item) => ({ where: item.place.label, sentence: `${item.title}. ${item.detail}` }))
-        : undefined,
-  });
+  const version = openProject(id, user);
+  if (!version) return noSuchProject();
+  return publishRefused(published.refusal, { sentence: published.sentence, version });
 };
