@@ -22,6 +22,14 @@ export function edit<T>(history: History<T>, next: T, field: string | null = nul
 export const settle = <T>(history: History<T>): History<T> =>
   history.field === null ? history : { ...history, field: null };
 
+/** Puts `next` in place of the present, with every state before and after it carried over by `onto`: no step of its own. */
+export const rebase = <T>(history: History<T>, next: T, onto: (state: T) => T): History<T> => ({
+  past: history.past.map(onto),
+  present: next,
+  future: history.future.map(onto),
+  field: null,
+});
+
 export function undo<T>(history: History<T>): History<T> {
   const previous = history.past.at(-1);
   if (previous === undefined) return history;

@@ -29,15 +29,16 @@ export interface Versions {
 export function mergeStates(versions: Versions, choices: Choices = {}): Merged {
   const judge = createJudge(choices);
   const state = mergeWith(versions, judge);
-  const clashes = judge.clashes();
-  const settled = {
-    ...state,
-    ...(reads(state) || !reads(versions.mine) || !reads(versions.other) ? {} : whole(versions, judge)),
-  };
-  return {
-    state: settled,
-    clashes: settled.pattern === state.pattern && settled.writeUp === state.writeUp ? clashes : judge.clashes(),
-  };
+  if (reads(state) || !reads(versions.mine) || !reads(versions.other)) return { state, clashes: judge.clashes() };
+  const together = whole(versions, judge);
+  return { state: { ...state, ...together }, clashes: judge.clashes() };
+}
+
+/** The same part by part, without asking whether what comes out reads. */
+export function mergeParts(versions: Versions, choices: Choices = {}): Merged {
+  const judge = createJudge(choices);
+  const state = mergeWith(versions, judge);
+  return { state, clashes: judge.clashes() };
 }
 
 function mergeWith({ base, mine, other }: Versions, judge: Judge): ProjectState {

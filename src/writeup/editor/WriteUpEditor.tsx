@@ -19,6 +19,7 @@ import { uploadPhotos } from './photo-uploads';
 import { PieceList } from './PieceList';
 import { Popover } from './Popover';
 import { pictureSender } from './send-picture';
+import { takeDocument } from './take-document';
 import { markTools, partTools, toolState } from './tools';
 import { shortcut } from './shortcuts';
 import { Toolbar } from './Toolbar';
@@ -33,6 +34,8 @@ export interface WriteUpEditorProps {
   readonly lit: ReadableAtom<readonly string[]>;
   /** The write-up each time that names in it were changed outside the editor, which takes them over. */
   readonly renamed: ReadableAtom<WriteUp | null>;
+  /** The write-up each time that another's changes came into it, which the editor takes over. */
+  readonly merged: ReadableAtom<WriteUp | null>;
   /** Where photos go. */
   readonly uploads: { readonly projectId: string };
   /** After every change of the document, never for a change of the figures. */
@@ -58,6 +61,7 @@ export function WriteUpEditor({
   figures,
   lit,
   renamed,
+  merged,
   uploads,
   onChange,
   onSelectMeasure,
@@ -139,6 +143,10 @@ export function WriteUpEditor({
   useEffect(
     () => renamed.listen((writeUp) => writeUp && editing.current && takeNames(editing.current, writeUp.doc)),
     [renamed],
+  );
+  useEffect(
+    () => merged.listen((writeUp) => writeUp && editing.current && takeDocument(editing.current, writeUp.doc)),
+    [merged],
   );
 
   const followed = useEditorState({ editor, selector: ({ editor: now }) => (now ? toolState(now) : null) });

@@ -45,7 +45,7 @@ export function SaveWords({ state }: { readonly state: SaveState }) {
       return (
         <span className="save-words bad">
           <Icon name="warning" />
-          <span>Saving has stopped</span>
+          <span>Waiting for a choice</span>
         </span>
       );
   }

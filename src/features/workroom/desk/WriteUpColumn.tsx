@@ -31,6 +31,7 @@ export function WriteUpColumn({ store, projectId }: { readonly store: DeskStore;
         figures={store.$live}
         lit={store.$litNames}
         renamed={store.$renamed}
+        merged={store.$merged}
         uploads={{ projectId }}
         onChange={store.setWriteUp}
         onSelectMeasure={(name) => {

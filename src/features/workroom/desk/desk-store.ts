@@ -12,13 +12,15 @@ import {
   type Sizing,
 } from '@/engine';
 import { litBy, type Lit } from '@/features/projects/followers';
-import { begin, edit, redo, settle, undo, type History } from '@/features/projects/history';
+import { begin, edit, rebase, redo, settle, undo, type History } from '@/features/projects/history';
+import { mergeParts } from '@/features/projects/merge';
 import type { OpenProject, ProjectState } from '@/features/projects/project';
 import { proofList, type ProofItem } from '@/features/projects/proof';
 import { renameInProject, type RenamedPlaces } from '@/features/projects/rename';
 import type { WriteUp } from '@/writeup/document';
 import type { LiveFigures } from '@/writeup/live';
 import { renameInWriteUp } from '@/writeup/rename';
+import { sameState } from '../saving/same-state';
 
 /** Everything but the write-up, which has an undo of its own. */
 export type Draft = Omit<ProjectState, 'writeUp'>;
@@ -48,6 +50,8 @@ export interface DeskStore {
   readonly $generation: ReadableAtom<number>;
   /** The write-up after names in it were last changed from outside the editor, which takes them over. */
   readonly $renamed: ReadableAtom<WriteUp | null>;
+  /** The write-up after another's changes came into it from outside the editor, which takes them over. */
+  readonly $merged: ReadableAtom<WriteUp | null>;
   /** Edits of one `field` in a row are one step back. */
   edit(field: string | null, change: (draft: Draft) => Draft): void;
   editPattern(field: string | null, change: (pattern: Pattern) => Pattern): void;
@@ -59,6 +63,8 @@ export interface DeskStore {
   redo(): void;
   setWriteUp(writeUp: WriteUp): void;
   replace(state: ProjectState): void;
+  /** Takes over a state that holds what is here and another's changes: undo goes on taking back only what was done here. */
+  takeMerged(state: ProjectState): void;
   select(name: string | null): void;
 }
 
@@ -78,6 +84,7 @@ export function createDeskStore(project: OpenProject): DeskStore {
   const $selected = atom<string | null>(null);
   const $generation = atom(0);
   const $renamed = atom<WriteUp | null>(null);
+  const $merged = atom<WriteUp | null>(null);
   /** The drafts that a rename made, each with the one that it was made from. */
   const renames = new WeakMap<Draft, { readonly before: Draft; readonly rename: Rename }>();
   const $draft = computed($history, (history) => history.present);
@@ -130,6 +137,7 @@ export function createDeskStore(project: OpenProject): DeskStore {
     $litNames,
     $generation,
     $renamed,
+    $merged,
     edit: (field, change) => $history.set(edit($history.get(), change($history.get().present), field)),
     editPattern: (field, change) => store.edit(field, (draft) => ({ ...draft, pattern: change(draft.pattern) })),
     editSizing: (field, change) => store.edit(field, (draft) => ({ ...draft, sizing: change(draft.sizing) })),
@@ -152,6 +160,15 @@ export function createDeskStore(project: OpenProject): DeskStore {
       $history.set(edit($history.get(), draftOf(state)));
       $writeUp.set(state.writeUp);
       $generation.set($generation.get() + 1);
+    },
+    takeMerged(state) {
+      const [base, writeUp] = [$history.get().present, state.writeUp];
+      const carry = (draft: Draft) =>
+        draftOf(mergeParts({ base: { ...base, writeUp }, mine: { ...draft, writeUp }, other: state }).state);
+      if (!sameState(base, draftOf(state))) $history.set(rebase($history.get(), draftOf(state), carry));
+      if (sameState($writeUp.get(), writeUp)) return;
+      $writeUp.set(writeUp);
+      $merged.set(writeUp);
     },
     select: (name) => $selected.set(name),
   };

@@ -19,17 +19,33 @@ export async function sendState(
   id: string,
   state: ProjectState,
   revision: number,
-  { leaving, keepOther = false }: { readonly leaving: boolean; readonly keepOther?: boolean },
+  { leaving }: { readonly leaving: boolean },
 ): Promise<SaveAnswer> {
   const body = JSON.stringify(state);
+  return save(`/api/projects/${id}`, {
+    method: 'PUT',
+    headers: { 'content-type': 'application/json', 'if-match': etagOf(revision) },
+    body,
+    keepalive: leaving && body.length < LEAVING_BYTES,
+  });
+}
+
+/** Sends what two versions became together, with the one that gave way in parts, over the other's revision. */
+export const sendMerged = (
+  id: string,
+  revision: number,
+  merged: { readonly state: ProjectState; readonly setAside?: ProjectState },
+): Promise<SaveAnswer> =>
+  save(`/api/projects/${id}/merge`, {
+    method: 'POST',
+    headers: { 'content-type': 'application/json', 'if-match': etagOf(revision) },
+    body: JSON.stringify(merged),
+  });
+
+async function save(path: string, request: RequestInit): Promise<SaveAnswer> {
   let response: Response;
   try {
-    response = await fetch(`/api/projects/${id}${keepOther ? '?keep=other' : ''}`, {
-      method: 'PUT',
-      headers: { 'content-type': 'application/json', 'if-match': etagOf(revision) },
-      body,
-      keepalive: leaving && body.length < LEAVING_BYTES,
-    });
+    response = await fetch(path, request);
   } catch {
     return { kind: 'unreachable', sentence: UNREACHABLE };
   }
@@ -71,6 +87,16 @@ export async function call<T>(
 }
 
 export const fetchProject = (id: string): Promise<Answer<OpenProject>> => call(`/api/projects/${id}`);
+
+/** The project when it has another revision than this; null when it has not, or when the server cannot be asked. */
+export async function fetchIfNewer(id: string, revision: number): Promise<OpenProject | null> {
+  try {
+    const response = await fetch(`/api/projects/${id}`, { headers: { 'if-none-match': etagOf(revision) } });
+    return response.ok ? ((await response.json()) as OpenProject) : null;
+  } catch {
+    return null;
+  }
+}
 
 async function refusalIn(response: Response): Promise<Refusal> {
   const fallback = {

@@ -1,43 +1,120 @@
 import { useEffect, useRef, useState } from 'react';
+import type { Choices } from '@/features/projects/merge';
 import type { OpenProject, ProjectState } from '@/features/projects/project';
+import { differenceWords } from '@/features/projects/project-stage';
 import { createAutosave, type Autosave, type SaveState } from '../saving/autosave';
 import { openCopyKeeper, type CopyKeeper } from '../saving/local-copy';
+import { meet, settled, type Meeting } from '../saving/meeting';
 import { sameState } from '../saving/same-state';
 import type { DeskStore } from './desk-store';
-import { call, fetchProject, sendState } from './project-api';
+import { call, fetchIfNewer, fetchProject, sendMerged, sendState } from './project-api';
 
+export interface Notice {
+  readonly words: string;
+  readonly link?: { readonly href: string; readonly words: string };
+}
 export interface Saving {
   readonly state: SaveState;
-  /** What was brought back from this machine, or what became of a conflict; null when there is nothing to say. */
-  readonly notice: { readonly words: string; readonly link?: { readonly href: string; readonly words: string } } | null;
-  say(notice: NonNullable<Saving['notice']>): void;
+  /** What was brought back from this machine, or what came from elsewhere; null when there is nothing to say. */
+  readonly notice: Notice | null;
+  /** Parts that were changed here and elsewhere, to choose between; null when there are none. */
+  readonly meeting: Meeting | null;
+  say(notice: Notice): void;
   dismiss(): void;
   flush(): Promise<SaveState>;
-  keepMine(): Promise<void>;
-  takeOther(): Promise<void>;
+  /** Goes on with these choices; both versions stay among the revisions. */
+  settle(choices: Choices): Promise<void>;
 }
 
-/** Saves the desk while it is open: after a pause, when a field is left, when the page is hidden or closed. */
+/** How often the desk looks whether somebody else saved, while it is seen. */
+const LOOK_EVERY = 15_000;
+const MEET_AGAIN = 4_000;
+
+/**
+ * Saves the desk while it is open: after a pause, when a field is left, when the page is hidden or closed. What another tab or
+ * person saved is put together with what is here; only where both changed the same part does it ask.
+ */
 export function useSaving(store: DeskStore, project: OpenProject): Saving {
   const start = { revision: project.revision, savedAt: project.updatedAt };
   const [state, setState] = useState<SaveState>({ status: { kind: 'saved' }, ...start });
-  const [notice, setNotice] = useState<Saving['notice']>(null);
+  const [notice, setNotice] = useState<Notice | null>(null);
+  const [meeting, setMeeting] = useState<Meeting | null>(null);
   const autosave = useRef<Autosave<ProjectState> | null>(null);
+  /** What the server has, as far as this tab knows: what changes here are measured against. */
+  const base = useRef<ProjectState | null>(project.state);
   /** While a state is put in place that is stored already, nothing is to be saved. */
   const quiet = useRef(false);
+
+  const takeOver = (merged: ProjectState, other: Meeting['other']) => {
+    quiet.current = true;
+    store.takeMerged(merged);
+    quiet.current = false;
+    base.current = other.state;
+    setMeeting(null);
+    autosave.current?.goOn(other);
+    if (!sameState(merged, other.state)) autosave.current?.changed(merged);
+  };
+
+  /** Puts a newer version together with what is here, or begins to ask. */
+  const receive = ({ state: otherState, revision, updatedAt }: OpenProject) => {
+    const saver = autosave.current;
+    if (saver === null) return;
+    const other = { state: otherState, revision, updatedAt };
+    const met = meet(base.current, store.$state.get(), other);
+    if ('meeting' in met) {
+      setMeeting(met.meeting);
+      return saver.conflict(other);
+    }
+    const words = base.current === null ? '' : differenceWords(base.current, otherState);
+    takeOver(met.merged, other);
+    if (words !== '')
+      setNotice({
+        words: `Changes from another place came in with revision ${revision}: ${words} from before. Yours stay.`,
+        link: { href: `/workroom/${project.id}/revisions`, words: 'See the revisions' },
+      });
+  };
 
   useEffect(() => {
     let keeper: CopyKeeper | null = null;
     let gone = false;
     const saver = createAutosave<ProjectState>({
-      send: (value, revision, options) => sendState(project.id, value, revision, options),
-      keepCopy: (value, revision) => keeper?.keep(value, revision),
+      send: async (value, revision, options) => {
+        const answer = await sendState(project.id, value, revision, options);
+        if (answer.kind === 'saved') {
+          base.current = value;
+          channel?.postMessage(answer.revision);
+        }
+        return answer;
+      },
+      keepCopy: (value, revision) => keeper?.keep({ state: value, revision, base: base.current }),
       dropCopy: () => keeper?.drop(),
-      onState: setState,
+      onState(now) {
+        setState(now);
+        if (now.status.kind === 'conflict') void meetOther();
+      },
       now: Date.now,
       start,
     });
     autosave.current = saver;
+    const channel = 'BroadcastChannel' in window ? new BroadcastChannel(`foldwright.desk.${project.id}`) : null;
+
+    let meeting = false;
+    /** Asks for the version that came between until it is there. */
+    const meetOther = async () => {
+      if (meeting) return;
+      meeting = true;
+      const other = await fetchProject(project.id);
+      meeting = false;
+      if (gone || saver.state().status.kind !== 'conflict') return;
+      if (other.ok) receive(other.value);
+      else setTimeout(() => void meetOther(), MEET_AGAIN);
+    };
+    const look = async () => {
+      if (document.visibilityState === 'hidden' || saver.state().status.kind !== 'saved') return;
+      const newer = await fetchIfNewer(project.id, saver.state().revision);
+      if (gone || newer === null || saver.state().status.kind === 'conflict') return;
+      if (newer.revision > saver.state().revision && saver.state().status.kind !== 'saving') receive(newer);
+    };
 
     const unlisten = store.$state.listen((value) => {
       if (!quiet.current) saver.changed(value);
@@ -46,26 +123,36 @@ export function useSaving(store: DeskStore, project: OpenProject): Saving {
       if (gone) return opened.close();
       keeper = opened;
       const [copy, ...older] = await opened.orphans();
+      // Typed before there was anything to keep copies in.
+      if (saver.state().status.kind !== 'saved') saver.changed(store.$state.get());
       for (const other of older) if (await keepAsDraft(project.id, other.state, store.$state.get())) other.forget();
       if (copy === undefined || gone) return;
       copy.forget();
       if (sameState(copy.state, store.$state.get())) return;
       if (copy.revision === project.revision) {
         setNotice({ words: 'What was typed here and not yet saved has been brought back.' });
-      } else {
-        // Before the state is put in place: nothing may be sent over a revision that it was not made from.
-        saver.conflict({ revision: project.revision, updatedAt: project.updatedAt }, copy.revision);
+        store.replace(copy.state);
+        return;
       }
+      // Before the state is put in place: nothing may be sent over a revision that it was not made from.
+      base.current = copy.base;
+      quiet.current = true;
       store.replace(copy.state);
+      quiet.current = false;
+      opened.keep(copy);
+      saver.conflict({ revision: project.revision, updatedAt: project.updatedAt }, copy.revision);
     });
 
     const leave = () => void saver.flush({ leaving: true });
-    const hidden = () => {
+    const seen = () => {
       if (document.visibilityState === 'hidden') leave();
+      else void look();
     };
     const blurred = () => void saver.flush();
+    const looking = setInterval(() => void look(), LOOK_EVERY);
+    channel?.addEventListener('message', () => void look());
     window.addEventListener('pagehide', leave);
-    document.addEventListener('visibilitychange', hidden);
+    document.addEventListener('visibilitychange', seen);
     document.addEventListener('focusout', blurred);
     window.addEventListener('online', blurred);
     return () => {
@@ -73,8 +160,10 @@ export function useSaving(store: DeskStore, project: OpenProject): Saving {
       unlisten();
       saver.stop();
       keeper?.close();
+      channel?.close();
+      clearInterval(looking);
       window.removeEventListener('pagehide', leave);
-      document.removeEventListener('visibilitychange', hidden);
+      document.removeEventListener('visibilitychange', seen);
       document.removeEventListener('focusout', blurred);
       window.removeEventListener('online', blurred);
     };
@@ -85,6 +174,7 @@ export function useSaving(store: DeskStore, project: OpenProject): Saving {
   return {
     state,
     notice,
+    meeting,
     say: setNotice,
     dismiss: () => setNotice(null),
     async flush() {
@@ -93,39 +183,28 @@ export function useSaving(store: DeskStore, project: OpenProject): Saving {
       await saver.flush();
       return saver.state();
     },
-    async keepMine() {
-      const saver = autosave.current;
-      const { status } = saver?.state() ?? state;
-      if (saver === null || status.kind !== 'conflict') return;
+    async settle(choices) {
+      if (meeting === null) return;
       const mine = store.$state.get();
-      const answer = await sendState(project.id, mine, status.other.revision, { leaving: false, keepOther: true });
-      if (answer.kind === 'saved') {
-        saver.goOn(answer);
-        if (store.$state.get() !== mine) saver.changed(store.$state.get());
-        setNotice({
-          words: `Yours is revision ${answer.revision} now. The other is in the workroom as a draft of its own, “(from the other tab)”.`,
-          link: { href: '/workroom', words: 'Open the workroom' },
-        });
-      } else if (answer.kind === 'changed') saver.conflict(answer);
-      else setNotice({ words: answer.sentence });
-    },
-    async takeOther() {
-      const saver = autosave.current;
-      if (saver === null) return;
-      const copy = await call<{ id: string; title: string }>(`/api/projects/${project.id}/duplicate`, {
-        method: 'POST',
-        body: { state: store.$state.get() },
+      const outcome = settled(meeting, mine, choices);
+      if ('clashes' in outcome) return setMeeting({ ...meeting, clashes: outcome.clashes });
+      const { merged, gaveWay } = outcome;
+      const answer = await sendMerged(project.id, meeting.other.revision, {
+        state: merged,
+        ...(gaveWay ? { setAside: mine } : {}),
       });
-      if (!copy.ok) return setNotice({ words: copy.refusal.sentence });
-      const other = await fetchProject(project.id);
-      if (!other.ok) return setNotice({ words: other.refusal.sentence });
-      quiet.current = true;
-      store.replace(other.value.state);
-      quiet.current = false;
-      saver.goOn(other.value);
+      if (answer.kind === 'changed') {
+        const newer = await fetchProject(project.id);
+        return newer.ok ? receive(newer.value) : setNotice({ words: newer.refusal.sentence });
+      }
+      if (answer.kind !== 'saved') return setNotice({ words: answer.sentence });
+      // What was typed while it was sent is a change to what came out.
+      const later = store.$state.get();
+      const now = sameState(later, mine) ? { merged } : meet(mine, later, { ...answer, state: merged });
+      takeOver('merged' in now ? now.merged : later, { ...answer, state: merged });
       setNotice({
-        words: `The other is shown now, revision ${other.value.revision}. Yours is kept as the draft “${copy.value.title}”.`,
-        link: { href: `/workroom/${copy.value.id}`, words: 'Open it' },
+        words: `Put together as revision ${answer.revision}. Both versions are among the revisions as they were.`,
+        link: { href: `/workroom/${project.id}/revisions`, words: 'See the revisions' },
       });
     },
   };

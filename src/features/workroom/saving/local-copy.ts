@@ -1,9 +1,11 @@
 import type { ProjectState } from '@/features/projects/project';
+import { openCopies } from './copies';
 
 /** What was typed and not yet taken by the server, kept on this machine for each tab. */
 export interface LocalCopy {
-  /** The revision that it was made from. */
+  /** The revision that it was made from, and what that held; null when it is not known. */
   readonly revision: number;
+  readonly base: ProjectState | null;
   readonly keptAt: number;
   readonly state: ProjectState;
 }
@@ -11,7 +13,7 @@ const PREFIX = 'foldwright.desk';
 const TAB = `${PREFIX}.tab`;
 
 export interface CopyKeeper {
-  keep(state: ProjectState, revision: number): void;
+  keep(copy: Omit<LocalCopy, 'keptAt'>): void;
   drop(): void;
   /** Copies that no other open tab is busy with, newest first; each stays until it is forgotten. */
   orphans(): Promise<readonly (LocalCopy & { forget(): void })[]>;
@@ -19,28 +21,38 @@ export interface CopyKeeper {
 }
 
 /**
- * Keeps copies in local storage under this tab's own name, so that two tabs never write over each other. A tab holds a lock
- * of that name while it is open: a copy without a lock was left behind by a tab that is gone.
+ * Keeps copies under this tab's own name, so that two tabs never write over each other. A tab holds a lock of that name while
+ * it is open: a copy without a lock was left behind by a tab that is gone.
  */
 export async function openCopyKeeper(projectId: string): Promise<CopyKeeper> {
-  const { tab, release } = await claimTab();
+  const [{ tab, release }, copies] = await Promise.all([claimTab(), openCopies()]);
   const key = `${PREFIX}.${projectId}.${tab}`;
   return {
-    keep: (state, revision) => write(key, JSON.stringify({ state, revision, keptAt: Date.now() } satisfies LocalCopy)),
-    drop: () => localStorage.removeItem(key),
+    keep: (copy) => copies.put(key, { ...copy, keptAt: Date.now() } satisfies LocalCopy),
+    drop: () => copies.remove(key),
     async orphans() {
       const held = await heldTabs();
       const prefix = `${PREFIX}.${projectId}.`;
-      return Object.keys(localStorage)
-        .filter((found) => found.startsWith(prefix) && (found === key || !held.has(found.slice(prefix.length))))
-        .flatMap((found) => {
-          const copy = read(localStorage.getItem(found));
-          return copy === null ? [] : [{ ...copy, forget: () => localStorage.removeItem(found) }];
+      const found = await copies.below(prefix);
+      return found
+        .filter(({ key: of }) => of === key || !held.has(of.slice(prefix.length)))
+        .flatMap(({ key: of, value }) => {
+          const copy = readCopy(value);
+          return copy === null ? [] : [{ ...copy, forget: () => copies.remove(of) }];
         })
         .sort((a, b) => b.keptAt - a.keptAt);
     },
-    close: release,
+    close() {
+      copies.close();
+      release();
+    },
   };
+}
+
+function readCopy(value: unknown): LocalCopy | null {
+  if (typeof value !== 'object' || value === null || !('state' in value) || !('revision' in value)) return null;
+  const copy = value as Omit<LocalCopy, 'base'> & { readonly base?: ProjectState | null };
+  return { ...copy, base: copy.base ?? null };
 }
 
 /**
@@ -78,23 +90,4 @@ async function heldTabs(): Promise<ReadonlySet<string>> {
       .filter((name) => name.startsWith(`${TAB}.`))
       .map((name) => name.slice(TAB.length + 1)),
   );
-}
-
-function write(key: string, text: string): void {
-  try {
-    localStorage.setItem(key, text);
-  } catch {
-    // Storage is full or forbidden: the copy is a second net, the save goes on without it.
-  }
-}
-
-function read(text: string | null): LocalCopy | null {
-  try {
-    const copy: unknown = JSON.parse(text ?? 'null');
-    return typeof copy === 'object' && copy !== null && 'state' in copy && 'revision' in copy
-      ? (copy as LocalCopy)
-      : null;
-  } catch {
-    return null;
-  }
 }

@@ -12,12 +12,16 @@ import { projectStateSchema, STATE_BYTES } from '@/features/projects/project-inp
 import { deleteProject, openProject, saveProject } from '@/features/projects/projects.server';
 import { revisionIn } from '@/features/projects/revision';
 
-/** The whole project; its revision also stands in ETag. */
+/** The whole project; its revision also stands in ETag. 304 while If-None-Match names that revision. */
 export const GET: APIRoute = (context) => {
   const user = requireRole(context, 'author');
   if (user instanceof Response) return user;
   const project = openProject(context.params.id ?? '', user);
-  return project ? json(project, { headers: versionHeaders(project) }) : noSuchProject();
+  if (!project) return noSuchProject();
+  const headers = versionHeaders(project);
+  return revisionIn(context.request.headers.get('if-none-match')) === project.revision
+    ? new Response(null, { status: 304, headers })
+    : json(project, { headers });
 };
 
 /**
