@@ -107,6 +107,8 @@ export interface TextNode {
 export type MarkNode =
   | { readonly type: 'bold' }
   | { readonly type: 'italic' }
+  /** A typed number that is meant to stay as it is, at every size. */
+  | { readonly type: 'asTyped' }
   /** A phrase that is said only when a formula, which is yes or no, holds. */
   | { readonly type: 'onlyWhen'; readonly attrs: { readonly when: string } }
   | { readonly type: 'link'; readonly attrs: { readonly href: string } };

@@ -187,7 +187,7 @@ function stepRef(key: string, { steps }: Surroundings, capital: boolean): string
 }
 
 /** Italic inside bold inside a link, whatever order they are stored in; conditions are whole phrases round them. */
-const OUTSIDE_IN: readonly MarkNode['type'][] = ['italic', 'bold', 'link', 'onlyWhen'];
+const OUTSIDE_IN: readonly MarkNode['type'][] = ['asTyped', 'italic', 'bold', 'link', 'onlyWhen'];
 
 const marked = (html: string, marks: readonly MarkNode[] = []): string =>
   [...marks]
@@ -205,6 +205,7 @@ function wrap(html: string, mark: MarkNode): string {
       return href === null ? html : `<a href="${esc(href)}" rel="noopener">${html}</a>`;
     }
     case 'onlyWhen':
+    case 'asTyped':
       return html;
     default:
       return mark satisfies never;

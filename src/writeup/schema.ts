@@ -1,6 +1,7 @@
 import { getSchema, Node, type Extensions } from '@tiptap/core';
 import type { Schema } from '@tiptap/pm/model';
 import { StarterKit } from '@tiptap/starter-kit';
+import { AsTyped } from './marks/as-typed/schema';
 import { Link } from './marks/link/schema';
 import { OnlyWhen } from './marks/only-when/schema';
 import { Caution } from './nodes/caution/schema';
@@ -45,6 +46,7 @@ export const ownNodes: Extensions = [
   Materials,
   Link,
   OnlyWhen,
+  AsTyped,
 ];
 
 let schema: Schema | undefined;

@@ -27,7 +27,7 @@ describe('the schema', () => {
       'text',
       'tip',
     ]);
-    expect(Object.keys(marks).sort()).toEqual(['bold', 'italic', 'link', 'onlyWhen']);
+    expect(Object.keys(marks).sort()).toEqual(['asTyped', 'bold', 'italic', 'link', 'onlyWhen']);
   });
 
   it('gives back what it was given', () => {

@@ -234,5 +234,7 @@ function unitAndPart(tokens: readonly Token[], i: number): Amount | null {
   if (!/^(inch|foot|yard|centimet(er|re)|met(er|re))$/.test(unit)) return null;
   const part = said(tokens, i + article + 1) === 'and' ? partAt(tokens, i + article + 2) : null;
   if (part !== null) return { first: i, last: part.last, value: 1 + part.value, form: 'mixed', decimals: 0, unit };
-  return article === 1 ? { first: i, last: i + 1, value: 1, form: 'whole', decimals: 0, unit } : null;
+  // "a foot that glue can hold" is another foot.
+  const alone = unit === 'inch' || /^(of|long|wide|tall|high|deep|apart)$/.test(said(tokens, i + 2));
+  return article === 1 && alone ? { first: i, last: i + 1, value: 1, form: 'whole', decimals: 0, unit } : null;
 }

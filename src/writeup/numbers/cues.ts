@@ -13,6 +13,7 @@ export function isRefused(tokens: readonly Token[], { first, last, form }: Amoun
   if (next === 'out' && after === 'of') return true;
   if (NUMBERED.has(before) && form === 'whole') return true;
   if (form === 'part' || form === 'fraction') {
+    if (form === 'part' && /^(the|as|that|its|their|my|your|our)$/.test(next)) return true;
     if (next === 'of') return form === 'part' || /^(the|these|those|this|that|them|it|my|your|our|all)$/.test(after);
     return form === 'part' && before === 'in';
   }
@@ -23,7 +24,11 @@ export function isRefused(tokens: readonly Token[], { first, last, form }: Amoun
 export function hasCue(tokens: readonly Token[], amount: Amount): boolean {
   if (amount.form === 'fraction' || amount.form === 'mixed') return true;
   const next = amount.last + 1;
-  if (DIRECTIONS.has(said(tokens, next)) && mayEndHere(tokens, next + 1)) return true;
+  // "that one", "one wide": seldom an inch.
+  if (amount.form === 'whole' && said(tokens, amount.first) === 'one') return false;
+  const direction = said(tokens, next);
+  // "four thick" are four layers.
+  if (DIRECTIONS.has(direction) && direction !== 'thick' && mayEndHere(tokens, next + 1)) return true;
   return mayEndHere(tokens, next) && isLedTo(tokens, amount);
 }
 
@@ -34,7 +39,7 @@ function isLedTo(tokens: readonly Token[], { first, form }: Amount): boolean {
   const sentence = sentenceBefore(tokens, first - 1 - about);
   const works = sentence.some((word) => BENCH_VERBS.has(word));
   if (lead === 'at' || lead === 'to') return works;
-  if (lead === 'by') return form !== 'whole' || works;
+  if (lead === 'by') return works;
   if (lead === 'measures' || lead === 'measure') return true;
   return (
     /^(is|are|of|:|=|than|a|an)$/.test(lead) &&
