@@ -244,6 +244,7 @@ describe('parity with the schema', () => {
       materials: 'class="materials"',
       bold: '<strong>',
       italic: '<em>',
+      asTyped: ', on a 12 in board</p>',
       onlyWhen: '<span data-when="tab &gt; 1/2 in" hidden> twice</span>',
       link: '<a href="https://quilletlane.example/card" rel="noopener"><em>which card</em></a>',
     };
