@@ -12,9 +12,10 @@ export interface LooseNode {
 const SAID: Readonly<Record<string, string>> = {
   hardBreak: '\n',
   cutList: 'Cut list',
+  stepRef: 'step …',
 };
 /** Attributes that are for the machine. */
-const UNSAID = new Set(['upload', 'width', 'height', 'bare', 'level', 'start', 'version']);
+const UNSAID = new Set(['upload', 'width', 'height', 'bare', 'level', 'start', 'key']);
 
 /** What stands in a part of a write-up as plain text: live measures as `[formula]`, paragraphs on lines of their own. */
 export function blockWords(node: BlockNode | LooseNode): string {
