@@ -45,12 +45,16 @@ export interface NumberedStep {
 
 /** Every step with the number that it has at these figures. */
 export function numberSteps(doc: DocNode, live: LiveFigures): readonly NumberedStep[] {
+  const steps = doc.content.filter((node) => node.type === 'step');
+  const numbers = countSteps(
+    steps.map(({ attrs }) => attrs.when),
+    live,
+  );
+  return steps.map((step, index) => ({ step, place: index + 1, number: numbers[index] ?? null }));
+}
+
+/** The numbers of steps, given their conditions in order. */
+export function countSteps(conditions: readonly (string | undefined)[], live: LiveFigures): readonly (number | null)[] {
   let number = 0;
-  return doc.content
-    .filter((node) => node.type === 'step')
-    .map((step, index) => ({
-      step,
-      place: index + 1,
-      number: holds(live, step.attrs.when) ? (number += 1) : null,
-    }));
+  return conditions.map((when) => (holds(live, when) ? (number += 1) : null));
 }

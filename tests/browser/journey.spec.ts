@@ -66,7 +66,7 @@ test('a box goes from its pattern to the subscribers and to a reader’s own siz
     await page.keyboard.type(' across.');
     await page.keyboard.press('Alt+Shift+p');
     await page
-      .locator('.piece-list')
+      .locator('.pick-list')
       .getByRole('button', { name: /^Cover/ })
       .click();
     await settle(page);

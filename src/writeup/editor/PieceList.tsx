@@ -1,4 +1,5 @@
 import type { Figures } from '@/engine';
+import { PickList } from './PickList';
 
 export interface PieceListProps {
   readonly figures: Figures | null;
@@ -13,27 +14,13 @@ export function PieceList({ figures, shown, onTake }: PieceListProps) {
     return <p className="hint">There are no pieces yet: draw one up first.</p>;
   const pieces = [...figures.pieces].sort((a, b) => Number(shown.has(a.name)) - Number(shown.has(b.name)));
   return (
-    <ul
-      className="piece-list"
-      onKeyDown={(event) => {
-        if (event.key !== 'ArrowDown' && event.key !== 'ArrowUp') return;
-        event.preventDefault();
-        const buttons = [...event.currentTarget.querySelectorAll('button')];
-        const at = buttons.findIndex((button) => button === document.activeElement);
-        buttons[(at + (event.key === 'ArrowDown' ? 1 : -1) + buttons.length) % buttons.length]?.focus();
-      }}
-    >
-      {pieces.map(({ name, count, stock }, n) => (
-        <li key={name}>
-          <button type="button" autoFocus={n === 0} onClick={() => onTake(name)}>
-            <span>{name}</span>
-            <small>
-              cut {count} · {stock}
-              {shown.has(name) ? ' · shown already' : ''}
-            </small>
-          </button>
-        </li>
-      ))}
-    </ul>
+    <PickList
+      items={pieces.map(({ name, count, stock }) => ({
+        key: name,
+        label: name,
+        small: `cut ${count} · ${stock}${shown.has(name) ? ' · shown already' : ''}`,
+        take: () => onTake(name),
+      }))}
+    />
   );
 }

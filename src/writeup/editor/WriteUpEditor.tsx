@@ -6,24 +6,32 @@ import type { ReadableAtom } from 'nanostores';
 import { useEffect, useRef, useState } from 'react';
 import { WRITE_UP_VERSION, type DocNode, type WriteUp } from '../document';
 import type { FiguresStore } from '../figures-store';
-import type { LiveText } from '../live';
 import { usesOf } from '../nodes/measure/view';
 import { storedForm } from '../stored-form';
-import { collectUses } from '../uses';
 import type { EditingDesk } from './editing-desk';
 import { editorExtensions } from './extensions';
-import { LinkField } from './LinkField';
-import { MeasureField } from './MeasureField';
+import {
+  changeMeasure,
+  movedBy,
+  openCondition,
+  openLink,
+  openMeasure,
+  openStep,
+  OPENED_LABELS,
+  type Opened,
+} from './opened';
+import { OpenedField } from './OpenedField';
 import { plainPastedHtml } from './pasted-html';
 import { uploadPhotos } from './photo-uploads';
-import { PieceList } from './PieceList';
 import { Popover } from './Popover';
 import { pictureSender } from './send-picture';
-import { takeDocument } from './take-document';
-import { markTools, partTools, toolState } from './tools';
+import { markTools, partTools, toolState, type Opens } from './tools';
 import { shortcut } from './shortcuts';
 import { Toolbar } from './Toolbar';
-import { insertPart, linkAt, putMeasure, setLink, takeNames } from './writing';
+import { stepAt } from './steps';
+import { stepNumbers } from './step-numbers';
+import { takeDocument } from './take-document';
+import { takeNames } from './writing';
 
 export interface WriteUpEditorProps {
   /** Read once; give the component a new `key` to begin with another. */
@@ -43,17 +51,6 @@ export interface WriteUpEditorProps {
   /** The measure that the selected live measure shows; null when another thing is selected. */
   readonly onSelectMeasure: (name: string | null) => void;
 }
-
-type Opened =
-  | {
-      readonly type: 'measure';
-      readonly from: number;
-      readonly to: number;
-      readonly begin: LiveText;
-      readonly changing: boolean;
-    }
-  | { readonly type: 'piece' }
-  | { readonly type: 'link'; readonly href: string };
 
 /** The write-up's editor: text, steps, live measures, pieces and photos, all by keyboard. */
 export function WriteUpEditor({
@@ -77,25 +74,25 @@ export function WriteUpEditor({
   });
 
   const editing = useRef<Editor | null>(null);
-  const [{ desk, send }] = useState(() => {
-    const ask = (range: { from: number; to: number }) => {
-      const { current: editor } = editing;
-      if (!editor) return;
-      const text = editor.state.doc.textBetween(range.from, range.to, ' ');
-      const formula = /^:*$/.test(text) || text.length > 60 ? '' : text;
-      setOpened({ type: 'measure', ...range, begin: { formula, bare: false }, changing: false });
+  const [{ desk, send, own }] = useState(() => {
+    const open = (find: (editor: Editor) => Opened | null) => {
+      if (editing.current) setOpened(find(editing.current));
     };
-    const change = (pos: number) => {
-      const node = editing.current?.state.doc.nodeAt(pos);
-      if (node?.type.name === 'measure')
-        setOpened({ type: 'measure', from: pos, to: pos + 1, begin: node.attrs as LiveText, changing: true });
+    const { numbers, extension } = stepNumbers(figures);
+    const shared: EditingDesk = {
+      figures,
+      lit,
+      numbers,
+      askMeasure: (range) => open((now) => openMeasure(now, range)),
+      changeMeasure: (pos) => open((now) => changeMeasure(now, pos)),
+      askStep: (pos, what) => open((now) => openStep(now, pos, what)),
+      say: setSaid,
     };
-    const shared: EditingDesk = { figures, lit, askMeasure: ask, changeMeasure: change, say: setSaid };
-    return { desk: shared, send: pictureSender(uploads.projectId) };
+    return { desk: shared, send: pictureSender(uploads.projectId), own: [extension] };
   });
 
   const editor = useEditor({
-    extensions: editorExtensions(desk, send),
+    extensions: editorExtensions(desk, send, own),
     content: initial.doc as unknown as Record<string, unknown>,
     immediatelyRender: false,
     injectCSS: false,
@@ -129,14 +126,8 @@ export function WriteUpEditor({
           : null;
       told.current.onSelectMeasure(formula === null ? null : (usesOf(desk, formula)[0] ?? null));
     },
-    // What is asked for keeps its place while the text round it changes, as when a photo arrives.
     onTransaction: ({ transaction }) => {
-      if (!transaction.docChanged) return;
-      setOpened((now) =>
-        now?.type === 'measure'
-          ? { ...now, from: transaction.mapping.map(now.from, -1), to: transaction.mapping.map(now.to, 1) }
-          : now,
-      );
+      if (transaction.docChanged) setOpened((now) => movedBy(now, transaction.mapping));
     },
   });
 
@@ -153,17 +144,34 @@ export function WriteUpEditor({
   // Nothing has happened in a new editor yet that would have told the hook.
   const state = followed ?? (editor ? toolState(editor) : null);
   const live = useStore(figures);
-  const openLink = () => editor && setOpened({ type: 'link', href: linkAt(editor) });
-  const openPiece = () => setOpened({ type: 'piece' });
-  const choosePhoto = () => chooser.current?.click();
+  const opens: Opens = {
+    link: () => editor && setOpened(openLink(editor)),
+    list: (type) => setOpened({ type }),
+    condition: () => {
+      const found = editor && openCondition(editor);
+      if (found) setOpened(found);
+      else setSaid('Select the words that depend on something, or stand in a step.');
+    },
+    moment: () => {
+      const pos = editor ? stepAt(editor) : null;
+      if (editor && pos !== null) setOpened(openStep(editor, pos, 'moment'));
+      else setSaid('Stand in the step that the video shows.');
+    },
+    photo: () => chooser.current?.click(),
+  };
 
   const close = () => {
     setOpened(null);
     editor?.commands.focus(undefined, { scrollIntoView: false });
   };
   const anchor = () => {
-    const at = opened?.type === 'measure' ? opened.from : (editor?.state.selection.from ?? 0);
-    return editor?.view.coordsAtPos(at) ?? { left: 0, bottom: 0 };
+    if (!editor) return { left: 0, bottom: 0 };
+    if (opened?.type === 'when' || opened?.type === 'moment') {
+      const dom = editor.view.nodeDOM(opened.from);
+      const head = dom instanceof HTMLElement ? dom.querySelector('.step-head') : null;
+      if (head) return head.getBoundingClientRect();
+    }
+    return editor.view.coordsAtPos(opened && 'from' in opened ? opened.from : editor.state.selection.from);
   };
 
   return (
@@ -171,7 +179,7 @@ export function WriteUpEditor({
       ref={frame}
       className="writeup-editor"
       onKeyDown={(event) => {
-        const act = editor && shortcut(event, editor, { openLink, openPiece, choosePhoto });
+        const act = editor && shortcut(event, editor, opens);
         if (!act) return;
         event.preventDefault();
         // The desk has keys of its own, some of them with the same letter.
@@ -181,8 +189,8 @@ export function WriteUpEditor({
     >
       {editor && state ? (
         <div className="writeup-bar">
-          <Toolbar label="Put in" words tools={partTools(editor, { desk, openPiece, choosePhoto })} />
-          <Toolbar label="Text" words={false} tools={markTools(editor, state, { openLink })} />
+          <Toolbar label="Put in" words tools={partTools(editor, desk, opens)} />
+          <Toolbar label="Text" words={false} tools={markTools(editor, state, opens)} />
         </div>
       ) : null}
       {unreadable ? (
@@ -209,45 +217,8 @@ export function WriteUpEditor({
         }}
       />
       {editor && opened ? (
-        <Popover
-          key={opened.type}
-          label={opened.type === 'measure' ? 'Live measure' : opened.type === 'piece' ? 'Pieces' : 'Link'}
-          anchor={anchor}
-          within={frame}
-          onClose={close}
-        >
-          {opened.type === 'measure' ? (
-            <MeasureField
-              live={live}
-              begin={opened.begin}
-              changing={opened.changing}
-              onTake={(text) => {
-                putMeasure(editor, opened, text);
-                close();
-              }}
-            />
-          ) : opened.type === 'piece' ? (
-            <PieceList
-              figures={live?.figures ?? null}
-              shown={new Set(collectUses(editor.getJSON() as unknown as DocNode).pieces.map(({ piece }) => piece))}
-              onTake={(piece) => {
-                setOpened(null);
-                insertPart(editor, 'pieceCard', { piece });
-              }}
-            />
-          ) : (
-            <LinkField
-              href={opened.href}
-              onTake={(href) => {
-                setLink(editor, href);
-                close();
-              }}
-              onRemove={() => {
-                setLink(editor, null);
-                close();
-              }}
-            />
-          )}
+        <Popover key={opened.type} label={OPENED_LABELS[opened.type]} anchor={anchor} within={frame} onClose={close}>
+          <OpenedField editor={editor} opened={opened} live={live} close={close} leave={() => setOpened(null)} />
         </Popover>
       ) : null}
       <p className="visually-hidden" aria-live="polite">

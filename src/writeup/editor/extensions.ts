@@ -12,6 +12,8 @@ import { Photo } from '../nodes/photo/schema';
 import { photoView } from '../nodes/photo/view';
 import { PieceCard } from '../nodes/piece-card/schema';
 import { pieceCardView } from '../nodes/piece-card/view';
+import { StepRef } from '../nodes/step-ref/schema';
+import { stepRefView } from '../nodes/step-ref/view';
 import { Step } from '../nodes/step/schema';
 import { stepView } from '../nodes/step/view';
 import { Tip } from '../nodes/tip/schema';
@@ -24,14 +26,15 @@ import { measureKeys } from './measure-keys';
 import { photoUploads } from './photo-uploads';
 import type { SendPicture } from './send-picture';
 
-/** The schema's nodes with their views in place of those without, and the editor's keys. */
-export function editorExtensions(desk: EditingDesk, send: SendPicture): Extensions {
+/** The schema's nodes with their views in place of those without, and the editor's keys; `own` are those that keep something for the desk. */
+export function editorExtensions(desk: EditingDesk, send: SendPicture, own: Extensions): Extensions {
   const viewed: Extensions = [
     Step.extend({ addNodeView: () => stepView(desk) }),
     Measure.extend({
       addNodeView: () => measureView(desk),
       renderText: ({ node }) => shownText(desk, node.attrs as LiveText),
     }),
+    StepRef.extend({ addNodeView: () => stepRefView(desk) }),
     PieceCard.extend({ addNodeView: () => pieceCardView(desk) }),
     CutList.extend({ addNodeView: () => cutListView(desk) }),
     Photo.extend({ addNodeView: () => photoView() }),
@@ -48,6 +51,7 @@ export function editorExtensions(desk: EditingDesk, send: SendPicture): Extensio
     blockKeys,
     emptyHints,
     photoUploads({ send, say: desk.say }),
+    ...own,
   ];
 }
 

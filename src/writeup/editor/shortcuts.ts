@@ -1,22 +1,27 @@
 import type { Editor } from '@tiptap/core';
 import type { KeyboardEvent } from 'react';
+import { BLOCKS, NOTES } from './blocks';
+import type { Opens } from './tools';
 import { insertPart } from './writing';
 
 /** What a key does that ProseMirror does not know of; also from a step's title or a photo's words. */
 export function shortcut(
   { altKey, shiftKey, ctrlKey, metaKey, code, key }: KeyboardEvent,
   editor: Editor,
-  open: { readonly openLink: () => void; readonly openPiece: () => void; readonly choosePhoto: () => void },
+  opens: Opens,
 ): (() => void) | undefined {
-  if ((ctrlKey || metaKey) && !altKey) return key.toLowerCase() === 'k' ? open.openLink : undefined;
+  if ((ctrlKey || metaKey) && !altKey) return key.toLowerCase() === 'k' ? opens.link : undefined;
   if (!altKey || !shiftKey || ctrlKey || metaKey) return undefined;
   // By place on the keyboard: on some layouts Alt turns letters into other signs.
+  const part = [...NOTES, ...BLOCKS].find((one) => one.key !== undefined && code === `Key${one.key}`);
+  if (part) return () => insertPart(editor, part.name);
   return {
-    KeyP: open.openPiece,
-    KeyO: open.choosePhoto,
-    KeyT: () => insertPart(editor, 'tip'),
-    KeyC: () => insertPart(editor, 'caution'),
-    KeyM: () => insertPart(editor, 'materials'),
-    KeyL: () => insertPart(editor, 'cutList'),
+    KeyP: () => opens.list('piece'),
+    KeyO: opens.photo,
+    KeyV: opens.moment,
+    KeyN: () => opens.list('note'),
+    KeyB: () => opens.list('block'),
+    KeyW: opens.condition,
+    KeyS: () => opens.list('step number'),
   }[code];
 }

@@ -2,6 +2,7 @@ import type { Editor } from '@tiptap/core';
 import { Fragment, type Node as ProseMirrorNode } from '@tiptap/pm/model';
 import { closeHistory } from '@tiptap/pm/history';
 import { TextSelection } from '@tiptap/pm/state';
+import type { VideoMoment } from '../document';
 
 /**
  * Makes a step where the caret is, and puts the caret into its title. Inside a step, what stands behind the caret goes
@@ -89,4 +90,14 @@ export function removeStep(editor: Editor, pos: number): void {
   tr.setSelection(TextSelection.near(tr.doc.resolve(Math.min(pos, tr.doc.content.size)), -1));
   view.dispatch(closeHistory(tr).scrollIntoView());
   view.focus();
+}
+
+/** The video that the steps before `pos` go by, else any that another step goes by; empty when there is none. */
+export function usualAddress({ state }: Editor, pos: number): string {
+  let address = '';
+  state.doc.forEach((node, at) => {
+    const own = (node.attrs.moment as VideoMoment | null | undefined)?.address;
+    if (own && (at < pos || address === '')) address = own;
+  });
+  return address;
 }

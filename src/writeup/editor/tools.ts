@@ -3,70 +3,42 @@ import { NodeSelection } from '@tiptap/pm/state';
 import type { EditingDesk } from './editing-desk';
 import { newStep } from './steps';
 import type { Tool } from './Toolbar';
-import { insertPart } from './writing';
+
+/** What opens a field or a list below the caret. */
+export interface Opens {
+  readonly link: () => void;
+  readonly list: (type: 'piece' | 'step number' | 'note' | 'block') => void;
+  readonly condition: () => void;
+  readonly moment: () => void;
+  readonly photo: () => void;
+}
 
 /** What can be put in, in the order of use. */
-export function partTools(
-  editor: Editor,
-  given: { desk: EditingDesk; openPiece: () => void; choosePhoto: () => void },
-): readonly Tool[] {
+export function partTools(editor: Editor, desk: EditingDesk, opens: Opens): readonly Tool[] {
   const measure = () => {
     const { selection } = editor.state;
     if (selection instanceof NodeSelection && selection.node.type.name === 'measure')
-      given.desk.changeMeasure(selection.from);
-    else given.desk.askMeasure({ from: selection.from, to: selection.to });
+      desk.changeMeasure(selection.from);
+    else desk.askMeasure({ from: selection.from, to: selection.to });
   };
+  const tool = (id: string, icon: Tool['icon'], label: string, keys: string, act: () => void): Tool => ({
+    id,
+    icon,
+    label,
+    keys,
+    ariaKeys: keys.replace(/^Ctrl/, 'Control').replace(/,.*$/, '').replaceAll(' ', '+'),
+    act,
+  });
   return [
-    { id: 'measure', icon: 'measure', label: 'Measure', keys: 'Alt M, or type ::', ariaKeys: 'Alt+M', act: measure },
-    {
-      id: 'step',
-      icon: 'step',
-      label: 'Step',
-      keys: 'Ctrl Enter',
-      ariaKeys: 'Control+Enter',
-      act: () => newStep(editor),
-    },
-    { id: 'piece', icon: 'piece', label: 'Piece', keys: 'Alt Shift P', ariaKeys: 'Alt+Shift+P', act: given.openPiece },
-    {
-      id: 'photo',
-      icon: 'photo',
-      label: 'Photo',
-      keys: 'Alt Shift O',
-      ariaKeys: 'Alt+Shift+O',
-      act: given.choosePhoto,
-    },
-    {
-      id: 'tip',
-      icon: 'info',
-      label: 'Tip',
-      keys: 'Alt Shift T',
-      ariaKeys: 'Alt+Shift+T',
-      act: () => insertPart(editor, 'tip'),
-    },
-    {
-      id: 'caution',
-      icon: 'warning',
-      label: 'Caution',
-      keys: 'Alt Shift C',
-      ariaKeys: 'Alt+Shift+C',
-      act: () => insertPart(editor, 'caution'),
-    },
-    {
-      id: 'materials',
-      icon: 'glue',
-      label: 'Materials',
-      keys: 'Alt Shift M',
-      ariaKeys: 'Alt+Shift+M',
-      act: () => insertPart(editor, 'materials'),
-    },
-    {
-      id: 'cut-list',
-      icon: 'cut',
-      label: 'Cut list',
-      keys: 'Alt Shift L',
-      ariaKeys: 'Alt+Shift+L',
-      act: () => insertPart(editor, 'cutList'),
-    },
+    tool('measure', 'measure', 'Measure', 'Alt M, or type ::', measure),
+    tool('step', 'step', 'Step', 'Ctrl Enter', () => newStep(editor)),
+    tool('piece', 'piece', 'Piece', 'Alt Shift P', () => opens.list('piece')),
+    tool('photo', 'photo', 'Photo', 'Alt Shift O', opens.photo),
+    tool('moment', 'play', 'Moment', 'Alt Shift V', opens.moment),
+    tool('note', 'info', 'Note', 'Alt Shift N', () => opens.list('note')),
+    tool('block', 'sheet', 'Block', 'Alt Shift B', () => opens.list('block')),
+    tool('only-when', 'fork', 'Only when', 'Alt Shift W', opens.condition),
+    tool('step-number', 'list-numbered', 'Step no.', 'Alt Shift S', () => opens.list('step number')),
   ];
 }
 
@@ -85,7 +57,7 @@ export const toolState = (editor: Editor) => ({
 export type ToolState = ReturnType<typeof toolState>;
 
 /** How text looks, and undo. */
-export function markTools(editor: Editor, state: ToolState, given: { openLink: () => void }): readonly Tool[] {
+export function markTools(editor: Editor, state: ToolState, opens: Opens): readonly Tool[] {
   const run = () => editor.chain().focus();
   return [
     {
@@ -149,7 +121,7 @@ export function markTools(editor: Editor, state: ToolState, given: { openLink: (
       keys: 'Ctrl K',
       ariaKeys: 'Control+K',
       on: state.link,
-      act: given.openLink,
+      act: opens.link,
     },
     {
       id: 'undo',

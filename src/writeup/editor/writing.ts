@@ -1,5 +1,6 @@
 import { getMarkRange, type Editor } from '@tiptap/core';
 import { closeHistory } from '@tiptap/pm/history';
+import type { Node as ProseMirrorNode } from '@tiptap/pm/model';
 import { TextSelection } from '@tiptap/pm/state';
 import type { DocNode } from '../document';
 import type { LiveText } from '../live';
@@ -63,17 +64,80 @@ export function setLink(editor: Editor, href: string | null): void {
   view.dispatch(tr.scrollIntoView());
 }
 
+/** The phrase under a condition that the selection covers or the caret stands in; null outside text. */
+export function phraseAt({
+  state,
+}: Editor): { readonly from: number; readonly to: number; readonly when: string } | null {
+  const type = state.schema.marks.onlyWhen;
+  const { selection } = state;
+  if (!type || !(selection instanceof TextSelection)) return null;
+  const { $from, from, to, empty } = selection;
+  const inside = getMarkRange($from, type) ?? (empty ? undefined : getMarkRange(state.doc.resolve(from + 1), type));
+  if (empty && !inside) return null;
+  const range = empty && inside ? inside : { from, to };
+  const mark = state.doc.nodeAt(range.from)?.marks.find((one) => one.type === type);
+  return { ...range, when: String(mark?.attrs.when ?? '') };
+}
+
+/** Puts a phrase under a condition; an empty one makes it plain text again. */
+export function setCondition(
+  { state, view }: Editor,
+  { from, to }: { readonly from: number; readonly to: number },
+  when: string,
+): void {
+  const type = state.schema.marks.onlyWhen;
+  if (!type) return;
+  const tr = state.tr.removeMark(from, to, type);
+  if (when !== '') tr.addMark(from, to, type.create({ when }));
+  view.dispatch(closeHistory(tr).setSelection(TextSelection.create(tr.doc, to)).removeStoredMark(type));
+}
+
+/** Changes attributes of the part at `pos`, as one step of undo. */
+export function setAttributes({ state, view }: Editor, pos: number, attrs: Readonly<Record<string, unknown>>): void {
+  const node = state.doc.nodeAt(pos);
+  if (node) view.dispatch(closeHistory(state.tr.setNodeMarkup(pos, undefined, { ...node.attrs, ...attrs })));
+}
+
+/** Puts the number of the step at `pos` in at the caret; the step gets a key when it has none yet. */
+export function insertStepRef({ state, view }: Editor, pos: number): void {
+  const { stepRef, paragraph } = state.schema.nodes;
+  const step = state.doc.nodeAt(pos);
+  const { $from, from, to } = state.selection;
+  if (!stepRef || !paragraph || step?.type.name !== 'step') return;
+  const key = String(step.attrs.key) || newKey(state.doc);
+  const tr = state.tr.setNodeMarkup(pos, undefined, { ...step.attrs, key });
+  const node = stepRef.create({ key }, null, $from.parent.inlineContent ? $from.marks() : undefined);
+  if ($from.parent.inlineContent) tr.replaceWith(from, to, node);
+  else tr.replaceSelectionWith(paragraph.create(null, node));
+  view.dispatch(closeHistory(tr).scrollIntoView());
+}
+
+/** Six letters and digits that no step of the document has. */
+function newKey(doc: ProseMirrorNode): string {
+  const taken = new Set<unknown>();
+  doc.forEach(({ attrs }) => taken.add(attrs.key));
+  for (;;) {
+    const key = Array.from(crypto.getRandomValues(new Uint8Array(6)), (n) => (n % 36).toString(36)).join('');
+    if (!taken.has(key)) return key;
+  }
+}
+
 /**
- * Takes over the names of a document of the same parts: what live measures and piece cards speak of. No step of undo, since
- * the names are not the editor's to take back.
+ * Takes over the names of a document of the same parts: what live measures, conditions and piece cards speak of. No step of
+ * undo, since the names are not the editor's to take back.
  */
 export function takeNames(editor: Editor, renamed: DocNode): void {
   const { state, view } = editor;
   const { tr } = state;
   state.schema.nodeFromJSON(renamed).descendants((node, pos) => {
-    if (!node.isAtom || node.isText || state.doc.nodeAt(pos)?.type !== node.type) return;
+    const now = state.doc.nodeAt(pos);
+    if (now?.type !== node.type) return;
     for (const [name, value] of Object.entries(node.attrs))
-      if (state.doc.nodeAt(pos)?.attrs[name] !== value) tr.setNodeAttribute(pos, name, value);
+      if (NAMED.includes(name) && now.attrs[name] !== value) tr.setNodeAttribute(pos, name, value);
+    for (const mark of node.marks)
+      if (mark.type.name === 'onlyWhen' && !mark.isInSet(now.marks)) tr.addMark(pos, pos + node.nodeSize, mark);
   });
   if (tr.docChanged) view.dispatch(tr.setMeta('addToHistory', false));
 }
+/** Attributes that hold names of the pattern. */
+const NAMED: readonly string[] = ['formula', 'piece', 'when'];

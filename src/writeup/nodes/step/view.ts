@@ -2,8 +2,12 @@ import type { Editor, NodeViewRenderer } from '@tiptap/core';
 import { TextSelection } from '@tiptap/pm/state';
 import { moveStep, removeStep } from '../../editor/steps';
 import type { EditingDesk } from '../../editor/editing-desk';
-import { iconButton, textField } from '../../editor/dom';
+import type { IconName } from '@/components/icons';
+import { holds } from '../../condition';
+import type { VideoMoment } from '../../document';
+import { iconButton, iconSvg, textField } from '../../editor/dom';
 import { typeAttribute } from '../../editor/type-attribute';
+import { momentText } from '../../video-moment';
 
 /** A step in the editor: its number from the style sheet's counter, fields for title and mark, then its text. */
 export function stepView(desk: EditingDesk): NodeViewRenderer {
@@ -38,6 +42,12 @@ export function stepView(desk: EditingDesk): NodeViewRenderer {
       const pos = getPos();
       if (pos !== undefined) work(pos);
     };
+    const facts = document.createElement('div');
+    facts.className = 'step-facts';
+    const whenChip = chip('fork', () => act((pos) => desk.askStep(pos, 'when'))());
+    const optionalChip = chip('fork', () => act((pos) => desk.askStep(pos, 'when'))());
+    const momentChip = chip('play', () => act((pos) => desk.askStep(pos, 'moment'))());
+    facts.append(whenChip.dom, optionalChip.dom, momentChip.dom);
     const tools = document.createElement('div');
     tools.className = 'step-tools';
     tools.append(
@@ -61,7 +71,8 @@ export function stepView(desk: EditingDesk): NodeViewRenderer {
       ),
     );
     head.append(title, mark, tools);
-    body.append(head, contentDOM);
+    facts.contentEditable = 'false';
+    body.append(facts, head, contentDOM);
     dom.append(number, body);
 
     let current = node;
@@ -74,8 +85,22 @@ export function stepView(desk: EditingDesk): NodeViewRenderer {
       }
       // A field that is as wide as its words, so that the mark stands right behind the title.
       mark.size = Math.max(6, String(current.attrs.mark).length + 1);
+      const { when, optional, moment } = current.attrs as {
+        when: string;
+        optional: boolean;
+        moment: VideoMoment | null;
+      };
+      whenChip.show(when === '' ? '' : `only when ${when}`);
+      optionalChip.show(optional ? 'optional' : '');
+      momentChip.show(moment ? `from ${momentText(moment.seconds)}${hostOf(moment)}` : '');
+      apply();
+    };
+    const apply = () => {
+      const live = desk.figures.get();
+      dom.classList.toggle('step-left-out', live !== null && !holds(live, String(current.attrs.when)));
     };
     show();
+    const stop = desk.figures.listen(apply);
 
     const keep = (name: 'title' | 'mark', value: string) => act((pos) => typeAttribute(editor, pos, name, value))();
     title.addEventListener('input', () => keep('title', title.value));
@@ -104,11 +129,33 @@ export function stepView(desk: EditingDesk): NodeViewRenderer {
       },
       selectNode: () => dom.classList.add('selected'),
       deselectNode: () => dom.classList.remove('selected'),
-      stopEvent: (event) => event.target instanceof Node && head.contains(event.target),
+      stopEvent: (event) =>
+        event.target instanceof Node && (head.contains(event.target) || facts.contains(event.target)),
       ignoreMutation: (mutation) => mutation.type !== 'selection' && !contentDOM.contains(mutation.target),
+      destroy: stop,
     };
   };
 }
+
+/** A fact over the title that opens its field; hidden while there is nothing to say. */
+function chip(icon: IconName, act: () => void): { dom: HTMLButtonElement; show: (words: string) => void } {
+  const dom = document.createElement('button');
+  dom.type = 'button';
+  dom.className = 'step-chip';
+  const text = document.createElement('span');
+  dom.append(iconSvg(icon), text);
+  dom.addEventListener('click', act);
+  return {
+    dom,
+    show(words) {
+      dom.hidden = words === '';
+      text.textContent = words;
+    },
+  };
+}
+
+const hostOf = ({ address }: VideoMoment): string =>
+  address === null ? ', no address yet' : ` at ${new URL(address).hostname.replace(/^www\./, '')}`;
 
 /** Keys that mean the write-up and not the field. True when the key was taken. */
 function fieldKey(event: KeyboardEvent, editor: Editor, leave: () => void): boolean {
