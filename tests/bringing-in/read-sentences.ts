@@ -54,7 +54,7 @@ export function liveAt(slug: string, units: Unit, set: readonly string[] = []): 
   return { model, figures: evaluate(model, sizing) };
 }
 
-function readMarks(line: string): MarkedSentence {
+export function readMarks(line: string): MarkedSentence {
   const marks: Mark[] = [];
   let text = '';
   for (const [, words, formula, plain] of line.matchAll(/\[([^|\]]+)\|([^\]]+)\]|([^[]+)/g)) {

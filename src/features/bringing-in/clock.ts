@@ -6,12 +6,3 @@ export function readClock(text: string): number | null {
   if (seconds > 59 || (match[1] !== undefined && minutes > 59)) return null;
   return hours * 3600 + minutes * 60 + seconds + Number((match[4] ?? '0').padEnd(3, '0')) / 1000;
 }
-
-/** Seconds as people write them: `4:05`, `1:02:03`. */
-export function showClock(seconds: number): string {
-  const whole = Math.floor(seconds);
-  const two = (value: number) => String(value).padStart(2, '0');
-  const hours = Math.floor(whole / 3600);
-  const minutes = Math.floor((whole % 3600) / 60);
-  return hours > 0 ? `${hours}:${two(minutes)}:${two(whole % 60)}` : `${minutes}:${two(whole % 60)}`;
-}

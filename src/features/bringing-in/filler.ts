@@ -7,8 +7,8 @@ export interface Stretch {
 /** Sounds, and words that say nothing where they stand. */
 const FILLER = [
   String.raw`\b(?:u+m+|u+h+|e+r+m*|hm+|mm+-?hmm)\b,?`,
-  String.raw`,\s+(?:you know|i mean|sort of|kind of|like|basically|right)(?=,),?`,
-  String.raw`(?:^|[.!?]\s+)(?:(?:so|okay|ok|alright|all right|right|well|yeah|anyway|basically|you know|i mean)\b,?\s+)+(?=\p{L})`,
+  String.raw`,\s+(?:you know|i mean|sort of|kind of|like|basically|right)(?=,)`,
+  String.raw`(?:^|[.!?]\s+)(?:(?:(?:okay|ok|so(?! (?:that|far|much|many|long)\b))\b,?|(?:alright|all right|right|well|yeah|anyway|basically|you know|i mean),)\s+)(?:(?:so|okay|ok|basically|anyway|well|you know|i mean)\b,?\s+)*(?=\p{L})`,
   String.raw`,\s+(?:right|okay|you know|yeah)(?=\s*[?.!])`,
   String.raw`\b(\p{L}{1,12})(?:\s+\1\b)+`,
 ];

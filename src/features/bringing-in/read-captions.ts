@@ -11,7 +11,12 @@ const TIMING = /^(\S+)\s+-->\s+(\S+)(?:\s+.*)?$/;
 export function readCaptions(text: string, kind: 'webvtt' | 'srt'): Result<readonly Cue[]> {
   const lines = text.replace(/^\ufeff/, '').split(/\r\n|\r|\n/);
   if (kind === 'webvtt' && !/^WEBVTT(?:[ \t]|$)/.test(lines[0] ?? ''))
-    return sourceFault('no header', 1, 'a WebVTT file begins with WEBVTT', 'Put that word on the first line, or save it as SRT.');
+    return sourceFault(
+      'no header',
+      1,
+      'a WebVTT file begins with WEBVTT',
+      'Put that word on the first line, or save it as SRT.',
+    );
   const cues: Cue[] = [];
   let i = kind === 'webvtt' ? afterBlock(lines, 0) : 0;
   while (i < lines.length) {
@@ -50,17 +55,33 @@ function readCue(
   const line = (lines[at] ?? '').trim();
   const match = TIMING.exec(line);
   if (match === null) {
-    const found = line.includes('-->') ? `“${cut(line)}” has no two times` : `no times stand at “${cut(lines[start] ?? '')}”`;
-    return sourceFault('no times', (line.includes('-->') ? at : start) + 1, found, 'Write them as 00:01:05.000 --> 00:01:08.000.');
+    const found = line.includes('-->')
+      ? `“${cut(line)}” has no two times`
+      : `no times stand at “${cut(lines[start] ?? '')}”`;
+    return sourceFault(
+      'no times',
+      (line.includes('-->') ? at : start) + 1,
+      found,
+      'Write them as 00:01:05.000 --> 00:01:08.000.',
+    );
   }
   const [from, to] = [readClock(match[1] ?? ''), readClock(match[2] ?? '')];
   if (from === null || to === null)
-    return sourceFault('time', at + 1, `“${cut((from === null ? match[1] : match[2]) ?? '')}” is no time`, 'Write it as 00:01:05.000.');
+    return sourceFault(
+      'time',
+      at + 1,
+      `“${cut((from === null ? match[1] : match[2]) ?? '')}” is no time`,
+      'Write it as 00:01:05.000.',
+    );
   if (to < from) return sourceFault('backwards', at + 1, 'the caption ends before it begins', 'Swap the two times.');
   if (before?.from != null && from < before.from)
     return sourceFault('order', at + 1, 'this caption begins before the one above it', 'Sort the captions by time.');
   const end = afterBlock(lines, at + 1);
-  const text = lines.slice(at + 1, end).map(plainLine).filter((said) => said !== '').join('\n');
+  const text = lines
+    .slice(at + 1, end)
+    .map(plainLine)
+    .filter((said) => said !== '')
+    .join('\n');
   return { ok: true, value: { cue: { from, to, text }, next: end } };
 }
 

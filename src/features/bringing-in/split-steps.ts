@@ -16,10 +16,13 @@ export interface SplitOptions {
 /** Words that open something new. */
 const OPENERS =
   /^(?:(?:so|and|ok|okay|alright|all right|right|well|um+|uh+)\b,?\s+)*(?:next\b|now\b|now that\b|moving on\b|step (?:\d+|one|two|three|four|five|six|seven|eight|nine|ten)\b|finally\b|last(?:ly)?\b|first(?:ly)?\b|second(?:ly)?\b|to (?:start|begin|finish)\b|let's (?:start|move|go|make|do|cut)\b|once (?:that|those|the|it)\b|when (?:that|the glue)\b|for the (?!most|moment)\w+)/i;
-const WEAK_OPENERS = /^(?:(?:so|and)\b,?\s+)?(?:then\b|after that\b|take\b|grab\b|here\b|I'm going\b|we(?:'re| are) going\b)/i;
+const WEAK_OPENERS =
+  /^(?:(?:so|and)\b,?\s+)?(?:then\b|after that\b|take\b|grab\b|here\b|I'm going\b|we(?:'re| are) going\b)/i;
 
 /** What makes a new step likely, and how much of it is enough. */
 const ENOUGH = 3;
+/** The hands are at work and nobody speaks. */
+const SILENCE = 8;
 const LONG_PAUSE = 2.5;
 const SHORT_PAUSE = 1.2;
 const SHORTEST = 90;
@@ -36,7 +39,9 @@ export function splitIntoSteps(cues: readonly Cue[], { pieces }: SplitOptions): 
   for (const sentence of sentencesOf(cues)) {
     const step = steps.at(-1);
     const named = pieceIn(sentence.text, names);
-    const score = step ? likelihood(sentence, { length: lengthOf(step), turns: named !== null && named !== piece }) : ENOUGH;
+    const score = step
+      ? likelihood(sentence, { length: lengthOf(step), turns: named !== null && named !== piece })
+      : ENOUGH;
     if (step && score < ENOUGH) step.push(sentence);
     else steps.push([sentence]);
     piece = named ?? piece;
@@ -48,9 +53,12 @@ export function splitIntoSteps(cues: readonly Cue[], { pieces }: SplitOptions): 
   }));
 }
 
-function likelihood({ text, pause, opens }: Sentence, step: { readonly length: number; readonly turns: boolean }): number {
+function likelihood(
+  { text, pause, opens }: Sentence,
+  step: { readonly length: number; readonly turns: boolean },
+): number {
   let score = 0;
-  if (pause !== null) score += pause >= LONG_PAUSE ? 2 : pause >= SHORT_PAUSE ? 1 : 0;
+  if (pause !== null) score += pause >= SILENCE ? 3 : pause >= LONG_PAUSE ? 2 : pause >= SHORT_PAUSE ? 1 : 0;
   if (OPENERS.test(text)) score += 2;
   else if (WEAK_OPENERS.test(text)) score += 1;
   if (step.turns) score += 1.5;
@@ -60,7 +68,8 @@ function likelihood({ text, pause, opens }: Sentence, step: { readonly length: n
   return score;
 }
 
-const lengthOf = (sentences: readonly Sentence[]): number => sentences.reduce((sum, { text }) => sum + text.length + 1, 0);
+const lengthOf = (sentences: readonly Sentence[]): number =>
+  sentences.reduce((sum, { text }) => sum + text.length + 1, 0);
 
 interface Named {
   readonly name: string;

@@ -26,7 +26,8 @@ interface Word {
   readonly sentence: number;
 }
 
-const MATERIAL = /^(sheet|sheets|cardstock|paper|twine|cord|string|ribbon|tape|photo|photos|ruler|board)$/;
+const MATERIAL =
+  /^(sheet|sheets|card|cards|cardstock|paper|envelope|envelopes|twine|cord|string|ribbon|tape|photo|photos|ruler|board)$/;
 const ACROSS = /^(wide|width|across)$/;
 const ALONG = /^(tall|high|height|long|length|deep)$/;
 
