@@ -280,6 +280,41 @@ describe('moving a loop in', () => {
     ]);
     expectClose(areaOf(inset(bent, 5) ?? []), 90 ** 2 - 60 ** 2, 1e-6);
   });
+  it('leaves out the crumb beyond a neck that closes', () => {
+    // A square of 100 with a neck 2 wide that opens into one of 8: moved in by 2, the neck is gone, 96 × 96 and 4 × 4 are left.
+    const lollipop = corners([
+      [0, 0],
+      [100, 0],
+      [100, 49],
+      [110, 49],
+      [110, 46],
+      [118, 46],
+      [118, 54],
+      [110, 54],
+      [110, 51],
+      [100, 51],
+      [100, 100],
+      [0, 100],
+    ]);
+    const left = inset(lollipop, 2) ?? [];
+    expectClose(areaOf(left), 96 ** 2, 1e-6);
+    expect(left).toHaveLength(4);
+    // By 1 the neck is a line without width, and the small square 6 × 6.
+    expectClose(areaOf(inset(lollipop, 1) ?? []), 98 ** 2, 1e-6);
+  });
+  it('stays by its distance in a thin wedge, whatever the margin: an isosceles triangle keeps its angles', () => {
+    // The middle of the inscribed circle stays where it is: sides shrink as r − d to r.
+    const thin = corners([
+      [0, 0],
+      [200, -20],
+      [200, 20],
+    ]);
+    const side = Math.hypot(200, 20);
+    const inradius = (40 * 200) / (2 * side + 40);
+    for (const by of [1, 4, 8, 12, inradius - 0.01])
+      expectClose(areaOf(inset(thin, by) ?? []), 4000 * (1 - by / inradius) ** 2, 1e-5);
+    expect(inset(thin, inradius + 0.01)).toBeNull();
+  });
   it('gives nothing where nothing is left, or where it would fall apart', () => {
     const strip = corners([
       [0, 0],

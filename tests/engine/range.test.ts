@@ -18,7 +18,7 @@ import { SLUGS, modelOf, patternOf, sizingsOf } from './patterns';
 /** A nanometre, and half of one more for sums of a dozen columns. */
 const NOTHING = 1.5e-6;
 /** Sizes a pattern, with the finer points at their usual values and with those anywhere too. */
-const [PLAIN, FINER] = [700, 300];
+const [PLAIN, FINER] = [2000, 300];
 
 /**
  * Lengths of card that lie on one another or are one wall's height when the box is glued (derived, from how each box is put

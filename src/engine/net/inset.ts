@@ -1,48 +1,151 @@
-import { COINCIDENT, coincident } from '../measure';
+import { COINCIDENT, coincident, isZero } from '../measure';
 import type { Arc, Curve, Loop, Point } from '../types';
 import { straighten } from './assemble';
 import { encloses } from './crossing';
-import { areaOf, distance, line, pointAt, pointsOf, sweepOf } from './curve';
+import { areaOf, distance, line, partOf, pointAt, pointsOf, sweepOf } from './curve';
 
-/** Halvings of the search for the distance at which a side vanishes: 2⁻⁵⁰ of it is far below a nanometre. */
-const HALVINGS = 50;
-/** Most sides that may go with parts that are pinched off. */
-const PINCHES = 3;
+/** Ends of moved sides that meet are the same to a tenth of a micrometre: each was worked out from another side. */
+const MEET = 1e-4;
+/** A part of this share of the largest, such as what a thin tip leaves beyond its neck, is waste and no second part. */
+const CRUMB = 0.01;
 
 /**
  * A loop with every side moved by `by` millimetres to its right, which is into the card, for outlines and holes alike.
  * Straight sides stay parallel and meet in mitres; arcs keep their centre, and one that shrinks to nothing leaves the sharp
- * corner of its neighbours. Null when nothing is left, or when what is left is nearer to the loop than that somewhere: the
- * face would fall apart.
+ * corner of its neighbours. Null when nothing is left or the face would fall apart; crumbs are left out.
+ *
+ * What lies `by` away from the loop lies on its moved sides: those are cut wherever they meet, what is nearer to the loop than
+ * that is left out, and the rest is one closed loop.
  */
 export function inset(loop: Loop, by: number): Loop | null {
   const ring = roundAbout(loop);
   if (ring) return movedRing(ring, by);
-  return settled(straighten(loop), { loop, by, pinches: PINCHES });
+  const sides = straighten(loop);
+  if (isZero(by)) return sides;
+  const corners = sides.map((side, index) => cornerOf(side, sides[(index + 1) % sides.length] as Curve, by));
+  const moved = sides.map((side, index): Curve | null => {
+    const whole = movedSide(side, by);
+    const before = corners[(index + sides.length - 1) % sides.length];
+    return whole && { ...whole, from: before?.mitre ?? whole.from, to: corners[index]?.mitre ?? whole.to };
+  });
+  const isRight = isRightOf(loop);
+  const kept = splitWhereTheyMeet(moved).filter(({ curve, of }) => {
+    const middle = pointAt(curve, 0.5);
+    const inMitre = corners.some(
+      (corner, index) => corner && of !== index && of !== (index + 1) % sides.length && isWithin(corner.kite, middle),
+    );
+    return !inMitre && isRight(middle) && sides.every((side) => distanceTo(side, middle) > by - COINCIDENT);
+  });
+  const loops = (closed(withoutDoubles(kept)) ?? []).map((left) => ({ left, area: Math.abs(areaOf(left)) }));
+  const [largest, ...others] = loops.sort((a, b) => b.area - a.area);
+  const apart = others.some(({ area }) => area > CRUMB * (largest?.area ?? 0));
+  return largest && !apart && areaOf(largest.left) * areaOf(loop) > 0 ? straighten(largest.left) : null;
 }
 
-/** The sides moved, without those that vanish on the way. */
-function settled(sides: Loop, to: { readonly loop: Loop; readonly by: number; readonly pinches: number }): Loop | null {
-  const { loop, by, pinches } = to;
-  const moved = movedSides(sides, by);
-  const without = (gone: ReadonlySet<number>) => sides.filter((_, index) => !gone.has(index));
-  if (!moved?.every((side): side is Curve => side !== null)) {
-    const gone = firstToVanish(sides, by);
-    return gone.size === 0 || gone.size > sides.length - 2 ? null : settled(without(gone), to);
-  }
-  const near = new Set(moved.flatMap((side, index) => (keepsAway(side, loop, by) ? [] : [index])));
-  if (near.size === 0) return moved;
-  if (pinches === 0 || sides.length < 4) return null;
-  // Sides that come too near bound a part that is pinched off, such as a thin tip. Which of them go with it shows in what is left.
-  const count = sides.length;
-  const beside = [...near].flatMap((index) => [index, (index + 1) % count, (index + count - 1) % count]);
-  const left = [...new Set(beside)].map((index) =>
-    settled(without(new Set([index])), { loop, by, pinches: pinches - 1 }),
-  );
-  return left.reduce(
-    (best, one) => (one && (!best || Math.abs(areaOf(one)) > Math.abs(areaOf(best))) ? one : best),
+/** A corner at which the card turns back: moved sides part there, and are drawn out until they meet. */
+interface MitredCorner {
+  readonly mitre: Point;
+  /** What the mitre takes beyond its sides: nothing else is left there. */
+  readonly kite: readonly Point[];
+}
+/** Inside, and not on an edge. */
+const isWithin = (kite: readonly Point[], point: Point): boolean =>
+  encloses(kite, point) &&
+  kite.every((from, index) => distanceTo(line(from, kite[(index + 1) % kite.length] as Point), point) > COINCIDENT);
+/** Null where moved sides cross, or run into one another. */
+function cornerOf(before: Curve, after: Curve, by: number): MitredCorner | null {
+  const { to: corner } = before;
+  const [u, v] = [normalAt(before, 1), normalAt(after, 0)];
+  if (!(u.x * v.y - u.y * v.x < -COINCIDENT)) return null;
+  const [a, b] = [movedSide(before, by), movedSide(after, by)];
+  const mitre = a && b && nearest(meetings(a, b), corner);
+  return mitre ? { mitre, kite: [corner, a.to, mitre, b.from] } : null;
+}
+const nearest = (points: readonly Point[], to: Point): Point | null =>
+  points.reduce<Point | null>(
+    (best, point) => (best && distance(best, to) <= distance(point, to) ? best : point),
     null,
   );
+
+interface Part {
+  readonly curve: Curve;
+  /** The side that it was moved from. */
+  readonly of: number;
+}
+function splitWhereTheyMeet(moved: readonly (Curve | null)[]): readonly Part[] {
+  return moved.flatMap((curve, of): readonly Part[] => {
+    if (!curve) return [];
+    const whole = wayTo(curve, curve.to);
+    const stops = moved
+      .flatMap((other) =>
+        other && other !== curve
+          ? [
+              ...meetings(curve, other).filter((point) => isOn(other, point)),
+              // Sides on one line meet nowhere, but one may begin or end on the other.
+              ...[other.from, other.to].filter((point) => distanceTo(curve, point) < COINCIDENT),
+            ]
+          : [],
+      )
+      .map((point) => ({ point, way: wayTo(curve, point) }))
+      .filter(({ way }) => way > MEET && way < whole - MEET)
+      .sort((a, b) => a.way - b.way)
+      .filter(({ way }, index, all) => index === 0 || way - (all[index - 1] as { way: number }).way > MEET)
+      .map(({ point }) => point);
+    return [...stops, curve.to].map((stop, index) => ({
+      of,
+      curve: partOf(curve, stops[index - 1] ?? curve.from, stop),
+    }));
+  });
+}
+/** How far along a line, or round a circle, a point of it lies; negative before a line's beginning. */
+function wayTo(curve: Curve, point: Point): number {
+  if (curve.type === 'arc') return sweepOf({ ...curve, to: point }) * curve.radius;
+  const u = directionOf(curve);
+  return (point.x - curve.from.x) * u.x + (point.y - curve.from.y) * u.y;
+}
+function isOn(curve: Curve, point: Point): boolean {
+  if (distance(curve.from, point) < MEET || distance(curve.to, point) < MEET) return true;
+  const way = wayTo(curve, point);
+  return way > 0 && way < wayTo(curve, curve.to);
+}
+
+/** Parts that lie on one another: the same way they are one, opposite ways there is nothing between them. */
+function withoutDoubles(parts: readonly Part[]): readonly Curve[] {
+  const curves: Curve[] = [];
+  const found = (from: Point, to: Point, middle: Point): number =>
+    curves.findIndex(
+      (curve) =>
+        distance(curve.from, from) < MEET &&
+        distance(curve.to, to) < MEET &&
+        distance(pointAt(curve, 0.5), middle) < MEET,
+    );
+  for (const { curve } of parts) {
+    const middle = pointAt(curve, 0.5);
+    if (found(curve.from, curve.to, middle) >= 0) continue;
+    const opposite = found(curve.to, curve.from, middle);
+    if (opposite >= 0) curves.splice(opposite, 1);
+    else curves.push(curve);
+  }
+  return curves;
+}
+
+/** Curves one after the other in closed loops; null when some run nowhere. */
+function closed(curves: readonly Curve[]): Loop[] | null {
+  const rest = new Set(curves);
+  const loops: Loop[] = [];
+  for (const first of curves) {
+    if (!rest.delete(first)) continue;
+    const loop = [first];
+    while (distance((loop.at(-1) as Curve).to, first.from) > MEET) {
+      const { to } = loop.at(-1) as Curve;
+      const next = [...rest].find(({ from }) => distance(from, to) < MEET);
+      if (!next) return null;
+      rest.delete(next);
+      loop.push(next);
+    }
+    loops.push(loop);
+  }
+  return loops;
 }
 
 /** A loop that is one circle. */
@@ -64,37 +167,6 @@ function movedRing({ centre, radius: before, clockwise }: Arc, by: number): Loop
   ];
   const half = (from: Point, to: Point): Arc => ({ type: 'arc', from, to, centre, radius, clockwise });
   return [half(left, right), half(right, left)];
-}
-
-/** Sides by which the loop first becomes too short as it moves, at the distance where that happens. */
-function firstToVanish(sides: Loop, by: number): ReadonlySet<number> {
-  const goneAt = (distanceMoved: number) =>
-    new Set((movedSides(sides, distanceMoved) ?? []).flatMap((side, index) => (side === null ? [index] : [])));
-  let [low, high] = [0, by];
-  for (let step = 0; step < HALVINGS; step += 1) {
-    const middle = (low + high) / 2;
-    if (movedSides(sides, middle)?.every((side) => side !== null)) low = middle;
-    else high = middle;
-  }
-  return goneAt(high);
-}
-
-/** Every side moved and cut at its neighbours, null for one of which nothing is left; null when two neighbours do not meet. */
-function movedSides(sides: Loop, by: number): readonly (Curve | null)[] | null {
-  const moved = sides.map((side) => movedSide(side, by));
-  const joints: (Point | null)[] = [];
-  for (const [index, side] of sides.entries()) {
-    const next = (index + 1) % sides.length;
-    const [a, b] = [moved[index], moved[next]];
-    joints.push(a && b ? jointOf([side, sides[next] as Curve], [a, b], by) : null);
-  }
-  const lost = joints.some((joint, index) => !joint && moved[index] && moved[(index + 1) % sides.length]);
-  if (lost) return null;
-  return moved.map((side, index) => {
-    const [from, to] = [joints[(index + sides.length - 1) % sides.length], joints[index]];
-    if (!side) return null;
-    return !from || !to || runsOn(side, from, to) ? { ...side, from: from ?? side.from, to: to ?? side.to } : null;
-  });
 }
 
 function movedSide(side: Curve, by: number): Curve | null {
@@ -122,21 +194,6 @@ function normalAt(curve: Curve, t: 0 | 1): Point {
   }
   const way = curve.clockwise ? 1 : -1;
   return { x: (way * (curve.centre.x - at.x)) / curve.radius, y: (way * (curve.centre.y - at.y)) / curve.radius };
-}
-
-/** Where two moved neighbours meet; null when they do not. */
-function jointOf([before, after]: readonly [Curve, Curve], [a, b]: readonly [Curve, Curve], by: number): Point | null {
-  const neighbours = coincident(before.to.x, after.from.x) && coincident(before.to.y, after.from.y);
-  const [u, v] = [normalAt(before, 1), normalAt(after, 0)];
-  // Sides that run into one another smoothly stay together: their crossing would be found only by chance.
-  if (neighbours && Math.hypot(u.x - v.x, u.y - v.y) < COINCIDENT)
-    return { x: before.to.x + u.x * by, y: before.to.y + u.y * by };
-  const near = { x: (before.to.x + after.from.x) / 2, y: (before.to.y + after.from.y) / 2 };
-  const [first, ...others] = meetings(a, b);
-  return others.reduce<Point | null>(
-    (best, point) => (best && distance(point, near) < distance(best, near) ? point : best),
-    first ?? null,
-  );
 }
 
 /** Where the whole lines and circles of two curves meet; none for parallel lines and circles about one centre. */
@@ -176,30 +233,11 @@ function directionOf(curve: Curve): Point {
   return { x: (curve.to.x - curve.from.x) / length, y: (curve.to.y - curve.from.y) / length };
 }
 
-/** Whether a moved side still runs the way it did, from one joint to the other. */
-function runsOn(side: Curve, from: Point, to: Point): boolean {
-  if (side.type === 'line') {
-    const u = directionOf(side);
-    return (to.x - from.x) * u.x + (to.y - from.y) * u.y > COINCIDENT;
-  }
-  const middle = pointAt(side, 0.5);
-  const turnTo = (point: Point): number => {
-    const [x, y] = [middle.x - side.centre.x, middle.y - side.centre.y];
-    const [p, q] = [point.x - side.centre.x, point.y - side.centre.y];
-    return Math.atan2(x * q - y * p, x * p + y * q) * (side.clockwise ? 1 : -1);
-  };
-  return (turnTo(to) - turnTo(from)) * side.radius > COINCIDENT;
+/** Whether a point lies inside an outline, or outside a hole. */
+function isRightOf(loop: Loop): (point: Point) => boolean {
+  const [corners, clockwise] = [pointsOf(loop), areaOf(loop) > 0];
+  return (point) => encloses(corners, point) === clockwise;
 }
-
-/** Whether a moved side lies within the loop, no nearer to it than it was moved. */
-function keepsAway(side: Curve, loop: Loop, by: number): boolean {
-  return [0, 0.25, 0.5, 0.75].every((t) => {
-    const point = pointAt(side, t);
-    return loop.every((curve) => distanceTo(curve, point) > by - COINCIDENT) && (by === 0 || isRightOf(loop, point));
-  });
-}
-/** Inside an outline, outside a hole. */
-const isRightOf = (loop: Loop, point: Point): boolean => encloses(pointsOf(loop), point) === areaOf(loop) > 0;
 
 /** From a point to the nearest point of a curve, its ends included. */
 export function distanceTo(curve: Curve, point: Point): number {
