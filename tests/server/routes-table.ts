@@ -154,6 +154,21 @@ export const ROUTES: readonly RouteRow[] = [
   },
   { path: '/api/projects/[id]/links', method: 'POST', who: 'author', prepare: draft, body: { label: 'For Odo' } },
   { path: '/api/projects/[id]/links/[link]', method: 'DELETE', who: 'author', prepare: inDraft({ link: 'none' }) },
+  { path: '/api/projects/[id]/sources', method: 'GET', who: 'author', prepare: draft },
+  {
+    path: '/api/projects/[id]/sources',
+    method: 'POST',
+    who: 'author',
+    prepare: draft,
+    body: { name: 'Pasted text', kind: 'plain', text: 'Cut the lid.' },
+  },
+  { path: '/api/projects/[id]/sources/[source]', method: 'GET', who: 'author', prepare: inDraft({ source: 'none' }) },
+  {
+    path: '/api/projects/[id]/sources/[source]',
+    method: 'DELETE',
+    who: 'author',
+    prepare: inDraft({ source: 'none' }),
+  },
   {
     path: '/api/invitations/[id]',
     method: 'POST',
