@@ -19,11 +19,13 @@ import {
   nearestName,
   planSheets,
   readValue,
-  stockOf,
   usualSizing,
   type GridId,
+  type Figures,
   type Model,
+  type PlanOptions,
   type Sizing,
+  type Stock,
   type Unit,
 } from '@/engine';
 import { rowLayout } from '@/exports/cutting/layout';
@@ -35,6 +37,8 @@ import { templatesPdf } from '@/exports/pdf/templates-pdf.server';
 import { cuttingSvg } from '@/exports/svg/cutting';
 import { measurementText } from '@/exports/text/measurement-text';
 import { patternSheet } from '@/features/editions/paper/sheet-content';
+import { materialField, MOST_MARGIN, OTHER_MATERIALS, planOptions } from '@/features/sheets/cut-from';
+import { readStock } from '@/features/sheets/stock-link';
 import { PatternFileError } from '@/features/patterns/load-pattern';
 import { getPatternModel, listPatterns } from '@/features/patterns/patterns.server';
 
@@ -49,7 +53,11 @@ npm run --silent sheet -- --list [--format json]
   --choose spine=curved          an option of a choice
   --units in|mm|cm               usual: in
   --grid 1/16in                  how fine you cut: ${Object.keys(GRIDS).join(', ')}
-  --stock 12x12in                the sheets it is cut from: ${Object.keys(STOCKS).join(', ')}
+  --stock 12x12in                the sheets it is cut from: ${Object.keys(STOCKS).join(', ')},
+                                 a size such as 8.5x13in; a4-long or a4-short heeds the grain along that side
+  --stock-for 'greyboard=a3'     sheets of another material, as often as you like: ${OTHER_MATERIALS.join(', ')}
+  --margin '1/4 in'              a border trimmed off every sheet first
+  --join Cover                   make a piece of two parts should it be too large, as often as you like
   --copies 1                     how many boxes, up to 500
   --format text                  text, json, pdf, svg or dxf; svg and dxf are for cutting machines: all pieces side by
                                  side in millimetres, 10 mm between them
@@ -77,6 +85,9 @@ function readArguments() {
         units: { type: 'string', default: 'in' },
         grid: { type: 'string' },
         stock: { type: 'string', default: '12x12in' },
+        'stock-for': { type: 'string', multiple: true, default: [] },
+        margin: { type: 'string', default: '0' },
+        join: { type: 'string', multiple: true, default: [] },
         copies: { type: 'string', default: '1' },
         format: { type: 'string', default: 'text' },
         paper: { type: 'string' },
@@ -94,12 +105,12 @@ function readArguments() {
   }
 }
 
-function namedPair(option: string, typed: string): [string, string] {
+const EXAMPLES = { set: 'inside width=5 3/8 in', choose: 'spine=curved', 'stock-for': 'patterned paper=a4' } as const;
+
+function namedPair(option: keyof typeof EXAMPLES, typed: string): [string, string] {
   const at = typed.indexOf('=');
   if (at < 1)
-    throw new BadArgument(
-      `--${option} “${typed}” has no “=”. Write it like --${option} '${option === 'set' ? 'inside width=5 3/8 in' : 'spine=curved'}'.`,
-    );
+    throw new BadArgument(`--${option} “${typed}” has no “=”. Write it like --${option} '${EXAMPLES[option]}'.`);
   return [typed.slice(0, at).trim(), typed.slice(at + 1).trim()];
 }
 
@@ -142,6 +153,45 @@ function readSizing(model: Model, values: ReturnType<typeof readArguments>['valu
     chosen[keyOf(name)] = found;
   }
   return { ...sizing, values: set, choices: chosen };
+}
+
+function readSheet(typed: string): Stock {
+  const stock = readStock(typed);
+  if (!stock) throw new BadArgument(`The sheet “${typed}” is not known. It can be ${Object.keys(STOCKS).join(', ')}.`);
+  return stock;
+}
+
+/** How it is planned on sheets. */
+function readSheets(
+  { pieces, sizing }: Figures,
+  values: ReturnType<typeof readArguments>['values'],
+): PlanOptions & { readonly stock: Stock; readonly copies: number } {
+  const copies = Number(values.copies);
+  if (!Number.isInteger(copies) || copies < 1 || copies > 500)
+    throw new BadArgument(`--copies “${values.copies}” is not a whole number from 1 to 500.`);
+  const margin = readValue({ kind: 'length' }, values.margin, { units: sizing.units });
+  if (!margin.ok) throw new BadArgument(`--margin: ${margin.faults.map(explain).join(' ')}`);
+  if (margin.value < 0 || margin.value > MOST_MARGIN)
+    throw new BadArgument(`--margin “${values.margin}” is not from nothing to ${MOST_MARGIN} mm.`);
+  const others = values['stock-for'].map((typed) => {
+    const [name, sheet] = namedPair('stock-for', typed);
+    const material = OTHER_MATERIALS.find((one) => keyOf(one) === keyOf(name));
+    if (!material)
+      throw new BadArgument(`The material “${name}” is not known. It can be ${OTHER_MATERIALS.join(' or ')}.`);
+    return [material, readSheet(sheet)] as const;
+  });
+  const join = values.join.map((name) => {
+    const piece = pieces.find((one) => keyOf(one.name) === keyOf(name));
+    if (!piece)
+      throw new BadArgument(`--join “${name}” is no piece of it. It has ${pieces.map((one) => one.name).join(', ')}.`);
+    return materialField(piece.name);
+  });
+  const stock = readSheet(values.stock);
+  return {
+    ...planOptions({ stock, others: Object.fromEntries(others), margin: margin.value, copies, join }, pieces),
+    stock,
+    copies,
+  };
 }
 
 function put(content: string | Uint8Array, out: string | undefined): void {
@@ -187,20 +237,16 @@ async function run(): Promise<number> {
       `No pattern is called “${slug}”. ${nearest ? `The nearest is “${nearest}”.` : `There are ${slugs.join(', ')}.`}`,
     );
   }
-  const stock = stockOf(values.stock);
-  if (!stock)
-    throw new BadArgument(`The sheet “${values.stock}” is not known. It can be ${Object.keys(STOCKS).join(', ')}.`);
-  const copies = Number(values.copies);
-  if (!Number.isInteger(copies) || copies < 1 || copies > 500)
-    throw new BadArgument(`--copies “${values.copies}” is not a whole number from 1 to 500.`);
   if (values.templates && format !== 'pdf') throw new BadArgument('--templates goes with --format pdf.');
   if (values.glue && format !== 'svg' && format !== 'dxf')
     throw new BadArgument('--glue goes with --format svg or --format dxf.');
   const figures = evaluate(model, readSizing(model, values));
+  const options = readSheets(figures, values);
+  const { copies } = options;
   const paper = oneOf('The paper', values.paper ?? (values.units === 'in' ? 'letter' : 'a4'), PAPERS);
   const written = (as: (typeof FORMATS)[number]): string | Promise<Uint8Array> => {
     if (as === 'pdf') {
-      const content = patternSheet({ model, figures, plan: planSheets(figures, { stock, copies }) });
+      const content = patternSheet({ model, figures, plan: planSheets(figures, options) });
       return values.templates ? templatesPdf(content, paper) : measurementPdf(content, paper);
     }
     if (as === 'svg' || as === 'dxf') {
@@ -208,8 +254,8 @@ async function run(): Promise<number> {
       return as === 'svg' ? cuttingSvg(layout, { title: `${model.pattern.name}: all pieces` }) : cuttingDxf(layout);
     }
     return as === 'json'
-      ? `${JSON.stringify(figuresJson(model, figures, { stock, copies }), null, 2)}\n`
-      : measurementText(model, figures, { stock, copies });
+      ? `${JSON.stringify(figuresJson(model, figures, options), null, 2)}\n`
+      : measurementText(model, figures, options);
   };
   put(await written(format), values.out);
   return figures.problems.length > 0 ? 1 : 0;

@@ -27,7 +27,10 @@ const inside = async (asked: ReturnType<typeof ask>) => {
 describe('questions about a size, without scripts', () => {
   it('are asked first', async () => {
     expect(await ask('fit', '')).toMatchObject({ answer: null, wait: null });
-    expect(await ask('largest', '?card=a4')).toMatchObject({ answer: null, state: { stock: { id: 'a4' } } });
+    expect(await ask('largest', '?card=a4')).toMatchObject({
+      answer: null,
+      state: { cutFrom: { stock: { id: 'a4' } } },
+    });
   });
 
   it('are answered at the size and on the sheet in the address', async () => {
@@ -36,7 +39,7 @@ describe('questions about a size, without scripts', () => {
     expect(await inside(ask('fit', query))).toEqual([106, 156]);
     expect((await ask('fit', query))?.answer).toMatchObject({ plan: { stock: { id: '200x300mm' } } });
     // Two cards of 8 × 6 in lie on 12 × 12 in; a sixteenth taller they do not.
-    expect(await inside(ask('largest', '?card=12x12in&pile-sheets=1&pile-boxes=2'))).toEqual([101.6, 152.4]);
+    expect(await inside(ask('largest', '?card=12x12in&pile-sheets=1&copies=2'))).toEqual([101.6, 152.4]);
   });
 
   it('keep what was typed and say what does not read', async () => {

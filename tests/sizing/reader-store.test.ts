@@ -1,14 +1,14 @@
 import { expect, test } from 'vitest';
 import { compilePattern, evaluate, type Model, type Sizing } from '@/engine';
 import { createReaderStore, inUnits, onWholeSteps } from '@/features/sizing/reader-store';
-import { USUAL_STOCK } from '@/features/sizing/reader-view';
+import { USUAL_CUT_FROM } from '@/features/sheets/cut-from';
 import { FOLDER } from '../server/published-project';
 
 const compiled = compilePattern(FOLDER);
 if (!compiled.ok) throw new Error(JSON.stringify(compiled.faults));
 const model: Model = compiled.value;
 const authors: Sizing = { values: {}, choices: {}, units: 'in', grid: '1/16in' };
-const start = () => createReaderStore(model, { sizing: authors, authors, stock: USUAL_STOCK });
+const start = () => createReaderStore(model, { sizing: authors, authors, cutFrom: USUAL_CUT_FROM });
 const shownHeight = (store: ReturnType<typeof start>) =>
   store.$state.get().verdict.shown.measures.find(({ name }) => name === 'inside height')?.exact;
 

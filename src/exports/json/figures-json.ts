@@ -1,6 +1,7 @@
 import {
   cutsInWords,
   helpWithTooLarge,
+  joiningInWords,
   planSheets,
   say,
   showValue,
@@ -11,9 +12,9 @@ import {
   type Stock,
 } from '@/engine';
 
-export interface FiguresJsonOptions extends Pick<PlanOptions, 'folds'> {
+/** How it is planned on sheets; the sheets are said, the rest may be as usual. */
+export interface FiguresJsonOptions extends PlanOptions {
   readonly stock: Stock;
-  readonly copies: number;
 }
 
 /** What the command line prints and `figures.json` answers: lengths in millimetres, angles in degrees, areas in mm². */
@@ -44,13 +45,26 @@ export function figuresJson(model: Model, figures: Figures, options: FiguresJson
     fits: figures.fits.map(({ name, holds, gap, advice }) => ({ name, holds, gap, ...(advice ? { advice } : {}) })),
     sheets: {
       stock: options.stock.id,
-      count: options.copies,
+      count: plan.copies,
+      ...(options.margin ? { margin: options.margin } : {}),
       used: plan.used,
       plan: plan.sheets.map((sheet, index) => ({
+        material: sheet.material,
+        stock: sheet.stock.id,
         parts: sheet.parts,
         offcuts: sheet.offcuts,
         cuts: cutsInWords(plan, index).map((sentence) => say(sentence, sizing)),
       })),
+      ...(plan.joined.length > 0
+        ? {
+            joined: plan.joined.map((joined) => ({
+              name: joined.name,
+              tab: joined.tab,
+              parts: joined.parts.map(({ name, across, along, scores }) => ({ name, across, along, scores })),
+              hint: say(joiningInWords(joined), sizing),
+            })),
+          }
+        : {}),
       ...(plan.tooLarge.length > 0
         ? {
             tooLarge: plan.tooLarge.map((large) => ({

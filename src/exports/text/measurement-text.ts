@@ -1,22 +1,21 @@
 import {
   cutsInWords,
   helpWithTooLarge,
+  joiningInWords,
   planSheets,
   say,
   show,
   showValue,
   type Figures,
   type Model,
-  type Stock,
+  type PlanOptions,
+  type SheetPlan,
 } from '@/engine';
+import { figuresAsCut } from '@/exports/as-cut';
 import { materialRows } from '@/exports/material-rows';
 
 /** The measurement sheet as plain text, for a terminal or a letter: sizes, cut list, making, fits, sheets, departure. */
-export function measurementText(
-  model: Model,
-  figures: Figures,
-  options: { readonly stock: Stock; readonly copies: number },
-): string {
+export function measurementText(model: Model, figures: Figures, options: PlanOptions): string {
   const { sizing } = figures;
   const length = (mm: number) => show(mm, sizing).text;
   const bare = (mm: number) => show(mm, { ...sizing, bare: true }).text;
@@ -38,8 +37,8 @@ export function measurementText(
     ...Object.entries(sizing.choices).map(([name, option]) => `  ${name.padEnd(widest)}  ${option}`),
     '',
     'PIECES',
-    ...figures.pieces.flatMap((piece, index) => [
-      `  ${index + 1} ${piece.name}, cut ${piece.count * options.copies}: ${bare(piece.across)} × ${length(piece.along)}`,
+    ...figuresAsCut(figures, plan).pieces.flatMap((piece, index) => [
+      `  ${index + 1} ${piece.name}, cut ${piece.count}: ${bare(piece.across)} × ${length(piece.along)}`,
       ...piece.instructions.map((sentence) => `      ${say(sentence, sizing)}`),
     ]),
     '',
@@ -52,9 +51,10 @@ export function measurementText(
         `  ${fit.holds ? 'holds' : 'FAILS'}  ${fit.name}${fit.gap === null ? '' : ` (${gapText(fit.gap, fit.is, length)})`}${fit.holds ? '' : `: ${fit.otherwise}`}`,
     ),
     '',
-    `SHEETS  ${plan.used} of ${plan.stock.name}${options.copies > 1 ? ` for ${options.copies} boxes` : ''}`,
-    ...plan.sheets.flatMap((_, index) => [
-      `  Sheet ${index + 1}`,
+    `SHEETS  ${takenWords(plan)}${plan.copies > 1 ? ` for ${plan.copies} boxes` : ''}`,
+    ...plan.joined.map((joined) => `  ${say(joiningInWords(joined), sizing)}`),
+    ...plan.sheets.flatMap(({ material }, index) => [
+      `  Sheet ${index + 1}${plan.takes.length > 1 ? `, ${material}` : ''}`,
       ...cutsInWords(plan, index).map((sentence) => `    ${say(sentence, sizing)}`),
     ]),
     ...plan.tooLarge.map(
@@ -71,6 +71,11 @@ export function measurementText(
     ),
   ];
   return `${lines.join('\n')}\n`;
+}
+/** `3 of 12 × 12 in`; each material by its name where they come in different sheets. */
+function takenWords({ used, stock, takes }: SheetPlan): string {
+  if (takes.every((take) => take.stock.id === stock.id)) return `${used} of ${stock.name}`;
+  return takes.map((take) => `${take.used} of ${take.material}, ${take.stock.name}`).join('; ');
 }
 function gapText(gap: number, is: string, length: (mm: number) => string): string {
   if (is === 'same as')

@@ -7,6 +7,7 @@ import {
   COPIES,
   COUNT,
   EASE,
+  STANDS,
   largestFrom,
   readPile,
   readThing,
@@ -40,24 +41,26 @@ export async function loadAskPage(
   const { model, view } = page;
   const base = view.verdict.shown.sizing;
   const field = (name: string) => (url.searchParams.get(name) ?? '').slice(0, 80);
-  const names = ask === 'fit' ? [...thingNames(model).map(thingField), EASE] : [COUNT, COPIES];
+  const names = ask === 'fit' ? [...thingNames(model).map(thingField), EASE, STANDS] : [COUNT, COPIES];
   const sent = names.filter((name) => url.searchParams.has(name));
   const state = (faults: AskState['faults'] = {}): AskState => ({
     links: page.links,
     asked: base,
-    stock: view.stock,
+    cutFrom: view.cutFrom,
     sheets: sheetsOf(locals.user),
     edition: url.searchParams.get('edition'),
     typed: Object.fromEntries(sent.map((name) => [name, field(name)])),
     faults,
   });
-  if (sent.length === 0) return { page, state: state(), answer: null, wait: null };
+  // How many boxes stands in every link; only the form says how many sheets.
+  const asking = ask === 'fit' ? sent.length > 0 : sent.includes(COUNT);
+  if (!asking) return { page, state: state(), answer: null, wait: null };
   if (ask === 'fit') {
     const thing = readThing(model, base.units, field);
     if (!thing.ok) return { page, state: state(thing.faults), answer: null, wait: null };
-    return { page, state: state(), answer: answerThing(model, base, thing.value, view.stock), wait: null };
+    return { page, state: state(), answer: answerThing(model, base, thing.value, view.cutFrom), wait: null };
   }
-  const pile = readPile(view.stock, field);
+  const pile = readPile(view.cutFrom, field);
   if (!pile.ok) return { page, state: state(pile.faults), answer: null, wait: null };
   const turn = await takeTurn('search', { ip: clientAddress });
   if (!turn.ok) return { page, state: state(), answer: null, wait: turn.sentence };

@@ -1,5 +1,5 @@
 import { compilePattern, evaluate, planSheets, type Figures, type Model, type Pattern, type SheetPlan } from '@/engine';
-import { USUAL_STOCK } from '@/features/sizing/reader-view';
+import { USUAL_STOCK } from '@/features/sheets/cut-from';
 import type { Edition } from './editions.server';
 
 /** Editions never change, so what follows from one alone is worked out once. */

@@ -1,11 +1,10 @@
-import { STOCKS, type Model, type Sizing } from '@/engine';
+import type { Model, Sizing } from '@/engine';
 import type { FieldFault } from '@/features/http/problem';
-import { readStock as readLinked } from '@/features/sheets/stock-link';
+import { readCutFrom, type ReadCutFrom } from '@/features/sheets/cut-from';
 import type { Links } from '@/features/sizing/live-html';
-import { sizingHref } from '@/features/sizing/live-html';
 import { inUnits, type Typed } from '@/features/sizing/reader-store';
-import { keepParams, readerView, readStock, type ReaderView } from '@/features/sizing/reader-view';
-import { isSizingForm, readSizingForm } from '@/features/sizing/sizing-form';
+import { keepParams, readerView, type ReaderView } from '@/features/sizing/reader-view';
+import { isSizingForm, readSheetsForm, readSizingForm } from '@/features/sizing/sizing-form';
 import { readingWords } from '@/features/sizing/reading-words';
 import { readSizing } from '@/features/sizing/sizing-link';
 import { judge } from '@/features/sizing/verdict';
@@ -19,10 +18,11 @@ export interface ReaderPage {
   readonly links: Links;
   /** Form fields that do not read. */
   readonly typed: Typed;
+  readonly cutTyped: ReadCutFrom['typed'];
   /** What does not read in the address, by what it is for. */
   readonly faults: readonly FieldFault[];
-  /** The form read well: the address that says the same as a link. */
-  readonly linkTo: string | null;
+  /** Sent by a form: when it reads well, a link to the asked sizing says the same. */
+  readonly fromForm: boolean;
 }
 
 /** A published project at the sizing in the address; null when there is no such project or edition. */
@@ -34,32 +34,34 @@ export function loadReaderPage(slug: string, url: URL): ReaderPage | null {
   if (!edition) return null;
 
   const model = modelOf(edition);
-  const stock = readStock(params.get('card'));
-  const links: Links = { model, authors: edition.sizing, path: `/projects/${slug}`, keep: keepParams(stock, asked) };
   const reading = isSizingForm(params)
     ? readForm(model, params, edition.sizing)
     : readLink(model, params, edition.sizing);
-  const wellRead = isSizingForm(params) && Object.keys(reading.typed).length === 0;
+  const { value: cutFrom, typed: cutTyped } = reading.sheets;
+  const faults = [...reading.faults, ...Object.entries(cutTyped).map(([where, { sentence }]) => ({ where, sentence }))];
   return {
     edition,
     model,
-    view: readerView(model, judge(model, reading.sizing, edition.sizing, { nearest: true }), stock),
-    links,
+    view: readerView(model, judge(model, reading.sizing, edition.sizing, { nearest: true }), cutFrom),
+    links: { model, authors: edition.sizing, path: `/projects/${slug}`, keep: keepParams(cutFrom, asked) },
     typed: reading.typed,
-    faults: [...reading.faults, ...cardFaults(params.get('card'))],
-    linkTo: wellRead ? sizingHref(links, reading.sizing) : null,
+    cutTyped,
+    faults,
+    fromForm: isSizingForm(params),
   };
 }
 
 interface Reading {
   readonly sizing: Sizing;
   readonly typed: Typed;
+  readonly sheets: ReadCutFrom;
   readonly faults: readonly FieldFault[];
 }
 
 function readForm(model: Model, params: URLSearchParams, authors: Sizing): Reading {
   const { sizing, typed } = readSizingForm(model, params, authors);
-  return { sizing, typed, faults: Object.entries(typed).map(([where, { sentence }]) => ({ where, sentence })) };
+  const sheets = readSheetsForm(model, params, authors);
+  return { sizing, typed, sheets, faults: Object.entries(typed).map(([where, { sentence }]) => ({ where, sentence })) };
 }
 
 function readLink(model: Model, params: URLSearchParams, authors: Sizing): Reading {
@@ -68,12 +70,7 @@ function readLink(model: Model, params: URLSearchParams, authors: Sizing): Readi
   return {
     sizing: inUnits(sizing, sizing.units),
     typed: {},
+    sheets: readCutFrom(params, sizing),
     faults: faults.map((fault) => ({ where: fault.where, sentence: readingWords([fault]) })),
   };
-}
-
-function cardFaults(card: string | null): readonly FieldFault[] {
-  if (card === null || card === '' || readLinked(card)) return [];
-  const sentence = `“${card}” is no sheet that is known here. It can be ${Object.keys(STOCKS).join(', ')}, or a size such as 8.5x13in.`;
-  return [{ where: 'card', sentence }];
 }

@@ -82,13 +82,13 @@ const errorHtml = (id: string, fault: string | undefined): string =>
   fault === undefined ? '' : `<p class="error" id="${esc(id)}-error" role="alert">${esc(fault)}</p>`;
 
 /** The sheets to choose from: one's own first, then those sold everywhere. A chosen one that is in neither heads the list. */
-export function stockOptionsHtml(sheets: MySheets, chosen: Stock): string {
+export function stockOptionsHtml(sheets: MySheets, chosen: Stock | null): string {
   const mine = stocksOf(sheets);
   const isMine = (stock: Stock) => mine.some((one) => one.stock.id === stock.id);
   const others = Object.values(STOCKS).filter((stock) => !isMine(stock));
   const option = (stock: Stock, more = '') =>
-    `<option value="${esc(stock.id)}"${stock.id === chosen.id ? ' selected' : ''}>${esc(stockWords(stock))}${more}</option>`;
-  const known = isMine(chosen) || others.some(({ id }) => id === chosen.id);
+    `<option value="${esc(stock.id)}"${stock.id === chosen?.id ? ' selected' : ''}>${esc(stockWords(stock))}${more}</option>`;
+  const known = chosen === null || isMine(chosen) || others.some(({ id }) => id === chosen.id);
   const rest = others.map((stock) => option(stock)).join('');
   return (
     (known ? '' : option(chosen)) +

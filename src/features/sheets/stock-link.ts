@@ -45,11 +45,13 @@ export function ownStock(
   );
 }
 
+/** The same sheet with its grain one way or the other, or no longer heeded. */
 export function withGrain({ id, name, across, along }: Stock, grain: Grain | undefined): Stock {
-  if (!grain) return { id, name, across, along };
+  const plain = id.replace(/-(?:long|short)$/, '');
+  if (!grain) return { id: plain, name, across, along };
   const longRuns = along >= across ? 'along' : 'across';
   const shortRuns = longRuns === 'along' ? 'across' : 'along';
-  return { id: `${id}-${grain}`, name, across, along, grain: grain === 'long' ? longRuns : shortRuns };
+  return { id: `${plain}-${grain}`, name, across, along, grain: grain === 'long' ? longRuns : shortRuns };
 }
 
 /** How the grain runs, as a packet says it; null when it is not heeded. On a square sheet both sides are long. */

@@ -49,13 +49,17 @@ export const pieceCount = (figures: Figures): number => figures.pieces.reduce((a
 
 export const piecesWords = (n: number): string => `${n} ${n === 1 ? 'piece' : 'pieces'}`;
 
-/** `3 sheets of 12 × 12 in`, and those of other materials by their name; what is too large for the sheet is said first. */
-export function sheetsWords({ stock, used, takes, tooLarge }: SheetPlan): string {
-  if (tooLarge.length > 0) return `too large for ${stock.name}: ${tooLarge.map(({ name }) => name).join(', ')}`;
+/** `3 sheets of 12 × 12 in for 2 boxes`, and those of other materials by their name; what is too large is said first. */
+export function sheetsWords({ stock, used, takes, tooLarge, copies }: SheetPlan): string {
+  if (tooLarge.length > 0) {
+    const [{ stock: sheet = stock } = {}] = tooLarge;
+    return `too large for ${sheet.name}: ${tooLarge.map(({ name }) => name).join(', ')}`;
+  }
+  const boxes = copies > 1 ? ` for ${copies} boxes` : '';
   const count = (n: number) => `${n} ${n === 1 ? 'sheet' : 'sheets'}`;
-  if (takes.length < 2) return `${count(used)} of ${stock.name}`;
+  if (takes.length < 2) return `${count(used)} of ${stock.name}${boxes}`;
   const each = takes.map((take) => `${count(take.used)} of ${take.material}, ${take.stock.name}`);
-  return `${each.slice(0, -1).join('; ')} and ${each.at(-1)}`;
+  return `${each.slice(0, -1).join('; ')} and ${each.at(-1)}${boxes}`;
 }
 
 /** Minutes as a person says them: `about 40 minutes`, `about two hours`, `about 1 h 15`. */

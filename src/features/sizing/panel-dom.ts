@@ -1,13 +1,14 @@
 import { GRIDS, type GridId, type Model, type Sizing, type Unit } from '@/engine';
-import type { MySheets } from '@/features/sheets/my-sheets';
+import { readCutFrom } from '@/features/sheets/cut-from';
+import { cutFromHtml } from '@/features/sheets/cut-from-html';
 import { haveHtml, stockOptionsHtml } from '@/features/sheets/my-sheets-html';
 import { fieldTroubleHtml, gridsHtml, otherTroubleHtml, sizingHref, wholeStepsHtml, type Links } from './live-html';
 import { morphInto } from './morph';
 import { fieldText, type Panel, type PanelField } from './panel';
 import { PAPERS, paperHref, PDFS } from './paper';
 import { rangeRuler, rangeRulerSvg } from './range-ruler';
-import type { ReaderStore, Typed } from './reader-store';
-import { readStock, type ReaderView } from './reader-view';
+import type { ReaderState, ReaderStore, Typed } from './reader-store';
+import type { ReaderView } from './reader-view';
 import { parameterName } from './sizing-form';
 import { readSizing } from './sizing-link';
 
@@ -44,7 +45,23 @@ export function bindPanel(panel: HTMLElement, page: HTMLElement, store: ReaderSt
     if (input.value.trim() !== shownText(input)) store.type(measureOf(input), input.value);
   };
 
+  const readSheets = () => {
+    clearTimeout(typing);
+    const { cutFrom, verdict } = store.$state.get();
+    const fields = new URLSearchParams();
+    for (const field of form.querySelectorAll<HTMLInputElement | HTMLSelectElement>(
+      '[data-sheets-field] :is(input, select)',
+    ))
+      fields.append(field.name, field.value);
+    store.cutFrom(readCutFrom(fields, { units: verdict.asked.units, before: cutFrom }));
+  };
+
   form.addEventListener('input', ({ target }) => {
+    if (target instanceof HTMLInputElement && target.closest('[data-sheets-field]')) {
+      clearTimeout(typing);
+      typing = setTimeout(readSheets, TYPING);
+      return;
+    }
     if (!(target instanceof HTMLInputElement) || measureOf(target) === '') return;
     clearTimeout(typing);
     if (target.type === 'range') slide(() => store.set(measureOf(target), onStep(target, Number(target.value), store)));
@@ -75,11 +92,12 @@ export function bindPanel(panel: HTMLElement, page: HTMLElement, store: ReaderSt
     else if (choice !== undefined) store.choose(choice, button.value);
   });
   form.addEventListener('change', ({ target }) => {
-    if (target instanceof HTMLSelectElement && target.name === 'card') store.stock(readStock(target.value));
+    if ((target as Element).closest('[data-sheets-field]')) readSheets();
   });
   form.addEventListener('submit', (event) => {
     event.preventDefault();
     form.querySelectorAll<HTMLInputElement>('[data-field] input[type=text]').forEach(settle);
+    readSheets();
   });
   const takeLink = (event: MouseEvent) => {
     const link = (event.target as Element).closest<HTMLAnchorElement>('a[data-sizing], a[data-reset]');
@@ -94,6 +112,15 @@ export function bindPanel(panel: HTMLElement, page: HTMLElement, store: ReaderSt
         if (measure) field.value = field.defaultValue = fieldText(measure, asked);
         field.focus();
       } else if (!link.matches('[data-reset]')) panel.querySelector<HTMLElement>('h2')?.focus();
+      return;
+    }
+    const join = (event.target as Element).closest<HTMLAnchorElement>('a[data-join]');
+    if (join && !(event.metaKey || event.ctrlKey || event.shiftKey)) {
+      event.preventDefault();
+      store.cutFrom(readCutFrom(new URL(join.href).searchParams, store.$state.get().verdict.asked));
+      // What undoes it stands in the place of what did it.
+      const { join: piece = '' } = join.dataset;
+      requestAnimationFrame(() => panel.querySelector<HTMLElement>(`a[data-join="${CSS.escape(piece)}"]`)?.focus());
       return;
     }
     const copy = (event.target as Element).closest<HTMLAnchorElement>('a[data-copy-link]');
@@ -146,16 +173,28 @@ export function showPanel(
   point(root, '[data-copy-link]', sizingHref(links, verdict.asked));
 }
 
-/** The sheets to choose from, and whether there are enough of the chosen one. */
+/** The sheets to choose from, how they are used, and whether there are enough of the chosen one. */
 export function showSheets(
   root: HTMLElement,
-  { plan, stock }: Pick<ReaderView, 'plan' | 'stock'>,
-  sheets: MySheets,
+  { plan, verdict }: Pick<ReaderView, 'plan' | 'verdict'>,
+  { cutFrom, cutTyped, sheets }: Pick<ReaderState, 'cutFrom' | 'cutTyped' | 'sheets'>,
 ): void {
+  const { stock } = cutFrom;
   const select = root.querySelector<HTMLSelectElement>('[data-stocks]');
   if (select) {
     morphInto(select, stockOptionsHtml(sheets, stock));
     select.value = stock.id;
+  }
+  const how = root.querySelector('[data-cut-from]');
+  if (how) {
+    const { units } = verdict.asked;
+    const { materials } = verdict.shown;
+    morphInto(how, cutFromHtml({ cutFrom, typed: cutTyped, units, sheets, materials }));
+    for (const field of how.querySelectorAll<HTMLInputElement | HTMLSelectElement>('input, select')) {
+      if (field instanceof HTMLSelectElement)
+        field.value = field.querySelector<HTMLOptionElement>('option[selected]')?.value ?? '';
+      else if (field !== document.activeElement) field.value = field.defaultValue;
+    }
   }
   const have = root.querySelector('[data-have]');
   if (have) morphInto(have, haveHtml(plan, sheets));

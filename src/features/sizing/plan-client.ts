@@ -52,13 +52,14 @@ export const isBetter = (a: SheetPlan, b: SheetPlan): boolean =>
 /** What the planner reads, without sentences and drawings that would only be copied. */
 function plainOf({ pieces, sizing }: Planned): Planned {
   return {
-    pieces: pieces.map(({ name, count, across, along, stock, net }) => ({
+    pieces: pieces.map(({ name, count, across, along, stock, net, thickness }) => ({
       name,
       count,
       across,
       along,
       ...(stock ? { stock } : {}),
       ...(net ? { net } : {}),
+      ...(thickness === undefined ? {} : { thickness }),
     })),
     ...(sizing ? { sizing: { grid: sizing.grid } } : {}),
   };

@@ -2,7 +2,7 @@ import { showFolded } from '@/components/folded/show';
 import { openModel, type Figures, type Model, type SealedModel, type SheetPlan, type Sizing } from '@/engine';
 import type { MySheets } from '@/features/sheets/my-sheets';
 import { hearSheets, keptSheets } from '@/features/sheets/sheet-keeper';
-import { planOn } from '@/features/sheets/stock-link';
+import { planOptions, readCutFrom } from '@/features/sheets/cut-from';
 import { articleFigures, markChanged } from './article-figures';
 import { sheetsWords } from './facts';
 import { factsHtml, fitsHtml, lastGoodHtml, closesWords, sizingHref, type Links } from './live-html';
@@ -11,14 +11,15 @@ import { panelFor } from './panel';
 import { bindPanel, showPanel, showSheets } from './panel-dom';
 import { createPlanClient } from './plan-client';
 import { createReaderStore, type ReaderState, type ReaderStore } from './reader-store';
-import { keepParams, readerView, readStock } from './reader-view';
+import { keepParams, readerView } from './reader-view';
 
 /** What the server puts into the page for the island. */
 export interface ProjectData {
   readonly model: SealedModel;
   readonly authors: Sizing;
   readonly asked: Sizing;
-  readonly stock: string;
+  /** The sheets, as a link says them. */
+  readonly cutFrom: string;
   /** The reader's sheets in their account; null without one: then the browser may keep some. */
   readonly sheets: MySheets | null;
   readonly path: string;
@@ -40,7 +41,7 @@ export function startReader(panel: HTMLElement): void {
   const store = createReaderStore(model, {
     sizing: data.asked,
     authors: data.authors,
-    stock: readStock(data.stock),
+    cutFrom: readCutFrom(new URLSearchParams(data.cutFrom), data.asked).value,
     sheets: data.sheets ?? keptSheets(),
   });
   const paint = painter(page, panel, model, data);
@@ -62,7 +63,7 @@ export function startReader(panel: HTMLElement): void {
   const kept = keptSheets();
   // The server knew the account's sheets and drew them; what this browser keeps it could not know.
   if (data.sheets === null && kept.length > 0)
-    showSheets(panel, readerView(model, painted.verdict, painted.stock), kept);
+    showSheets(panel, readerView(model, painted.verdict, painted.cutFrom), painted);
   const editor = panel.querySelector('[data-my-sheets]');
   if (data.sheets !== null && kept.length > 0 && editor) editor.textContent = 'My sheets: add those this browser kept';
   bindPanel(panel, page, store, { model, authors: data.authors, path: data.path });
@@ -100,26 +101,27 @@ function painter(page: HTMLElement, panel: HTMLElement, model: Model, data: Proj
   const parts = (name: string) => document.querySelectorAll<HTMLElement>(`[data-${name}]`);
   const put = (name: string, html: string) => parts(name).forEach((element) => morphInto(element, html, markChanged));
   const planner = createPlanClient();
-  const showPlan = (shown: Figures, plan: SheetPlan) => {
+  const showPlan = (shown: Figures, plan: SheetPlan, links: Links) => {
     put('facts', factsHtml(shown, plan, data.minutes));
-    put('fits', fitsHtml(shown, plan));
+    put('fits', fitsHtml(shown, plan, links));
     put('dock-closes', `${closesWords(shown)} · ${sheetsWords(plan)}`);
+    article.showPlan(shown, plan);
   };
 
   return (state) => {
-    const { verdict, typed, stock, sheets } = state;
-    const view = readerView(model, verdict, stock, WHILE_SIZING);
-    const links: Links = { model, authors: data.authors, path: data.path, keep: keepParams(stock, data.edition) };
+    const { verdict, typed, cutFrom } = state;
+    const view = readerView(model, verdict, cutFrom, WHILE_SIZING);
+    const links: Links = { model, authors: data.authors, path: data.path, keep: keepParams(cutFrom, data.edition) };
     const { shown } = verdict;
 
     document.documentElement.dataset.units = shown.sizing.units;
     article.show(shown);
-    showPlan(shown, view.plan);
+    showPlan(shown, view.plan, links);
     put('closes', closesWords(shown));
     put('dock-size', view.insideWords);
-    planner.think(shown, planOn(stock), view.plan, (plan) => {
-      showPlan(shown, plan);
-      showSheets(panel, { plan, stock }, sheets);
+    planner.think(shown, planOptions(cutFrom, shown.pieces), view.plan, (plan) => {
+      showPlan(shown, plan, links);
+      showSheets(panel, { plan, verdict }, state);
     });
     showFolded(page, model, shown);
 
@@ -130,7 +132,7 @@ function painter(page: HTMLElement, panel: HTMLElement, model: Model, data: Proj
       element.hidden = stale === '';
     });
     showPanel(panel, { view, panel: panelFor(model, verdict.figures), typed, links });
-    showSheets(panel, view, sheets);
+    showSheets(panel, view, state);
     remember(sizingHref(links, verdict.asked));
     say(panel, verdict.good ? `${view.insideWords} inside. ${closesWords(shown)}, ${view.sheetsWords}.` : '');
   };

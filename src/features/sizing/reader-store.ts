@@ -10,9 +10,9 @@ import {
   type Model,
   type Result,
   type Sizing,
-  type Stock,
   type Unit,
 } from '@/engine';
+import type { CutFrom, ReadCutFrom } from '@/features/sheets/cut-from';
 import type { MySheets } from '@/features/sheets/my-sheets';
 import { readingWords } from './reading-words';
 import { valueIn, withChoice, withValue } from './sizing-values';
@@ -25,7 +25,9 @@ export interface ReaderState {
   /** The newest sizing that can be made: what the page shows while a later one cannot. */
   readonly lastGood: Sizing;
   readonly typed: Typed;
-  readonly stock: Stock;
+  readonly cutFrom: CutFrom;
+  /** What was typed about the sheets and does not read. */
+  readonly cutTyped: ReadCutFrom['typed'];
   /** The sheets that the reader has. */
   readonly sheets: MySheets;
 }
@@ -40,21 +42,22 @@ export interface ReaderStore {
   choose(choice: string, option: string): void;
   units(units: Unit): void;
   grid(grid: GridId): void;
-  stock(stock: Stock): void;
+  cutFrom(read: ReadCutFrom): void;
   sheets(sheets: MySheets): void;
   ask(sizing: Sizing): void;
 }
 
 export function createReaderStore(
   model: Model,
-  start: { readonly sizing: Sizing; readonly authors: Sizing; readonly stock: Stock; readonly sheets?: MySheets },
+  start: { readonly sizing: Sizing; readonly authors: Sizing; readonly cutFrom: CutFrom; readonly sheets?: MySheets },
 ): ReaderStore {
   const first = judge(model, start.sizing, start.authors, { nearest: true });
   const $state = atom<ReaderState>({
     verdict: first,
     lastGood: first.shown.sizing,
     typed: {},
-    stock: start.stock,
+    cutFrom: start.cutFrom,
+    cutTyped: {},
     sheets: start.sheets ?? [],
   });
 
@@ -98,7 +101,7 @@ export function createReaderStore(
     choose: (choice, option) => ask(withChoice(current(), choice, option), $state.get().typed),
     units: (units) => ask(inUnits(current(), units), $state.get().typed),
     grid: (grid) => ask({ ...current(), grid }, $state.get().typed),
-    stock: (stock) => $state.set({ ...$state.get(), stock }),
+    cutFrom: ({ value, typed }) => $state.set({ ...$state.get(), cutFrom: value, cutTyped: typed }),
     sheets: (sheets) => $state.set({ ...$state.get(), sheets }),
   };
 }

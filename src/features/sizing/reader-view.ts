@@ -1,5 +1,5 @@
-import { evaluate, planSheets, STOCKS, type Figures, type Model, type SheetPlan, type Stock } from '@/engine';
-import { planOn, readStock as readLinked } from '@/features/sheets/stock-link';
+import { evaluate, planSheets, type Figures, type Model, type SheetPlan } from '@/engine';
+import { planOptions, writeCutFrom, type CutFrom } from '@/features/sheets/cut-from';
 import { insideWords, sheetsWords } from './facts';
 import { onWholeSteps } from './reader-store';
 import type { Verdict } from './verdict';
@@ -7,7 +7,7 @@ import type { Verdict } from './verdict';
 /** All that a reader's page works out from one verdict; the same on the server and in the browser. */
 export interface ReaderView {
   readonly verdict: Verdict;
-  readonly stock: Stock;
+  readonly cutFrom: CutFrom;
   readonly plan: SheetPlan;
   /** The asked size moved onto the ruler's whole steps, where that is another size and can be made. */
   readonly whole: Figures | null;
@@ -15,17 +15,17 @@ export interface ReaderView {
   readonly sheetsWords: string;
 }
 
-/** Cardstock is mostly sold in scrapbook squares. */
-export const USUAL_STOCK: Stock = STOCKS['12x12in'];
-
 /** With fewer `tries` than usual the plan comes sooner; the page looks for better ones afterwards. */
-export function readerView(model: Model, verdict: Verdict, stock: Stock, tries?: number): ReaderView {
-  const plan = planSheets(verdict.shown, { ...planOn(stock), ...(tries === undefined ? {} : { tries }) });
+export function readerView(model: Model, verdict: Verdict, cutFrom: CutFrom, tries?: number): ReaderView {
+  const plan = planSheets(verdict.shown, {
+    ...planOptions(cutFrom, verdict.shown.pieces),
+    ...(tries === undefined ? {} : { tries }),
+  });
   const moved = verdict.good ? onWholeSteps(model, verdict.asked, verdict.figures) : null;
   const whole = moved ? evaluate(model, moved) : null;
   return {
     verdict,
-    stock,
+    cutFrom,
     plan,
     whole: whole && whole.problems.length === 0 ? whole : null,
     insideWords: insideWords(verdict.shown),
@@ -33,15 +33,10 @@ export function readerView(model: Model, verdict: Verdict, stock: Stock, tries?:
   };
 }
 
-/** The sheet that a link says; the usual one for what does not read. */
-export function readStock(text: string | null): Stock {
-  return (text === null ? null : readLinked(text)) ?? USUAL_STOCK;
-}
-
-/** What stays in every link on the page beside the sizing: the sheet, and an edition that is not the newest. */
-export function keepParams(stock: Stock, edition: number | string | null): string {
+/** What stays in every link on the page beside the sizing: the sheets, and an edition that is not the newest. */
+export function keepParams(cutFrom: CutFrom, edition: number | string | null): string {
   const params = new URLSearchParams();
-  if (stock.id !== USUAL_STOCK.id) params.set('card', stock.id);
+  writeCutFrom(params, cutFrom);
   if (edition !== null) params.set('edition', String(edition));
   return params.toString();
 }

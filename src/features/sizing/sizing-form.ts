@@ -1,12 +1,24 @@
 import { evaluate, GRID_IDS, gridsFor, readValue, UNITS, type Model, type Sizing, type Unit } from '@/engine';
+import { readCutFrom, type ReadCutFrom } from '@/features/sheets/cut-from';
+import type { Links } from './live-html';
 import { fieldText } from './panel';
 import { inUnits, type Typed } from './reader-store';
+import { keepParams, type ReaderView } from './reader-view';
 import { readingWords } from './reading-words';
-import { readSizing, slugOf } from './sizing-link';
+import { readSizing, slugOf, writeSizing } from './sizing-link';
 import { valueIn, withChoice, withValue } from './sizing-values';
 
-/** The field that carries the sizing that the form was drawn at, as a link's query. */
+/** The field that carries what the form was drawn at, as a link’s query: the sizing and the sheets. */
 export const FROM = 'from';
+
+export function formFrom(
+  { model, authors }: Links,
+  { verdict, cutFrom }: Pick<ReaderView, 'verdict' | 'cutFrom'>,
+): string {
+  return [writeSizing(model, verdict.asked, authors), keepParams(cutFrom, null)]
+    .filter((part) => part !== '')
+    .join('&');
+}
 
 export interface FormReading {
   readonly sizing: Sizing;
@@ -27,7 +39,7 @@ export const isSizingForm = (params: URLSearchParams): boolean => params.has(FRO
  * units that stood beside the field, also when another unit is chosen in the same go.
  */
 export function readSizingForm(model: Model, params: URLSearchParams, usual: Sizing): FormReading {
-  const before = readSizing(model, new URLSearchParams(params.get(FROM) ?? ''), usual).sizing;
+  const before = readSizing(model, drawnAt(params), usual).sizing;
   const drawn = evaluate(model, before);
   let read = before;
   const typed: Record<string, Typed[string]> = {};
@@ -55,4 +67,11 @@ export function readSizingForm(model: Model, params: URLSearchParams, usual: Siz
   return { sizing: cut && gridsFor(sizing.units).includes(cut) ? { ...sizing, grid: cut } : sizing, typed };
 }
 
+/** Reads what the same form says of the sheets. */
+export function readSheetsForm(model: Model, params: URLSearchParams, usual: Sizing): ReadCutFrom {
+  const { units } = readSizing(model, drawnAt(params), usual).sizing;
+  return readCutFrom(params, { units, before: readCutFrom(drawnAt(params), { units }).value });
+}
+
+const drawnAt = (params: URLSearchParams): URLSearchParams => new URLSearchParams(params.get(FROM) ?? '');
 const isUnit = (text: string | null): text is Unit => UNITS.some((unit) => unit === text);

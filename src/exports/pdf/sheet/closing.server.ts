@@ -23,7 +23,7 @@ export function steps(pen: Pen, parent: Tag, flow: Flow, { steps: all }: SheetCo
 }
 
 /** What it takes besides the sheets: glue, ribbon, knobs. */
-export function materials(pen: Pen, parent: Tag, flow: Flow, { figures }: SheetContent): void {
+export function materials(pen: Pen, parent: Tag, flow: Flow, { figures, plan }: SheetContent): void {
   const rows = materialRows(figures);
   if (rows.length === 0) return;
   const { doc, type } = pen;
@@ -36,7 +36,7 @@ export function materials(pen: Pen, parent: Tag, flow: Flow, { figures }: SheetC
         tagged(doc, list, 'P', () => type.paragraph(lines, BODY, { x, top: y, leading: LEADING })),
     };
   });
-  flow.section(parent, 'What it takes', '', LEADING);
+  flow.section(parent, 'What it takes', plan.copies > 1 ? 'for one box' : '', LEADING);
   flow.columns(parent, blocks, { count: 2, gap: COLUMN_GAP, between: 2 });
 }
 

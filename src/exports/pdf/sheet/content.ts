@@ -6,7 +6,10 @@ export interface SheetContent {
   /** Who wrote it up, which edition, of which day; empty for a bare pattern. */
   readonly byline: readonly string[];
   readonly model: Model;
+  /** Pieces as they are cut: for all boxes of the plan, and joined ones in two parts. */
   readonly figures: Figures;
+  /** The one box, its pieces whole: what folds. */
+  readonly box: Figures;
   readonly plan: SheetPlan;
   readonly facts: readonly Fact[];
   /** `9 × 6 × 2 1/4 in inside, cut to the nearest 1/16 in` */

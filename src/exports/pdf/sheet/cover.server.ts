@@ -63,7 +63,7 @@ export function cover(pen: Pen, content: SheetContent, width: number): Block {
         top += tall[r] as number;
       });
       const scale = UNIT;
-      const folded = drawFolded(content.model, content.figures, {
+      const folded = drawFolded(content.model, content.box, {
         width: (PICTURE - 12) / scale,
         height: (height - 12) / scale,
       });

@@ -1,4 +1,4 @@
-import { cutsInWords, drawSheet, helpWithTooLarge, say, type Sentence } from '@/engine';
+import { cutsInWords, drawSheet, helpWithTooLarge, joiningInWords, say, type Sentence, type SheetPlan } from '@/engine';
 import { decoration, group, tagged, type Tag } from '../document.server';
 import { placeDrawing, SHEET_BORDER, UNIT, type Pen } from '../drawing.server';
 import type { Block, Flow } from '../flow.server';
@@ -23,9 +23,12 @@ export function plans(pen: Pen, parent: Tag, flow: Flow, content: SheetContent):
     const help = say(helpWithTooLarge(one), content.figures.sizing);
     return warning(pen, `${one.name} is too large for ${one.stock.name}. ${help}`, flow.width);
   });
-  const note = `${plan.stock.name}; straight cuts from edge to edge, in the order of their numbers`;
-  flow.section(parent, 'From the sheets', note, (large[0] ?? blocks[0])?.height ?? 0);
-  large.forEach((block) => flow.put(parent, block, 8));
+  const joined = plan.joined.map((one) => warning(pen, say(joiningInWords(one), content.figures.sizing), flow.width));
+  const first = [...large, ...joined, ...blocks][0];
+  const names = [...new Set(plan.sheets.map(({ stock }) => stock.name))];
+  const note = `${names.join(' and ') || plan.stock.name}; straight cuts from edge to edge, in the order of their numbers`;
+  flow.section(parent, 'From the sheets', note, first?.height ?? 0);
+  [...large, ...joined].forEach((block) => flow.put(parent, block, 8));
   if (alone) blocks.forEach((block) => flow.put(parent, block));
   else flow.columns(parent, blocks, { count: 2, gap: COLUMN_GAP, between: BETWEEN });
 }
@@ -37,7 +40,8 @@ function planBlock(
   { width, alone }: { readonly width: number; readonly alone: boolean },
 ): Block {
   const { units, grid } = figures.sizing;
-  const { across, along } = plan.stock;
+  const { stock, material } = plan.sheets[index] as SheetPlan['sheets'][number];
+  const { across, along } = stock;
   const wide = Math.min(WIDEST, width, (TALLEST * across) / along) / UNIT;
   const drawing = drawSheet(plan, index, { width: wide, units, grid });
   const list = numberedList(
@@ -47,7 +51,7 @@ function planBlock(
   );
   // The numbers of the cuts stand in the border, which is empty above and left of a sheet without cuts there.
   const [tall, inset] = [drawing.height * UNIT, SHEET_BORDER * UNIT];
-  const title = `Sheet ${index + 1} of ${plan.used}`;
+  const title = `Sheet ${index + 1} of ${plan.used}${plan.takes.length > 1 ? `, ${material}` : ''}`;
   return {
     height: HEAD_HEIGHT + (alone ? Math.max(tall - inset, list.height) : tall - inset + 4 + list.height),
     draw(parent, { x, y }) {

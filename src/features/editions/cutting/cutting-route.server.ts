@@ -1,7 +1,8 @@
 import type { APIContext } from 'astro';
 import { zipSync, strToU8 } from 'fflate';
-import type { PieceFigure } from '@/engine';
+import type { Figures, PieceFigure } from '@/engine';
 import { pieceLayout, rowLayout, type CuttingLayout } from '@/exports/cutting/layout';
+import { figuresAsCut } from '@/exports/as-cut';
 import { cuttingDxf } from '@/exports/dxf/cutting';
 import { cuttingSvg } from '@/exports/svg/cutting';
 import { loadMakeable } from '@/features/editions/paper/paper-route.server';
@@ -9,6 +10,7 @@ import { hasTag, notModified, publicHeaders, tagOf } from '@/features/editions/p
 import type { ReaderPage } from '@/features/editions/reader-page.server';
 import { problem } from '@/features/http/problem';
 import { takeTurn, tooMany } from '@/features/limits/limits.server';
+import { cutFromKey } from '@/features/sheets/cut-from';
 import { CUTTING_FORMATS, cuttingName, piecesByKey, readGlue, type CuttingFormat } from './piece-files';
 
 /** One piece by its key, all in one drawing, or each in a file of its own, all in a zip. */
@@ -33,7 +35,7 @@ export async function cuttingRoute(context: APIContext, file: CuttingFile): Prom
   if (page instanceof Response) return page;
   const { url, request, clientAddress } = context;
   const { edition, view } = page;
-  const figures = view.verdict.shown;
+  const figures = figuresAsCut(view.verdict.shown, { ...view.plan, copies: 1 });
   const options = { glue: readGlue(url.searchParams) };
   const piece = file.of === 'piece' ? piecesByKey(figures).get(file.key) : undefined;
   if (file.of === 'piece' && !piece) {
@@ -42,7 +44,7 @@ export async function cuttingRoute(context: APIContext, file: CuttingFile): Prom
       code: 'not-found',
     });
   }
-  const tag = tagOf(['cutting', edition.id, JSON.stringify([file, options, figures.sizing])]);
+  const tag = tagOf(['cutting', edition.id, JSON.stringify([file, options, cutFromKey(view.cutFrom), figures.sizing])]);
   if (hasTag(request, tag)) return notModified(tag);
   const turn = await takeTurn('cutting', { ip: clientAddress });
   if (!turn.ok) return tooMany(turn);
@@ -50,7 +52,7 @@ export async function cuttingRoute(context: APIContext, file: CuttingFile): Prom
   const extension = file.of === 'zip' ? 'zip' : file.format;
   const body =
     file.of === 'zip'
-      ? zipOf(page, options)
+      ? zipOf(page, figures, options)
       : piece
         ? drawn(pieceLayout(piece, options), file.format, titleOf(page, piece))
         : drawn(rowLayout(figures.pieces, options), file.format, titleOf(page));
@@ -70,9 +72,8 @@ const drawn = (layout: CuttingLayout, format: CuttingFormat, title: string): str
 const titleOf = ({ edition }: ReaderPage, piece?: PieceFigure): string =>
   `${edition.title}: ${piece ? piece.name : 'all pieces'}`;
 
-function zipOf(page: ReaderPage, options: { readonly glue: boolean }): Uint8Array<ArrayBuffer> {
-  const { edition, view } = page;
-  const figures = view.verdict.shown;
+function zipOf(page: ReaderPage, figures: Figures, options: { readonly glue: boolean }): Uint8Array<ArrayBuffer> {
+  const { edition } = page;
   const files = [...piecesByKey(figures)].flatMap(([key, piece]) =>
     CUTTING_FORMATS.map((format) => [
       cuttingName(edition.slug, figures, key, format),

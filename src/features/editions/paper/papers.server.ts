@@ -7,6 +7,7 @@ import type { ReaderPage } from '@/features/editions/reader-page.server';
 import { publicHeaders, hasTag, notModified, tagOf } from '@/features/editions/public-answer';
 import { problem } from '@/features/http/problem';
 import { takeTurn, tooMany } from '@/features/limits/limits.server';
+import { cutFromKey } from '@/features/sheets/cut-from';
 import { sizingHref } from '@/features/sizing/live-html';
 import { oneAtATime } from '@/features/uploads/one-at-a-time';
 import { paperCache, PaperCache } from './paper-cache.server';
@@ -36,7 +37,7 @@ export async function answerPaper(
 ): Promise<Response> {
   const { edition, view } = page;
   const { sizing } = view.verdict.shown;
-  const parts = [kind, paper, edition.id, edition.author.name, view.stock.id, sizing];
+  const parts = [kind, paper, edition.id, edition.author.name, cutFromKey(view.cutFrom), sizing];
   const key = PaperCache.keyOf(parts);
   const tag = tagOf([key]);
   if (hasTag(request, tag)) return notModified(tag);

@@ -1,11 +1,12 @@
 import { orderOf, show, showValue, type Figures, type Model, type SheetPlan } from '@/engine';
+import { figuresAsCut } from '@/exports/as-cut';
 import type { Fact, SheetContent, StepLine } from '@/exports/pdf/sheet/content';
 import type { Edition } from '@/features/editions/editions.server';
 import { dayWords } from '@/features/editions/dates';
 import { cutWords, departureSize, insideWords, sheetsWords, sizesTogether, timeWords } from '@/features/sizing/facts';
 import { panelFor } from '@/features/sizing/panel';
-import type { BlockNode, InlineNode, WriteUp } from '@/writeup/document';
 import { holds, inlinesShown, numberSteps } from '@/writeup/condition';
+import type { BlockNode, InlineNode, WriteUp } from '@/writeup/document';
 import { liveParts, showLive, type LiveFigures } from '@/writeup/live';
 import { CAUTIONS } from '../sheet/cautions';
 
@@ -47,9 +48,11 @@ export function patternSheet(source: SheetSource): SheetContent {
 }
 
 function common(source: SheetSource, minutes: number | null) {
-  const { figures } = source;
+  const { figures, plan } = source;
   return {
     ...source,
+    figures: figuresAsCut(figures, plan),
+    box: figures,
     facts: factsOf(source, minutes),
     sizeWords: `${insideWords(figures)} inside, cut to ${cutWords(figures).to}`,
   };

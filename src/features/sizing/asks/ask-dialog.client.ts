@@ -1,8 +1,10 @@
-import type { SealedModel, Solved, Stock } from '@/engine';
+import type { SealedModel, Solved } from '@/engine';
+import { CUT_FIELD, readCutFrom, type CutFrom } from '@/features/sheets/cut-from';
+import { readStock } from '@/features/sheets/stock-link';
 import type { Links } from '../live-html';
 import { morphInto } from '../morph';
 import type { ReaderStore } from '../reader-store';
-import { keepParams, readStock } from '../reader-view';
+import { keepParams } from '../reader-view';
 import { readSizing } from '../sizing-link';
 import {
   answerPile,
@@ -38,7 +40,7 @@ export function openAsk(ask: Ask, page: AskPage): void {
   const title = dialog.querySelector('h2');
   if (!form || !place || !title) return;
   const { verdict, sheets } = store.$state.get();
-  let stock: Stock = store.$state.get().stock;
+  let cutFrom: CutFrom = store.$state.get().cutFrom;
   let waiting: ReturnType<typeof setTimeout> | undefined;
   let worker: Worker | null = null;
   // Whatever was listened for goes when the dialog closes.
@@ -53,9 +55,9 @@ export function openAsk(ask: Ask, page: AskPage): void {
   };
 
   const state = (faults: AskFaults = {}): AskState => ({
-    links: { ...page.links, keep: keepParams(stock, edition) },
+    links: { ...page.links, keep: keepParams(cutFrom, edition) },
     asked: verdict.shown.sizing,
-    stock,
+    cutFrom,
     sheets,
     edition,
     typed: typedIn(form),
@@ -85,9 +87,9 @@ export function openAsk(ask: Ask, page: AskPage): void {
     if (ask === 'fit') {
       const thing = readThing(model, verdict.shown.sizing.units, field);
       faults(thing.ok ? {} : thing.faults);
-      if (thing.ok) show(answerThing(model, verdict.shown.sizing, thing.value, stock));
+      if (thing.ok) show(answerThing(model, verdict.shown.sizing, thing.value, cutFrom));
     } else {
-      const pile = readPile(stock, field);
+      const pile = readPile(cutFrom, field);
       faults(pile.ok ? {} : pile.faults);
       if (pile.ok) waitFor(pile.value);
     }
@@ -108,15 +110,16 @@ export function openAsk(ask: Ask, page: AskPage): void {
     (event) => {
       clearTimeout(waiting);
       const input = event.target as HTMLInputElement | HTMLSelectElement;
-      if (input.name === 'card') {
-        stock = readStock(input.value);
+      if (input.name === CUT_FIELD.card) {
+        const stock = readStock(input.value) ?? cutFrom.stock;
+        cutFrom = { ...cutFrom, stock };
         // Another pile has another number.
         const count = form.querySelector<HTMLInputElement>(`[name=${COUNT}]`);
         const mine = sheets.find(({ card }) => card === stock.id);
         if (count && mine) count.value = String(mine.count);
       }
       // Until every size of the thing is there nothing is amiss.
-      const empty = [...form.querySelectorAll<HTMLInputElement>('input:not([type=hidden])')].some(
+      const empty = [...form.querySelectorAll<HTMLInputElement>('input:not([type=hidden], [type=radio])')].some(
         ({ value }) => value.trim() === '',
       );
       if (!empty) waiting = setTimeout(answer, TYPING);
@@ -136,8 +139,9 @@ export function openAsk(ask: Ask, page: AskPage): void {
         event.preventDefault();
         const params = new URL(use.href).searchParams;
         dialog.close();
-        store.stock(readStock(params.get('card')));
-        store.ask(readSizing(model, params, page.links.authors).sizing);
+        const { sizing } = readSizing(model, params, page.links.authors);
+        store.cutFrom(readCutFrom(params, sizing));
+        store.ask(sizing);
       } else if (target.closest('[data-leave]')) {
         event.preventDefault();
         dialog.close();
@@ -151,5 +155,7 @@ export function openAsk(ask: Ask, page: AskPage): void {
 
 const typedIn = (form: Element): Record<string, string> =>
   Object.fromEntries(
-    [...form.querySelectorAll<HTMLInputElement>('input:not([type=hidden])')].map(({ name, value }) => [name, value]),
+    [...form.querySelectorAll<HTMLInputElement>('input:not([type=hidden], [type=radio]:not(:checked))')].map(
+      ({ name, value }) => [name, value],
+    ),
   );

@@ -12,15 +12,16 @@ import {
   say,
   type Figures,
   type Model,
+  type PlanOptions,
   type SheetPlan,
   type Sizing,
   type Solved,
-  type Stock,
   type Unit,
 } from '@/engine';
-import { cardUsed, MOST_OF_ONE } from '@/features/sheets/my-sheets';
-import { planOn } from '@/features/sheets/stock-link';
+import { cardUsed, isCount, MOST_OF_ONE } from '@/features/sheets/my-sheets';
+import { CUT_FIELD, planOptions, readCutFrom, type CutFrom } from '@/features/sheets/cut-from';
 import { slugOf } from '../sizing-link';
+import { asItStands, otherBoxes, waysUp, type Offer, type Thing } from './thing';
 
 /** Two ways to ask for a size: round a thing that must go in, and as large as one's sheets allow. */
 export type Ask = 'fit' | 'largest';
@@ -31,10 +32,11 @@ export type Answer =
       readonly ok: true;
       readonly figures: Figures;
       readonly plan: SheetPlan;
+      readonly cutFrom: CutFrom;
       /** What keeps it from being larger; null where that was not asked. */
       readonly stops: string | null;
     }
-  | { readonly ok: false; readonly reason: string };
+  | { readonly ok: false; readonly reason: string; readonly offers: readonly Offer[] };
 
 /** Sentences by the name of their field. */
 export type AskFaults = Readonly<Record<string, string>>;
@@ -43,17 +45,11 @@ export type Field = (name: string) => string;
 
 // ── A thing ──────────────────────────────────────────────────────────────────────────────────────────────────────────
 
-export interface Thing {
-  /** Millimetres, in the order of the box's finished inside sizes. */
-  readonly sizes: readonly number[];
-  /** Room on every side, millimetres. */
-  readonly ease: number;
-}
-
 /** Fields of the forms; no measure of a pattern is called so. */
 export const EASE = 'thing-ease';
+export const STANDS = 'thing-stands';
 export const COUNT = 'pile-sheets';
-export const COPIES = 'pile-boxes';
+export const COPIES = CUT_FIELD.copies;
 export const thingField = (name: string): string => `thing-${slugOf(name)}`;
 export const thingNames = (model: Model): readonly string[] => model.finished.inside.map(({ def }) => def.name);
 /** Room for a finger beside a tin. */
@@ -76,41 +72,36 @@ export function readThing(model: Model, units: Unit, field: Field): AskRead<Thin
   });
   const ease = length(EASE, field(EASE).trim() === '' ? usualEase(units) : field(EASE));
   if (ease < 0 || ease > MOST_EASE) faults[EASE] = `Ease is from nothing to ${MOST_EASE} mm (about 4 in).`;
-  return Object.keys(faults).length > 0 ? { ok: false, faults } : { ok: true, value: { sizes, ease } };
+  const up = waysUp(model).find((way) => slugOf(thingNames(model)[way] ?? '') === field(STANDS)) ?? null;
+  return Object.keys(faults).length > 0 ? { ok: false, faults } : { ok: true, value: { sizes, ease, up } };
 }
 
 /** The box round a thing. That its pieces are too large for the sheet is said by the plan; the size is an answer all the same. */
-export function answerThing(model: Model, base: Sizing, { sizes, ease }: Thing, stock: Stock): Answer {
-  const solved = around(model, base, sizes, ease);
-  if (!solved.ok) return solved;
+export function answerThing(model: Model, base: Sizing, thing: Thing, cutFrom: CutFrom): Answer {
+  const solved = around(model, base, asItStands(model, thing), thing.ease);
+  if (!solved.ok) return { ...solved, offers: otherBoxes(model, base, thing) };
   const figures = evaluate(model, solved.sizing);
-  return { ok: true, figures, plan: planSheets(figures, planOn(stock)), stops: null };
+  return { ok: true, figures, plan: planSheets(figures, planOptions(cutFrom, figures.pieces)), cutFrom, stops: null };
 }
 
 // ── One's sheets ─────────────────────────────────────────────────────────────────────────────────────────────────────
 
 export interface Pile {
-  readonly stock: Stock;
+  readonly cutFrom: CutFrom;
   /** Sheets of card that may be used. */
   readonly count: number;
-  /** How many of the whole box. */
-  readonly copies: number;
 }
 
-/** More boxes at once keep a phone thinking too long. */
-export const MOST_COPIES = 12;
-
-export function readPile(stock: Stock, field: Field): AskRead<Pile> {
+export function readPile(cutFrom: CutFrom, field: Field): AskRead<Pile> {
+  const text = field(COUNT).trim();
+  const count = text === '' ? 1 : Number(text);
+  // Without a length among them the units do not matter.
+  const boxes = readCutFrom(new URLSearchParams({ [COPIES]: field(COPIES) }), { units: 'mm', before: cutFrom });
   const faults: Record<string, string> = {};
-  const whole = (name: string, most: number, usual: number): number => {
-    const text = field(name).trim();
-    const n = text === '' ? usual : Number(text);
-    if (!Number.isInteger(n) || n < 1 || n > most) faults[name] = `Write a whole number from 1 to ${most}.`;
-    return n;
-  };
-  const count = whole(COUNT, MOST_OF_ONE, 1);
-  const copies = whole(COPIES, MOST_COPIES, 1);
-  return Object.keys(faults).length > 0 ? { ok: false, faults } : { ok: true, value: { stock, count, copies } };
+  if (!isCount(count)) faults[COUNT] = `Write a whole number from 1 to ${MOST_OF_ONE}.`;
+  const fault = boxes.typed[COPIES];
+  if (fault) faults[COPIES] = fault.sentence;
+  return Object.keys(faults).length > 0 ? { ok: false, faults } : { ok: true, value: { cutFrom: boxes.value, count } };
 }
 
 /** The largest size of the box's shape that comes out of a pile. `tries` bounds the planning of every size that is tried. */
@@ -125,14 +116,14 @@ export function largestFrom(model: Model, base: Sizing, pile: Pile, tries?: numb
   });
 }
 
-function comesOutOf(model: Model, sizing: Sizing, { stock, count, copies }: Pile, tries?: number): boolean {
+function comesOutOf(model: Model, sizing: Sizing, { cutFrom, count }: Pile, tries?: number): boolean {
   const { pieces } = evaluate(model, sizing);
+  const { stock, margin, copies } = cutFrom;
   const card = pieces.filter((piece) => piece.stock === 'card');
   const area = card.reduce((sum, piece) => sum + piece.across * piece.along * piece.count * copies, 0);
-  if (moreThan(area, stock.across * stock.along * count)) return false;
-  const options = { ...planOn(stock), copies, ...(tries === undefined ? {} : { tries }) };
+  if (moreThan(area, (stock.across - 2 * margin) * (stock.along - 2 * margin) * count)) return false;
   // The first plan that is good enough is enough.
-  for (const better of planning({ pieces: card, sizing }, options)) {
+  for (const better of planning({ pieces: card, sizing }, pileOptions(cutFrom, card, tries))) {
     const plan = better?.();
     if (plan && plan.tooLarge.length > 0) return false;
     if (plan && cardUsed(plan) <= count) return true;
@@ -140,16 +131,20 @@ function comesOutOf(model: Model, sizing: Sizing, { stock, count, copies }: Pile
   return false;
 }
 
+const pileOptions = (cutFrom: CutFrom, pieces: Figures['pieces'], tries: number | undefined): PlanOptions => ({
+  ...planOptions(cutFrom, pieces),
+  ...(tries === undefined ? {} : { tries }),
+});
+
 /** What was found, with its plan and what keeps it from being a step larger. */
 export function answerPile(model: Model, solved: Solved, pile: Pile, tries?: number): Answer {
-  if (!solved.ok) return solved;
+  if (!solved.ok) return { ...solved, offers: [] };
   const figures = evaluate(model, solved.sizing);
-  const { stock, copies } = pile;
-  const options = { ...planOn(stock), copies, ...(tries === undefined ? {} : { tries }) };
   return {
     ok: true,
     figures,
-    plan: planSheets(figures, options),
+    plan: planSheets(figures, pileOptions(pile.cutFrom, figures.pieces, tries)),
+    cutFrom: pile.cutFrom,
     stops: whatStops(model, figures, pile, tries),
   };
 }
@@ -158,7 +153,7 @@ export function answerPile(model: Model, solved: Solved, pile: Pile, tries?: num
 function whatStops(
   model: Model,
   { sizing, finished }: Figures,
-  { stock, count, copies }: Pile,
+  { cutFrom, count }: Pile,
   tries?: number,
 ): string | null {
   const [first] = finished.inside;
@@ -172,10 +167,10 @@ function whatStops(
   );
   if (!larger.ok) return larger.reason;
   const figures = evaluate(model, larger.sizing);
-  const plan = planSheets(figures, { ...planOn(stock), copies, ...(tries === undefined ? {} : { tries }) });
+  const plan = planSheets(figures, pileOptions(cutFrom, figures.pieces, tries));
+  const { name } = cutFrom.stock;
   const [large] = plan.tooLarge;
-  if (large)
-    return `A step larger, ${large.name} no longer fits ${stock.name}. ${say(helpWithTooLarge(large), sizing)}`;
+  if (large) return `A step larger, ${large.name} no longer fits ${name}. ${say(helpWithTooLarge(large), sizing)}`;
   const used = cardUsed(plan);
-  return used > count ? `A step larger, it takes ${used} sheets of ${stock.name}.` : null;
+  return used > count ? `A step larger, it takes ${used} sheets of ${name}.` : null;
 }
