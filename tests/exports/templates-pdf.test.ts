@@ -9,11 +9,11 @@ import { nodesOf, readPdf, type ReadPage, type ReadPath } from './read-pdf';
 const DPI = 600;
 const PIXEL = 25.4 / DPI;
 
-const templates = async (pattern: Pattern, paper: PaperId, values: Sizing['values'] = {}) => {
+const templates = (pattern: Pattern, paper: PaperId, values: Sizing['values'] = {}) => {
   const compiled = compilePattern(pattern);
   if (!compiled.ok) throw new Error(JSON.stringify(compiled.faults));
   const figures = evaluate(compiled.value, { ...usualSizing(compiled.value), values });
-  const bytes = await templatesPdf(
+  const bytes = templatesPdf(
     { title: pattern.name, byline: [], figures, sizeWords: '', date: new Date('2031-03-14T09:30:00Z') },
     paper,
   );
@@ -73,10 +73,10 @@ const isSquare = (path: ReadPath, side: number) => {
 };
 
 describe.each(['a4', 'letter'] as const)('templates on %s', (paper) => {
-  test('carry a square of 2 in and one of 50 mm on every page, true to 0.1 mm at 600 dpi', async () => {
+  test('carry a square of 2 in and one of 50 mm on every page, true to 0.1 mm at 600 dpi', () => {
     // A disc of 400 mm takes several pages, one of 100 mm a single one.
     for (const values of [{ width: 100 }, { width: 400 }]) {
-      const { pages } = await templates(DISC, paper, values);
+      const { pages } = templates(DISC, paper, values);
       for (const page of pages) {
         for (const side of [50.8, 50]) {
           const square = page.paths.find((path) => isSquare(path, side) && path.points.length === 4) as ReadPath;
@@ -90,8 +90,8 @@ describe.each(['a4', 'letter'] as const)('templates on %s', (paper) => {
     }
   });
 
-  test('draw a circle of 100 mm round, true to 0.1 mm in every direction at 600 dpi', async () => {
-    const { pages } = await templates(DISC, paper);
+  test('draw a circle of 100 mm round, true to 0.1 mm in every direction at 600 dpi', () => {
+    const { pages } = templates(DISC, paper);
     const [page] = pages as [ReadPage];
     const circle = page.paths.find((path) => {
       const { left, right } = bounds(path);
@@ -109,9 +109,9 @@ describe.each(['a4', 'letter'] as const)('templates on %s', (paper) => {
     expect(Math.abs(y2 - y1 - 100)).toBeLessThan(0.1);
   });
 
-  test('draw a folded card at its size, the fold in the middle', async () => {
+  test('draw a folded card at its size, the fold in the middle', () => {
     // Two panels of 4 in: 203.2 mm across; 6 in = 152.4 mm along. On A4 (190 mm inside the margins) it lies turned.
-    const { pages } = await templates(FOLDER, paper);
+    const { pages } = templates(FOLDER, paper);
     expect(pages).toHaveLength(1);
     const paths = pages[0]?.paths ?? [];
     const outline = paths.map(bounds).find(({ left, right, top, bottom }) => {
@@ -130,8 +130,8 @@ describe.each(['a4', 'letter'] as const)('templates on %s', (paper) => {
 });
 
 describe('a piece larger than a page', () => {
-  test('is shown in parts whose crosses meet at the same place of the piece', async () => {
-    const { pages, structure } = await templates(DISC, 'a4', { width: 400 });
+  test('is shown in parts whose crosses meet at the same place of the piece', () => {
+    const { pages, structure } = templates(DISC, 'a4', { width: 400 });
     // 190 × 215.2 mm of a page, neighbours sharing 10 mm: (400 − 10) / 180 and (400 − 10) / 205.2 give 3 × 2.
     expect(pages).toHaveLength(6);
     const names = nodesOf(structure)
@@ -158,11 +158,11 @@ describe('a piece larger than a page', () => {
   });
 });
 
-test('the same content gives the same bytes', async () => {
+test('the same content gives the same bytes', () => {
   const compiled = compilePattern(FOLDER);
   if (!compiled.ok) throw new Error('FOLDER does not compile');
   const figures = evaluate(compiled.value, usualSizing(compiled.value));
   const content = { title: 'Folder', byline: [], figures, sizeWords: '', date: new Date('2031-03-14T09:30:00Z') };
-  const [one, two] = [await templatesPdf(content, 'a4'), await templatesPdf(content, 'a4')];
+  const [one, two] = [templatesPdf(content, 'a4'), templatesPdf(content, 'a4')];
   expect(Buffer.compare(one, two)).toBe(0);
 });

@@ -2,7 +2,8 @@ import PDFDocument from 'pdfkit';
 import { STOCKS } from '@/engine';
 import { esc } from '../escape';
 import type { PaperId } from '../paper';
-import { readFont, SUBSETS, WEIGHTS, type Subset, type Weight } from './fonts.server';
+import { layoutsOf, readFont, SUBSETS, WEIGHTS, type Subset, type Weight } from './fonts.server';
+import { gatherBytes, writeInStretches } from './writing.server';
 
 /** Points in a millimetre. */
 export const MM = 72 / 25.4;
@@ -28,6 +29,8 @@ export interface Paper {
   /** Width and height of a page, in points. */
   readonly width: number;
   readonly height: number;
+  /** The file, once the document has ended. */
+  bytes(): Uint8Array;
 }
 
 export const fontName = (weight: Weight, subset: Subset): string => `${subset}-${weight}`;
@@ -58,21 +61,31 @@ export function openDocument({ paper, title, author, subject, date }: DocumentOp
       CreationDate: date,
     },
   });
+  const bytes = gatherBytes(doc);
   askForTrueSize(doc);
+  writeInStretches(doc);
   escapeMetadata(doc, { title, author, subject, date });
   for (const weight of WEIGHTS) {
-    for (const subset of SUBSETS)
+    for (const subset of SUBSETS) {
       doc.registerFont(fontName(weight, subset), readFont(weight, subset) as unknown as PDFKit.Mixins.PDFFontSource);
+      doc.font(fontName(weight, subset));
+      rememberLayouts(doc, weight, subset);
+    }
   }
   const root = doc.struct('Document');
   doc.addStructure(root);
-  return { doc, root, width, height };
+  return { doc, root, width, height, bytes };
 }
 
 /** The library has no public way to say it. */
 function askForTrueSize(doc: Doc): void {
   const catalogue = (doc as unknown as { _root: { data: { ViewerPreferences: { data: object } } } })._root;
   Object.assign(catalogue.data.ViewerPreferences.data, { PrintScaling: 'None', PickTrayByPDFSize: true });
+}
+
+/** The library forgets how words are laid out at the end of each document. */
+function rememberLayouts(doc: Doc, weight: Weight, subset: Subset): void {
+  Object.assign((doc as unknown as { _font: object })._font, { layoutCache: layoutsOf(weight, subset) });
 }
 
 /** The library writes titles into the file's XML as they are; a title with `<` or `&` would break it. */
@@ -99,15 +112,10 @@ function escapeMetadata(doc: Doc, { title, author, subject, date }: Omit<Documen
 }
 
 /** Ends the document and gives its bytes. */
-export function bytesOf({ doc, root }: Paper): Promise<Uint8Array> {
+export function bytesOf({ doc, root, bytes }: Paper): Uint8Array {
   root.end();
-  return new Promise((resolve, reject) => {
-    const parts: Uint8Array[] = [];
-    doc.on('data', (part: Uint8Array) => parts.push(part));
-    doc.on('end', () => resolve(Buffer.concat(parts)));
-    doc.on('error', reject);
-    doc.end();
-  });
+  doc.end();
+  return bytes();
 }
 
 export interface TagOptions {

@@ -27,6 +27,19 @@ export function readFont(weight: Weight, subset: Subset): ReadFont {
   return font;
 }
 
+/** Words that are kept with the places of their letters, of each font; a sheet has some five hundred in all. */
+const MOST_WORDS = 5000;
+const layouts = new Map<string, Record<string, unknown>>();
+
+/** How words of a font are laid out, for all documents: most words of a sheet stand on every other sheet too. */
+export function layoutsOf(weight: Weight, subset: Subset): Record<string, unknown> {
+  const name = `${subset}-${weight}`;
+  let known = layouts.get(name);
+  if (!known || Object.keys(known).length > MOST_WORDS)
+    layouts.set(name, (known = Object.create(null) as Record<string, unknown>));
+  return known;
+}
+
 /** The library takes a font that is read already, and has no other way to read one than to begin a document. */
 function parse(file: Buffer): ReadFont {
   const doc = new PDFDocument({ autoFirstPage: false, font: null as unknown as string }).font(file);

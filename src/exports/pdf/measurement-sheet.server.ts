@@ -25,7 +25,7 @@ const MOST_TICKS = 8;
  * The measurement sheet on paper: what is made at which size, cut list, scores, every piece drawn and said, the sheets and their
  * cuts, the steps in short, cautions, and squares that show whether it printed at true size. The same content gives the same bytes.
  */
-export function measurementPdf(content: SheetContent, paper: PaperId): Promise<Uint8Array> {
+export function measurementPdf(content: SheetContent, paper: PaperId): Uint8Array {
   const document = openDocument({
     paper,
     title: `${content.title}: measurement sheet`,

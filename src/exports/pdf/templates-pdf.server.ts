@@ -29,7 +29,7 @@ const LETTER = { wide: 8, tall: 13 } as const;
 const MARK = 2.2;
 
 /** Every piece at true size, on as few pages as it takes. The same content gives the same bytes. */
-export function templatesPdf(content: TemplatesContent, paper: PaperId): Promise<Uint8Array> {
+export function templatesPdf(content: TemplatesContent, paper: PaperId): Uint8Array {
   const document = openDocument({
     paper,
     title: `${content.title}: templates`,

@@ -1,5 +1,6 @@
 import { fontName, type Doc } from './document.server';
 import { readFont, SUBSETS, type Subset, type Weight } from './fonts.server';
+import { writeText } from './writing.server';
 
 /** Type of one run of text; sizes in points. */
 export interface Type {
@@ -37,15 +38,18 @@ export const CAPS = 0.7;
 const NARROW = /[\u2009\u200a\u202f]/u;
 const NARROW_SIZE = 0.5;
 const MISSING_WIDTH = 0.6;
+/** Words by size and weight, for all documents: a sheet has some five hundred, and most stand on every other sheet too. */
+const known = new Map<string, Word>();
+const MOST_WORDS = 10_000;
 
 /**
  * Sets text: what the fonts at hand cannot draw becomes an empty box that still copies and reads aloud as it was written;
  * a whole number and its fraction stand close, with a real space between them.
  */
 export class Typesetter {
-  readonly #known = new Map<string, Word>();
-
-  constructor(private readonly doc: Doc) {}
+  constructor(private readonly doc: Doc) {
+    if (known.size > MOST_WORDS) known.clear();
+  }
 
   /** How wide it is on one line, in points. */
   width(words: Words | string, type: Type): number {
@@ -81,10 +85,11 @@ export class Typesetter {
     const shift = place.anchor === 'middle' ? set.width / 2 : place.anchor === 'end' ? set.width : 0;
     let x = place.x - shift;
     for (const stretch of set.stretches) {
-      if (stretch.subset === null) this.#box(stretch, x, place.baseline, type.colour);
-      else {
-        this.doc.font(fontName(stretch.weight, stretch.subset)).fontSize(stretch.size).fillColor(type.colour);
-        this.doc.text(stretch.text, x, place.baseline, { lineBreak: false, baseline: 'alphabetic' });
+      if (stretch.subset === null) {
+        this.#box(stretch, x, place.baseline, type.colour);
+      } else {
+        const look = { font: fontName(stretch.weight, stretch.subset), size: stretch.size, colour: type.colour };
+        writeText(this.doc, stretch.text, look, { x, baseline: place.baseline });
       }
       x += stretch.width;
     }
@@ -121,8 +126,8 @@ export class Typesetter {
 
   #word(text: string, size: number, weight: Weight): Word {
     const key = `${size} ${weight} ${text}`;
-    let word = this.#known.get(key);
-    if (!word) this.#known.set(key, (word = this.#cut(text, size, weight)));
+    let word = known.get(key);
+    if (!word) known.set(key, (word = this.#cut(text, size, weight)));
     return word;
   }
 
@@ -224,8 +229,12 @@ const asWord = (stretches: readonly Stretch[]): Word => ({
   width: stretches.reduce((sum, one) => sum + one.width, 0),
 });
 
+/** What nearly all of a sheet is written in. */
+const PLAIN = /^[ -~\u00a0\u00b7\u00d7\u202f\u2044]*$/u;
+
 /** Fractions as numerator, slash and denominator, marks of feet and inches as the fonts have them, nothing that only steers. */
 function readable(text: string): string {
+  if (PLAIN.test(text)) return text;
   return (
     text
       .normalize('NFC')
