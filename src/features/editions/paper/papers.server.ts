@@ -63,12 +63,12 @@ export async function answerPaper(
   });
 }
 
-function madeOnce(key: string, work: () => Promise<Uint8Array>): Promise<Uint8Array | null> {
+function madeOnce(key: string, work: () => Uint8Array): Promise<Uint8Array | null> {
   const known = making.get(key);
   if (known) return known;
   const made = inTurn(async () => {
     await setImmediate();
-    const bytes = await work();
+    const bytes = work();
     await paperCache.put(key, bytes);
     return bytes;
   }).finally(() => making.delete(key));
@@ -76,7 +76,7 @@ function madeOnce(key: string, work: () => Promise<Uint8Array>): Promise<Uint8Ar
   return made;
 }
 
-function make({ edition, model, view, links }: ReaderPage, kind: PaperKind, paper: PaperId): Promise<Uint8Array> {
+function make({ edition, model, view, links }: ReaderPage, kind: PaperKind, paper: PaperId): Uint8Array {
   const figures = view.verdict.shown;
   const address = `${config.siteUrl}${sizingHref(links, figures.sizing)}`;
   const content = editionSheet({ model, figures, plan: view.plan }, edition, address);
