@@ -244,7 +244,7 @@ async function run(): Promise<number> {
   const options = readSheets(figures, values);
   const { copies } = options;
   const paper = oneOf('The paper', values.paper ?? (values.units === 'in' ? 'letter' : 'a4'), PAPERS);
-  const written = (as: (typeof FORMATS)[number]): string | Promise<Uint8Array> => {
+  const written = (as: (typeof FORMATS)[number]): string | Uint8Array => {
     if (as === 'pdf') {
       const content = patternSheet({ model, figures, plan: planSheets(figures, options) });
       return values.templates ? templatesPdf(content, paper) : measurementPdf(content, paper);
@@ -257,7 +257,7 @@ async function run(): Promise<number> {
       ? `${JSON.stringify(figuresJson(model, figures, options), null, 2)}\n`
       : measurementText(model, figures, options);
   };
-  put(await written(format), values.out);
+  put(written(format), values.out);
   return figures.problems.length > 0 ? 1 : 0;
 }
 
