@@ -68,6 +68,33 @@ describe('migrating', () => {
     expect(copy.$client.prepare("SELECT 1 FROM sqlite_master WHERE name = 'more'").get()).toBeUndefined();
   });
 
+  it('keeps what stands in each project as its first revision', () => {
+    const before = join(temporary(), 'drizzle');
+    cpSync('drizzle', before, { recursive: true });
+    const file = join(before, 'meta/_journal.json');
+    const journal = JSON.parse(readFileSync(file, 'utf8'));
+    journal.entries = journal.entries.filter(({ idx }: { idx: number }) => idx < 5);
+    writeFileSync(file, JSON.stringify(journal));
+    const database = openDatabase(':memory:');
+    migrateDatabase(database, { folder: before });
+    database.$client.exec(ADD_PERSON);
+    database.$client.exec(`
+      INSERT INTO project (id, author_id, slug, title, minutes, pattern, sizing, write_up, revision, updated_at)
+        VALUES ('p', 'u', 'box', 'A “box”', 20, '{"a":[1]}', '{"units":"in"}', '{"version":1}', 48, 1700000000000)`);
+    migrateDatabase(database);
+    const kept = database.$client.prepare('SELECT n, state, kind, saved_by, saved_at FROM revision').all();
+    expect(kept).toEqual([{ n: 48, kind: 'saved', saved_by: 'u', saved_at: 1700000000000, state: expect.any(String) }]);
+    expect(JSON.parse((kept[0] as { state: string }).state)).toEqual({
+      title: 'A “box”',
+      summary: '',
+      minutes: 20,
+      hero: null,
+      pattern: { a: [1] },
+      sizing: { units: 'in' },
+      writeUp: { version: 1 },
+    });
+  });
+
   it('refuses data from a newer version', () => {
     const database = testDatabase();
     migrateDatabase(database, { folder: migrationsWith('CREATE TABLE more (id INTEGER);') });

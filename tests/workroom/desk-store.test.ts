@@ -14,6 +14,7 @@ const project: OpenProject = {
   author: { id: 'ines', name: 'Ines Thornbury' },
   standing: 'owner',
   stage: { stage: 'draft' },
+  withdrawn: null,
   state: {
     title: 'Folder',
     summary: '',

@@ -1,6 +1,18 @@
-import { and, eq, inArray, or, sql } from 'drizzle-orm';
+import { and, asc, eq, inArray, or, sql } from 'drizzle-orm';
 import { db, type Transaction } from '@/db/client.server';
-import { editions, letters, mailings, projects, sheets, subscribers, uploads, users } from '@/db/schema';
+import {
+  coAuthors,
+  editions,
+  letters,
+  mailings,
+  ownPatterns,
+  projects,
+  revisions,
+  sheets,
+  subscribers,
+  uploads,
+  users,
+} from '@/db/schema';
 import { dropPictureFiles } from '@/features/uploads/storage.server';
 import { GONE_DOMAIN, lastAdmin, type Person, type Refused } from './people.server';
 
@@ -37,6 +49,17 @@ export function exportOwnData(person: Person) {
       .orderBy(sheets.place)
       .all(),
     projects: own,
+    revisions:
+      ids.length > 0
+        ? db.select().from(revisions).where(inArray(revisions.projectId, ids)).orderBy(revisions.n).all()
+        : [],
+    sharedWithMe: db
+      .select({ title: projects.title, address: projects.slug, since: coAuthors.acceptedAt })
+      .from(coAuthors)
+      .innerJoin(projects, eq(coAuthors.projectId, projects.id))
+      .where(eq(coAuthors.userId, person.id))
+      .all(),
+    patterns: db.select().from(ownPatterns).where(eq(ownPatterns.ownerId, person.id)).all(),
     editions:
       ids.length > 0
         ? db.select().from(editions).where(inArray(editions.projectId, ids)).orderBy(editions.publishedAt).all()
@@ -81,7 +104,7 @@ export function whatStays(personId: string): { readonly published: number; reado
 export type Deletion = { readonly ok: true } | Refused;
 
 /**
- * Deletes an account. Drafts go, and pictures that no edition and nobody else's project shows. Editions stay: readers have
+ * Deletes an account. Projects that others work on become theirs. Drafts go, and pictures that no edition and nobody else's project shows. Editions stay: readers have
  * cut card by them. When something stays, a row stays with it, emptied of address and password, under the person's
  * name or as "A former author". A subscription to the list is kept apart from accounts and is not touched.
  */
@@ -95,6 +118,7 @@ export async function deleteAccount(person: Person, { keepName }: { keepName: bo
 function removePerson(tx: Transaction, person: Person, keepName: boolean): { ok: true; pictures: string[] } | Refused {
   const fault = lastAdmin(person, 'Make somebody else an admin before you delete this account.');
   if (fault) return fault;
+  handOver(tx, person.id);
   const own = tx
     .select({ id: projects.id })
     .from(projects)
@@ -106,6 +130,10 @@ function removePerson(tx: Transaction, person: Person, keepName: boolean): { ok:
   if (pictures.length > 0) tx.delete(uploads).where(inArray(uploads.id, pictures)).run();
   // The person's row may stay, emptied: what they have at home goes in any case.
   tx.delete(sheets).where(eq(sheets.userId, person.id)).run();
+  tx.delete(ownPatterns).where(eq(ownPatterns.ownerId, person.id)).run();
+  tx.delete(coAuthors)
+    .where(or(eq(coAuthors.userId, person.id), eq(coAuthors.emailKey, person.emailKey)))
+    .run();
   const drafts = own.filter((id) => !kept.includes(id));
   if (drafts.length > 0) tx.delete(projects).where(inArray(projects.id, drafts)).run();
 
@@ -128,6 +156,26 @@ function removePerson(tx: Transaction, person: Person, keepName: boolean): { ok:
       .run();
   }
   return { ok: true, pictures };
+}
+
+/** What others work on as well is theirs from then on: whoever came first owns it. */
+function handOver(tx: Transaction, ownerId: string): void {
+  const parts = tx
+    .select({ id: coAuthors.id, projectId: coAuthors.projectId, userId: coAuthors.userId })
+    .from(coAuthors)
+    .innerJoin(projects, eq(coAuthors.projectId, projects.id))
+    .where(and(eq(projects.authorId, ownerId), eq(coAuthors.state, 'accepted')))
+    .orderBy(asc(coAuthors.acceptedAt))
+    .all();
+  for (const { id, projectId, userId } of parts) {
+    if (userId === null) continue;
+    const handed = tx
+      .update(projects)
+      .set({ authorId: userId })
+      .where(and(eq(projects.id, projectId), eq(projects.authorId, ownerId)))
+      .run();
+    if (handed.changes > 0) tx.delete(coAuthors).where(eq(coAuthors.id, id)).run();
+  }
 }
 
 function publishedAmong(tx: Pick<Transaction, 'selectDistinct'>, ids: readonly string[]): string[] {

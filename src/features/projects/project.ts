@@ -32,6 +32,8 @@ export interface OpenProject {
   /** Of whoever opened it. */
   readonly standing: Standing;
   readonly stage: Stage;
+  /** Why it is withdrawn from readers; null when it is not. */
+  readonly withdrawn: string | null;
   readonly state: ProjectState;
 }
 
@@ -81,15 +83,18 @@ export const sizingSchema = z.object({
   grid: z.enum(['1/8in', '1/16in', '1/32in', '1mm', '0.5mm']),
 });
 
-/** Whether a project answers to what was typed: every word must begin a word of its title, pattern, pieces, measures or author. */
-export function matchesSearch(
-  project: Pick<ProjectSummary, 'title' | 'patternName' | 'words' | 'author'>,
+/** Whether a project answers to what was typed: its title, pattern, pieces, measures and author. */
+export const matchesSearch = (
+  { title, patternName, words, author }: Pick<ProjectSummary, 'title' | 'patternName' | 'words' | 'author'>,
   query: string,
-): boolean {
-  const text = ` ${plain(`${project.title} ${project.patternName} ${project.words} ${project.author.name}`)}`;
+): boolean => answersTo(`${title} ${patternName} ${words} ${author.name}`, query);
+
+/** Whether every word that was typed begins a word of a text, whatever its case and accents. */
+export function answersTo(text: string, query: string): boolean {
+  const words = ` ${plain(text)}`;
   return plain(query)
     .split(' ')
-    .every((word) => text.includes(` ${word}`));
+    .every((word) => words.includes(` ${word}`));
 }
 const plain = (text: string): string =>
   text

@@ -34,6 +34,7 @@ export function openProject(id: string, asker: Asker): OpenProject | null {
     author: { id: row.authorId, name: author?.name ?? 'Unnamed' },
     standing,
     stage: stageOf({ ...row, editions: editionsOf(db, id) }),
+    withdrawn: row.withdrawnAt === null ? null : row.withdrawnReason,
     state: stateOf(row),
   };
 }

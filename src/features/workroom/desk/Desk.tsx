@@ -1,5 +1,6 @@
 import { useStore } from '@nanostores/react';
 import { useEffect, useMemo, useState } from 'react';
+import type { Planned } from '@/features/projects/planned';
 import type { OpenProject } from '@/features/projects/project';
 import { stageOf, type Stage } from '@/features/projects/project-stage';
 import { blocking, type ProofItem } from '@/features/projects/proof';
@@ -9,12 +10,16 @@ import { DeskMark } from './DeskMark';
 import { cureFor } from './cures';
 import { createDeskStore } from './desk-store';
 import { FactsDialog } from './FactsDialog';
+import { DeskFinder, type FinderDialog } from './find/DeskFinder';
 import { FoldGrip } from './FoldGrip';
 import { goToPlace } from './go-to-place';
 import { MeasuresColumn } from './MeasuresColumn';
 import { PiecesColumn } from './PiecesColumn';
+import { momentWords } from './local-input';
+import { PlannedNote } from './PlannedNote';
 import { ProofStrip } from './ProofStrip';
 import { PublishDialog } from './PublishDialog';
+import { ShareDialog } from './ShareDialog';
 import { useDeskKeys } from './use-desk-keys';
 import { useSaving } from './use-saving';
 import { WriteUpColumn } from './WriteUpColumn';
@@ -26,8 +31,13 @@ const COLUMNS: readonly { readonly id: Column; readonly label: string }[] = [
   { id: 'write-up', label: 'Write-up' },
 ];
 
+interface DeskProps {
+  readonly project: OpenProject;
+  readonly planned: Planned | null;
+}
+
 /** One project on one sheet folded in three: measures, pieces, write-up. What is selected in one lights up in the others. */
-export default function Desk({ project }: { readonly project: OpenProject }) {
+export default function Desk({ project, planned: plan }: DeskProps) {
   const store = useMemo(() => createDeskStore(project), [project]);
   const saving = useSaving(store, project);
   const proof = useStore(store.$proof);
@@ -36,7 +46,9 @@ export default function Desk({ project }: { readonly project: OpenProject }) {
   const [side, setSide] = useState<'measures' | 'pieces'>('measures');
   const [piece, setPiece] = useState<string | null>(null);
   const [listOpen, setListOpen] = useState(() => location.hash === '#proof');
-  const [dialog, setDialog] = useState<'facts' | 'publish' | null>(null);
+  const [dialog, setDialog] = useState<'facts' | 'share' | 'publish' | FinderDialog | null>(null);
+  const [planned, setPlanned] = useState(plan);
+  const [withdrawn, setWithdrawn] = useState(project.withdrawn);
   const [slug, setSlug] = useState(project.slug);
   const [published, setPublished] = useState<{ readonly edition: number; readonly revision: number | null }>(() =>
     publishedOf(project),
@@ -50,7 +62,7 @@ export default function Desk({ project }: { readonly project: OpenProject }) {
     show(column);
     requestAnimationFrame(() => document.querySelector<HTMLElement>(`[data-column="${column}"]`)?.focus());
   };
-  useDeskKeys({ store, focusColumn, toggleProof: () => setListOpen((was) => !was) });
+  useDeskKeys({ store, focusColumn, toggleProof: () => setListOpen((was) => !was), find: setDialog });
   useEffect(() => {
     const settle = () => store.settle();
     document.addEventListener('focusout', settle);
@@ -72,14 +84,22 @@ export default function Desk({ project }: { readonly project: OpenProject }) {
         ? `Nothing has changed since edition ${published.edition}.`
         : null;
 
-  const go = (item: ProofItem) => {
+  const go = (to: Pick<ProofItem, 'place'> & Partial<Pick<ProofItem, 'code'>>) => {
     setListOpen(false);
-    if (item.place.column === 'facts') {
-      if (item.place.name !== 'title') setDialog('facts');
-    } else show(item.place.column);
-    if (item.place.column === 'pieces' && item.place.name !== undefined) setPiece(item.place.name);
-    goToPlace(item, store);
+    if (to.place.column === 'facts') {
+      if (to.place.name !== 'title') setDialog('facts');
+    } else show(to.place.column);
+    if (to.place.column === 'pieces' && to.place.name !== undefined) setPiece(to.place.name);
+    goToPlace(to, store);
   };
+  const publish = () => {
+    if (hindrance === null) setDialog('publish');
+    else if (stops.length > 0) setListOpen(true);
+  };
+  const preview = `/workroom/${project.id}/preview`;
+  const revisions = `/workroom/${project.id}/revisions`;
+  const publishLabel = stage.stage === 'published' ? `Edition ${published.edition} is out` : `Publish edition ${next}`;
+  const visit = (address: string) => () => location.assign(address);
 
   return (
     <div className="desk" data-open={open} data-side={side}>
@@ -88,18 +108,24 @@ export default function Desk({ project }: { readonly project: OpenProject }) {
         saving={saving}
         stage={stage}
         mark={<DeskMark />}
-        preview={`/workroom/${project.id}/preview`}
-        publishLabel={stage.stage === 'published' ? `Edition ${published.edition} is out` : `Publish edition ${next}`}
+        preview={preview}
+        revisions={revisions}
+        withdrawn={withdrawn !== null}
+        publishLabel={publishLabel}
         hindrance={hindrance}
-        mailing={published.edition > 0 ? `/workroom/${project.id}/mailing` : null}
+        mailing={published.edition > 0 && project.standing !== 'co-author' ? `/workroom/${project.id}/mailing` : null}
+        onFind={() => setDialog('go to')}
         onFacts={() => setDialog('facts')}
-        onPublish={() => {
-          if (hindrance === null) setDialog('publish');
-          else if (stops.length > 0) setListOpen(true);
-        }}
+        onShare={() => setDialog('share')}
+        onPublish={publish}
       />
       <div className="ruled" aria-hidden="true" />
       <ConflictBanner saving={saving} />
+      {planned === null ? null : (
+        <div className="desk-planned">
+          <PlannedNote projectId={project.id} planned={planned} onPlanned={setPlanned} />
+        </div>
+      )}
       <div className="desk-switch" role="tablist" aria-label="Parts of the desk">
         {COLUMNS.map(({ id, label }) => (
           <button
@@ -129,13 +155,39 @@ export default function Desk({ project }: { readonly project: OpenProject }) {
         onGo={go}
         cureOf={(item) => cureFor(item, store)}
       />
+      <DeskFinder
+        store={store}
+        open={dialog === 'go to' || dialog === 'keys' ? dialog : null}
+        onOpen={setDialog}
+        onGo={(place) => go({ place })}
+        acts={[
+          { label: 'Facts', what: 'summary, time, picture, address', act: () => setDialog('facts') },
+          { label: 'People', what: 'co-authors and draft links', act: () => setDialog('share') },
+          { label: 'Proof list', what: 'Alt P', act: () => setListOpen(true) },
+          { label: 'Undo', what: 'outside the write-up', act: store.undo },
+          { label: 'Redo', what: 'outside the write-up', act: store.redo },
+          { label: 'See as reader', what: 'preview', act: visit(preview) },
+          { label: 'Revisions', what: 'what was kept', act: visit(revisions) },
+          { label: publishLabel, what: 'for readers', hindrance, act: publish },
+        ]}
+      />
       <FactsDialog
         open={dialog === 'facts'}
         store={store}
         projectId={project.id}
         slug={slug}
         published={published.edition > 0}
+        standing={project.standing}
+        withdrawn={withdrawn}
+        onWithdrawn={setWithdrawn}
         onSlug={setSlug}
+        onClose={() => setDialog(null)}
+      />
+      <ShareDialog
+        open={dialog === 'share'}
+        projectId={project.id}
+        standing={project.standing}
+        owner={project.author.name}
         onClose={() => setDialog(null)}
       />
       <PublishDialog
@@ -144,8 +196,17 @@ export default function Desk({ project }: { readonly project: OpenProject }) {
         edition={next}
         advice={proof.filter((item) => !item.blocking)}
         flush={saving.flush}
+        planned={planned}
+        onPlanned={(now) => {
+          setPlanned(now);
+          if (now === null) return;
+          setDialog(null);
+          saving.say({ words: `Edition ${next} comes out on ${momentWords(now.publishAt)}, as it stands now.` });
+        }}
         onClose={() => setDialog(null)}
         onPublished={(done) => {
+          setPlanned(null);
+          setWithdrawn(null);
           setPublished({ edition: done.n, revision: done.revision });
           setSlug(done.slug);
           setDialog(null);

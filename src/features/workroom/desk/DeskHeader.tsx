@@ -14,8 +14,13 @@ export interface DeskHeaderProps {
   /** The mark that leads home. */
   readonly mark: ReactNode;
   readonly preview: string;
+  /** Where the kept revisions are. */
+  readonly revisions: string;
+  readonly withdrawn: boolean;
   readonly publishLabel: string;
+  readonly onFind: () => void;
   readonly onFacts: () => void;
+  readonly onShare: () => void;
   readonly onPublish: () => void;
   /** Why it cannot be published now; null when it can. */
   readonly hindrance: string | null;
@@ -34,8 +39,12 @@ export function DeskHeader({
   stage,
   mark,
   preview,
+  revisions,
+  withdrawn,
   publishLabel,
+  onFind,
   onFacts,
+  onShare,
   onPublish,
   hindrance,
   mailing,
@@ -63,12 +72,18 @@ export function DeskHeader({
         />
         <span aria-hidden="true">{draft.title || 'Title of the project'}</span>
       </h1>
-      <span className={`state ${look.tone}`}>
-        <Icon name={look.icon} />
-        {stageWords(stage)}
+      <span className={`state ${withdrawn ? 'warn' : look.tone}`}>
+        <Icon name={withdrawn ? 'warning' : look.icon} />
+        {withdrawn ? 'Withdrawn from readers' : stageWords(stage)}
       </span>
+      <button type="button" className="bar-button" onClick={onFind} title="Alt G">
+        <Icon name="search" /> <span className="bar-word">Go to</span>
+      </button>
       <button type="button" className="bar-button" onClick={onFacts}>
         <Icon name="info" /> <span className="bar-word">Facts</span>
+      </button>
+      <button type="button" className="bar-button" onClick={onShare}>
+        <Icon name="people" /> <span className="bar-word">People</span>
       </button>
       <span className="bar-undo">
         <button
@@ -94,6 +109,9 @@ export function DeskHeader({
       </span>
       <span className="gap" />
       <SaveWords state={saving.state} />
+      <a className="bar-button" href={revisions}>
+        <Icon name="clock" /> <span className="bar-word">Revisions</span>
+      </a>
       {mailing === null ? null : (
         <a className="bar-button" href={mailing}>
           <Icon name="mail" /> <span className="bar-word">Mailing</span>

@@ -3,11 +3,12 @@ import { useState } from 'react';
 import { Dialog } from '@/components/Dialog';
 import { Field } from '@/components/Field';
 import { slugOf } from '@/features/projects/project-slug';
-import { SUMMARY_LIMIT } from '@/features/projects/project';
+import { SUMMARY_LIMIT, type Standing } from '@/features/projects/project';
 import { pictureUrl } from '@/writeup/pictures';
 import { collectUses } from '@/writeup/uses';
 import type { DeskStore } from './desk-store';
 import { call } from './project-api';
+import { ReadersPart } from './ReadersPart';
 
 export interface FactsDialogProps {
   readonly open: boolean;
@@ -15,12 +16,16 @@ export interface FactsDialogProps {
   readonly projectId: string;
   readonly slug: string;
   readonly published: boolean;
+  readonly standing: Standing;
+  readonly withdrawn: string | null;
+  readonly onWithdrawn: (reason: string | null) => void;
   readonly onSlug: (slug: string) => void;
   readonly onClose: () => void;
 }
 
 /** What cards and search show of a project: summary, time, picture, address. */
-export function FactsDialog({ open, store, projectId, slug, published, onSlug, onClose }: FactsDialogProps) {
+export function FactsDialog({ open, store, projectId, slug, published, standing, ...rest }: FactsDialogProps) {
+  const { withdrawn, onWithdrawn, onSlug, onClose } = rest;
   const draft = useStore(store.$draft);
   return (
     <Dialog open={open} title="About this project" onClose={onClose}>
@@ -59,12 +64,20 @@ export function FactsDialog({ open, store, projectId, slug, published, onSlug, o
           )}
         </Field>
         <HeroChoice store={store} hero={draft.hero} />
-        {published ? (
-          <p className="small soft">
-            Address: /projects/{slug}. A published project keeps its address, because readers have links to it.
-          </p>
+        {standing === 'co-author' ? (
+          <p className="small soft">Address: /projects/{slug}. Its owner can change it.</p>
         ) : (
-          <SlugField key={slug} projectId={projectId} slug={slug} title={draft.title} onSlug={onSlug} />
+          <>
+            <SlugField
+              key={slug}
+              projectId={projectId}
+              slug={slug}
+              title={draft.title}
+              published={published}
+              onSlug={onSlug}
+            />
+            {published ? <ReadersPart projectId={projectId} withdrawn={withdrawn} onWithdrawn={onWithdrawn} /> : null}
+          </>
         )}
         <div className="dialog-deeds">
           <button type="button" className="btn" onClick={onClose}>
@@ -120,11 +133,13 @@ function SlugField({
   projectId,
   slug,
   title,
+  published,
   onSlug,
 }: {
   readonly projectId: string;
   readonly slug: string;
   readonly title: string;
+  readonly published: boolean;
   readonly onSlug: (slug: string) => void;
 }) {
   const [typed, setTyped] = useState(slug);
@@ -146,7 +161,15 @@ function SlugField({
         void move(typed);
       }}
     >
-      <Field label="Address" hint="Stands after /projects/ and is fixed with the first edition." error={error}>
+      <Field
+        label="Address"
+        hint={
+          published
+            ? 'Stands after /projects/. The address that readers know leads on to a new one.'
+            : 'Stands after /projects/.'
+        }
+        error={error}
+      >
         {(control) => (
           <input
             {...control}
