@@ -21,6 +21,7 @@ import { ProofStrip } from './ProofStrip';
 import { PublishDialog } from './PublishDialog';
 import { ShareDialog } from './ShareDialog';
 import { useDeskKeys } from './use-desk-keys';
+import { useRangeCheck } from './use-range-check';
 import { useSaving } from './use-saving';
 import { WriteUpColumn } from './WriteUpColumn';
 
@@ -40,7 +41,9 @@ interface DeskProps {
 export default function Desk({ project, planned: plan }: DeskProps) {
   const store = useMemo(() => createDeskStore(project), [project]);
   const saving = useSaving(store, project);
-  const proof = useStore(store.$proof);
+  const found = useStore(store.$proof);
+  const inRange = useRangeCheck(store);
+  const proof = useMemo(() => [...found, ...inRange], [found, inRange]);
   const [open, setOpen] = useState<Column>('write-up');
   /** Which of measures and pieces lies beside the write-up where there is room for two. */
   const [side, setSide] = useState<'measures' | 'pieces'>('measures');

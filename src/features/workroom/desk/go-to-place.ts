@@ -1,8 +1,10 @@
 import type { ProofItem } from '@/features/projects/proof';
 import type { DeskStore } from './desk-store';
 
+type Goal = Pick<ProofItem, 'place'> & Partial<Pick<ProofItem, 'code'>>;
+
 /** Brings a proof item's place into view and puts the focus there, once the column that holds it is shown. */
-export function goToPlace(item: ProofItem, store: DeskStore): void {
+export function goToPlace(item: Goal, store: DeskStore): void {
   const { column, name } = item.place;
   if (
     column === 'measures' &&
@@ -14,7 +16,7 @@ export function goToPlace(item: ProofItem, store: DeskStore): void {
   requestAnimationFrame(() => requestAnimationFrame(() => focusOn(placeOf(item))));
 }
 
-function placeOf({ code, place }: ProofItem): HTMLElement | null {
+function placeOf({ code, place }: Goal): HTMLElement | null {
   const find = (selector: string) => document.querySelector<HTMLElement>(selector);
   if (place.column === 'write-up') return inWriteUp(code, place) ?? find('[data-column="write-up"] .ProseMirror');
   if (place.column === 'facts') return find(`[data-place="fact:${place.name}"]`);
@@ -32,11 +34,11 @@ const NTH: Partial<Record<ProofItem['code'], string>> = {
   'unknown piece': '.piece-card',
 };
 
-function inWriteUp(code: ProofItem['code'], { nth, step }: ProofItem['place']): HTMLElement | null {
+function inWriteUp(code: ProofItem['code'] | undefined, { nth, step }: ProofItem['place']): HTMLElement | null {
   const all = (selector: string) => [
     ...document.querySelectorAll<HTMLElement>(`[data-column="write-up"] .ProseMirror ${selector}`),
   ];
-  const selector = NTH[code];
+  const selector = code === undefined ? undefined : NTH[code];
   const exact = selector === undefined || nth === undefined ? undefined : all(selector)[nth];
   return exact ?? (step === undefined ? null : (all('.step')[step - 1] ?? null));
 }
