@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import type { MeasureDef } from '@/engine';
 import { proofList, type ProofSubject } from '@/features/projects/proof';
+import { checkRange, rangeItems } from '@/features/projects/proof-range';
 import { fieldOfFault, placeOfFault } from '@/features/projects/proof-place';
 import type { BlockNode } from '@/writeup/document';
 import { AUTHORS_SIZE, FOLDER, ONE_STEP, writeUpOf } from '../server/published-project';
@@ -35,7 +36,7 @@ describe('the proof list', () => {
       ...READY,
       ...withMeasure({ name: 'strip width', formula: '2 * blank widht' }),
     });
-    expect(more).toEqual([]);
+    expect(more.map(({ code, blocking }) => [code, blocking])).toEqual([['measure unused', false]]);
     expect(item).toMatchObject({
       code: 'formula',
       blocking: true,
@@ -62,6 +63,7 @@ describe('the proof list', () => {
       ['no steps', true, 'Write-up'],
       ['no materials', false, 'Write-up'],
       ['piece unused', false, 'Pieces · Folder'],
+      ['measure unused', false, 'Measures · blank width'],
     ]);
   });
   it('stops a live measure that does not read, at its step', () => {
@@ -87,12 +89,110 @@ describe('the proof list', () => {
     ]);
   });
   it('takes a cut list as using every piece', () => {
-    expect(items({ writeUp: writeUpOf(MATERIALS, { type: 'cutList' }, inStep({ type: 'paragraph' })) })).toEqual([]);
+    const codes = items({ writeUp: writeUpOf(MATERIALS, { type: 'cutList' }, inStep({ type: 'paragraph' })) });
+    expect(codes.map(([code]) => code)).toEqual(['measure unused']);
   });
   it('puts what blocks before what is advised', () => {
     expect(
       items({ title: '', summary: '', writeUp: writeUpOf({ type: 'paragraph' }) }).map(([, blocks]) => blocks),
-    ).toEqual([true, true, false, false, false]);
+    ).toEqual([true, true, false, false, false, false]);
+  });
+});
+
+const say = (text: string, marks: object[] = []): BlockNode =>
+  ({ type: 'paragraph', content: [{ type: 'text', text, ...(marks.length > 0 ? { marks } : {}) }] }) as BlockNode;
+const link = (href: string) => ({ type: 'link', attrs: { href } });
+const written = (...content: BlockNode[]) =>
+  proofList({ ...READY, writeUp: writeUpOf(MATERIALS, ...ONE_STEP.doc.content, ...content) });
+
+describe('what the proof list finds in the text', () => {
+  it('is a condition that reads a figure instead of a yes or no', () => {
+    const step = {
+      ...inStep(say('Only then.')),
+      attrs: { title: 'Wide ones', mark: '', when: 'blank width' },
+    } as BlockNode;
+    expect(written(step)).toMatchObject([
+      { code: 'condition', blocking: true, place: { label: 'Write-up, step 2, Wide ones', step: 2 } },
+    ]);
+    const good = { ...step, attrs: { title: 'Wide ones', mark: '', when: 'blank width > 6 in' } } as BlockNode;
+    expect(written(good)).toEqual([]);
+  });
+  it('is a reference to a step that is gone', () => {
+    const reference = { type: 'paragraph', content: [{ type: 'stepRef', attrs: { key: 'gone00' } }] } as BlockNode;
+    expect(written(inStep(reference))).toMatchObject([{ code: 'unknown step', blocking: true, place: { step: 2 } }]);
+  });
+  it.each([
+    ['https://example.org/card', []],
+    ['http://example.org', []],
+    ['mailto:ines@quilletlane.example', []],
+    ['/handbook/scoring', []],
+    ['#step-2', []],
+    ['#step-3', ['link broken']],
+    ['#nowhere', ['link broken']],
+    ['javascript:alert(1)', ['link broken']],
+    ['example.org', ['link broken']],
+    ['//example.org', ['link broken']],
+  ])('of a link to %s is %j', (href, codes) => {
+    expect(written(inStep(say('this', [link(href)]))).map(({ code }) => code)).toEqual(codes);
+  });
+  it('is a long step that shows nothing, and no short one', () => {
+    expect(written(inStep(say('Press it flat. '.repeat(20)))).map(({ code, place }) => [code, place.step])).toEqual([
+      ['no picture', 2],
+    ]);
+    expect(written(inStep(say('Press it flat.')))).toEqual([]);
+    expect(
+      written(inStep(say('Press it flat. '.repeat(20)), { type: 'pieceCard', attrs: { piece: 'Folder' } })),
+    ).toEqual([]);
+  });
+  it('is a tool that can hurt without a caution that speaks of it, told once', () => {
+    const items = written(
+      inStep(say('Cut with a craft knife.')),
+      inStep(say('Cut again with the blade, then use hot glue.')),
+    );
+    expect(items.map(({ code, title, place }) => [code, title, place.step])).toEqual([
+      ['no caution', 'No caution speaks of blades', 2],
+      ['no caution', 'No caution speaks of hot glue', 3],
+    ]);
+    const caution: BlockNode = { type: 'caution', content: [say('The knife is sharp: cap it. Hot glue burns.')] };
+    expect(written(caution, inStep(say('Cut with a craft knife, then use a glue gun.')))).toEqual([]);
+  });
+  it('is a measure that nothing uses', () => {
+    expect(proofList({ ...READY, ...withMeasure({ name: 'strip', formula: '2 * blank width' }) })).toMatchObject([
+      {
+        code: 'measure unused',
+        blocking: false,
+        title: 'Nothing uses strip',
+        place: { column: 'measures', name: 'strip' },
+      },
+    ]);
+  });
+});
+
+describe('sizes all over the range', () => {
+  it('are told when some cannot be made, with the first and why', () => {
+    // 10 in tall is more than twice 2 in wide: a corner of the range.
+    const checked = checkRange(FOLDER, AUTHORS_SIZE);
+    expect(checked?.failing).toBeGreaterThan(0);
+    const [item] = rangeItems(checked!);
+    expect(item).toMatchObject({ code: 'range fails', blocking: false });
+    expect(item?.detail).toContain('it is taller than twice its width and falls over');
+  });
+  it('are no item when all can be made', () => {
+    const pattern = { ...FOLDER, fits: [] };
+    expect(checkRange(pattern, AUTHORS_SIZE)).toMatchObject({ failing: 0, first: null });
+  });
+  it('are told when a piece outgrows 12 × 12 in, A4 and Letter', () => {
+    // Flat, the folder is twice its width: 8 by 6 in at 4 in, 16 in at the widest, 8 in.
+    const pattern = { ...FOLDER, fits: [] };
+    expect(checkRange(pattern, AUTHORS_SIZE)?.outgrown).toEqual([{ piece: 'Folder', when: 'largest' }]);
+    const wide = { ...AUTHORS_SIZE, values: { 'inside width': 7 * 25.4 } };
+    expect(checkRange(pattern, wide)?.outgrown).toEqual([{ piece: 'Folder', when: 'shown' }]);
+    expect(rangeItems(checkRange(pattern, wide)!)).toMatchObject([
+      { code: 'outgrows', title: 'Folder fits no common sheet', place: { column: 'pieces', name: 'Folder' } },
+    ]);
+  });
+  it('are not tried while the pattern does not read', () => {
+    expect(checkRange({ ...FOLDER, measures: [] }, AUTHORS_SIZE)).toBeNull();
   });
 });
 

@@ -77,8 +77,8 @@ function mergePatterns(base: Pattern | undefined, mine: Pattern, other: Pattern,
         field,
         judge.three(`Pattern, ${field}`, { base: base?.[field], mine: mine[field], other: other[field] }, words),
       ];
-    const lists = [base, mine, other].map((pattern) => pattern?.[field] as readonly { name: string }[] | undefined);
-    return [field, mergeNamed(word, lists as NamedLists, judge)];
+    const list = (pattern: Pattern | undefined) => pattern?.[field] as readonly Thing[] | undefined;
+    return [field, mergeNamed(word, [list(base), list(mine), list(other)], judge)];
   });
   return Object.fromEntries(merged.filter(([, value]) => value !== undefined)) as unknown as Pattern;
 }
@@ -144,7 +144,8 @@ function mergeRecords<T extends number | string>(
     const value = judge.three(
       `${where}, ${name}`,
       { base: base?.[name], mine: mine[name], other: other[name] },
-      (said) => (said === undefined ? 'usual' : typeof said === 'number' ? `${Number(said.toFixed(4))} mm` : said),
+      (said) =>
+        said === undefined ? 'usual' : typeof said === 'number' ? `${Number(said.toFixed(4))} mm` : String(said),
     );
     if (value !== undefined) merged[name] = value;
   }

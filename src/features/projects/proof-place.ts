@@ -1,4 +1,5 @@
 import type { Fault } from '@/engine';
+import type { WriteUp } from '@/writeup/document';
 
 export type ProofColumn = 'facts' | 'measures' | 'pieces' | 'write-up';
 /** Where an item stands, so that the desk can go there. */
@@ -11,6 +12,21 @@ export interface ProofPlace {
   /** Which of the write-up's live measures, photos or piece cards, counted from 0. */
   readonly nth?: number;
   readonly step?: number;
+}
+
+/** The place of the `nth` thing of its kind, in this step or outside the steps. */
+export type PlaceAt = (step: number | null, nth?: number) => ProofPlace;
+
+/** "Write-up, step 3, The lower spine" */
+export function placesIn({ doc }: WriteUp): PlaceAt {
+  const titles = doc.content.flatMap((node) => (node.type === 'step' ? [node.attrs.title] : []));
+  return (step, nth) => {
+    const counted = nth === undefined ? {} : { nth };
+    if (step === null) return { column: 'write-up', label: 'Write-up, outside the steps', ...counted };
+    const title = titles[step - 1] ?? '';
+    const label = `Write-up, step ${step}${title === '' ? '' : `, ${title}`}`;
+    return { column: 'write-up', label, ...counted, step };
+  };
 }
 
 const COLUMNS: Readonly<Record<string, { readonly column: ProofPlace['column']; readonly heading: string }>> = {

@@ -2,6 +2,7 @@ import {
   compilePattern,
   evaluate,
   explain,
+  formulasOfPattern,
   type Fault,
   type Figures,
   type Model,
@@ -10,9 +11,12 @@ import {
   type Sizing,
 } from '@/engine';
 import type { WriteUp } from '@/writeup/document';
+import { conditionFault } from '@/writeup/condition';
 import { readLive } from '@/writeup/live';
 import { collectUses, type Uses } from '@/writeup/uses';
-import { placeOfFault, type ProofColumn, type ProofPlace } from './proof-place';
+import { namesIn } from './formula-names';
+import { placeOfFault, placesIn, type PlaceAt, type ProofColumn, type ProofPlace } from './proof-place';
+import { writeUpItems } from './proof-write-up';
 
 export type { ProofColumn, ProofPlace };
 export interface ProofItem {
@@ -28,7 +32,15 @@ export interface ProofItem {
     | 'no summary'
     | 'no materials'
     | 'piece unused'
-    | 'fit advice';
+    | 'fit advice'
+    | 'condition'
+    | 'unknown step'
+    | 'measure unused'
+    | 'no picture'
+    | 'no caution'
+    | 'link broken'
+    | 'outgrows'
+    | 'range fails';
   /** Keeps the project from being published; the others are worth a look. */
   readonly blocking: boolean;
   readonly title: string;
@@ -55,14 +67,16 @@ export interface Worked {
 export function proofList(subject: ProofSubject, worked: Worked = {}): readonly ProofItem[] {
   const compiled = worked.compiled ?? compilePattern(subject.pattern);
   const uses = collectUses(subject.writeUp.doc);
-  const at = inText(subject.writeUp);
+  const at = placesIn(subject.writeUp);
   const items = [
     ...factItems(subject),
     ...(compiled.ok
       ? sizeItems(worked.figures ?? evaluate(compiled.value, subject.sizing))
       : compiled.faults.map(faultItem)),
     ...(compiled.ok ? liveItems(compiled.value, uses, at) : []),
-    ...writeUpItems(uses, subject.pattern, at),
+    ...(compiled.ok ? conditionItems(compiled.value, uses, at) : []),
+    ...writeUpItems(subject, uses, at),
+    ...unusedItems(subject.pattern, uses),
   ];
   return [...items.filter((item) => item.blocking), ...items.filter((item) => !item.blocking)];
 }
@@ -136,7 +150,7 @@ function sizeItems(figures: Figures): ProofItem[] {
   ];
 }
 
-function liveItems(model: Model, uses: Uses, at: InText): ProofItem[] {
+function liveItems(model: Model, uses: Uses, at: PlaceAt): ProofItem[] {
   return uses.formulas.flatMap(({ formula, step }, nth): ProofItem[] => {
     const live = readLive(model, formula);
     if (live.ok) return [];
@@ -154,68 +168,39 @@ function liveItems(model: Model, uses: Uses, at: InText): ProofItem[] {
   });
 }
 
-function writeUpItems(uses: Uses, pattern: Pattern, at: InText): ProofItem[] {
-  const items: ProofItem[] = [];
-  if (uses.steps === 0) {
-    items.push({
-      code: 'no steps',
-      blocking: true,
-      title: 'There are no steps',
-      detail: 'Put in the first step: what does the maker do first?',
-      place: { column: 'write-up', label: 'Write-up' },
-    });
-  }
-  const known = new Set(pattern.pieces.map((piece) => piece.name));
-  uses.pieces.forEach(({ piece, step }, nth) => {
-    if (known.has(piece)) return;
-    items.push({
-      code: 'unknown piece',
-      blocking: true,
-      title: `No piece is called “${piece}”`,
-      detail: 'Choose another piece for this card, or take the card out.',
-      place: at(step, nth),
-    });
+/** What steps and phrases depend on, where it is no condition. */
+function conditionItems(model: Model, uses: Uses, at: PlaceAt): ProofItem[] {
+  return uses.conditions.flatMap(({ when, step }, nth): ProofItem[] => {
+    const fault = conditionFault(model, when);
+    if (fault === null) return [];
+    return [
+      {
+        code: 'condition',
+        blocking: true,
+        title: `“${when}” is no condition that reads`,
+        detail: explain(fault),
+        place: at(step, nth),
+      },
+    ];
   });
-  uses.photos.forEach(({ alt, step }, nth) => {
-    if (alt.trim() !== '') return;
-    items.push({
-      code: 'no alt text',
-      blocking: true,
-      title: 'A photo has no words',
-      detail: 'Say what the photo shows, for those who cannot see it.',
-      place: at(step, nth),
-    });
-  });
-  if (uses.materials.length === 0) {
-    items.push({
-      code: 'no materials',
-      blocking: false,
-      title: 'No materials yet',
-      detail: 'List the card, the glue and the tools, so that readers can lay them out first.',
-      place: { column: 'write-up', label: 'Write-up' },
-    });
-  }
-  const used = new Set(uses.pieces.map((card) => card.piece));
-  for (const piece of pattern.pieces) {
-    if (used.has(piece.name) || uses.cutLists.length > 0) continue;
-    items.push({
-      code: 'piece unused',
-      blocking: false,
-      title: `No step uses ${piece.name}`,
-      detail: `Put its piece card into the step that cuts it.`,
-      place: { column: 'pieces', label: `Pieces · ${piece.name}`, name: piece.name },
-    });
-  }
-  return items;
 }
 
-type InText = (step: number | null, nth: number) => ProofPlace;
-/** "Write-up, step 3, The lower spine" */
-function inText({ doc }: WriteUp): InText {
-  const titles = doc.content.flatMap((node) => (node.type === 'step' ? [node.attrs.title] : []));
-  return (step, nth) => {
-    if (step === null) return { column: 'write-up', label: 'Write-up, outside the steps', nth };
-    const title = titles[step - 1] ?? '';
-    return { column: 'write-up', label: `Write-up, step ${step}${title === '' ? '' : `, ${title}`}`, nth, step };
-  };
+/** Measures and choices that no formula of the pattern and nothing in the text speaks of. */
+function unusedItems(pattern: Pattern, uses: Uses): ProofItem[] {
+  const names = [...pattern.measures, ...pattern.choices].map(({ name }) => name);
+  const texts = [
+    ...formulasOfPattern(pattern).map(({ text }) => text),
+    ...uses.formulas.map(({ formula }) => formula),
+    ...uses.conditions.map(({ when }) => when),
+  ];
+  const used = new Set(texts.flatMap((text) => namesIn(text, names).map(({ name }) => name)));
+  return names
+    .filter((name) => !used.has(name))
+    .map((name) => ({
+      code: 'measure unused',
+      blocking: false,
+      title: `Nothing uses ${name}`,
+      detail: 'No piece, fit or text depends on it. Take it out, or put it where it belongs.',
+      place: { column: 'measures', label: `Measures · ${name}`, name },
+    }));
 }

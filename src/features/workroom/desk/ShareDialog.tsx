@@ -27,8 +27,8 @@ export function ShareDialog({ open, projectId, standing, owner, onClose }: Share
   }, [open, base]);
 
   /** Asks, takes over what the answer says, and tells whether it was done. */
-  const ask = async <T extends Partial<Sharing>>(...request: Parameters<typeof call>): Promise<T | null> => {
-    const answer = await call<T>(...request);
+  const ask = async <T extends object = Sharing>(...request: Parameters<typeof call>): Promise<T | null> => {
+    const answer = await call<T & Partial<Sharing>>(...request);
     setTrouble(answer.ok ? null : answer.refusal.sentence);
     if (!answer.ok) return null;
     setSharing((was) => ({ people: [], links: [], ...was, ...answer.value }));

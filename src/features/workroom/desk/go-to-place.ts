@@ -32,6 +32,8 @@ const NTH: Partial<Record<ProofItem['code'], string>> = {
   'live measure': '.measure',
   'no alt text': '.photo',
   'unknown piece': '.piece-card',
+  'unknown step': '[data-step-ref]',
+  'link broken': 'a[href]:not([data-step-ref])',
 };
 
 function inWriteUp(code: ProofItem['code'] | undefined, { nth, step }: ProofItem['place']): HTMLElement | null {
