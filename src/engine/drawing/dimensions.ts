@@ -1,82 +1,132 @@
 import type { Shape } from '../types';
 import { n, segment } from './path';
+import { textWidth } from './type';
 
 /** A position on a running dimension: where it is drawn and what it says. */
 export interface Stop {
   readonly at: number;
   readonly text: string;
+  /** How far into the piece its extension line goes, to reach what lies there: 0 for lines that meet the edge themselves. */
+  readonly reach: number;
 }
-/** About the width of a figure in the drawing's type, 13 units high; erring wide keeps figures apart. */
-export const textWidth = (text: string): number =>
-  [...text].reduce(
-    (sum, mark) =>
-      sum + (mark === '\u202f' ? 2.5 : mark === ' ' ? 4 : /[0-9]/.test(mark) ? 7.6 : mark === '\u2044' ? 3.4 : 7.2),
-    0,
-  );
+/** From one line of figures to the next. */
 const LINE = 15;
+/** Between figures side by side. */
+const GAP = 7;
+/** As far as a figure may be moved along the edge before figures are turned instead. */
+const SHIFT = 20;
+/** From the dimension line out to the figures, bridged by leaders. */
+const LEADER = 7;
 
-/** Rows needed above the top dimension so that no figure touches another. */
-export function topRows(stops: readonly Stop[]): readonly number[] {
-  const ends: number[] = [];
-  return stops.map(({ at, text }) => {
-    const half = textWidth(text) / 2 + 3;
-    let row = ends.findIndex((end) => end <= at - half);
-    if (row < 0) row = ends.length;
-    ends[row] = at + half;
-    return row;
-  });
+/** Middles moved apart as little as may be, in their order, so that each has its size between the limits. */
+export function spread(
+  at: readonly number[],
+  sizes: readonly number[],
+  [least, most]: readonly [number, number],
+): readonly number[] {
+  const gap = (index: number) => ((sizes[index - 1] as number) + (sizes[index] as number)) / 2;
+  const half = (index: number) => (sizes[index] as number) / 2;
+  const forwards = (from: readonly number[], limit: number) => {
+    const placed: number[] = [];
+    from.forEach((one, index) => {
+      placed.push(Math.max(one, index === 0 ? limit + half(0) : (placed[index - 1] as number) + gap(index)));
+    });
+    return placed;
+  };
+  const backwards = (from: readonly number[], limit: number) => {
+    const placed = [...from];
+    for (let index = placed.length - 1; index >= 0; index -= 1) {
+      const most = index === placed.length - 1 ? limit - half(index) : (placed[index + 1] as number) - gap(index + 1);
+      placed[index] = Math.min(placed[index] as number, most);
+    }
+    return placed;
+  };
+  // Pushed to the right and to the left, both keep apart; so does what lies midway.
+  const [right, left] = [forwards(at, -Infinity), backwards(at, Infinity)];
+  const midway = right.map((one, index) => (one + (left[index] as number)) / 2);
+  return backwards(forwards(midway, least), most);
+}
+
+/** How the figures of the top dimension stand: beside one another, or turned where there is no room for that. */
+export interface TopFigures {
+  readonly places: readonly number[];
+  readonly turned: boolean;
+  /** From the dimension line up. */
+  readonly tall: number;
+}
+export function topFigures(stops: readonly Stop[], limits: readonly [number, number]): TopFigures {
+  const at = stops.map((stop) => stop.at);
+  const widths = stops.map(({ text }) => textWidth(text));
+  const level = spread(
+    at,
+    widths.map((width) => width + GAP),
+    limits,
+  );
+  const fits = level.every(
+    (place, index) =>
+      Math.abs(place - (at[index] as number)) <= SHIFT && (index > 0 || place - (widths[0] as number) / 2 >= limits[0]),
+  );
+  if (fits) return { places: level, turned: false, tall: LEADER + 14 };
+  const places = spread(
+    at,
+    stops.map(() => LINE),
+    limits,
+  );
+  return { places, turned: true, tall: LEADER + 6 + Math.max(...widths) };
 }
 
 /** Running dimension along the top, read from the left edge, as on a scoring board. */
 export function acrossTop(
   stops: readonly Stop[],
+  { places, turned }: TopFigures,
   frame: { readonly from: number; readonly line: number; readonly edge: number },
 ): Shape[] {
-  const rows = topRows(stops);
-  const last = stops.at(-1)?.at ?? frame.from;
+  const { from, line, edge } = frame;
   return [
-    { type: 'path', role: 'dimension', d: segment(frame.from, frame.line, last, frame.line) },
-    { type: 'path', role: 'extension', d: segment(frame.from, frame.line - 4, frame.from, frame.edge - 2) },
-    ...stops.flatMap(({ at, text }, index): Shape[] => {
-      const base = frame.line - 6 - (rows[index] as number) * LINE;
+    { type: 'path', role: 'dimension', d: segment(from, line, stops.at(-1)?.at ?? from, line) },
+    { type: 'path', role: 'extension', d: segment(from, line - 4, from, edge - 2) },
+    ...stops.flatMap(({ at, text, reach }, index): Shape[] => {
+      const place = places[index] as number;
       return [
-        { type: 'path', role: 'extension', d: segment(at, base + 2, at, frame.edge - 2) },
-        { type: 'text', role: 'figure', x: at, y: base - 1, text, anchor: 'middle' },
+        {
+          type: 'path',
+          role: 'extension',
+          d: `M${n(at)} ${n(edge - 2 + reach)}V${n(line)}L${n(place)} ${n(line - LEADER)}`,
+        },
+        turned
+          ? { type: 'text', role: 'figure', x: place + 4.5, y: line - LEADER - 3, text, anchor: 'start', turned }
+          : { type: 'text', role: 'figure', x: place, y: line - LEADER - 3, text, anchor: 'middle' },
       ];
     }),
   ];
 }
 
-/** Figures of the left dimension moved apart where they would touch; a bent leader joins each to its place. */
-export function spread(stops: readonly Stop[], least: number, bottom: number): readonly number[] {
-  const placed: number[] = [];
-  for (const { at } of stops) placed.push(Math.max(at, (placed.at(-1) ?? -Infinity) + least));
-  for (let index = placed.length - 1, limit = bottom; index >= 0; index -= 1) {
-    placed[index] = Math.min(placed[index] as number, limit);
-    limit = (placed[index] as number) - least;
-  }
-  return placed;
-}
+/** Height that figures down the left take, however near their positions. */
+export const leftHeight = (stops: readonly Stop[]): number => stops.length * LINE;
 
 /** Running dimension down the left, read from the top edge. */
 export function downLeft(
   stops: readonly Stop[],
   frame: { readonly from: number; readonly line: number; readonly edge: number; readonly bottom: number },
 ): Shape[] {
-  const places = spread(stops, LINE, frame.bottom);
-  const last = stops.at(-1)?.at ?? frame.from;
+  const { from, line, edge, bottom } = frame;
+  const places = spread(
+    stops.map(({ at }) => at),
+    stops.map(() => LINE),
+    [from, bottom],
+  );
   return [
-    { type: 'path', role: 'dimension', d: segment(frame.line, frame.from, frame.line, last) },
-    { type: 'path', role: 'extension', d: segment(frame.line - 4, frame.from, frame.edge - 2, frame.from) },
-    ...stops.flatMap(({ at, text }, index): Shape[] => {
+    { type: 'path', role: 'dimension', d: segment(line, from, line, stops.at(-1)?.at ?? from) },
+    { type: 'path', role: 'extension', d: segment(line - 4, from, edge - 2, from) },
+    ...stops.flatMap(({ at, text, reach }, index): Shape[] => {
       const y = places[index] as number;
       return [
         {
           type: 'path',
           role: 'extension',
-          d: `M${n(frame.edge - 2)} ${n(at)}L${n(frame.line)} ${n(at)}L${n(frame.line - 7)} ${n(y)}`,
+          d: `M${n(edge - 2 + reach)} ${n(at)}H${n(line)}L${n(line - LEADER)} ${n(y)}`,
         },
-        { type: 'text', role: 'figure', x: frame.line - 10, y: y + 4.5, text, anchor: 'end' },
+        { type: 'text', role: 'figure', x: line - LEADER - 3, y: y + 4.5, text, anchor: 'end' },
       ];
     }),
   ];

@@ -1,6 +1,6 @@
 import { encloses } from '../net';
 import type { Point, Shape } from '../types';
-import { textWidth } from './dimensions';
+import { textWidth } from './type';
 import type { Seen } from './folded-faces';
 import { isHidden, type SeenFace } from './seen';
 

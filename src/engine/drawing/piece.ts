@@ -1,14 +1,19 @@
 import { type ShowOptions } from '../measure';
-import { areaOf, boundsOf, lengthOf, pointsOf } from '../net';
-import { seamsOf } from '../piece';
-import type { Drawing, Loop, PieceFigure, Point, Shape } from '../types';
-import { acrossTop, downLeft, textWidth, topRows, type Stop } from './dimensions';
+import { flatten, lengthOf, pointsOf } from '../net';
+import type { Curve, Drawing, Loop, PieceFigure, Point, Shape } from '../types';
+import { acrossTop, downLeft, leftHeight, topFigures, type Stop } from './dimensions';
+import { keyRows, lettering } from './lettering';
+import { notesOf } from './notes';
 import { closedPath, n, pathOf, segment, type Place } from './path';
+import { altOf } from './piece-words';
+import { roomIn, type Edges, type Room } from './room';
 import { ruler } from './ruler';
-import { say, showPosition } from './say';
+import { showPosition } from './say';
+import { positionsOf, type Position } from './stops';
+import { textWidth } from './type';
 
 export interface PieceDrawingOptions extends Pick<ShowOptions, 'units' | 'grid'> {
-  /** Drawing units across, all in (CSS pixels on a page). */
+  /** Drawing units across, all in (CSS pixels on a page); more when a given scale leaves too little for the dimensions. */
   readonly width: number;
   /** The piece itself is drawn at most this tall. */
   readonly tallest?: number;
@@ -16,43 +21,139 @@ export interface PieceDrawingOptions extends Pick<ShowOptions, 'units' | 'grid'>
   readonly scale?: number;
   readonly dims?: boolean;
   readonly labels?: boolean;
-  readonly ruler?: boolean;
 }
+/** Where a flat piece lies in its drawing. */
+interface Frame extends Edges {
+  readonly scale: number;
+  readonly place: Place;
+}
+type Lines = readonly (readonly Point[])[];
+
+const TALLEST = 340;
+/** Round a drawing without dimensions, and beside the words of one with them. */
+const BORDER = 6;
+/** From the piece to the dimension lines above it and on its left. */
+const ABOVE = 14;
+const ASIDE = 12;
+/** From the piece's left edge to the figures there, and as much as the unit's name takes. */
+const FIGURES = 28;
+const LEAST_LEFT = 40;
+/** Below a fan and on its right, for the dimensions of its side and flap. */
+const FAN = 30;
 
 /**
  * A flat piece: outline, folds by kind, glue areas, what is cut away, slits; running dimensions from the top left corner, the
- * way a scoring board is read; a ruler to the drawing's own scale. The text alternative states size and scores.
+ * way a scoring board is read, the top one on a ruler to the drawing's own scale; radii, angles and other sizes where they
+ * belong; names of panels and tabs. What has no room there is keyed by a letter to lines at the foot. No text stands on
+ * another or on a line. The text alternative says all of it.
  */
 export function drawPiece(piece: PieceFigure, options: PieceDrawingOptions): Drawing {
-  const { net } = piece;
-  const { units, grid, width, dims = true, labels = true, tallest = 340 } = options;
-  // A position a card's thickness off the ruler carries a sign; the sentences say what it means.
-  const says = (mm: number) => showPosition(mm, piece.thickness, { units, ...(grid ? { grid } : {}) }).typeset;
-  const seams = seamsOf(net);
-  const stopsOf = (scores: readonly number[], tabs: readonly number[], size: number) =>
-    [...scores, ...(piece.fan ? [] : tabs), size].sort((a, b) => a - b);
-  const acrossMm = stopsOf(piece.scores.across, seams.across, net.across);
-  const alongMm = stopsOf(piece.scores.along, seams.along, net.along);
-  const fan = dims ? (piece.fan ?? null) : null;
-  const left = dims ? Math.max(...alongMm.map((mm) => textWidth(says(mm)))) + 34 : 6;
-  const right = fan ? textWidth(says(fan.height)) + 30 : dims ? textWidth(says(net.across)) / 2 + 6 : 6;
-  const scale = options.scale ?? Math.min((width - left - right) / net.across, tallest / net.along);
-  const inset = left + Math.max(0, (width - left - right - net.across * scale) / 2);
-  const stopsAcross: Stop[] = acrossMm.map((mm) => ({ at: inset + mm * scale, text: says(mm) }));
-  const rulerHeight = options.ruler ? 16 : 0;
-  const top = rulerHeight + (dims ? 34 + Math.max(...topRows(stopsAcross)) * 15 : 6);
-  const place: Place = (point) => ({ x: inset + point.x * scale, y: top + point.y * scale });
-  const bottom = top + net.along * scale;
-  const height = bottom + (fan ? 36 : dims ? 12 : 6);
-  const stopsAlong: Stop[] = alongMm.map((mm) => ({ at: top + mm * scale, text: says(mm) }));
+  return (options.dims ?? true) ? dimensioned(piece, options) : plain(piece, options);
+}
 
-  const shapes: Shape[] = [
-    ...net.away.map((box): Shape => {
-      const [a, b] = [place({ x: box.x, y: box.y }), place({ x: box.x + box.across, y: box.y + box.along })];
+function plain(piece: PieceFigure, options: PieceDrawingOptions): Drawing {
+  const { net } = piece;
+  const { width, tallest = TALLEST, labels = true } = options;
+  const scale = options.scale ?? Math.min((width - 2 * BORDER) / net.across, tallest / net.along);
+  const frame = frameOf(net, Math.max(BORDER, (width - net.across * scale) / 2), BORDER, scale);
+  const room = () => roomIn({ left: 0, right: width, top: 0, bottom: frame.bottom }, linesOf(net, frame));
+  const named = labels ? lettering(net, null, { ...frame, room: room() }) : { shapes: [], unnamed: [] };
+  return {
+    width,
+    height: frame.bottom + BORDER,
+    title: piece.name,
+    alt: altOf(piece, options, { notes: [], unnamed: named.unnamed }),
+    shapes: [...flat(net, frame), ...named.shapes],
+  };
+}
+
+function dimensioned(piece: PieceFigure, options: PieceDrawingOptions): Drawing {
+  const { net, fan } = piece;
+  const { units, grid, tallest = TALLEST, labels = true } = options;
+  // A position a card's thickness off the ruler carries a sign; the sentences say what it means.
+  const known = new Map<number, string>();
+  const says = (mm: number) => {
+    const text = known.get(mm) ?? showPosition(mm, piece.thickness, { units, ...(grid ? { grid } : {}) }).typeset;
+    known.set(mm, text);
+    return text;
+  };
+  const positions = positionsOf(piece);
+  const left = Math.max(LEAST_LEFT, FIGURES + Math.max(...positions.along.map(({ at }) => textWidth(says(at)))));
+  const right = fan ? textWidth(says(fan.height)) + FAN : textWidth(says(net.across)) / 2 + BORDER;
+  const scale = options.scale ?? Math.min((options.width - left - right) / net.across, tallest / net.along);
+  const width = Math.max(options.width, left + net.across * scale + right);
+  const inset = left + (width - left - right - net.across * scale) / 2;
+  const stops = (list: readonly Position[], start: number): readonly Stop[] =>
+    list.map(({ at, reach }) => ({ at: start + at * scale, text: says(at), reach: reach * scale }));
+  const across = stops(positions.across, inset);
+  const figures = topFigures(across, [BORDER, width - 2]);
+  const frame = frameOf(net, inset, figures.tall + ABOVE, scale);
+  const { top, bottom } = frame;
+  const along = stops(positions.along, top);
+  const lowest = Math.max(bottom + 8, top + leftHeight(along));
+  const foot = fan ? Math.max(lowest, bottom + FAN + BORDER) : lowest;
+  const fanned = fan ? fanDimensions(fan, frame, says) : null;
+
+  const notes = notesOf(piece, positions, says);
+  const lines: Lines = [
+    ...linesOf(net, frame),
+    ...notes.flatMap(({ span }) => (span ? [flattened(span, frame)] : [])),
+    ...across.map(({ at, reach }) => [
+      { x: at, y: top },
+      { x: at, y: top + reach },
+    ]),
+    ...along.map(({ at, reach }) => [
+      { x: inset, y: at },
+      { x: inset + reach, y: at },
+    ]),
+    ...(fanned?.lines ?? []),
+  ];
+  const edges = fan ? frame : { ...frame, right: width, bottom: lowest };
+  const room: Room = roomIn({ ...edges, left: inset - 1, top: top - 1 }, lines);
+  const lettered = lettering(labels ? net : { ...net, panels: [] }, notes, { ...frame, room });
+  const key = keyRows(lettered.key, { left: BORDER, right: width - BORDER, top: foot });
+  const corner: Shape[] = [
+    { type: 'path', role: 'origin', d: `M${n(inset - 2)} ${n(top - 2)}v-8h-8z` },
+    { type: 'text', role: 'label', x: inset - ASIDE - 4, y: top - 3, text: units, anchor: 'end' },
+  ];
+  return {
+    width: Math.max(width, key.wide + 2 * BORDER),
+    height: foot + key.tall,
+    title: piece.name,
+    alt: altOf(piece, options, { notes, unnamed: lettered.unnamed }),
+    shapes: [
+      ...flat(net, frame),
+      ruler({ from: inset, to: frame.right, y: top - ABOVE, scale, units }),
+      ...acrossTop(across, figures, { from: inset, line: top - ABOVE, edge: top }),
+      ...downLeft(along, { from: top, line: inset - ASIDE, edge: inset, bottom: lowest }),
+      ...corner,
+      ...(fanned?.shapes ?? []),
+      ...lettered.shapes,
+      ...key.shapes,
+    ],
+  };
+}
+
+function frameOf({ across, along }: PieceFigure['net'], left: number, top: number, scale: number): Frame {
+  return {
+    left,
+    top,
+    right: left + across * scale,
+    bottom: top + along * scale,
+    scale,
+    place: ({ x, y }) => ({ x: left + x * scale, y: top + y * scale }),
+  };
+}
+
+/** The piece itself, without words and figures. */
+function flat(net: PieceFigure['net'], { place, scale }: Frame): Shape[] {
+  return [
+    ...awayOf(net).map((points): Shape => {
+      const [a, b] = points.map(place) as [Point, Point];
       return {
         type: 'path',
         role: 'away',
-        d: `M${n(a.x)} ${n(a.y)}H${n(b.x)}V${n(b.y)}H${n(a.x)}ZM${n(a.x)} ${n(a.y)}L${n(b.x)} ${n(b.y)}M${n(b.x)} ${n(a.y)}L${n(a.x)} ${n(b.y)}`,
+        d: `M${n(a.x)} ${n(a.y)}H${n(b.x)}V${n(b.y)}H${n(a.x)}Z${segment(a.x, a.y, b.x, b.y)}${segment(b.x, a.y, a.x, b.y)}`,
       };
     }),
     ...net.panels.map(
@@ -63,60 +164,76 @@ export function drawPiece(piece: PieceFigure, options: PieceDrawingOptions): Dra
         of: panel.name,
       }),
     ),
-    ...net.folds
-      .filter((fold) => fold.angle !== 0)
-      .map((fold): Shape => ({ type: 'path', role: fold.kind, d: pathOf([fold.curve], place, scale) })),
-    ...net.creases.map(({ curve, kind }): Shape => ({ type: 'path', role: kind, d: pathOf([curve], place, scale) })),
+    ...[...net.folds.filter((fold) => fold.angle !== 0), ...net.creases].map(
+      ({ kind, curve }): Shape => ({ type: 'path', role: kind, d: pathOf([curve], place, scale) }),
+    ),
     ...net.slits.map((slit): Shape => ({ type: 'path', role: 'slit', d: slitPath(place(slit.from), place(slit.to)) })),
     {
       type: 'path',
       role: 'cut',
       d: [net.outline, ...net.holes].map((loop) => closedPath(loop, place, scale)).join(''),
     },
-    ...(labels ? labelsOf(piece, place, scale) : []),
-    ...(dims
-      ? [
-          ...acrossTop(stopsAcross, { from: inset, line: top - 14, edge: top }),
-          ...downLeft(stopsAlong, { from: top, line: inset - 12, edge: inset, bottom }),
-          { type: 'path', role: 'origin', d: `M${n(inset - 2)} ${n(top - 2)}v-8h-8z` } satisfies Shape,
-        ]
-      : []),
-    ...(fan ? fanDimensions(fan, place, says, { right: inset + net.across * scale, bottom }) : []),
-    ...(options.ruler ? ruler({ width, start: inset, scale, units }) : []),
   ];
-  return { width, height, title: piece.name, alt: altOf(piece, options), shapes };
 }
+/** Top left and bottom right corners of what is cut away. */
+const awayOf = ({ away }: PieceFigure['net']): Lines =>
+  away.map(({ x, y, across, along }) => [
+    { x, y },
+    { x: x + across, y: y + along },
+  ]);
+
+/** Every line of a piece as drawn, in straight parts; seams too, though no line is drawn there. */
+function linesOf(net: PieceFigure['net'], frame: Frame): Lines {
+  const { place } = frame;
+  const loops: readonly Loop[] = [net.outline, ...net.holes];
+  return [
+    ...loops.map((loop) => {
+      const points = pointsOf(loop, 0.5 / frame.scale).map(place);
+      return [points.at(-1) as Point, ...points];
+    }),
+    ...[...net.folds, ...net.creases].map(({ curve }) => flattened(curve, frame)),
+    ...net.slits.map(({ from, to }) => [place(from), place(to)]),
+    ...awayOf(net).map((points) => {
+      const [a, b] = points.map(place) as [Point, Point];
+      const [c, d] = [
+        { x: b.x, y: a.y },
+        { x: a.x, y: b.y },
+      ];
+      return [a, c, b, d, a, b, c, d];
+    }),
+  ];
+}
+const flattened = (curve: Curve, { place, scale }: Frame): readonly Point[] =>
+  [curve.from, ...flatten(curve, 0.5 / scale)].map(place);
 
 /** The side that lies level at the foot, dimensioned below the piece, and how far its flap stands out, on the right. */
 function fanDimensions(
   { side, height }: NonNullable<PieceFigure['fan']>,
-  place: Place,
+  { place, right, bottom }: Frame,
   says: (mm: number) => string,
-  edge: { readonly right: number; readonly bottom: number },
-): Shape[] {
+): { readonly shapes: readonly Shape[]; readonly lines: Lines } {
   const [a, b] = [place(side.from), place(side.to)].sort((p, q) => p.x - q.x) as [Point, Point];
   const foot = place({ x: side.from.x, y: side.from.y + height }).y;
-  const [x, y] = [edge.right + 14, edge.bottom + 12];
-  return [
-    {
-      type: 'path',
-      role: 'extension',
-      d:
-        [a.x, b.x].map((at) => segment(at, foot + 3, at, y + 4)).join('') +
-        segment(b.x + 3, a.y, x + 4, a.y) +
-        segment((a.x + b.x) / 2 + 3, foot, x + 4, foot),
-    },
-    { type: 'path', role: 'dimension', d: segment(a.x, y, b.x, y) + segment(x, a.y, x, foot) },
-    {
-      type: 'text',
-      role: 'figure',
-      x: (a.x + b.x) / 2,
-      y: y + 17,
-      text: says(lengthOf(side)),
-      anchor: 'middle',
-    },
-    { type: 'text', role: 'figure', x: x + 6, y: (a.y + foot) / 2 + 4.5, text: says(height), anchor: 'start' },
+  const [x, y, middle] = [right + 14, bottom + 12, (a.x + b.x) / 2];
+  const at = (from: number, to: number): Point => ({ x: from, y: to });
+  const lines: Lines = [
+    ...[a.x, b.x].map((end) => [at(end, foot + 3), at(end, y + 4)]),
+    [at(b.x + 3, a.y), at(x + 4, a.y)],
+    [at(middle + 3, foot), at(x + 4, foot)],
   ];
+  const extensions = lines.map((points) => {
+    const [from, to] = points as [Point, Point];
+    return segment(from.x, from.y, to.x, to.y);
+  });
+  return {
+    lines,
+    shapes: [
+      { type: 'path', role: 'extension', d: extensions.join('') },
+      { type: 'path', role: 'dimension', d: segment(a.x, y, b.x, y) + segment(x, a.y, x, foot) },
+      { type: 'text', role: 'figure', x: middle, y: y + 17, text: says(lengthOf(side)), anchor: 'middle' },
+      { type: 'text', role: 'figure', x: x + 6, y: (a.y + foot) / 2 + 4.5, text: says(height), anchor: 'start' },
+    ],
+  };
 }
 
 /** A slit with a short tick at either end. */
@@ -128,65 +245,4 @@ function slitPath(a: Point, b: Point): string {
     segment(a.x - x, a.y - y, a.x + x, a.y + y) +
     segment(b.x - x, b.y - y, b.x + x, b.y + y)
   );
-}
-
-/** Names of panels where they balance, where there is room for them and no other name stands there. */
-function labelsOf(piece: PieceFigure, place: Place, scale: number): Shape[] {
-  const joined = new Set(piece.net.joins.map((join) => join.panels[1]));
-  const taken: { readonly x: number; readonly y: number; readonly wide: number; readonly tall: number }[] = [];
-  return piece.net.panels.flatMap((panel): Shape[] => {
-    if (panel.role === 'tab' || joined.has(panel.name) || areaOf(panel.loop) <= 0) return [];
-    const box = boundsOf(panel.loop);
-    // Where a triangle balances, two thirds of it are left across and down.
-    const pointed = panel.loop.length === 3;
-    const left = pointed ? (scale * 2) / 3 : scale;
-    const [wide, tall] = [(box.right - box.left) * left, (box.bottom - box.top) * left];
-    const room = textWidth(panel.name) + 10;
-    const turned = wide < room && tall >= room;
-    if ((turned ? wide : tall) < 18 || (turned ? tall : wide) < room) return [];
-    const { x, y } = place(centroidOf(panel.loop));
-    const own = { x, y, wide: turned ? 18 : room, tall: turned ? room : 18 };
-    const meets = (other: typeof own) =>
-      Math.abs(other.x - x) * 2 < other.wide + own.wide && Math.abs(other.y - y) * 2 < other.tall + own.tall;
-    if (taken.some(meets)) return [];
-    taken.push(own);
-    return [
-      {
-        type: 'text',
-        role: 'label',
-        x: x + (turned ? 4.5 : 0),
-        y: y + (turned ? 0 : 4.5),
-        text: panel.name,
-        anchor: 'middle',
-        of: panel.name,
-        ...(turned ? { turned } : {}),
-      },
-    ];
-  });
-}
-
-/** Where a panel would balance. */
-function centroidOf(loop: Loop): Point {
-  const points = pointsOf(loop);
-  const origin = points[0] ?? { x: 0, y: 0 };
-  const sum = points.reduce<Point & { readonly twice: number }>(
-    (so, a, index) => {
-      const b = points[(index + 1) % points.length] ?? a;
-      const twice = (a.x - origin.x) * (b.y - origin.y) - (b.x - origin.x) * (a.y - origin.y);
-      const [x, y] = [(a.x + b.x + origin.x) / 3, (a.y + b.y + origin.y) / 3];
-      return { x: so.x + twice * x, y: so.y + twice * y, twice: so.twice + twice };
-    },
-    { x: 0, y: 0, twice: 0 },
-  );
-  return { x: sum.x / sum.twice, y: sum.y / sum.twice };
-}
-
-/** Size and scores in words, for those who hear the drawing. */
-export function altOf(piece: PieceFigure, options: Pick<ShowOptions, 'units' | 'grid'>): string {
-  const [first, ...rest] = piece.instructions;
-  const blank = first ? say(first, options).replace(/^Cut /, '') : '';
-  const scores = rest
-    .filter((sentence) => typeof sentence[0] === 'string' && /^(Score|Along|Turn|Give)/.test(sentence[0]))
-    .map((sentence) => say(sentence, options));
-  return [`${piece.name}, ${blank}`, ...scores].join(' ');
 }

@@ -1,29 +1,29 @@
 import { MM_PER } from '../measure';
 import type { Shape, Unit } from '../types';
-import { segment } from './path';
+import { n } from './path';
 
-/** Ticks of a working ruler along a straight edge: sixteenths of an inch or millimetres, as fine as the scale lets them stand apart. */
+/** Nearer to one another ticks would be a grey strip, drawing units. */
+const NEAREST = 3.6;
+
+/** A working ruler along an edge: sixteenths of an inch or millimetres, as fine as the drawing's scale lets them stand apart. */
 export function ruler(options: {
-  readonly width: number;
-  readonly start: number;
+  readonly from: number;
+  readonly to: number;
+  /** Where the ticks hang from. */
+  readonly y: number;
   readonly scale: number;
   readonly units: Unit;
-}): Shape[] {
+}): Shape {
+  const { from, to, y, scale } = options;
   const inches = options.units === 'in';
-  const whole = (inches ? MM_PER.in : 10) * options.scale;
-  const parts = (inches ? [16, 8, 4, 2, 1] : [10, 2, 1]).find((count) => whole / count >= 3) ?? 1;
-  const step = whole / parts;
-  const height = (index: number): number => {
-    if (index % parts === 0) return 11;
-    if (inches && index % (parts / 2) === 0) return 8;
-    if (!inches && parts === 10 && index % 5 === 0) return 8;
-    return inches && parts >= 8 && index % (parts / 4) === 0 ? 6 : 4;
+  const whole = (inches ? MM_PER.in : 10) * scale;
+  const parts = (inches ? [16, 8, 4, 2] : [10, 2]).find((count) => whole / count >= NEAREST) ?? 1;
+  const tall = (index: number): number => {
+    if (index % parts === 0) return 8;
+    return (index * 2) % parts === 0 ? 5 : 3;
   };
-  const first = -Math.floor(options.start / step);
-  const ticks: string[] = [];
-  for (let index = first; options.start + index * step <= options.width; index += 1) {
-    const x = options.start + index * step;
-    ticks.push(segment(x, 0, x, height(Math.abs(index))));
-  }
-  return [{ type: 'path', role: 'ruler', d: ticks.join('') }];
+  const step = whole / parts;
+  let d = '';
+  for (let index = 1; from + index * step <= to; index += 1) d += `M${n(from + index * step)} ${n(y)}v${tall(index)}`;
+  return { type: 'path', role: 'ruler', d };
 }

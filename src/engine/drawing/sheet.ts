@@ -1,7 +1,7 @@
 import { show, type ShowOptions } from '../measure';
 import type { Cut, SheetLayout, SheetPlan } from '../sheet';
 import type { Drawing, Shape } from '../types';
-import { textWidth } from './dimensions';
+import { textWidth } from './type';
 import { n, segment } from './path';
 
 export interface SheetDrawingOptions extends Pick<ShowOptions, 'units' | 'grid'> {

@@ -1,0 +1,57 @@
+import type { ShowOptions } from '../measure';
+import type { PieceFigure } from '../types';
+import type { Note } from './notes';
+import { say } from './say';
+import { teethOf } from './stops';
+
+/**
+ * A drawing in words, for those who hear it: the blank, scores, cuts and curves as the making sentences say them, what is
+ * noted besides, the names of panels and tabs, and those that the drawing has no room for.
+ */
+export function altOf(
+  { name, net, instructions }: PieceFigure,
+  options: Pick<ShowOptions, 'units' | 'grid'>,
+  { notes, unnamed }: { readonly notes: readonly Note[]; readonly unnamed: readonly string[] },
+): string {
+  const [blank = '', ...rest] = sentencesOf(instructions, options);
+  const teeth = teethOf(net);
+  const named = (role: 'panel' | 'tab') =>
+    net.panels.flatMap((panel) => (panel.role === role && !teeth.includes(panel) ? [panel.name] : []));
+  return [
+    `${name}, ${blank.replace(/^Cut /, '')}`,
+    ...rest.filter((sentence) => !/^Fold /.test(sentence)),
+    ...list(
+      'Noted',
+      notes.filter(({ keyed }) => !keyed).map(({ text }) => spelt(text)),
+    ),
+    ...list('Panels', named('panel')),
+    ...list('Glue tabs', named('tab')),
+    ...list('Too small to be named in the drawing', unnamed),
+  ].join(' ');
+}
+const list = (what: string, items: readonly string[]): readonly string[] =>
+  items.length === 0 ? [] : [`${what}: ${items.join(', ')}.`];
+const spelt = (text: string): string =>
+  text
+    .replace(/^(\d+)× /, '$1 times ')
+    .replace('R\u202f', 'radius ')
+    .replace('Ø\u202f', 'diameter ')
+    .replaceAll('\u202f', ' ')
+    .replaceAll('\u2044', '/');
+
+const said = new WeakMap<
+  PieceFigure['instructions'],
+  { readonly looked: string; readonly sentences: readonly string[] }
+>();
+/** A piece is drawn for a wide page and for a narrow one: what is said of it is the same. */
+function sentencesOf(
+  instructions: PieceFigure['instructions'],
+  options: Pick<ShowOptions, 'units' | 'grid'>,
+): readonly string[] {
+  const looked = `${options.units} ${options.grid}`;
+  const known = said.get(instructions);
+  if (known?.looked === looked) return known.sentences;
+  const sentences = instructions.map((sentence) => say(sentence, options));
+  said.set(instructions, { looked, sentences });
+  return sentences;
+}
