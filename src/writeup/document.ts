@@ -21,11 +21,16 @@ export type BlockNode =
   | CutListNode
   | PhotoNode
   | NoteNode
-  | MaterialsNode;
+  | ForwardNode
+  | MaterialsNode
+  | LiveBlockNode
+  | CurveTemplateNode
+  | TableNode;
 export type InlineNode =
   | TextNode
   | MeasureNode
   | StepRefNode
+  | AmountNode
   | { readonly type: 'hardBreak'; readonly marks?: readonly MarkNode[] };
 
 /** A numbered step. `mark` is a few words beside the title, such as "optional". */
@@ -77,6 +82,12 @@ export interface StepRefNode {
   readonly attrs: { readonly key: string };
   readonly marks?: readonly MarkNode[];
 }
+/** What the box takes of something, as `amounts.ts` names it: `sheets card`, `tape`. */
+export interface AmountNode {
+  readonly type: 'amount';
+  readonly attrs: { readonly of: string };
+  readonly marks?: readonly MarkNode[];
+}
 /** A piece's drawing with its cut and score sentences. */
 export interface PieceCardNode {
   readonly type: 'pieceCard';
@@ -85,18 +96,54 @@ export interface PieceCardNode {
 export interface CutListNode {
   readonly type: 'cutList';
 }
-/** The content is the caption, which may hold live measures. */
+/** Blocks that are worked out whole: what the box takes, how its pieces lie on sheets, how it looks folded, its sizes. */
+export interface LiveBlockNode {
+  readonly type: 'amounts' | 'sheetPlan' | 'foldedView' | 'sizeSummary';
+}
+/** The curves of a piece at full size, to be printed and cut along. */
+export interface CurveTemplateNode {
+  readonly type: 'curveTemplate';
+  readonly attrs: { readonly piece: string };
+}
+export interface TableNode {
+  readonly type: 'table';
+  readonly content: readonly { readonly type: 'tableRow'; readonly content: readonly TableCellNode[] }[];
+}
+export interface TableCellNode {
+  readonly type: 'tableCell' | 'tableHeader';
+  /** Columns and rows that it covers, where that is more than one. */
+  readonly attrs?: { readonly colspan?: number; readonly rowspan?: number };
+  readonly content: readonly BlockNode[];
+}
+/** The content is the caption, which may hold live measures. Photos that follow one another stand side by side. */
 export interface PhotoNode {
   readonly type: 'photo';
-  readonly attrs: { readonly upload: string; readonly alt: string; readonly width: number; readonly height: number };
+  readonly attrs: {
+    readonly upload: string;
+    readonly alt: string;
+    readonly width: number;
+    readonly height: number;
+    /** What stays in sight when it is cropped, in tenths across and down. Usual: null, the middle. */
+    readonly focus?: { readonly across: number; readonly down: number } | null;
+    /** Usual: whole. */
+    readonly crop?: PhotoCrop;
+  };
   readonly content?: readonly InlineNode[];
 }
+export type PhotoCrop = 'whole' | 'wide' | 'square';
+/** `correction`: what an earlier edition had wrong, said where it stood. */
 export interface NoteNode {
-  readonly type: 'tip' | 'caution';
+  readonly type: 'tip' | 'caution' | 'correction';
+  readonly content: readonly BlockNode[];
+}
+/** What is done now because a later step needs it: `word` says why now, `key` is that step's, or empty. */
+export interface ForwardNode {
+  readonly type: 'forward';
+  readonly attrs: { readonly word: string; readonly key: string };
   readonly content: readonly BlockNode[];
 }
 export interface MaterialsNode {
-  readonly type: 'materials';
+  readonly type: 'materials' | 'tools';
   readonly content: readonly BlockNode[];
 }
 export interface TextNode {

@@ -18,3 +18,7 @@ export function pictureSources(id: string, width: number): string {
 
 /** The largest picture that is taken, in bytes: 12 MB as file managers count them. */
 export const PICTURE_BYTES = 12 * 1024 * 1024;
+
+/** What a cropped photo keeps in sight, as classes of the style sheet: the page may hold no inline styles. */
+export const focusClasses = ({ across, down }: { readonly across: number; readonly down: number }): string =>
+  ` focus-across-${Math.trunc(across)} focus-down-${Math.trunc(down)}`;

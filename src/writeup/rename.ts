@@ -50,14 +50,32 @@ export function renameInWriteUp(doc: DocNode, rename: Rename): Result<DocNode> {
       case 'step':
         return withContent(step(node), node.content.map(block));
       case 'materials':
+      case 'tools':
       case 'tip':
       case 'caution':
+      case 'correction':
+      case 'forward':
         return withContent(node, node.content.map(block));
+      case 'table':
+        return withContent(
+          node,
+          node.content.map((row) =>
+            withContent(
+              row,
+              row.content.map((cell) => withContent(cell, cell.content.map(block))),
+            ),
+          ),
+        );
       case 'pieceCard':
+      case 'curveTemplate':
         return rename.what === 'piece' && keyOf(node.attrs.piece) === keyOf(rename.from)
           ? { ...node, attrs: { ...node.attrs, piece: rename.to } }
           : node;
       case 'cutList':
+      case 'amounts':
+      case 'sheetPlan':
+      case 'foldedView':
+      case 'sizeSummary':
         return node;
       default:
         return node satisfies never;

@@ -1,13 +1,29 @@
-import type { BlockNode, DocNode, InlineNode, MarkNode, PhotoNode, StepNode, VideoMoment } from './document';
+import type { SheetPlan } from '@/engine';
+import { curvesInside } from './curve-template';
+import type {
+  ForwardNode,
+  BlockNode,
+  DocNode,
+  InlineNode,
+  MarkNode,
+  PhotoNode,
+  StepNode,
+  VideoMoment,
+} from './document';
 import { holds, numberSteps, whenOf, type NumberedStep } from './condition';
 import { esc } from '@/exports/escape';
 import { safeHref } from './links';
 import type { LiveFigures } from './live';
 import { momentHref, momentText } from './video-moment';
-import { pictureSources, pictureUrl } from './pictures';
+import { focusClasses, pictureSources, pictureUrl } from './pictures';
+import { amountInside, amountsInside, foldedInside, sheetPlanInside, sizesInside } from './render-blocks';
+import { renderTable } from './render-table';
+import { usualPlan } from './usual-plan';
 import { CARD_WIDTH, renderCutList, renderMeasure, renderPieceCard, stepRefInside } from './render-figures';
 
 export interface RenderContext extends LiveFigures {
+  /** How the pieces lie on the reader's sheets; usual: on those that cardstock is mostly sold in. */
+  readonly plan?: SheetPlan;
   /** Pixels that pieces are drawn in. */
   readonly cardWidth?: number;
 }
@@ -16,6 +32,7 @@ export interface RenderContext extends LiveFigures {
 type Level = 2 | 3 | 4;
 
 interface Surroundings extends RenderContext {
+  readonly plan: SheetPlan;
   readonly ids: Set<string>;
   /** Headings of this level and above are spoken for by what stands round the node. */
   readonly above: 1 | 2 | 3;
@@ -25,6 +42,8 @@ interface Surroundings extends RenderContext {
 const CAUTION_ICON =
   '<svg class="icon" viewBox="0 0 24 24" width="20" height="20" aria-hidden="true"><path d="M12 4 2.5 20h19zM12 10v5M12 17.5v.3"/></svg>';
 
+const PENCIL_ICON =
+  '<svg class="icon" viewBox="0 0 24 24" width="20" height="20" aria-hidden="true"><path d="m4.5 19.5 1-4.5L16.5 4l3.5 3.5L9 18.5zM14 6.5l3.5 3.5"/></svg>';
 const PLAY_ICON =
   '<svg class="icon" viewBox="0 0 24 24" width="20" height="20" aria-hidden="true"><path d="M3.5 5.5h17v13h-17zM10 9v6l5-3z"/></svg>';
 
@@ -34,7 +53,7 @@ const PLAY_ICON =
  * phrases that do not apply are there and hidden, since another size may need them.
  */
 export function renderWriteUp(doc: DocNode, context: RenderContext): string {
-  const around = { ...context, ids: new Set<string>(), steps: numberSteps(doc, context) };
+  const around = { ...context, ...planOf(context), ids: new Set<string>(), steps: numberSteps(doc, context) };
   let above: 1 | 2 = 1;
   return doc.content
     .map((node) => {
@@ -44,8 +63,30 @@ export function renderWriteUp(doc: DocNode, context: RenderContext): string {
     .join('\n');
 }
 
-const blocks = (content: readonly BlockNode[], around: Surroundings): string =>
-  content.map((node) => block(node, around)).join('');
+/** Worked out when something asks for it: most write-ups do not. */
+const planOf = ({ plan, figures }: RenderContext) => ({
+  get plan(): SheetPlan {
+    return plan ?? usualPlan(figures);
+  },
+});
+
+/** Photos that follow one another stand side by side; everything else below. */
+function blocks(content: readonly BlockNode[], around: Surroundings): string {
+  let html = '';
+  for (let at = 0; at < content.length; ) {
+    const row: PhotoNode[] = [];
+    for (let node = content[at]; node?.type === 'photo'; node = content[(at += 1)]) row.push(node);
+    if (row.length > 1) html += `<div class="photos">${row.map((one) => photo(one, around, true)).join('')}</div>`;
+    else if (row[0]) html += photo(row[0], around, false);
+    const next = content[at];
+    if (next) html += block(next, around);
+    at += 1;
+  }
+  return html;
+}
+
+const liveBlock = (name: string, mark: string, inside: string): string =>
+  `<div class="live-block ${name}" ${mark}>${inside}</div>`;
 
 function block(node: BlockNode, around: Surroundings): string {
   switch (node.type) {
@@ -73,13 +114,36 @@ function block(node: BlockNode, around: Surroundings): string {
     case 'cutList':
       return renderCutList(around.figures);
     case 'photo':
-      return photo(node, around);
+      return photo(node, around, false);
+    case 'correction':
+      return `<div class="correction" role="note"><b class="note-word">${PENCIL_ICON} Corrected</b>${blocks(node.content, around)}</div>`;
+    case 'forward':
+      return forward(node, around);
     case 'tip':
       return `<div class="tip" role="note"><b class="note-word">Tip</b>${blocks(node.content, around)}</div>`;
     case 'caution':
       return `<div class="caution" role="note"><b class="note-word">${CAUTION_ICON} Caution</b>${blocks(node.content, around)}</div>`;
     case 'materials':
-      return `<div class="materials" role="group" aria-label="Materials"><p class="materials-word">Materials</p>${blocks(node.content, around)}</div>`;
+    case 'tools': {
+      const word = node.type === 'tools' ? 'Tools' : 'Materials';
+      return `<div class="materials" role="group" aria-label="${word}"><p class="materials-word">${word}</p>${blocks(node.content, around)}</div>`;
+    }
+    case 'amounts':
+      return liveBlock('amounts', 'data-amounts', amountsInside(around.figures, around.plan));
+    case 'sheetPlan':
+      return liveBlock('sheet-plan', 'data-sheet-plan', sheetPlanInside(around.figures, around.plan));
+    case 'foldedView':
+      return liveBlock('folded-view', 'data-folded-view', foldedInside(around));
+    case 'sizeSummary':
+      return liveBlock('size-summary', 'data-size-summary', sizesInside(around.figures));
+    case 'curveTemplate':
+      return liveBlock(
+        'curve-template',
+        `data-curve-of="${esc(node.attrs.piece)}"`,
+        curvesInside(around.figures, node.attrs.piece),
+      );
+    case 'table':
+      return renderTable(node, (content) => blocks(content, around));
     default:
       return node satisfies never;
   }
@@ -106,7 +170,7 @@ function step(node: StepNode, around: Surroundings): string {
       : `<h${level} class="step-title" id="${id}-title"><span class="visually-hidden">${counted}${title === '' ? '' : ': '}</span>${esc(title)}${marked}</h${level}>`;
   return (
     `<section class="step" id="${id}" aria-labelledby="${id}-title"${conditionOf(attrs.when, around)}><div class="step-number" data-number aria-hidden="true">${number ?? ''}</div>` +
-    `<div class="step-body">${heading}${momentLine(attrs.moment)}${blocks(content, { ...around, above: level })}</div></section>`
+    `<div class="step-body">${heading}${momentLine(attrs.moment)}${earlierLine(node, around)}${blocks(content, { ...around, above: level })}</div></section>`
   );
 }
 
@@ -131,14 +195,38 @@ function momentLine(moment: VideoMoment | null | undefined): string {
   return `<p class="step-moment"><a href="${esc(href)}" rel="noopener noreferrer">${words}</a> <span class="soft">${esc(host)}</span></p>`;
 }
 
-function photo({ attrs, content }: PhotoNode, around: Surroundings): string {
-  const { upload, alt, width, height } = attrs;
+/** `beside` others: cropped to one shape, so that they stand in line. */
+function photo({ attrs, content }: PhotoNode, around: Surroundings, beside: boolean): string {
+  const { upload, alt, width, height, focus, crop = 'whole' } = attrs;
   const caption = inlines(content, around);
+  const cropped = crop !== 'whole' || beside ? ` photo-cropped photo-${crop}${focus ? focusClasses(focus) : ''}` : '';
+  const sizes = beside ? '(min-width: 1000px) 340px, 50vw' : '(min-width: 1000px) 700px, 100vw';
   return (
-    `<figure class="photo"><img src="${esc(pictureUrl(upload, 960))}" srcset="${esc(pictureSources(upload, width))}" ` +
-    `sizes="(min-width: 1000px) 700px, 100vw" width="${Math.trunc(width)}" height="${Math.trunc(height)}" alt="${esc(alt)}" loading="lazy" decoding="async">` +
+    `<figure class="photo${cropped}"><img src="${esc(pictureUrl(upload, 960))}" srcset="${esc(pictureSources(upload, width))}" ` +
+    `sizes="${sizes}" width="${Math.trunc(width)}" height="${Math.trunc(height)}" alt="${esc(alt)}" loading="lazy" decoding="async">` +
     `${caption === '' ? '' : `<figcaption>${caption}</figcaption>`}</figure>`
   );
+}
+
+/** Done now for the sake of a later step, which says so too. */
+function forward({ attrs, content }: ForwardNode, around: Surroundings): string {
+  const later = attrs.key === '' ? '' : ` <span class="note-for">for ${stepRef(attrs.key, around, false)}</span>`;
+  return `<div class="forward" role="note"><b class="note-word">${esc(attrs.word.trim() || 'Now')}${later}</b>${blocks(content, around)}</div>`;
+}
+
+/** At a step: the earlier ones in which something was done for it. */
+function earlierLine(node: StepNode, around: Surroundings): string {
+  const { key } = node.attrs;
+  if (!key) return '';
+  const earlier = around.steps.filter(({ step: { content } }) =>
+    content.some((block) => block.type === 'forward' && block.attrs.key === key),
+  );
+  return earlier
+    .map(({ step: { attrs }, place, number }) => {
+      const link = `<a class="step-ref" href="#step-${place}" data-step-ref="step">${stepRefInside('step', number)}</a>`;
+      return `<p class="step-earlier"${conditionOf(attrs.when, around)}>Needs what was done for it in ${link}.</p>`;
+    })
+    .join('');
 }
 
 /** Phrases under one condition are one element; what stands under the condition `given` has it said already. */
@@ -167,6 +255,11 @@ function inline(node: InlineNode, around: Surroundings, before: InlineNode | und
       return marked(esc(node.text), node.marks);
     case 'measure':
       return marked(renderMeasure(around, node.attrs), node.marks);
+    case 'amount':
+      return marked(
+        `<span class="measure" data-amount="${esc(node.attrs.of)}">${amountInside(around.figures, around.plan, node.attrs.of)}</span>`,
+        node.marks,
+      );
     case 'stepRef':
       return marked(stepRef(node.attrs.key, around, beginsSentence(before)), node.marks);
     case 'hardBreak':

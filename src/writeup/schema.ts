@@ -4,14 +4,24 @@ import { StarterKit } from '@tiptap/starter-kit';
 import { AsTyped } from './marks/as-typed/schema';
 import { Link } from './marks/link/schema';
 import { OnlyWhen } from './marks/only-when/schema';
+import { Amount } from './nodes/amount/schema';
+import { Amounts } from './nodes/amounts/schema';
 import { Caution } from './nodes/caution/schema';
+import { Correction } from './nodes/correction/schema';
+import { CurveTemplate } from './nodes/curve-template/schema';
 import { CutList } from './nodes/cut-list/schema';
+import { FoldedViewBlock } from './nodes/folded-view/schema';
+import { Forward } from './nodes/forward/schema';
 import { Materials } from './nodes/materials/schema';
 import { Measure } from './nodes/measure/schema';
 import { Photo } from './nodes/photo/schema';
 import { PieceCard } from './nodes/piece-card/schema';
+import { SheetPlanBlock } from './nodes/sheet-plan/schema';
+import { SizeSummary } from './nodes/size-summary/schema';
 import { StepRef } from './nodes/step-ref/schema';
 import { Step } from './nodes/step/schema';
+import { Tools } from './nodes/tools/schema';
+import { Table, TableCell, TableHeader, TableRow } from './nodes/table/schema';
 import { Tip } from './nodes/tip/schema';
 
 /** The whole write-up: text and steps in any order; a step never stands inside anything else. */
@@ -38,12 +48,25 @@ export const ownNodes: Extensions = [
   Step,
   Measure,
   StepRef,
+  Amount,
   PieceCard,
   CutList,
   Photo,
   Tip,
   Caution,
+  Correction,
+  Forward,
   Materials,
+  Tools,
+  Amounts,
+  SheetPlanBlock,
+  CurveTemplate,
+  FoldedViewBlock,
+  SizeSummary,
+  Table,
+  TableRow,
+  TableCell,
+  TableHeader,
   Link,
   OnlyWhen,
   AsTyped,

@@ -9,6 +9,9 @@ interface AnyNode {
 /** Attributes that are left away while they hold their usual value: those that a part did not have from the first day. */
 const USUAL: Readonly<Record<string, Readonly<Record<string, unknown>>>> = {
   step: { moment: null, when: '', optional: false, key: '' },
+  photo: { focus: null, crop: 'whole' },
+  tableCell: { colspan: 1, rowspan: 1, colwidth: null },
+  tableHeader: { colspan: 1, rowspan: 1, colwidth: null },
   // The text editor's own; `type` is the kind of numbering, of which there is one.
   orderedList: { start: 1, type: null },
 };

@@ -14,6 +14,8 @@ export interface Uses {
   /** Steps that the text speaks of by number; `found` when there is one of that key. */
   readonly references: readonly (Place & { readonly key: string; readonly found: boolean })[];
   readonly pieces: readonly (Place & { readonly piece: string })[];
+  /** Pieces whose curves are drawn at full size. */
+  readonly curves: readonly (Place & { readonly piece: string })[];
   readonly photos: readonly (Place & { readonly upload: string; readonly alt: string })[];
   readonly cutLists: readonly Place[];
   readonly materials: readonly Place[];
@@ -28,6 +30,7 @@ export function collectUses(doc: DocNode): Uses {
   const references: (Place & { key: string; found: boolean })[] = [];
   const keys = new Set(doc.content.flatMap((node) => (node.type === 'step' && node.attrs.key ? [node.attrs.key] : [])));
   const pieces: (Place & { piece: string })[] = [];
+  const curves: (Place & { piece: string })[] = [];
   const photos: (Place & { upload: string; alt: string })[] = [];
   const cutLists: Place[] = [];
   const materials: Place[] = [];
@@ -68,15 +71,29 @@ export function collectUses(doc: DocNode): Uses {
       case 'materials':
         materials.push({ step });
         return blocks(node.content, step);
+      case 'forward':
+        if (node.attrs.key !== '') references.push({ step, key: node.attrs.key, found: keys.has(node.attrs.key) });
+        return blocks(node.content, step);
+      case 'tools':
       case 'tip':
       case 'caution':
+      case 'correction':
         return blocks(node.content, step);
+      case 'table':
+        return node.content.forEach((row) => row.content.forEach((cell) => blocks(cell.content, step)));
+      case 'curveTemplate':
+        return void curves.push({ step, piece: node.attrs.piece });
+      case 'amounts':
+      case 'sheetPlan':
+      case 'foldedView':
+      case 'sizeSummary':
+        return;
       default:
         return node satisfies never;
     }
   };
   blocks(doc.content, null);
-  return { formulas, conditions, references, pieces, photos, cutLists, materials, steps };
+  return { formulas, conditions, references, pieces, curves, photos, cutLists, materials, steps };
 }
 
 /** Every formula that a page of the write-up works out, conditions among them, for a model that is sealed for it. */

@@ -79,6 +79,36 @@ export const sampleDoc: DocNode = {
         },
       ],
     },
+    { type: 'tools', content: [{ type: 'paragraph', content: [{ type: 'text', text: 'Folder' }] }] },
+    { type: 'paragraph', content: [{ type: 'amount', attrs: { of: 'sheets card' } }] },
+    {
+      type: 'forward',
+      attrs: { word: 'Before you fold', key: 'ends' },
+      content: [{ type: 'paragraph', content: [{ type: 'text', text: 'Round them.' }] }],
+    },
+    { type: 'correction', content: [{ type: 'paragraph', content: [{ type: 'text', text: 'It was wider.' }] }] },
+    { type: 'amounts' },
+    { type: 'sheetPlan' },
+    { type: 'curveTemplate', attrs: { piece: 'Strip' } },
+    { type: 'foldedView' },
+    { type: 'sizeSummary' },
+    {
+      type: 'table',
+      content: [
+        {
+          type: 'tableRow',
+          content: [
+            { type: 'tableHeader', content: [{ type: 'paragraph', content: [{ type: 'text', text: 'Glue' }] }] },
+          ],
+        },
+        {
+          type: 'tableRow',
+          content: [
+            { type: 'tableCell', content: [{ type: 'paragraph', content: [{ type: 'text', text: 'White' }] }] },
+          ],
+        },
+      ],
+    },
   ],
 };
 export const sample: WriteUp = { version: 1, doc: sampleDoc };

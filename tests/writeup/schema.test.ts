@@ -9,10 +9,16 @@ describe('the schema', () => {
   it('holds the kinds of parts and marks of the stored contract and no others', () => {
     const { nodes, marks } = writeUpSchema();
     expect(Object.keys(nodes).sort()).toEqual([
+      'amount',
+      'amounts',
       'bulletList',
       'caution',
+      'correction',
+      'curveTemplate',
       'cutList',
       'doc',
+      'foldedView',
+      'forward',
       'hardBreak',
       'heading',
       'listItem',
@@ -22,10 +28,17 @@ describe('the schema', () => {
       'paragraph',
       'photo',
       'pieceCard',
+      'sheetPlan',
+      'sizeSummary',
       'step',
       'stepRef',
+      'table',
+      'tableCell',
+      'tableHeader',
+      'tableRow',
       'text',
       'tip',
+      'tools',
     ]);
     expect(Object.keys(marks).sort()).toEqual(['asTyped', 'bold', 'italic', 'link', 'onlyWhen']);
   });
@@ -56,8 +69,12 @@ describe('what a write-up uses', () => {
         { step: 2, when: 'tab > 1/4 in' },
         { step: 2, when: 'tab > 1/2 in' },
       ],
-      references: [{ step: 2, key: 'ends', found: true }],
+      references: [
+        { step: 2, key: 'ends', found: true },
+        { step: null, key: 'ends', found: true },
+      ],
       pieces: [{ step: 1, piece: 'Strip' }],
+      curves: [{ step: null, piece: 'Strip' }],
       photos: [{ step: 1, upload: 'a1b2c3', alt: 'A strip' }],
       cutLists: [{ step: null }],
       materials: [{ step: null }],

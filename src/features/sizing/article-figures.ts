@@ -1,5 +1,7 @@
-import type { Figures, Model } from '@/engine';
+import type { Figures, Model, SheetPlan } from '@/engine';
 import { holds } from '@/writeup/condition';
+import { curvesInside } from '@/writeup/curve-template';
+import { amountInside, amountsInside, foldedInside, sheetPlanInside, sizesInside } from '@/writeup/render-blocks';
 import { cutListInside, measureInside, pieceCardInside, stepRefInside } from '@/writeup/render-figures';
 import { morphInto } from './morph';
 
@@ -7,6 +9,8 @@ import { morphInto } from './morph';
 export interface ArticleFigures {
   /** Brings everything to these figures; what differs is marked as just changed. */
   show(figures: Figures): void;
+  /** Amounts and blocks that are worked out whole, at a plan of these figures. */
+  showPlan(figures: Figures, plan: SheetPlan): void;
 }
 
 const MARK = 'changed';
@@ -31,6 +35,7 @@ export function articleFigures(root: ParentNode, model: Model): ArticleFigures {
   const apply = conditions(root, model);
 
   return {
+    showPlan: workedBlocks(root, model),
     show(figures) {
       apply(figures);
       const inside = new Map<string, string>();
@@ -54,6 +59,22 @@ export function articleFigures(root: ParentNode, model: Model): ArticleFigures {
       }
       for (const list of lists) morphInto(list, cutListInside(figures), markChanged);
     },
+  };
+}
+
+/** Amounts in the text and blocks that are worked out whole. */
+function workedBlocks(root: ParentNode, model: Model): ArticleFigures['showPlan'] {
+  const all = (mark: string) => [...root.querySelectorAll<HTMLElement>(`[data-${mark}]`)];
+  const [amounts, lists, sheets] = [all('amount'), all('amounts'), all('sheet-plan')];
+  const [folded, sizes, curves] = [all('folded-view'), all('size-summary'), all('curve-of')];
+  return (figures, plan) => {
+    for (const amount of amounts)
+      morphInto(amount, amountInside(figures, plan, amount.dataset.amount ?? ''), markChanged);
+    for (const list of lists) morphInto(list, amountsInside(figures, plan), markChanged);
+    for (const sheet of sheets) morphInto(sheet, sheetPlanInside(figures, plan));
+    for (const view of folded) morphInto(view, foldedInside({ model, figures }));
+    for (const size of sizes) morphInto(size, sizesInside(figures), markChanged);
+    for (const curve of curves) morphInto(curve, curvesInside(figures, curve.dataset.curveOf ?? ''));
   };
 }
 

@@ -3,6 +3,7 @@ import type { ReactNode } from 'react';
 import type { DocNode } from '../document';
 import type { LiveFigures } from '../live';
 import { collectUses } from '../uses';
+import { AmountList } from './AmountList';
 import { BLOCKS, NOTES, type InsertablePart } from './blocks';
 import { ConditionField } from './ConditionField';
 import { LinkField } from './LinkField';
@@ -14,7 +15,7 @@ import { PieceList } from './PieceList';
 import { StepList } from './StepList';
 import { listSteps } from './step-numbers';
 import { usualAddress } from './steps';
-import { insertPart, insertStepRef, putMeasure, setAttributes, setCondition, setLink } from './writing';
+import { insertInline, insertPart, insertStepRef, putMeasure, setAttributes, setCondition, setLink } from './writing';
 
 export interface OpenedFieldProps {
   readonly editor: Editor;
@@ -104,6 +105,13 @@ export function OpenedField({ editor, opened, live, close, leave }: OpenedFieldP
       return parts(NOTES);
     case 'block':
       return parts(BLOCKS);
+    case 'amount':
+      return (
+        <AmountList
+          figures={live?.figures ?? null}
+          onTake={(of) => done(() => insertInline(editor, 'amount', { of }))}
+        />
+      );
     case 'link':
       return (
         <LinkField

@@ -53,9 +53,9 @@ export function Toolbar({ label, tools, words }: ToolbarProps) {
           key={id}
           type="button"
           tabIndex={n === current.current ? 0 : -1}
-          title={`${name} (${keys})`}
+          title={keys === '' ? name : `${name} (${keys})`}
           aria-label={words ? undefined : name}
-          aria-keyshortcuts={ariaKeys}
+          aria-keyshortcuts={ariaKeys || undefined}
           aria-pressed={on === undefined ? undefined : on}
           aria-disabled={off || undefined}
           onMouseDown={(event) => event.preventDefault()}

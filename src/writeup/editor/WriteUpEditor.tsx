@@ -30,6 +30,7 @@ import { shortcut } from './shortcuts';
 import { Toolbar } from './Toolbar';
 import { stepAt } from './steps';
 import { stepNumbers } from './step-numbers';
+import { tableTools } from './table-keys';
 import { takeDocument } from './take-document';
 import { takeNames } from './writing';
 
@@ -143,6 +144,7 @@ export function WriteUpEditor({
   const followed = useEditorState({ editor, selector: ({ editor: now }) => (now ? toolState(now) : null) });
   // Nothing has happened in a new editor yet that would have told the hook.
   const state = followed ?? (editor ? toolState(editor) : null);
+  const inTable = useEditorState({ editor, selector: ({ editor: now }) => now?.isActive('table') ?? false });
   const live = useStore(figures);
   const opens: Opens = {
     link: () => editor && setOpened(openLink(editor)),
@@ -191,6 +193,7 @@ export function WriteUpEditor({
         <div className="writeup-bar">
           <Toolbar label="Put in" words tools={partTools(editor, desk, opens)} />
           <Toolbar label="Text" words={false} tools={markTools(editor, state, opens)} />
+          {inTable ? <Toolbar label="Table" words={false} tools={tableTools(editor)} /> : null}
         </div>
       ) : null}
       {unreadable ? (

@@ -1,7 +1,7 @@
 import { Extension, type Editor } from '@tiptap/core';
 import { NodeSelection } from '@tiptap/pm/state';
 import { afterBlock } from './insert-block';
-import { focusTitle, moveStep, newStep, stepAt } from './steps';
+import { focusTitle, movePart, newStep, stepAt } from './steps';
 
 /** Keys that make and move parts, and the few places where the usual Enter and Backspace would do harm. */
 export const blockKeys = Extension.create({
@@ -23,7 +23,7 @@ export const blockKeys = Extension.create({
 function moved(editor: Editor, by: -1 | 1): boolean {
   const pos = stepAt(editor);
   if (pos === null) return false;
-  moveStep(editor, pos, by);
+  movePart(editor, pos, by);
   return true;
 }
 

@@ -7,7 +7,10 @@ const HINTS: Readonly<Record<string, string>> = {
   step: 'What to do in this step',
   tip: 'What makes it easier',
   caution: 'What can hurt, and how not to be hurt',
-  materials: 'Card, glue, tools',
+  materials: 'Card, glue',
+  tools: 'Trimmer, scoring board, folder',
+  correction: 'What was wrong, and what it means for somebody who has cut already',
+  forward: 'What to do now',
 };
 
 /** Grey words in the only, empty paragraph of a part: what belongs there. They are drawn, never stored. */

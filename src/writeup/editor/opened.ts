@@ -19,6 +19,7 @@ export type Opened =
   | { readonly type: 'step number' }
   | { readonly type: 'note' }
   | { readonly type: 'block' }
+  | { readonly type: 'amount' }
   | { readonly type: 'link'; readonly href: string };
 
 export const OPENED_LABELS: Readonly<Record<Opened['type'], string>> = {
@@ -30,6 +31,7 @@ export const OPENED_LABELS: Readonly<Record<Opened['type'], string>> = {
   'step number': 'Steps',
   note: 'Notes',
   block: 'Blocks',
+  amount: 'Amounts',
   link: 'Link',
 };
 

@@ -5,7 +5,7 @@ import type { LiveFigures } from '../live';
 /**
  * What word processors put on the clipboard, made plain before the schema reads it. The page's security policy keeps the
  * parser from seeing inline styles, so they are read here as text: a `<b>` that is not bold is unwrapped, a bold or italic
- * span becomes an element, list paragraphs become lists, tables lines, and pictures from elsewhere go: only our own are kept.
+ * span becomes an element, list paragraphs become lists, tables in tables lines, and pictures from elsewhere go: only our own are kept.
  */
 export function plainPastedHtml(html: string, live: LiveFigures | null): string {
   const { body } = new DOMParser().parseFromString(withoutStyles(html), 'text/html');
@@ -17,7 +17,7 @@ export function plainPastedHtml(html: string, live: LiveFigures | null): string 
     unwanted.remove();
   emphasise(body);
   rebuildLists(body);
-  linesOfTables(body);
+  plainTables(body);
   resolveMeasures(body, live);
   for (const link of body.querySelectorAll('a[href]'))
     if (safeHref(link.getAttribute('href') ?? '') === null) unwrap(link);
@@ -98,10 +98,9 @@ function firstText(node: Node): Text | null {
   return null;
 }
 
-/** A row of a table becomes a line, its cells parted by commas: the write-up has no tables but the cut list. */
-function linesOfTables(body: Element) {
-  for (const table of [...body.querySelectorAll('table')]) {
-    if (table.closest('[data-cut-list]')) continue;
+/** Tables keep rows and cells; one inside another becomes lines, its cells parted by commas. */
+function plainTables(body: Element) {
+  for (const table of [...body.querySelectorAll('table table')].reverse()) {
     const lines = [...table.querySelectorAll('tr')].map((row) => {
       const line = table.ownerDocument.createElement('p');
       line.textContent = [...row.children]
@@ -111,6 +110,12 @@ function linesOfTables(body: Element) {
       return line;
     });
     table.replaceWith(...lines);
+  }
+  for (const aside of body.querySelectorAll('table > caption, table > colgroup')) aside.remove();
+  for (const cell of body.querySelectorAll('td, th')) {
+    for (const name of ['colspan', 'rowspan'])
+      if (!/^([1-9]|1\d|20)$/.test(cell.getAttribute(name) ?? '1')) cell.removeAttribute(name);
+    for (const heading of cell.querySelectorAll('h1, h2, h3, h4, h5, h6')) rename(heading, 'p');
   }
 }
 

@@ -21,6 +21,7 @@ export function shortcut(
     KeyV: opens.moment,
     KeyN: () => opens.list('note'),
     KeyB: () => opens.list('block'),
+    KeyA: () => opens.list('amount'),
     KeyW: opens.condition,
     KeyS: () => opens.list('step number'),
   }[code];

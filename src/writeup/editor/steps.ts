@@ -60,12 +60,13 @@ export function stepAt(editor: Editor): number | null {
   return $from.depth >= 1 && $from.node(1).type.name === 'step' ? $from.before(1) : null;
 }
 
-/** Changes places with the part before or after it. False at either end. */
-export function moveStep(editor: Editor, pos: number, by: -1 | 1): boolean {
+/** A part changes places with the one before or after it, in the step or the text that it stands in. False at either end. */
+export function movePart(editor: Editor, pos: number, by: -1 | 1): boolean {
   const { state, view } = editor;
-  const index = state.doc.resolve(pos).index(0);
-  const node = state.doc.maybeChild(index);
-  const other = state.doc.maybeChild(index + by);
+  const $pos = state.doc.resolve(pos);
+  const index = $pos.index();
+  const node = $pos.parent.maybeChild(index);
+  const other = $pos.parent.maybeChild(index + by);
   if (!node || !other) return false;
   const inside = state.selection.from - pos;
   const kept = inside > 0 && inside < node.nodeSize;
@@ -79,7 +80,7 @@ export function moveStep(editor: Editor, pos: number, by: -1 | 1): boolean {
 }
 
 /** Takes the step out with all that is in it; a write-up is never left without a paragraph to type in. */
-export function removeStep(editor: Editor, pos: number): void {
+export function removePart(editor: Editor, pos: number): void {
   const { state, view } = editor;
   const node = state.doc.nodeAt(pos);
   const paragraph = state.schema.nodes.paragraph;

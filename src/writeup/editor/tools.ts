@@ -7,7 +7,7 @@ import type { Tool } from './Toolbar';
 /** What opens a field or a list below the caret. */
 export interface Opens {
   readonly link: () => void;
-  readonly list: (type: 'piece' | 'step number' | 'note' | 'block') => void;
+  readonly list: (type: 'piece' | 'step number' | 'note' | 'block' | 'amount') => void;
   readonly condition: () => void;
   readonly moment: () => void;
   readonly photo: () => void;
@@ -37,6 +37,7 @@ export function partTools(editor: Editor, desk: EditingDesk, opens: Opens): read
     tool('moment', 'play', 'Moment', 'Alt Shift V', opens.moment),
     tool('note', 'info', 'Note', 'Alt Shift N', () => opens.list('note')),
     tool('block', 'sheet', 'Block', 'Alt Shift B', () => opens.list('block')),
+    tool('amount', 'glue', 'Amount', 'Alt Shift A', () => opens.list('amount')),
     tool('only-when', 'fork', 'Only when', 'Alt Shift W', opens.condition),
     tool('step-number', 'list-numbered', 'Step no.', 'Alt Shift S', () => opens.list('step number')),
   ];

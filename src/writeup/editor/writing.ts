@@ -2,9 +2,10 @@ import { getMarkRange, type Editor } from '@tiptap/core';
 import { closeHistory } from '@tiptap/pm/history';
 import type { Node as ProseMirrorNode } from '@tiptap/pm/model';
 import { TextSelection } from '@tiptap/pm/state';
-import type { DocNode } from '../document';
+import type { BlockNode, DocNode } from '../document';
 import type { LiveText } from '../live';
 import { insertBlock } from './insert-block';
+import { newTable } from './table-keys';
 
 /** What buttons and fields do to the write-up, each as one step of undo. */
 
@@ -34,11 +35,14 @@ export function putMeasure(
   return true;
 }
 
-export type PartName = 'tip' | 'caution' | 'materials' | 'cutList' | 'pieceCard';
+export type PartName = Exclude<
+  BlockNode['type'],
+  'step' | 'paragraph' | 'heading' | 'bulletList' | 'orderedList' | 'photo'
+>;
 
 export function insertPart(editor: Editor, name: PartName, attrs?: Readonly<Record<string, string>>): boolean {
   const type = editor.schema.nodes[name];
-  const node = type?.createAndFill(attrs ?? null);
+  const node = name === 'table' ? newTable(editor.schema) : type?.createAndFill(attrs ?? null);
   return node ? insertBlock(editor, node) : false;
 }
 
@@ -98,16 +102,33 @@ export function setAttributes({ state, view }: Editor, pos: number, attrs: Reado
   if (node) view.dispatch(closeHistory(state.tr.setNodeMarkup(pos, undefined, { ...node.attrs, ...attrs })));
 }
 
-/** Puts the number of the step at `pos` in at the caret; the step gets a key when it has none yet. */
-export function insertStepRef({ state, view }: Editor, pos: number): void {
-  const { stepRef, paragraph } = state.schema.nodes;
+/** The key of the step at `pos`, which gets one when it has none yet. */
+export function keyOfStep({ state, view }: Editor, pos: number): string {
   const step = state.doc.nodeAt(pos);
-  const { $from, from, to } = state.selection;
-  if (!stepRef || !paragraph || step?.type.name !== 'step') return;
+  if (step?.type.name !== 'step') return '';
   const key = String(step.attrs.key) || newKey(state.doc);
-  const tr = state.tr.setNodeMarkup(pos, undefined, { ...step.attrs, key });
-  const node = stepRef.create({ key }, null, $from.parent.inlineContent ? $from.marks() : undefined);
-  if ($from.parent.inlineContent) tr.replaceWith(from, to, node);
+  if (key !== step.attrs.key) view.dispatch(state.tr.setNodeMarkup(pos, undefined, { ...step.attrs, key }));
+  return key;
+}
+
+/** Puts the number of the step at `pos` in at the caret; the step gets a key when it has none yet. */
+export function insertStepRef(editor: Editor, pos: number): void {
+  insertInline(editor, 'stepRef', { key: keyOfStep(editor, pos) });
+}
+
+/** Puts a part of the text in at the caret; where no text can stand, in a paragraph of its own. */
+export function insertInline(
+  { state, view }: Editor,
+  name: 'stepRef' | 'amount',
+  attrs: Readonly<Record<string, string>>,
+): void {
+  const { [name]: type, paragraph } = state.schema.nodes;
+  if (!type || !paragraph) return;
+  const { $from, from, to } = state.selection;
+  const inText = $from.parent.inlineContent;
+  const node = type.create(attrs, null, inText ? $from.marks() : undefined);
+  const { tr } = state;
+  if (inText) tr.replaceWith(from, to, node);
   else tr.replaceSelectionWith(paragraph.create(null, node));
   view.dispatch(closeHistory(tr).scrollIntoView());
 }

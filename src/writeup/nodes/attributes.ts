@@ -1,4 +1,4 @@
-import type { VideoMoment } from '../document';
+import type { PhotoCrop, PhotoNode, VideoMoment } from '../document';
 import { videoHref } from '../links';
 
 /** Checks on attribute values, for ProseMirror's `check()`: each throws a plain sentence when the value is not one that we store. */
@@ -61,4 +61,29 @@ export const pixels = (value: unknown) => {
 export const uploadId = (value: unknown) => {
   if (typeof value !== 'string' || !/^[\w-]{1,64}$/.test(value))
     throw new RangeError('the id of a stored picture is wanted');
+};
+
+/** Where a photo is cropped round: tenths across and down, or nothing. */
+export const photoFocus = (value: unknown) => {
+  if (value !== null && !isFocus(value)) throw new RangeError('two whole tenths from 0 to 10 are wanted, or nothing');
+};
+export const isFocus = (value: unknown): value is NonNullable<PhotoNode['attrs']['focus']> => {
+  if (typeof value !== 'object' || value === null) return false;
+  const { across, down, ...others } = value as Record<string, unknown>;
+  return (
+    [across, down].every((n) => Number.isInteger(n) && Number(n) >= 0 && Number(n) <= 10) &&
+    Object.keys(others).length === 0
+  );
+};
+
+const CROPS: readonly unknown[] = ['whole', 'wide', 'square'] satisfies readonly PhotoCrop[];
+export const isCrop = (value: unknown): value is PhotoCrop => CROPS.includes(value);
+export const photoCrop = (value: unknown) => {
+  if (!isCrop(value)) throw new RangeError('whole, wide or square is wanted');
+};
+
+/** How many columns or rows a cell covers. */
+export const span = (value: unknown) => {
+  if (typeof value !== 'number' || !Number.isInteger(value) || value < 1 || value > 20)
+    throw new RangeError('a whole number from 1 to 20 is wanted');
 };

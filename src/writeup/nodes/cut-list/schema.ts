@@ -1,21 +1,4 @@
-import { Node } from '@tiptap/core';
+import { liveBlock } from '../live-block';
 
 /** Every piece with its count, size and scores, in one table. */
-export const CutList = Node.create({
-  name: 'cutList',
-  group: 'block',
-  atom: true,
-  draggable: true,
-
-  parseHTML() {
-    return [{ tag: 'div[data-cut-list]' }];
-  },
-
-  renderHTML() {
-    return ['div', { 'data-cut-list': '' }, ['p', {}, 'Cut list']];
-  },
-
-  renderText() {
-    return 'Cut list';
-  },
-});
+export const CutList = liveBlock('cutList', 'data-cut-list', 'Cut list');

@@ -1,26 +1,10 @@
-import type { NodeViewRenderer } from '@tiptap/core';
 import type { EditingDesk } from '../../editor/editing-desk';
 import { cutListInside } from '../../render-figures';
+import { liveBlockView } from '../live-block';
 
-/** The cut list in the editor: the same table that the reader gets, following the figures. */
-export function cutListView(desk: EditingDesk): NodeViewRenderer {
-  return ({ node }) => {
-    const dom = document.createElement('div');
-    dom.className = 'cut-list';
-    dom.contentEditable = 'false';
-    const draw = () => {
-      const live = desk.figures.get();
-      dom.innerHTML = live ? cutListInside(live.figures) : '<p>The cut list appears when the pattern reads.</p>';
-    };
-    draw();
-    const stop = desk.figures.listen(draw);
-    return {
-      dom,
-      update: (next) => next.type === node.type,
-      selectNode: () => dom.classList.add('selected'),
-      deselectNode: () => dom.classList.remove('selected'),
-      ignoreMutation: () => true,
-      destroy: stop,
-    };
-  };
-}
+export const cutListView = (desk: EditingDesk) =>
+  liveBlockView(desk, {
+    className: 'cut-list',
+    words: 'The cut list',
+    inside: ({ figures }) => cutListInside(figures),
+  });

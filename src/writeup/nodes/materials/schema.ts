@@ -4,7 +4,7 @@ import { Node } from '@tiptap/core';
 export const Materials = Node.create({
   name: 'materials',
   group: 'block',
-  content: '(paragraph | heading | bulletList | orderedList)+',
+  content: '(paragraph | heading | bulletList | orderedList | amounts)+',
   defining: true,
 
   parseHTML() {

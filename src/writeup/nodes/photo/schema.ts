@@ -1,5 +1,5 @@
 import { Node } from '@tiptap/core';
-import { pixels, textUpTo, uploadId } from '../attributes';
+import { isCrop, isFocus, photoCrop, photoFocus, pixels, readJson, textUpTo, uploadId } from '../attributes';
 
 /** A stored picture with its text alternative; the content is the caption. */
 export const Photo = Node.create({
@@ -34,6 +34,21 @@ export const Photo = Node.create({
         validate: pixels,
         parseHTML: (element) => Number(element.getAttribute('data-height')) || 1,
         renderHTML: ({ height }) => ({ 'data-height': String(height) }),
+      },
+      focus: {
+        default: null,
+        validate: photoFocus,
+        parseHTML: (element) => readJson(element.getAttribute('data-focus'), isFocus),
+        renderHTML: ({ focus }) => (focus === null ? {} : { 'data-focus': JSON.stringify(focus) }),
+      },
+      crop: {
+        default: 'whole',
+        validate: photoCrop,
+        parseHTML: (element) => {
+          const crop = element.getAttribute('data-crop');
+          return isCrop(crop) ? crop : 'whole';
+        },
+        renderHTML: ({ crop }) => (crop === 'whole' ? {} : { 'data-crop': String(crop) }),
       },
     };
   },

@@ -1,10 +1,20 @@
 import type { NodeViewRenderer } from '@tiptap/core';
-import { textField } from '../../editor/dom';
+import type { PhotoCrop, PhotoNode } from '../../document';
+import { iconButton, textField } from '../../editor/dom';
+import type { EditingDesk } from '../../editor/editing-desk';
+import { movePart } from '../../editor/steps';
 import { typeAttribute } from '../../editor/type-attribute';
-import { pictureSources, pictureUrl } from '../../pictures';
+import { focusClasses, pictureSources, pictureUrl } from '../../pictures';
 
-/** A photo in the editor: the picture, the words for those who cannot see it, and the caption, which is ordinary text. */
-export function photoView(): NodeViewRenderer {
+const MIDDLE = { across: 5, down: 5 } as const;
+const CROPS: readonly (readonly [PhotoCrop, string])[] = [
+  ['whole', 'Whole picture'],
+  ['wide', 'Cropped wide'],
+  ['square', 'Cropped square'],
+];
+
+/** A photo in the editor: the picture, what of it stays in sight when it is cropped, the words for those who cannot see it, and the caption, which is ordinary text. */
+export function photoView(desk: EditingDesk): NodeViewRenderer {
   return ({ node, editor, getPos }) => {
     const dom = document.createElement('figure');
     dom.className = 'photo photo-edited';
@@ -25,8 +35,30 @@ export function photoView(): NodeViewRenderer {
     label.append(labelWords, alt);
     const contentDOM = document.createElement('figcaption');
     contentDOM.dataset.hint = 'Caption';
-    side.append(contentDOM, label);
-    dom.append(image, side);
+    const frame = document.createElement('div');
+    frame.className = 'photo-frame';
+    frame.contentEditable = 'false';
+    const focus = document.createElement('button');
+    focus.type = 'button';
+    focus.className = 'photo-focus';
+    frame.append(image, focus);
+    const tools = document.createElement('div');
+    tools.className = 'photo-tools';
+    tools.contentEditable = 'false';
+    const crop = document.createElement('select');
+    crop.setAttribute('aria-label', 'Crop');
+    crop.append(...CROPS.map(([value, words]) => new Option(words, value)));
+    const move = (by: -1 | 1, refused: string) => () => {
+      const pos = getPos();
+      if (pos !== undefined && !movePart(editor, pos, by)) desk.say(refused);
+    };
+    tools.append(
+      crop,
+      iconButton('chevron-up', 'Move the photo up', move(-1, 'This is the first place.')),
+      iconButton('chevron-down', 'Move the photo down', move(1, 'This is the last place.')),
+    );
+    side.append(contentDOM, label, tools);
+    dom.append(frame, side);
 
     let current = node;
     const show = () => {
@@ -35,7 +67,16 @@ export function photoView(): NodeViewRenderer {
         width,
         height,
         alt: words,
-      } = current.attrs as { upload: string; width: number; height: number; alt: string };
+        crop: cropped = 'whole',
+        focus: at,
+      } = current.attrs as PhotoNode['attrs'];
+      const { across, down } = at ?? MIDDLE;
+      crop.value = cropped;
+      focus.className = `photo-focus${focusClasses({ across, down })}`;
+      focus.setAttribute(
+        'aria-label',
+        `What stays in sight: ${across * 10} % across, ${down * 10} % down. Arrows move it; a click on the picture sets it.`,
+      );
       const src = pictureUrl(upload, 960);
       if (image.getAttribute('src') !== src) {
         image.srcset = pictureSources(upload, width);
@@ -51,6 +92,26 @@ export function photoView(): NodeViewRenderer {
       contentDOM.classList.toggle('empty-hint', current.content.size === 0);
     };
     show();
+    const aim = (across: number, down: number) => {
+      const pos = getPos();
+      const within = (n: number) => Math.min(10, Math.max(0, Math.round(n)));
+      if (pos !== undefined) typeAttribute(editor, pos, 'focus', { across: within(across), down: within(down) });
+    };
+    image.addEventListener('click', (event) => {
+      const box = image.getBoundingClientRect();
+      aim(((event.clientX - box.left) / box.width) * 10, ((event.clientY - box.top) / box.height) * 10);
+    });
+    focus.addEventListener('keydown', (event) => {
+      const by = { ArrowLeft: [-1, 0], ArrowRight: [1, 0], ArrowUp: [0, -1], ArrowDown: [0, 1] }[event.key];
+      if (!by) return;
+      event.preventDefault();
+      const { across, down } = (current.attrs as PhotoNode['attrs']).focus ?? MIDDLE;
+      aim(across + (by[0] ?? 0), down + (by[1] ?? 0));
+    });
+    crop.addEventListener('change', () => {
+      const pos = getPos();
+      if (pos !== undefined) typeAttribute(editor, pos, 'crop', crop.value);
+    });
     alt.addEventListener('input', () => {
       const pos = getPos();
       if (pos !== undefined) typeAttribute(editor, pos, 'alt', alt.value);
@@ -80,7 +141,8 @@ export function photoView(): NodeViewRenderer {
       },
       selectNode: () => dom.classList.add('selected'),
       deselectNode: () => dom.classList.remove('selected'),
-      stopEvent: (event) => event.target instanceof Node && label.contains(event.target),
+      stopEvent: (event) =>
+        event.target instanceof Node && [label, tools, focus].some((part) => part.contains(event.target as Node)),
       ignoreMutation: (mutation) => mutation.type !== 'selection' && !contentDOM.contains(mutation.target),
     };
   };

@@ -1,6 +1,6 @@
 import type { Editor, NodeViewRenderer } from '@tiptap/core';
 import { TextSelection } from '@tiptap/pm/state';
-import { moveStep, removeStep } from '../../editor/steps';
+import { movePart, removePart } from '../../editor/steps';
 import type { EditingDesk } from '../../editor/editing-desk';
 import type { IconName } from '@/components/icons';
 import { holds } from '../../condition';
@@ -54,18 +54,18 @@ export function stepView(desk: EditingDesk): NodeViewRenderer {
       iconButton(
         'chevron-up',
         'Move the step up',
-        act((pos) => moveStep(editor, pos, -1) || desk.say('This is the first place.')),
+        act((pos) => movePart(editor, pos, -1) || desk.say('This is the first place.')),
       ),
       iconButton(
         'chevron-down',
         'Move the step down',
-        act((pos) => moveStep(editor, pos, 1) || desk.say('This is the last place.')),
+        act((pos) => movePart(editor, pos, 1) || desk.say('This is the last place.')),
       ),
       iconButton(
         'trash',
         'Remove the step',
         act((pos) => {
-          removeStep(editor, pos);
+          removePart(editor, pos);
           desk.say('Step removed. Undo brings it back.');
         }),
       ),

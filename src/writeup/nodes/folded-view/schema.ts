@@ -1,0 +1,4 @@
+import { liveBlock } from '../live-block';
+
+/** The finished box. */
+export const FoldedViewBlock = liveBlock('foldedView', 'data-folded-view', 'Folded');

@@ -1,0 +1,6 @@
+import type { EditingDesk } from '../../editor/editing-desk';
+import { foldedInside } from '../../render-blocks';
+import { liveBlockView } from '../live-block';
+
+export const foldedViewView = (desk: EditingDesk) =>
+  liveBlockView(desk, { className: 'live-block folded-view', words: 'The folded box', inside: foldedInside });
