@@ -2,7 +2,6 @@ import { describe, expect, it } from 'vitest';
 import {
   addMeasure,
   changeAsk,
-  changeTrack,
   nameTrouble,
   removeMeasure,
   turnOver,
@@ -35,20 +34,14 @@ describe('editing a pattern', () => {
     expect(turned?.formula).toBeUndefined();
     expect(turned?.ask?.usual).toBe('2 * inside width');
   });
-  it('changes the size of one column', () => {
-    const changed = changeTrack(
-      FOLDER,
-      { piece: 'Folder', axis: 'columns', index: 1 },
-      { size: 'inside width + 1 mm' },
-    );
-    const [folder] = changed.pieces;
-    expect(folder?.builder === 'grid' && folder.columns.map((column) => column.size)).toEqual([
-      'inside width',
-      'inside width + 1 mm',
-    ]);
-  });
   it('says what uses a measure before it is taken out', () => {
-    expect(usersOf(FOLDER, 'inside width')).toEqual(['measure “blank width”', 'piece “Folder”', 'fit “it stands”']);
+    expect(usersOf(FOLDER, 'inside width')).toEqual([
+      'the inside size “wide”',
+      'the outside size “wide”',
+      'measure “blank width”',
+      'piece “Folder”',
+      'fit “it stands”',
+    ]);
     expect(usersOf(addMeasure(FOLDER, { name: 'spare', formula: '1 in' }), 'spare')).toEqual([]);
     expect(removeMeasure(FOLDER, 'blank width').measures.map((known) => known.name)).toEqual([
       'inside width',

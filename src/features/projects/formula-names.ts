@@ -21,6 +21,10 @@ export function namesIn(formula: string, names: readonly string[]): readonly Nam
   }));
 }
 
+/** The source of an expression that finds a name in whatever layout. */
+export const searchFor = (name: string): string =>
+  name.replace(/[.*+?^${}()|[\]\\]/gu, '\\$&').replace(/\s+/gu, '\\s+');
+
 interface Finder {
   readonly pattern: RegExp;
   /** Names as they are called, by how they are compared. */
@@ -34,9 +38,7 @@ function finder(names: readonly string[]): Finder {
   const key = names.join('\n');
   const known = finders.get(key);
   if (known) return known;
-  const words = [...names]
-    .sort((a, b) => b.length - a.length)
-    .map((name) => name.replace(/[.*+?^${}()|[\]\\]/gu, '\\$&').replace(/\s+/gu, '\\s+'));
+  const words = [...names].sort((a, b) => b.length - a.length).map(searchFor);
   const made = {
     pattern: new RegExp(`(?<![\\p{L}\\p{N}_.])(?:${words.join('|')})(?![\\p{L}\\p{N}_])${NO_CALL}`, 'giu'),
     names: new Map(names.map((name) => [keyOf(name), name])),

@@ -1,15 +1,25 @@
 import { useState, type FormEvent } from 'react';
 import { Icon } from '@/components/Icon';
 import { cleanName, type Pattern } from '@/engine';
-import { addMeasure, nameTrouble, questionFor } from '@/features/projects/pattern-edits';
+import { addChoice, addMeasure, nameTrouble, questionFor } from '@/features/projects/pattern-edits';
 import type { DeskStore } from './desk-store';
 
-/** A new measure by name, asked of the reader or worked out. */
+/** A new measure by name, asked of the reader or worked out; or a new choice. */
 export function AddMeasure({ store, pattern }: { readonly store: DeskStore; readonly pattern: Pattern }) {
   const [open, setOpen] = useState(false);
   const [name, setName] = useState('');
   const [trouble, setTrouble] = useState<string | null>(null);
 
+  const addAsChoice = () => {
+    const found = nameTrouble(pattern, name, 'choice');
+    setTrouble(found);
+    if (found !== null) return;
+    const clean = cleanName(name);
+    store.editPattern(null, (now) => addChoice(now, clean));
+    store.select(clean);
+    setName('');
+    setOpen(false);
+  };
   const add = (asked: boolean) => {
     const found = nameTrouble(pattern, name);
     setTrouble(found);
@@ -34,7 +44,7 @@ export function AddMeasure({ store, pattern }: { readonly store: DeskStore; read
     return (
       <p className="desk-add">
         <button type="button" className="text-button small" onClick={() => setOpen(true)}>
-          <Icon name="plus" /> Measure
+          <Icon name="plus" /> Measure or choice
         </button>
       </p>
     );
@@ -48,7 +58,7 @@ export function AddMeasure({ store, pattern }: { readonly store: DeskStore; read
       }}
     >
       <label className="small soft" htmlFor="new-measure">
-        Name of the new measure
+        Name of the new measure or choice
       </label>
       <input
         id="new-measure"
@@ -64,6 +74,9 @@ export function AddMeasure({ store, pattern }: { readonly store: DeskStore; read
       </button>
       <button type="button" className="btn small-btn" onClick={() => add(true)}>
         Asked
+      </button>
+      <button type="button" className="btn small-btn" onClick={addAsChoice}>
+        A choice
       </button>
       <button type="button" className="text-button small" onClick={() => setOpen(false)}>
         Cancel

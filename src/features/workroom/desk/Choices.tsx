@@ -1,19 +1,22 @@
 import { Segmented } from '@/components/Segmented';
+import type { Fault } from '@/engine';
 import { changeChoice } from '@/features/projects/pattern-edits';
 import type { Lit } from '@/features/projects/followers';
 import { chosenOption, withChoice } from '@/features/sizing/sizing-values';
+import { ChoiceDetails } from './ChoiceDetails';
 import type { DeskStore, Draft } from './desk-store';
+import { FaultWords } from './FaultWords';
 
-/** The pattern's choices: which option readers see first, and which is usual. */
-export function Choices({
-  store,
-  draft,
-  lit,
-}: {
+export interface ChoicesProps {
   readonly store: DeskStore;
   readonly draft: Draft;
   readonly lit: Lit | null;
-}) {
+  readonly names: readonly string[];
+  readonly faults: readonly Fault[];
+}
+
+/** The pattern's choices: which option readers see first, and which is usual. Selected, one opens what else it has. */
+export function Choices({ store, draft, lit, names, faults }: ChoicesProps) {
   const { pattern, sizing } = draft;
   if (pattern.choices.length === 0) return null;
   return (
@@ -23,6 +26,7 @@ export function Choices({
         {pattern.choices.map((choice) => {
           const shown = chosenOption(sizing, choice);
           const selected = lit?.selected === choice.name;
+          const own = faults.filter((fault) => fault.where.startsWith(`choice “${choice.name}”`));
           return (
             <div key={choice.name} className={selected ? 'choice selected' : 'choice'}>
               <button
@@ -51,6 +55,14 @@ export function Choices({
                 >
                   Make it usual
                 </button>
+              )}
+              {selected ? <ChoiceDetails {...{ store, pattern, choice, names, lit, faults: own }} /> : null}
+              {selected ? null : (
+                <FaultWords
+                  faults={own}
+                  value={choice.when ?? ''}
+                  onCure={(when) => store.editPattern(null, (now) => changeChoice(now, choice.name, { when }))}
+                />
               )}
             </div>
           );

@@ -1,4 +1,4 @@
-import { useRef } from 'react';
+import { useRef, type ReactNode } from 'react';
 import { Icon } from '@/components/Icon';
 
 export interface ColumnHeadProps {
@@ -10,10 +10,12 @@ export interface ColumnHeadProps {
   readonly places?: string;
   /** Steps through the lit places in another way than scrolling to them. */
   readonly onStep?: (by: 1 | -1) => void;
+  /** What can be begun in this column. */
+  readonly action?: ReactNode;
 }
 
 /** A column's name, its key, and how many places the selected measure lights in it, with previous and next. */
-export function ColumnHead({ title, shortcut, lit, places = '[data-lit]', onStep }: ColumnHeadProps) {
+export function ColumnHead({ title, shortcut, lit, places = '[data-lit]', onStep, action }: ColumnHeadProps) {
   const head = useRef<HTMLElement>(null);
   const at = useRef(-1);
   const step = (by: 1 | -1) => {
@@ -42,6 +44,7 @@ export function ColumnHead({ title, shortcut, lit, places = '[data-lit]', onStep
           </button>
         </span>
       )}
+      {action}
     </header>
   );
 }

@@ -1,5 +1,8 @@
+import { useRef } from 'react';
 import type { Fault } from '@/engine';
 import { namesIn } from '@/features/projects/formula-names';
+import { CompletionList } from './CompletionList';
+import { useCompletion } from './use-completion';
 
 export interface FormulaFieldProps {
   readonly label: string;
@@ -20,7 +23,10 @@ interface Piece {
   readonly mark: 'lit' | 'bad' | null;
 }
 
-/** A formula to type in, with what does not read underlined at its place. It grows with its text; Enter leaves the field. */
+/**
+ * A formula to type in, with what does not read underlined at its place and names offered as they are typed. It grows with its
+ * text; Enter leaves the field.
+ */
 export function FormulaField({
   label,
   value,
@@ -33,6 +39,9 @@ export function FormulaField({
   onFocus,
 }: FormulaFieldProps) {
   const span = faults.find((fault) => fault.span !== undefined)?.span;
+  const field = useRef<HTMLTextAreaElement>(null);
+  const completing = useCompletion(field, value, onChange);
+  const { offer, listId } = completing;
   return (
     <div className={faults.length > 0 ? 'formula wrong' : 'formula'}>
       <div className="formula-ink" aria-hidden="true">
@@ -48,7 +57,13 @@ export function FormulaField({
         {'\u200b'}
       </div>
       <textarea
+        ref={field}
         rows={1}
+        role="combobox"
+        aria-autocomplete="list"
+        aria-expanded={offer !== null}
+        aria-controls={offer === null ? undefined : listId}
+        aria-activedescendant={offer === null || offer.active < 0 ? undefined : `${listId}-${offer.active}`}
         aria-label={label}
         aria-invalid={faults.length > 0 ? true : undefined}
         aria-describedby={describedBy}
@@ -58,14 +73,22 @@ export function FormulaField({
         autoCapitalize="off"
         maxLength={1000}
         value={value}
-        onChange={(event) => onChange(event.currentTarget.value.replace(/\n/gu, ' '))}
+        onChange={(event) => {
+          const next = event.currentTarget.value.replace(/\n/gu, ' ');
+          onChange(next);
+          completing.typed(next, event.currentTarget.selectionStart);
+        }}
         onFocus={onFocus}
+        onBlur={completing.close}
         onKeyDown={(event) => {
-          if (event.key !== 'Enter') return;
-          event.preventDefault();
-          event.currentTarget.blur();
+          if (completing.press(event)) event.preventDefault();
+          else if (event.key === 'Enter') {
+            event.preventDefault();
+            event.currentTarget.blur();
+          }
         }}
       />
+      {offer === null ? null : <CompletionList id={listId} label={label} offer={offer} onTake={completing.take} />}
     </div>
   );
 }

@@ -1,11 +1,12 @@
-import { useState } from 'react';
-import type { Ask, Fault } from '@/engine';
-import { changeAsk, removeMeasure, turnOver, usersOf } from '@/features/projects/pattern-edits';
+import type { Ask, Fault, MeasureDef } from '@/engine';
+import { changeAsk, changeMeasure, removeMeasure, turnOver, usersOf } from '@/features/projects/pattern-edits';
 import { fieldOfFault } from '@/features/projects/proof-place';
 import { FaultWords } from './FaultWords';
+import { LabelledFormula, OptionField, orNothing, TextField } from './fields';
 import { FormulaField } from './FormulaField';
 import type { MeasureRowProps } from './MeasureRow';
 import { SizeSlider } from './SizeSlider';
+import { TakeOut } from './TakeOut';
 
 const RANGE_FIELDS: readonly { readonly key: 'usual' | 'from' | 'to'; readonly label: string }[] = [
   { key: 'usual', label: 'Usual' },
@@ -29,6 +30,7 @@ export function MeasureDetails({
     <div className="measure-details">
       {ask && figure ? <SizeSlider store={store} figure={figure} sizing={sizing} /> : null}
       {ask ? <AskFields store={store} name={name} ask={ask} names={names} own={own} lit={lit?.names ?? null} /> : null}
+      <MeasureFields {...{ store, measure, names, own }} lit={lit} />
       <div className="measure-deeds">
         {ask ? (
           <label className="check tight">
@@ -50,8 +52,81 @@ export function MeasureDetails({
         >
           {ask ? 'Work it out by a formula' : 'Ask the reader instead'}
         </button>
-        <TakeOut {...{ store, name }} />
+        <TakeOut
+          usersOf={() => usersOf(store.$draft.get().pattern, name)}
+          onTake={() => {
+            store.select(null);
+            store.editPattern(null, (pattern) => removeMeasure(pattern, name));
+          }}
+        />
       </div>
+    </div>
+  );
+}
+
+const KINDS = [
+  { value: 'length' },
+  { value: 'area' },
+  { value: 'angle' },
+  { value: 'number' },
+  { value: 'whole number' },
+] as const;
+const UNITS = [
+  { value: 'own', label: 'as the reader chose' },
+  { value: 'in', label: 'inches' },
+  { value: 'mm', label: 'millimetres' },
+  { value: 'cm', label: 'centimetres' },
+] as const;
+
+/** What kind of value it is, in which unit it is always shown, when it is asked, and a note. */
+function MeasureFields({
+  store,
+  measure,
+  names,
+  own,
+  lit,
+}: Pick<MeasureRowProps, 'store' | 'measure' | 'names' | 'lit'> & { readonly own: readonly Fault[] }) {
+  const { name, ask } = measure;
+  const kind = measure.kind ?? 'length';
+  const change = (field: string | null, part: Partial<MeasureDef>) =>
+    store.editPattern(field === null ? null : `${name}.${field}`, (pattern) => changeMeasure(pattern, name, part));
+  return (
+    <div className="field-row">
+      <OptionField
+        label="It is a"
+        of={name}
+        value={kind}
+        options={KINDS}
+        onChange={(next) => change(null, { kind: next === 'length' ? undefined : next })}
+      />
+      {kind === 'length' ? (
+        <OptionField
+          label="Shown in"
+          of={name}
+          value={measure.unit ?? 'own'}
+          options={UNITS}
+          onChange={(unit) => change(null, { unit: unit === 'own' ? undefined : unit })}
+        />
+      ) : null}
+      {ask ? (
+        <LabelledFormula
+          label="Asked only when"
+          of={name}
+          value={ask.when ?? ''}
+          {...{ names, lit }}
+          faults={own.filter(({ where }) => where === `measure “${name}”, when`)}
+          onChange={(when) =>
+            store.editPattern(`${name}.when`, (pattern) => changeAsk(pattern, name, { when: orNothing(when) }))
+          }
+        />
+      ) : null}
+      <TextField
+        label="Note to yourself"
+        of={name}
+        value={measure.note ?? ''}
+        maxLength={1000}
+        onChange={(note) => change('note', { note: orNothing(note) })}
+      />
     </div>
   );
 }
@@ -108,42 +183,7 @@ function AskFields({
 /** The faults that stand in one field of an asked measure; those of no field are told at the usual value. */
 const inField = (faults: readonly Fault[], name: string, key: 'usual' | 'from' | 'to'): readonly Fault[] =>
   faults.filter((fault) => {
+    if (fault.where === `measure “${name}”, when`) return false;
     const field = fieldOfFault(fault, name);
     return field === key || (field === 'formula' && key === 'usual');
   });
-
-function TakeOut({ store, name }: { readonly store: MeasureRowProps['store']; readonly name: string }) {
-  const [asking, setAsking] = useState<readonly string[] | null>(null);
-  const remove = () => {
-    store.select(null);
-    store.editPattern(null, (pattern) => removeMeasure(pattern, name));
-  };
-  if (asking === null) {
-    return (
-      <button
-        type="button"
-        className="text-button small"
-        onClick={() => {
-          const users = usersOf(store.$draft.get().pattern, name);
-          if (users.length === 0) remove();
-          else setAsking(users);
-        }}
-      >
-        Take it out
-      </button>
-    );
-  }
-  const shown = asking.slice(0, 3).join(', ');
-  return (
-    <p className="take-out" role="alert">
-      {shown}
-      {asking.length > 3 ? ` and ${asking.length - 3} more` : ''} would no longer read.
-      <button type="button" className="btn small-btn danger" onClick={remove}>
-        Take it out all the same
-      </button>
-      <button type="button" className="btn small-btn" onClick={() => setAsking(null)}>
-        Keep it
-      </button>
-    </p>
-  );
-}

@@ -1,6 +1,7 @@
-import { useId } from 'react';
+import { useId, useState, type DragEvent } from 'react';
+import { Icon } from '@/components/Icon';
 import type { Fault, MeasureDef, MeasureFigure, Rounding, Sizing } from '@/engine';
-import { changeAsk, changeMeasure } from '@/features/projects/pattern-edits';
+import { changeAsk, changeMeasure, moveMeasure, moveMeasureTo } from '@/features/projects/pattern-edits';
 import type { Lit } from '@/features/projects/followers';
 import { fieldOfFault } from '@/features/projects/proof-place';
 import type { DeskStore } from './desk-store';
@@ -24,6 +25,7 @@ export interface MeasureRowProps {
   readonly renamed: string | null;
   readonly onRenamed: (name: string, words: string) => void;
 }
+const MOVES: Readonly<Record<string, 1 | -1>> = { ArrowUp: -1, ArrowDown: 1 };
 const ROUNDINGS: readonly Rounding[] = ['nearest', 'up', 'down', 'exact'];
 
 /** One measure: what it is, what it comes to, how it is rounded. Selected, it opens what else can be changed. */
@@ -32,7 +34,16 @@ export function MeasureRow(props: MeasureRowProps) {
   const errorId = useId();
   const renameId = useId();
   const { name } = measure;
-  const renaming = useRenaming(store, name, props.onRenamed);
+  const renaming = useRenaming(
+    store,
+    { what: 'measure', from: name },
+    {
+      onRenamed: props.onRenamed,
+      onBegin: () => store.select(name),
+      backTo: (called) => `[data-place="name:${CSS.escape(called)}"]`,
+    },
+  );
+  const dragging = useRowDrag(name, (from) => store.editPattern(null, (pattern) => moveMeasureTo(pattern, from, name)));
   const selected = lit?.selected === name;
   const follows = lit !== null && !selected && lit.names.has(name);
   const own = faults.filter((fault) => fieldOfFault(fault, name) !== null);
@@ -49,21 +60,33 @@ export function MeasureRow(props: MeasureRowProps) {
 
   return (
     <>
-      <tr className={className} data-lit={follows ? '' : undefined} data-measure={name}>
+      <tr
+        className={dragging.over ? `${className} takes-drop` : className}
+        data-lit={follows ? '' : undefined}
+        data-measure={name}
+        {...dragging.row}
+      >
         <th scope="row">
+          <span className="row-grip" aria-hidden="true" title="Drag it to another place" {...dragging.grip}>
+            <Icon name="grip" />
+          </span>
           {renaming.typed === null ? (
             <button
               type="button"
               className="measure-name"
               aria-pressed={selected}
-              aria-keyshortcuts="F2"
-              title="F2 renames it"
+              aria-keyshortcuts="F2 Alt+ArrowUp Alt+ArrowDown"
+              title="F2 renames it, Alt with an arrow moves it"
               data-place={`name:${name}`}
               onClick={() => store.select(selected ? null : name)}
               onKeyDown={(event) => {
-                if (event.key !== 'F2') return;
+                const by = event.altKey ? MOVES[event.key] : undefined;
+                if (by === undefined && event.key !== 'F2') return;
                 event.preventDefault();
-                renaming.begin();
+                if (by === undefined) return renaming.begin();
+                store.editPattern(null, (pattern) => moveMeasure(pattern, name, by));
+                const { currentTarget } = event;
+                requestAnimationFrame(() => currentTarget.focus());
               }}
             >
               {name}
@@ -161,4 +184,37 @@ export function MeasureRow(props: MeasureRowProps) {
       ) : null}
     </>
   );
+}
+
+/** What is dragged from one row to another; only rows of this table know it. */
+const DRAGGED = 'application/x-foldwright-measure';
+
+/** A row that can be dragged by its grip and takes what is dropped on it. */
+function useRowDrag(name: string, onDrop: (from: string) => void) {
+  const [over, setOver] = useState(false);
+  const carries = (event: DragEvent) => event.dataTransfer.types.includes(DRAGGED);
+  return {
+    over,
+    grip: {
+      draggable: true,
+      onDragStart: (event: DragEvent) => {
+        event.dataTransfer.setData(DRAGGED, name);
+        event.dataTransfer.effectAllowed = 'move';
+      },
+    },
+    row: {
+      onDragOver: (event: DragEvent) => {
+        if (!carries(event)) return;
+        event.preventDefault();
+        setOver(true);
+      },
+      onDragLeave: () => setOver(false),
+      onDrop: (event: DragEvent) => {
+        setOver(false);
+        if (!carries(event)) return;
+        event.preventDefault();
+        onDrop(event.dataTransfer.getData(DRAGGED));
+      },
+    },
+  };
 }

@@ -11,6 +11,7 @@ import type { DeskStore, Draft } from './desk-store';
 import { cutText } from './figure-text';
 import { FitList } from './FitList';
 import { MeasureRow } from './MeasureRow';
+import { FormulaPattern } from './use-completion';
 import { UnitsAndGrid } from './UnitsAndGrid';
 
 /** Measures asked and worked, choices, and fits at the size shown. */
@@ -56,55 +57,57 @@ export function MeasuresColumn({ store }: { readonly store: DeskStore }) {
   };
 
   return (
-    <section className="desk-column" data-column="measures" aria-label="Measures" tabIndex={-1}>
-      <ColumnHead title="Measures" shortcut="Alt 1" lit={lit === null ? null : `${lit.selected}: ${follow}`} />
-      <div className="desk-scroll">
-        <UnitsAndGrid store={store} />
-        <table className="measures">
-          <thead>
-            <tr>
-              <th scope="col">Name</th>
-              <th scope="col">Question or formula</th>
-              <th scope="col" className="figures">
-                Exact
-              </th>
-              <th scope="col" className="figures">
-                As cut
-              </th>
-              <th scope="col">Rounds</th>
-            </tr>
-          </thead>
-          <tbody>
-            <GroupRow words="Asked" rest="of the reader" />
-            {rows(draft.pattern.measures.filter((measure) => measure.ask && !measure.ask.finer))}
-          </tbody>
-          {finer.length === 0 ? null : (
-            <tbody>
-              <tr className="measure-finer">
-                <td colSpan={5}>
-                  <button type="button" aria-expanded={finerShown} onClick={() => setFinerOpen(!finerShown)}>
-                    <Icon name={finerShown ? 'chevron-down' : 'chevron-right'} />
-                    <b>Finer points</b>
-                    <span>{finerShown ? 'asked, but set apart' : finer.map(inShort).join(' · ')}</span>
-                  </button>
-                </td>
+    <FormulaPattern.Provider value={draft.pattern}>
+      <section className="desk-column" data-column="measures" aria-label="Measures" tabIndex={-1}>
+        <ColumnHead title="Measures" shortcut="Alt 1" lit={lit === null ? null : `${lit.selected}: ${follow}`} />
+        <div className="desk-scroll">
+          <UnitsAndGrid store={store} />
+          <table className="measures">
+            <thead>
+              <tr>
+                <th scope="col">Name</th>
+                <th scope="col">Question or formula</th>
+                <th scope="col" className="figures">
+                  Exact
+                </th>
+                <th scope="col" className="figures">
+                  As cut
+                </th>
+                <th scope="col">Rounds</th>
               </tr>
-              {finerShown ? rows(finer) : null}
+            </thead>
+            <tbody>
+              <GroupRow words="Asked" rest="of the reader" />
+              {rows(draft.pattern.measures.filter((measure) => measure.ask && !measure.ask.finer))}
             </tbody>
-          )}
-          <tbody>
-            <GroupRow words="Worked" rest="out by formulas" />
-            {rows(draft.pattern.measures.filter((measure) => !measure.ask))}
-          </tbody>
-        </table>
-        <p className="visually-hidden" role="status">
-          {renamed?.words}
-        </p>
-        <AddMeasure store={store} pattern={draft.pattern} />
-        <Choices store={store} draft={draft} lit={lit} />
-        <FitList work={work} draft={draft} lit={lit} names={names} />
-      </div>
-    </section>
+            {finer.length === 0 ? null : (
+              <tbody>
+                <tr className="measure-finer">
+                  <td colSpan={5}>
+                    <button type="button" aria-expanded={finerShown} onClick={() => setFinerOpen(!finerShown)}>
+                      <Icon name={finerShown ? 'chevron-down' : 'chevron-right'} />
+                      <b>Finer points</b>
+                      <span>{finerShown ? 'asked, but set apart' : finer.map(inShort).join(' · ')}</span>
+                    </button>
+                  </td>
+                </tr>
+                {finerShown ? rows(finer) : null}
+              </tbody>
+            )}
+            <tbody>
+              <GroupRow words="Worked" rest="out by formulas" />
+              {rows(draft.pattern.measures.filter((measure) => !measure.ask))}
+            </tbody>
+          </table>
+          <p className="visually-hidden" role="status">
+            {renamed?.words}
+          </p>
+          <AddMeasure store={store} pattern={draft.pattern} />
+          <Choices store={store} draft={draft} lit={lit} names={names} faults={faults} />
+          <FitList store={store} work={work} draft={draft} lit={lit} names={names} />
+        </div>
+      </section>
+    </FormulaPattern.Provider>
   );
 }
 

@@ -1,14 +1,18 @@
 import { useStore } from '@nanostores/react';
-import { drawPiece, explain, sayParts, show, type Pattern, type PieceFigure } from '@/engine';
-import { cellSizes } from '@/features/projects/cell-sizes';
+import { useEffect, useRef, useState } from 'react';
+import { drawPiece, type PieceFigure } from '@/engine';
 import { namesOf } from '@/features/projects/formula-names';
-import { usesAny } from '@/features/projects/followers';
+import { placeInPiece } from '@/features/projects/piece-faults';
 import { ColumnHead } from './ColumnHead';
 import type { LiveFigures } from '@/writeup/live';
 import type { DeskStore } from './desk-store';
 import { DrawingView } from './DrawingView';
-import { FoldedBox } from './FoldedBox';
-import { TrackFields } from './TrackFields';
+import { AddPieceButton, PieceStarts } from './pieces/AddPiece';
+import { PieceContext } from './pieces/piece-context';
+import { PieceWorkbench } from './pieces/PieceWorkbench';
+import { FormulaPattern } from './use-completion';
+import { WholeBox } from './WholeBox';
+import './pieces/pieces.css';
 
 const THUMB = { width: 68, tallest: 30 } as const;
 
@@ -18,17 +22,19 @@ export interface PiecesColumnProps {
   readonly onPiece: (name: string) => void;
 }
 
-/** The pieces as live drawings, the words that geometry says of them, and the whole box folded. */
+/** The pieces as live drawings and as what they are made of, the words that geometry says of them, and the whole box folded. */
 export function PiecesColumn({ store, piece, onPiece }: PiecesColumnProps) {
   const draft = useStore(store.$draft);
   const { live, stale, compiled } = useStore(store.$work);
   const lit = useStore(store.$lit);
-  const { pieces } = draft.pattern;
-  const chosen = pieces.find((known) => known.name === piece) ?? pieces[0];
+  const { pattern, sizing } = draft;
+  const { pieces } = pattern;
+  const chosen = useChosen(pieces, piece);
+  const [adding, setAdding] = useState(false);
   const figures = new Map(live?.figures.pieces.map((figure) => [figure.name, figure]));
   const faults = compiled.ok
     ? []
-    : compiled.faults.filter((fault) => fault.where.startsWith(`piece “${chosen?.name ?? ''}”`));
+    : compiled.faults.filter((fault) => chosen !== undefined && placeInPiece(fault, chosen.name) !== null);
   const litPieces = pieces.filter((known) => lit?.pieces.includes(known.name));
 
   const step = (by: 1 | -1) => {
@@ -40,73 +46,84 @@ export function PiecesColumn({ store, piece, onPiece }: PiecesColumnProps) {
   };
 
   return (
-    <section className="desk-column" data-column="pieces" aria-label="Pieces" tabIndex={-1}>
-      <ColumnHead
-        title="Pieces"
-        shortcut="Alt 2"
-        lit={lit === null ? null : `${litPieces.length} of ${pieces.length} lit`}
-        onStep={step}
-      />
-      <div className="piece-tabs" role="tablist" aria-label="Pieces">
-        {pieces.map((known) => (
-          <PieceTab
-            key={known.name}
-            name={known.name}
-            figure={figures.get(known.name)}
-            count={figures.get(known.name)?.count}
-            lit={lit?.pieces.includes(known.name) ?? false}
-            selected={known.name === chosen?.name}
-            onSelect={() => onPiece(known.name)}
-            sizing={draft.sizing}
-          />
-        ))}
-      </div>
-      <div
-        className="desk-scroll"
-        data-stale={stale ? '' : undefined}
-        role="tabpanel"
-        aria-label={chosen?.name ?? 'No piece'}
-      >
-        {chosen === undefined ? <p className="desk-empty">This pattern has no pieces.</p> : null}
-        {stale ? <p className="stale-words">A formula does not read. These are the last good figures.</p> : null}
-        {live === null ? (
-          <p className="desk-empty">
-            Nothing can be drawn until every formula reads. What is wrong stands in the measures.
-          </p>
-        ) : null}
-        {faults.map((fault) => (
-          <p key={fault.where + fault.code} className="fault-words piece-fault">
-            {explain(fault)}
-          </p>
-        ))}
-        {chosen && live ? (
-          <PieceView
-            figure={figures.get(chosen.name)}
-            name={chosen.name}
-            live={live}
-            isLit={(formula) => lit !== null && usesAny(formula, namesOf(draft.pattern), lit.names)}
-            pattern={draft.pattern}
-          />
-        ) : null}
-        {chosen?.builder === 'grid' ? (
-          <TrackFields store={store} piece={chosen} pattern={draft.pattern} lit={lit} faults={faults} />
-        ) : null}
-        {live ? <WholeBox live={live} figure={chosen ? figures.get(chosen.name) : undefined} /> : null}
-      </div>
-    </section>
+    <FormulaPattern.Provider value={pattern}>
+      <section className="desk-column" data-column="pieces" aria-label="Pieces" tabIndex={-1}>
+        <ColumnHead
+          title="Pieces"
+          shortcut="Alt 2"
+          lit={lit === null ? null : `${litPieces.length} of ${pieces.length} lit`}
+          onStep={step}
+          action={chosen === undefined ? null : <AddPieceButton open={adding} onOpen={setAdding} />}
+        />
+        <div className="piece-tabs" role="tablist" aria-label="Pieces">
+          {pieces.map((known) => (
+            <PieceTab
+              key={known.name}
+              name={known.name}
+              figure={figures.get(known.name)}
+              lit={lit?.pieces.includes(known.name) ?? false}
+              selected={known.name === chosen?.name}
+              onSelect={() => onPiece(known.name)}
+              sizing={sizing}
+            />
+          ))}
+        </div>
+        <div className="desk-scroll" data-stale={stale ? '' : undefined}>
+          {chosen === undefined ? (
+            <p className="desk-empty">A box is made of pieces. Begin with one, and change it from there.</p>
+          ) : null}
+          {adding || chosen === undefined ? (
+            <PieceStarts
+              store={store}
+              pattern={pattern}
+              focus={adding}
+              onAdded={(name) => {
+                setAdding(false);
+                onPiece(name);
+              }}
+              onClose={() => setAdding(false)}
+            />
+          ) : null}
+          {stale ? <p className="stale-words">A formula does not read. These are the last good figures.</p> : null}
+          {live === null ? (
+            <p className="desk-empty">
+              Nothing can be drawn until every formula reads. What is wrong stands beside it, and in the list below.
+            </p>
+          ) : null}
+          {chosen === undefined ? null : (
+            <div role="tabpanel" aria-label={chosen.name}>
+              <PieceContext.Provider value={{ store, pattern, piece: chosen, names: namesOf(pattern), lit, faults }}>
+                <PieceWorkbench live={live} figure={figures.get(chosen.name)} onPiece={onPiece} />
+              </PieceContext.Provider>
+            </div>
+          )}
+          {live && chosen ? <WholeBox live={live} figure={figures.get(chosen.name)} /> : null}
+        </div>
+      </section>
+    </FormulaPattern.Provider>
   );
+}
+
+/** The piece that was chosen by name; while no piece is called so, the one that stands where it stood. */
+function useChosen<P extends { readonly name: string }>(pieces: readonly P[], name: string | null): P | undefined {
+  const last = useRef(0);
+  const found = pieces.findIndex((known) => known.name === name);
+  const index = found === -1 ? Math.min(last.current, Math.max(0, pieces.length - 1)) : found;
+  useEffect(() => {
+    last.current = index;
+  }, [index]);
+  return pieces[index];
 }
 
 interface PieceTabProps {
   readonly name: string;
   readonly figure: PieceFigure | undefined;
-  readonly count: number | undefined;
   readonly lit: boolean;
   readonly selected: boolean;
   readonly onSelect: () => void;
   readonly sizing: LiveFigures['figures']['sizing'];
 }
-function PieceTab({ name, figure, count, lit, selected, onSelect, sizing }: PieceTabProps) {
+function PieceTab({ name, figure, lit, selected, onSelect, sizing }: PieceTabProps) {
   return (
     <button
       type="button"
@@ -131,83 +148,9 @@ function PieceTab({ name, figure, count, lit, selected, onSelect, sizing }: Piec
       </span>
       <span>
         {name}
-        {count !== undefined && count > 1 ? ` ×${count}` : ''}
+        {figure !== undefined && figure.count > 1 ? ` ×${figure.count}` : ''}
         {lit ? <span className="visually-hidden">, lit</span> : null}
       </span>
     </button>
-  );
-}
-
-interface PieceViewProps {
-  readonly figure: PieceFigure | undefined;
-  readonly name: string;
-  readonly live: LiveFigures;
-  readonly isLit: (formula: string) => boolean;
-  readonly pattern: Pattern;
-}
-function PieceView({ figure, name, live, isLit, pattern }: PieceViewProps) {
-  const { units, grid } = live.figures.sizing;
-  if (figure === undefined) {
-    const problem = live.figures.problems.find(
-      (found) => found.code === 'piece fails' || found.code === 'cannot be worked out',
-    );
-    return <p className="desk-empty">{problem?.sentence ?? `${name} is not cut with these choices.`}</p>;
-  }
-  const piece = pattern.pieces.find((known) => known.name === name);
-  const sizes = piece === undefined ? null : cellSizes(piece);
-  return (
-    <div className="piece-view">
-      <p className="piece-facts">
-        <b>{name}</b>
-        <span className="soft">
-          cut {figure.count} · {figure.stock} · {show(figure.across, { units, grid, bare: true }).typeset} ×{' '}
-          {show(figure.along, { units, grid }).typeset}
-        </span>
-      </p>
-      <DrawingView
-        drawing={drawPiece(figure, { width: 400, tallest: 250, units, grid })}
-        isLit={(of) => sizes?.get(of)?.some(isLit) ?? false}
-      />
-    </div>
-  );
-}
-
-function WholeBox({ live, figure }: { readonly live: LiveFigures; readonly figure: PieceFigure | undefined }) {
-  const { model, figures } = live;
-  const { units, grid } = figures.sizing;
-  return (
-    <div className="whole-box">
-      <div>
-        <h3>Whole box, shown at</h3>
-        <p className="small">
-          {figures.finished.inside.map((size, i) => (
-            <span key={size.name}>
-              {i > 0 ? ' × ' : ''}
-              <span className="measure">
-                {show(size.mm, { units, grid, bare: i < figures.finished.inside.length - 1 }).typeset}
-              </span>
-            </span>
-          ))}
-        </p>
-        <FoldedBox model={model} figures={figures} />
-      </div>
-      <div className="words">
-        <h3>Words from the geometry</h3>
-        {figure === undefined ? <p className="soft">This piece is not cut with these choices.</p> : null}
-        {figure?.instructions.map((sentence, i) => (
-          <p key={i}>
-            {sayParts(sentence, { units, grid }).map((part, j) =>
-              part.figure ? (
-                <span key={j} className="measure">
-                  {part.typeset}
-                </span>
-              ) : (
-                part.text
-              ),
-            )}
-          </p>
-        ))}
-      </div>
-    </div>
   );
 }
