@@ -44,6 +44,8 @@ export const PRINT_THEME: Theme = {
 export interface Paint {
   readonly fill?: string;
   readonly fillOpacity?: number;
+  /** Filled with slanting lines of this colour instead. */
+  readonly hatch?: string;
   readonly stroke?: string;
   readonly strokeWidth?: number;
   readonly strokeOpacity?: number;
@@ -71,7 +73,7 @@ export function paintOf(role: Role, theme: Theme, tone = 'tone-0'): Paint {
     case 'slit':
       return line(theme.ink, 1.2);
     case 'glue':
-      return { fill: theme.line, fillOpacity: 0.55 };
+      return { hatch: theme.ink };
     case 'panel':
       return { fill: theme.paper };
     case 'away':

@@ -35,13 +35,22 @@ export function drawingSvgStandalone(
     options.background === undefined
       ? ''
       : `<rect width="${round(drawing.width)}" height="${round(drawing.height)}" fill="${options.background}"/>`;
-  return `<svg xmlns="http://www.w3.org/2000/svg" viewBox="0 0 ${round(drawing.width)} ${round(drawing.height)}" width="${round(drawing.width)}" height="${round(drawing.height)}">${ground}${drawing.shapes.map((shape) => element(shape, attributesOf(shape, theme))).join('')}</svg>`;
+  return `<svg xmlns="http://www.w3.org/2000/svg" viewBox="0 0 ${round(drawing.width)} ${round(drawing.height)}" width="${round(drawing.width)}" height="${round(drawing.height)}">${hatchOf(drawing, theme)}${ground}${drawing.shapes.map((shape) => element(shape, attributesOf(shape, theme))).join('')}</svg>`;
+}
+
+const HATCH = 'glue-hatch';
+/** Lines for glue areas; a tint would be told apart by its colour alone. */
+function hatchOf({ shapes }: Drawing, theme: Theme): string {
+  const { hatch } = paintOf('glue', theme);
+  return hatch !== undefined && shapes.some(({ role }) => role === 'glue')
+    ? `<defs><pattern id="${HATCH}" width="6" height="6" patternUnits="userSpaceOnUse" patternTransform="rotate(45)"><path d="M0 0V6" stroke="${hatch}" stroke-opacity="0.4" stroke-width="1.2"/></pattern></defs>`
+    : '';
 }
 
 function attributesOf(shape: Shape, theme: Theme): string {
   const paint = paintOf(shape.role, theme, shape.type === 'path' ? shape.tone : undefined);
   const attributes: readonly (readonly [string, string | number | undefined])[] = [
-    ['fill', paint.fill ?? 'none'],
+    ['fill', paint.hatch === undefined ? (paint.fill ?? 'none') : `url(#${HATCH})`],
     ['fill-opacity', paint.fillOpacity],
     ['stroke', paint.stroke],
     ['stroke-width', paint.strokeWidth],
