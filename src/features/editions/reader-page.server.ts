@@ -27,23 +27,30 @@ export interface ReaderPage {
 
 /** A published project at the sizing in the address; null when there is no such project or edition. */
 export function loadReaderPage(slug: string, url: URL): ReaderPage | null {
-  const params = url.searchParams;
-  const asked = params.get('edition');
+  const asked = url.searchParams.get('edition');
   if (asked !== null && !/^[1-9]\d{0,5}$/.test(asked)) return null;
   const edition = getEdition(slug, asked === null ? undefined : Number(asked));
   if (!edition) return null;
 
-  const model = modelOf(edition);
-  const reading = isSizingForm(params)
-    ? readForm(model, params, edition.sizing)
-    : readLink(model, params, edition.sizing);
+  return {
+    edition,
+    ...pageAt(modelOf(edition), { authors: edition.sizing, url, path: `/projects/${slug}`, edition: asked }),
+  };
+}
+
+/** A pattern at the sizing in an address: `authors` is the size shown first, `path` where links of the page lead. */
+export function pageAt(
+  model: Model,
+  { authors, url, path, edition = null }: { authors: Sizing; url: URL; path: string; edition?: string | null },
+): Omit<ReaderPage, 'edition'> {
+  const params = url.searchParams;
+  const reading = isSizingForm(params) ? readForm(model, params, authors) : readLink(model, params, authors);
   const { value: cutFrom, typed: cutTyped } = reading.sheets;
   const faults = [...reading.faults, ...Object.entries(cutTyped).map(([where, { sentence }]) => ({ where, sentence }))];
   return {
-    edition,
     model,
-    view: readerView(model, judge(model, reading.sizing, edition.sizing, { nearest: true }), cutFrom),
-    links: { model, authors: edition.sizing, path: `/projects/${slug}`, keep: keepParams(cutFrom, asked) },
+    view: readerView(model, judge(model, reading.sizing, authors, { nearest: true }), cutFrom),
+    links: { model, authors, path, keep: keepParams(cutFrom, edition) },
     typed: reading.typed,
     cutTyped,
     faults,

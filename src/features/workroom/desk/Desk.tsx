@@ -15,7 +15,6 @@ import { FoldGrip } from './FoldGrip';
 import { goToPlace } from './go-to-place';
 import { MeasuresColumn } from './MeasuresColumn';
 import { PiecesColumn } from './PiecesColumn';
-import { momentWords } from './local-input';
 import { PlannedNote } from './PlannedNote';
 import { ProofStrip } from './ProofStrip';
 import { PublishDialog } from './PublishDialog';
@@ -202,9 +201,7 @@ export default function Desk({ project, planned: plan }: DeskProps) {
         planned={planned}
         onPlanned={(now) => {
           setPlanned(now);
-          if (now === null) return;
-          setDialog(null);
-          saving.say({ words: `Edition ${next} comes out on ${momentWords(now.publishAt)}, as it stands now.` });
+          if (now !== null) setDialog(null);
         }}
         onClose={() => setDialog(null)}
         onPublished={(done) => {

@@ -108,10 +108,7 @@ export function DeskHeader({
         </button>
       </span>
       <span className="gap" />
-      <SaveWords state={saving.state} />
-      <a className="bar-button" href={revisions}>
-        <Icon name="clock" /> <span className="bar-word">Revisions</span>
-      </a>
+      <SaveWords state={saving.state} revisions={revisions} />
       {mailing === null ? null : (
         <a className="bar-button" href={mailing}>
           <Icon name="mail" /> <span className="bar-word">Mailing</span>

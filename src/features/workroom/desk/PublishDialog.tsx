@@ -119,7 +119,7 @@ export function PublishDialog({ open, projectId, edition, advice, flush, planned
             {(control) => (
               <input
                 {...control}
-                className="input short"
+                className="input moment"
                 type="datetime-local"
                 required
                 value={at}

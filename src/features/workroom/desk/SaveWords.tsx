@@ -2,19 +2,19 @@ import { useEffect, useState } from 'react';
 import { Icon } from '@/components/Icon';
 import type { SaveState } from '../saving/autosave';
 
-/** "Saved 2 s ago · revision 48", and what is the matter when it is not. */
-export function SaveWords({ state }: { readonly state: SaveState }) {
+/** "Saved 2 s ago · revision 48", which leads to the revisions, and what is the matter when it is not. */
+export function SaveWords({ state, revisions }: { readonly state: SaveState; readonly revisions: string }) {
   const now = useClock();
   const { status, revision, savedAt } = state;
   const ago = agoWords(now - savedAt);
   switch (status.kind) {
     case 'saved':
       return (
-        <span className="save-words good">
+        <a className="save-words good" href={revisions} title="See the revisions">
           <Icon name="saved" />
           <span>Saved {ago}</span>
           <span className="soft"> · revision {revision}</span>
-        </span>
+        </a>
       );
     case 'waiting':
     case 'saving':

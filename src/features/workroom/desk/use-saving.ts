@@ -40,6 +40,8 @@ export function useSaving(store: DeskStore, project: OpenProject): Saving {
   const [notice, setNotice] = useState<Notice | null>(null);
   const [meeting, setMeeting] = useState<Meeting | null>(null);
   const autosave = useRef<Autosave<ProjectState> | null>(null);
+  /** Tells the other tabs of this browser that there is a newer revision. */
+  const tellTabs = useRef<() => void>(() => undefined);
   /** What the server has, as far as this tab knows: what changes here are measured against. */
   const base = useRef<ProjectState | null>(project.state);
   /** While a state is put in place that is stored already, nothing is to be saved. */
@@ -82,7 +84,7 @@ export function useSaving(store: DeskStore, project: OpenProject): Saving {
         const answer = await sendState(project.id, value, revision, options);
         if (answer.kind === 'saved') {
           base.current = value;
-          channel?.postMessage(answer.revision);
+          tellTabs.current();
         }
         return answer;
       },
@@ -97,6 +99,7 @@ export function useSaving(store: DeskStore, project: OpenProject): Saving {
     });
     autosave.current = saver;
     const channel = 'BroadcastChannel' in window ? new BroadcastChannel(`foldwright.desk.${project.id}`) : null;
+    tellTabs.current = () => channel?.postMessage('saved');
 
     let meeting = false;
     /** Asks for the version that came between until it is there. */
@@ -160,6 +163,7 @@ export function useSaving(store: DeskStore, project: OpenProject): Saving {
       unlisten();
       saver.stop();
       keeper?.close();
+      tellTabs.current = () => undefined;
       channel?.close();
       clearInterval(looking);
       window.removeEventListener('pagehide', leave);
@@ -198,6 +202,7 @@ export function useSaving(store: DeskStore, project: OpenProject): Saving {
         return newer.ok ? receive(newer.value) : setNotice({ words: newer.refusal.sentence });
       }
       if (answer.kind !== 'saved') return setNotice({ words: answer.sentence });
+      tellTabs.current();
       // What was typed while it was sent is a change to what came out.
       const later = store.$state.get();
       const now = sameState(later, mine) ? { merged } : meet(mine, later, { ...answer, state: merged });
