@@ -48,6 +48,7 @@ describe('lengths in a text', () => {
     'Write to me at 3@example.org or https://example.org/3/4.',
     'Version 2.0 has 24/7 help and 1,200 users.',
     'Come back at 4.',
+    'Cut at half a right angle, in two across the back.',
   ])('finds none in “%s”', (text) => expect(found(text)).toEqual([]));
 });
 

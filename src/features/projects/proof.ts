@@ -15,6 +15,7 @@ import { conditionFault } from '@/writeup/condition';
 import { readLive } from '@/writeup/live';
 import { collectUses, type Uses } from '@/writeup/uses';
 import { namesIn } from './formula-names';
+import { typedNumberItems } from './proof-numbers';
 import { placeOfFault, placesIn, type PlaceAt, type ProofColumn, type ProofPlace } from './proof-place';
 import { writeUpItems } from './proof-write-up';
 
@@ -33,6 +34,7 @@ export interface ProofItem {
     | 'no materials'
     | 'piece unused'
     | 'fit advice'
+    | 'typed number'
     | 'condition'
     | 'unknown step'
     | 'measure unused'
@@ -68,14 +70,15 @@ export function proofList(subject: ProofSubject, worked: Worked = {}): readonly 
   const compiled = worked.compiled ?? compilePattern(subject.pattern);
   const uses = collectUses(subject.writeUp.doc);
   const at = placesIn(subject.writeUp);
+  const figures = compiled.ok ? (worked.figures ?? evaluate(compiled.value, subject.sizing)) : null;
   const items = [
     ...factItems(subject),
-    ...(compiled.ok
-      ? sizeItems(worked.figures ?? evaluate(compiled.value, subject.sizing))
-      : compiled.faults.map(faultItem)),
+    ...(figures ? sizeItems(figures) : []),
+    ...(compiled.ok ? [] : compiled.faults.map(faultItem)),
     ...(compiled.ok ? liveItems(compiled.value, uses, at) : []),
     ...(compiled.ok ? conditionItems(compiled.value, uses, at) : []),
     ...writeUpItems(subject, uses, at),
+    ...(compiled.ok && figures ? typedNumberItems(subject.writeUp, { model: compiled.value, figures }, at) : []),
     ...unusedItems(subject.pattern, uses),
   ];
   return [...items.filter((item) => item.blocking), ...items.filter((item) => !item.blocking)];

@@ -9,13 +9,26 @@ import { ConditionField } from './ConditionField';
 import { LinkField } from './LinkField';
 import { MeasureField } from './MeasureField';
 import { MomentField } from './MomentField';
-import type { Opened } from './opened';
+import { openMeasure, type Opened } from './opened';
+import { outlineOf } from './outline';
+import { OutlineList } from './OutlineList';
 import { PickList } from './PickList';
 import { PieceList } from './PieceList';
 import { StepList } from './StepList';
+import { StrayField } from './StrayField';
+import { keepAsTyped, takeStray } from './take-stray';
 import { listSteps } from './step-numbers';
 import { usualAddress } from './steps';
-import { insertInline, insertPart, insertStepRef, putMeasure, setAttributes, setCondition, setLink } from './writing';
+import {
+  goTo,
+  insertInline,
+  insertPart,
+  insertStepRef,
+  putMeasure,
+  setAttributes,
+  setCondition,
+  setLink,
+} from './writing';
 
 export interface OpenedFieldProps {
   readonly editor: Editor;
@@ -23,12 +36,14 @@ export interface OpenedFieldProps {
   readonly live: LiveFigures | null;
   /** Closes it and gives the caret back to the text. */
   readonly close: () => void;
+  /** Asks for another thing in its place. */
+  readonly reopen: (opened: Opened) => void;
   /** Closes it alone, when what is put in takes the caret. */
   readonly leave: () => void;
 }
 
 /** The field or list that was asked for; taking something from it changes the write-up. */
-export function OpenedField({ editor, opened, live, close, leave }: OpenedFieldProps): ReactNode {
+export function OpenedField({ editor, opened, live, close, leave, reopen }: OpenedFieldProps): ReactNode {
   const done = (act: () => void) => {
     act();
     close();
@@ -54,6 +69,16 @@ export function OpenedField({ editor, opened, live, close, leave }: OpenedFieldP
           begin={opened.begin}
           changing={opened.changing}
           onTake={(text) => done(() => putMeasure(editor, opened, text))}
+        />
+      );
+    case 'stray':
+      return (
+        <StrayField
+          stray={opened.stray}
+          live={opened.live}
+          onTake={(match) => done(() => takeStray(editor, opened, match))}
+          onKeep={() => done(() => keepAsTyped(editor, opened))}
+          onOther={() => reopen(openMeasure(editor, opened))}
         />
       );
     case 'phrase':
@@ -105,6 +130,10 @@ export function OpenedField({ editor, opened, live, close, leave }: OpenedFieldP
       return parts(NOTES);
     case 'block':
       return parts(BLOCKS);
+    case 'outline':
+      return (
+        <OutlineList items={outlineOf(editor.state.doc, live)} onTake={({ pos }) => done(() => goTo(editor, pos))} />
+      );
     case 'amount':
       return (
         <AmountList

@@ -4,7 +4,7 @@ import { NodeSelection } from '@tiptap/pm/state';
 import { EditorContent, useEditor, useEditorState } from '@tiptap/react';
 import type { ReadableAtom } from 'nanostores';
 import { useEffect, useRef, useState } from 'react';
-import { WRITE_UP_VERSION, type DocNode, type WriteUp } from '../document';
+import { WRITE_UP_VERSION, type DocNode, type StepNode, type WriteUp } from '../document';
 import type { FiguresStore } from '../figures-store';
 import { usesOf } from '../nodes/measure/view';
 import { storedForm } from '../stored-form';
@@ -17,10 +17,13 @@ import {
   openLink,
   openMeasure,
   openStep,
+  openStray,
   OPENED_LABELS,
   type Opened,
 } from './opened';
+import { FindBar } from './FindBar';
 import { OpenedField } from './OpenedField';
+import { insertSteps } from './insert-steps';
 import { plainPastedHtml } from './pasted-html';
 import { uploadPhotos } from './photo-uploads';
 import { Popover } from './Popover';
@@ -30,8 +33,9 @@ import { shortcut } from './shortcuts';
 import { Toolbar } from './Toolbar';
 import { stepAt } from './steps';
 import { stepNumbers } from './step-numbers';
-import { tableTools } from './table-keys';
 import { takeDocument } from './take-document';
+import { tableTools } from './table-keys';
+import { WriteUpFoot } from './WriteUpFoot';
 import { takeNames } from './writing';
 
 export interface WriteUpEditorProps {
@@ -45,6 +49,8 @@ export interface WriteUpEditorProps {
   readonly renamed: ReadableAtom<WriteUp | null>;
   /** The write-up each time that another's changes came into it, which the editor takes over. */
   readonly merged: ReadableAtom<WriteUp | null>;
+  /** Steps each time that some were brought in, which go behind the last part or in place of an empty write-up. */
+  readonly incoming: ReadableAtom<readonly StepNode[] | null>;
   /** Where photos go. */
   readonly uploads: { readonly projectId: string };
   /** After every change of the document, never for a change of the figures. */
@@ -60,6 +66,7 @@ export function WriteUpEditor({
   lit,
   renamed,
   merged,
+  incoming,
   uploads,
   onChange,
   onSelectMeasure,
@@ -68,6 +75,8 @@ export function WriteUpEditor({
   const chooser = useRef<HTMLInputElement>(null);
   const [opened, setOpened] = useState<Opened | null>(null);
   const [said, setSaid] = useState('');
+  /** What is sought when the bar for it opens; null while it is closed. */
+  const [sought, setSought] = useState<string | null>(null);
   const [unreadable, setUnreadable] = useState(false);
   const told = useRef({ onChange, onSelectMeasure });
   useEffect(() => {
@@ -84,7 +93,7 @@ export function WriteUpEditor({
       figures,
       lit,
       numbers,
-      askMeasure: (range) => open((now) => openMeasure(now, range)),
+      askMeasure: (range) => open((now) => openStray(now, figures.get()) ?? openMeasure(now, range)),
       changeMeasure: (pos) => open((now) => changeMeasure(now, pos)),
       askStep: (pos, what) => open((now) => openStep(now, pos, what)),
       say: setSaid,
@@ -137,6 +146,10 @@ export function WriteUpEditor({
     [renamed],
   );
   useEffect(
+    () => incoming.listen((steps) => steps && editing.current && insertSteps(editing.current, steps)),
+    [incoming],
+  );
+  useEffect(
     () => merged.listen((writeUp) => writeUp && editing.current && takeDocument(editing.current, writeUp.doc)),
     [merged],
   );
@@ -160,6 +173,12 @@ export function WriteUpEditor({
       else setSaid('Stand in the step that the video shows.');
     },
     photo: () => chooser.current?.click(),
+    find: () => {
+      if (!editor) return;
+      const { from, to } = editor.state.selection;
+      const words = editor.state.doc.textBetween(from, to, ' ');
+      setSought(words.length > 0 && words.length <= 80 ? words : '');
+    },
   };
 
   const close = () => {
@@ -193,6 +212,7 @@ export function WriteUpEditor({
         <div className="writeup-bar">
           <Toolbar label="Put in" words tools={partTools(editor, desk, opens)} />
           <Toolbar label="Text" words={false} tools={markTools(editor, state, opens)} />
+          {sought === null ? null : <FindBar editor={editor} begin={sought} onClose={() => setSought(null)} />}
           {inTable ? <Toolbar label="Table" words={false} tools={tableTools(editor)} /> : null}
         </div>
       ) : null}
@@ -203,6 +223,7 @@ export function WriteUpEditor({
         </p>
       ) : null}
       <EditorContent editor={editor} className="writeup-page" />
+      {editor ? <WriteUpFoot editor={editor} onOutline={() => opens.list('outline')} onFind={opens.find} /> : null}
       <input
         ref={chooser}
         type="file"
@@ -221,7 +242,14 @@ export function WriteUpEditor({
       />
       {editor && opened ? (
         <Popover key={opened.type} label={OPENED_LABELS[opened.type]} anchor={anchor} within={frame} onClose={close}>
-          <OpenedField editor={editor} opened={opened} live={live} close={close} leave={() => setOpened(null)} />
+          <OpenedField
+            editor={editor}
+            opened={opened}
+            live={live}
+            close={close}
+            leave={() => setOpened(null)}
+            reopen={setOpened}
+          />
         </Popover>
       ) : null}
       <p className="visually-hidden" aria-live="polite">

@@ -40,9 +40,11 @@ import { ownNodes, plainText } from '../schema';
 import { blockKeys } from './block-keys';
 import type { EditingDesk } from './editing-desk';
 import { emptyHints } from './empty-hints';
+import { find } from './find';
 import { measureKeys } from './measure-keys';
 import { photoUploads } from './photo-uploads';
 import type { SendPicture } from './send-picture';
+import { strayNumbers } from './stray-numbers';
 import { tableKeys } from './table-keys';
 
 /** The schema's nodes with their views in place of those without, and the editor's keys; `own` are those that keep something for the desk. */
@@ -78,7 +80,9 @@ export function editorExtensions(desk: EditingDesk, send: SendPicture, own: Exte
     measureKeys(desk),
     blockKeys,
     tableKeys,
+    find,
     emptyHints,
+    strayNumbers(desk),
     photoUploads({ send, say: desk.say }),
     ...own,
   ];

@@ -1,8 +1,9 @@
 import type { Editor } from '@tiptap/core';
 import { NodeSelection } from '@tiptap/pm/state';
 import type { VideoMoment } from '../document';
-import type { LiveText } from '../live';
+import type { LiveFigures, LiveText } from '../live';
 import { stepAt } from './steps';
+import { strayAt, type StrayAt } from './stray-numbers';
 import { linkAt, phraseAt } from './writing';
 
 interface Range {
@@ -12,6 +13,7 @@ interface Range {
 /** What is asked for below the caret. Ranges move with the text while it is open. */
 export type Opened =
   | (Range & { readonly type: 'measure'; readonly begin: LiveText; readonly changing: boolean })
+  | (Range & { readonly type: 'stray'; readonly stray: StrayAt; readonly live: LiveFigures })
   | (Range & { readonly type: 'phrase'; readonly when: string })
   | (Range & { readonly type: 'when'; readonly when: string; readonly optional: boolean })
   | (Range & { readonly type: 'moment'; readonly moment: VideoMoment | null })
@@ -20,10 +22,12 @@ export type Opened =
   | { readonly type: 'note' }
   | { readonly type: 'block' }
   | { readonly type: 'amount' }
+  | { readonly type: 'outline' }
   | { readonly type: 'link'; readonly href: string };
 
 export const OPENED_LABELS: Readonly<Record<Opened['type'], string>> = {
   measure: 'Live measure',
+  stray: 'Typed number',
   phrase: 'Said only when',
   when: 'When the step is there',
   moment: 'Video moment',
@@ -32,6 +36,7 @@ export const OPENED_LABELS: Readonly<Record<Opened['type'], string>> = {
   note: 'Notes',
   block: 'Blocks',
   amount: 'Amounts',
+  outline: 'Outline',
   link: 'Link',
 };
 
@@ -39,6 +44,12 @@ export function openMeasure(editor: Editor, range: Range): Opened {
   const text = editor.state.doc.textBetween(range.from, range.to, ' ');
   const formula = /^:*$/.test(text) || text.length > 60 ? '' : text;
   return { type: 'measure', ...range, begin: { formula, bare: false }, changing: false };
+}
+
+/** Asks which measure the typed number at the caret is; null where none stands. */
+export function openStray(editor: Editor, live: LiveFigures | null): Opened | null {
+  const stray = live && strayAt(editor.state, live);
+  return stray ? { type: 'stray', from: stray.from, to: stray.to, stray, live } : null;
 }
 
 export function changeMeasure(editor: Editor, pos: number): Opened | null {

@@ -3,7 +3,8 @@ import type { Node as ProseMirrorNode } from '@tiptap/pm/model';
 import { Plugin, PluginKey, type EditorState } from '@tiptap/pm/state';
 import { Decoration, DecorationSet, type EditorView } from '@tiptap/pm/view';
 import type { LiveFigures } from '../live';
-import { strayIn, THING, type StrayNumber } from '../numbers/stray';
+import { strayIn, type StrayNumber } from '../numbers/stray';
+import { THING } from '../numbers/tokens';
 import type { EditingDesk } from './editing-desk';
 
 const key = new PluginKey<DecorationSet>('strayNumbers');

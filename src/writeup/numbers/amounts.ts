@@ -1,6 +1,6 @@
 import { readLength } from '@/engine';
 import type { Token } from './tokens';
-import { MISHEARD, NUMBER_WORDS, PARTS, RULER_PARTS, UNITS } from './words';
+import { MISHEARD, NUMBER_WORDS, PARTS, RULER_PARTS } from './words';
 
 /** A number in the text, from token to token (both counted in), before anything is known of what it measures. */
 export interface Amount {

@@ -1,7 +1,7 @@
 import type { Axis } from './candidates';
 import type { FoundNumber } from './find-numbers';
 import { stemOf, stemsOf } from './stems';
-import { tokensOf } from './tokens';
+import { THING, tokensOf } from './tokens';
 
 /** What is said round one number. */
 export interface Context {
@@ -40,7 +40,9 @@ export function contextsOf(
 ): readonly Context[] {
   const { words, spots } = wordsIn(text, found);
   const round = { words, mentions: mentionsIn(words, pieces), before: lastMention(earlier, pieces) };
-  const contexts = found.map((number, n) => contextOf(number, spots[n] ?? START, round));
+  const contexts = found.map((number, n) =>
+    contextOf(number, spots[n] ?? START, { ...round, nth: placeInPair(text, number) }),
+  );
   // "12 by 12 cardstock": what is said behind the last of a pair is said of both.
   const ofMaterial = new Set(
     found.flatMap(({ group, joined }, n) => (joined === 'by' && contexts[n]?.ofMaterial ? [group] : [])),
@@ -51,10 +53,20 @@ export function contextsOf(
   }));
 }
 
+/** Which of a pair it is: of two numbers, or of a number and a live measure. */
+function placeInPair(text: string, { from, to, joined, nth }: FoundNumber): number | null {
+  if (joined === 'by') return nth;
+  if (BEHIND_LIVE.test(text.slice(0, from))) return 1;
+  return BEFORE_LIVE.test(text.slice(to)) ? 0 : null;
+}
+const BEHIND_LIVE = new RegExp(`${THING}\\s*(?:by|x|×)\\s*$`, 'i');
+const BEFORE_LIVE = new RegExp(`^\\s*(?:by|x|×)\\s*${THING}`, 'i');
+
 interface Round {
   readonly words: readonly Word[];
   readonly mentions: readonly Mention[];
   readonly before: string | null;
+  readonly nth: Context['nth'];
 }
 interface Mention {
   readonly piece: string;
@@ -62,7 +74,7 @@ interface Mention {
   readonly sentence: number;
 }
 
-function contextOf(number: FoundNumber, place: Spot, { words, mentions, before }: Round): Context {
+function contextOf(number: FoundNumber, place: Spot, { words, mentions, before, nth }: Round): Context {
   const own = words.filter(({ sentence }) => sentence === place.sentence);
   const distance = (word: Word) => {
     const steps = word.at < place.at ? place.at - word.at - 1 : word.at - place.at;
@@ -82,19 +94,19 @@ function contextOf(number: FoundNumber, place: Spot, { words, mentions, before }
     piece: pieceOf(place, mentions, before),
     role: roleOf(
       own.filter((word) => word.at < place.at),
-      number,
+      nth,
     ),
-    nth: number.joined === 'by' ? number.nth : null,
+    nth,
     axis: direction === undefined ? null : ACROSS.test(direction.said) ? 'across' : 'along',
     ofMaterial: directly.some(({ said }) => MATERIAL.test(said)),
   };
 }
 
 /** The verb that governs the number: the last one before it. */
-function roleOf(before: readonly Word[], { joined }: FoundNumber): Context['role'] {
+function roleOf(before: readonly Word[], nth: Context['nth']): Context['role'] {
   const verb = before.findLast(({ said }) => /^(scor|cut|trim|slit|measur)/.test(said))?.said;
   if (verb?.startsWith('scor')) return 'score';
-  if (joined === 'by') return 'cut';
+  if (nth !== null) return 'cut';
   return null;
 }
 

@@ -13,11 +13,11 @@ export function isRefused(tokens: readonly Token[], { first, last, form }: Amoun
   if (next === 'out' && after === 'of') return true;
   if (NUMBERED.has(before) && form === 'whole') return true;
   if (form === 'part' || form === 'fraction') {
-    if (form === 'part' && /^(the|as|that|its|their|my|your|our)$/.test(next)) return true;
+    if (form === 'part' && /^(an?|the|as|that|its|their|my|your|our)$/.test(next)) return true;
     if (next === 'of') return form === 'part' || /^(the|these|those|this|that|them|it|my|your|our|all)$/.test(after);
-    return form === 'part' && before === 'in';
   }
-  return false;
+  // "in half", "cut it in two".
+  return before === 'in' && (form === 'part' || form === 'whole');
 }
 
 /** Whether the words round a number without a unit say that it is a length. */

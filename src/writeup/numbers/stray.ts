@@ -3,6 +3,7 @@ import type { DocNode } from '../document';
 import type { LiveFigures } from '../live';
 import { findNumbers } from './find-numbers';
 import { matchNumbers, type MatchedNumber } from './match-numbers';
+import { THING } from './tokens';
 
 /** A stretch of a line of text: words, or one thing in it such as a live measure, which counts as one character. */
 export interface Stretch {
@@ -17,9 +18,6 @@ export interface PlacedStray extends StrayNumber {
   readonly step: number | null;
   readonly sentence: string;
 }
-
-/** What stands for a live measure in a line. */
-export const THING = '\ufffc';
 
 /** The stray numbers of one line of text. `about` is what stands above it, such as the title of its step. */
 export function strayIn(line: readonly Stretch[], live: LiveFigures, about: string): readonly StrayNumber[] {

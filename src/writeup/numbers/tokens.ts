@@ -1,3 +1,6 @@
+/** What stands in a line of text for something that is no text, such as a live measure. */
+export const THING = '\ufffc';
+
 /** A piece of text that the finder looks at; `said` is lower case and written one way (½ is 1/2, 5/8ths is 5/8). */
 export interface Token {
   readonly is: 'digits' | 'decimal' | 'fraction' | 'ordinal' | 'word' | 'time' | 'other' | 'mark';

@@ -1,8 +1,12 @@
 import { useStore } from '@nanostores/react';
+import { atom } from 'nanostores';
+import { useState } from 'react';
 import { namesOf } from '@/features/projects/formula-names';
 import { usesAny } from '@/features/projects/followers';
+import type { StepNode } from '@/writeup/document';
 import { WriteUpEditor } from '@/writeup/editor/WriteUpEditor';
 import { collectUses } from '@/writeup/uses';
+import { BringIn } from '../bringing-in/BringIn';
 import { ColumnHead } from './ColumnHead';
 import type { DeskStore } from './desk-store';
 
@@ -12,6 +16,7 @@ export function WriteUpColumn({ store, projectId }: { readonly store: DeskStore;
   const lit = useStore(store.$lit);
   const draft = useStore(store.$draft);
   const generation = useStore(store.$generation);
+  const [incoming] = useState(() => atom<readonly StepNode[] | null>(null));
   const names = namesOf(draft.pattern);
   const places =
     lit === null
@@ -25,6 +30,7 @@ export function WriteUpColumn({ store, projectId }: { readonly store: DeskStore;
         lit={lit === null ? null : places === 1 ? '1 place lit' : `${places} places lit`}
         places=".lit"
       />
+      <BringIn projectId={projectId} figures={store.$live} onSteps={(steps) => incoming.set(steps)} />
       <WriteUpEditor
         key={generation}
         initial={store.$writeUp.get()}
@@ -32,6 +38,7 @@ export function WriteUpColumn({ store, projectId }: { readonly store: DeskStore;
         lit={store.$litNames}
         renamed={store.$renamed}
         merged={store.$merged}
+        incoming={incoming}
         uploads={{ projectId }}
         onChange={store.setWriteUp}
         onSelectMeasure={(name) => {

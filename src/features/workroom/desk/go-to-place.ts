@@ -32,6 +32,7 @@ const NTH: Partial<Record<ProofItem['code'], string>> = {
   'live measure': '.measure',
   'no alt text': '.photo',
   'unknown piece': '.piece-card',
+  'typed number': '.stray-number',
   'unknown step': '[data-step-ref]',
   'link broken': 'a[href]:not([data-step-ref])',
 };
