@@ -80,7 +80,7 @@ test('a talk with its times becomes steps with live measures, in one step of und
     .toContain('{"seconds":70,"address":"https://video.example/lidded"}');
 
   await page.getByRole('button', { name: 'Originals' }).click();
-  await page.getByRole('button', { name: 'Pasted text' }).click();
+  await page.getByRole('button', { name: 'Pasted text', exact: true }).click();
   await expect(page.getByLabel('Text of the original')).toContainText('Um, cut the base');
 });
 
