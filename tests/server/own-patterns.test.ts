@@ -3,6 +3,7 @@ import { beforeEach, describe, expect, it } from 'vitest';
 import type { Pattern } from '@/engine';
 import { createPerson, type Person } from '@/features/accounts/people.server';
 import type { ShelfPattern } from '@/features/projects/pattern-shelf.server';
+import { projectStateSchema } from '@/features/projects/project-input';
 import { openProject } from '@/features/projects/projects.server';
 import { testDatabase } from '../setup/test-database';
 import { call, cast } from './harness';
@@ -84,6 +85,8 @@ it('a project begins from blank with the card’s thickness alone', async () => 
   const state = openProject(await idOf(made), ines)?.state;
   expect(state?.pattern).toMatchObject({ name: 'My own tray', slug: 'my-own-tray', pieces: [], assembly: [] });
   expect(state?.pattern.measures.map(({ name }) => name)).toEqual(['card thickness']);
+  // What it begins with can be saved again as it is.
+  expect(projectStateSchema.safeParse(state).success).toBe(true);
 });
 
 it('a pattern of ours goes out as a file too', async () => {
