@@ -51,7 +51,8 @@ export function openStray(editor: Editor, live: LiveFigures | null): Opened | nu
   const { doc, selection } = editor.state;
   // Two colons ask for a measure of their own.
   const asked = doc.textBetween(Math.max(0, selection.from - 2), selection.from, ' ') === '::';
-  const stray = live && !asked ? strayAt(editor.state, live) : null;
+  if (!live || asked) return null;
+  const stray = strayAt(editor.state, live);
   return stray ? { type: 'stray', from: stray.from, to: stray.to, stray, live } : null;
 }
 
