@@ -15,7 +15,10 @@ export interface StepPreviewProps {
 export function StepPreview({ bringing, live, onPick }: StepPreviewProps) {
   const { steps, draft, decisions, current, trimFiller } = bringing;
   const here = useRef<HTMLButtonElement>(null);
-  useEffect(() => here.current?.scrollIntoView({ block: 'nearest' }), [current?.id]);
+  useEffect(() => {
+    // What it gives back is no clean-up: browsers differ in it.
+    void here.current?.scrollIntoView({ block: 'nearest' });
+  }, [current?.id]);
   const number = (one: PreparedNumber) => (
     <button
       key={one.id}
