@@ -6,6 +6,7 @@ import {
   compilePattern,
   drawPiece,
   evaluate,
+  instructionsOf,
   usualSizing,
   workExact,
   workOut,
@@ -68,7 +69,7 @@ export async function engineBench(): Promise<void> {
       const figures = evaluate(book, { ...usual, values: { [measure]: 150 + (round % 50) } });
       for (const piece of figures.pieces) {
         drawPiece(piece, { width: 560, units: 'in', grid: '1/16in' });
-        for (const sentence of piece.instructions) void sentence;
+        for (const sentence of instructionsOf(piece)) void sentence;
       }
     });
   for (const measure of ['inside width', 'inside height'])

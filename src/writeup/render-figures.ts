@@ -1,5 +1,6 @@
 import {
   drawPiece,
+  instructionsOf,
   sayParts,
   show,
   showPosition,
@@ -73,7 +74,9 @@ export function pieceCardInside(figures: Figures, name: string, width = CARD_WID
   const drawn = (w: number, name: string) => drawingSvg(drawPiece(piece, { width: w, units, grid }), { class: name });
   const drawing =
     width <= PHONE_WIDTH ? drawn(width, '') : drawn(width, 'wide-only') + drawn(PHONE_WIDTH, 'narrow-only');
-  const words = piece.instructions.map((sentence) => `<p>${sentenceHtml(sentence, figures.sizing)}</p>`).join('');
+  const words = instructionsOf(piece)
+    .map((sentence) => `<p>${sentenceHtml(sentence, figures.sizing)}</p>`)
+    .join('');
   return (
     '<div class="ruled" aria-hidden="true"></div>' +
     `<p class="piece-card-head"><b>${esc(name)}</b> <span>cut ${piece.count} · ${esc(piece.stock)}</span></p>` +

@@ -5,6 +5,7 @@ export * from './figure';
 export * from './finish';
 export * from './grid';
 export * from './layer';
+export { keepMaking } from './making';
 export * from './outline';
 export * from './sector';
 export { seamsOf } from './grid-words';

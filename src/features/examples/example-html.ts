@@ -1,4 +1,4 @@
-import { drawPiece, explain, planSheets, showValue, type PieceFigure } from '@/engine';
+import { drawPiece, explain, instructionsOf, planSheets, showValue, type PieceFigure } from '@/engine';
 import { ICONS } from '@/components/icons';
 import { esc } from '@/exports/escape';
 import { drawingSvg } from '@/exports/svg/drawing';
@@ -44,8 +44,8 @@ export function pieceSvg(example: Example, name: string, { wide, narrow, tallest
 
 /** A piece's making instructions, their figures on tabs. */
 export function wordsHtml(example: Example, name: string): string {
-  return pieceOf(example, name)
-    .instructions.map((sentence) => sentenceHtml(sentence, example.figures.sizing))
+  return instructionsOf(pieceOf(example, name))
+    .map((sentence) => sentenceHtml(sentence, example.figures.sizing))
     .join(' ');
 }
 
