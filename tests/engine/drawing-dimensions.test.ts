@@ -171,7 +171,7 @@ describe('the text alternative', () => {
         'Cut away the two corner squares at the top, along the scores. Cut away the two corner pieces at the bottom, 1/2 in wide and 5/16 in tall. ' +
         'Taper the tab at the top at both ends by 15°. Taper the tabs at the left and right at both ends by 45°. ' +
         'At the bottom draw the arc of a 4 1/2 in circle over the 2 1/4 in between the scores, its ends 6 1/2 in down, and cut round it. ' +
-        'Noted: radius 2 1/4, 2 times 75°, 4 times 45°. Panels: floor, curve. Glue tabs: end, left, right.',
+        'Noted: a radius of 2 1/4, 2 times an angle of 75°, 4 times an angle of 45°. Panels: floor, curve. Glue tabs: end, left, right.',
     );
   });
 });

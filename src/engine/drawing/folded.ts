@@ -4,7 +4,7 @@ import type { Drawing, Figures, Look, Point, Shape } from '../types';
 import { labelsOn, type Placing } from './face-labels';
 import { facesOf } from './folded-faces';
 import { n, segment } from './path';
-import { edgesOf, seeFaces, viewOf, type View } from './seen';
+import { edgesOf, seeFaces, viewOf, withOutlines, type View } from './seen';
 
 export interface FoldedDrawingOptions {
   readonly width: number;
@@ -36,7 +36,7 @@ const PAD = 4;
 /** The folded box in parallel projection, hidden faces behind others. Faces carry a tone by how the light falls on them. */
 export function drawFolded(model: Model, figures: Figures, options: FoldedDrawingOptions): Drawing {
   const view = viewOf(options.turn ?? usualTurn(model), options.tilt ?? USUAL_TILT);
-  const faces = facesOf(model, figures, options.share ?? 1);
+  const faces = withOutlines(facesOf(model, figures, options.share ?? 1), view);
   const points = faces.flatMap((face) => face.points);
   const place = (options.steady ? steadyPlace : closePlace)(points, view, options);
   const at = (point: Point) => `${n(place.x(point.x))} ${n(place.y(point.y))}`;

@@ -79,9 +79,9 @@ const unit = (from: Point, to: Point): Point => {
   const length = distance(from, to);
   return { x: (to.x - from.x) / length, y: (to.y - from.y) / length };
 };
-/** The middle of a curve and the direction square to it; from an arc outwards. */
-function besides(curve: Curve): Pointed {
-  const at = pointAt(curve, 0.5);
+/** A point of a curve, usually its middle, and the direction square to it; from an arc outwards. */
+function besides(curve: Curve, share = 0.5): Pointed {
+  const at = pointAt(curve, share);
   if (curve.type === 'arc') return { at, out: unit(curve.centre, at) };
   const { x, y } = unit(curve.from, curve.to);
   return { at, out: { x: y, y: -x } };
@@ -200,6 +200,7 @@ function cones(panels: readonly Panel[]): readonly Note[] {
       y: cone.apex.y + ((y - cone.apex.y) * radius) / outer.radius,
     });
     const span = { ...outer, radius, from: place(outer.from), to: place(outer.to) };
-    return [{ text: degrees(cone.angle), places: [besides(span)], span }];
+    const places = [0.5, 0.3, 0.7].map((share) => besides(span, share));
+    return [{ text: degrees(cone.angle), places, span }];
   });
 }

@@ -36,8 +36,11 @@ const list = (what: string, items: readonly string[]): readonly string[] =>
 const spelt = (text: string): string =>
   text
     .replace(/^(\d+)× /, '$1 times ')
-    .replace('R\u202f', 'radius ')
-    .replace('Ø\u202f', 'diameter ')
+    .replace(/(^|times )([\d.]+°)/, '$1an angle of $2')
+    .replace(/tab (.+)/, 'a tab $1 deep')
+    .replace('R\u202f', 'a radius of ')
+    .replace('Ø\u202f', 'a diameter of ')
+    .replace('fold ', 'a fold of ')
     .replaceAll('\u202f', ' ')
     .replaceAll('\u2044', '/');
 

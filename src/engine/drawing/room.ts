@@ -23,7 +23,7 @@ export interface Edges {
 }
 
 /** Drawing units: as near as text comes to a line. */
-const CELL = 3;
+const CELL = 2;
 /** From one place that is tried in a panel to the next. */
 const STEP = 4;
 

@@ -39,6 +39,41 @@ export function viewOf(turn: number, tilt: number): View {
   };
 }
 
+/**
+ * Faces with the outline of what is round among their edges: a seam inside a rolled panel counts as an edge where the strip
+ * on one of its sides is seen from the front and the other from the back.
+ */
+export function withOutlines<T>(faces: readonly Face<T>[], { towards }: View): readonly Face<T>[] {
+  const fronts = faces.map(({ points }) => dot(normalOf(points), towards) >= 0);
+  const seams = new Map<string, { readonly face: number; readonly edge: number }[]>();
+  faces.forEach(({ points, edges }, face) =>
+    edges.forEach((real, edge) => {
+      if (real) return;
+      const ends = [points[edge] as Vector, points[(edge + 1) % points.length] as Vector];
+      const key = ends.map(placeKey).sort().join(' ');
+      seams.set(key, [...(seams.get(key) ?? []), { face, edge }]);
+    }),
+  );
+  const outlined = new Map<number, Set<number>>();
+  for (const [one, other, ...more] of seams.values()) {
+    if (!one || !other || more.length > 0 || fronts[one.face] === fronts[other.face]) continue;
+    for (const { face, edge } of [one, other]) outlined.set(face, (outlined.get(face) ?? new Set()).add(edge));
+  }
+  return faces.map((face, index) => {
+    const more = outlined.get(index);
+    return more ? { ...face, edges: face.edges.map((real, edge) => real || more.has(edge)) } : face;
+  });
+}
+/** Strips that share a seam have its ends in the same places, but for the last digits of a double. */
+const placeKey = ({ x, y, z }: Vector): string => [x, y, z].map((mm) => Math.round(mm * 1e3)).join();
+
+const normalOf = (points: readonly Vector[]): Vector => {
+  const origin = points[0] as Vector;
+  return points
+    .map((point, index) => cross(minus(point, origin), minus(points[(index + 1) % points.length] as Vector, origin)))
+    .reduce(plus);
+};
+
 export function seeFaces<T>(faces: readonly Face<T>[], view: View): readonly SeenFace<T>[] {
   return faces.map((face) => {
     const corners = face.points.map(view.project);
@@ -58,9 +93,7 @@ export function seeFaces<T>(faces: readonly Face<T>[], view: View): readonly See
 /** A flat face's nearness is linear in the place: from one corner, and its slope from the face's normal. */
 function nearnessOf<T>({ points }: Face<T>, corners: readonly Point[], { project, towards }: View) {
   const [origin, flat] = [points[0] as Vector, corners[0] as Point];
-  const normal = points
-    .map((point, index) => cross(minus(point, origin), minus(points[(index + 1) % points.length] as Vector, origin)))
-    .reduce(plus);
+  const normal = normalOf(points);
   const facing = dot(normal, towards);
   if (Math.abs(facing) < 1e-3 * Math.hypot(normal.x, normal.y, normal.z) || facing === 0) return null;
   // The drawing's own two directions in the box's axes: a place moved by them keeps its nearness to the viewer.

@@ -3,7 +3,7 @@ const ADVANCES = '5:@UOcV3??IU5C4CUUUUUUUUUU88UUUKs[S]ZRN__8MVMhabRbVSP[\\rWUU<C
 /** Drawing units: the type of figures and labels. */
 const SIZE = 13;
 /** Of what has no advance above: other letters, and narrow spaces. */
-const OTHER = 0.72;
+const OTHER = 0.79;
 const NARROW = 0.125;
 /** Figures of a fraction, its slash. */
 const SMALL = 0.36;

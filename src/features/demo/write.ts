@@ -4,31 +4,53 @@ import {
   type InlineNode,
   type MarkNode,
   type PhotoNode,
+  type StepNode,
   type WriteUp,
 } from '@/writeup/document';
 
 /*
  * Write-ups in code, close to how they read. In every text, `[[inside width]]` is a live measure, `[[inside width|bare]]` one
- * without its unit, `**words**` are bold and `[words](/handbook)` is a link.
+ * without its unit, `**words**` are bold and `[words](/handbook)` is a link. `[#lid]` is the number of the step that is keyed
+ * `lid`, `[=sheets card]` an amount, and `{lid is flip: words}` are said only when that holds.
  */
 
 type Words = string;
-const MARKED = /\[\[([^\]|]+)(\|bare)?\]\]|\*\*([^*]+)\*\*|\[([^\]]+)\]\(([^)\s]+)\)/gu;
+const MARKED =
+  /\[\[([^\]|]+)(\|bare)?\]\]|\*\*([^*]+)\*\*|\[([^\]#=][^\]]*)\]\(([^)\s]+)\)|\[#(\w+)\]|\[=([^\]]+)\]|\{([^:}]+): ([^}]*)\}/gu;
 
-/** A text with its live measures, bold words and links as nodes. */
+/** A text with its live measures, bold words, links and conditions as nodes. */
 export function inline(words: Words): InlineNode[] {
   const nodes: InlineNode[] = [];
   let at = 0;
   for (const found of words.matchAll(MARKED)) {
-    const [whole, formula, bare, strong, label, href] = found;
-    nodes.push(...plain(words.slice(at, found.index)));
-    if (formula !== undefined)
-      nodes.push({ type: 'measure', attrs: { formula: formula.trim(), bare: bare !== undefined } });
-    else if (strong !== undefined) nodes.push(...plain(strong, [{ type: 'bold' }]));
-    else nodes.push(...plain(label ?? '', [{ type: 'link', attrs: { href: href ?? '' } }]));
-    at = found.index + whole.length;
+    nodes.push(...plain(words.slice(at, found.index)), ...marked(found));
+    at = found.index + found[0].length;
   }
   return [...nodes, ...plain(words.slice(at))];
+}
+
+function marked([
+  ,
+  formula,
+  bare,
+  strong,
+  label,
+  href,
+  key,
+  of,
+  when,
+  phrase,
+]: RegExpMatchArray): readonly InlineNode[] {
+  if (formula !== undefined) return [{ type: 'measure', attrs: { formula: formula.trim(), bare: bare !== undefined } }];
+  if (strong !== undefined) return plain(strong, [{ type: 'bold' }]);
+  if (key !== undefined) return [{ type: 'stepRef', attrs: { key } }];
+  if (of !== undefined) return [{ type: 'amount', attrs: { of } }];
+  if (when === undefined) return plain(label ?? '', [{ type: 'link', attrs: { href: href ?? '' } }]);
+  const only: MarkNode = { type: 'onlyWhen', attrs: { when } };
+  return inline(phrase ?? '').map((node) => ({
+    ...node,
+    marks: [only, ...('marks' in node ? (node.marks ?? []) : [])],
+  }));
 }
 
 const plain = (text: string, marks: readonly MarkNode[] = []): InlineNode[] =>
@@ -48,9 +70,26 @@ export function step(title: string, ...content: Content): BlockNode {
   const [name = '', mark = ''] = title.split('|').map((part) => part.trim());
   return { type: 'step', attrs: { title: name, mark }, content: blocks(content) };
 }
+/** A step with more to be said of it: when it is there, whether it may be skipped, what references call it. */
+export const stepAs = (
+  attrs: Omit<StepNode['attrs'], 'title' | 'mark'>,
+  title: string,
+  ...content: Content
+): BlockNode => {
+  const made = step(title, ...content);
+  return made.type === 'step' ? { ...made, attrs: { ...made.attrs, ...attrs } } : made;
+};
+/** Something to be done now, while it is still flat, for the step that is keyed so. */
+export const forward = (key: string, ...content: Content): BlockNode => ({
+  type: 'forward',
+  attrs: { word: 'While it is still flat', key },
+  content: blocks(content),
+});
 export const tip = (...content: Content): BlockNode => ({ type: 'tip', content: blocks(content) });
 export const caution = (...content: Content): BlockNode => ({ type: 'caution', content: blocks(content) });
 export const materials = (...items: readonly Words[]): BlockNode => ({ type: 'materials', content: [list(...items)] });
+export const tools = (...items: readonly Words[]): BlockNode => ({ type: 'tools', content: [list(...items)] });
+export const curveOf = (name: string): BlockNode => ({ type: 'curveTemplate', attrs: { piece: name } });
 export const piece = (name: string): BlockNode => ({ type: 'pieceCard', attrs: { piece: name } });
 export const cutList: BlockNode = { type: 'cutList' };
 

@@ -10,7 +10,7 @@ export function shortcut(
   editor: Editor,
   opens: Opens,
 ): (() => void) | undefined {
-  if ((ctrlKey || metaKey) && !altKey) return key.toLowerCase() === 'k' ? opens.link : undefined;
+  if ((ctrlKey || metaKey) && !altKey) return { k: opens.link, f: opens.find }[key.toLowerCase()];
   if (!altKey || !shiftKey || ctrlKey || metaKey) return undefined;
   // By place on the keyboard: on some layouts Alt turns letters into other signs.
   const part = [...NOTES, ...BLOCKS].find((one) => one.key !== undefined && code === `Key${one.key}`);
@@ -22,6 +22,7 @@ export function shortcut(
     KeyN: () => opens.list('note'),
     KeyB: () => opens.list('block'),
     KeyA: () => opens.list('amount'),
+    KeyU: () => opens.list('outline'),
     KeyW: opens.condition,
     KeyS: () => opens.list('step number'),
   }[code];

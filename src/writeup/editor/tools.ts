@@ -7,10 +7,11 @@ import type { Tool } from './Toolbar';
 /** What opens a field or a list below the caret. */
 export interface Opens {
   readonly link: () => void;
-  readonly list: (type: 'piece' | 'step number' | 'note' | 'block' | 'amount') => void;
+  readonly list: (type: 'piece' | 'step number' | 'note' | 'block' | 'amount' | 'outline') => void;
   readonly condition: () => void;
   readonly moment: () => void;
   readonly photo: () => void;
+  readonly find: () => void;
 }
 
 /** What can be put in, in the order of use. */

@@ -162,3 +162,10 @@ export function takeNames(editor: Editor, renamed: DocNode): void {
 }
 /** Attributes that hold names of the pattern. */
 const NAMED: readonly string[] = ['formula', 'piece', 'when'];
+
+/** Puts the caret at the beginning of the part at `pos`, with the part at the top of what is seen. */
+export function goTo({ state, view }: Editor, pos: number): void {
+  view.dispatch(state.tr.setSelection(TextSelection.near(state.doc.resolve(pos + 1), 1)));
+  const dom = view.nodeDOM(pos);
+  if (dom instanceof HTMLElement) dom.scrollIntoView({ block: 'start' });
+}

@@ -1,6 +1,21 @@
 import type { Pattern } from '@/engine';
 import { keep, type DemoProject } from '../demo-project';
-import { caution, cutList, heading, list, ordered, piece, step, tip, materials, writeUp } from '../write';
+import {
+  caution,
+  curveOf,
+  cutList,
+  forward,
+  heading,
+  list,
+  ordered,
+  piece,
+  step,
+  stepAs,
+  tip,
+  materials,
+  tools,
+  writeUp,
+} from '../write';
 
 /** The lid swung up to a right angle; its end tab lies flat against the fore edge, where it is glued. */
 function opened(pattern: Pattern): Pattern {
@@ -74,11 +89,15 @@ export const bookBox: DemoProject = {
           materials(
             '**Card for covers and spine**, about 270 g/m² (100 lb cover): [[2 * cover.area + lower spine.area + (if lid is flip then upper spine.area else 0 mm * 0 mm)]] of it. Take a colour that you would like to see on a shelf.',
             '**Card for the pages**, cream, about 216 g/m² (80 lb cover): [[fore edge.area + floor.area + (if lid is flip then lid.area else top.area)]].',
-            'The sheet plan shows which pieces share a sheet. The figures are for card [[card thickness]] thick; measure yours if it feels different, and change it among the finer points.',
+            'Together that is [=sheets card]; the sheet plan shows which pieces share one. The figures are for card [[card thickness]] thick; measure yours if it feels different, and change it among the finer points.',
             'White glue that dries clear, and a scrap of card to spread it with. Glue sticks let go when the spine pulls.',
-            'Trimmer, or knife, metal ruler and mat; scoring board or a blunt point; bone folder; pencil; a few clothes pegs.',
-            'A compass, or something round that measures [[circle]] across.',
             'If you want one: ribbon, [[ribbon width]] wide, and paper to cover the boards with.',
+          ),
+          tools(
+            'Trimmer, or knife, metal ruler and mat',
+            'Scoring board or a blunt point; bone folder',
+            'Pencil, a few clothes pegs',
+            '{spine is curved: A compass, or something round that measures [[circle]] across}',
           ),
           caution(
             'Knives and trimmers cut fingers as readily as card. Follow the maker’s instructions for yours, keep its guards on, hold the ruler behind its raised edge, and cut beside you rather than towards you. Children cut only with somebody next to them.',
@@ -103,14 +122,12 @@ export const bookBox: DemoProject = {
           ),
           step(
             'The floor and its curve',
-            'The floor is a strip with a tab on three sides. On the fourth it runs on into a curve, and that curve is what the whole spine will follow. Take your time with this one.',
+            'The floor is a strip with a tab on three sides. {spine is curved: On the fourth it runs on into a curve, and that curve is what the whole spine will follow. Take your time with this one.}{spine is straight: On the fourth it simply ends where its side tabs end, and the spine stands straight across.}',
             piece('Floor'),
-            'Draw the curve between the ends of the side tabs, [[inside depth]] apart. It is part of a circle [[circle]] across, so set a compass to [[radius]] and put its point on the middle line of the floor, where the pencil just reaches both ends. At its middle the curve stands out by [[bulge]]. Cut round it in one slow pass with scissors, turning the card and not the scissors.',
+            '{spine is curved: Draw the curve between the ends of the side tabs, [[inside depth]] apart. It is part of a circle [[circle]] across, so set a compass to [[radius]] and put its point on the middle line of the floor, where the pencil just reaches both ends. At its middle the curve stands out by [[bulge]]. Cut round it in one slow pass with scissors, turning the card and not the scissors.}',
+            curveOf('Floor'),
             tip(
               'No compass? Find something round, measure across it, and put that in as the circle. The spine follows. A jar lid gives a round back, a dinner plate a flat one.',
-            ),
-            tip(
-              'With a **straight spine** there is no curve: the floor simply ends where its side tabs end. Leave the compass in the drawer, and read “spine” wherever we say “curve”.',
             ),
           ),
           step(
@@ -120,14 +137,19 @@ export const bookBox: DemoProject = {
             'Check it before you cut the teeth. Lay a strip of paper on edge round the curve of your floor and mark both ends: flat again, the marks should be [[floor.curve length]] apart. What your trimmer can cut comes near enough to it. If your own curve came out longer, trust the paper and score the second tab there.',
             'Then cut the foot into narrow teeth, [[teeth]] of them, from the edge almost to the score. A cut **past** the score opens a hole at the foot of the spine; one that stops a hair short does no harm. A straight spine keeps its foot whole.',
           ),
-          step(
-            'The upper spine | flip lid',
+          stepAs(
+            { when: 'lid is flip', key: 'upper' },
+            'The upper spine',
             'The short strip on top rides on the lid and has to slip between the covers, so it is [[arc - upper strip]] narrower than the lower one: [[upper spine.strip]] between its tabs, and [[upper spine.tall]] tall.',
             piece('Upper spine'),
-            'Turn it to its inside and rule a pencil line [[lid drop]] above the lower edge, right across. The lid will be glued along that line. Write “top” on the other edge now; once it is rolled, both edges look the same.',
+            forward(
+              'hang',
+              'Turn it to its inside and rule a pencil line [[lid drop]] above the lower edge, right across. The lid will be glued along that line. Write “top” on the other edge now; once it is rolled, both edges look the same.',
+            ),
           ),
-          step(
-            'The lid | flip lid',
+          stepAs(
+            { when: 'lid is flip' },
+            'The lid',
             'The lid is the floor once more, a little narrower: [[lid.deep]] between its tabs, so that it passes between the covers without rubbing. On a curved spine its curve is a **score**, and the teeth, [[lid teeth]] of them, stand outside it.',
             piece('Lid'),
             'Score the curve with a blunt point along the edge of your own floor: it is the same circle. Go over it twice, lightly; a curve scored hard in one go tears when the teeth are turned.',
@@ -135,9 +157,10 @@ export const bookBox: DemoProject = {
               'We turn the sides of the lid down because a flat lid twists. If you chose **plain** sides, there is nothing to turn down, and the upper spine has no tabs either.',
             ),
           ),
-          step(
-            'A ribbon to lift it by | optional',
-            'Do this while the lid is flat. Cut a slot [[ribbon width + 1 mm]] long across the middle line of the lid, [[inside width - tab]] from the fold of its end tab. If you chose the ribbon among the options, the lid’s drawing shows it.',
+          stepAs(
+            { when: 'lid is flip', optional: true, key: 'ribbon' },
+            'A ribbon to lift it by',
+            'Cut a slot [[ribbon width + 1 mm]] long across the middle line of the lid, [[inside width - tab]] from the fold of its end tab. If you chose the ribbon among the options, the lid’s drawing shows it.',
             'Push both ends of the ribbon down through the slot until a loop for one finger stands out. Turn the ends back in opposite directions and glue them under the lid for at least [[max(tab, 15 mm)]].',
             caution(
               'A ribbon loop is the right handle for a box that small children will use. Beads, knobs and magnets come off and are swallowed; magnets are the worst of them. Leave them away, or follow what their maker says about age.',
@@ -175,10 +198,11 @@ export const bookBox: DemoProject = {
             'Try it dry. All tabs must reach it together. If the spine’s tab stands off, the strip is too long for the curve: let the surplus go into that tab with a fresh fold.',
             'Then glue on every tab at once, set the cover on, and stand the box on its feet on the table before you press. The table makes both covers flush. Pegs along the edges; about 20 minutes before you touch it again.',
           ),
-          step(
-            'Hang the lid | flip lid',
+          stepAs(
+            { when: 'lid is flip', key: 'hang' },
+            'Hang the lid',
             ordered(
-              'Glue the lid’s teeth to the inside of the upper spine, along the pencil line, from the middle outwards. They point down.',
+              'Glue the lid’s teeth to the inside of the upper spine, along the pencil line from [#upper], from the middle outwards. They point down.',
               'Turn the lid’s side tabs down and wrap the spine’s tabs round them (plain sides have none). Glue them to each other and **never to the covers**.',
               'When this is dry, set it on: the upper spine stands on the edge of the lower one, all the way round. Lid closed, glue its end tab to the inside of the fore edge, the fold level with the top.',
               'Leave it closed until the glue is dry. Only then swing it.',
@@ -189,13 +213,15 @@ export const bookBox: DemoProject = {
             ),
             'It rubs on one side? The lid was glued a little skew. Slide a strip of card between lid and cover to find the place, and shave that edge of the upper spine. It falls shut and springs up again? The end tab’s fold is stiff: open it all the way a few times.',
           ),
-          step(
-            'A fixed top in place of the lid | only without a flip lid',
-            'Choose “none” for the lid and the box is closed for good, or, if you leave the top away, an open holder. Turn all tabs of the top **up**, into the recess between the covers, where a finger can press them, and its teeth up along the spine.',
+          stepAs(
+            { when: 'lid is none' },
+            'A fixed top in place of the lid',
+            'With a top the box is closed for good, or, if you leave the top away, an open holder. Turn all tabs of the top **up**, into the recess between the covers, where a finger can press them, and its teeth up along the spine.',
             piece('Top'),
           ),
-          step(
-            'Paper and band | optional',
+          stepAs(
+            { optional: true },
+            'Paper and band',
             'Cover papers look best with a border of card round them: cut two, [[cover.across - 1/4 in|bare]] × [[cover.along - 1/4 in]]. On the spine, a band hides the joint. Glue it to the **upper** spine alone and let it hang a little below, [[if lid is flip then upper spine.strip else lower spine.strip]] long, and no longer: it must not turn on to the covers.',
           ),
           step(

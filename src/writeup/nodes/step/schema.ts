@@ -7,6 +7,7 @@ export const Step = Node.create({
   group: 'part',
   content: 'block+',
   isolating: true,
+  draggable: true,
   defining: true,
 
   addAttributes() {

@@ -18,6 +18,9 @@ export function stepView(desk: EditingDesk): NodeViewRenderer {
     number.className = 'step-number';
     number.contentEditable = 'false';
     number.setAttribute('aria-hidden', 'true');
+    // Steps are dragged by their number; the step itself is what ProseMirror then takes along.
+    number.draggable = true;
+    number.title = 'Drag to move the step';
     const body = document.createElement('div');
     body.className = 'step-body';
     const head = document.createElement('div');
