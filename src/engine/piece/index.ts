@@ -9,5 +9,5 @@ export { keepMaking } from './making';
 export * from './outline';
 export * from './sector';
 export { seamsOf } from './grid-words';
-export { fanSizes } from './shape-words';
+export { fanSizes } from './fan-sizes';
 export * from './words';

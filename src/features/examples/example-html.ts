@@ -4,7 +4,8 @@ import { esc } from '@/exports/escape';
 import { drawingSvg } from '@/exports/svg/drawing';
 import { pieceCount } from '@/features/sizing/facts';
 import { readLive } from '@/writeup/live';
-import { measureInside, sentenceHtml } from '@/writeup/render-figures';
+import { sentenceHtml } from '@/writeup/render-figures';
+import { measureInside } from '@/writeup/render-measure';
 import type { Example } from './example';
 
 /** The parts of an example that follow its size, as HTML for the server and the browser alike. */
