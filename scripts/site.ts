@@ -6,13 +6,12 @@ import { config } from '@/config.server';
 import { closeDatabase, sqlite } from '@/db/client.server';
 import { migrateDatabase } from '@/db/migrate.server';
 import { DEMO_PEOPLE } from '@/features/demo/people';
-import { seedDemo } from '@/features/demo/seed.server';
 import { startScheduler } from '@/features/editions/schedule.server';
 import { frontDoor } from '@/features/http/front-door.server';
 import { serve } from '@/features/http/serve.server';
 import { startLocalMailServer } from '@/features/mailing/local-mail-server.server';
 import { startMailWorker } from '@/features/mailing/worker.server';
-import { portTrouble } from './steps.mjs';
+import { Halt, portTrouble, spawned } from './steps.mjs';
 
 interface Stoppable {
   stop(): Promise<void>;
@@ -24,7 +23,10 @@ export async function startServices(): Promise<Stoppable> {
   if (backup) console.log(`Brought the data up to date in ${applied} steps; the copy made before: ${backup}`);
   if (config.demo && isEmpty()) {
     console.log('Filling the empty database with the demo.');
-    await seedDemo();
+    const done = await spawned(process.execPath, ['--import', 'tsx', 'scripts/seed-demo.ts'], {
+      stdio: ['inherit', 'inherit', 'inherit', 'ipc'],
+    });
+    if (done !== 0) throw new Halt('The demo could not be made: see the message above.');
   }
 
   const mailServer = config.smtpUrl

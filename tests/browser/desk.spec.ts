@@ -144,7 +144,90 @@ test('a measure that is renamed takes formulas, fits, pieces and the text along,
   expect(await stored()).not.toContain('wall height');
 });
 
-test('another tab’s save is never overwritten, and both versions are kept whichever is chosen', async ({
+const clashes = (page: Page) => page.locator('.clashes');
+const kept = async (page: Page, id: string) =>
+  (
+    (await (await page.request.get(`/api/projects/${id}/revisions`)).json()) as {
+      revisions: { n: number; kind: string }[];
+    }
+  ).revisions.map(({ n, kind }) => [n, kind]);
+const text = (page: Page) => page.locator('[data-column=write-up] .ProseMirror');
+/** Types at the end of the first paragraph of a step. */
+async function typeIn(page: Page, step: number, words: string): Promise<void> {
+  await text(page)
+    .locator('.step')
+    .nth(step - 1)
+    .locator('p')
+    .first()
+    .click();
+  await page.waitForTimeout(80);
+  await page.keyboard.press('End');
+  await page.keyboard.type(words);
+}
+
+test('two tabs that change different things become one without a question, also after one was offline', async ({
+  context,
+  page: first,
+  id,
+}) => {
+  await first.setViewportSize({ width: 1440, height: 1000 });
+  const second = await context.newPage();
+  await second.setViewportSize({ width: 1440, height: 1000 });
+  await openDesk(first, id);
+  await openDesk(second, id);
+  await context.setOffline(true);
+  await typeIn(first, 1, ' Typed in the first tab.');
+  await title(second).fill('Named in the second tab');
+  await typeIn(second, 2, ' Typed in the second tab.');
+  await expect(saveWords(first)).toContainText('Not saved: The server cannot be reached');
+  await expect(saveWords(second)).toContainText('Not saved: The server cannot be reached');
+  await context.setOffline(false);
+  for (const page of [first, second]) {
+    await expect(saveWords(page)).toHaveText(/Saved.*revision [34]$/, { timeout: 60_000 });
+    await expect(text(page)).toContainText('Typed in the first tab.', { timeout: 30_000 });
+    await expect(text(page)).toContainText('Typed in the second tab.');
+    await expect(title(page)).toHaveValue('Named in the second tab');
+    await expect(clashes(page)).toHaveCount(0);
+  }
+});
+
+test('two tabs that change the same step are asked, one of them offline for a while, and nothing is lost', async ({
+  context,
+  page: first,
+  id,
+}) => {
+  await first.setViewportSize({ width: 1440, height: 1000 });
+  const second = await context.newPage();
+  await second.setViewportSize({ width: 1440, height: 1000 });
+  await openDesk(first, id);
+  await openDesk(second, id);
+  await second.route('**/api/projects/**', (route) => route.abort());
+  await typeIn(second, 1, ' Offline words.');
+  await expect(saveWords(second)).toContainText('Not saved: The server cannot be reached');
+  await typeIn(first, 1, ' Other words.');
+  await revision(first, 2);
+
+  // The copy outlives the page: it is opened again with the connection back, and asks.
+  await second.unroute('**/api/projects/**');
+  await second.reload();
+  await second.locator('.desk').waitFor({ timeout: 30_000 });
+  await expect(clashes(second)).toContainText('Changed in two places.', { timeout: 30_000 });
+  await expect(clashes(second)).toContainText('Offline words.');
+  await expect(clashes(second)).toContainText('Other words.');
+  await second.getByLabel('Both, mine first').check();
+  await second.getByRole('button', { name: 'Put together' }).click();
+  await revision(second, 3);
+  await expect(text(second)).toContainText('Offline words.');
+  await expect(text(second)).toContainText('Other words.');
+  await expect(text(first)).toContainText('Offline words.', { timeout: 30_000 });
+  expect(await kept(first, id)).toEqual([
+    [3, 'merged'],
+    [2, 'saved'],
+    [1, 'saved'],
+  ]);
+});
+
+test('what gives way when the other version is taken stays among the revisions, and is restored from there', async ({
   context,
   page: first,
   id,
@@ -152,26 +235,60 @@ test('another tab’s save is never overwritten, and both versions are kept whic
   const second = await context.newPage();
   await openDesk(first, id);
   await openDesk(second, id);
+  await second.route('**/api/projects/**', (route) => route.abort());
+  await title(second).fill('Tray from the second tab');
   await title(first).fill('Tray from the first tab');
   await revision(first, 2);
+  await second.unroute('**/api/projects/**');
+  await expect(clashes(second)).toContainText('Changed in two places.', { timeout: 45_000 });
+  await second.getByLabel('Take theirs').check();
+  await second.getByRole('button', { name: 'Put together' }).click();
+  await revision(second, 4);
+  await expect(title(second)).toHaveValue('Tray from the first tab');
+  expect((await kept(second, id))[1]).toEqual([3, 'set aside']);
+  await second.close();
 
-  await title(second).fill('Tray from the second tab');
-  await expect(second.getByRole('alert')).toContainText('Changed in another place. Revision 2 was saved');
-  await second.reload();
-  await expect(title(second)).toHaveValue('Tray from the second tab');
-  await second.getByRole('button', { name: 'Keep mine as a new revision' }).click();
-  await revision(second, 3);
-  expect(await titles(first)).toEqual(
-    expect.arrayContaining(['Tray from the second tab', 'Tray from the first tab (from the other tab)']),
-  );
+  await saveWords(first).click();
+  await first.waitForURL('**/revisions');
+  await first.getByRole('link', { name: 'Revision 3' }).click();
+  await expect(first.locator('.change-words').first()).toContainText('first');
+  await first.getByRole('button', { name: 'Restore revision 3' }).click();
+  await expect(first.getByRole('status')).toContainText('Restored as revision 5.');
+  expect(await titles(first)).toContain('Tray from the second tab');
+});
 
-  await title(first).fill('Tray from the first tab, later');
-  await first.getByRole('button', { name: 'Take the other' }).click();
-  await expect(title(first)).toHaveValue('Tray from the second tab');
-  await revision(first, 3);
-  expect(await titles(first)).toEqual(
-    expect.arrayContaining(['Tray from the second tab', 'Tray from the first tab, later (from this tab)']),
-  );
+test('a draft link shows the draft to whoever has it, at any size, until it is stopped', async ({
+  browser,
+  baseURL,
+  page,
+  id,
+}) => {
+  await openDesk(page, id);
+  await page.getByRole('button', { name: 'People' }).click();
+  await page.getByLabel('For whom').fill('Odo');
+  await page.getByRole('button', { name: 'Make a draft link' }).click();
+  const link = new URL(await page.getByLabel('The new draft link').inputValue()).pathname;
+
+  const stranger = await browser.newContext({ baseURL: baseURL! });
+  const reader = await stranger.newPage();
+  const opened = await reader.goto(link);
+  expect(opened!.headers()).toMatchObject({
+    'x-robots-tag': 'noindex, nofollow, noarchive',
+    'referrer-policy': 'no-referrer',
+    'cache-control': 'private, no-store',
+  });
+  await expect(reader.getByRole('heading', { name: 'Desk at work' })).toBeVisible();
+  await reader.getByLabel('How long is what goes in?').fill('200 mm');
+  await reader.getByLabel('Units').selectOption('mm');
+  await reader.getByRole('button', { name: 'Work it out' }).click();
+  // 200 long and two walls of 1 1/4 in: 200 + 2 × 31.75 = 263.5.
+  await expect(reader.locator('.article')).toContainText(/26[34]/);
+  expect(await reader.request.put(`/api/projects/${id}`, { data: {} }).then((r) => r.status())).not.toBe(200);
+
+  await page.getByRole('button', { name: 'Stop this link' }).click();
+  await expect(page.getByText('stopped')).toBeVisible();
+  expect((await reader.goto(link))!.status()).toBe(404);
+  await stranger.close();
 });
 
 test('what was typed without a connection is said to be unsaved, and is there when the page is opened again', async ({

@@ -32,6 +32,47 @@ test('sheets kept in the browser come first in the panel, and an own size stands
   await expect(page.locator('.project-card-sheets').first()).toContainText(/13 × 20|your sheets/);
 });
 
+test('the list of one’s sheets is changed in place, and is there again after a reload', async ({ page }) => {
+  await page.goto('/sheets');
+  const said = page.locator('[data-sheets-said]');
+  await expect(page.getByText('No sheets yet.')).toBeVisible();
+  await page.getByLabel('Size', { exact: true }).selectOption('a4');
+  await page.getByLabel('Grain', { exact: true }).selectOption('long');
+  await page.getByLabel('How many', { exact: true }).fill('12');
+  await page.getByRole('button', { name: 'Add this size' }).click();
+  await expect(said).toHaveText('Added.');
+  const a4 = page.getByLabel('A4 grain along the long side');
+  await expect(a4).toHaveValue('12');
+
+  // The same again is counted with what is there; another grain is another pile.
+  await page.getByLabel('Size', { exact: true }).selectOption('a4');
+  await page.getByLabel('Grain', { exact: true }).selectOption('long');
+  await page.getByLabel('How many', { exact: true }).fill('3');
+  await page.getByRole('button', { name: 'Add this size' }).click();
+  await expect(a4).toHaveValue('15');
+  await page.getByLabel('Size', { exact: true }).selectOption('letter');
+  await page.getByRole('button', { name: 'Add this size' }).click();
+  await expect(page.getByRole('button', { name: 'Remove Letter' })).toBeVisible();
+
+  await a4.fill('none');
+  await a4.press('Enter');
+  await expect(page.getByText('“none” is no number of sheets.')).toBeVisible();
+  await expect(a4).toHaveAttribute('aria-invalid', 'true');
+  await a4.fill('7');
+  await a4.press('Enter');
+  await expect(said).toHaveText('Kept.');
+  await page.reload();
+  await expect(a4).toHaveValue('7');
+
+  await page.getByRole('button', { name: 'Remove A4, grain along the long side' }).click();
+  await expect(said).toHaveText('Removed.');
+  await expect(page.getByLabel('Size', { exact: true })).toBeFocused();
+  await expect(a4).toBeHidden();
+  await page.reload();
+  await expect(page.getByRole('button', { name: 'Remove Letter' })).toBeVisible();
+  await expect(page.getByRole('button', { name: /^Remove A4/ })).toBeHidden();
+});
+
 test('an answer is shown before it is taken, and Escape leaves the size as it was', async ({ page }) => {
   await page.goto(BOOK_BOX);
   await panelReady(page);

@@ -10,14 +10,9 @@ const WIDE = 640;
 
 const drawn = (figures: Figures, piece: string, width = WIDE): Drawing =>
   drawPiece(pieceOf(figures, piece), { width, ...figures.sizing });
-/** What is written in a drawing, and the key without its letters, fractions with a plain slash. */
+/** What is written in a drawing and its key, fractions with a plain slash. */
 const written = (drawing: Drawing): readonly string[] =>
-  textsOf(drawing).map(({ shape }) =>
-    shape.text
-      .replace(/^[A-Za-z]\u2002/, '')
-      .replaceAll('\u202f', ' ')
-      .replaceAll('\u2044', '/'),
-  );
+  textsOf(drawing).map(({ shape }) => shape.text.replaceAll('\u202f', ' ').replaceAll('\u2044', '/'));
 /** Figures above the piece and on its left: outside the frame of its outline. */
 function running(drawing: Drawing): { readonly across: readonly string[]; readonly along: readonly string[] } {
   const outline = drawing.shapes.flatMap((shape) =>

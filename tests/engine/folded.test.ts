@@ -101,6 +101,34 @@ describe('a box that is folded only so far', () => {
   });
 });
 
+describe('what is round', () => {
+  /** Upright lines of the drawing, which the axis of a cup and of a drum is parallel to. */
+  const steep = (slug: string, options: { readonly seeThrough: boolean }): number => {
+    const model = modelOf(slug);
+    const drawing = drawFolded(model, figuresOf(model), { width: 300, height: 240, turn: 20, tilt: 20, ...options });
+    const lines = drawing.shapes.flatMap((shape) =>
+      shape.type === 'path' && shape.role === 'face edge'
+        ? [...shape.d.matchAll(/M(-?[\d.]+) (-?[\d.]+)L(-?[\d.]+) (-?[\d.]+)/g)].map((found) =>
+            found.slice(1).map(Number),
+          )
+        : [],
+    );
+    const xs = lines
+      .filter(([x1, y1, x2, y2]) => Math.abs(y2! - y1!) > 60 && Math.abs(y2! - y1!) > 3 * Math.abs(x2! - x1!))
+      .map(([x1, , x2]) => (x1! + x2!) / 2);
+    return Math.max(...xs) - Math.min(...xs);
+  };
+
+  it('has an outline left and right, as a cylinder and a cone have, where no edge of the card is', () => {
+    for (const seeThrough of [false, true]) {
+      // Seen from 20° above, a drum of 3 in that is 5 in tall with its lid is narrower than tall, a cup is as well: left and
+      // right outline are further apart than half of what is drawn.
+      expect(steep('drum-box', { seeThrough })).toBeGreaterThan(80);
+      expect(steep('cone-cup', { seeThrough })).toBeGreaterThan(80);
+    }
+  });
+});
+
 describe('a box that is turned', () => {
   it('stays inside its frame from every side, flat, half folded and closed', () => {
     for (const slug of SLUGS)

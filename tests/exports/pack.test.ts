@@ -3,7 +3,7 @@ import { expect, test } from 'vitest';
 import { packPages, type Placed, type Size } from '@/exports/pdf/templates/pack';
 import { splitArcs } from '@/exports/pdf/templates/arcs';
 import { squareSpots } from '@/exports/pdf/templates/spots';
-import { tile } from '@/exports/pdf/templates/tiles';
+import { tile, withoutEmpty } from '@/exports/pdf/templates/tiles';
 
 const PAGE = { across: 190, along: 260 };
 const lying = ({ across, along }: Size, turned: boolean) =>
@@ -65,6 +65,23 @@ test('tiles overlap by what they should and reach the far edges', () => {
     ['A3', 0, 480],
     ['B3', 190, 480],
   ]);
+});
+
+test('a page that nothing of the piece is on is left away, one inside the piece is not', () => {
+  // An L of 380 × 380 with arms 60 wide: pages of 200 that share 20 make 2 × 2, of which the upper right has nothing on it.
+  const page = { across: 200, along: 200 };
+  // Every side in ten parts.
+  const outline = (...corners: readonly (readonly [number, number])[]) =>
+    corners.flatMap(([x, y], i) => {
+      const [toX, toY] = corners[(i + 1) % corners.length] ?? [x, y];
+      return Array.from({ length: 10 }, (_, k) => ({ x: x + ((toX - x) * k) / 10, y: y + ((toY - y) * k) / 10 }));
+    });
+  const tiling = tile({ across: 380, along: 380 }, page, 20);
+  const arm = outline([0, 0], [60, 0], [60, 320], [380, 320], [380, 380], [0, 380]);
+  expect(withoutEmpty(tiling, page, arm).tiles.map(({ name }) => name)).toEqual(['A1', 'A2', 'B2']);
+  // A square so large that the middle one of 3 × 3 pages has none of its edges.
+  const large = tile({ across: 560, along: 560 }, page, 20);
+  expect(withoutEmpty(large, page, outline([0, 0], [560, 0], [560, 560], [0, 560])).tiles).toHaveLength(9);
 });
 
 test('squares keep clear of what stands there, or are not placed at all', () => {

@@ -158,6 +158,30 @@ describe('a piece larger than a page', () => {
   });
 });
 
+test('a piece that is needed more than once is drawn once, and says how often it is cut', () => {
+  const twice: Pattern = { ...DISC, pieces: DISC.pieces.map((piece) => ({ ...piece, count: '2' })) };
+  // One page for a disc of 100 mm, 3 × 2 for one of 400 mm.
+  for (const [width, pages] of [
+    [100, 1],
+    [400, 6],
+  ] as const) {
+    const read = templates(twice, 'a4', { width });
+    expect(read.pages).toHaveLength(pages);
+    expect(read.structure.text.match(/cut 2 · card/g)).toHaveLength(pages);
+    expect(read.structure.text.match(/Drawn once: cut as many as the name says\./g)).toHaveLength(pages);
+  }
+  expect(templates(DISC, 'a4').structure.text).not.toContain('Drawn once');
+});
+
+test('every page says what the lines on the pieces mean, and no others', () => {
+  const meanings = (pattern: Pattern) =>
+    nodesOf(templates(pattern, 'a4').structure)
+      .filter((node) => node.type === 'LI')
+      .map(({ text }) => text);
+  expect(meanings(DISC)).toEqual(['cut']);
+  expect(meanings(FOLDER)).toEqual(['cut', 'valley fold: score, fold towards you']);
+});
+
 test('the same content gives the same bytes', () => {
   const compiled = compilePattern(FOLDER);
   if (!compiled.ok) throw new Error('FOLDER does not compile');

@@ -136,7 +136,15 @@ describe('parts of an entry', () => {
 });
 
 it('lists the boxes by kind, and leaves out those without an entry', () => {
-  const box = (slug: string, group: string) => ({ slug, name: slug, group, summary: '', asks: '', folded: '' });
+  const box = (slug: string, group: string) => ({
+    slug,
+    name: slug,
+    group,
+    summary: '',
+    asks: '',
+    folded: '',
+    own: false,
+  });
   const patterns = [box('tray', 'Trays'), box('bag', 'Bags'), box('drum', 'Round'), box('lidded', 'Trays')];
   const groups = groupBoxes(patterns, [{ id: 'tray' }, { id: 'lidded' }, { id: 'bag' }]);
   expect(groups.map(({ group, boxes }) => [group, boxes.map(({ slug }) => slug)])).toEqual([

@@ -136,12 +136,12 @@ describe('what the proof list finds in the text', () => {
     expect(written(inStep(say('this', [link(href)]))).map(({ code }) => code)).toEqual(codes);
   });
   it('is a long step that shows nothing, and no short one', () => {
-    expect(written(inStep(say('Press it flat. '.repeat(20)))).map(({ code, place }) => [code, place.step])).toEqual([
+    expect(written(inStep(say('Press it flat. '.repeat(25)))).map(({ code, place }) => [code, place.step])).toEqual([
       ['no picture', 2],
     ]);
     expect(written(inStep(say('Press it flat.')))).toEqual([]);
     expect(
-      written(inStep(say('Press it flat. '.repeat(20)), { type: 'pieceCard', attrs: { piece: 'Folder' } })),
+      written(inStep(say('Press it flat. '.repeat(25)), { type: 'pieceCard', attrs: { piece: 'Folder' } })),
     ).toEqual([]);
   });
   it('is a tool that can hurt without a caution that speaks of it, told once', () => {

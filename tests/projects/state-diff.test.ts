@@ -105,8 +105,15 @@ describe('words', () => {
       { kind: 'same', text: '.' },
     ]);
   });
+  it('of texts that have little in common are told whole, one after the other', () => {
+    expect(wordRuns({ before: 'The folded box', after: 'A photo' })).toEqual([
+      { kind: 'gone', text: 'The folded box' },
+      { kind: 'same', text: '\n' },
+      { kind: 'new', text: 'A photo' },
+    ]);
+  });
   it('put together again give both texts', () => {
-    const [before, after] = ['Cut two strips of card, then score.', 'Cut three strips, score and fold the card.'];
+    const [before, after] = ['Cut two strips of card, then score them.', 'Cut three strips of card, then fold them.'];
     const runs = wordRuns({ before, after });
     const side = (kind: string) =>
       runs.filter((run) => run.kind === 'same' || run.kind === kind).map((run) => run.text);

@@ -19,6 +19,7 @@ import { editions, mailings, projects } from '@/db/schema';
 import type { Access } from '@/features/accounts/access';
 import { emptyWriteUp } from '../setup/empty-write-up';
 import type { Cast, Method } from './harness';
+import { FOLDER } from './published-project';
 
 export interface RouteRow {
   readonly path: string;
@@ -195,6 +196,11 @@ export const ROUTES: readonly RouteRow[] = [
   },
   { path: '/api/projects/[id]/withdrawal', method: 'DELETE', who: 'author', prepare: draft },
   { path: '/api/projects/[id]/restore', method: 'POST', who: 'author', prepare: draft },
+
+  { path: '/api/patterns', method: 'GET', who: 'author' },
+  { path: '/api/patterns', method: 'POST', who: 'author', body: FOLDER },
+  { path: '/api/patterns/[id]', method: 'GET', who: 'author', prepare: () => ({ id: 'tray' }) },
+  { path: '/api/patterns/[id]', method: 'DELETE', who: 'author', prepare: () => ({ id: 'no-such-pattern' }) },
 
   { path: '/api/mailings/[id]', method: 'GET', who: 'author', prepare: noMailing },
   {

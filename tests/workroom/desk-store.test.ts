@@ -81,6 +81,14 @@ describe('the desk', () => {
     store.undo();
     expect(store.$draft.get().title).toBe('Folder');
   });
+  it('shows a size that is played, keeps the author’s own, and ends with the next edit', () => {
+    store.play({ ...AUTHORS_SIZE, values: { 'inside width': 127 } });
+    expect(cut('blank width')).toBeCloseTo(254, 6);
+    expect(store.$draft.get().sizing).toEqual(AUTHORS_SIZE);
+    type('3 * inside width');
+    expect(store.$played.get()).toBeNull();
+    expect(cut('blank width')).toBeCloseTo(304.8, 6);
+  });
   it('lights the selected measure first, then what follows it', () => {
     store.select('inside width');
     expect(store.$litNames.get()).toEqual(['inside width', 'blank width']);

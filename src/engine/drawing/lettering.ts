@@ -14,6 +14,8 @@ export interface Lettered {
   readonly unnamed: readonly string[];
 }
 export interface KeyLine {
+  /** The letter that stands for it in the drawing. */
+  readonly letter?: string;
   readonly text: string;
   readonly role: 'figure' | 'label';
 }
@@ -50,6 +52,8 @@ const LETTERS = 'abcdefhkmnrstuvwxzABCDEFGHKLMNPRSTUVWXYZ';
 /** From one line of the key to the next, and between two on one line. */
 const KEY_LINE = 17;
 const KEY_GAP = 18;
+/** From a letter of the key to its words; the widest letter is an M. */
+const KEY_LETTER = 16;
 
 /** Names of panels and tabs, then notes; what has no room where it belongs is keyed by a letter. */
 export function lettering(
@@ -73,7 +77,7 @@ export function lettering(
     const shown = letter === '' ? [] : put(letter);
     if (shown.length === 0) return false;
     shapes.push(...shown);
-    key.push({ text: `${letter}\u2002${text}`, role });
+    key.push({ letter, text, role });
     letters += 1;
     return true;
   };
@@ -207,13 +211,18 @@ export function keyRows(
   frame: { readonly left: number; readonly right: number; readonly top: number },
 ): { readonly shapes: readonly Shape[]; readonly wide: number; readonly tall: number } {
   let [x, row] = [frame.left, 1];
-  const shapes = lines.map(({ text, role }): Shape => {
-    const width = textWidth(text);
-    if (x > frame.left && x + width > frame.right) [x, row] = [frame.left, row + 1];
-    const at = x;
-    x += width + KEY_GAP;
-    return { type: 'text', role, x: at, y: frame.top + row * KEY_LINE, text, anchor: 'start' };
+  const widthOf = ({ letter, text }: KeyLine) => (letter === undefined ? 0 : KEY_LETTER) + textWidth(text);
+  const shapes = lines.flatMap((line): Shape[] => {
+    const { letter, text, role } = line;
+    if (x > frame.left && x + widthOf(line) > frame.right) [x, row] = [frame.left, row + 1];
+    const at = { x, y: frame.top + row * KEY_LINE, anchor: 'start' } as const;
+    x += widthOf(line) + KEY_GAP;
+    if (letter === undefined) return [{ type: 'text', role, ...at, text }];
+    return [
+      { type: 'text', role: 'figure', ...at, text: letter },
+      { type: 'text', role, ...at, x: at.x + KEY_LETTER, text },
+    ];
   });
-  const wide = Math.max(0, ...lines.map(({ text }) => textWidth(text)));
+  const wide = Math.max(0, ...lines.map(widthOf));
   return { shapes, wide, tall: lines.length === 0 ? 0 : row * KEY_LINE + 4 };
 }

@@ -1,5 +1,7 @@
 import { encloses, pointAt, sweepOf } from '../net';
 import type { Axis, Curve, Fold, Loop, Net, Panel, Point } from '../types';
+import { closeRings, type Closure, type Hinge, type Linkage } from './closing';
+import { same } from '../measure';
 import { bentStrips, bentTurn, creaseSeams, edgeTurn } from './bent';
 import { cross, dot, minus, plus, times, turned, unit, vector, type Vector } from './vector';
 
@@ -71,6 +73,8 @@ interface Link {
   /** Hems are made while everything else is still flat; tabs turn ahead of the walls that they go behind. */
   readonly stage?: 'hem' | 'tab';
 }
+/** Share of the rest at which walls stand as a tube, where its ends are folded from them. */
+const TUBE = 0.5;
 /** Share at which hems are made, where there are any. */
 const HEMMED = 1 / 3;
 /**
@@ -87,24 +91,30 @@ export function foldNet(net: Net, options: FoldOptions): readonly FoldedPanel[] 
   const share = options.share ?? 1;
   const { facets, links } = facetsOf(net, options.asShown ?? false);
   const hemmed = links.some(({ stage }) => stage === 'hem') ? HEMMED : 0;
-  const shareOf = ({ stage }: Link): number => {
-    if (stage === 'hem') return Math.min(1, share / hemmed);
-    const rest = Math.max(0, (share - hemmed) / (1 - hemmed));
-    return stage === 'tab' ? Math.min(1, rest * TABS_AHEAD) : rest;
-  };
   const root = facets.findIndex((facet) => facet.of.name === options.root);
   const start = facets[root];
   if (!start) return [];
-  const frames = new Map<number, Frame>([[root, rootFrame(start, options, share)]]);
-  const queue = [root];
-  for (let current = queue.shift(); current !== undefined; current = queue.shift()) {
-    for (const link of links) {
-      const other = link.a === current ? link.b : link.b === current ? link.a : -1;
-      if (other < 0 || frames.has(other)) continue;
-      frames.set(other, across(frames.get(current) as Frame, link, facets[other] as Facet, shareOf(link)));
-      queue.push(other);
+  const tree = treeOf(root, links);
+  const tube = tree.closing.length > 0 ? tubeOf(links) : null;
+  const turnOf = (link: Link): number => {
+    if (link.stage === 'hem') return link.turn * Math.min(1, share / hemmed);
+    const rest = Math.max(0, (share - hemmed) / (1 - hemmed));
+    if (tube) {
+      const [up, down] = [Math.min(1, rest / TUBE), Math.max(0, (rest - TUBE) / (1 - TUBE))];
+      const begins = tube.stands.get(link);
+      return begins === undefined ? link.turn * down : begins * up + (link.turn - begins) * down;
     }
-  }
+    return link.turn * (link.stage === 'tab' ? Math.min(1, rest * TABS_AHEAD) : rest);
+  };
+  const held = tree.hinges.map(({ link }) => tube?.leads.has(link) ?? false);
+  const first = rootFrame(start, options, share);
+  const turns = tree.hinges.map(({ link }) => (turnOf(link) * Math.PI) / 180);
+  const layOut = (by: readonly number[]) => framesOf(first, tree, facets, by);
+  // Half way, folds that close a ring round an inner corner do not turn in step; flat and folded they are as they should be.
+  const rings = tree.closing.length > 0 && share > 0 && share < 1;
+  const whole = tree.hinges.map(({ link }) => (link.turn * Math.PI) / 180);
+  const closed = () => closeRings(turns, whole, (by) => linkageOf(layOut(by), tree, held));
+  const { frames } = layOut(rings ? onceFor(net, turns, closed) : turns);
   const inSpace = (facet: Facet, index: number): FoldedPanel[] => {
     const frame = frames.get(index);
     if (!frame) return [];
@@ -123,6 +133,123 @@ export function foldNet(net: Net, options: FoldOptions): readonly FoldedPanel[] 
     facetsOfSheet(one, facets).flatMap(({ facet, on }) => inSpace(facet, on).map((part) => ({ ...part, sheet }))),
   );
   return [...facets.flatMap(inSpace), ...laid];
+}
+
+/** Walls that fold to a tube before its ends are folded. */
+interface Tube {
+  /** Folds along the tube with the turn that they have when it stands, degrees: past its walls a corner goes straight on. */
+  readonly stands: ReadonlyMap<Link, number>;
+  /** What the rest follows: the corners of the tube, and round its ends the folds of every other wall. */
+  readonly leads: ReadonlySet<Link>;
+}
+
+/**
+ * Where folds cross at inner corners, card folds one way first: walls to a tube, then its ends. The folds along the tube are
+ * on more lines than the folds round it. Null where no folds cross.
+ */
+function tubeOf(links: readonly Link[]): Tube | null {
+  const [upright, level] = [crossing(links, 'x'), crossing(links, 'y')];
+  const [along, round, way] =
+    upright.length >= level.length ? ([upright, level, 'x'] as const) : ([level, upright, 'y'] as const);
+  const corners = along.flatMap((line) => {
+    const wall = longestOf(line);
+    // What is folded flat is the corner of no tube.
+    return same(Math.abs(wall.turn), 180) ? [] : line.map((link) => ({ link, wall }));
+  });
+  if (corners.length === 0) return null;
+  const stands = corners.map(({ link, wall }) => {
+    const own = same(Math.abs(link.turn), Math.abs(wall.turn));
+    return { link, own, turn: own ? link.turn : wall.turn };
+  });
+  const walls = corners.map(({ wall }) => wall);
+  const opposite = round.flatMap((line) => {
+    const atWalls = line
+      .filter((link) => link.stage !== 'hem' && walls.some((wall) => meet(link, wall)))
+      .sort((a, b) => Math.min(a.from[way], a.to[way]) - Math.min(b.from[way], b.to[way]));
+    const parity = atWalls.length > 0 ? atWalls.indexOf(longestOf(atWalls)) % 2 : 0;
+    return atWalls.filter((_, index) => index % 2 === parity);
+  });
+  return {
+    stands: new Map(stands.map(({ link, turn }) => [link, turn])),
+    leads: new Set([...stands.flatMap(({ link, own }) => (own ? [link] : [])), ...opposite]),
+  };
+}
+/** Folds that run one way (`x`: all of one x) and meet folds of the other way, by their lines. */
+function crossing(links: readonly Link[], way: 'x' | 'y'): readonly (readonly Link[])[] {
+  const running = (one: 'x' | 'y') => links.filter(({ from, to }) => Math.abs(from[one] - to[one]) < 1e-3);
+  const others = running(way === 'x' ? 'y' : 'x');
+  const meeting = running(way).filter((link) => others.some((other) => meet(link, other)));
+  const onLine = (link: Link) => meeting.filter(({ from }) => Math.abs(from[way] - link.from[way]) < 1e-3);
+  return meeting.map(onLine).filter(([first], index) => first === meeting[index]);
+}
+const meet = (a: Link, b: Link): boolean => [a.from, a.to].some((end) => near(end, b.from) || near(end, b.to));
+const longestOf = (line: readonly Link[]): Link => {
+  const long = ({ from, to }: Link) => Math.hypot(to.x - from.x, to.y - from.y);
+  return line.reduce((longest, link) => (long(link) > long(longest) ? link : longest));
+};
+
+/** A box that is turned before the eyes is folded as far in every picture of it. */
+const closedOnce = new WeakMap<Net, { readonly asked: string; readonly turns: readonly number[] }>();
+function onceFor(net: Net, turns: readonly number[], close: () => readonly number[]): readonly number[] {
+  const asked = turns.join();
+  const known = closedOnce.get(net);
+  if (known?.asked === asked) return known.turns;
+  const closed = close();
+  closedOnce.set(net, { asked, turns: closed });
+  return closed;
+}
+
+interface Tree {
+  readonly root: number;
+  /** From the root outwards: each turns the facet `moves` about a link that it shares with the facet `from`. */
+  readonly hinges: readonly { readonly link: Link; readonly from: number; readonly moves: number }[];
+  /** Folds between facets that hang together already. */
+  readonly closing: readonly Link[];
+  readonly chain: (facet: number) => readonly number[];
+}
+function treeOf(root: number, links: readonly Link[]): Tree {
+  const hinges: Tree['hinges'][number][] = [];
+  const chains = new Map<number, readonly number[]>([[root, []]]);
+  const used = new Set<Link>();
+  const queue = [root];
+  for (let from = queue.shift(); from !== undefined; from = queue.shift()) {
+    for (const link of links) {
+      const moves = link.a === from ? link.b : link.b === from ? link.a : -1;
+      if (moves < 0 || chains.has(moves)) continue;
+      used.add(link);
+      chains.set(moves, [...(chains.get(from) as readonly number[]), hinges.length]);
+      hinges.push({ link, from, moves });
+      queue.push(moves);
+    }
+  }
+  const closing = links.filter((link) => !used.has(link) && chains.has(link.a) && chains.has(link.b));
+  return { root, hinges, closing, chain: (facet) => chains.get(facet) ?? [] };
+}
+
+/** Every facet's frame with the hinges turned so far (radians), and where the hinges then are. */
+function framesOf(first: Frame, { root, hinges }: Tree, facets: readonly Facet[], turns: readonly number[]) {
+  const frames = new Map<number, Frame>([[root, first]]);
+  const inSpace = hinges.map(({ link, from, moves }, index): Hinge => {
+    const frame = frames.get(from) as Frame;
+    const hinge = hingeOf(frame, link, facets[moves] as Facet);
+    frames.set(moves, turnedAbout(frame, hinge, turns[index] as number));
+    return { ...hinge, moves };
+  });
+  return { frames, hinges: inSpace };
+}
+
+function linkageOf(
+  { frames, hinges }: ReturnType<typeof framesOf>,
+  { closing, chain }: Tree,
+  held: readonly boolean[],
+): Linkage {
+  const closures = closing.flatMap(({ a, b, from, to }) =>
+    [from, to].map((point): Closure => {
+      const placed = (facet: number) => place(frames.get(facet) as Frame, point);
+      return { facets: [a, b], places: [placed(a), placed(b)] };
+    }),
+  );
+  return { hinges, held, closures, chain };
 }
 
 /** A sheet whole on a flat face; strip by strip where the card under it is rolled or bent. */
@@ -211,17 +338,20 @@ function coneFrame(
   return { origin: minus(at, plus(times(across, cone.apex.x), times(along, cone.apex.y))), across, along };
 }
 
-/** The frame beyond a fold: the same flat sheet turned about the fold's line, towards the inside for a valley. */
-function across(frame: Frame, link: Link, beyond: Facet, share: number): Frame {
-  if (link.turn === 0) return frame;
+/** A fold in space, about which what lies beyond it turns towards the inside for a valley. */
+function hingeOf(frame: Frame, link: Link, beyond: Facet): Pick<Hinge, 'at' | 'about'> {
   const [p, q] = [place(frame, link.from), place(frame, link.to)];
   const direction = unit(minus(q, p));
   const centre = middleOf(beyond.points);
   const towards = minus(place(frame, centre), p);
   const sign = dot(cross(direction, towards), insideOf(frame)) >= 0 ? 1 : -1;
-  const angle = ((sign * link.turn * Math.PI) / 180) * share;
-  const turn = (a: Vector) => turned(a, direction, angle);
-  return { origin: plus(p, turn(minus(frame.origin, p))), across: turn(frame.across), along: turn(frame.along) };
+  return { at: p, about: times(direction, sign) };
+}
+/** The frame beyond a fold: the same flat sheet turned about the fold's line. */
+function turnedAbout(frame: Frame, { at, about }: Pick<Hinge, 'at' | 'about'>, angle: number): Frame {
+  if (angle === 0) return frame;
+  const turn = (a: Vector) => turned(a, about, angle);
+  return { origin: plus(at, turn(minus(frame.origin, at))), across: turn(frame.across), along: turn(frame.along) };
 }
 
 function facetsOf(net: Net, asShown: boolean): { readonly facets: readonly Facet[]; readonly links: readonly Link[] } {

@@ -4,6 +4,7 @@ import { bytesOf, decoration, group, MM, openDocument, tagged, type Paper, type 
 import { draw, UNIT, type Pen } from './drawing.server';
 import { HAIR, HEAD, INK, SMALL } from './look';
 import type { TemplatesContent } from './sheet/content';
+import { LINE_LEGEND } from '../line-legend';
 import { splitArcs } from './templates/arcs';
 import { lineFoot, tileFoot } from './templates/foot.server';
 import {
@@ -18,7 +19,7 @@ import {
   type TemplatePage,
 } from './templates/layout';
 import type { Obstacle } from './templates/spots';
-import { Typesetter } from './typeset.server';
+import { Typesetter, type Words } from './typeset.server';
 
 /** Drawing units in a millimetre at true size. */
 const TRUE = MM / UNIT;
@@ -39,25 +40,34 @@ export function templatesPdf(content: TemplatesContent, paper: PaperId): Uint8Ar
   });
   const { doc, root } = document;
   const pen: Pen = { doc, type: new Typesetter(doc) };
-  const pages = templatePages(content.figures.pieces, paper, (piece) => labelsOf(trueDrawing(content, piece)));
+  const { pieces } = content.figures;
+  const drawings = new Map(pieces.map((piece) => [piece, trueDrawing(content, piece)]));
+  const drawn: Drawn = (piece) => drawings.get(piece) as Drawing;
+  const pages = templatePages(pieces, paper, (piece) => labelsOf(drawn(piece)));
+  const roles = new Set([...drawings.values()].flatMap(({ shapes }) => shapes.map(({ role }) => role)));
+  const legend = LINE_LEGEND.filter(({ role }) => roles.has(role));
   pages.forEach((page, i) => {
     doc.addPage();
     const part = group(doc, root, 'Sect');
-    const of = { content, paper, page: i + 1, pages: pages.length };
+    const of = { content, paper, page: i + 1, pages: pages.length, legend };
     if (page.kind === 'pieces') {
       for (const { item, x, y, turned } of page.placed) {
-        wholePiece(pen, part, content, item, { x: MARGIN + x, y: MARGIN + y, turned });
+        wholePiece(pen, part, drawn(item.piece), item, { x: MARGIN + x, y: MARGIN + y, turned });
       }
       lineFoot(pen, part, document, of, page);
     } else {
-      tilePage(pen, part, document, content, paper, page);
-      const outline = (scale: number, x: number, y: number) => outlineOf(pen, content, page, { scale, x, y });
+      tilePage(pen, part, document, drawn(page.item.piece), paper, page);
+      const outline = (scale: number, x: number, y: number) =>
+        outlineOf(pen, drawn(page.item.piece), page, { scale, x, y });
       tileFoot(pen, part, document, { ...of, outline }, page);
     }
     part.end();
   });
   return bytesOf(document);
 }
+
+/** Drawings of the pieces, each made once. */
+type Drawn = (piece: PieceFigure) => Drawing;
 
 /** The drawing of a piece at true size, without its dimensions. */
 function trueDrawing({ figures }: TemplatesContent, piece: PieceFigure): Drawing {
@@ -94,14 +104,14 @@ function labelsOf({ shapes }: Drawing): readonly Obstacle[] {
 /** A large piece's outline on the map of its pages; `scale` is points for a millimetre. */
 function outlineOf(
   { doc }: Pen,
-  content: TemplatesContent,
+  drawing: Drawing,
   { item, tiling }: Extract<TemplatePage, { kind: 'tile' }>,
   { scale, x, y }: { readonly scale: number; readonly x: number; readonly y: number },
 ): void {
   doc.save().translate(x, y).scale(scale);
   if (tiling.turned) doc.transform(0, 1, -1, 0, item.along, 0);
   doc.scale(1 / TRUE).translate(-BORDER, -BORDER);
-  for (const shape of trueDrawing(content, item.piece).shapes) {
+  for (const shape of drawing.shapes) {
     if (shape.type === 'path' && shape.role === 'cut') doc.path(shape.d);
   }
   doc
@@ -115,13 +125,12 @@ function outlineOf(
 function wholePiece(
   pen: Pen,
   parent: Tag,
-  content: TemplatesContent,
+  drawing: Drawing,
   item: Numbered,
   { x, y, turned }: { readonly x: number; readonly y: number; readonly turned: boolean },
 ): void {
   const { doc } = pen;
   pieceName(pen, parent, item, { x, y }, turned ? ', turned' : '');
-  const drawing = trueDrawing(content, item.piece);
   const { across, along } = lying(item, turned);
   const top = y + NAME;
   tagged(doc, parent, 'Figure', () => truly(pen, drawing, item, { x, y: top, turned }), {
@@ -152,7 +161,8 @@ function pieceName(
   more: string,
 ): void {
   const name = `${number}\u00a0 ${piece.name}`;
-  const said = `cut ${piece.count} · ${piece.stock}${more}`;
+  const often = `cut ${piece.count}`;
+  const said: Words = [piece.count > 1 ? { text: often, weight: 800 } : often, ` · ${piece.stock}${more}`];
   const baseline = (y + NAME) * MM - 5;
   tagged(doc, parent, 'H2', () => type.draw(name, HEAD, { x: x * MM, baseline }));
   const after = x * MM + type.width(name, HEAD) + 6;
@@ -165,15 +175,14 @@ function tilePage(
   pen: Pen,
   parent: Tag,
   { width }: Paper,
-  content: TemplatesContent,
+  drawing: Drawing,
   paper: PaperId,
   { item, tiling, tile }: Extract<TemplatePage, { kind: 'tile' }>,
 ): void {
-  const { doc, type } = pen;
+  const { doc } = pen;
   const area = tileArea(pageSize(paper));
   const [left, top] = [MARGIN, MARGIN + NAME];
   pieceName(pen, parent, item, { x: MARGIN, y: MARGIN }, `, part ${tile.name}${tiling.turned ? ', turned' : ''}`);
-  const drawing = trueDrawing(content, item.piece);
   const figure = () => {
     doc
       .save()
@@ -187,11 +196,12 @@ function tilePage(
     bbox: [left * MM, top * MM, (left + area.across) * MM, (top + area.along) * MM],
   });
   decoration(doc, () => {
+    const there = (column: number, row: number) => tiling.tiles.some((one) => one.column === column && one.row === row);
     const sides = {
-      left: tile.column > 0,
-      right: tile.column < tiling.columns - 1,
-      top: tile.row > 0,
-      bottom: tile.row < tiling.rows - 1,
+      left: there(tile.column - 1, tile.row),
+      right: there(tile.column + 1, tile.row),
+      top: there(tile.column, tile.row - 1),
+      bottom: there(tile.column, tile.row + 1),
     };
     const name = (column: number, row: number) => `${String.fromCharCode(65 + column)}${row + 1}`;
     const upright = (x: number, other: string, towards: 1 | -1) => {
@@ -199,14 +209,13 @@ function tilePage(
       for (const share of [0.2, 0.8]) meet(pen, x + (towards * OVERLAP) / 2, top + area.along * share);
       const at = { x: (x + (towards * OVERLAP) / 2) * MM, y: (top + area.along / 2) * MM };
       doc.save().rotate(-90, { origin: [at.x, at.y] });
-      type.draw(`meets ${other}`, SMALL, { x: at.x, baseline: at.y + 2.5, anchor: 'middle' });
+      meets(pen, other, at);
       doc.restore();
     };
     const level = (y: number, other: string, towards: 1 | -1) => {
       joint(pen, [left, y], [left + area.across, y]);
       for (const share of [0.2, 0.8]) meet(pen, left + area.across * share, y + (towards * OVERLAP) / 2);
-      const baseline = (y + (towards * OVERLAP) / 2) * MM + 2.5;
-      type.draw(`meets ${other}`, SMALL, { x: width / 2, baseline, anchor: 'middle' });
+      meets(pen, other, { x: width / 2, y: (y + (towards * OVERLAP) / 2) * MM });
     };
     if (sides.left) upright(left + OVERLAP, name(tile.column - 1, tile.row), -1);
     if (sides.right) upright(left + area.across - OVERLAP, name(tile.column + 1, tile.row), 1);
@@ -224,6 +233,14 @@ function joint({ doc }: Pen, [x1, y1]: readonly [number, number], [x2, y2]: read
     .dash(1.2, { space: 3 })
     .stroke('#666666')
     .undash();
+}
+
+/** Which page lies here, readable over whatever the piece has there. */
+function meets({ doc, type }: Pen, other: string, { x, y }: { readonly x: number; readonly y: number }): void {
+  const words = `meets ${other}`;
+  const wide = type.width(words, SMALL) + 4;
+  doc.rect(x - wide / 2, y - 5, wide, 10).fill('#ffffff');
+  type.draw(words, SMALL, { x, baseline: y + 2.5, anchor: 'middle' });
 }
 
 /** A cross in a ring, at the same place of the piece on both pages. */

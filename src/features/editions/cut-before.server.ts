@@ -22,5 +22,9 @@ export function cutBefore(
   const old = had > 0 && had < edition.n ? getEdition(edition.slug, had) : null;
   if (!old) return null;
   const notes = editionHistory(edition.projectId).filter(({ n }) => n > had && n <= edition.n);
-  return { had, changes: figureChanges(modelOf(old), model, sizing), notes: [...notes].reverse() };
+  return {
+    had,
+    changes: figureChanges({ model: modelOf(old), writeUp: old.writeUp }, { model, writeUp: edition.writeUp }, sizing),
+    notes: [...notes].reverse(),
+  };
 }

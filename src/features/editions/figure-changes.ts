@@ -11,6 +11,11 @@ import {
   type Sizing,
 } from '@/engine';
 
+import { align } from '@/features/projects/align';
+import { alikeBlocks, blockName, isStep, type LooseNode } from '@/features/projects/state-words';
+import type { WriteUp } from '@/writeup/document';
+import { showLive, type LiveFigures } from '@/writeup/live';
+
 /** A figure that is not what it was, as the maker reads it on a ruler. */
 export interface FigureChange {
   /** "Lower spine", "strip width". */
@@ -23,6 +28,13 @@ export interface FigureChanges {
   readonly pieces: readonly FigureChange[];
   /** Measures that differ, whether or not a piece shows them. */
   readonly measures: readonly FigureChange[];
+  /** Live figures of the text, by the step that they stand in: another measure may stand there now. */
+  readonly text: readonly FigureChange[];
+}
+/** What figures follow from. */
+export interface Figured {
+  readonly model: Model;
+  readonly writeUp: WriteUp;
 }
 
 /**
@@ -30,13 +42,24 @@ export interface FigureChanges {
  * compared as cut: what a ruler does not show is no change. A measure that one of them does not have is left out, a piece
  * is told.
  */
-export function figureChanges(before: Model, after: Model, sizing: Sizing): FigureChanges {
-  const [was, is] = [evaluate(before, answersOf(before, sizing)), evaluate(after, answersOf(after, sizing))];
-  return { pieces: pieceChanges(was, is), measures: measureChanges(was, is) };
+export function figureChanges(before: Figured, after: Figured, sizing: Sizing): FigureChanges {
+  const [was, is] = [before, after].map(({ model, writeUp }) => ({
+    live: { model, figures: evaluate(model, answersOf(model, sizing)) },
+    writeUp,
+  })) as [Worked, Worked];
+  return {
+    pieces: pieceChanges(was.live.figures, is.live.figures),
+    measures: measureChanges(was.live.figures, is.live.figures),
+    text: textChanges(was, is),
+  };
+}
+interface Worked {
+  readonly live: LiveFigures;
+  readonly writeUp: WriteUp;
 }
 
-export const noFigureChanged = ({ pieces, measures }: FigureChanges): boolean =>
-  pieces.length === 0 && measures.length === 0;
+export const noFigureChanged = ({ pieces, measures, text }: FigureChanges): boolean =>
+  pieces.length === 0 && measures.length === 0 && text.length === 0;
 
 /** Only what this pattern asks: an older one may ask less, or other things. */
 function answersOf({ pattern }: Model, sizing: Sizing): Sizing {
@@ -84,4 +107,29 @@ function measureChanges(before: Figures, after: Figures): FigureChange[] {
     const [was, is] = [old.cut, cut].map((value) => showValue(value, kind, { units, grid, unit }).typeset);
     return was === is ? [] : [{ name, was: was ?? '', is: is ?? '' }];
   });
+}
+
+/** Block by block, figures that took the place of others; those that were only added or taken out say nothing of a cut. */
+function textChanges(before: Worked, after: Worked): FigureChange[] {
+  const blocks = ({ writeUp }: Worked) => writeUp.doc.content as readonly LooseNode[];
+  const steps = blocks(after).filter(isStep);
+  const pairs = align(blocks(before), blocks(after), { key: (block) => JSON.stringify(block), alike: alikeBlocks });
+  return pairs.flatMap((pair) => {
+    if (pair.before === undefined || pair.after === undefined) return [];
+    const [old, now] = [figuresIn(pair.before, before.live), figuresIn(pair.after, after.live)];
+    const name = blockName(pair.after, isStep(pair.after) ? steps.indexOf(pair.after) + 1 : null);
+    return align(old, now, { key: (figure) => figure, alike: () => true }).flatMap((figure) =>
+      figure.before === undefined || figure.after === undefined || figure.before === figure.after
+        ? []
+        : [{ name, was: figure.before, is: figure.after }],
+    );
+  });
+}
+
+function figuresIn(block: LooseNode, live: LiveFigures): readonly string[] {
+  if (block.type === 'measure') {
+    const shown = showLive(live, { formula: String(block.attrs?.['formula']), bare: false });
+    return shown ? [shown.typeset] : [];
+  }
+  return (block.content ?? []).flatMap((inner) => figuresIn(inner, live));
 }

@@ -1,6 +1,6 @@
-import { compilePattern, explainAt, nearestName, type Fault, type Model, type Pattern } from '@/engine';
+import { compilePattern, explainAt, nearestName, type Fault, type Model, type Pattern, type Result } from '@/engine';
 import type { z } from 'zod';
-import { patternSchema } from './pattern-schema';
+import { patternFileSchema } from './pattern-schema';
 
 /** A pattern file that cannot be used. The message names the file and lists every fault with its place and cure. */
 export class PatternFileError extends Error {
@@ -13,41 +13,52 @@ export class PatternFileError extends Error {
   }
 }
 
-/** Text of a pattern file to a pattern and its model. Throws a PatternFileError with all that is wrong. */
-export function loadPattern(file: string, text: string): { readonly pattern: Pattern; readonly model: Model } {
-  const parsed = patternSchema.safeParse(readJson(file, text));
-  if (!parsed.success) throw new PatternFileError(file, parsed.error.issues.map(faultOf));
-  const compiled = compilePattern(parsed.data);
-  if (!compiled.ok) throw new PatternFileError(file, compiled.faults);
+export interface ReadPattern {
+  readonly pattern: Pattern;
+  readonly model: Model;
+}
+
+/** Text of a pattern file of ours to a pattern and its model. Throws a PatternFileError with all that is wrong. */
+export function loadPattern(file: string, text: string): ReadPattern {
+  const json = parseJson(text);
+  const read = json.ok ? readPattern(json.value) : json;
+  if (!read.ok) throw new PatternFileError(file, read.faults);
   const slug = file.replace(/^.*\//, '').replace(/\.json$/, '');
-  if (parsed.data.slug !== slug) {
+  if (read.value.pattern.slug !== slug) {
     throw new PatternFileError(file, [
       {
         code: 'pattern slug',
         where: 'slug',
-        found: `“${parsed.data.slug}”`,
+        found: `“${read.value.pattern.slug}”`,
         expected: `“${slug}”, the name of the file`,
         hint: `Write “${slug}”, or rename the file.`,
       },
     ]);
   }
-  return { pattern: parsed.data, model: compiled.value };
+  return read.value;
 }
 
-function readJson(file: string, text: string): unknown {
+/** What a pattern file holds, checked by its schema and then by the engine. */
+export function readPattern(json: unknown): Result<ReadPattern> {
+  const parsed = patternFileSchema.safeParse(json);
+  if (!parsed.success) return { ok: false, faults: parsed.error.issues.map(faultOf) };
+  const { $schema: _, ...pattern } = parsed.data;
+  const compiled = compilePattern(pattern);
+  return compiled.ok ? { ok: true, value: { pattern, model: compiled.value } } : compiled;
+}
+
+export function parseJson(text: string): Result<unknown> {
   try {
-    return JSON.parse(text);
+    return { ok: true, value: JSON.parse(text) as unknown };
   } catch (error) {
-    const found = error instanceof Error ? error.message : 'something else';
-    throw new PatternFileError(file, [
-      {
-        code: 'pattern json',
-        where: 'the file',
-        found,
-        expected: 'JSON',
-        hint: 'Look for a missing comma, quote or bracket there.',
-      },
-    ]);
+    const fault: Fault = {
+      code: 'pattern json',
+      where: 'the file',
+      found: error instanceof Error ? error.message : 'something else',
+      expected: 'JSON',
+      hint: 'Look for a missing comma, quote or bracket there.',
+    };
+    return { ok: false, faults: [fault] };
   }
 }
 
@@ -168,5 +179,11 @@ function faultOf(issue: z.ZodIssue): Fault {
   if (issue.code === 'invalid_type' && issue.received === 'undefined') {
     return { code: 'pattern missing', where, found: 'nothing', expected: issue.expected, hint: 'Add it.' };
   }
-  return { code: 'pattern shape', where, found: issue.message, expected: '', hint: 'Put it right there.' };
+  return {
+    code: 'pattern shape',
+    where,
+    found: issue.message.replace(/\.$/u, ''),
+    expected: '',
+    hint: 'Put it right there.',
+  };
 }

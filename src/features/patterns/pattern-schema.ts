@@ -175,7 +175,7 @@ const layer = z.strictObject({
 const piece = z.discriminatedUnion('builder', [grid, fan, disc, sector, outline, layer]);
 const size = list(z.strictObject({ name, formula }));
 
-export const patternSchema: z.ZodType<Pattern> = z.strictObject({
+const pattern = z.strictObject({
   format: z.literal(1),
   slug: z.string().max(80),
   name,
@@ -202,3 +202,8 @@ export const patternSchema: z.ZodType<Pattern> = z.strictObject({
     }),
   ),
 });
+
+export const patternSchema: z.ZodType<Pattern> = pattern;
+
+/** A pattern as a file holds it: it may name the schema that it is written after. */
+export const patternFileSchema = pattern.extend({ $schema: z.string().max(300).optional() });

@@ -19,7 +19,9 @@ export function firstWriteUp(pattern: Pick<Pattern, 'pieces' | 'order'>): WriteU
       ],
     };
   });
-  const stocks = [...new Set(pattern.pieces.map((piece) => piece.stock))];
+  // From blank there are no pieces yet; card there will be, and a list has one item at least.
+  const cut = new Set(pattern.pieces.map((piece) => piece.stock));
+  const stocks = cut.size === 0 ? ['card'] : [...cut];
   return {
     version: WRITE_UP_VERSION,
     doc: {

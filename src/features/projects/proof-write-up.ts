@@ -150,19 +150,19 @@ function pictureItems(doc: DocNode, at: PlaceAt): ProofItem[] {
   return stepsOf(doc).flatMap((step, i): ProofItem[] => {
     const shows = (node: LooseNode): boolean => PICTURES.has(node.type) || (node.content ?? []).some(shows);
     // One sentence seldom needs a picture.
-    if (shows(step) || blockWords(step).length < MOST_WITHOUT) return [];
+    if (shows(step) || step.attrs?.['moment'] || blockWords(step).length < MOST_WITHOUT) return [];
     return [
       {
         code: 'no picture',
         blocking: false,
         title: `Step ${i + 1} shows nothing`,
-        detail: 'A photo, a piece or the folded box would say what words are long about.',
+        detail: 'A photo, a piece, the folded box or a moment of a video would say what words are long about.',
         place: at(i + 1),
       },
     ];
   });
 }
-const MOST_WITHOUT = 200;
+const MOST_WITHOUT = 300;
 
 /** Tools and materials that can hurt, where no caution of the write-up speaks of them. */
 function cautionItems(doc: DocNode, at: PlaceAt): ProofItem[] {

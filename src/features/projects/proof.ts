@@ -81,7 +81,9 @@ export function proofList(subject: ProofSubject, worked: Worked = {}): readonly 
     ...(compiled.ok && figures ? typedNumberItems(subject.writeUp, { model: compiled.value, figures }, at) : []),
     ...unusedItems(subject.pattern, uses),
   ];
-  return [...items.filter((item) => item.blocking), ...items.filter((item) => !item.blocking)];
+  // A step without a picture is the least of it, and there may be many.
+  const rank = ({ blocking: stops, code }: ProofItem) => (stops ? 0 : code === 'no picture' ? 2 : 1);
+  return [...items].sort((a, b) => rank(a) - rank(b));
 }
 
 export const blocking = (items: readonly ProofItem[]): readonly ProofItem[] => items.filter((item) => item.blocking);

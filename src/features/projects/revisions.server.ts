@@ -1,6 +1,6 @@
 import { and, desc, eq, inArray, lt } from 'drizzle-orm';
 import { db, type Transaction } from '@/db/client.server';
-import { projects, revisions, users } from '@/db/schema';
+import { type projects, revisions, users } from '@/db/schema';
 import type { ProjectState } from './project';
 import { openRow, type Asker, type ProjectRow } from './project-access.server';
 import { thinned } from './thinning';

@@ -37,12 +37,19 @@ export function stateChanges(before: ProjectState, after: ProjectState): readonl
   return groups.filter(({ changes }) => changes.length > 0);
 }
 
-/** The words of a change in order, what is gone before what is new. */
-export const wordRuns = ({ before, after }: Pick<StateChange, 'before' | 'after'>): readonly WordRun[] =>
-  diffWordsWithSpace(before, after).map(({ value, added, removed }) => ({
-    kind: added ? 'new' : removed ? 'gone' : 'same',
-    text: value,
-  }));
+/** The words of a change in order, what is gone before what is new. Texts that have little in common stand one after the other. */
+export function wordRuns({ before, after }: Pick<StateChange, 'before' | 'after'>): readonly WordRun[] {
+  const runs = diffWordsWithSpace(before, after).map(
+    ({ value, added, removed }): WordRun => ({ kind: added ? 'new' : removed ? 'gone' : 'same', text: value }),
+  );
+  const shared = runs.reduce((sum, { kind, text }) => sum + (kind === 'same' ? text.trim().length : 0), 0);
+  if (before === '' || after === '' || shared * 3 >= Math.min(before.length, after.length)) return runs;
+  return [
+    { kind: 'gone', text: before },
+    { kind: 'same', text: '\n' },
+    { kind: 'new', text: after },
+  ];
+}
 
 const same = (a: unknown, b: unknown): boolean => JSON.stringify(a) === JSON.stringify(b);
 const one = (where: string, before: string, after: string): StateChange[] =>
@@ -50,14 +57,18 @@ const one = (where: string, before: string, after: string): StateChange[] =>
 
 function factChanges(before: ProjectState, after: ProjectState): StateChange[] {
   const minutes = (state: ProjectState) => (state.minutes === null ? '' : String(state.minutes));
-  const picture = (state: ProjectState) => (state.hero === null ? 'The folded box' : `Picture ${state.hero}`);
   return [
     ...one('Title', before.title, after.title),
     ...one('Summary', before.summary, after.summary),
     ...one('Minutes at the table', minutes(before), minutes(after)),
-    ...one('First picture', picture(before), picture(after)),
+    ...(before.hero === after.hero ? [] : [{ where: 'First picture', ...pictureWords(before.hero, after.hero) }]),
   ];
 }
+
+const pictureWords = (before: string | null, after: string | null) => ({
+  before: before === null ? 'The folded box' : 'A photo',
+  after: after === null ? 'The folded box' : before === null ? 'A photo' : 'Another photo',
+});
 
 /** Things with names; one that was renamed counts as taken out and put in. */
 function named(before: readonly { name: string }[], after: readonly { name: string }[]): StateChange[] {

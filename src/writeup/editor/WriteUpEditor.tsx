@@ -33,7 +33,8 @@ import { shortcut } from './shortcuts';
 import { Toolbar } from './Toolbar';
 import { stepAt } from './steps';
 import { stepNumbers } from './step-numbers';
-import { takeDocument } from './take-document';
+import { createTeller } from './teller';
+import { takeDocument, toldNow, type Told } from './take-document';
 import { tableTools } from './table-keys';
 import { WriteUpFoot } from './WriteUpFoot';
 import { takeNames } from './writing';
@@ -53,7 +54,7 @@ export interface WriteUpEditorProps {
   readonly incoming: ReadableAtom<readonly StepNode[] | null>;
   /** Where photos go. */
   readonly uploads: { readonly projectId: string };
-  /** After every change of the document, never for a change of the figures. */
+  /** After changes of the document, in the pause behind them and before the focus leaves; never for a change of the figures. */
   readonly onChange: (writeUp: WriteUp) => void;
   /** The measure that the selected live measure shows; null when another thing is selected. */
   readonly onSelectMeasure: (name: string | null) => void;
@@ -84,7 +85,8 @@ export function WriteUpEditor({
   });
 
   const editing = useRef<Editor | null>(null);
-  const [{ desk, send, own }] = useState(() => {
+  const known = useRef<Told | null>(null);
+  const [{ desk, send, extensions, teller }] = useState(() => {
     const open = (find: (editor: Editor) => Opened | null) => {
       if (editing.current) setOpened(find(editing.current));
     };
@@ -98,11 +100,18 @@ export function WriteUpEditor({
       askStep: (pos, what) => open((now) => openStep(now, pos, what)),
       say: setSaid,
     };
-    return { desk: shared, send: pictureSender(uploads.projectId), own: [extension] };
+    const tell = () => {
+      const { current: changed } = editing;
+      if (!changed?.isEditable) return;
+      known.current = toldNow(changed);
+      told.current.onChange({ version: WRITE_UP_VERSION, doc: storedForm(changed.getJSON() as DocNode) });
+    };
+    const send = pictureSender(uploads.projectId);
+    return { desk: shared, send, extensions: editorExtensions(shared, send, [extension]), teller: createTeller(tell) };
   });
 
   const editor = useEditor({
-    extensions: editorExtensions(desk, send, own),
+    extensions,
     content: initial.doc as unknown as Record<string, unknown>,
     immediatelyRender: false,
     injectCSS: false,
@@ -123,11 +132,10 @@ export function WriteUpEditor({
     },
     onCreate: ({ editor: made }) => {
       editing.current = made;
+      known.current = toldNow(made);
     },
-    onUpdate: ({ editor: changed }) => {
-      if (changed.isEditable)
-        told.current.onChange({ version: WRITE_UP_VERSION, doc: storedForm(changed.getJSON() as DocNode) });
-    },
+    onUpdate: () => teller.changed(),
+    onBlur: () => teller.flush(),
     onSelectionUpdate: ({ editor: { state } }) => {
       const { selection } = state;
       const formula =
@@ -137,10 +145,21 @@ export function WriteUpEditor({
       told.current.onSelectMeasure(formula === null ? null : (usesOf(desk, formula)[0] ?? null));
     },
     onTransaction: ({ transaction }) => {
-      if (transaction.docChanged) setOpened((now) => movedBy(now, transaction.mapping));
+      if (!transaction.docChanged) return;
+      known.current?.since.appendMapping(transaction.mapping);
+      setOpened((now) => movedBy(now, transaction.mapping));
     },
   });
 
+  // What is told late must not be lost with the page, nor taken for what it was by a rename or a merge.
+  useEffect(() => {
+    const events = ['pagehide', 'visibilitychange', 'blur'] as const;
+    for (const event of events) window.addEventListener(event, teller.flush, true);
+    return () => {
+      for (const event of events) window.removeEventListener(event, teller.flush, true);
+      teller.stop();
+    };
+  }, [teller]);
   useEffect(
     () => renamed.listen((writeUp) => writeUp && editing.current && takeNames(editing.current, writeUp.doc)),
     [renamed],
@@ -150,8 +169,13 @@ export function WriteUpEditor({
     [incoming],
   );
   useEffect(
-    () => merged.listen((writeUp) => writeUp && editing.current && takeDocument(editing.current, writeUp.doc)),
-    [merged],
+    () =>
+      merged.listen((writeUp) => {
+        if (!writeUp || !editing.current) return;
+        takeDocument(editing.current, writeUp.doc, known.current ?? undefined);
+        teller.flush();
+      }),
+    [merged, teller],
   );
 
   const followed = useEditorState({ editor, selector: ({ editor: now }) => (now ? toolState(now) : null) });

@@ -48,7 +48,11 @@ export function openMeasure(editor: Editor, range: Range): Opened {
 
 /** Asks which measure the typed number at the caret is; null where none stands. */
 export function openStray(editor: Editor, live: LiveFigures | null): Opened | null {
-  const stray = live && strayAt(editor.state, live);
+  const { doc, selection } = editor.state;
+  // Two colons ask for a measure of their own.
+  const asked = doc.textBetween(Math.max(0, selection.from - 2), selection.from, ' ') === '::';
+  if (!live || asked) return null;
+  const stray = strayAt(editor.state, live);
   return stray ? { type: 'stray', from: stray.from, to: stray.to, stray, live } : null;
 }
 

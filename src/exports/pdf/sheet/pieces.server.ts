@@ -1,12 +1,12 @@
-import { drawPiece, instructionsOf, type Drawing, type PieceFigure, type Shape } from '@/engine';
+import { drawPiece, instructionsOf, type Drawing, type PieceFigure } from '@/engine';
 import { LINE_LEGEND } from '../../line-legend';
 import { sheetScale } from '../../sheet-scale';
 import { decoration, group, MM, tagged, type Tag } from '../document.server';
-import { draw, placeDrawing, UNIT, type Pen } from '../drawing.server';
+import { placeDrawing, UNIT, type Pen } from '../drawing.server';
 import type { Block, Flow } from '../flow.server';
+import { drawLegend, LEGEND_TYPE, SAMPLE } from '../legend.server';
 import { HEAD, INK, SMALL, THIN } from '../look';
 import { rule } from '../table.server';
-import type { Type } from '../typeset.server';
 import type { SheetContent } from './content';
 import { plainList, wordsOf } from './words.server';
 
@@ -20,11 +20,8 @@ const HEAD_HEIGHT = 12;
 /** A drawing no wider than this share of its column has its words beside it. */
 const BESIDE = 0.5;
 const BESIDE_TOP = 8;
-const LEGEND: Type = { ...SMALL, colour: INK };
 const LEGEND_COLUMNS = 4;
 const LEGEND_LINE = 13;
-/** A sample of a line and the space after it. */
-const SAMPLE = 25;
 const UNIT_WORDS = { in: 'inches', mm: 'millimetres', cm: 'centimetres' };
 
 /** Every piece at one stated scale with its dimensions, and its making in words. */
@@ -100,7 +97,7 @@ function legend({ doc, type }: Pen, width: number): Block {
   const rows = Math.ceil(LINE_LEGEND.length / LEGEND_COLUMNS);
   const columns = Array.from({ length: LEGEND_COLUMNS }, (_, k) => {
     const own = LINE_LEGEND.filter((__, i) => i % LEGEND_COLUMNS === k);
-    return SAMPLE + Math.max(...own.map(({ words }) => type.width(words, LEGEND)));
+    return SAMPLE + Math.max(...own.map(({ words }) => type.width(words, LEGEND_TYPE)));
   });
   const gap = (width - columns.reduce((sum, one) => sum + one, 0)) / (LEGEND_COLUMNS - 1);
   const lefts = columns.map((_, k) => columns.slice(0, k).reduce((sum, one) => sum + one + gap, 0));
@@ -108,24 +105,10 @@ function legend({ doc, type }: Pen, width: number): Block {
     height: 8 + rows * LEGEND_LINE,
     draw(parent, { x, y }) {
       decoration(doc, () => rule({ doc, type }, x, y, width, THIN, INK));
-      const list = group(doc, parent, 'L');
-      LINE_LEGEND.forEach(({ words, d, role }, i) => {
-        const left = x + (lefts[i % LEGEND_COLUMNS] as number);
-        const top = y + 6 + Math.floor(i / LEGEND_COLUMNS) * LEGEND_LINE;
-        const item = group(doc, list, 'LI');
-        const shapes: readonly Shape[] =
-          role === 'glue'
-            ? [
-                { type: 'path', role, d },
-                { type: 'path', role: 'slit', d },
-              ]
-            : [{ type: 'path', role, d }];
-        decoration(doc, () =>
-          draw({ doc, type }, { width: 34, height: 16, title: '', alt: '', shapes }, { x: left, y: top, scale: UNIT }),
-        );
-        tagged(doc, item, 'LBody', () => type.draw(words, LEGEND, { x: left + SAMPLE, baseline: top + 7.4 }));
-      });
-      list.end();
+      drawLegend({ doc, type }, parent, LINE_LEGEND, (i) => ({
+        x: x + (lefts[i % LEGEND_COLUMNS] as number),
+        y: y + 6 + Math.floor(i / LEGEND_COLUMNS) * LEGEND_LINE,
+      }));
     },
   };
 }

@@ -2,6 +2,8 @@ import type { Point } from '@/engine';
 import type { PaperId } from '../../paper';
 import { decoration, MM, tagged, type Paper, type Tag } from '../document.server';
 import type { Pen } from '../drawing.server';
+import type { LegendLine } from '../../line-legend';
+import { drawLegend, LEGEND_TYPE, SAMPLE } from '../legend.server';
 import { HAIR, HEAD, INK, SMALL, SMALL_LEADING, THIN } from '../look';
 import { square } from '../sheet/closing.server';
 import { rule } from '../table.server';
@@ -15,9 +17,14 @@ export interface Of {
   readonly paper: PaperId;
   readonly page: number;
   readonly pages: number;
+  /** The lines that the pieces have. */
+  readonly legend: readonly LegendLine[];
 }
 
 const PRINT = 'Print at 100\u00a0%, “actual size”. Lay a ruler on either square before you cut.';
+const ONCE = 'Drawn once: cut as many as the name says.';
+/** Between lines of the foot, in points. */
+const ROW = 9.8;
 const LINES: Type = { ...SMALL, colour: INK };
 const BESIDE = 4;
 const MAP_HEIGHT = 74;
@@ -72,15 +79,22 @@ export function lineFoot(
   });
   const [left, baseline] = [MARGIN * MM, paper.height - MARGIN * MM - 0.5];
   const width = paper.width - 2 * MARGIN * MM;
-  const upper = baseline - 9.8;
+  const upper = baseline - 2 * ROW;
   decoration(doc, () => rule(pen, left, upper - 11, width, THIN, INK));
   const [title] = type.lines(of.content.title, HEAD, width * 0.5);
   if (title)
     tagged(doc, parent, of.page === 1 ? 'H1' : 'P', () => type.draw(title, HEAD, { x: left, baseline: upper }));
   const size = { x: left + width, baseline: upper, anchor: 'end' } as const;
   tagged(doc, parent, 'P', () => type.draw(of.content.sizeWords, LINES, size));
-  const more = placed.length === 1 ? 'The squares are no part of the piece.' : 'Every piece is drawn once.';
-  tagged(doc, parent, 'P', () => type.draw(`${PRINT} ${more}`, LINES, { x: left, baseline }));
+  const more = placed.length === 1 ? 'The squares are no part of the piece.' : '';
+  const often = placed.some(({ item }) => item.piece.count > 1) ? ONCE : '';
+  const words = [PRINT, more, often].filter((one) => one !== '').join(' ');
+  tagged(doc, parent, 'P', () => type.draw(words, LINES, { x: left, baseline: baseline - ROW }));
+  const widths = of.legend.map((line) => SAMPLE + type.width(line.words, LEGEND_TYPE) + 12);
+  drawLegend(pen, parent, of.legend, (i) => ({
+    x: left + widths.slice(0, i).reduce((sum, one) => sum + one, 0),
+    y: baseline - 7.4,
+  }));
   pageNumber(pen, paper, of);
 }
 
@@ -102,12 +116,16 @@ export function tileFoot(
   const at = squaresFoot(pen, parent, paper);
   const map = MAP_HEIGHT;
   const area = tileArea(pageSize(of.paper));
-  const last = tiling.tiles.at(-1) ?? tile;
-  const covered = { across: last.x + area.across, along: last.y + area.along };
+  const covered = {
+    across: Math.max(...tiling.tiles.map(({ x }) => x)) + area.across,
+    along: Math.max(...tiling.tiles.map(({ y }) => y)) + area.along,
+  };
   const scale = Math.min((at.width * 0.36) / covered.across, map / covered.along);
   const wide = covered.across * scale;
-  const words = `Part ${tile.name} of piece ${item.number}. Lay the pages so that the crosses meet, tape them, then cut.`;
-  footWords(pen, parent, of, { ...at, width: at.width - wide - 10 }, words);
+  const often = item.piece.count > 1 ? ` ${ONCE}` : '';
+  const words = `Part ${tile.name} of piece ${item.number}. Lay the pages so that the crosses meet, tape them, then cut.${often}`;
+  const below = footWords(pen, parent, of, { ...at, width: at.width - wide - 10 }, words);
+  drawLegend(pen, parent, of.legend, (i) => ({ x: at.x, y: below + 5 + i * ROW }));
   const [left, top] = [at.x + at.width - wide, at.top + 6];
   decoration(doc, () => rule(pen, at.x, at.top, at.width, THIN, INK));
   const draw = () => {
@@ -125,7 +143,7 @@ export function tileFoot(
     }
   };
   tagged(doc, parent, 'Figure', draw, {
-    alt: `Map: this is page ${tile.name} of ${tiling.tiles.length}, ${tiling.columns} across and ${tiling.rows} down.`,
+    alt: `Map: this is page ${tile.name} of ${tiling.tiles.length}, in ${tiling.columns} columns and ${tiling.rows} rows.`,
     bbox: [left, top, left + wide, top + covered.along * scale],
   });
   pageNumber(pen, paper, of);

@@ -1,8 +1,8 @@
 import { STOCKS, type PieceFigure, type Point } from '@/engine';
 import type { PaperId } from '../../paper';
 import { packPages, type Placed, type Size } from './pack';
-import { pointsAlong, squareSpots, type Obstacle } from './spots';
-import { tile, type Tile, type Tiling } from './tiles';
+import { pointsAlong, pointsOn, squareSpots, type Obstacle } from './spots';
+import { tile, withoutEmpty, type Tile, type Tiling } from './tiles';
 
 /** Millimetres. Printers leave up to six blank at the edges. */
 export const MARGIN = 10;
@@ -10,8 +10,8 @@ export const MARGIN = 10;
 export const SQUARES = { inches: 50.8, millimetres: 50 } as const;
 /** The foot of a page of a large piece: both squares side by side, and words. */
 export const FOOT = { height: SQUARES.inches, gap: 5 } as const;
-/** The foot of every other page: words alone. */
-export const LINE = { height: 10, gap: 3 } as const;
+/** The foot of every other page: words and what the lines mean. */
+export const LINE = { height: 11.5, gap: 3 } as const;
 /** A piece's name above it. */
 export const NAME = 6;
 const BETWEEN = 4;
@@ -75,7 +75,12 @@ export function templatePages(
   const tiled = items
     .filter((item) => !alone(item))
     .flatMap((item) => {
-      const tiling = tile(item, tileArea(page), OVERLAP);
+      const area = tileArea(page);
+      const whole = tile(item, area, OVERLAP);
+      const outline = pointsOn(item.piece.net.outline).map(({ x, y }) =>
+        whole.turned ? { x: item.along - y, y: x } : { x, y },
+      );
+      const tiling = withoutEmpty(whole, area, outline);
       return tiling.tiles.map((one): TemplatePage => ({ kind: 'tile', item, tiling, tile: one }));
     });
   return [...packed, ...tiled].sort((a, b) => firstNumber(a) - firstNumber(b));

@@ -14,6 +14,11 @@ export function pointsAlong({ outline, holes, folds, creases, slits }: Net): rea
     ...creases.map(({ curve }) => curve),
     ...slits,
   ];
+  return pointsOn(curves);
+}
+
+/** The same along a few curves. */
+export function pointsOn(curves: readonly Curve[]): readonly Point[] {
   return curves.flatMap((curve) => {
     const corners = [curve.from, ...pointsOf([curve])];
     return corners.slice(1).flatMap((to, i) => {

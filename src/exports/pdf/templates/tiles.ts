@@ -1,3 +1,4 @@
+import type { Point } from '@/engine';
 import type { Size } from './pack';
 
 /** One page of a piece that is larger than a page. */
@@ -14,6 +15,7 @@ export interface Tiling {
   readonly turned: boolean;
   readonly columns: number;
   readonly rows: number;
+  /** Row by row; fewer than columns times rows where the piece leaves some of them empty. */
   readonly tiles: readonly Tile[];
 }
 
@@ -38,3 +40,19 @@ export function tile({ across, along }: Size, page: Size, overlap: number): Tili
   });
   return { ...way, tiles };
 }
+
+/** The same without the pages that nothing of the piece is on; `outline` is a closed line round the piece as it lies, in points much closer together than a page. */
+export function withoutEmpty(tiling: Tiling, page: Size, outline: readonly Point[]): Tiling {
+  const tiles = tiling.tiles.filter(({ x, y }) => {
+    const on = (point: Point) => point.x > x && point.x < x + page.across && point.y > y && point.y < y + page.along;
+    return outline.some(on) || holds(outline, { x: x + page.across / 2, y: y + page.along / 2 });
+  });
+  return { ...tiling, tiles };
+}
+
+const holds = (outline: readonly Point[], { x, y }: Point): boolean =>
+  outline.reduce((inside, a, i) => {
+    const b = outline[(i + 1) % outline.length] as Point;
+    const crosses = a.y > y !== b.y > y && x < a.x + ((y - a.y) / (b.y - a.y)) * (b.x - a.x);
+    return crosses ? !inside : inside;
+  }, false);

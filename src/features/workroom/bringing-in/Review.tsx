@@ -30,9 +30,10 @@ export function Review({ bringing, live, refusal, busy, onPutIn }: ReviewProps) 
 
   const onKey = (event: KeyboardEvent) => {
     const { target, key } = event;
-    const typing = target instanceof HTMLInputElement || target instanceof HTMLTextAreaElement;
+    const typing = target instanceof HTMLInputElement && target.type !== 'checkbox';
     if (typing || event.ctrlKey || event.metaKey || event.altKey) return;
-    if ((key === 'Enter' || key === ' ') && target instanceof HTMLButtonElement) return;
+    // A button does its own, but the numbers are only places to be at.
+    if (key === 'Enter' && target instanceof HTMLButtonElement && !target.matches('.brought-number')) return;
     const match =
       key === 'Enter' ? current?.matches[0] : /^[1-9]$/.test(key) ? current?.matches[Number(key) - 1] : undefined;
     const act = match ? () => decide({ take: match }) : KEYS[key.length === 1 ? key.toLowerCase() : key];

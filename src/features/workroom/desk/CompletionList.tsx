@@ -21,7 +21,9 @@ export interface CompletionListProps {
 /** What the letters typed may stand for, under a formula. */
 export function CompletionList({ id, label, offer, onTake }: CompletionListProps) {
   const list = useRef<HTMLUListElement>(null);
-  useEffect(() => list.current?.scrollIntoView({ block: 'nearest' }), []);
+  useEffect(() => {
+    void list.current?.scrollIntoView({ block: 'nearest' });
+  }, []);
   return (
     <ul ref={list} id={id} className="completions" role="listbox" aria-label={`Names for ${label}`}>
       {offer.items.map((item, i) => (

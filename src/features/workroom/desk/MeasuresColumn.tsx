@@ -11,6 +11,8 @@ import type { DeskStore, Draft } from './desk-store';
 import { cutText } from './figure-text';
 import { FitList } from './FitList';
 import { MeasureRow } from './MeasureRow';
+import { PatternPart } from './PatternPart';
+import { RangeTrial } from './RangeTrial';
 import { FormulaPattern } from './use-completion';
 import { UnitsAndGrid } from './UnitsAndGrid';
 
@@ -105,6 +107,8 @@ export function MeasuresColumn({ store }: { readonly store: DeskStore }) {
           <AddMeasure store={store} pattern={draft.pattern} />
           <Choices store={store} draft={draft} lit={lit} names={names} faults={faults} />
           <FitList store={store} work={work} draft={draft} lit={lit} names={names} />
+          <RangeTrial store={store} draft={draft} work={work} />
+          <PatternPart store={store} />
         </div>
       </section>
     </FormulaPattern.Provider>

@@ -2,20 +2,34 @@ import { useEffect, useState } from 'react';
 import { Icon } from '@/components/Icon';
 import type { SaveState } from '../saving/autosave';
 
+export interface SaveWordsProps {
+  readonly state: SaveState;
+  /** Where older revisions are, when they are kept. */
+  readonly revisions?: string;
+}
+
 /** "Saved 2 s ago · revision 48", which leads to the revisions, and what is the matter when it is not. */
-export function SaveWords({ state, revisions }: { readonly state: SaveState; readonly revisions: string }) {
+export function SaveWords({ state, revisions }: SaveWordsProps) {
   const now = useClock();
   const { status, revision, savedAt } = state;
   const ago = agoWords(now - savedAt);
   switch (status.kind) {
-    case 'saved':
-      return (
-        <a className="save-words good" href={revisions} title="See the revisions">
+    case 'saved': {
+      const words = (
+        <>
           <Icon name="saved" />
           <span>Saved {ago}</span>
           <span className="soft"> · revision {revision}</span>
+        </>
+      );
+      return revisions === undefined ? (
+        <span className="save-words good">{words}</span>
+      ) : (
+        <a className="save-words good" href={revisions} title="See the revisions">
+          {words}
         </a>
       );
+    }
     case 'waiting':
     case 'saving':
       return (

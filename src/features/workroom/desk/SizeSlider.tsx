@@ -1,9 +1,11 @@
 import { useEffect, useState } from 'react';
+import { Icon } from '@/components/Icon';
 import { rulerTicks } from '@/components/ruler-ticks';
 import { explain, GRIDS, readValue, type MeasureFigure, type Sizing } from '@/engine';
 import { withValue } from '@/features/sizing/sizing-values';
 import type { DeskStore } from './desk-store';
 import { typedText } from './figure-text';
+import { usePlay } from './use-play';
 
 export interface SizeSliderProps {
   readonly store: DeskStore;
@@ -30,6 +32,17 @@ export function SizeSlider({ store, figure, sizing }: SizeSliderProps) {
     else setFault(read.faults[0] === undefined ? 'That does not read as a size.' : explain(read.faults[0]));
   };
   const step = kind === 'length' ? GRIDS[sizing.grid].step : kind === 'whole number' ? 1 : 0.5;
+  const play = usePlay({
+    from: from ?? 0,
+    to: to ?? 0,
+    at: figure.exact,
+    show: (value) =>
+      store.play(
+        value === null
+          ? null
+          : withValue(store.$draft.get().sizing, name, onStep(value, { step, from: from ?? 0, to: to ?? 0 })),
+      ),
+  });
   const slidable = from !== undefined && to !== undefined && Number.isFinite(from) && Number.isFinite(to) && to > from;
 
   return (
@@ -73,7 +86,26 @@ export function SizeSlider({ store, figure, sizing }: SizeSliderProps) {
           {kind === 'length' ? <Ruler from={from} to={to} units={figure.unit ?? sizing.units} /> : null}
         </div>
       ) : null}
-      {figure.set ? (
+      {slidable ? (
+        <p className="size-play">
+          <button type="button" className="text-button small" onClick={play.press}>
+            <Icon name={play.playing && !play.byPress ? 'minus' : 'play'} />
+            {play.byPress
+              ? play.playing
+                ? 'Next size'
+                : 'Step through the range'
+              : play.playing
+                ? 'Stop'
+                : 'Play the range'}
+          </button>
+          {play.playing && play.byPress ? (
+            <button type="button" className="text-button small" onClick={play.stop}>
+              Back to your size
+            </button>
+          ) : null}
+        </p>
+      ) : null}
+      {figure.set && !play.playing ? (
         <button
           type="button"
           className="text-button small"

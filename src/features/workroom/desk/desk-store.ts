@@ -42,6 +42,8 @@ export interface DeskStore {
   /** What the editor shows its figures from. */
   readonly $live: ReadableAtom<LiveFigures | null>;
   readonly $proof: ReadableAtom<readonly ProofItem[]>;
+  /** A size that is only shown, as when a slider plays; null while the author's own is. */
+  readonly $played: ReadableAtom<Sizing | null>;
   readonly $selected: ReadableAtom<string | null>;
   readonly $lit: ReadableAtom<Lit | null>;
   /** The same as names: the selected one, then its followers. */
@@ -58,6 +60,8 @@ export interface DeskStore {
   editSizing(field: string | null, change: (sizing: Sizing) => Sizing): void;
   /** Renames in the pattern, the author's size and the write-up at once; undone and done again in all three too. */
   rename(rename: Rename): Result<RenamedPlaces>;
+  /** Shows a size without changing the author's own; the next edit ends it. */
+  play(sizing: Sizing | null): void;
   settle(): void;
   undo(): void;
   redo(): void;
@@ -93,11 +97,16 @@ export function createDeskStore(project: OpenProject): DeskStore {
   const work = createWork();
   // The state that is opened counts as good, whether or not anything has looked at its figures before it is changed.
   work(project.state.pattern, project.state.sizing);
-  const $work = computed($draft, (draft) => work(draft.pattern, draft.sizing));
+  const $played = atom<Sizing | null>(null);
+  const $work = computed([$draft, $played], (draft, played) => work(draft.pattern, played ?? draft.sizing));
   const $live = computed($work, (now) => now.live);
-  const $proof = computed([$state, $work], (state, now) =>
-    proofList(state, { compiled: now.compiled, figures: now.stale ? undefined : now.live?.figures }),
-  );
+  /** What is wrong is told of the author's own size: while another is played it stands as it was. */
+  let proof: readonly ProofItem[] = [];
+  const $proof = computed([$state, $work, $played], (state, now, played) => {
+    if (played === null)
+      proof = proofList(state, { compiled: now.compiled, figures: now.stale ? undefined : now.live?.figures });
+    return proof;
+  });
   const $lit = computed([$selected, $draft], (selected, draft) =>
     selected === null ? null : litBy(draft.pattern, selected),
   );
@@ -132,13 +141,18 @@ export function createDeskStore(project: OpenProject): DeskStore {
     $work,
     $live,
     $proof,
+    $played,
     $selected,
     $lit,
     $litNames,
     $generation,
     $renamed,
     $merged,
-    edit: (field, change) => $history.set(edit($history.get(), change($history.get().present), field)),
+    edit(field, change) {
+      $played.set(null);
+      $history.set(edit($history.get(), change($history.get().present), field));
+    },
+    play: (sizing) => $played.set(sizing),
     editPattern: (field, change) => store.edit(field, (draft) => ({ ...draft, pattern: change(draft.pattern) })),
     editSizing: (field, change) => store.edit(field, (draft) => ({ ...draft, sizing: change(draft.sizing) })),
     rename(given) {

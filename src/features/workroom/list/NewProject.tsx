@@ -2,6 +2,7 @@ import { useEffect, useRef, useState } from 'react';
 import { Dialog } from '@/components/Dialog';
 import { Field } from '@/components/Field';
 import { TITLE_LIMIT } from '@/features/projects/project';
+import { BLANK } from '@/features/patterns/blank-pattern';
 import { boxHref } from '@/features/handbook/box-href';
 import { call } from '../desk/project-api';
 
@@ -12,7 +13,18 @@ export interface ShelfPattern {
   readonly summary: string;
   readonly asks: string;
   readonly folded: string;
+  /** Not one of ours, of which the handbook tells. */
+  readonly own: boolean;
 }
+/** Nothing drawn up yet. */
+export const BLANK_START: ShelfPattern = {
+  slug: BLANK,
+  name: 'Blank',
+  summary: 'Nothing drawn up yet: begin with a piece, and give it sizes.',
+  asks: '',
+  folded: '',
+  own: true,
+};
 export interface NewProjectProps {
   readonly patterns: readonly ShelfPattern[];
   readonly open: boolean;
@@ -30,7 +42,7 @@ export function NewProject({ patterns, open, chosen, onClose }: NewProjectProps)
   const titleField = useRef<HTMLInputElement>(null);
   useEffect(() => {
     if (!open) return;
-    setSlug(chosen ?? patterns[0]?.slug ?? null);
+    setSlug(chosen ?? (patterns.find(({ own }) => !own) ?? patterns[0])?.slug ?? null);
     setTitle('');
     setError(undefined);
     titleField.current?.focus();
@@ -92,7 +104,7 @@ export function NewProject({ patterns, open, chosen, onClose }: NewProjectProps)
             ))}
           </div>
         </fieldset>
-        {selected ? (
+        {selected && !selected.own ? (
           <p className="small">
             <a href={boxHref(selected.slug)} target="_blank" rel="noopener">
               How it works: {selected.name}

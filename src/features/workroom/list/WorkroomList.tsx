@@ -4,7 +4,8 @@ import { Icon } from '@/components/Icon';
 import { TabButton } from '@/components/TabButton';
 import { matchesSearch, type ProjectList, type ProjectSummary } from '@/features/projects/project';
 import { call } from '../desk/project-api';
-import { NewProject, type ShelfPattern } from './NewProject';
+import { BLANK_START, NewProject, type ShelfPattern } from './NewProject';
+import { OwnPatterns } from './OwnPatterns';
 import { PatternShelf } from './PatternShelf';
 import { ProjectRow } from './ProjectRow';
 import { UndoDelete, type Deleted } from './UndoDelete';
@@ -12,6 +13,8 @@ import { UndoDelete, type Deleted } from './UndoDelete';
 export interface WorkroomListProps {
   readonly list: ProjectList;
   readonly patterns: readonly ShelfPattern[];
+  /** The author's own. */
+  readonly own: readonly ShelfPattern[];
   /** Shows whose project it is, for those who see everybody's. */
   readonly withAuthors: boolean;
   /** Slug of a pattern to begin a project from at once: `/workroom?pattern=tray`. */
@@ -34,7 +37,7 @@ async function fetchList(path: string): Promise<ProjectList> {
 }
 
 /** The author's projects: found, filtered, begun, copied, deleted and brought back. */
-export function WorkroomList({ list, patterns, withAuthors, begin, now }: WorkroomListProps) {
+export function WorkroomList({ list, patterns, own: ownFirst, withAuthors, begin, now }: WorkroomListProps) {
   const {
     data = list,
     error,
@@ -43,8 +46,10 @@ export function WorkroomList({ list, patterns, withAuthors, begin, now }: Workro
   const [query, setQuery] = useState('');
   const [filter, setFilter] = useState<Filter>('all');
   const [begun, setBegun] = useState<string | true | null>(() =>
-    patterns.some(({ slug }) => slug === begin) ? begin : null,
+    [BLANK_START, ...ownFirst, ...patterns].some(({ slug }) => slug === begin) ? begin : null,
   );
+  const [own, setOwn] = useState(ownFirst);
+  const startable = useMemo(() => [BLANK_START, ...own, ...patterns], [own, patterns]);
   const [deleted, setDeleted] = useState<Deleted | null>(null);
   const [trouble, setTrouble] = useState<string | null>(null);
   const find = useSlashKey();
@@ -138,9 +143,10 @@ export function WorkroomList({ list, patterns, withAuthors, begin, now }: Workro
         }}
         onDismiss={() => setDeleted(null)}
       />
+      <OwnPatterns patterns={own} onChoose={setBegun} onChange={setOwn} />
       <PatternShelf patterns={patterns} onChoose={setBegun} />
       <NewProject
-        patterns={patterns}
+        patterns={startable}
         open={begun !== null}
         chosen={typeof begun === 'string' ? begun : null}
         onClose={() => setBegun(null)}

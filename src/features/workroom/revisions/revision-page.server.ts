@@ -71,7 +71,12 @@ function pick(
 
 function figuresBetween(from: Revision, to: Revision): FigureChanges | null {
   const [was, is] = [compilePattern(from.state.pattern), compilePattern(to.state.pattern)];
-  return was.ok && is.ok ? figureChanges(was.value, is.value, to.state.sizing) : null;
+  if (!was.ok || !is.ok) return null;
+  return figureChanges(
+    { model: was.value, writeUp: from.state.writeUp },
+    { model: is.value, writeUp: to.state.writeUp },
+    to.state.sizing,
+  );
 }
 
 const numberIn = (text: string | null): number | null => (/^[1-9]\d{0,14}$/.test(text ?? '') ? Number(text) : null);
