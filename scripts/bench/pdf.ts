@@ -13,6 +13,7 @@ import {
   drawPiece,
   drawSheet,
   evaluate,
+  instructionsOf,
   planSheets,
   say,
   STOCKS,
@@ -130,7 +131,7 @@ function pageOf({ title, model, figures, plan, steps, cautions }: SheetContent):
   const list = (items: readonly string[]) => `<ol>${items.map((item) => `<li>${esc(item)}</li>`).join('')}</ol>`;
   const pieces = figures.pieces.map((piece) => {
     const drawing = drawingSvgStandalone(drawPiece(piece, { width: PIECE_WIDTH, units, grid }));
-    return `<figure><b>${esc(piece.name)}</b>${drawing}${list(piece.instructions.map((one) => say(one, { units, grid })))}</figure>`;
+    return `<figure><b>${esc(piece.name)}</b>${drawing}${list(instructionsOf(piece).map((one) => say(one, { units, grid })))}</figure>`;
   });
   const folded = drawingSvgStandalone(drawFolded(model, figures, { width: 160, height: 200 }));
   const sheets = plan.sheets.map((_, i) => {

@@ -18,7 +18,7 @@ export {
   type Rename,
 } from './pattern/rename';
 export { formulasOfPattern, formulasOfPiece } from './pattern/texts';
-export { panelNames, readCell, type Cell } from './piece';
+export { instructionsOf, panelNames, readCell, type Cell } from './piece';
 export {
   around,
   compileLive,

@@ -511,7 +511,6 @@ export interface PieceFigure {
   readonly thickness: number;
   readonly area: number;
   readonly perimeter: number;
-  readonly instructions: readonly Sentence[];
 }
 /** Words with figures in them; `say` in `drawing` turns it into text in the reader's units. */
 export type Sentence = readonly (string | SentenceFigure)[];

@@ -1,9 +1,8 @@
-import { drawFolded, drawSheet, show, type Figures, type SheetPlan, type SizeFigure } from '@/engine';
+import { drawSheet, show, type Figures, type SheetPlan, type SizeFigure } from '@/engine';
 import { esc } from '@/exports/escape';
 import { drawingSvg } from '@/exports/svg/drawing';
 import { amountsOf, showAmount } from './amounts';
-import type { LiveFigures } from './live';
-import { NOT_WORKED_OUT } from './render-figures';
+import { NOT_WORKED_OUT } from './render-measure';
 
 /** Blocks and amounts that follow the size and the sheets, as HTML: what stands inside them, on the server and in the page. */
 
@@ -40,9 +39,6 @@ export function sheetPlanInside(figures: Figures, plan: SheetPlan): string {
   const trouble = large === '' ? '' : `<p>Too large for ${esc(plan.stock.name)}: ${esc(large)}.</p>`;
   return `<p class="live-block-word">On the sheets</p>${trouble}<div class="sheet-plan-sheets">${sheets.join('')}</div>${rest}`;
 }
-
-export const foldedInside = ({ model, figures }: LiveFigures): string =>
-  drawingSvg(drawFolded(model, figures, { width: 420, height: 320 }));
 
 export function sizesInside({ finished, sizing }: Figures): string {
   const row = (term: string, sizes: readonly SizeFigure[]) =>

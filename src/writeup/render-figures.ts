@@ -1,19 +1,19 @@
 import {
   drawPiece,
+  instructionsOf,
   sayParts,
   show,
   showPosition,
   type Figures,
   type PieceFigure,
   type Sentence,
-  type Shown,
 } from '@/engine';
 import { drawingSvg } from '@/exports/svg/drawing';
 import { esc } from '@/exports/escape';
-import { showLive, type LiveFigures, type LiveText } from './live';
+import { figure } from './render-measure';
 
 /**
- * The parts of a write-up that follow the size, as HTML. Each comes as `render…`, the whole element, and `…Inside`, what
+ * What of a write-up is drawn or listed at a size, as HTML. Each comes as `render…`, the whole element, and `…Inside`, what
  * changes in it: the reader's page and the editor put in the same words as the server.
  */
 
@@ -23,41 +23,6 @@ export const CARD_WIDTH = 560;
 const PHONE_WIDTH = 300;
 
 type Looked = Figures['sizing'];
-
-/** What stands behind a formula that gives no figure. */
-export const NOT_WORKED_OUT = 'not worked out';
-
-// ── Live measures ────────────────────────────────────────────────────────────────────────────────────────────────────
-
-/** `<span class="measure" data-live="inside width">`, with words to hear beside the typeset figure. */
-export function renderMeasure(live: LiveFigures, text: LiveText): string {
-  const shown = showLive(live, text);
-  const bare = text.bare ? ' data-bare' : '';
-  return `<span class="measure${shown ? '' : ' unknown'}" data-live="${esc(text.formula)}"${bare}>${insideOf(shown, text)}</span>`;
-}
-
-/** What stands in the span; the class `unknown` goes with a measure that is not worked out. */
-export const measureInside = (live: LiveFigures, text: LiveText): string => insideOf(showLive(live, text), text);
-
-function insideOf(shown: Shown | null, { formula }: LiveText): string {
-  return shown
-    ? figure(shown)
-    : `${esc(formula.trim() || 'empty measure')} <small class="unknown-mark">(${NOT_WORKED_OUT})</small>`;
-}
-
-/** A figure to see and the same to hear: a fraction slash is read aloud in a different way by every screen reader. */
-function figure({ typeset, spoken }: Shown): string {
-  if (typeset === spoken) return esc(typeset);
-  return `<span class="figure" aria-hidden="true">${esc(typeset)}</span><span class="visually-hidden spoken">${esc(spoken)}</span>`;
-}
-
-// ── Steps ────────────────────────────────────────────────────────────────────────────────────────────────────────────
-
-/** What stands in a reference to a step: `step 4`; one that does not apply has no number. */
-export const stepRefInside = (word: string, number: number | null): string =>
-  number === null
-    ? `a ${word.toLowerCase()} that your box does without`
-    : `${word}\u00a0<span data-number>${number}</span>`;
 
 // ── Piece cards ──────────────────────────────────────────────────────────────────────────────────────────────────────
 
@@ -73,7 +38,9 @@ export function pieceCardInside(figures: Figures, name: string, width = CARD_WID
   const drawn = (w: number, name: string) => drawingSvg(drawPiece(piece, { width: w, units, grid }), { class: name });
   const drawing =
     width <= PHONE_WIDTH ? drawn(width, '') : drawn(width, 'wide-only') + drawn(PHONE_WIDTH, 'narrow-only');
-  const words = piece.instructions.map((sentence) => `<p>${sentenceHtml(sentence, figures.sizing)}</p>`).join('');
+  const words = instructionsOf(piece)
+    .map((sentence) => `<p>${sentenceHtml(sentence, figures.sizing)}</p>`)
+    .join('');
   return (
     '<div class="ruled" aria-hidden="true"></div>' +
     `<p class="piece-card-head"><b>${esc(name)}</b> <span>cut ${piece.count} · ${esc(piece.stock)}</span></p>` +

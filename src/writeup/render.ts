@@ -16,10 +16,12 @@ import { safeHref } from './links';
 import type { LiveFigures } from './live';
 import { momentHref, momentText } from './video-moment';
 import { focusClasses, pictureSources, pictureUrl } from './pictures';
-import { amountInside, amountsInside, foldedInside, sheetPlanInside, sizesInside } from './render-blocks';
+import { foldedInside } from './folded-block';
+import { amountInside, amountsInside, sheetPlanInside, sizesInside } from './render-blocks';
 import { renderTable } from './render-table';
 import { usualPlan } from './usual-plan';
-import { CARD_WIDTH, renderCutList, renderMeasure, renderPieceCard, stepRefInside } from './render-figures';
+import { CARD_WIDTH, renderCutList, renderPieceCard } from './render-figures';
+import { renderMeasure, stepRefInside } from './render-measure';
 
 export interface RenderContext extends LiveFigures {
   /** How the pieces lie on the reader's sheets; usual: on those that cardstock is mostly sold in. */

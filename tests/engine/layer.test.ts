@@ -4,6 +4,7 @@ import {
   areaOf,
   compilePattern,
   evaluate,
+  instructionsOf,
   perimeterOf,
   pointsOf,
   say,
@@ -56,7 +57,7 @@ const faultsOf = (pieces: readonly PieceDef[]) => {
   const model = compilePattern(pattern(pieces));
   return model.ok ? [] : model.faults;
 };
-const words = (piece: PieceFigure) => piece.instructions.map((sentence) => say(sentence, { units: 'mm' }));
+const words = (piece: PieceFigure) => instructionsOf(piece).map((sentence) => say(sentence, { units: 'mm' }));
 
 const board: PieceDef = {
   name: 'Board',

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { areaOf, compilePattern, say, snap, type Loop, type Pattern } from '@/engine';
+import { areaOf, compilePattern, instructionsOf, say, snap, type Loop, type Pattern } from '@/engine';
 import { expectClose } from '../setup/expect-close';
 import { figuresOf, inch, modelOf, pieceOf } from './patterns';
 
@@ -130,7 +130,7 @@ describe('sleeve-drawer', () => {
   });
   it('says a step of one card thickness in words, since no ruler shows it', () => {
     const figures = figuresOf(modelOf('sleeve-drawer'));
-    const score = pieceOf(figures, 'Sleeve').instructions[1];
+    const score = instructionsOf(pieceOf(figures, 'Sleeve'))[1];
     expect(say(score ?? [], { units: 'in', grid: '1/16in' })).toBe(
       'Along the 11 1/2 in side score at 1/2, 4 5/8, 6 and 10 1/8 plus a card’s thickness.',
     );

@@ -1,19 +1,14 @@
 import { describe, expect, it } from 'vitest';
-import { say, type DiscPieceDef } from '@/engine';
-import { buildDisc, makingOf } from '@/engine/piece';
+import { instructionsOf, say, type DiscPieceDef } from '@/engine';
+import { buildDisc, keepMaking } from '@/engine/piece';
 
 describe('the words of a disc', () => {
   const def: DiscPieceDef = { name: 'Foot', stock: 'card', builder: 'disc', disc: 'foot', diameter: '100 mm' };
   const says = (built: ReturnType<typeof buildDisc>) => {
     if (!built.ok) throw new Error(built.reason);
     const scores = { across: [], along: [] };
-    return makingOf({
-      net: built.net,
-      grid: null,
-      def,
-      scores,
-      figure: (mm, bare) => ({ mm, ...(bare ? { bare } : {}) }),
-    }).map((sentence) => say(sentence, { units: 'mm' }));
+    keepMaking(built.net, { grid: null, def, scores, step: 1, thickness: 0 });
+    return instructionsOf(built).map((sentence) => say(sentence, { units: 'mm' }));
   };
   it('are a circle', () => {
     expect(says(buildDisc({ disc: 'foot', diameter: 100, rim: null, step: 1 }))).toEqual([

@@ -2,14 +2,8 @@ import { describe, expect, it } from 'vitest';
 import { compilePattern, evaluate, usualSizing, type Pattern, type Unit } from '@/engine';
 import type { BlockNode, DocNode, InlineNode } from '@/writeup/document';
 import { renderWriteUp } from '@/writeup/render';
-import {
-  cutListInside,
-  measureInside,
-  pieceCardInside,
-  renderCutList,
-  renderMeasure,
-  renderPieceCard,
-} from '@/writeup/render-figures';
+import { cutListInside, pieceCardInside, renderCutList, renderPieceCard } from '@/writeup/render-figures';
+import { measureInside, renderMeasure } from '@/writeup/render-measure';
 import { writeUpSchema } from '@/writeup/schema';
 import { sampleDoc } from './sample';
 

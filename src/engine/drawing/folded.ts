@@ -28,7 +28,8 @@ export const USUAL_TILT = 26;
 /** The turn that shows a box of this pattern best, degrees. */
 export const usualTurn = ({ pattern }: Model): number => pattern.turn ?? -35;
 
-const LIGHT = unit(vector(-0.5, -0.55, 1.1));
+/** Marked as free of effects, so that a page that draws no folded box need not load how that is done. */
+const LIGHT = /* @__PURE__ */ unit(/* @__PURE__ */ vector(-0.5, -0.55, 1.1));
 const TONES = 7;
 const TONE: Readonly<Record<Look, string>> = { card: 'tone', pages: 'pages', paper: 'paper' };
 const PAD = 4;

@@ -1,5 +1,6 @@
 import type { ShowOptions } from '../measure';
-import type { PieceFigure } from '../types';
+import { instructionsOf } from '../piece';
+import type { PieceFigure, Sentence } from '../types';
 import type { Note } from './notes';
 import { say } from './say';
 import { teethOf } from './stops';
@@ -9,11 +10,12 @@ import { teethOf } from './stops';
  * noted besides, the names of panels and tabs, and those that the drawing has no room for.
  */
 export function altOf(
-  { name, net, instructions }: PieceFigure,
+  piece: PieceFigure,
   options: Pick<ShowOptions, 'units' | 'grid'>,
   { notes, unnamed }: { readonly notes: readonly Note[]; readonly unnamed: readonly string[] },
 ): string {
-  const [blank = '', ...rest] = sentencesOf(instructions, options);
+  const { name, net } = piece;
+  const [blank = '', ...rest] = sentencesOf(instructionsOf(piece), options);
   const teeth = teethOf(net);
   const named = (role: 'panel' | 'tab') =>
     net.panels.flatMap((panel) => (panel.role === role && !teeth.includes(panel) ? [panel.name] : []));
@@ -42,13 +44,10 @@ const spelt = (text: string): string =>
     .replaceAll('\u202f', ' ')
     .replaceAll('\u2044', '/');
 
-const said = new WeakMap<
-  PieceFigure['instructions'],
-  { readonly looked: string; readonly sentences: readonly string[] }
->();
+const said = new WeakMap<readonly Sentence[], { readonly looked: string; readonly sentences: readonly string[] }>();
 /** A piece is drawn for a wide page and for a narrow one: what is said of it is the same. */
 function sentencesOf(
-  instructions: PieceFigure['instructions'],
+  instructions: readonly Sentence[],
   options: Pick<ShowOptions, 'units' | 'grid'>,
 ): readonly string[] {
   const looked = `${options.units} ${options.grid}`;

@@ -76,7 +76,7 @@ export function judge(model: Model, sizing: Sizing): { figures: Figures; values:
       pieces,
       fits,
       finished: { inside: sizes(model.finished.inside), outside: sizes(model.finished.outside) },
-      // Worked out when first asked for, as the instructions are.
+      // Worked out when first asked for, as areas are.
       get materials() {
         materials ??= materialsOf(model, pieces, values.cut);
         return materials;

@@ -2,8 +2,8 @@ import type { Values } from '../formula';
 import { GRIDS, isZero, same, snap } from '../measure';
 import { perimeterOf } from '../net';
 import { CARD_THICKNESS, keyOf } from '../pattern/names';
-import { areaOfNet, fanSizes, figureMaker, makingOf } from '../piece';
-import type { Net, PieceFigure, Sentence, Sizing } from '../types';
+import { areaOfNet, fanSizes, keepMaking } from '../piece';
+import type { Net, PieceFigure, Sizing } from '../types';
 import { buildPiece } from './build';
 import type { CompiledPiece, Model } from './model';
 import { isInUse, type BothValues } from './values';
@@ -90,7 +90,8 @@ function pieceOf(
   const thickness = thicknessOf(model, values);
   const fan = def.builder === 'fan' ? fanSizes(net, def) : null;
   let [area, perimeter]: [number?, number?] = [];
-  let words: readonly Sentence[] | undefined;
+  const step = GRIDS[sizing.grid].step;
+  keepMaking(net, { grid, def, scores, step, thickness, ...(layer ? { layer, count } : {}) });
   return {
     name: def.name,
     count,
@@ -108,11 +109,6 @@ function pieceOf(
     },
     get perimeter() {
       return (perimeter ??= perimeterOf(net.outline) + net.holes.reduce((sum, hole) => sum + perimeterOf(hole), 0));
-    },
-    get instructions() {
-      const figure = figureMaker(GRIDS[sizing.grid].step, thickness);
-      words ??= makingOf({ net, grid, def, scores, figure, ...(layer ? { layer, count } : {}) });
-      return words;
     },
   };
 }

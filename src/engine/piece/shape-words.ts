@@ -1,8 +1,10 @@
 import { decimal } from '../measure';
 import { distance, lengthOf, pointAt } from '../net';
-import type { Curve, PieceHead, Net, Panel, Point, Sentence } from '../types';
+import type { Curve, Panel, Point, Sentence } from '../types';
 import { cuttingOut } from './cut-words';
+import { fanSizes } from './fan-sizes';
 import { holes, scoring, slits } from './line-words';
+import { panelOf } from './panel-of';
 import type { WordsOptions } from './words';
 
 /** The making of a piece that is not a grid, in words. */
@@ -22,8 +24,6 @@ export function shapeWords(options: WordsOptions): Sentence[] {
   }
 }
 const degrees = (angle: number): string => `${decimal(angle, 1)}°`;
-const panel = (net: Net, name: string) =>
-  net.panels.find((one) => one.name === name.toLowerCase() || one.name === name);
 
 function fan({ net, def, figure }: WordsOptions): Sentence[] {
   if (def.builder !== 'fan') return [];
@@ -76,28 +76,6 @@ function fan({ net, def, figure }: WordsOptions): Sentence[] {
   ];
 }
 
-/** What is measured on a fan: its middle, the side that lies level at the foot, how far the flap on it stands out. */
-export function fanSizes(net: Net, def: Extract<PieceHead, { builder: 'fan' }>) {
-  const centre = panel(net, def.centre)?.loop ?? [];
-  const flap = panel(net, `${def.flap.name} 1`)?.loop;
-  const [side, out] = [centre[0], flap?.[1]];
-  if (!side || !out) return null;
-  const mean = (values: readonly number[]) => values.reduce((sum, value) => sum + value, 0) / centre.length;
-  const tip = def.flap.shape === 'triangle' ? out.to : pointAt(side, 0.5);
-  const height = def.flap.shape === 'triangle' ? distance(tip, pointAt(side, 0.5)) : Math.abs(out.to.y - out.from.y);
-  const tips = net.panels.flatMap((one) =>
-    one.role === 'panel' && one.name.startsWith(`${def.flap.name} `.toLowerCase()) ? [one.loop[1]?.to ?? tip] : [],
-  );
-  return {
-    sides: centre.length,
-    side,
-    height,
-    middle: { x: mean(centre.map(({ from }) => from.x)), y: mean(centre.map(({ from }) => from.y)) },
-    /** From a point on the middle line of a triangle to its tip. */
-    tipOf: (point: Point) => Math.min(...tips.map((one) => distance(one, point))),
-  };
-}
-
 /** A tab on an edge: how far it stands out and the angles of its ends to the edge. */
 function tabSizes({ loop }: Panel) {
   const [hinge, first] = loop as [Curve, Curve];
@@ -113,7 +91,7 @@ function tabSizes({ loop }: Panel) {
 
 function disc({ net, def, figure }: WordsOptions): Sentence[] {
   if (def.builder !== 'disc') return [];
-  const arc = panel(net, def.disc)?.loop.find((curve) => curve.type === 'arc');
+  const arc = panelOf(net, def.disc)?.loop.find((curve) => curve.type === 'arc');
   if (arc?.type !== 'arc') return [];
   const teeth = net.panels.filter((one) => one.tooth);
   const [root, , tip] = teeth[0]?.loop ?? [];
@@ -138,7 +116,7 @@ function disc({ net, def, figure }: WordsOptions): Sentence[] {
 
 function sector({ net, def, figure }: WordsOptions): Sentence[] {
   if (def.builder !== 'sector') return [];
-  const body = panel(net, def.body);
+  const body = panelOf(net, def.body);
   const radii = [...new Set((body?.loop ?? []).flatMap((curve) => (curve.type === 'arc' ? [curve.radius] : [])))].sort(
     (a, b) => b - a,
   );

@@ -1,36 +1,37 @@
 import { areaOf } from '../net';
-import type { PieceHead, PieceFigure, Sentence } from '../types';
-import type { GridPiece } from './grid';
+import type { Net, PieceFigure, Sentence } from '../types';
+import { figureMaker } from './figure';
 import { gridWords } from './grid-words';
 import { layerWords } from './layer-words';
 import type { Said } from './line-words';
+import { makingOf, type Making } from './making';
 import { shapeWords } from './shape-words';
 
-export interface WordsOptions extends Said {
-  /** The worked-out grid; null for pieces of the other builders. */
-  readonly grid: GridPiece | null;
-  readonly def: PieceHead;
-  /** A layer's faces and margin, and how many are cut. */
-  readonly layer?: PieceFigure['layer'];
-  readonly count?: number;
-  /** Positions of scores from the left and from the top edge. */
-  readonly scores: { readonly across: readonly number[]; readonly along: readonly number[] };
-}
+export type WordsOptions = Said & Making;
+
+const known = new WeakMap<Net, readonly Sentence[]>();
 
 /**
  * The making of a piece in words, as a maker says it: the blank, the scores read from one edge (twice the same from both
  * ends is said once), what is cut away, slits, tapers, teeth, arcs, rounded corners, notches and slots. Enough to draw the
  * piece again without a picture: places are told across from the left edge of the blank and down from its top edge.
  */
-export function makingOf(options: WordsOptions): readonly Sentence[] {
-  const { def, grid } = options;
-  return withSigns([
+export function instructionsOf({ net }: Pick<PieceFigure, 'net'>): readonly Sentence[] {
+  const told = known.get(net);
+  if (told) return told;
+  const making = makingOf(net);
+  if (!making) throw new Error('The instructions of a piece need the net that the model made.');
+  const { def, grid, step, thickness } = making;
+  const options: WordsOptions = { ...making, net, figure: figureMaker(step, thickness) };
+  const sentences = withSigns([
     blank(options),
     ...(grid ? gridWords({ ...options, grid }) : shapeWords(options)),
     ...layerWords(options),
     ...folding(options),
     ...(def.remarks ?? []).map((remark) => [remark]),
   ]);
+  known.set(net, sentences);
+  return sentences;
 }
 
 /** More figures than these with card thicknesses are written with signs. */

@@ -1,7 +1,7 @@
 import { atLeast, coincident, GRIDS, moreThan, snap } from '../measure';
 import { scoresOf } from '../model/pieces';
 import { boundsOf, line, perimeterOf, type Joint, type LoosePanel } from '../net';
-import { areaOfNet, figureMaker, finishNet, makingOf, moveNet, type LoosePiece } from '../piece';
+import { areaOfNet, finishNet, keepMaking, moveNet, type LoosePiece } from '../piece';
 import type { Fold, GridId, Line, Loop, Net, PieceFigure, Point, Sentence } from '../types';
 
 /** A fold at which a piece can be parted: where it runs, and how far from the left (`along`) or the top edge (`across`). */
@@ -205,22 +205,19 @@ const holds = (outer: ReturnType<typeof boundsOf>, inner: ReturnType<typeof boun
 function figureOf(piece: PieceFigure, net: Net, which: string, grid: GridId): PieceFigure {
   const name = `${piece.name}, ${which}`;
   const scores = scoresOf(net);
-  let words: readonly Sentence[] | undefined;
+  const { stock, thickness } = piece;
+  const def = { builder: 'outline', name, stock } as const;
+  keepMaking(net, { grid: null, def, scores, step: GRIDS[grid].step, thickness });
   return {
     name,
     count: piece.count,
-    stock: piece.stock,
+    stock,
     net,
     across: net.across,
     along: net.along,
     scores,
-    thickness: piece.thickness,
+    thickness,
     area: areaOfNet(net),
     perimeter: perimeterOf(net.outline) + net.holes.reduce((sum, hole) => sum + perimeterOf(hole), 0),
-    get instructions() {
-      const figure = figureMaker(GRIDS[grid].step, piece.thickness);
-      words ??= makingOf({ net, grid: null, def: { builder: 'outline', name, stock: piece.stock }, scores, figure });
-      return words;
-    },
   };
 }

@@ -1,6 +1,7 @@
 import {
   cutsInWords,
   helpWithTooLarge,
+  instructionsOf,
   joiningInWords,
   planSheets,
   say,
@@ -40,7 +41,7 @@ export function figuresJson(model: Model, figures: Figures, options: FiguresJson
       scores: piece.scores,
       area: piece.area,
       perimeter: piece.perimeter,
-      instructions: piece.instructions.map((sentence) => say(sentence, sizing)),
+      instructions: instructionsOf(piece).map((sentence) => say(sentence, sizing)),
     })),
     fits: figures.fits.map(({ name, holds, gap, advice }) => ({ name, holds, gap, ...(advice ? { advice } : {}) })),
     sheets: {

@@ -1,6 +1,7 @@
 import {
   cutsInWords,
   helpWithTooLarge,
+  instructionsOf,
   joiningInWords,
   planSheets,
   say,
@@ -39,7 +40,7 @@ export function measurementText(model: Model, figures: Figures, options: PlanOpt
     'PIECES',
     ...figuresAsCut(figures, plan).pieces.flatMap((piece, index) => [
       `  ${index + 1} ${piece.name}, cut ${piece.count}: ${bare(piece.across)} × ${length(piece.along)}`,
-      ...piece.instructions.map((sentence) => `      ${say(sentence, sizing)}`),
+      ...instructionsOf(piece).map((sentence) => `      ${say(sentence, sizing)}`),
     ]),
     '',
     'MATERIALS',

@@ -1,5 +1,6 @@
 import {
   evaluate,
+  instructionsOf,
   keyOf,
   say,
   show,
@@ -94,7 +95,9 @@ function sizeWords({ count, across, along }: PieceFigure, { sizing: { units, gri
 
 /** All that the maker is told to do to it, as one text. */
 const cutWords = (piece: PieceFigure, { sizing: { units, grid } }: Figures): string =>
-  piece.instructions.map((sentence) => say(sentence, { units, grid })).join(' ');
+  instructionsOf(piece)
+    .map((sentence) => say(sentence, { units, grid }))
+    .join(' ');
 
 function measureChanges(before: Figures, after: Figures): FigureChange[] {
   const { units, grid } = after.sizing;

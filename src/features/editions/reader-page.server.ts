@@ -1,9 +1,9 @@
 import type { Model, Sizing } from '@/engine';
 import type { FieldFault } from '@/features/http/problem';
-import { readCutFrom, type ReadCutFrom } from '@/features/sheets/cut-from';
+import { keepParams, readCutFrom, type ReadCutFrom } from '@/features/sheets/cut-from';
 import type { Links } from '@/features/sizing/live-html';
 import { inUnits, type Typed } from '@/features/sizing/reader-store';
-import { keepParams, readerView, type ReaderView } from '@/features/sizing/reader-view';
+import { readerView, type ReaderView } from '@/features/sizing/reader-view';
 import { isSizingForm, readSheetsForm, readSizingForm } from '@/features/sizing/sizing-form';
 import { readingWords } from '@/features/sizing/reading-words';
 import { readSizing } from '@/features/sizing/sizing-link';

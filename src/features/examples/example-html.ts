@@ -1,10 +1,11 @@
-import { drawPiece, explain, planSheets, showValue, type PieceFigure } from '@/engine';
+import { drawPiece, explain, instructionsOf, planSheets, showValue, type PieceFigure } from '@/engine';
 import { ICONS } from '@/components/icons';
 import { esc } from '@/exports/escape';
 import { drawingSvg } from '@/exports/svg/drawing';
 import { pieceCount } from '@/features/sizing/facts';
 import { readLive } from '@/writeup/live';
-import { measureInside, sentenceHtml } from '@/writeup/render-figures';
+import { sentenceHtml } from '@/writeup/render-figures';
+import { measureInside } from '@/writeup/render-measure';
 import type { Example } from './example';
 
 /** The parts of an example that follow its size, as HTML for the server and the browser alike. */
@@ -44,8 +45,8 @@ export function pieceSvg(example: Example, name: string, { wide, narrow, tallest
 
 /** A piece's making instructions, their figures on tabs. */
 export function wordsHtml(example: Example, name: string): string {
-  return pieceOf(example, name)
-    .instructions.map((sentence) => sentenceHtml(sentence, example.figures.sizing))
+  return instructionsOf(pieceOf(example, name))
+    .map((sentence) => sentenceHtml(sentence, example.figures.sizing))
     .join(' ');
 }
 

@@ -3,7 +3,7 @@ import { esc } from '@/exports/escape';
 import { sizesTogether } from '@/features/sizing/facts';
 import { panelFor } from '@/features/sizing/panel';
 import { liveParts } from '@/writeup/live';
-import { renderMeasure } from '@/writeup/render-figures';
+import { renderMeasure } from '@/writeup/render-measure';
 import type { Example } from './example';
 import { closesHtml, pieceSvg, wordsHtml } from './example-html';
 

@@ -155,3 +155,11 @@ export const marginText = (margin: number, units: Unit): string =>
 
 const noSheet = (text: string): string =>
   `“${text}” is no sheet that is known here. It can be ${Object.keys(STOCKS).join(', ')}, or a size such as 8.5x13in.`;
+
+/** What stays in every link on the page beside the sizing: the sheets, and an edition that is not the newest. */
+export function keepParams(cutFrom: CutFrom, edition: number | string | null): string {
+  const params = new URLSearchParams();
+  writeCutFrom(params, cutFrom);
+  if (edition !== null) params.set('edition', String(edition));
+  return params.toString();
+}

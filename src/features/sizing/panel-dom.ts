@@ -9,6 +9,7 @@ import { PAPERS, paperHref, PDFS } from './paper';
 import { rangeRuler, rangeRulerSvg } from './range-ruler';
 import type { ReaderState, ReaderStore, Typed } from './reader-store';
 import type { ReaderView } from './reader-view';
+import type { SizeView } from './size-view';
 import { parameterName } from './sizing-form';
 import { readSizing } from './sizing-link';
 
@@ -147,7 +148,7 @@ export function showPanel(
     panel,
     typed,
     links,
-  }: { readonly view: ReaderView; readonly panel: Panel; readonly typed: Typed; readonly links: Links },
+  }: { readonly view: SizeView; readonly panel: Panel; readonly typed: Typed; readonly links: Links },
 ): void {
   const { verdict } = view;
   const put = (selector: string, html: string) => {

@@ -1,17 +1,17 @@
 import { showFolded } from '@/components/folded/show';
-import { openModel, type Figures, type Model, type SealedModel, type SheetPlan, type Sizing } from '@/engine';
+import { openModel, type Model, type SealedModel, type Sizing } from '@/engine';
+import { keepParams, readCutFrom } from '@/features/sheets/cut-from';
 import type { MySheets } from '@/features/sheets/my-sheets';
 import { hearSheets, keptSheets } from '@/features/sheets/sheet-keeper';
-import { planOptions, readCutFrom } from '@/features/sheets/cut-from';
 import { articleFigures, markChanged } from './article-figures';
-import { sheetsWords } from './facts';
-import { factsHtml, fitsHtml, lastGoodHtml, closesWords, sizingHref, type Links } from './live-html';
+import type { DrawnPage } from './drawn-page.client';
+import { later } from './later';
+import { closesWords, lastGoodHtml, sizingHref, type Links } from './live-html';
 import { morphInto } from './morph';
 import { panelFor } from './panel';
-import { bindPanel, showPanel, showSheets } from './panel-dom';
-import { createPlanClient } from './plan-client';
+import { bindPanel, showPanel } from './panel-dom';
 import { createReaderStore, type ReaderState, type ReaderStore } from './reader-store';
-import { keepParams, readerView } from './reader-view';
+import { sizeView } from './size-view';
 
 /** What the server puts into the page for the island. */
 export interface ProjectData {
@@ -28,9 +28,6 @@ export interface ProjectData {
   readonly minutes: number | null;
 }
 
-/** Trials for the plan that comes with every change; better ones follow from beside the page. */
-const WHILE_SIZING = 100;
-
 /** Takes the page over from the form: from here on every change shows at once, and the address says what is shown. */
 export function startReader(panel: HTMLElement): void {
   const page = document.querySelector<HTMLElement>('[data-reader]');
@@ -44,7 +41,14 @@ export function startReader(panel: HTMLElement): void {
     cutFrom: readCutFrom(new URLSearchParams(data.cutFrom), data.asked).value,
     sheets: data.sheets ?? keptSheets(),
   });
-  const paint = painter(page, panel, model, data);
+  // Should the drawings not come, the server draws the page: the address says the size.
+  const lost = () => void setTimeout(() => location.reload(), REMEMBERED);
+  const { minutes } = data;
+  const draw = later(
+    import('./drawn-page.client').then(({ drawnPage }) => drawnPage(page, panel, { model, minutes, lost })),
+    lost,
+  );
+  const paint = painter(page, panel, draw, { ...data, model });
   showFolded(page, model, store.$state.get().verdict.shown);
   let waiting = false;
   let painted = store.$state.get();
@@ -62,8 +66,7 @@ export function startReader(panel: HTMLElement): void {
   hearSheets((sheets) => store.sheets(sheets));
   const kept = keptSheets();
   // The server knew the account's sheets and drew them; what this browser keeps it could not know.
-  if (data.sheets === null && kept.length > 0)
-    showSheets(panel, readerView(model, painted.verdict, painted.cutFrom), painted);
+  if (data.sheets === null && kept.length > 0) draw((drawn) => drawn.showSheets(painted));
   const editor = panel.querySelector('[data-my-sheets]');
   if (data.sheets !== null && kept.length > 0 && editor) editor.textContent = 'My sheets: add those this browser kept';
   bindPanel(panel, page, store, { model, authors: data.authors, path: data.path });
@@ -96,33 +99,28 @@ function bindAsks(
   });
 }
 
-function painter(page: HTMLElement, panel: HTMLElement, model: Model, data: ProjectData): (state: ReaderState) => void {
-  const article = articleFigures(page, model);
+type Draw = (use: (part: DrawnPage) => void) => void;
+
+function painter(
+  page: HTMLElement,
+  panel: HTMLElement,
+  draw: Draw,
+  { model, ...data }: Omit<ProjectData, 'model'> & { readonly model: Model },
+): (state: ReaderState) => void {
+  const showFigures = articleFigures(page, model);
   const parts = (name: string) => document.querySelectorAll<HTMLElement>(`[data-${name}]`);
   const put = (name: string, html: string) => parts(name).forEach((element) => morphInto(element, html, markChanged));
-  const planner = createPlanClient();
-  const showPlan = (shown: Figures, plan: SheetPlan, links: Links) => {
-    put('facts', factsHtml(shown, plan, data.minutes));
-    put('fits', fitsHtml(shown, plan, links));
-    put('dock-closes', `${closesWords(shown)} · ${sheetsWords(plan)}`);
-    article.showPlan(shown, plan);
-  };
 
   return (state) => {
     const { verdict, typed, cutFrom } = state;
-    const view = readerView(model, verdict, cutFrom, WHILE_SIZING);
+    const view = sizeView(model, verdict);
     const links: Links = { model, authors: data.authors, path: data.path, keep: keepParams(cutFrom, data.edition) };
     const { shown } = verdict;
 
     document.documentElement.dataset.units = shown.sizing.units;
-    article.show(shown);
-    showPlan(shown, view.plan, links);
+    showFigures(shown);
     put('closes', closesWords(shown));
     put('dock-size', view.insideWords);
-    planner.think(shown, planOptions(cutFrom, shown.pieces), view.plan, (plan) => {
-      showPlan(shown, plan, links);
-      showSheets(panel, { plan, verdict }, state);
-    });
     showFolded(page, model, shown);
 
     const stale = lastGoodHtml(verdict, typed, links);
@@ -132,17 +130,20 @@ function painter(page: HTMLElement, panel: HTMLElement, model: Model, data: Proj
       element.hidden = stale === '';
     });
     showPanel(panel, { view, panel: panelFor(model, verdict.figures), typed, links });
-    showSheets(panel, view, state);
     remember(sizingHref(links, verdict.asked));
-    say(panel, verdict.good ? `${view.insideWords} inside. ${closesWords(shown)}, ${view.sheetsWords}.` : '');
+    draw((drawn) => {
+      const sheets = drawn.show(state, links);
+      say(panel, verdict.good ? `${view.insideWords} inside. ${closesWords(shown)}, ${sheets}.` : '');
+    });
   };
 }
 
-/** Browsers refuse an address that changes with every movement of a slider. */
+/** Milliseconds: browsers refuse an address that changes with every movement of a slider. */
+const REMEMBERED = 150;
 let remembering: ReturnType<typeof setTimeout> | undefined;
 function remember(address: string): void {
   clearTimeout(remembering);
-  remembering = setTimeout(() => history.replaceState(history.state, '', address + location.hash), 150);
+  remembering = setTimeout(() => history.replaceState(history.state, '', address + location.hash), REMEMBERED);
 }
 
 /** One sentence for those who hear the page, once the change has come to rest. */

@@ -1,9 +1,9 @@
 import { evaluate, GRID_IDS, gridsFor, readValue, UNITS, type Model, type Sizing, type Unit } from '@/engine';
-import { readCutFrom, type ReadCutFrom } from '@/features/sheets/cut-from';
+import { keepParams, readCutFrom, type ReadCutFrom } from '@/features/sheets/cut-from';
 import type { Links } from './live-html';
 import { fieldText } from './panel';
 import { inUnits, type Typed } from './reader-store';
-import { keepParams, type ReaderView } from './reader-view';
+import type { ReaderView } from './reader-view';
 import { readingWords } from './reading-words';
 import { readSizing, slugOf, writeSizing } from './sizing-link';
 import { valueIn, withChoice, withValue } from './sizing-values';

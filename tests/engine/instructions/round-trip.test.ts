@@ -1,5 +1,15 @@
 import { describe, expect, it } from 'vitest';
-import { GRIDS, evaluate, say, type Curve, type Figures, type Model, type PieceFigure, type Sizing } from '@/engine';
+import {
+  GRIDS,
+  evaluate,
+  instructionsOf,
+  say,
+  type Curve,
+  type Figures,
+  type Model,
+  type PieceFigure,
+  type Sizing,
+} from '@/engine';
 import { SLUGS, modelOf } from '../patterns';
 import { ARC_STEP, along, areaOf, gap, inside, offLoop, offPath, type Card, type Dot, type Kind } from './card';
 import { readMaking } from './read-making';
@@ -127,7 +137,12 @@ function differences({ net }: PieceFigure, card: Card, round: boolean): Record<s
  * What is wrong with a piece drawn from its words; null when it is right. Inches are said to a sixty-fourth, millimetres to
  * a tenth, and a place may be the sum of two figures: 2 × 1/128 in and 2 × 0.05 mm each way. Angles are said to a tenth.
  */
-function faultOf(piece: PieceFigure, { sizing }: Figures, model: Model, sentences = piece.instructions): string | null {
+function faultOf(
+  piece: PieceFigure,
+  { sizing }: Figures,
+  model: Model,
+  sentences = instructionsOf(piece),
+): string | null {
   const def = model.pattern.pieces.find(({ name }) => name === piece.name);
   const tolerance = def?.builder === 'fan' ? 0.3 : sizing.units === 'in' ? 0.4 : 0.15;
   try {
@@ -170,17 +185,17 @@ describe.each(SLUGS)('the words of %s', (slug) => {
       const unnoticed: string[] = [];
       for (const piece of figures.pieces) {
         const remarks = model.pattern.pieces.find(({ name }) => name === piece.name)?.remarks ?? [];
-        for (const [index, sentence] of piece.instructions.entries()) {
+        for (const [index, sentence] of instructionsOf(piece).entries()) {
           const told = say(sentence, figures.sizing);
           if (remarks.includes(told) || WITHOUT_GEOMETRY.test(told)) continue;
-          const others = piece.instructions.filter((_, other) => other !== index);
+          const others = instructionsOf(piece).filter((_, other) => other !== index);
           if (faultOf(piece, figures, model, others) === null) unnoticed.push(`${piece.name} without: ${told}`);
           for (const [place, part] of sentence.entries()) {
             if (typeof part === 'string' || RUNS_OUT.has(slug)) continue;
             // Longer or shorter: a score may run out over waste, but not stop short.
             const noticed = [6, -6].some((by) => {
               const changed = sentence.with(place, { ...part, mm: part.mm + by });
-              return faultOf(piece, figures, model, piece.instructions.with(index, changed)) !== null;
+              return faultOf(piece, figures, model, instructionsOf(piece).with(index, changed)) !== null;
             });
             if (!noticed) unnoticed.push(`${piece.name}, part ${place} of: ${told}`);
           }

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { GRIDS, say, snap, type Placement, type Sizing } from '@/engine';
+import { GRIDS, instructionsOf, say, snap, type Placement, type Sizing } from '@/engine';
 import { foldNet, vector, type FoldedPanel } from '@/engine/space';
 import { expectClose } from '../../setup/expect-close';
 import { figuresOf, inch, modelOf, pieceOf, sizingsOf } from '../patterns';
@@ -97,8 +97,8 @@ describe('drawer-chest', () => {
     expect(hole?.[0]).toMatchObject({ type: 'arc', centre: { x: 12.5, y: 25 + 50 }, radius: 25.4 / 16 });
   });
   it('says the carcass as a maker scores it', () => {
-    const { instructions } = pieceOf(figuresOf(model, { ...PLAIN, drawers: 4 }, METRIC), 'Carcass');
-    const says = instructions.map((sentence) => say(sentence, { units: 'mm', grid: '0.5mm' }));
+    const carcass = pieceOf(figuresOf(model, { ...PLAIN, drawers: 4 }, METRIC), 'Carcass');
+    const says = instructionsOf(carcass).map((sentence) => say(sentence, { units: 'mm', grid: '0.5mm' }));
     expect(says[0]).toBe('Cut 289.5 × 295.5 mm.');
     expect(says[1]).toBe('Score at 92.5 mm from each of the four sides.');
   });

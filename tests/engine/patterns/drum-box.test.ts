@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { lengthOf, say, type Net } from '@/engine';
+import { instructionsOf, lengthOf, say, type Net } from '@/engine';
 import { dot, foldNet, minus, size, vector, type FoldedPanel, type Vector } from '@/engine/space';
 import { expectClose } from '../../setup/expect-close';
 import { figuresOf, inch, modelOf, pieceOf } from '../patterns';
@@ -70,7 +70,7 @@ describe('drum-box', () => {
     expect(
       Math.max(...strip.net.panels.filter((panel) => panel.tooth).flatMap((panel) => panel.loop.map(({ to }) => to.x))),
     ).toBe(316);
-    expect(strip.instructions.map((sentence) => say(sentence, MM))).toEqual([
+    expect(instructionsOf(strip).map((sentence) => say(sentence, MM))).toEqual([
       'Cut 328 × 93 mm.',
       'Along the 93 mm side score at 81.',
       'Along the 328 mm side draw a pencil line at 316; do not score it.',

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { say, type Figures, type Sizing } from '@/engine';
+import { instructionsOf, say, type Figures, type Sizing } from '@/engine';
 import groups from '../../reference/check-values.json' with { type: 'json' };
 import { expectClose } from '../../setup/expect-close';
 import { figuresOf, inch, modelOf, pieceOf } from '../patterns';
@@ -71,7 +71,7 @@ describe('the flat frame', () => {
     }
   });
   it('says the window in words', () => {
-    const lines = pieceOf(worked(0, 0), 'Frame').instructions.map((line) => say(line, METRIC));
+    const lines = instructionsOf(pieceOf(worked(0, 0), 'Frame')).map((line) => say(line, METRIC));
     // In the middle of 324 × 374: (324 − 90) / 2 and (374 − 140) / 2.
     expect(lines).toContain('Cut out a window 90 × 140 mm, its top left corner 117 across, 117 down.');
   });

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { say, type Figures, type Point, type Sizing } from '@/engine';
+import { instructionsOf, say, type Figures, type Point, type Sizing } from '@/engine';
 import { dot, minus, size, type Vector } from '@/engine/space';
 import { expectClose } from '../../setup/expect-close';
 import { figuresOf, inch, modelOf, pieceOf } from '../patterns';
@@ -57,7 +57,7 @@ describe('the flat bag', () => {
     expect(net.panels.some(({ name }) => name === 'seam foot')).toBe(false);
   });
   it('says every crease of the gusset', () => {
-    const lines = pieceOf(bag('block folded'), 'Bag').instructions.map((line) => say(line, METRIC));
+    const lines = instructionsOf(pieceOf(bag('block folded'), 'Bag')).map((line) => say(line, METRIC));
     // The base line lies 30 + 200 down; the folds meet in the middle of the gusset, 40 mm above it.
     expect(lines.join(' ')).toContain('242 across, 230 down, to 202 across, 190 down, on to 162 across, 230 down');
   });

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { areaOf, say, type Figures, type Sizing } from '@/engine';
+import { areaOf, instructionsOf, say, type Figures, type Sizing } from '@/engine';
 import { foldNet, minus, size, vector, type Vector } from '@/engine/space';
 import groups from '../../reference/check-values.json' with { type: 'json' };
 import { expectClose } from '../../setup/expect-close';
@@ -75,7 +75,7 @@ describe('pillow-box', () => {
     );
     expect(arcs.map((arc) => arc.radius)).toEqual(arcs.map(() => inch(4.25)));
     expect(arcs).toHaveLength(8);
-    const words = piece.instructions.map((one) => say(one, { units: 'in', grid: '1/16in' }));
+    const words = instructionsOf(piece).map((one) => say(one, { units: 'in', grid: '1/16in' }));
     expect(words.join(' ')).toContain(
       'Score from 0 across, 1/2 down, to 4 across, 1/2 down, an arc of 4 1/4 in radius, bowed down;',
     );

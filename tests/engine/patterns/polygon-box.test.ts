@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { areaOf, say, type Loop } from '@/engine';
+import { areaOf, instructionsOf, say, type Loop } from '@/engine';
 import { dot, foldNet, minus, size, vector, type FoldedPanel } from '@/engine/space';
 import groups from '../../reference/check-values.json' with { type: 'json' };
 import { expectClose } from '../../setup/expect-close';
@@ -113,7 +113,7 @@ describe('polygon-box', () => {
   });
   it('says enough to draw the base again (square, 100 mm, 30 mm tall: corners at 50 √2)', () => {
     const { figures } = of({ sides: 4, 'inside across flats': 100, 'inside height': 30, 'lid height': 20, tab: 12 });
-    expect(pieceOf(figures, 'Base').instructions.map((sentence) => say(sentence, MM))).toEqual([
+    expect(instructionsOf(pieceOf(figures, 'Base')).map((sentence) => say(sentence, MM))).toEqual([
       'Cut 160 × 160 mm.',
       'Draw a circle of 70.7 mm radius, its middle 80 mm from the left edge and 80 mm from the top; mark it every 90°, beginning 45° beside the lowest point, and join the 4 marks: sides of 100 mm, each 50 mm from the middle.',
       'On every side draw a rectangle 30 mm tall.',

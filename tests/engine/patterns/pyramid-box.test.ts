@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { say, type Arc } from '@/engine';
+import { instructionsOf, say, type Arc } from '@/engine';
 import { dot, foldNet, minus, size, vector, type FoldedPanel } from '@/engine/space';
 import groups from '../../reference/check-values.json' with { type: 'json' };
 import { expectClose } from '../../setup/expect-close';
@@ -107,8 +107,8 @@ describe('pyramid-box', () => {
     // From the middle line to an edge: distance from the tip × sin(half the tip angle).
     expect(cut('hole from tip') * Math.sin((cut('tip angle') * Math.PI) / 360) - 2.5).toBeGreaterThanOrEqual(4);
     expect(
-      pieceOf(figures, 'Star')
-        .instructions.map((sentence) => say(sentence, MM))
+      instructionsOf(pieceOf(figures, 'Star'))
+        .map((sentence) => say(sentence, MM))
         .join(' '),
     ).toContain(
       `In every tip punch a hole of 5 mm diameter on the middle line, its middle ${cut('hole from tip')} mm from the tip.`,

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { lengthOf, say, snap, type Sizing } from '@/engine';
+import { instructionsOf, lengthOf, say, snap, type Sizing } from '@/engine';
 import { expectClose } from '../../setup/expect-close';
 import { figuresOf, inch, modelOf, pieceOf, sizingsOf } from '../patterns';
 import { inSpace, reach, worstFold } from './folded-net';
@@ -33,11 +33,16 @@ const cut = ({ figures }: ReturnType<typeof carton>, name: string) =>
 
 describe('tuck-carton', () => {
   it('has the blank and the scores of the worked example at 3 × 2 × 4 in (derived, constructions)', () => {
-    const { across, along, scores, instructions } = carton(THIN, 'same side');
+    const piece = carton(THIN, 'same side');
+    const { across, along, scores } = piece;
     // 1/2 + 3 + 2 + 3 + 2 across; 1/2 + 2 + 4 + 2 + 1/2 along
     expect([across, along]).toEqual([inch(10.5), inch(9)]);
     expect(scores).toEqual({ across: [0.5, 3.5, 5.5, 8.5].map(inch), along: [0.5, 2.5, 6.5, 8.5].map(inch) });
-    expect(instructions.slice(0, 3).map((sentence) => say(sentence, { units: 'in', grid: '1/16in' }))).toEqual([
+    expect(
+      instructionsOf(piece)
+        .slice(0, 3)
+        .map((sentence) => say(sentence, { units: 'in', grid: '1/16in' })),
+    ).toEqual([
       'Cut 10 1/2 × 9 in.',
       'Along the 10 1/2 in side score at 1/2, 3 1/2, 5 1/2 and 8 1/2.',
       'Turn; along the 9 in side score at 1/2 and 2 1/2 in from each end.',

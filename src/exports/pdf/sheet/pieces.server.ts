@@ -1,4 +1,4 @@
-import { drawPiece, type Drawing, type PieceFigure } from '@/engine';
+import { drawPiece, instructionsOf, type Drawing, type PieceFigure } from '@/engine';
 import { LINE_LEGEND } from '../../line-legend';
 import { sheetScale } from '../../sheet-scale';
 import { decoration, group, MM, tagged, type Tag } from '../document.server';
@@ -61,7 +61,7 @@ function pieceBlock(
     units,
     grid,
   });
-  const sentences = piece.instructions.map((sentence) => wordsOf(sentence, figures.sizing));
+  const sentences = instructionsOf(piece).map((sentence) => wordsOf(sentence, figures.sizing));
   const block = (shown: typeof sentences, drawn: Drawing | null): Block => {
     const beside = drawn !== null && drawn.width * UNIT <= width * BESIDE;
     const indent = beside ? width * BESIDE + 8 : 0;

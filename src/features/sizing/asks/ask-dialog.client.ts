@@ -1,10 +1,9 @@
 import type { SealedModel, Solved } from '@/engine';
-import { CUT_FIELD, readCutFrom, type CutFrom } from '@/features/sheets/cut-from';
+import { CUT_FIELD, keepParams, readCutFrom, type CutFrom } from '@/features/sheets/cut-from';
 import { readStock } from '@/features/sheets/stock-link';
 import type { Links } from '../live-html';
 import { morphInto } from '../morph';
 import type { ReaderStore } from '../reader-store';
-import { keepParams } from '../reader-view';
 import { readSizing } from '../sizing-link';
 import {
   answerPile,

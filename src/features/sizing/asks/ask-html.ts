@@ -1,12 +1,12 @@
 import { drawSheet, show, type Model, type SheetPlan, type Sizing } from '@/engine';
 import { esc } from '@/exports/escape';
 import { drawingSvg } from '@/exports/svg/drawing';
-import { CUT_FIELD, MOST_COPIES, type CutFrom } from '@/features/sheets/cut-from';
+import { CUT_FIELD, keepParams, MOST_COPIES, type CutFrom } from '@/features/sheets/cut-from';
 import { cardUsed, type MySheets } from '@/features/sheets/my-sheets';
 import { haveHtml, stockOptionsHtml } from '@/features/sheets/my-sheets-html';
-import { fitsHtml, sizingHref, type Links } from '../live-html';
+import { sizingHref, type Links } from '../live-html';
+import { fitsHtml } from '../plan-html';
 import { insideWords } from '../facts';
-import { keepParams } from '../reader-view';
 import { slugOf } from '../sizing-link';
 import {
   COPIES,

@@ -1,4 +1,4 @@
-import { sayParts, show, type PieceFigure } from '@/engine';
+import { instructionsOf, sayParts, show, type PieceFigure } from '@/engine';
 import type { LiveFigures } from '@/writeup/live';
 import { FoldedBox } from './FoldedBox';
 
@@ -29,7 +29,7 @@ export function WholeBox({ live, figure }: { readonly live: LiveFigures; readonl
       <div className="words">
         <h3>Words from the geometry</h3>
         {figure === undefined ? <p className="soft">This piece is not cut with these choices.</p> : null}
-        {figure?.instructions.map((sentence, i) => (
+        {(figure === undefined ? [] : instructionsOf(figure)).map((sentence, i) => (
           <p key={i}>
             {sayParts(sentence, { units, grid }).map((part, j) =>
               part.figure ? (

@@ -1,5 +1,5 @@
 import type { EditingDesk } from '../../editor/editing-desk';
-import { foldedInside } from '../../render-blocks';
+import { foldedInside } from '../../folded-block';
 import { liveBlockView } from '../live-block';
 
 export const foldedViewView = (desk: EditingDesk) =>

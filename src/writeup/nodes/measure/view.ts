@@ -2,7 +2,7 @@ import type { NodeViewRenderer } from '@tiptap/core';
 import { keyOf } from '@/engine';
 import type { EditingDesk } from '../../editor/editing-desk';
 import { readLive, showLive, type LiveText } from '../../live';
-import { NOT_WORKED_OUT } from '../../render-figures';
+import { NOT_WORKED_OUT } from '../../render-measure';
 
 /** A live measure in the editor: plain DOM that follows the figures by itself, so that a new size writes nothing into the document. */
 export function measureView(desk: EditingDesk): NodeViewRenderer {
