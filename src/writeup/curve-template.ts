@@ -43,12 +43,11 @@ function curveOf(arc: Arc): PieceCurve {
   };
 }
 
-/** What stands in the block: each curve at full size with its figures, or why there is none. */
+/** What stands in the block: each curve at full size with its figures; nothing while the piece has none. */
 export function curvesInside(figures: Figures, name: string): string {
   const piece = figures.pieces.find((one) => one.name === name);
   const curves = piece ? curvesOf(piece) : [];
-  if (curves.length === 0)
-    return `<p class="piece-card-none"><b>${esc(name)}</b> has no curve as the box is set up now.</p>`;
+  if (curves.length === 0) return '';
   const drawn = curves.map((curve) => drawingSvg(drawCurve(curve, name, figures.sizing))).join('');
   return (
     `<p class="piece-card-head"><b>${esc(name)}: ${curves.length === 1 ? 'its curve' : 'its curves'}</b> <span>full size when printed at 100 %</span></p>` +

@@ -208,3 +208,64 @@ test("a word processor's text keeps its lists, bold and table lines; pictures fr
   await expect(text.locator('.measure')).toHaveText(['1\u20442\u00a0in']);
   await expect(text.locator('p').last()).toContainText('3 in');
 });
+
+test('a step is there only when a choice is made; what speaks of later steps follows the count', async ({
+  desk: { page, saved },
+}) => {
+  for (const title of ['Cut', 'Round it', 'Score']) {
+    await page.keyboard.press('Control+Enter');
+    await settle(page);
+    await page.keyboard.type(title);
+    await page.keyboard.press('Enter');
+    await settle(page);
+  }
+  await page.keyboard.type('As in ');
+  await page.keyboard.press('Alt+Shift+S');
+  // The steps are listed in order: the third is this one.
+  await page.locator('.pick-list button').nth(2).click();
+  await settle(page);
+  await expect(written(page).locator('.step-ref')).toHaveText('step\u00a03');
+
+  await written(page).locator('.step-content').nth(1).click();
+  await page.keyboard.press('Alt+Shift+W');
+  await page.getByRole('button', { name: 'spine is straight', exact: true }).click();
+  await settle(page);
+  // The book box has a curved spine unless one chooses another.
+  await expect(written(page).locator('.step-left-out')).toHaveCount(1);
+  await expect(written(page).locator('.step-ref')).toHaveText('step\u00a02');
+  await expect.poll(saved).toContain('"when":"spine is straight"');
+});
+
+test('words are found and replaced, and live measures stay as they are', async ({ desk: { page, saved } }) => {
+  await page.keyboard.type('Cut a tab, ');
+  await putMeasure(page, 'tab');
+  await page.keyboard.type(' wide, and a tab.');
+  await page.keyboard.press('Control+f');
+  const bar = page.getByRole('search', { name: 'Find in the write-up' });
+  await bar.getByLabel('Find', { exact: true }).fill('tab');
+  await expect(bar.locator('.find-count')).toHaveText('1 of 2');
+  await bar.getByLabel('Put in its place').fill('flap');
+  await bar.getByRole('button', { name: 'Replace all' }).click();
+  await page.keyboard.press('Escape');
+  // 1/2 in is the usual width of a tab.
+  await expect(written(page).locator('p').first()).toHaveText('Cut a flap, 1\u20442\u00a0in wide, and a flap.');
+  await expect.poll(saved).toContain('"formula":"tab"');
+});
+
+test('Tab goes from cell to cell of a table and makes a row behind the last', async ({ desk: { page } }) => {
+  await page.keyboard.press('Alt+Shift+B');
+  await page
+    .locator('.pick-list')
+    .getByRole('button', { name: /^Table/ })
+    .click();
+  await settle(page);
+  for (let n = 1; n <= 10; n += 1) {
+    await page.keyboard.type(String(n));
+    await page.keyboard.press('Tab');
+  }
+  // Three columns: ten cells fill three rows and begin a fourth.
+  await expect(written(page).locator('tr')).toHaveCount(4);
+  await expect(written(page).locator('td').last()).toBeEmpty();
+  await page.getByRole('toolbar', { name: 'Table' }).getByRole('button', { name: 'Take the table out' }).click();
+  await expect(written(page).locator('table')).toHaveCount(0);
+});

@@ -16,7 +16,7 @@ export const NOTES: readonly InsertablePart[] = [
   { name: 'correction', label: 'Correction', small: 'What an earlier edition had wrong here' },
 ];
 export const BLOCKS: readonly InsertablePart[] = [
-  { name: 'materials', label: 'Materials', small: 'Card, glue: what it takes', key: 'M' },
+  { name: 'materials', label: 'Materials', small: 'Card, glue: a list of your own', key: 'M' },
   { name: 'cutList', label: 'Cut list', small: 'Every piece with its size and scores', key: 'L' },
   { name: 'tools', label: 'Tools', small: 'What to have at hand' },
   { name: 'amounts', label: 'What it takes', small: 'Sheets, glue and the rest, worked out' },

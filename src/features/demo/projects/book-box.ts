@@ -134,8 +134,8 @@ export const bookBox: DemoProject = {
             'The lower spine',
             'Between its tabs this strip is [[lower spine.strip]] wide. On a curved spine it has to be as wide as the curve is **long**, and that is more than the straight way across, [[inside depth]]. People get this number wrong when they lay a ruler across the box. The grain runs up and down here too, or the strip cracks when it is rolled.',
             piece('Lower spine'),
-            'Check it before you cut the teeth. Lay a strip of paper on edge round the curve of your floor and mark both ends: flat again, the marks should be [[floor.curve length]] apart. What your trimmer can cut comes near enough to it. If your own curve came out longer, trust the paper and score the second tab there.',
-            'Then cut the foot into narrow teeth, [[teeth]] of them, from the edge almost to the score. A cut **past** the score opens a hole at the foot of the spine; one that stops a hair short does no harm. A straight spine keeps its foot whole.',
+            '{spine is curved: Check it before you cut the teeth. Lay a strip of paper on edge round the curve of your floor and mark both ends: flat again, the marks should be [[floor.curve length]] apart. What your trimmer can cut comes near enough to it. If your own curve came out longer, trust the paper and score the second tab there.}',
+            '{spine is curved: Then cut the foot into narrow teeth, [[teeth]] of them, from the edge almost to the score. A cut **past** the score opens a hole at the foot of the spine; one that stops a hair short does no harm.}{spine is straight: The foot of a straight spine stays whole.}',
           ),
           stepAs(
             { when: 'lid is flip', key: 'upper' },

@@ -23,7 +23,9 @@ export function curveTemplateView(desk: EditingDesk): NodeViewRenderer {
           (one) => new Option(one || 'Choose a piece', one, false, one === name),
         ),
       );
-      shown.innerHTML = figures && name !== '' ? curvesInside(figures, name) : '';
+      const html = figures && name !== '' ? curvesInside(figures, name) : '';
+      shown.innerHTML = html;
+      if (html === '') shown.textContent = 'No curve as the box is set up now: readers see nothing here.';
     };
     draw();
     const stop = desk.figures.listen(draw);
