@@ -14,6 +14,8 @@ export const SUBSETS: readonly Subset[] = ['latin', 'latin-ext'];
 /** A font as the PDF library has read it; what each document embeds of it is the document's own. */
 export interface ReadFont {
   hasGlyphForCodePoint(mark: number): boolean;
+  readonly unitsPerEm: number;
+  layout(text: string): { readonly advanceWidth: number };
 }
 
 const { resolve } = createRequire(join(config.root, 'package.json'));
@@ -25,6 +27,12 @@ export function readFont(weight: Weight, subset: Subset): ReadFont {
   let font = fonts.get(name);
   if (!font) fonts.set(name, (font = parse(woffToTtf(readFileSync(resolve(`@fontsource/figtree/files/${name}`))))));
   return font;
+}
+
+/** How wide a text is on one line, in the unit of its size. */
+export function textWidth(text: string, { size, weight }: { readonly size: number; readonly weight: Weight }): number {
+  const font = readFont(weight, 'latin');
+  return (font.layout(text).advanceWidth / font.unitsPerEm) * size;
 }
 
 /** Words that are kept with the places of their letters, of each font; a sheet has some five hundred in all. */
