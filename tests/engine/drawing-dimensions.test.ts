@@ -1,6 +1,8 @@
 import { describe, expect, it } from 'vitest';
 import { drawPiece, evaluate, type Drawing, type Figures, type Sizing } from '@/engine';
 import { spread } from '@/engine/drawing/dimensions';
+import { notesOf } from '@/engine/drawing/notes';
+import { positionsOf } from '@/engine/drawing/stops';
 import { SLUGS, figuresOf, inch, modelOf, pieceOf, sizingsOf } from './patterns';
 import { strokesOf, textsOf } from './drawn';
 import { expectClose } from '../setup/expect-close';
@@ -123,15 +125,13 @@ describe('notes in a drawing', () => {
     const teeth = pieceOf(strip, 'Strip').net.panels.filter(({ tooth }) => tooth).length;
     expect(written(drawn(strip, 'Strip'))).toContain(`${teeth} teeth`);
   });
-  it('tell the length of a slit', () => {
+  it('tell the length of a slit, and the edge its place', () => {
     const tray = pieceOf(figuresOf(modelOf('tray'), {}, METRIC), 'Tray');
     const slit = { type: 'line', from: { x: 60, y: 60 }, to: { x: 60, y: 85 } } as const;
-    const drawing = drawPiece(
-      { ...tray, net: { ...tray.net, slits: [slit] } },
-      { width: WIDE, units: 'mm', grid: '1mm' },
-    );
-    expect(written(drawing)).toContain('slit 25');
-    expect(running(drawing).across).toContain('60');
+    const slitted = { ...tray, net: { ...tray.net, slits: [slit] } };
+    const positions = positionsOf(slitted);
+    expect(positions.across.map(({ at }) => at)).toContain(60);
+    expect(notesOf(slitted, positions, String).map(({ text }) => text)).toContain('slit 25');
   });
   it('tell the ends of slanting scores by their places when no edge has them', () => {
     const drawing = drawn(figuresOf(modelOf('diagonal-envelope')), 'Envelope');
