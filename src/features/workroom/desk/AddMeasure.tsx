@@ -29,7 +29,7 @@ export function AddMeasure({ store, pattern }: { readonly store: DeskStore; read
       addMeasure(
         now,
         asked
-          ? { name: clean, ask: { question: questionFor(clean), usual: '1 in', from: '0 in', to: '12 in' } }
+          ? { name: clean, ask: { question: questionFor(clean), usual: '1 in', from: '1/2 in', to: '12 in' } }
           : { name: clean, formula: '1 in' },
       ),
     );

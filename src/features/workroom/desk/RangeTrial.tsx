@@ -1,5 +1,5 @@
 import { Icon } from '@/components/Icon';
-import { GRIDS, showValue, type Sizing } from '@/engine';
+import { GRIDS, roundTo, showValue, type MeasureFigure, type Sizing } from '@/engine';
 import { changeAsk } from '@/features/projects/pattern-edits';
 import { narrowerRanges } from '@/features/projects/range-trial';
 import type { DeskStore, Draft, Work } from './desk-store';
@@ -61,7 +61,7 @@ function Found({
           trial.tried,
           measures.filter(({ asked }) => asked),
           GRIDS[sizing.grid].step,
-        );
+        ).map(({ name, from, to }) => ({ name, ...onGrid(measures, { name, from, to }, GRIDS[sizing.grid].step) }));
   const text = (name: string, value: number) => {
     const figure = measures.find((one) => one.name === name);
     return showValue(value, figure?.kind ?? 'length', { ...sizing, unit: figure?.unit }).text;
@@ -119,4 +119,14 @@ function Found({
       ))}
     </>
   );
+}
+
+/** A range that a person would write: lengths on the cut grid, inside what was found. */
+function onGrid(
+  measures: readonly MeasureFigure[],
+  { name, from, to }: { readonly name: string; readonly from: number; readonly to: number },
+  step: number,
+): { readonly from: number; readonly to: number } {
+  const isLength = measures.some((one) => one.name === name && one.kind === 'length');
+  return isLength ? { from: roundTo(from, step, 'up'), to: roundTo(to, step, 'down') } : { from, to };
 }

@@ -1,3 +1,4 @@
+import { BLANK } from '@/features/patterns/blank-pattern';
 import { boxHref } from '@/features/handbook/box-href';
 import type { ShelfPattern } from './NewProject';
 
@@ -16,6 +17,9 @@ export function PatternShelf({
         <p className="soft">
           It comes with its measures, pieces, fits and making instructions. All of it is yours to change.
         </p>
+        <button type="button" className="text-button small" onClick={() => onChoose(BLANK)}>
+          Start from blank instead
+        </button>
       </div>
       <ul className="shelf-patterns">
         {patterns.map((pattern) => (
