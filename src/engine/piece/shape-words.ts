@@ -1,6 +1,6 @@
 import { decimal } from '../measure';
 import { distance, lengthOf, pointAt } from '../net';
-import type { Curve, Panel, Point, Sentence } from '../types';
+import type { Curve, Panel, Sentence } from '../types';
 import { cuttingOut } from './cut-words';
 import { fanSizes } from './fan-sizes';
 import { holes, scoring, slits } from './line-words';

@@ -2,7 +2,7 @@ import { atLeast, coincident, GRIDS, moreThan, snap } from '../measure';
 import { scoresOf } from '../model/pieces';
 import { boundsOf, line, perimeterOf, type Joint, type LoosePanel } from '../net';
 import { areaOfNet, finishNet, keepMaking, moveNet, type LoosePiece } from '../piece';
-import type { Fold, GridId, Line, Loop, Net, PieceFigure, Point, Sentence } from '../types';
+import type { Fold, GridId, Line, Loop, Net, PieceFigure, Point } from '../types';
 
 /** A fold at which a piece can be parted: where it runs, and how far from the left (`along`) or the top edge (`across`). */
 export interface Parting {
