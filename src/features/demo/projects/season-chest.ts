@@ -37,7 +37,9 @@ const write = (show: ShowPicture, { legs, check }: { readonly legs: string; read
       'Slit the corners, punch the hole',
       'Lay each as in the drawing. Slit the corners from the **top and bottom edges**, along the score, [[inside height]] deep, to the crossing. The corner squares stay on front and back, and become tabs.',
       'The hole for the knob goes through the front while it is flat: [[inside height / 2]] from its edge, and [[inside width / 2]] from either side score. [[knob hole]] is wide enough for a brad.',
-      caution('Punch on the mat, straight down, with the hand that holds the card well to one side.'),
+      caution(
+        'Punch on the mat, straight down, with the hand that holds the card well to one side. An awl goes into a finger as easily: put a cork on its point when it is laid down.',
+      ),
     ),
     step(
       'Fold and glue them',
