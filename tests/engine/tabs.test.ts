@@ -36,6 +36,37 @@ const levelAt = (net: Net, name: string, y: number): number[] =>
     .flatMap(({ loop }) => loop.filter((curve) => Math.abs(curve.from.y - y) + Math.abs(curve.to.y - y) < 1e-6))
     .map(lengthOf);
 
+describe('a slip in a formula', () => {
+  const problemOf = (piece: PieceDef): string | undefined => {
+    const compiled = compilePattern({ ...bare({}), pieces: [piece] });
+    if (!compiled.ok) throw new Error(JSON.stringify(compiled.faults));
+    return evaluate(compiled.value, { values: {}, choices: {}, units: 'mm', grid: '1mm' }).problems[0]?.sentence;
+  };
+  const wall = {
+    name: 'Wall',
+    stock: 'card',
+    builder: 'grid',
+    columns: [{ name: 'wide', size: '60 mm' }],
+    rows: [
+      { name: 'deep', size: '10 mm' },
+      { name: 'tall', size: '40 mm' },
+    ],
+    cells: [['tab glue'], ['panel wall']],
+  } as const satisfies PieceDef;
+  it('does not make a million teeth, or a million pieces', () => {
+    expect(problemOf({ ...wall, tabs: [{ cells: ['glue'], teeth: '1000000', toothAngle: '0°' }] })).toBe(
+      'The wall cannot be cut at this size: “glue” has more than 720 teeth.',
+    );
+    const rim = { teeth: '1000000', depth: '5 mm', toothAngle: '1°', angle: '90°' };
+    expect(problemOf({ name: 'Foot', stock: 'card', builder: 'disc', disc: 'foot', diameter: '90 mm', rim })).toBe(
+      'The foot cannot be cut at this size: nobody cuts more than 720 teeth.',
+    );
+    expect(problemOf({ ...wall, count: '1000000' })).toBe(
+      'The wall cannot be cut at this size: 1000000 of it are more than anybody cuts (999 at most).',
+    );
+  });
+});
+
 describe('a tab', () => {
   it('is narrower at the tip by the angle of its ends', () => {
     const [tip] = levelAt(tabbed({ left: { by: '45°' }, right: { by: '30°' } }), 'glue', 0);

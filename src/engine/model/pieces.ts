@@ -69,6 +69,9 @@ function remember(piece: CompiledPiece, values: Values, figure: PieceFigure): vo
 
 // ── One piece ────────────────────────────────────────────────────────────────────────────────────────────────────────
 
+/** More come of a slip in a formula, and would take for ever to lay on sheets. */
+const MOST_OF_A_PIECE = 999;
+
 /** Null when the piece is not in use at this size, the reason when it makes nonsense. */
 function pieceOf(
   model: Model,
@@ -80,6 +83,7 @@ function pieceOf(
   const { def } = piece;
   const count = Math.round(piece.count.work(values));
   if (!isInUse(piece, values) || count < 1) return null;
+  if (count > MOST_OF_A_PIECE) return `${count} of it are more than anybody cuts (${MOST_OF_A_PIECE} at most)`;
   const made = buildPiece(model, piece, values, nets);
   if (!made) return null;
   const { grid, built, layer } = made;

@@ -4,6 +4,9 @@ import type { Arc, Point } from '../types';
 import { finishNet, nonsense, type Built } from './finish';
 import { arcs, circle } from './shapes';
 
+/** A tooth every half degree; more come of a slip in a formula, and would take for ever to draw. */
+export const MOST_TEETH = 720;
+
 /** A disc with every formula worked out. */
 export interface DiscPiece {
   readonly disc: string;
@@ -30,6 +33,7 @@ export function buildDisc(piece: DiscPiece): Built {
     });
   }
   if (!Number.isInteger(rim.teeth) || rim.teeth < 6) return nonsense('a toothed rim needs at least six teeth');
+  if (rim.teeth > MOST_TEETH) return nonsense(`nobody cuts more than ${MOST_TEETH} teeth`);
   const rimArcs = arcs(centre, radius, 0, 360, rim.teeth);
   const panels: LoosePanel[] = [{ name: piece.disc, role: 'panel', loop: rimArcs }];
   for (const [index, arc] of rimArcs.entries()) {

@@ -2,7 +2,7 @@ import { atLeast, coincident, isZero, moreThan, snap } from '../measure';
 import { arcThrough, areaOf, distance, lengthOf, line, pointAt, samePoint, type Joint, type LoosePanel } from '../net';
 import type { Arc, Curve, Loop, Net, Panel, Point, Side } from '../types';
 import { OPPOSITE, SIDES, hangs, type Cell } from './cells';
-import { toothOn } from './disc';
+import { MOST_TEETH, toothOn } from './disc';
 import { finishNet, jointAsSaid, type Built } from './finish';
 import { circle, fillet, polygon, slotIn } from './shapes';
 
@@ -269,6 +269,7 @@ class GridBuilder {
       round: 0,
       shape: null,
     };
+    if (shape.teeth > MOST_TEETH) return `“${cell.name}” has more than ${MOST_TEETH} teeth`;
     if (shape.shape) return this.addShaped(cell, side, host, shape.shape, shape.round);
     const box = this.box(cell);
     const full = side === 'top' || side === 'bottom' ? box.bottom - box.top : box.right - box.left;
