@@ -54,10 +54,10 @@ describe('a slip in a formula', () => {
     cells: [['tab glue'], ['panel wall']],
   } as const satisfies PieceDef;
   it('does not make a million teeth, or a million pieces', () => {
-    expect(problemOf({ ...wall, tabs: [{ cells: ['glue'], teeth: '1000000', toothAngle: '0°' }] })).toBe(
+    expect(problemOf({ ...wall, tabs: [{ cells: ['glue'], teeth: '1000000', 'tooth angle': '0°' }] })).toBe(
       'The wall cannot be cut at this size: “glue” has more than 720 teeth.',
     );
-    const rim = { teeth: '1000000', depth: '5 mm', toothAngle: '1°', angle: '90°' };
+    const rim = { teeth: '1000000', depth: '5 mm', 'tooth angle': '1°', angle: '90°' };
     expect(problemOf({ name: 'Foot', stock: 'card', builder: 'disc', disc: 'foot', diameter: '90 mm', rim })).toBe(
       'The foot cannot be cut at this size: nobody cuts more than 720 teeth.',
     );
