@@ -20,7 +20,9 @@ export default defineConfig({
     globalSetup: ['tests/setup/temporary-folder.ts'],
     // auth-astro is published as TypeScript.
     server: { deps: { inline: ['auth-astro'] } },
-    testTimeout: 20_000,
+    // On a small machine the usual number leaves half of it idle; whole patterns take their time.
+    maxWorkers: '100%',
+    testTimeout: 60_000,
     restoreMocks: true,
     unstubEnvs: true,
   },

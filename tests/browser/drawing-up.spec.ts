@@ -89,14 +89,15 @@ test('a tray with a curved end and a lid that may be left away is drawn up from 
   await page.getByRole('button', { name: 'Try the whole range' }).click();
   await expect(page.locator('.trial [role=status]')).toContainText(/sizes tried c/, { timeout: 60_000 });
 
-  // A reader finds it, without a lid as the author left it, and makes one.
+  // A reader finds it and makes a longer one: 8 and two walls of 1.
   await page.getByRole('button', { name: 'Publish edition 1' }).click();
   const dialog = page.getByRole('dialog', { name: 'Publish edition 1' });
   await dialog.getByRole('button', { name: 'Publish edition 1' }).click();
   await page.getByRole('link', { name: 'See it as readers do' }).click();
   await panelReady(page);
   await sizeField(page, 'inside length').fill('8');
-  await shows(page.locator('[data-facts]'), '10 × 6 in');
+  await page.getByRole('link', { name: 'Measurement sheet' }).first().click();
+  await shows(page.locator('main'), '10 × 6 in');
 });
 
 test('a pattern is kept on the author’s own shelf and goes out as a file', async ({ page }) => {

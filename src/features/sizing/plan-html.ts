@@ -22,7 +22,8 @@ export function factsHtml(figures: Figures, plan: SheetPlan, minutes: number | n
     .join(' × ');
   const cut = cutWords(figures);
   const rows: [string, string][] = [
-    ['Finished, outside', `${outside} ${units}`],
+    // A pattern drawn up from blank need not say what it measures in the end.
+    ...(outside === '' ? [] : [['Finished, outside', `${outside} ${units}`] as [string, string]]),
     ['Card', esc(sheetsWords(plan))],
     ['Pieces', esc(piecesWords(pieceCount(figures)))],
     ...besides(figures).map(({ name, amount }): [string, string] => [esc(capital(name)), esc(amount)]),
