@@ -77,6 +77,25 @@ test('selecting a measure lights what follows it in the list, the pieces and the
   await expect(page.locator('.lit-count')).toHaveCount(0);
 });
 
+test('a measure is gone to by the first letters of its name, and a list says what the keys do', async ({
+  page,
+  id,
+}) => {
+  await page.setViewportSize({ width: 1440, height: 1000 });
+  await openDesk(page, id);
+  await page.keyboard.press('Alt+g');
+  const dialog = page.getByRole('dialog', { name: 'Go to, or do' });
+  await expect(dialog.getByRole('combobox')).toBeFocused();
+  await page.keyboard.type('corner t');
+  await expect(dialog.getByRole('option')).toHaveText([/^corner tab/]);
+  await page.keyboard.press('Enter');
+  await expect(dialog).toBeHidden();
+  await expect(page.locator('tr[data-measure="corner tab"]')).toBeInViewport();
+  await expect(page.locator('[data-column=pieces] .lit-count')).toBeVisible();
+  await page.keyboard.press('Alt+k');
+  await expect(page.getByRole('dialog', { name: 'Keys' })).toContainText('Alt G');
+});
+
 test('a size typed at the desk changes the drawing, is undone with Ctrl Z, and a senseless one says why', async ({
   page,
   id,

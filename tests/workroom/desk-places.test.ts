@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { answersTo } from '@/features/projects/project';
 import { placesOf } from '@/features/workroom/desk/find/desk-places';
-import { DESK_KEYS } from '@/features/workroom/desk/find/desk-keys';
+import { DESK_KEYS, WRITING_KEYS } from '@/features/workroom/desk/find/desk-keys';
 import { editorKeys } from '@/writeup/editor/editor-keys';
 import type { BlockNode } from '@/writeup/document';
 import { patternOf } from '../engine/patterns';
@@ -44,7 +44,7 @@ describe('the places of a desk', () => {
 });
 
 it('gives no key of the desk two meanings', () => {
-  const keys = [...DESK_KEYS, ...editorKeys()].flatMap(({ keys }) => keys.split(/, (?:or type )?/));
+  const keys = [...DESK_KEYS, ...WRITING_KEYS, ...editorKeys()].flatMap(({ keys }) => keys.split(/, (?:or type )?/));
   expect(keys.length).toBeGreaterThan(15);
   expect(keys.filter((key, index) => keys.indexOf(key) !== index)).toEqual([]);
 });

@@ -69,7 +69,8 @@ function Finder({ places, acts, onGo, onClose }: GoToDialogProps) {
         autoComplete="off"
         spellCheck={false}
         placeholder="The first letters of its name"
-        autoFocus
+        // What a dialog puts the focus on when it opens; React's own property comes too early for that.
+        ref={(field) => field?.setAttribute('autofocus', '')}
         value={query}
         onChange={(event) => {
           setQuery(event.currentTarget.value);

@@ -28,7 +28,6 @@ export const COLUMN_KEYS: readonly DeskKey[] = [
 
 /** Keys of the write-up without a button. */
 export const WRITING_KEYS: readonly DeskKey[] = [
-  { keys: '::', does: 'Put a live measure in' },
   { keys: 'Enter', does: 'On a live measure: change it' },
   { keys: 'Alt Shift ↑, Alt Shift ↓', does: 'Move the step up or down' },
   { keys: '↑', does: 'In the first line of a step: to its title' },
