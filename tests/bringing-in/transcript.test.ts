@@ -21,7 +21,7 @@ function bringIn() {
   return { cues: cues.value, steps, prepared: prepareSteps(steps, { live, trimFiller: false }) };
 }
 
-describe('a timed transcript of ten minutes', () => {
+describe('a talk of ten minutes with its times', () => {
   const { cues, steps, prepared } = bringIn();
   const numbers = numbersOf(prepared);
 
