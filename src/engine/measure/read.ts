@@ -35,7 +35,8 @@ const UNIT_NAMES: Readonly<Record<string, Unit>> = {
   centimeter: 'cm',
   centimeters: 'cm',
 };
-const VULGAR: Readonly<Record<string, string>> = {
+/** Fractions that are one character, as they are typed without it. */
+export const FRACTION_SIGNS: Readonly<Record<string, string>> = {
   '½': '1/2',
   '⅓': '1/3',
   '⅔': '2/3',
@@ -111,7 +112,7 @@ function normalise(text: string): string {
     .replace(/\u2044/g, '/')
     .replace(/[−–—]/g, '-')
     .replace(/[’‘]/g, "'");
-  for (const [mark, fraction] of Object.entries(VULGAR)) plain = plain.replaceAll(mark, ` ${fraction}`);
+  for (const [mark, fraction] of Object.entries(FRACTION_SIGNS)) plain = plain.replaceAll(mark, ` ${fraction}`);
   return plain
     .replace(/(\d),(\d{1,2})(?!\d)/g, '$1.$2')
     .replace(/\s+/g, ' ')

@@ -1,3 +1,5 @@
+import { FRACTION_SIGNS } from '@/engine';
+
 /** What stands in a line of text for something that is no text, such as a live measure. */
 export const THING = '\ufffc';
 
@@ -13,7 +15,6 @@ export interface Token {
   readonly close: boolean;
 }
 
-const VULGAR = '½⅓⅔¼¾⅕⅖⅗⅘⅙⅚⅛⅜⅝⅞';
 const KINDS: readonly (readonly [Token['is'], string])[] = [
   // Addresses, sums of money, shares, labels: never a length.
   ['other', String.raw`https?:\/\/\S+|www\.\S+|[\w.+-]+@[\w-]+\.[\w.]+`],
@@ -21,7 +22,7 @@ const KINDS: readonly (readonly [Token['is'], string])[] = [
   ['other', String.raw`\d{4}-\d{2}-\d{2}|\d{1,3}(?:,\d{3})+(?!\d)|\d+(?:\.\d+){2,}`],
   ['time', String.raw`\d{1,2}:\d{2}(?::\d{2})?(?!\d)`],
   ['fraction', String.raw`\d+\s?[/⁄]\s?\d+(?:['’]?(?:ths?|nds?|rds?|s))?(?![\w/⁄])`],
-  ['fraction', `[${VULGAR}]`],
+  ['fraction', `[${Object.keys(FRACTION_SIGNS).join('')}]`],
   ['decimal', String.raw`\d+\.\d+|\.\d+|\d+,\d{1,2}(?=\s?(?:mm|cm|milli|centi))`],
   ['ordinal', String.raw`\d+(?:st|nds?|rds?|ths?)(?![\p{L}\d])`],
   ['digits', String.raw`\d+`],
@@ -32,21 +33,7 @@ const TOKEN = new RegExp(KINDS.map(([, source]) => `(${source})`).join('|'), 'gu
 /** A label such as A4 or B5: letters and figures without a space. */
 const LABEL = /^[a-z]$/i;
 const WRITTEN: Readonly<Record<string, string>> = {
-  '½': '1/2',
-  '⅓': '1/3',
-  '⅔': '2/3',
-  '¼': '1/4',
-  '¾': '3/4',
-  '⅕': '1/5',
-  '⅖': '2/5',
-  '⅗': '3/5',
-  '⅘': '4/5',
-  '⅙': '1/6',
-  '⅚': '5/6',
-  '⅛': '1/8',
-  '⅜': '3/8',
-  '⅝': '5/8',
-  '⅞': '7/8',
+  ...FRACTION_SIGNS,
   '×': 'x',
   '″': '"',
   '”': '"',
